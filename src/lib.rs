@@ -1,0 +1,3 @@
+//! Perpend: calculation packs for masonry that stays when a load-bearing wall comes out.
+
+pub mod quantity;
