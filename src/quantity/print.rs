@@ -23,11 +23,8 @@ impl std::fmt::Display for Shown {
 pub fn show(symbol: &str, value: Dyn) -> Shown {
     let unit = unit::for_print(symbol, value);
     let scaled = value.value / unit.factor;
-    let digits = if unit.printed == "mm" && scaled.abs() >= 10.0 {
-        length(scaled)
-    } else {
-        significant(scaled)
-    };
+    let digits =
+        if unit.printed == "mm" && scaled.abs() >= 10.0 { length(scaled) } else { significant(scaled) };
     Shown { value: digits, unit: unit.printed.to_owned() }
 }
 

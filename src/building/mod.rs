@@ -1,0 +1,83 @@
+//! The building, complete and valid: what the checks may rely on.
+//!
+//! Reading and judging the job file happens in `job`; nothing here can be half given. Lengths,
+//! forces and stresses are typed quantities; a value that departs from a rule carries its reason.
+
+mod parts;
+mod things;
+mod words;
+
+pub use parts::{
+    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, PlanWall, Revision, Signatures, StatedWind,
+    Storey, Strength, TerrainWind, UnitStrength, Wind,
+};
+pub use things::{
+    Arching, Assumption, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Panel,
+    Photograph, Removed, Return, Span, Stability,
+};
+pub use words::{
+    Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
+    Status, WindRoute,
+};
+
+/// Everything a pack is made from.
+#[derive(Clone, Debug)]
+pub struct Building {
+    /// Who, where, what for.
+    pub identity: Identity,
+    /// Who made and who checked it.
+    pub signatures: Signatures,
+    /// At least one; the last is the current.
+    pub revisions: Vec<Revision>,
+    /// Safety basis.
+    pub basis: Basis,
+    /// Wind on the site.
+    pub wind: Wind,
+    /// Masonry by name.
+    pub materials: Vec<Material>,
+    /// Wall build-ups by name.
+    pub build_ups: Vec<BuildUp>,
+    /// Storeys, lowest first.
+    pub storeys: Vec<Storey>,
+    /// Walls as lines, for the key plan; may be empty.
+    pub plan: Vec<PlanWall>,
+    /// Where north is, degrees clockwise from the top of the page.
+    pub north: f64,
+    /// The wall that comes out.
+    pub removed: Removed,
+    /// The storey's stability, before and after.
+    pub stability: Option<Stability>,
+    /// What stays and braces.
+    pub returns: Vec<Return>,
+    /// Outer walls between supports.
+    pub panels: Vec<Panel>,
+    /// The chain from the wind face to the ground.
+    pub links: Vec<Link>,
+    /// What was taken to be so.
+    pub assumptions: Vec<Assumption>,
+    /// What must be closed before the wall comes down.
+    pub hold_points: Vec<HoldPoint>,
+    /// Photographs, with paths relative to the job file.
+    pub photographs: Vec<Photograph>,
+    /// Who is responsible for what, in the order given.
+    pub responsible: Vec<(String, String)>,
+    /// Possible but odd values, as sentences.
+    pub warnings: Vec<String>,
+}
+
+impl Building {
+    /// The build-up named `name`. A valid building has every one that it names.
+    pub fn build_up(&self, name: &str) -> Option<&BuildUp> {
+        self.build_ups.iter().find(|b| b.name == name)
+    }
+
+    /// The material named `name`.
+    pub fn material(&self, name: &str) -> Option<&Material> {
+        self.materials.iter().find(|m| m.name == name)
+    }
+
+    /// The storey marked `mark`.
+    pub fn storey(&self, mark: &str) -> Option<&Storey> {
+        self.storeys.iter().find(|s| s.mark == mark)
+    }
+}

@@ -1,0 +1,290 @@
+//! What is checked and what carries it: returns, panels, bracing walls, links, hold points.
+
+use super::{
+    Acts, Along, BaseJoint, Cause, Ends, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
+};
+use crate::quantity::{Force, Length, LineLoad, Moment, Num, Stress};
+
+/// The wall that comes out.
+#[derive(Clone, Debug)]
+pub struct Removed {
+    /// Mark or name.
+    pub wall: String,
+    /// Build-up by name.
+    pub build_up: String,
+    /// Length taken out.
+    pub length: Length,
+    /// Storey by mark.
+    pub storey: String,
+    /// What it carried.
+    pub carried: String,
+    /// What it braced.
+    pub braced: String,
+}
+
+/// A wall that takes wind in its plane, in the storey of the removed wall.
+#[derive(Clone, Debug)]
+pub struct BracingWall {
+    /// Mark; a return of the same mark is this wall.
+    pub mark: String,
+    /// Direction of its length.
+    pub along: Along,
+    /// Position across its length.
+    pub at: Length,
+    /// Position of its middle along its length; needed for torsion.
+    pub other_at: Option<Length>,
+    /// Length.
+    pub length: Length,
+    /// Height.
+    pub height: Length,
+    /// Build-up by name.
+    pub build_up: String,
+    /// When it stands.
+    pub stands: Stands,
+    /// Cantilever or fixed at both ends.
+    pub ends: Ends,
+}
+
+/// How the storey's wind is shared, before and after.
+#[derive(Clone, Debug)]
+pub struct Stability {
+    /// Storey by mark.
+    pub storey: String,
+    /// Wind direction in which the removed wall braced.
+    pub wind_along: Along,
+    /// Extent of the wind face, across the wind.
+    pub front: (Length, Length),
+    /// Height of wind face collected at the head of this storey.
+    pub strip_height: Length,
+    /// How the force is shared.
+    pub share_by: ShareBy,
+    /// Characteristic wind force of everything above.
+    pub force_above: Force,
+    /// Dead load of the storey at this level, for the tilt.
+    pub dead: Force,
+    /// Imposed load of the storey at this level, for the tilt.
+    pub imposed: Force,
+    /// The walls.
+    pub walls: Vec<BracingWall>,
+}
+
+/// A vertical load on a return.
+#[derive(Clone, Debug)]
+pub struct Load {
+    /// What brings it.
+    pub what: String,
+    /// Characteristic dead load.
+    pub dead: Force,
+    /// Characteristic imposed load.
+    pub imposed: Force,
+    /// Characteristic roof uplift contained in this load.
+    pub uplift: Force,
+    /// Place along the return from the junction end.
+    pub at: Length,
+    /// Eccentricity across the thickness.
+    pub eccentricity: Length,
+    /// Which leaf, by place in the build-up.
+    pub leaf: usize,
+    /// Where the figures come from.
+    pub source: String,
+}
+
+/// The junction with the wall that the return buttresses.
+#[derive(Clone, Debug)]
+pub struct Flange {
+    /// The wall met.
+    pub to: String,
+    /// Bonded, so that a flange may be counted.
+    pub bonded: bool,
+    /// How that is known.
+    pub proof: Proof,
+    /// Who saw it and when, or what is assumed.
+    pub words: String,
+    /// Thickness of the leaf met.
+    pub thickness: Length,
+    /// Distance to the end or an opening, each side.
+    pub left: Length,
+    /// Distance to the end or an opening, each side.
+    pub right: Length,
+    /// Clear distance to the next shear wall, each side.
+    pub next_wall_left: Option<Length>,
+    /// Clear distance to the next shear wall, each side.
+    pub next_wall_right: Option<Length>,
+    /// Dead load per length in the wall met at the foot of the return, own weight included.
+    pub dead: LineLoad,
+}
+
+/// How the head of a return is held in its plane.
+#[derive(Clone, Debug, PartialEq)]
+pub enum Head {
+    /// Cantilever.
+    Free,
+    /// Held by the named bracing walls.
+    Propped(Vec<String>),
+}
+
+/// Wind from the storeys above, characteristic.
+#[derive(Clone, Copy, Debug, Default)]
+pub struct FromAbove {
+    /// Force at the head.
+    pub force: Force,
+    /// Moment at the head.
+    pub moment: Moment,
+}
+
+/// A return: a short length of wall that takes wind in its plane.
+#[derive(Clone, Debug)]
+pub struct Return {
+    /// Mark.
+    pub mark: String,
+    /// Title.
+    pub title: String,
+    /// Build-up by name.
+    pub build_up: String,
+    /// Storey by mark.
+    pub storey: String,
+    /// Length in its plane.
+    pub length: Length,
+    /// Clear height.
+    pub height: Length,
+    /// Place of the mark on the plan.
+    pub position: Option<(Length, Length)>,
+    /// The joint at its foot.
+    pub base: BaseJoint,
+    /// Why the base is held to be bonded.
+    pub base_reason: String,
+    /// Coefficient of friction at the dpc, with its reason.
+    pub mu: Cause<Num>,
+    /// Head in plane.
+    pub head: Head,
+    /// How the wind reaches it.
+    pub path: Path,
+    /// Tributary width of wind face.
+    pub tributary_width: Length,
+    /// Height of wind face that the floor collects (up-and-down path).
+    pub strip_height: Option<Length>,
+    /// Wind from above.
+    pub from_above: FromAbove,
+    /// What holds head and foot out of plane.
+    pub restraint: Restraint,
+    /// Overall height of the wall it buttresses.
+    pub supported_wall_height: Length,
+    /// Distance to the nearest opening in that wall.
+    pub nearest_opening: Option<Length>,
+    /// Which leaves act.
+    pub acts: Acts,
+    /// Vertical loads; own weight is added by the check.
+    pub loads: Vec<Load>,
+    /// Junction with the supported wall.
+    pub junction: Flange,
+}
+
+/// One edge of a panel.
+#[derive(Clone, Debug)]
+pub struct Edge {
+    /// Free, simple or continuous.
+    pub kind: crate::standards::masonry::Edge,
+    /// Why.
+    pub reason: String,
+}
+
+/// A panel between its supports, before or after.
+#[derive(Clone, Debug)]
+pub struct Span {
+    /// Length between vertical supports.
+    pub length: Length,
+    /// Top edge.
+    pub top: Edge,
+    /// Base edge.
+    pub base: Edge,
+    /// Left edge, seen from outside.
+    pub left: Edge,
+    /// Right edge.
+    pub right: Edge,
+}
+
+/// What resists the arch thrust.
+#[derive(Clone, Debug)]
+pub struct Arching {
+    /// Reason why the abutments hold.
+    pub abutment: String,
+    /// Spans vertically (between floors) or horizontally (between returns).
+    pub vertical: bool,
+}
+
+/// An outer wall across its plane.
+#[derive(Clone, Debug)]
+pub struct Panel {
+    /// Mark.
+    pub mark: String,
+    /// Title.
+    pub title: String,
+    /// Build-up by name.
+    pub build_up: String,
+    /// Storey by mark.
+    pub storey: String,
+    /// Clear height.
+    pub height: Length,
+    /// Plan wall it belongs to.
+    pub on: Option<String>,
+    /// Dead load per length on the loaded leaf at the top of the panel.
+    pub dead_above: LineLoad,
+    /// Own net pressure instead of the site's.
+    pub wind: Option<Cause<Stress>>,
+    /// Which route decides.
+    pub route: PanelRoute,
+    /// How two leaves share the wind.
+    pub sharing: Sharing,
+    /// Before the removal.
+    pub before: Span,
+    /// After the removal.
+    pub after: Span,
+    /// Where the removed wall met it, from the left end of the panel after removal.
+    pub wall_at: Option<Length>,
+    /// Abutments, for the arching route.
+    pub arching: Option<Arching>,
+}
+
+/// One link of the chain from the wind face to the ground.
+#[derive(Clone, Debug)]
+pub struct Link {
+    /// Which link.
+    pub link: String,
+    /// How it is known.
+    pub proof: Proof,
+    /// The rule, the witness, or what is to be done.
+    pub words: String,
+    /// Marks it concerns; empty for all.
+    pub of: Vec<String>,
+}
+
+/// Something taken to be so.
+#[derive(Clone, Debug)]
+pub struct Assumption {
+    /// Text.
+    pub text: String,
+    /// Where it comes from.
+    pub source: String,
+}
+
+/// Something to be closed before the wall comes down.
+#[derive(Clone, Debug)]
+pub struct HoldPoint {
+    /// Text.
+    pub text: String,
+    /// Marks it concerns; empty for all.
+    pub of: Vec<String>,
+    /// Who closed it and when.
+    pub closed: Option<String>,
+}
+
+/// A photograph beside the job file.
+#[derive(Clone, Debug)]
+pub struct Photograph {
+    /// Path relative to the job file.
+    pub file: String,
+    /// Caption.
+    pub caption: String,
+    /// Mark it belongs to.
+    pub mark: Option<String>,
+}

@@ -1,0 +1,157 @@
+//! The choices of the job file, each with the words it is written in.
+
+/// Declares a choice with its words: `ALL`, `WORDS`, `word()` and `from_word()`.
+macro_rules! choice {
+    ($(#[$doc:meta])* $name:ident { $($(#[$vdoc:meta])* $variant:ident = $word:literal),+ $(,)? }) => {
+        $(#[$doc])*
+        #[derive(Clone, Copy, Debug, PartialEq, Eq)]
+        pub enum $name { $($(#[$vdoc])* $variant),+ }
+
+        impl $name {
+            /// The words allowed, in order.
+            pub const WORDS: &'static [&'static str] = &[$($word),+];
+
+            /// The word of this choice.
+            pub const fn word(self) -> &'static str {
+                match self { $(Self::$variant => $word),+ }
+            }
+
+            /// The choice written as `word`.
+            pub fn from_word(word: &str) -> Option<Self> {
+                match word { $($word => Some(Self::$variant),)+ _ => None }
+            }
+        }
+    };
+}
+
+choice!(/// Status of an issue.
+Status {
+    /// Not for use.
+    Preliminary = "preliminary",
+    /// For others to comment.
+    Comment = "for comment",
+    /// Submitted.
+    BuildingControl = "for building control",
+    /// To build from.
+    Construction = "for construction",
+    /// Record.
+    AsBuilt = "as built",
+});
+
+choice!(/// Wind route.
+WindRoute {
+    /// Route 1.
+    Stated = "stated",
+    /// Route 2.
+    Terrain = "terrain",
+});
+
+choice!(/// What is above a storey.
+FloorKind {
+    /// Joists and boards.
+    Timber = "timber",
+    /// Slab.
+    Concrete = "concrete",
+    /// Roof only.
+    Roof = "roof",
+});
+
+choice!(/// A plan direction.
+Along {
+    /// Across the page.
+    X = "x",
+    /// Up the page.
+    Y = "y",
+});
+
+choice!(/// When a wall stands.
+Stands {
+    /// Stays.
+    Both = "before and after",
+    /// Comes out.
+    Before = "before",
+    /// Is added.
+    After = "after",
+});
+
+choice!(/// How a bracing wall is held for its stiffness.
+Ends {
+    /// Free at its head.
+    Cantilever = "cantilever",
+    /// Held against rotation at both ends.
+    Fixed = "fixed",
+});
+
+choice!(/// How the storey's wind is shared.
+ShareBy {
+    /// Flexible floor.
+    Width = "tributary width",
+    /// Stiff floor.
+    Stiffness = "stiffness",
+});
+
+choice!(/// The joint at the foot of a return.
+BaseJoint {
+    /// A damp-proof course crosses.
+    Dpc = "dpc",
+    /// Shown to be bonded.
+    Bonded = "bonded",
+});
+
+choice!(/// How wind reaches a return.
+Path {
+    /// The panel spans between returns.
+    Sideways = "sideways",
+    /// The panel spans between floors.
+    UpAndDown = "up and down",
+    /// Both act.
+    Both = "both",
+});
+
+choice!(/// What holds head and foot out of plane.
+Restraint {
+    /// rho_2 = 1.0.
+    Timber = "timber floor",
+    /// rho_2 = 0.75.
+    Concrete = "concrete floor",
+    /// Head not held.
+    None = "none",
+});
+
+choice!(/// Which leaves of a cavity return act in plane.
+Acts {
+    /// The loaded leaf alone.
+    Loaded = "loaded leaf",
+    /// Each leaf with its own dead load, wind shared by thickness.
+    Each = "each leaf",
+});
+
+choice!(/// Route by which a panel is judged.
+PanelRoute {
+    /// Bending moment coefficients of Annex E.
+    Flexure = "flexure",
+    /// Between top and base, or between vertical edges, one way.
+    OneWay = "one way",
+    /// Arch thrust.
+    Arching = "arching",
+});
+
+choice!(/// How two leaves share the wind.
+Sharing {
+    /// By lateral strength.
+    Strength = "strength",
+    /// By flexural stiffness.
+    Stiffness = "stiffness",
+});
+
+choice!(/// How a link of the load path is known.
+Proof {
+    /// On a sheet of this pack.
+    Calculated = "calculated",
+    /// By a named rule.
+    Rule = "by rule",
+    /// By a named person.
+    Seen = "seen",
+    /// Not known: a hold point.
+    Assumed = "assumed",
+});

@@ -1,0 +1,2 @@
+//! Clauses of the standards.
+pub mod masonry;
