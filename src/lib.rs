@@ -1,5 +1,7 @@
 //! Perpend: calculation packs for masonry that stays when a load-bearing wall comes out.
+#![recursion_limit = "512"]
 
-pub mod building;
 pub mod quantity;
+pub mod trace;
 pub mod standards;
+pub mod building;

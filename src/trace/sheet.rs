@@ -1,0 +1,291 @@
+//! The sheet: records, or stays silent.
+
+use std::collections::HashMap;
+
+use super::entry::{Entry, Outside, Relation, Step, Table, Value, Verdict};
+use super::expr::UNIT_CONSTS;
+use super::parse;
+use crate::quantity::{Dyn, Q};
+
+/// A value that a sheet can note: a quantity or a bare number.
+pub trait Traced {
+    /// The value with its dimension as data.
+    fn traced(&self) -> Dyn;
+}
+
+impl<const F: i8, const L: i8, const T: i8> Traced for Q<F, L, T> {
+    fn traced(&self) -> Dyn {
+        self.dynamic()
+    }
+}
+
+impl Traced for f64 {
+    fn traced(&self) -> Dyn {
+        Dyn::number(*self)
+    }
+}
+
+/// A broken lock: the sheet would have printed something that it did not compute.
+#[derive(Clone, Debug, PartialEq, Eq)]
+pub struct Fault {
+    /// The step, as `f_vk = …`.
+    pub step: String,
+    /// What is wrong.
+    pub what: String,
+}
+
+/// A sheet. `id` names it (`"R1"`), for anchors and cross-references.
+#[derive(Clone, Debug, Default)]
+pub struct Sheet {
+    recording: bool,
+    /// Entries in order; empty on a silent sheet.
+    pub entries: Vec<Entry>,
+    /// Verdicts, kept on every sheet.
+    pub verdicts: Vec<Verdict>,
+    /// Checks that left their range, kept on every sheet.
+    pub outside: Vec<Outside>,
+    /// Broken locks.
+    pub faults: Vec<Fault>,
+    /// The case printed with each verdict until it changes.
+    pub case: String,
+    scope: HashMap<String, Dyn>,
+}
+
+impl Sheet {
+    /// A sheet that records.
+    pub fn recorder() -> Self {
+        Self { recording: true, ..Self::default() }
+    }
+
+    /// A sheet that keeps only verdicts.
+    pub fn silent() -> Self {
+        Self::default()
+    }
+
+    /// Whether entries are kept.
+    pub const fn recording(&self) -> bool {
+        self.recording
+    }
+
+    /// What stands under `name`.
+    pub fn standing(&self, name: &str) -> Option<Dyn> {
+        self.scope.get(name).copied()
+    }
+
+    /// The largest ratio, and whether everything holds.
+    pub fn holds(&self) -> bool {
+        self.outside.is_empty() && self.verdicts.iter().all(|v| v.holds)
+    }
+
+    /// A heading of level 1 or 2.
+    pub fn heading(&mut self, level: u8, text: impl Into<String>) {
+        self.push(|| Entry::Heading(level, text.into()));
+    }
+
+    /// A remark.
+    pub fn note(&mut self, text: impl Into<String>) {
+        self.push(|| Entry::Note(text.into()));
+    }
+
+    /// A table, made only when recording.
+    pub fn table(&mut self, table: impl FnOnce() -> Table) {
+        self.push(|| Entry::Table(table()));
+    }
+
+    /// A place for drawings side by side.
+    pub fn drawings(&mut self, names: &[&str]) {
+        self.push(|| Entry::Drawings(names.iter().map(|&n| n.to_owned()).collect()));
+    }
+
+    /// A rule printed as information.
+    pub fn rule(&mut self, id: &str, clause: &str, words: &str, finding: String, met: bool) {
+        self.push(|| Entry::Rule {
+            id: id.to_owned(),
+            words: words.to_owned(),
+            clause: clause.to_owned(),
+            finding,
+            met,
+        });
+    }
+
+    /// Notes a check that left its range.
+    pub fn leave(&mut self, outside: Outside) {
+        self.push(|| Entry::Outside(outside.clone()));
+        self.outside.push(outside);
+    }
+
+    /// Records an input; see [`given!`](crate::given).
+    pub fn given(&mut self, name: &str, words: &str, source: &str, value: Dyn) {
+        let value = self.stand(name, value);
+        self.entries.push(Entry::Given { value, words: words.to_owned(), source: source.to_owned() });
+    }
+
+    /// Records a table value; see [`lookup!`](crate::lookup).
+    pub fn lookup(
+        &mut self,
+        name: &str,
+        words: &str,
+        clause: &str,
+        value: Dyn,
+        rows: Vec<(String, String)>,
+        source: String,
+    ) {
+        let value = self.stand(name, value);
+        let (words, clause) = (words.to_owned(), clause.to_owned());
+        self.entries.push(Entry::Lookup { value, words, clause, rows, source });
+    }
+
+    /// Records the result of a search; see [`found!`](crate::found).
+    pub fn found(&mut self, name: &str, words: &str, clause: &str, value: Dyn) {
+        let value = self.stand(name, value);
+        self.entries.push(Entry::Found { value, words: words.to_owned(), clause: clause.to_owned() });
+    }
+
+    /// Records a step and tries its locks; see [`calc!`](crate::calc).
+    pub fn step(
+        &mut self,
+        name: &str,
+        words: &str,
+        clause: &str,
+        tokens: &str,
+        value: Dyn,
+        symbols: &[(&str, Dyn)],
+    ) {
+        let printed = format!("{name} = {tokens}");
+        let Some(formula) = parse::formula(tokens) else {
+            return self.fault(printed, "the formula cannot be read".to_owned());
+        };
+        self.check_standing(&printed, symbols);
+        match formula.eval(&|n| self.standing(n)) {
+            Some(again) if again.same(value) => {}
+            Some(again) => {
+                self.fault(printed, format!("printed formula gives {again:?}, computed was {value:?}"));
+            }
+            None => self.fault(printed, "the printed formula cannot be evaluated".to_owned()),
+        }
+        let result = self.stand(name, value);
+        self.entries.push(Entry::Step(Step {
+            words: words.to_owned(),
+            clause: clause.to_owned(),
+            result,
+            formula,
+            symbols: values(symbols),
+        }));
+    }
+
+    /// Records a branch; see [`decide!`](crate::decide).
+    pub fn decide(&mut self, words: &str, clause: &str, tokens: &str, holds: bool, symbols: &[(&str, Dyn)]) {
+        if let Some(relation) = self.relation(tokens, holds, symbols) {
+            self.entries.push(Entry::Decide { relation, words: words.to_owned(), clause: clause.to_owned() });
+        }
+    }
+
+    /// Records a limit of application; see [`require!`](crate::require).
+    pub fn require(&mut self, words: &str, clause: &str, tokens: &str, holds: bool, symbols: &[(&str, Dyn)]) {
+        if let Some(relation) = self.relation(tokens, holds, symbols) {
+            self.entries.push(Entry::Require { relation, words: words.to_owned(), clause: clause.to_owned() });
+        }
+    }
+
+    /// Notes a verdict, on silent sheets too; see [`verify!`](crate::verify). Yields the ratio.
+    pub fn verify(
+        &mut self,
+        id: &str,
+        words: &str,
+        clause: &str,
+        demand: (&str, Dyn),
+        resistance: (&str, Dyn),
+        holds: bool,
+    ) -> f64 {
+        let ratio = use_ratio(demand.1.value, resistance.1.value, holds);
+        if self.recording {
+            let printed = format!("{} <= {}", demand.0, resistance.0);
+            self.check_standing(&printed, &[demand, resistance]);
+            if demand.1.dim != resistance.1.dim {
+                self.fault(printed, "demand and resistance differ in dimension".to_owned());
+            }
+        }
+        let verdict = Verdict {
+            id: id.to_owned(),
+            words: words.to_owned(),
+            clause: clause.to_owned(),
+            demand: Value { name: demand.0.to_owned(), value: demand.1 },
+            resistance: Value { name: resistance.0.to_owned(), value: resistance.1 },
+            ratio,
+            holds,
+            case: self.case.clone(),
+        };
+        self.push(|| Entry::Verify(verdict.clone()));
+        self.verdicts.push(verdict);
+        ratio
+    }
+
+    /// Notes a broken lock.
+    pub fn fault(&mut self, step: String, what: String) {
+        self.faults.push(Fault { step, what });
+    }
+
+    fn push(&mut self, entry: impl FnOnce() -> Entry) {
+        if self.recording {
+            self.entries.push(entry());
+        }
+    }
+
+    fn stand(&mut self, name: &str, value: Dyn) -> Value {
+        self.scope.insert(name.to_owned(), value);
+        Value { name: name.to_owned(), value }
+    }
+
+    fn check_standing(&mut self, printed: &str, symbols: &[(&str, Dyn)]) {
+        for (name, value) in symbols {
+            if UNIT_CONSTS.iter().any(|u| u.name == *name) {
+                continue;
+            }
+            match self.standing(name) {
+                None => self.fault(printed.to_owned(), format!("{name} does not stand on this sheet")),
+                Some(there) if !there.same(*value) => self.fault(
+                    printed.to_owned(),
+                    format!("{name} stands as {there:?} but was used as {value:?}"),
+                ),
+                Some(_) => {}
+            }
+        }
+    }
+
+    fn relation(&mut self, tokens: &str, holds: bool, symbols: &[(&str, Dyn)]) -> Option<Relation> {
+        let Some((left, op, right)) = parse::relation(tokens) else {
+            self.fault(tokens.to_owned(), "the relation cannot be read".to_owned());
+            return None;
+        };
+        self.check_standing(tokens, symbols);
+        let sides = left.eval(&|n| self.standing(n)).zip(right.eval(&|n| self.standing(n)));
+        let again = sides.filter(|(a, b)| a.dim == b.dim).map(|(a, b)| op.holds(a.value, b.value));
+        if again != Some(holds) {
+            self.fault(tokens.to_owned(), format!("printed relation gives {again:?}, decided was {holds}"));
+        }
+        Some(Relation { left, op, right, symbols: values(symbols), holds })
+    }
+}
+
+/// Demand over resistance. Where nothing resists it is infinite; where the comparison and the
+/// rounded quotient disagree, the comparison rules.
+fn use_ratio(demand: f64, resistance: f64, holds: bool) -> f64 {
+    let ratio = if resistance > 0.0 {
+        demand / resistance
+    } else if holds {
+        1.0
+    } else {
+        f64::INFINITY
+    };
+    if !holds && ratio <= 1.0 { 1.0_f64.next_up() } else { ratio }
+}
+
+fn values(symbols: &[(&str, Dyn)]) -> Vec<Value> {
+    let mut out: Vec<Value> = Vec::new();
+    for &(name, value) in symbols {
+        if !out.iter().any(|v| v.name == name) {
+            out.push(Value { name: name.to_owned(), value });
+        }
+    }
+    out
+}
