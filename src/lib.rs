@@ -1,7 +1,8 @@
 //! Perpend: calculation packs for masonry that stays when a load-bearing wall comes out.
 #![recursion_limit = "512"]
+#![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
 pub mod quantity;
 pub mod trace;
+pub mod solve;
 pub mod standards;
-pub mod building;

@@ -1,2 +1,6 @@
 //! Clauses of the standards.
+pub mod annex;
+pub mod en1990;
+pub mod en1996;
 pub mod masonry;
+pub mod source;

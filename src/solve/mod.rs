@@ -1,0 +1,3 @@
+//! Searches that print nothing.
+
+pub mod root;

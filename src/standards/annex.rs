@@ -1,0 +1,45 @@
+//! National values: everything a National Annex may choose, in one struct that is passed, never global.
+
+/// National values of EN 1990, EN 1991-1-4 and EN 1996-1-1.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Annex {
+    /// Country, as printed.
+    pub country: &'static str,
+    /// Partial factor on dead load that presses, EN 1990 Table NA.A1.2(B).
+    pub gamma_G_sup: f64,
+    /// Factor on dead load that helps, EN 1990 Table NA.A1.2(A).
+    pub gamma_G_inf: f64,
+    /// Partial factor on imposed load and wind.
+    pub gamma_Q: f64,
+    /// Combination factor of imposed load, category A, Table NA.A1.1.
+    pub psi_0_imposed: f64,
+    /// Combination factor of wind, Table NA.A1.1.
+    pub psi_0_wind: f64,
+    /// Density of air, kg/m³, EN 1991-1-4 NA.2.18.
+    pub rho_air: f64,
+    /// Limit of h_ef/t_ef, 5.5.1.4(2).
+    pub slenderness_limit: f64,
+    /// Factor of the other leaf in the effective thickness, 5.5.1.3(3).
+    pub k_tef: f64,
+    /// Material factor on wall ties, Table NA.1.
+    pub gamma_M_ties: f64,
+    /// Factor on f_vk0 where perpends are not filled, 3.6.2(4).
+    pub unfilled_factor: f64,
+}
+
+impl Annex {
+    /// The United Kingdom. All from memory, check against the standard.
+    pub const UK: Self = Self {
+        country: "United Kingdom",
+        gamma_G_sup: 1.35,
+        gamma_G_inf: 0.9,
+        gamma_Q: 1.5,
+        psi_0_imposed: 0.7,
+        psi_0_wind: 0.5,
+        rho_air: 1.226,
+        slenderness_limit: 27.0,
+        k_tef: 1.0,
+        gamma_M_ties: 3.0,
+        unfilled_factor: 0.5,
+    };
+}
