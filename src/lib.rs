@@ -2,7 +2,9 @@
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
+pub mod building;
+pub mod checks;
 pub mod quantity;
-pub mod trace;
 pub mod solve;
 pub mod standards;
+pub mod trace;

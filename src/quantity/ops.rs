@@ -117,3 +117,22 @@ dimensions! {
     [1 -4 0] [1 -3 0] [1 -2 0] [1 -1 0] [1 0 0] [1 1 0] [1 2 0] [1 3 0]
     [-1 0 0] [-1 1 0] [-1 2 0] [0 1 -1] [0 2 -2] [1 -4 2]
 }
+
+impl Div<Num> for f64 {
+    type Output = Num;
+    fn div(self, divisor: Num) -> Num {
+        Q(self / divisor.0)
+    }
+}
+
+impl PartialEq<f64> for Num {
+    fn eq(&self, other: &f64) -> bool {
+        self.0 == *other
+    }
+}
+
+impl PartialOrd<f64> for Num {
+    fn partial_cmp(&self, other: &f64) -> Option<std::cmp::Ordering> {
+        self.0.partial_cmp(other)
+    }
+}

@@ -45,7 +45,13 @@ pub fn least(passes: impl Fn(f64) -> bool, low: f64, high: f64, steps: u32, prec
 }
 
 /// The largest `x` between `low` and `high` up to which `passes` holds without a gap at any step.
-pub fn greatest(passes: impl Fn(f64) -> bool, low: f64, high: f64, steps: u32, precision: f64) -> Option<f64> {
+pub fn greatest(
+    passes: impl Fn(f64) -> bool,
+    low: f64,
+    high: f64,
+    steps: u32,
+    precision: f64,
+) -> Option<f64> {
     if !passes(low) {
         return None;
     }

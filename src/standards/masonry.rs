@@ -2,6 +2,9 @@
 
 use std::fmt;
 
+pub use super::tables::annex_e::Edge;
+pub use super::tables::wind::Terrain as TerrainCategory;
+
 /// A kind of masonry unit, as the UK National Annex's tables tell them apart.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
 pub enum UnitKind {

@@ -101,7 +101,11 @@ fn letter(e: &Expr) -> &str {
         Expr::Symbol(name) => name,
         Expr::Neg(a) | Expr::Add(a, _) | Expr::Sub(a, _) => letter(a),
         Expr::Mul(a, b) | Expr::Div(a, b) => {
-            if matches!(**a, Expr::Number(_)) { letter(b) } else { letter(a) }
+            if matches!(**a, Expr::Number(_)) {
+                letter(b)
+            } else {
+                letter(a)
+            }
         }
         Expr::Call(_, args) => args.first().map_or("", letter),
         Expr::Number(_) | Expr::Unit(_) => "",
@@ -154,10 +158,10 @@ fn call(fun: Fun, args: &[Expr], view: View<'_>) -> Node {
     let two = || Node::Num("2".to_owned());
     let bare = |factor: f64| match (&args[0], view) {
         // An empirical formula takes the number alone.
-        (Expr::Symbol(name), View::Values(values)) => values.iter().find(|v| v.name == *name).map_or_else(
-            || symbol(name),
-            |v| Node::Num(print::significant(v.value.value * factor)),
-        ),
+        (Expr::Symbol(name), View::Values(values)) => values
+            .iter()
+            .find(|v| v.name == *name)
+            .map_or_else(|| symbol(name), |v| Node::Num(print::significant(v.value.value * factor))),
         _ => arg(0),
     };
     match fun {

@@ -19,13 +19,13 @@
 mod entry;
 pub mod expr;
 mod macros;
-mod parse;
 pub mod math;
+mod parse;
 mod sheet;
 pub mod spoken;
 pub mod symbol;
 pub mod text;
 
-pub use parse::Op;
 pub use entry::{Column, Entry, Outside, Relation, Step, Table, Value, Verdict};
+pub use parse::Op;
 pub use sheet::{Fault, Sheet, Traced};

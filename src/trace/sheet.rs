@@ -183,7 +183,11 @@ impl Sheet {
     /// Records a limit of application; see [`require!`](crate::require).
     pub fn require(&mut self, words: &str, clause: &str, tokens: &str, holds: bool, symbols: &[(&str, Dyn)]) {
         if let Some(relation) = self.relation(tokens, holds, symbols) {
-            self.entries.push(Entry::Require { relation, words: words.to_owned(), clause: clause.to_owned() });
+            self.entries.push(Entry::Require {
+                relation,
+                words: words.to_owned(),
+                clause: clause.to_owned(),
+            });
         }
     }
 

@@ -7,7 +7,8 @@ use crate::quantity::print;
 
 /// A step as one sentence.
 pub fn step(step: &Step) -> String {
-    let mut out = format!("{} equals {}", speak(&math::symbol(&step.result.name)), speak(&math::formula(step)));
+    let mut out =
+        format!("{} equals {}", speak(&math::symbol(&step.result.name)), speak(&math::formula(step)));
     if let Some(values) = math::substitution(step) {
         out.push_str(&format!(", that is {}", speak(&values)));
     }

@@ -99,7 +99,11 @@ fn table(t: &Table) -> String {
             .enumerate()
             .map(|(i, c)| {
                 let pad = " ".repeat(width(i).saturating_sub(c.chars().count()));
-                if t.columns.get(i).is_some_and(|c| c.numeric) { format!("{pad}{c}") } else { format!("{c}{pad}") }
+                if t.columns.get(i).is_some_and(|c| c.numeric) {
+                    format!("{pad}{c}")
+                } else {
+                    format!("{c}{pad}")
+                }
             })
             .collect();
         let mark = if strong { "*" } else { " " };
@@ -155,7 +159,9 @@ fn node_over(n: &Node) -> String {
 
 fn node_under(n: &Node) -> String {
     match n {
-        Node::Sym(..) | Node::Num(_) | Node::Val(_) | Node::Paren(_) | Node::Call(..) | Node::Sqrt(_) => node(n),
+        Node::Sym(..) | Node::Num(_) | Node::Val(_) | Node::Paren(_) | Node::Call(..) | Node::Sqrt(_) => {
+            node(n)
+        }
         _ => format!("({})", node(n)),
     }
 }

@@ -57,9 +57,12 @@ impl Combination {
         let Annex { gamma_G_sup, gamma_Q, psi_0_imposed, psi_0_wind, .. } = *annex;
         match self {
             Self::Helping => Factors { gamma_G: helping, gamma_Q: 0.0, gamma_W: gamma_Q, gamma_U: gamma_Q },
-            Self::PressingWind => {
-                Factors { gamma_G: gamma_G_sup, gamma_Q: gamma_Q * psi_0_imposed, gamma_W: gamma_Q, gamma_U: 0.0 }
-            }
+            Self::PressingWind => Factors {
+                gamma_G: gamma_G_sup,
+                gamma_Q: gamma_Q * psi_0_imposed,
+                gamma_W: gamma_Q,
+                gamma_U: 0.0,
+            },
             Self::PressingImposed => {
                 Factors { gamma_G: gamma_G_sup, gamma_Q, gamma_W: gamma_Q * psi_0_wind, gamma_U: 0.0 }
             }

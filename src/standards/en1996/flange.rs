@@ -22,8 +22,12 @@ pub fn left(s: &mut Sheet, side: Side, h_tot: Length, h: Length, t_f: Length) ->
     crate::given!(s, "distance to the end or an opening, left", "job file", c_L = side.to_end);
     if let Some(next) = side.to_next {
         crate::given!(s, "clear distance to the next shear wall, left", "job file", s_L = next);
-        calc!(s, "5.5.3(3)", "flange on the left",
-            b_L = min(min(h_tot / 5.0, s_L / 2.0), min(min(c_L, h / 2.0), 6.0 * t_f)));
+        calc!(
+            s,
+            "5.5.3(3)",
+            "flange on the left",
+            b_L = min(min(h_tot / 5.0, s_L / 2.0), min(min(c_L, h / 2.0), 6.0 * t_f))
+        );
         return b_L;
     }
     calc!(s, "5.5.3(3)", "flange on the left", b_L = min(h_tot / 5.0, min(min(c_L, h / 2.0), 6.0 * t_f)));
@@ -35,8 +39,12 @@ pub fn right(s: &mut Sheet, side: Side, h_tot: Length, h: Length, t_f: Length) -
     crate::given!(s, "distance to the end or an opening, right", "job file", c_R = side.to_end);
     if let Some(next) = side.to_next {
         crate::given!(s, "clear distance to the next shear wall, right", "job file", s_R = next);
-        calc!(s, "5.5.3(3)", "flange on the right",
-            b_R = min(min(h_tot / 5.0, s_R / 2.0), min(min(c_R, h / 2.0), 6.0 * t_f)));
+        calc!(
+            s,
+            "5.5.3(3)",
+            "flange on the right",
+            b_R = min(min(h_tot / 5.0, s_R / 2.0), min(min(c_R, h / 2.0), 6.0 * t_f))
+        );
         return b_R;
     }
     calc!(s, "5.5.3(3)", "flange on the right", b_R = min(h_tot / 5.0, min(min(c_R, h / 2.0), 6.0 * t_f)));

@@ -84,9 +84,13 @@ pub fn triangle(s: &mut Sheet, section: Section, N_Ed: Force, a: Length) -> Opti
     calc!(s, "first principles", p_2 = max(min(c, L_s), d_1));
     calc!(s, "first principles", "stress area at unit toe stress", A_1 = b_1 * (p_1 - sq(p_1) / (2.0 * c)));
     calc!(s, "first principles", A_2 = b_2 * ((p_2 - d_1) - (sq(p_2) - sq(d_1)) / (2.0 * c)));
-    calc!(s, "first principles", "its first moment about the toe",
+    calc!(
+        s,
+        "first principles",
+        "its first moment about the toe",
         S_1 = b_1 * (sq(p_1) / 2.0 - cube(p_1) / (3.0 * c))
-            + b_2 * ((sq(p_2) - sq(d_1)) / 2.0 - (cube(p_2) - cube(d_1)) / (3.0 * c)));
+            + b_2 * ((sq(p_2) - sq(d_1)) / 2.0 - (cube(p_2) - cube(d_1)) / (3.0 * c))
+    );
     calc!(s, "first principles", "place of the stress block, to compare with a", a_c = S_1 / (A_1 + A_2));
     calc!(s, "first principles", "triangular edge stress at the toe", sigma_toe = N_Ed / (A_1 + A_2));
     calc!(s, "first principles", "part of N in the first rectangle", N_1 = sigma_toe * A_1);
@@ -118,11 +122,20 @@ pub fn block_area(s: &mut Sheet, section: Section, a: Length) -> Area {
     }
     let inside = sq(a) + (b_1 - b_2) * d_1 * (2.0 * a - d_1) / b_2;
     if inside.base() < 0.0 {
-        calc!(s, "first principles", "area of the uniform stress block: the whole section", A_c = b_1 * d_1 + b_2 * (L_s - d_1));
+        calc!(
+            s,
+            "first principles",
+            "area of the uniform stress block: the whole section",
+            A_c = b_1 * d_1 + b_2 * (L_s - d_1)
+        );
         return A_c;
     }
-    calc!(s, "first principles", "depth of the block centred on N",
-        y_c = min(a + sqrt(sq(a) + (b_1 - b_2) * d_1 * (2.0 * a - d_1) / b_2), L_s));
+    calc!(
+        s,
+        "first principles",
+        "depth of the block centred on N",
+        y_c = min(a + sqrt(sq(a) + (b_1 - b_2) * d_1 * (2.0 * a - d_1) / b_2), L_s)
+    );
     calc!(s, "first principles", "area of the uniform stress block", A_c = b_1 * d_1 + b_2 * (y_c - d_1));
     A_c
 }
@@ -168,9 +181,11 @@ mod tests {
     /// The uniform block is centred on N, by sums over thin strips.
     #[test]
     fn the_block_is_centred_on_the_resultant() {
-        for (b_1, d_1, b_2, depth, a) in
-            [(500.0, 100.0, 100.0, 700.0, 150.0), (100.0, 600.0, 500.0, 700.0, 380.0), (100.0, 600.0, 500.0, 700.0, 340.0)]
-        {
+        for (b_1, d_1, b_2, depth, a) in [
+            (500.0, 100.0, 100.0, 700.0, 150.0),
+            (100.0, 600.0, 500.0, 700.0, 380.0),
+            (100.0, 600.0, 500.0, 700.0, 340.0),
+        ] {
             let sec = Section { b_1: mm(b_1), d_1: mm(d_1), b_2: mm(b_2), L_s: mm(depth) };
             let area = block_area(&mut Sheet::silent(), sec, mm(a)).base();
             let y = if area <= b_1 * d_1 { area / b_1 } else { d_1 + (area - b_1 * d_1) / b_2 };

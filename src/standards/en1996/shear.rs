@@ -1,6 +1,6 @@
 //! Shear: 3.6.2 and 6.2.
 
-use crate::quantity::functions::min;
+use crate::quantity::functions::{MM, min};
 use crate::quantity::{Num, Stress};
 use crate::trace::Sheet;
 use crate::{calc, decide};
@@ -19,7 +19,12 @@ pub fn design_strength(
     gamma_M: Num,
 ) -> Stress {
     if perpends_filled {
-        calc!(s, "3.6.2(3) eq. 3.5", "characteristic shear strength", f_vk = min(f_vk0 + 0.4 * sigma_d, 0.065 * f_b));
+        calc!(
+            s,
+            "3.6.2(3) eq. 3.5",
+            "characteristic shear strength",
+            f_vk = min(f_vk0 + 0.4 * sigma_d, 0.065 * f_b)
+        );
         calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_M);
         f_vd
     } else {
@@ -58,7 +63,7 @@ pub fn compressed_length(
         calc!(s, "6.2(2)", "compressed length", l_c = 3.0 * (l / 2.0 - e));
         l_c
     } else {
-        calc!(s, "6.2(2)", "compressed length", l_c = 0.0 * l);
+        calc!(s, "6.2(2)", "compressed length", l_c = 0.0 * MM);
         l_c
     }
 }

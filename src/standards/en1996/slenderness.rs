@@ -21,7 +21,14 @@ pub enum Stiffened {
 ///
 /// 5.5.1.2(11): rho_3 eq. 5.6 and 5.7, rho_4 eq. 5.8 and 5.9; 5.5.1.2(8): no benefit where
 /// `l >= 15 t` (one edge) or `l >= 30 t` (two). From memory, check against the standard.
-pub fn effective_height(s: &mut Sheet, stiffened: Stiffened, h: Length, l: Length, t: Length, rho_2: Num) -> Length {
+pub fn effective_height(
+    s: &mut Sheet,
+    stiffened: Stiffened,
+    h: Length,
+    l: Length,
+    t: Length,
+    rho_2: Num,
+) -> Length {
     let counts = match stiffened {
         Stiffened::None => false,
         Stiffened::One => decide!(
@@ -84,8 +91,12 @@ pub fn effective_height(s: &mut Sheet, stiffened: Stiffened, h: Length, l: Lengt
 ///
 /// 5.5.1.3(3) eq. 5.11, k_tef of the UK National Annex; from memory, check against the standard.
 pub fn effective_thickness_cavity(s: &mut Sheet, k_tef: Num, t_1: Length, t_2: Length) -> Length {
-    calc!(s, "5.5.1.3(3) eq. 5.11", "effective thickness, for slenderness only",
-        t_ef = cbrt(k_tef * cube(t_1) + cube(t_2)));
+    calc!(
+        s,
+        "5.5.1.3(3) eq. 5.11",
+        "effective thickness, for slenderness only",
+        t_ef = cbrt(k_tef * cube(t_1) + cube(t_2))
+    );
     t_ef
 }
 

@@ -1,0 +1,3 @@
+//! What is verified.
+pub mod masonry;
+pub mod returns;

@@ -1,0 +1,205 @@
+//! Design actions on a section of a return, for one combination and one direction of the wind.
+
+use super::model::{At, Flange, Model, Vertical};
+use crate::quantity::functions::{abs, metres, sqrt};
+use crate::quantity::{Force, Length, Moment, Num};
+use crate::standards::annex::Annex;
+use crate::standards::en1990::Combination;
+use crate::trace::Sheet;
+use crate::{calc, given};
+
+/// Which way the wind pushes the head.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Direction {
+    /// Towards the free end of the return.
+    ToFree,
+    /// Towards the junction.
+    ToJunction,
+}
+
+impl Direction {
+    /// Both.
+    pub const BOTH: [Self; 2] = [Self::ToFree, Self::ToJunction];
+
+    /// In words.
+    pub const fn words(self) -> &'static str {
+        match self {
+            Self::ToFree => "towards the free end",
+            Self::ToJunction => "towards the junction",
+        }
+    }
+}
+
+/// One case: every check runs under every case, the worst is printed.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct Case {
+    /// Combination.
+    pub combination: Combination,
+    /// Direction.
+    pub direction: Direction,
+}
+
+impl Case {
+    /// All cases in the order printed.
+    pub fn all() -> Vec<Self> {
+        Combination::ALL
+            .into_iter()
+            .flat_map(|combination| Direction::BOTH.map(|direction| Self { combination, direction }))
+            .collect()
+    }
+
+    /// Its name, as printed beside a result.
+    pub fn name(self) -> String {
+        format!("{}, {} {}", self.combination.name(), self.push(), self.direction.words())
+    }
+
+    /// What pushes: wind, or the tilt alone.
+    pub const fn push(self) -> &'static str {
+        if matches!(self.combination, Combination::Gravity) { "tilt" } else { "wind" }
+    }
+}
+
+/// Which edge of the section is pressed hardest.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Toe {
+    /// The free end.
+    Free,
+    /// The junction end, or the outer face of the flange.
+    Junction,
+}
+
+/// Design actions on one section.
+#[derive(Clone, Copy, Debug)]
+pub struct Actions {
+    /// Where.
+    pub at: At,
+    /// Vertical force.
+    pub N_Ed: Force,
+    /// Moment in plane, about mid-length of the web; its size.
+    pub M_Ed: Moment,
+    /// Shear in plane.
+    pub V_Ed: Force,
+    /// Pressed edge.
+    pub toe: Toe,
+    /// Flange that acts, with its thickness; foot only.
+    pub flange: Option<Flange>,
+    /// Factor on dead load in this case.
+    pub gamma_G: Num,
+}
+
+/// Partial factors of the case, noted on the sheet.
+pub fn factors(s: &mut Sheet, case: Case, annex: &Annex, helping: f64) -> (Num, Num, Num, Num) {
+    let f = case.combination.factors(annex, helping);
+    let source = case.combination.clause();
+    given!(s, "factor on dead load", source, gamma_G = Num::new(f.gamma_G));
+    given!(s, "factor on imposed load", source, gamma_Q = Num::new(f.gamma_Q));
+    given!(s, "factor on wind", source, gamma_W = Num::new(f.gamma_W));
+    given!(s, "factor on roof uplift taken off the dead load", source, gamma_U = Num::new(f.gamma_U));
+    (gamma_G, gamma_Q, gamma_W, gamma_U)
+}
+
+/// Actions at a section. `l`, `h` and the loads of the model stand on the sheet or are noted here.
+pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Actions {
+    let (gamma_G, gamma_Q, gamma_W, gamma_U) = factors(s, case, annex, m.helping);
+    let Vertical { G, Q, U, S_G, S_Q, S_U, .. } = m.vertical(at);
+    let source = "load table of this sheet";
+    given!(s, "dead load at the section, own weight above included", source, G = G);
+    given!(s, "imposed load", source, Q = Q);
+    given!(s, "first moment of the dead load about mid-length", source, S_G = S_G);
+    given!(s, "first moment of the imposed load", source, S_Q = S_Q);
+    let (N_Ed, M_N) = if U == Force::ZERO {
+        calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
+        calc!(s, "statics", "moment of the vertical loads", M_N = gamma_G * S_G + gamma_Q * S_Q);
+        (N_Ed, M_N)
+    } else {
+        given!(s, "roof uplift", source, U = U);
+        given!(s, "first moment of the uplift", source, S_U = S_U);
+        calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q - gamma_U * U);
+        calc!(
+            s,
+            "statics",
+            "moment of the vertical loads",
+            M_N = gamma_G * S_G + gamma_Q * S_Q - gamma_U * S_U
+        );
+        (N_Ed, M_N)
+    };
+    let (M_W, V_Ed) = lateral(s, m, gamma_W, at);
+    let flange = m.flange.filter(|_| at == At::Foot);
+    // Positive presses the free end.
+    let signed = if case.direction == Direction::ToFree { M_N + M_W } else { M_N - M_W };
+    let M_Ed = if case.direction == Direction::ToFree {
+        calc!(s, "statics", "moment in plane about mid-length", M_Ed = abs(M_N + M_W));
+        M_Ed
+    } else {
+        calc!(s, "statics", "moment in plane about mid-length", M_Ed = abs(M_N - M_W));
+        M_Ed
+    };
+    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), flange, gamma_G }
+}
+
+/// The edge on whose side of the section's centroid the resultant acts.
+fn toe(m: &Model, flange: Option<Flange>, N_Ed: Force, signed: Moment) -> Toe {
+    let centroid = match flange {
+        None => Length::ZERO,
+        // From mid-length of the web towards the flange.
+        Some(Flange { b_f, t_f, .. }) => -((b_f * t_f) * ((m.l + t_f) / 2.0) / (b_f * t_f + m.l * m.t)),
+    };
+    if N_Ed > Force::ZERO && signed / N_Ed < centroid || N_Ed <= Force::ZERO && signed < Moment::ZERO {
+        Toe::Junction
+    } else {
+        Toe::Free
+    }
+}
+
+/// Moment and shear of wind and tilt at the section.
+fn lateral(s: &mut Sheet, m: &Model, gamma_W: Num, at: At) -> (Moment, Force) {
+    let h = m.h;
+    let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
+    let H_nu = tilt(s, m);
+    calc!(s, "EN 1990 6.4.3.2", "force at the head, tilt included", H_Ed = gamma_W * H_k + H_nu);
+    calc!(s, "EN 1990 6.4.3.2", "line load", w_Ed = gamma_W * w_k);
+    calc!(s, "EN 1990 6.4.3.2", "moment at the head", M_h = gamma_W * M_k);
+    match (m.propped, at) {
+        (false, At::Head) => {
+            calc!(s, "statics", "moment of the lateral loads", M_W = 1.0 * M_h);
+            calc!(s, "statics", "shear", V_Ed = H_Ed);
+            (M_W, V_Ed)
+        }
+        (false, _) => {
+            calc!(
+                s,
+                "statics, head free",
+                "moment of the lateral loads",
+                M_W = M_h + H_Ed * h + w_Ed * h * h / 2.0
+            );
+            calc!(s, "statics, head free", "shear", V_Ed = H_Ed + w_Ed * h);
+            (M_W, V_Ed)
+        }
+        (true, At::Middle) => {
+            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h + w_Ed * h * h / 8.0);
+            calc!(s, "statics, head held", "shear", V_Ed = 0.0 * w_Ed * h);
+            (M_W, V_Ed)
+        }
+        (true, _) => {
+            calc!(s, "statics, head held", "moment of the lateral loads", M_W = 1.0 * M_h);
+            calc!(
+                s,
+                "statics, head held",
+                "shear; the named walls take the head force",
+                V_Ed = w_Ed * h / 2.0
+            );
+            (M_W, V_Ed)
+        }
+    }
+}
+
+/// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.
+fn tilt(s: &mut Sheet, m: &Model) -> Force {
+    let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
+    given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu = G_nu);
+    given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu = Q_nu);
+    given!(s, "height of the structure, in m in the next line", "job file", h_tot = h_tot);
+    calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
+    calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (1.35 * G_nu + 1.5 * Q_nu));
+    H_nu
+}

@@ -1,0 +1,289 @@
+//! Every check under every case: silently first, then the worst of each on the sheet, named.
+
+use super::actions::{self, Case};
+use super::model::{At, Model};
+use super::vertical::{Reductions, Slender};
+use super::{flexure, in_plane, sliding, vertical};
+use crate::quantity::{Num, Stress, print};
+use crate::standards::annex::Annex;
+use crate::trace::{Column, Sheet, Table};
+
+/// One check of a return in one case. The order is the order on the sheet.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Check {
+    /// Overturning at the foot.
+    Overturning,
+    /// Toe at the foot.
+    Toe,
+    /// Shear at the foot.
+    Shear,
+    /// Sliding at the dpc.
+    Sliding,
+    /// Shear at a bonded junction.
+    Junction,
+    /// Shear at the head.
+    ShearHead,
+    /// Flexure at mid-height (head held), or information at a bonded foot.
+    Flexure,
+    /// Vertical resistance at the head.
+    VerticalHead,
+    /// In the middle.
+    VerticalMiddle,
+    /// At the foot.
+    VerticalFoot,
+}
+
+impl Check {
+    /// Every check, in order.
+    pub const ALL: [Self; 10] = [
+        Self::Overturning,
+        Self::Toe,
+        Self::Shear,
+        Self::Sliding,
+        Self::Junction,
+        Self::ShearHead,
+        Self::Flexure,
+        Self::VerticalHead,
+        Self::VerticalMiddle,
+        Self::VerticalFoot,
+    ];
+
+    /// Its id, unique on a sheet.
+    pub const fn id(self) -> &'static str {
+        match self {
+            Self::Overturning => "overturning",
+            Self::Toe => "toe",
+            Self::Shear => "shear",
+            Self::Sliding => "sliding",
+            Self::Junction => "junction",
+            Self::ShearHead => "shear-head",
+            Self::Flexure => "flexure",
+            Self::VerticalHead => "vertical-head",
+            Self::VerticalMiddle => "vertical-middle",
+            Self::VerticalFoot => "vertical-foot",
+        }
+    }
+
+    /// A short heading for the table of cases.
+    const fn head(self) -> &'static str {
+        match self {
+            Self::Overturning => "overt.",
+            Self::Toe => "toe",
+            Self::Shear => "shear",
+            Self::Sliding => "sliding",
+            Self::Junction => "junction",
+            Self::ShearHead => "head",
+            Self::Flexure => "flexure",
+            Self::VerticalHead => "N head",
+            Self::VerticalMiddle => "N middle",
+            Self::VerticalFoot => "N foot",
+        }
+    }
+
+    /// Whether it applies to this return.
+    pub fn applies(self, m: &Model) -> bool {
+        match self {
+            Self::Sliding => m.dpc,
+            Self::Junction => m.flange.is_some(),
+            Self::Flexure => m.propped || !m.dpc,
+            _ => true,
+        }
+    }
+
+    /// Where along the height it looks.
+    fn section(self, m: &Model) -> At {
+        match self {
+            Self::ShearHead | Self::VerticalHead => At::Head,
+            Self::VerticalMiddle => At::Middle,
+            Self::Flexure if m.propped => At::Middle,
+            _ => At::Foot,
+        }
+    }
+}
+
+/// What stands before the cases: strength and slenderness.
+#[derive(Clone, Copy, Debug)]
+pub struct Ready {
+    /// Design compressive strength.
+    pub f_d: Stress,
+    /// Slenderness; none where it is outside the method.
+    pub slender: Option<Slender>,
+}
+
+/// Strength and slenderness, once for all cases. What is outside the method is noted on the sheet.
+pub fn prepare(s: &mut Sheet, m: &Model, annex: &Annex) -> Option<Ready> {
+    let id = |name: &str| format!("{}{name}", m.leaf);
+    let f_d = match in_plane::compressive_strength(s, m, &id("area")) {
+        Ok(f_d) => f_d,
+        Err(outside) => {
+            s.leave(outside);
+            return None;
+        }
+    };
+    let slender = match vertical::slenderness(s, m, annex, &id("slenderness")) {
+        Ok(sl) => Some(sl),
+        Err(outside) => {
+            s.leave(outside);
+            None
+        }
+    };
+    Some(Ready { f_d, slender })
+}
+
+/// Ratios of every check in every case; `NaN` where a check does not apply.
+pub struct Matrix {
+    /// Cases in order.
+    pub cases: Vec<Case>,
+    /// Checks that apply, in order.
+    pub checks: Vec<Check>,
+    /// Ratio by case and check.
+    pub ratios: Vec<Vec<f64>>,
+}
+
+impl Matrix {
+    /// Runs everything on silent sheets.
+    pub fn run(m: &Model, annex: &Annex, ready: Ready) -> Self {
+        let cases = Case::all();
+        let checks: Vec<Check> = Check::ALL
+            .into_iter()
+            .filter(|c| c.applies(m) && !(*c == Check::Flexure && !m.propped))
+            .collect();
+        let ratio = |case: Case, check: Check| {
+            let mut s = Sheet::silent();
+            work(&mut s, m, annex, ready, case, &[check], "");
+            s.verdicts.iter().map(|v| v.ratio).fold(f64::NAN, f64::max)
+        };
+        let ratios = cases.iter().map(|&c| checks.iter().map(|&k| ratio(c, k)).collect()).collect();
+        Self { cases, checks, ratios }
+    }
+
+    /// The case in which check number `k` is used most; the first of equals.
+    pub fn worst(&self, k: usize) -> Option<usize> {
+        let at = |i: usize| self.ratios[i][k];
+        (0..self.cases.len()).filter(|&i| !at(i).is_nan()).reduce(|a, b| if at(b) > at(a) { b } else { a })
+    }
+
+    /// The largest ratio of all.
+    pub fn largest(&self) -> f64 {
+        self.ratios.iter().flatten().copied().filter(|r| !r.is_nan()).fold(0.0, f64::max)
+    }
+
+    /// The table of all ratios, the worst of each check marked.
+    pub fn table(&self) -> Table {
+        let mut columns = vec![Column::words("case")];
+        columns.extend(self.checks.iter().map(|c| Column::numbers(c.head())));
+        let cell = |i: usize, k: usize| {
+            let r = self.ratios[i][k];
+            let text = if r.is_nan() { "–".to_owned() } else { print::ratio(r) };
+            if self.worst(k) == Some(i) { format!("{text}*") } else { text }
+        };
+        let rows = self
+            .cases
+            .iter()
+            .enumerate()
+            .map(|(i, c)| {
+                let mut row = vec![c.name()];
+                row.extend((0..self.checks.len()).map(|k| cell(i, k)));
+                row
+            })
+            .collect();
+        Table {
+            caption: "Use of every check in every case; * the case worked below".to_owned(),
+            columns,
+            rows,
+            strong: Vec::new(),
+        }
+    }
+}
+
+/// Records the worst case of each check, checks of the same case under one heading.
+pub fn record(s: &mut Sheet, m: &Model, annex: &Annex, ready: Ready, matrix: &Matrix, mu_source: &str) {
+    s.table(|| matrix.table());
+    for (i, case) in matrix.cases.iter().enumerate() {
+        let governed: Vec<Check> = matrix
+            .checks
+            .iter()
+            .enumerate()
+            .filter(|&(k, _)| matrix.worst(k) == Some(i))
+            .map(|(_, &c)| c)
+            .collect();
+        if governed.is_empty() {
+            continue;
+        }
+        s.case = case.name();
+        let name = case.name();
+        let mut letters = name.chars();
+        let title: String = letters
+            .next()
+            .map(|c| c.to_uppercase().collect::<String>() + letters.as_str())
+            .unwrap_or_default();
+        s.heading(2, title);
+        work(s, m, annex, ready, *case, &governed, mu_source);
+    }
+    if !m.dpc && !m.propped {
+        let case = matrix.worst(0).map_or_else(|| matrix.cases[0], |i| matrix.cases[i]);
+        s.case = case.name();
+        work(s, m, annex, ready, case, &[Check::Flexure], mu_source);
+    }
+    s.case.clear();
+}
+
+/// Works checks of one case: the actions once per section, the stresses once, the reductions once.
+fn work(
+    s: &mut Sheet,
+    m: &Model,
+    annex: &Annex,
+    ready: Ready,
+    case: Case,
+    checks: &[Check],
+    mu_source: &str,
+) {
+    let id = |c: Check| format!("{}{}", m.leaf, c.id());
+    let vertical_checks: Vec<Check> = checks
+        .iter()
+        .copied()
+        .filter(|c| matches!(c, Check::VerticalHead | Check::VerticalMiddle | Check::VerticalFoot))
+        .collect();
+    let reductions = ready
+        .slender
+        .filter(|_| !vertical_checks.is_empty() || checks.contains(&Check::Toe))
+        .map(|sl| vertical::reductions(s, m, sl, annex, case));
+    for at in [At::Foot, At::Middle, At::Head] {
+        let here: Vec<Check> =
+            checks.iter().copied().filter(|c| c.section(m) == at && !vertical_checks.contains(c)).collect();
+        if here.is_empty() {
+            continue;
+        }
+        let a = actions::at(s, m, annex, case, at);
+        if here.contains(&Check::Overturning) {
+            in_plane::overturning(s, m, &a, &id(Check::Overturning));
+        }
+        let stressed = here
+            .iter()
+            .any(|c| matches!(c, Check::Toe | Check::Shear | Check::ShearHead | Check::Junction))
+            .then(|| in_plane::stresses(s, m, &a));
+        for check in here {
+            let id = id(check);
+            match (check, &stressed) {
+                (Check::Toe, Some(st)) => {
+                    let phi = reductions.map_or(Num::new(1.0), Reductions::least);
+                    in_plane::toe(s, &a, st, phi, ready.f_d, &id);
+                }
+                (Check::Shear | Check::ShearHead, Some(st)) => sliding::shear(s, m, &a, st, &id),
+                (Check::Junction, Some(st)) => {
+                    if let Some(f) = a.flange {
+                        sliding::junction(s, m, f, &a, st, &id);
+                    }
+                }
+                (Check::Sliding, _) => sliding::sliding(s, m, &a, mu_source, &id),
+                (Check::Flexure, _) => flexure::flexure(s, m, &a, ready.f_d, &id),
+                _ => {}
+            }
+        }
+    }
+    for check in vertical_checks {
+        if let Some(r) = reductions {
+            vertical::resistance(s, m, annex, case, check.section(m), r, ready.f_d, &id(check));
+        }
+    }
+}

@@ -1,0 +1,144 @@
+//! Vertical resistance across the thickness: slenderness, 6.1.2 at head, middle and foot, Annex G.
+
+use super::actions::{Case, factors};
+use super::model::{At, Model};
+use crate::quantity::functions::{KN, abs};
+use crate::quantity::{Length, Num, Stress};
+use crate::standards::annex::Annex;
+use crate::standards::en1996::{reduction, slenderness};
+use crate::trace::{Outside, Sheet};
+use crate::{calc, decide, given, require, verify};
+
+/// What does not depend on the case: effective height and thickness, initial eccentricity.
+#[derive(Clone, Copy, Debug)]
+pub struct Slender {
+    /// Effective height.
+    pub h_ef: Length,
+    /// Effective thickness.
+    pub t_ef: Length,
+    /// Initial eccentricity.
+    pub e_init: Length,
+}
+
+/// Effective height and thickness, and the slenderness check. `h`, `l` and `t` stand on the sheet.
+///
+/// # Errors
+/// [`Outside`] where the head is not held across the wall: 5.5.1.2 has no factor for that.
+pub fn slenderness(s: &mut Sheet, m: &Model, annex: &Annex, id: &str) -> Result<Slender, Outside> {
+    let (h, l, t) = (m.h, m.l, m.t);
+    let Some(rho) = m.rho_2 else {
+        return Err(Outside::new(
+            id,
+            "5.5.1.2",
+            "the head is not held across the thickness: no effective height is given for that",
+        ));
+    };
+    given!(s, "factor for the restraint at head and foot", "5.5.1.2(11)(i), (ii)", rho_2 = rho);
+    let h_ef = slenderness::effective_height(s, m.stiffened, h, l, t, rho_2);
+    let t_ef = match m.t_other {
+        None => {
+            calc!(s, "5.5.1.3(1)", "effective thickness", t_ef = t);
+            t_ef
+        }
+        Some(other) => {
+            given!(
+                s,
+                "other leaf, taken no thicker than this one",
+                "job file",
+                t_1 = if other > t { t } else { other }
+            );
+            given!(s, "this leaf", "job file", t_2 = t);
+            given!(
+                s,
+                "relative stiffness factor, UK",
+                "UK NA Table NA.1 note",
+                k_tef = Num::new(annex.k_tef)
+            );
+            slenderness::effective_thickness_cavity(s, k_tef, t_1, t_2)
+        }
+    };
+    calc!(s, "5.5.1.4(1)", "slenderness", lambda_h = h_ef / t_ef);
+    given!(s, "limit of the slenderness", "5.5.1.4(2)", lambda_max = Num::new(annex.slenderness_limit));
+    verify!(s, id, "5.5.1.4(2)", "slenderness", lambda_h <= lambda_max);
+    calc!(s, "5.5.1.1(4)", "initial eccentricity", e_init = h_ef / 450.0);
+    require!(s, id, "6.1.2.2, Annex G", "slenderness within the limit", lambda_h <= lambda_max);
+    Ok(Slender { h_ef, t_ef, e_init })
+}
+
+/// Reductions at head, middle and foot in one case.
+#[derive(Clone, Copy, Debug)]
+pub struct Reductions {
+    /// At the head.
+    pub head: Num,
+    /// In the middle.
+    pub middle: Num,
+    /// At the foot.
+    pub foot: Num,
+}
+
+impl Reductions {
+    /// The least of the three.
+    pub fn least(self) -> Num {
+        [self.middle, self.foot].into_iter().fold(self.head, |a, b| if b < a { b } else { a })
+    }
+}
+
+/// Phi at head, middle and foot. The eccentricity of the loads falls from its value at the head to
+/// nil at the foot; half of it is taken in the middle.
+pub fn reductions(s: &mut Sheet, m: &Model, sl: Slender, annex: &Annex, case: Case) -> Reductions {
+    let (t, e_init, f_k) = (m.t, sl.e_init, m.masonry.f_k);
+    let (gamma_G, gamma_Q, _, _) = factors(s, case, annex, m.helping);
+    let v = m.vertical(At::Head);
+    given!(s, "dead load at the head", "load table", G_h = v.G);
+    given!(s, "imposed load at the head", "load table", Q_h = v.Q);
+    given!(s, "moment of the dead load across the wall", "load table", T_G = v.T_G);
+    given!(s, "moment of the imposed load across the wall", "load table", T_Q = v.T_Q);
+    calc!(s, "statics", "vertical force at the head", N_h = gamma_G * G_h + gamma_Q * Q_h);
+    let loaded = decide!(s, "6.1.2.2", "", "no load at the head, so none is eccentric", N_h > 0.0 * KN);
+    let e_head = if loaded {
+        calc!(
+            s,
+            "6.1.2.2(1)",
+            "eccentricity of the loads at the head",
+            e_head = abs(gamma_G * T_G + gamma_Q * T_Q) / N_h
+        );
+        e_head
+    } else {
+        given!(s, "eccentricity of the loads at the head", "no load", e_head = Length::ZERO);
+        e_head
+    };
+    given!(s, "as the formula names it, at the head", "above", e_load = e_head);
+    let head = reduction::at_end(s, t, e_init, e_load);
+    calc!(s, "6.1.2.2(1)", "eccentricity of the loads in the middle", e_load = e_head / 2.0);
+    let middle = reduction::in_middle(s, t, sl.t_ef, sl.h_ef, e_init, e_load, f_k);
+    given!(s, "eccentricity of the loads at the foot", "held at the foot", e_load = Length::ZERO);
+    let foot = reduction::at_end(s, t, e_init, e_load);
+    Reductions { head, middle, foot }
+}
+
+/// N against Phi t l f_d at one section, evenly pressed along its length.
+pub fn resistance(
+    s: &mut Sheet,
+    m: &Model,
+    annex: &Annex,
+    case: Case,
+    at: At,
+    r: Reductions,
+    f_d: Stress,
+    id: &str,
+) {
+    let (l, t) = (m.l, m.t);
+    let (gamma_G, gamma_Q, _, _) = factors(s, case, annex, m.helping);
+    let v = m.at_head.with_dead(m.own * at.share(), Length::ZERO);
+    given!(s, "dead load at the section", "load table", G = v.G);
+    given!(s, "imposed load at the section", "load table", Q = v.Q);
+    calc!(s, "statics", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
+    let (phi, words) = match at {
+        At::Head => (r.head, "vertical resistance at the head"),
+        At::Middle => (r.middle, "vertical resistance in the middle"),
+        At::Foot => (r.foot, "vertical resistance at the foot"),
+    };
+    given!(s, "reduction at this section", "above", Phi = phi);
+    calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi * t * l * f_d);
+    verify!(s, id, "6.1.2.1(1) eq. 6.1", words, N_Ed <= N_Rd);
+}
