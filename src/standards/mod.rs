@@ -4,3 +4,4 @@ pub mod en1990;
 pub mod en1996;
 pub mod masonry;
 pub mod source;
+pub mod tables;
