@@ -1,3 +1,4 @@
 //! Searches that print nothing.
 
 pub mod root;
+pub mod torsion;
