@@ -1,3 +1,5 @@
 //! What is verified.
 pub mod masonry;
 pub mod returns;
+pub mod stability;
+pub mod wind;

@@ -1,9 +1,106 @@
-//! A return in its own plane.
+//! A return: a short length of wall that takes wind in its plane.
+//!
+//! * [`build`]: geometry, loads and wind of one return, on the sheet
+//! * [`run`]: every check under every case, the worst recorded
+//! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
+//! * [`rules`]: lengths by rule, as information
+//! * [`remedy`]: what would make it pass
+
 pub mod actions;
+pub mod build;
 pub mod flexure;
 pub mod in_plane;
 pub mod model;
+pub mod remedy;
 pub mod rules;
 pub mod run;
 pub mod sliding;
 pub mod vertical;
+
+use crate::building::{BaseJoint, Head, Proof};
+use crate::trace::Sheet;
+use build::{Change, Inputs};
+use model::Model;
+
+/// A checked return: its models and the ratios of every case, for sketches and margins.
+pub struct Checked {
+    /// One a leaf that acts.
+    pub models: Vec<(Model, Option<run::Matrix>)>,
+}
+
+/// Checks a return on a sheet.
+pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
+    let r = i.ret;
+    s.drawings(&[&format!("{}-elevation", r.mark), &format!("{}-section", r.mark)]);
+    s.heading(2, "Geometry, loads and wind");
+    let models = match build::models(s, i, Change::NONE) {
+        Ok(models) => models,
+        Err(outside) => {
+            s.leave(outside);
+            return Checked { models: Vec::new() };
+        }
+    };
+    remarks(s, i);
+    let mut out = Vec::new();
+    for m in models {
+        if !m.leaf.is_empty() {
+            s.heading(2, format!("{}leaf", m.leaf.replace('-', " ")));
+        }
+        s.heading(2, "Strength and slenderness");
+        let matrix = run::prepare(s, &m, i.annex).map(|ready| {
+            let matrix = run::Matrix::run(&m, i.annex, ready);
+            let mu_source = if r.mu.reason.is_empty() {
+                "default, common practice, no published source".to_owned()
+            } else {
+                format!("stated: {}", r.mu.reason)
+            };
+            run::record(s, &m, i.annex, ready, &matrix, &mu_source);
+            matrix
+        });
+        out.push((m, matrix));
+    }
+    s.heading(2, "By rule, for information");
+    rules::by_rule(s, r.length, r.supported_wall_height, r.nearest_opening);
+    if !s.holds() {
+        s.heading(2, "What would make it pass");
+        s.table(|| remedy::table(i));
+        other_paths(s, i);
+    }
+    s.drawings(&[&format!("{}-actions", r.mark)]);
+    Checked { models: out }
+}
+
+/// What the reader must know before the numbers.
+fn remarks(s: &mut Sheet, i: &Inputs<'_>) {
+    let r = i.ret;
+    if r.base == BaseJoint::Bonded {
+        s.note(format!("No damp-proof course crosses the foot: {}.", r.base_reason));
+    }
+    if let Head::Propped(walls) = &r.head {
+        s.note(format!(
+            "The head is held in plane by {}. The reaction there is added to the load of those walls.",
+            walls.join(", ")
+        ));
+    }
+    if r.junction.bonded {
+        let word = if r.junction.proof == Proof::Assumed { "assumed to be bonded" } else { "bonded" };
+        s.note(format!("The junction with {} is {word}: {}.", r.junction.to, r.junction.words));
+        s.note(
+            "A flange on one side only bends the return across its plane as well; that is left out. The least \
+             reduction across the wall found for the return is used for the flange too.",
+        );
+    }
+}
+
+/// The other ways in which the load could be carried.
+fn other_paths(s: &mut Sheet, i: &Inputs<'_>) {
+    let r = i.ret;
+    s.note(
+        "Another load path may carry what this return cannot: the floor as a diaphragm, strapped to the wall at \
+         2 m or closer, bringing the wind to longer walls; a flange, where the junction is shown to be bonded; \
+         or a frame.",
+    );
+    if matches!(r.head, Head::Free) {
+        s.note("A short nib alone seldom works as a cantilever: its head held by named walls changes the answer.");
+    }
+}

@@ -1,0 +1,227 @@
+//! The storey's wind, every bracing wall's share of it, before and after the removal.
+
+use super::wind::Pressures;
+use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands};
+use crate::quantity::functions::{metres, sqrt};
+use crate::quantity::{Force, Length, print};
+use crate::solve::torsion::{self, Bracing, Push};
+use crate::standards::annex::Annex;
+use crate::trace::{Column, Outside, Sheet, Table};
+use crate::{calc, given};
+
+/// What one wall takes.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Share {
+    /// Mark of the wall.
+    pub mark: String,
+    /// Part of the storey's wind before the removal; none where it does not stand then.
+    pub before: Option<f64>,
+    /// After.
+    pub after: Option<f64>,
+    /// Tributary width before (flexible floor).
+    pub width_before: Option<Length>,
+    /// Tributary width after.
+    pub width_after: Option<Length>,
+}
+
+/// The storey's force and how it is shared.
+#[derive(Clone, Debug)]
+pub struct Storey {
+    /// Characteristic wind force at the head of the storey.
+    pub F_k: Force,
+    /// Shares, in the order of the job.
+    pub shares: Vec<Share>,
+    /// Dead load of the level, for the tilt.
+    pub dead: Force,
+    /// Imposed load of the level.
+    pub imposed: Force,
+}
+
+impl Storey {
+    /// The share of the wall `mark` after the removal.
+    pub fn after(&self, mark: &str) -> Option<f64> {
+        self.shares.iter().find(|s| s.mark == mark).and_then(|s| s.after)
+    }
+}
+
+/// Shares the storey's wind on the sheet.
+///
+/// # Errors
+/// [`Outside`] where nothing braces the storey in that direction.
+pub fn share(
+    s: &mut Sheet,
+    b: &Building,
+    st: &Stability,
+    wind: Pressures,
+    annex: &Annex,
+) -> Result<Storey, Outside> {
+    let h_tot = b.storey(&st.storey).map_or(st.strip_height, |x| x.total_height);
+    let (from, to) = st.front;
+    given!(s, "net overall pressure", "wind sheet", q_net = wind.overall);
+    given!(s, "length of the wind face", "job file", L_f = to - from);
+    given!(s, "height of wind face that this level collects", "job file", h_s = st.strip_height);
+    given!(s, "characteristic wind on everything above", "job file", F_a = st.force_above);
+    calc!(s, "EN 1991-1-4 5.3", "characteristic wind force of the storey", F_k = q_net * L_f * h_s + F_a);
+    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_Q = annex.gamma_Q);
+    calc!(s, "EN 1990 eq. 6.10", "design wind force of the storey", F_Ed = gamma_Q * F_k);
+    given!(s, "dead load of the level, for the tilt", "job file", G_s = st.dead);
+    given!(s, "imposed load of the level", "job file", Q_s = st.imposed);
+    given!(s, "height of the structure, in m in the next line", "job file", h_tot = h_tot);
+    calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
+    calc!(
+        s,
+        "5.3(2)",
+        "tilt of the storey as a force, pressing factors",
+        H_s = nu * (1.35 * G_s + 1.5 * Q_s)
+    );
+    let before = shares(b, st, Stands::Before)?;
+    let after = shares(b, st, Stands::After)?;
+    let list: Vec<Share> = st
+        .walls
+        .iter()
+        .filter(|w| w.along == st.wind_along)
+        .map(|w| {
+            let find = |v: &[(String, f64, Option<Length>)]| v.iter().find(|x| x.0 == w.mark).cloned();
+            let (b, a) = (find(&before), find(&after));
+            Share {
+                mark: w.mark.clone(),
+                before: b.as_ref().map(|x| x.1),
+                after: a.as_ref().map(|x| x.1),
+                width_before: b.and_then(|x| x.2),
+                width_after: a.and_then(|x| x.2),
+            }
+        })
+        .collect();
+    s.table(|| table(st, &list, F_Ed + H_s));
+    note(s, st);
+    Ok(Storey { F_k, shares: list, dead: st.dead, imposed: st.imposed })
+}
+
+fn note(s: &mut Sheet, st: &Stability) {
+    match st.share_by {
+        ShareBy::Width => s.note(
+            "A timber floor is taken as flexible: each wall takes the wind of half the distance to its neighbours. \
+             The shares add up to the front.",
+        ),
+        ShareBy::Stiffness => s.note(
+            "A concrete floor is taken as rigid in its plane: walls take the wind by their stiffness, torsion \
+             included; relief by torsion is not counted. E is taken as equal in all walls.",
+        ),
+    }
+}
+
+type Row = (String, f64, Option<Length>);
+
+fn shares(b: &Building, st: &Stability, when: Stands) -> Result<Vec<Row>, Outside> {
+    let standing = |w: &&BracingWall| w.stands == Stands::Both || w.stands == when;
+    let walls: Vec<&BracingWall> = st.walls.iter().filter(standing).collect();
+    match st.share_by {
+        ShareBy::Width => by_width(st, &walls),
+        ShareBy::Stiffness => by_stiffness(b, st, &walls),
+    }
+}
+
+/// Half the distance to each neighbour; the outermost walls reach to the ends of the front.
+fn by_width(st: &Stability, walls: &[&BracingWall]) -> Result<Vec<Row>, Outside> {
+    let mut along: Vec<&BracingWall> = walls.iter().copied().filter(|w| w.along == st.wind_along).collect();
+    along.sort_by(|a, b| a.at.base().total_cmp(&b.at.base()));
+    if along.is_empty() {
+        return Err(unbraced("no wall braces the storey along the wind"));
+    }
+    let (from, to) = st.front;
+    let edge = |i: usize| {
+        if i == 0 {
+            from
+        } else if i == along.len() {
+            to
+        } else {
+            (along[i - 1].at + along[i].at) / 2.0
+        }
+    };
+    let front = to - from;
+    Ok(along
+        .iter()
+        .enumerate()
+        .map(|(i, w)| {
+            let width = edge(i + 1) - edge(i);
+            (w.mark.clone(), (width / front).base(), Some(width))
+        })
+        .collect())
+}
+
+fn by_stiffness(b: &Building, st: &Stability, walls: &[&BracingWall]) -> Result<Vec<Row>, Outside> {
+    let plan: Vec<Bracing> = walls
+        .iter()
+        .map(|w| {
+            let r = (w.height / w.length).base();
+            let k = match w.ends {
+                Ends::Cantilever => torsion::cantilever_rigidity(r),
+                Ends::Fixed => torsion::fixed_rigidity(r),
+            };
+            let other = w.other_at.unwrap_or(Length::ZERO).base();
+            let (along, x, y) = match w.along {
+                Along::X => (torsion::Along::X, other, w.at.base()),
+                Along::Y => (torsion::Along::Y, w.at.base(), other),
+            };
+            Bracing { along, x, y, rigidity: k * thickness(b, &w.build_up).base() }
+        })
+        .collect();
+    let middle = ((st.front.0 + st.front.1) / 2.0).base();
+    let push = match st.wind_along {
+        Along::X => Push { f_x: 1.0, f_y: 0.0, x: 0.0, y: middle },
+        Along::Y => Push { f_x: 0.0, f_y: 1.0, x: middle, y: 0.0 },
+    };
+    let shares =
+        torsion::share(&plan, push).map_err(|_| unbraced("the bracing walls cannot hold the storey"))?;
+    Ok(walls
+        .iter()
+        .zip(shares.walls)
+        .filter(|(w, _)| w.along == st.wind_along)
+        .map(|(w, x)| (w.mark.clone(), x.without_relief().abs(), None))
+        .collect())
+}
+
+/// Thickness that counts for stiffness: the loaded leaf.
+fn thickness(b: &Building, build_up: &str) -> Length {
+    b.build_up(build_up).map_or(Length::ZERO, |u| u.loaded().1.thickness)
+}
+
+fn unbraced(words: &str) -> Outside {
+    Outside::new("storey", "method, bracing", words)
+}
+
+fn table(st: &Stability, list: &[Share], force: Force) -> Table {
+    let percent = |x: Option<f64>| x.map_or("–".to_owned(), |p| format!("{:.0} %", p * 100.0));
+    let width = |x: Option<Length>| x.map_or("–".to_owned(), |w| print::show("b", w.dynamic()).value);
+    let kn = |x: Option<f64>| x.map_or("–".to_owned(), |p| print::show("F", (force * p).dynamic()).value);
+    let flexible = st.share_by == ShareBy::Width;
+    let mut columns = vec![Column::words("wall"), Column::numbers("before"), Column::numbers("kN")];
+    if flexible {
+        columns.push(Column::numbers("width, mm"));
+    }
+    columns.extend([Column::numbers("after"), Column::numbers("kN")]);
+    if flexible {
+        columns.push(Column::numbers("width, mm"));
+    }
+    let rows = list
+        .iter()
+        .map(|x| {
+            let mut row = vec![x.mark.clone(), percent(x.before), kn(x.before)];
+            if flexible {
+                row.push(width(x.width_before));
+            }
+            row.extend([percent(x.after), kn(x.after)]);
+            if flexible {
+                row.push(width(x.width_after));
+            }
+            row
+        })
+        .collect();
+    Table {
+        caption: "Shares of the storey's design force, tilt included, before and after the removal"
+            .to_owned(),
+        columns,
+        rows,
+        strong: vec![],
+    }
+}
