@@ -1,5 +1,115 @@
-//! What is verified.
+//! What is verified, in sheet order. A new check is one new file and one line in [`LIST`]; its place
+//! in the list is its place in the pack.
+
+pub mod chain;
+pub mod loads;
 pub mod masonry;
+pub mod materials;
+pub mod outcome;
+pub mod plan;
 pub mod returns;
 pub mod stability;
 pub mod wind;
+
+mod return_sheet;
+mod return_views;
+
+use crate::building::Building;
+use crate::sketch::Drawing;
+use crate::standards::annex::Annex;
+use crate::trace::{Fault, Outside, Sheet};
+use outcome::{Hold, Outcome};
+use stability::Storey;
+use wind::Pressures;
+
+/// One section of the pack: a sheet with its drawings.
+pub struct Section {
+    /// Unique id, also the anchor: `wind`, `R1`.
+    pub id: String,
+    /// Mark of what is checked; empty for sheets about the whole job.
+    pub mark: String,
+    /// Title.
+    pub title: String,
+    /// The working.
+    pub sheet: Sheet,
+    /// Drawings named by the sheet's entries.
+    pub drawings: Vec<Drawing>,
+}
+
+impl Section {
+    /// A section without a mark or drawings.
+    pub fn plain(id: &str, title: &str, sheet: Sheet) -> Self {
+        Self { id: id.to_owned(), mark: String::new(), title: title.to_owned(), sheet, drawings: Vec::new() }
+    }
+}
+
+/// What the checks work from: the building and what several of them need.
+pub struct Job<'a> {
+    /// The building.
+    pub building: &'a Building,
+    /// National values.
+    pub annex: Annex,
+    /// Wind on the site.
+    pub wind: Result<Pressures, Outside>,
+    /// The storey's sharing, where it is given.
+    pub storey: Option<Result<Storey, Outside>>,
+    /// Hold points, given and found.
+    pub holds: Vec<Hold>,
+}
+
+impl<'a> Job<'a> {
+    /// Works out what several checks need, on silent sheets.
+    pub fn new(building: &'a Building) -> Self {
+        let annex = Annex::UK;
+        let wind = wind::pressures(&mut Sheet::silent(), building, &annex);
+        let storey = building.stability.as_ref().map(|st| {
+            let pressures = wind.clone()?;
+            stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
+        });
+        Self { building, annex, wind, storey, holds: outcome::holds(building) }
+    }
+
+    /// The storey's sharing, where it was given and could be worked out.
+    pub fn sharing(&self) -> Option<&Storey> {
+        self.storey.as_ref().and_then(|r| r.as_ref().ok())
+    }
+}
+
+/// A check: what it adds to the pack.
+type Check = fn(&Job<'_>) -> Vec<Section>;
+
+/// Every check, in sheet order.
+pub const LIST: &[Check] = &[
+    plan::sections,
+    loads::sections,
+    wind::sections,
+    materials::sections,
+    stability::sections,
+    return_sheet::sections,
+    chain::sections,
+];
+
+/// Everything that was checked.
+pub struct Results {
+    /// Sections in sheet order.
+    pub sections: Vec<Section>,
+    /// Hold points.
+    pub holds: Vec<Hold>,
+    /// The outcome of the whole job.
+    pub outcome: Outcome,
+}
+
+impl Results {
+    /// Broken locks of any sheet: internal errors, none of which may reach paper.
+    pub fn faults(&self) -> impl Iterator<Item = (&str, &Fault)> {
+        self.sections.iter().flat_map(|s| s.sheet.faults.iter().map(move |f| (s.id.as_str(), f)))
+    }
+}
+
+/// Checks a building.
+pub fn run(building: &Building) -> Results {
+    let job = Job::new(building);
+    let sections: Vec<Section> = LIST.iter().flat_map(|check| check(&job)).collect();
+    let outcome = outcome::of_job(&sections, &job.holds);
+    Results { sections, holds: job.holds, outcome }
+}

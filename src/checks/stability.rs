@@ -225,3 +225,14 @@ fn table(st: &Stability, list: &[Share], force: Force) -> Table {
         strong: vec![],
     }
 }
+
+/// The stability sheet, where the job gives the bracing walls.
+pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
+    let (Some(st), Ok(wind)) = (&job.building.stability, &job.wind) else { return Vec::new() };
+    let mut s = Sheet::recorder();
+    if let Err(outside) = share(&mut s, job.building, st, *wind, &job.annex) {
+        s.leave(outside);
+    }
+    s.note(format!("The wall removed braced: {}.", job.building.removed.braced.trim_end_matches('.')));
+    vec![super::Section::plain("stability", "The storey's wind and its walls", s)]
+}

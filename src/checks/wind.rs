@@ -179,3 +179,12 @@ fn smallest_panel(b: &Building) -> Area {
         .reduce(|a, c| if c < a { c } else { a })
         .unwrap_or(Area::new(1e6))
 }
+
+/// The wind sheet.
+pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
+    let mut s = Sheet::recorder();
+    if let Err(outside) = pressures(&mut s, job.building, &job.annex) {
+        s.leave(outside);
+    }
+    vec![super::Section::plain("wind", "Wind", s)]
+}

@@ -1,0 +1,145 @@
+//! Outcomes in the only words there are, and the hold points that make one conditional.
+
+use super::Section;
+use crate::building::{Building, Link, Proof};
+use crate::trace::Sheet;
+
+/// The outcome of a sheet or of the job.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Outcome {
+    /// Everything holds.
+    Adequate,
+    /// Everything holds, on conditions.
+    Conditional(usize),
+    /// A limit of application was left.
+    Outside,
+    /// Something does not hold.
+    NotAdequate,
+}
+
+impl Outcome {
+    /// In words; no others are used.
+    pub fn words(self) -> String {
+        match self {
+            Self::Adequate => "adequate".to_owned(),
+            Self::Conditional(1) => "adequate once 1 hold point is closed".to_owned(),
+            Self::Conditional(n) => format!("adequate once {n} hold points are closed"),
+            Self::Outside => "outside the method".to_owned(),
+            Self::NotAdequate => "not adequate".to_owned(),
+        }
+    }
+
+    /// A name for templates and machines.
+    pub const fn kind(self) -> &'static str {
+        match self {
+            Self::Adequate => "adequate",
+            Self::Conditional(_) => "conditional",
+            Self::Outside => "outside",
+            Self::NotAdequate => "not-adequate",
+        }
+    }
+}
+
+/// A hold point: something to be closed before the wall comes down.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Hold {
+    /// Its number, `H1`.
+    pub mark: String,
+    /// What is to be done.
+    pub text: String,
+    /// What it concerns; empty for the whole job.
+    pub of: Vec<String>,
+    /// Who closed it and when.
+    pub closed: Option<String>,
+}
+
+/// The links of the load path, in order, each with what is to be seen where nothing is said of it.
+pub const LINKS: [(&str, &str); 8] = [
+    ("wind face", "the outer walls be shown to carry the wind between their supports"),
+    ("panel", "the outer wall panels be shown to be sound and held as drawn"),
+    ("floor edge", "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included"),
+    ("diaphragm", "the floor or roof be shown to carry the wind in its plane to the bracing walls"),
+    ("bracing wall", "the walls that take the wind now be shown to carry it"),
+    ("junction", "the junction between return and outer wall be opened up and seen"),
+    ("dpc", "the joint at the foot be seen"),
+    ("footing", "the footing below the return be exposed and its width and depth be recorded"),
+];
+
+/// The links of the job with those that nothing is said of, which are assumed.
+pub fn links(b: &Building) -> Vec<Link> {
+    let mut out = Vec::new();
+    for (name, words) in LINKS {
+        let given: Vec<&Link> = b.links.iter().filter(|l| l.link == name).collect();
+        if given.is_empty() {
+            out.push(Link {
+                link: name.to_owned(),
+                proof: Proof::Assumed,
+                words: format!("{words} (nothing is said of this link in the job file)"),
+                of: Vec::new(),
+            });
+        }
+        out.extend(given.into_iter().cloned());
+    }
+    out
+}
+
+/// Hold points: those given, one for every link that is assumed, one for every junction that is
+/// counted on but not seen.
+pub fn holds(b: &Building) -> Vec<Hold> {
+    let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
+    let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
+        let words = l.words.trim_end_matches('.').to_owned();
+        (format!("Before the wall comes down ({}): {words}.", l.link), l.of, None)
+    });
+    let junctions = b.returns.iter().filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed).map(|r| {
+        let text = format!(
+            "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",
+            r.mark, r.junction.to, r.junction.words
+        );
+        (text, vec![r.mark.clone()], None)
+    });
+    given
+        .chain(assumed)
+        .chain(junctions)
+        .enumerate()
+        .map(|(n, (text, of, closed))| Hold { mark: format!("H{}", n + 1), text, of, closed })
+        .collect()
+}
+
+/// The outcome of one sheet; hold points that concern `mark` or the whole job make it conditional.
+pub fn of_sheet(sheet: &Sheet, mark: &str, holds: &[Hold]) -> Outcome {
+    let open = holds
+        .iter()
+        .filter(|h| h.closed.is_none() && (h.of.is_empty() || h.of.iter().any(|m| m == mark)))
+        .count();
+    judge(sheet.verdicts.iter().all(|v| v.holds), sheet.outside.is_empty(), open)
+}
+
+/// The outcome of the job: what fails fails the job, what is outside leaves it outside.
+pub fn of_job(sections: &[Section], holds: &[Hold]) -> Outcome {
+    let hold = sections.iter().all(|s| s.sheet.verdicts.iter().all(|v| v.holds));
+    let inside = sections.iter().all(|s| s.sheet.outside.is_empty());
+    judge(hold, inside, holds.iter().filter(|h| h.closed.is_none()).count())
+}
+
+fn judge(hold: bool, inside: bool, open: usize) -> Outcome {
+    match (hold, inside, open) {
+        (false, ..) => Outcome::NotAdequate,
+        (true, false, _) => Outcome::Outside,
+        (true, true, 0) => Outcome::Adequate,
+        (true, true, n) => Outcome::Conditional(n),
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn nothing_softens_a_failure() {
+        assert_eq!(judge(false, false, 3), Outcome::NotAdequate);
+        assert_eq!(judge(true, false, 3), Outcome::Outside);
+        assert_eq!(judge(true, true, 1).words(), "adequate once 1 hold point is closed");
+        assert_eq!(judge(true, true, 0), Outcome::Adequate);
+    }
+}
