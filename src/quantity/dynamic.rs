@@ -15,7 +15,11 @@ pub struct Dim {
 
 impl Dim {
     /// No dimension.
-    pub const NONE: Self = Self { force: 0, length: 0, time: 0 };
+    pub const NONE: Self = Self {
+        force: 0,
+        length: 0,
+        time: 0,
+    };
 
     /// The dimension of a product.
     pub const fn times(self, other: Self) -> Self {
@@ -37,13 +41,21 @@ impl Dim {
 
     /// The dimension of a whole power.
     pub const fn power(self, n: i8) -> Self {
-        Self { force: self.force * n, length: self.length * n, time: self.time * n }
+        Self {
+            force: self.force * n,
+            length: self.length * n,
+            time: self.time * n,
+        }
     }
 
     /// The dimension of an `n`th root, where every exponent divides by `n`.
     pub const fn root(self, n: i8) -> Option<Self> {
         if self.force % n == 0 && self.length % n == 0 && self.time % n == 0 {
-            Some(Self { force: self.force / n, length: self.length / n, time: self.time / n })
+            Some(Self {
+                force: self.force / n,
+                length: self.length / n,
+                time: self.time / n,
+            })
         } else {
             None
         }
@@ -68,12 +80,21 @@ pub struct Dyn {
 impl Dyn {
     /// A bare number.
     pub const fn number(value: f64) -> Self {
-        Self { value, dim: Dim::NONE }
+        Self {
+            value,
+            dim: Dim::NONE,
+        }
     }
 
     /// The typed quantity, where the dimension agrees.
     pub fn typed<const F: i8, const L: i8, const T: i8>(self) -> Option<Q<F, L, T>> {
-        (self.dim == Dim { force: F, length: L, time: T }).then_some(Q::new(self.value))
+        (self.dim
+            == Dim {
+                force: F,
+                length: L,
+                time: T,
+            })
+        .then_some(Q::new(self.value))
     }
 
     /// Equal to the last bit, dimension too.

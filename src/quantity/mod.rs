@@ -66,7 +66,14 @@ impl<const F: i8, const L: i8, const T: i8> Q<F, L, T> {
 
     /// The same number with its dimension as data.
     pub const fn dynamic(self) -> Dyn {
-        Dyn { value: self.0, dim: Dim { force: F, length: L, time: T } }
+        Dyn {
+            value: self.0,
+            dim: Dim {
+                force: F,
+                length: L,
+                time: T,
+            },
+        }
     }
 
     /// The absolute value.

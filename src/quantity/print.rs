@@ -14,7 +14,11 @@ pub struct Shown {
 impl std::fmt::Display for Shown {
     fn fmt(&self, f: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
         f.write_str(&self.value)?;
-        if self.unit.is_empty() { Ok(()) } else { write!(f, " {}", self.unit) }
+        if self.unit.is_empty() {
+            Ok(())
+        } else {
+            write!(f, " {}", self.unit)
+        }
     }
 }
 
@@ -28,19 +32,30 @@ pub fn show(symbol: &str, value: Dyn) -> Shown {
     } else {
         significant(scaled)
     };
-    Shown { value: digits, unit: unit.printed.to_owned() }
+    Shown {
+        value: digits,
+        unit: unit.printed.to_owned(),
+    }
 }
 
 fn length(mm: f64) -> String {
     let tenths = (mm * 10.0).round() / 10.0;
     let close = (mm - tenths).abs() < 1e-6;
-    if close && tenths.fract() != 0.0 { group(&format!("{tenths:.1}")) } else { group(&format!("{mm:.0}")) }
+    if close && tenths.fract() != 0.0 {
+        group(&format!("{tenths:.1}"))
+    } else {
+        group(&format!("{mm:.0}"))
+    }
 }
 
 /// Three significant digits; a number that needs fewer is printed with fewer.
 pub fn significant(x: f64) -> String {
     if !x.is_finite() {
-        return if x.is_nan() { "undefined".to_owned() } else { "∞".to_owned() };
+        return if x.is_nan() {
+            "undefined".to_owned()
+        } else {
+            "∞".to_owned()
+        };
     }
     if x == 0.0 {
         return "0".to_owned();
@@ -48,7 +63,9 @@ pub fn significant(x: f64) -> String {
     let magnitude = x.abs().log10().floor() as i32;
     let decimals = (2 - magnitude).max(0);
     let text = format!("{x:.prec$}", prec = decimals as usize);
-    let exact = text.parse::<f64>().is_ok_and(|back| (back - x).abs() <= 1e-9 * x.abs());
+    let exact = text
+        .parse::<f64>()
+        .is_ok_and(|back| (back - x).abs() <= 1e-9 * x.abs());
     if exact && text.contains('.') {
         return group(text.trim_end_matches('0').trim_end_matches('.'));
     }
@@ -65,7 +82,11 @@ pub fn ratio(x: f64) -> String {
     }
     // A ratio of exactly two decimals must not be pushed up by its binary tail.
     let hundredths = (x * 100.0 - 1e-9).ceil() / 100.0;
-    let hundredths = if x > 1.0 && hundredths <= 1.0 { 1.01 } else { hundredths };
+    let hundredths = if x > 1.0 && hundredths <= 1.0 {
+        1.01
+    } else {
+        hundredths
+    };
     format!("{:.2}", hundredths.max(0.0))
 }
 
@@ -75,7 +96,9 @@ pub fn literal(x: f64) -> String {
 }
 
 fn group(digits: &str) -> String {
-    let (whole, rest) = digits.split_once('.').map_or((digits, None), |(w, r)| (w, Some(r)));
+    let (whole, rest) = digits
+        .split_once('.')
+        .map_or((digits, None), |(w, r)| (w, Some(r)));
     let (sign, whole) = whole.strip_prefix('-').map_or(("", whole), |w| ("-", w));
     let mut out = String::new();
     for (i, c) in whole.chars().enumerate() {

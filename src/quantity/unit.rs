@@ -15,9 +15,23 @@ pub struct Unit {
     pub factor: f64,
 }
 
-const fn unit(typed: &'static str, printed: &'static str, exponents: (i8, i8, i8), factor: f64) -> Unit {
+const fn unit(
+    typed: &'static str,
+    printed: &'static str,
+    exponents: (i8, i8, i8),
+    factor: f64,
+) -> Unit {
     let (force, length, time) = exponents;
-    Unit { typed, printed, dim: Dim { force, length, time }, factor }
+    Unit {
+        typed,
+        printed,
+        dim: Dim {
+            force,
+            length,
+            time,
+        },
+        factor,
+    }
 }
 
 /// Every unit, the usual one of each dimension first.
@@ -62,7 +76,11 @@ pub fn find(name: &str) -> Option<&'static Unit> {
 
 /// The names a job file may write for a dimension, the usual one first.
 pub fn allowed(dim: Dim) -> Vec<&'static str> {
-    UNITS.iter().filter(|u| u.dim == dim).map(|u| u.typed).collect()
+    UNITS
+        .iter()
+        .filter(|u| u.dim == dim)
+        .map(|u| u.typed)
+        .collect()
 }
 
 /// What is wrong with the text of a quantity.
@@ -100,19 +118,34 @@ pub fn read(text: &str, dim: Dim) -> Result<Dyn, Misread> {
     let value: f64 = number.parse().map_err(|_| Misread::NoNumber)?;
     let name = name.trim();
     if name.is_empty() {
-        return if dim == Dim::NONE { Ok(Dyn::number(value)) } else { Err(Misread::NoUnit) };
+        return if dim == Dim::NONE {
+            Ok(Dyn::number(value))
+        } else {
+            Err(Misread::NoUnit)
+        };
     }
     match find(name) {
-        Some(u) if u.dim == dim => Ok(Dyn { value: value * u.factor, dim }),
+        Some(u) if u.dim == dim => Ok(Dyn {
+            value: value * u.factor,
+            dim,
+        }),
         Some(u) => Err(Misread::WrongDimension { found: u.typed }),
-        None => Err(Misread::UnknownUnit { found: name.to_owned(), nearest: nearest(name, dim) }),
+        None => Err(Misread::UnknownUnit {
+            found: name.to_owned(),
+            nearest: nearest(name, dim),
+        }),
     }
 }
 
 fn nearest(name: &str, dim: Dim) -> Option<&'static str> {
     allowed(dim)
         .into_iter()
-        .map(|u| (strsim::damerau_levenshtein(&name.to_lowercase(), &u.to_lowercase()), u))
+        .map(|u| {
+            (
+                strsim::damerau_levenshtein(&name.to_lowercase(), &u.to_lowercase()),
+                u,
+            )
+        })
         .filter(|(distance, _)| *distance <= 2)
         .min()
         .map(|(_, u)| u)
@@ -123,7 +156,11 @@ fn nearest(name: &str, dim: Dim) -> Option<&'static str> {
 pub fn for_print(symbol: &str, value: Dyn) -> &'static Unit {
     let letter = symbol.split('_').next().unwrap_or(symbol);
     let size = value.value.abs();
-    let Dim { force, length, time } = value.dim;
+    let Dim {
+        force,
+        length,
+        time,
+    } = value.dim;
     let name = match (force, length, time) {
         (0, 0, 0) => return &NONE,
         (0, 1, 0) => "mm",
