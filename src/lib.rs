@@ -5,6 +5,7 @@
 pub mod building;
 pub mod checks;
 pub mod quantity;
+pub mod sketch;
 pub mod solve;
 pub mod standards;
 pub mod trace;

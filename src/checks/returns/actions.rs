@@ -2,7 +2,7 @@
 
 use super::model::{At, Flange, Model, Vertical};
 use crate::quantity::functions::{abs, metres, sqrt};
-use crate::quantity::{Force, Length, Moment, Num};
+use crate::quantity::{Force, Length, LineLoad, Moment, Num};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
 use crate::trace::Sheet;
@@ -151,14 +151,31 @@ fn toe(m: &Model, flange: Option<Flange>, N_Ed: Force, signed: Moment) -> Toe {
     }
 }
 
-/// Moment and shear of wind and tilt at the section.
-fn lateral(s: &mut Sheet, m: &Model, gamma_W: Num, at: At) -> (Moment, Force) {
-    let h = m.h;
+/// Lateral actions at the head and along the height, at design value.
+#[derive(Clone, Copy, Debug)]
+pub struct Design {
+    /// Force at the head, tilt included.
+    pub H_Ed: Force,
+    /// Line load.
+    pub w_Ed: LineLoad,
+    /// Moment at the head.
+    pub M_h: Moment,
+}
+
+/// Wind and tilt at design value; `gamma_W` stands on the sheet.
+pub fn design(s: &mut Sheet, m: &Model, gamma_W: Num) -> Design {
     let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
     let H_nu = tilt(s, m);
     calc!(s, "EN 1990 6.4.3.2", "force at the head, tilt included", H_Ed = gamma_W * H_k + H_nu);
     calc!(s, "EN 1990 6.4.3.2", "line load", w_Ed = gamma_W * w_k);
     calc!(s, "EN 1990 6.4.3.2", "moment at the head", M_h = gamma_W * M_k);
+    Design { H_Ed, w_Ed, M_h }
+}
+
+/// Moment and shear of wind and tilt at the section.
+fn lateral(s: &mut Sheet, m: &Model, gamma_W: Num, at: At) -> (Moment, Force) {
+    let h = m.h;
+    let Design { H_Ed, w_Ed, M_h } = design(s, m, gamma_W);
     match (m.propped, at) {
         (false, At::Head) => {
             calc!(s, "statics", "moment of the lateral loads", M_W = 1.0 * M_h);

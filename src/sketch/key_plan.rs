@@ -1,0 +1,261 @@
+//! The plan that everything else refers to: walls, returns and panels with their marks.
+
+use kurbo::{Point, Vec2};
+
+use super::board::{Board, Words};
+use super::dimension::{self, mm};
+use super::drawing::{Drawing, Role};
+use super::pen::Pen;
+use super::place::{Note, Spot};
+use super::plan::{self, Fate, PlanWall, paper, wall_note};
+use super::scale::{Frame, Scale, fit};
+use super::text::Text;
+use super::view::list;
+
+/// What the key plan shows. Places in mm, x to the right, y up the sheet.
+#[derive(Clone, Debug)]
+pub struct KeyPlan {
+    /// Identifier of the drawing: `key-plan`, `ground-floor`.
+    pub name: String,
+    /// Which floor: `ground floor`.
+    pub title: String,
+    /// Walls; a return is a wall too.
+    pub walls: Vec<PlanWall>,
+    /// Marks of returns and panels.
+    pub marks: Vec<PlanMark>,
+    /// Beams and padstones, as centre lines with their mark.
+    pub beams: Vec<PlanMark>,
+    /// Where north is, degrees clockwise from the top of the sheet.
+    pub north: f64,
+    /// Wind directions considered.
+    pub winds: Vec<PlanWind>,
+}
+
+/// A mark on the plan and the stretch of wall it stands for.
+#[derive(Clone, Debug)]
+pub struct PlanMark {
+    /// `R1`, `P2`, `B1`.
+    pub mark: String,
+    /// Start of the stretch, mm.
+    pub from: (f64, f64),
+    /// End of the stretch, mm.
+    pub to: (f64, f64),
+}
+
+/// A wind arrow at an edge of the plan.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum PlanWind {
+    /// Blows to the right, from the left edge.
+    Rightwards,
+    /// Blows to the left.
+    Leftwards,
+    /// Blows up the sheet.
+    Upwards,
+    /// Blows down the sheet.
+    Downwards,
+}
+
+impl PlanWind {
+    fn along(self) -> Vec2 {
+        match self {
+            PlanWind::Rightwards => Vec2::new(1.0, 0.0),
+            PlanWind::Leftwards => Vec2::new(-1.0, 0.0),
+            PlanWind::Upwards => Vec2::new(0.0, -1.0),
+            PlanWind::Downwards => Vec2::new(0.0, 1.0),
+        }
+    }
+
+    fn words(self) -> &'static str {
+        match self {
+            PlanWind::Rightwards => "from the left",
+            PlanWind::Leftwards => "from the right",
+            PlanWind::Upwards => "from below",
+            PlanWind::Downwards => "from above",
+        }
+    }
+}
+
+/// Draws the key plan.
+pub fn key_plan(view: &KeyPlan, frame: Frame) -> Drawing {
+    fit(frame, 50.0, |scale| draw(view, scale))
+}
+
+fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
+    let mut board = Board::default();
+    plan::walls(&mut board, &view.walls, scale);
+    for beam in &view.beams {
+        let (from, to) = (paper(scale, beam.from), paper(scale, beam.to));
+        board.line(Pen::Axis, from, to);
+        board.note(stretch_note(from, to, 1.2, Text::mark(&beam.mark)));
+    }
+    for mark in &view.marks {
+        let (from, to) = (paper(scale, mark.from), paper(scale, mark.to));
+        let half = view
+            .walls
+            .iter()
+            .map(|wall| wall.thickness / 2.0)
+            .fold(0.0, f64::max);
+        board.note(stretch_note(from, to, scale.paper(half) + 1.2, Text::mark(&mark.mark)).rank(1));
+    }
+    let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
+    for wall in view
+        .walls
+        .iter()
+        .filter(|w| !w.name.is_empty() && !marked(&w.name))
+    {
+        let word = match wall.fate {
+            Fate::Stays => "",
+            Fate::Removed => " removed",
+            Fate::Added => " new",
+        };
+        let text = Text::plain(&format!("{}{word}", wall.name));
+        board.note(wall_note(
+            wall,
+            scale,
+            Note::new(Role::Note, Point::ZERO, text),
+        ));
+    }
+    surroundings(
+        &mut board,
+        &view.walls,
+        &view.winds,
+        Some(view.north),
+        scale,
+        true,
+    );
+    board.finish(Words {
+        name: view.name.clone(),
+        caption: format!("Key plan, {}{}", view.title, key(view)),
+        scale: scale.text(),
+        alt: alt(view),
+    })
+}
+
+/// A mark beside a stretch of wall.
+fn stretch_note(from: Point, to: Point, off: f64, text: Text) -> Note {
+    let middle = from.midpoint(to);
+    let upright = (to - from).x.abs() < (to - from).y.abs();
+    let mut note = Note::new(Role::Mark, middle, text);
+    for share in [0.5, 0.3, 0.7] {
+        let at = from.lerp(to, share);
+        for sign in [1.0, -1.0] {
+            note = note.spot(match upright {
+                true => Spot::new((at.x + sign * off, at.y), sign, 0.0),
+                false => Spot::new((at.x, at.y + sign * off), 0.0, sign),
+            });
+        }
+    }
+    note
+}
+
+/// Overall dimensions, wind arrows and north point around a plan.
+pub(super) fn surroundings(
+    board: &mut Board,
+    walls: &[PlanWall],
+    winds: &[PlanWind],
+    north: Option<f64>,
+    scale: Scale,
+    dimensions: bool,
+) {
+    let extent = plan::extent(walls, scale);
+    if dimensions {
+        let (w, h) = (extent.width() * scale.0, extent.height() * scale.0);
+        dimension::across(
+            board,
+            (extent.x0, extent.x1),
+            extent.y1 + 11.0,
+            extent.y1,
+            mm(w),
+        );
+        dimension::up(
+            board,
+            (extent.y1, extent.y0),
+            extent.x0 - 11.0,
+            extent.x0,
+            mm(h),
+        );
+    }
+    let (left, below) = if dimensions { (19.0, 18.0) } else { (5.0, 5.0) };
+    let c = extent.center();
+    for wind in winds {
+        let tip = match wind {
+            PlanWind::Rightwards => Point::new(extent.x0 - left, c.y),
+            PlanWind::Leftwards => Point::new(extent.x1 + 9.0, c.y),
+            PlanWind::Upwards => Point::new(c.x, extent.y1 + below),
+            PlanWind::Downwards => Point::new(c.x, extent.y0 - 8.0),
+        };
+        plan::wind(board, tip, wind.along(), "wind");
+    }
+    if let Some(north) = north {
+        plan::north(board, Point::new(extent.x1 + 14.0, extent.y0 + 3.0), north);
+    }
+}
+
+fn key(view: &KeyPlan) -> String {
+    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
+    let mut key = String::new();
+    if has(Fate::Removed) {
+        key += "; dashed: removed";
+    }
+    if has(Fate::Added) {
+        key += "; strewn hatching: new";
+    }
+    if !view.beams.is_empty() {
+        key += "; chain line: beam over";
+    }
+    key
+}
+
+fn alt(view: &KeyPlan) -> String {
+    let extent = plan::extent(&view.walls, Scale(1.0));
+    let mut alt = format!(
+        "Key plan of the {}, {} mm by {} mm overall. ",
+        view.title,
+        mm(extent.width()),
+        mm(extent.height())
+    );
+    for (fate, word) in [
+        (Fate::Stays, "stay"),
+        (Fate::Removed, "removed"),
+        (Fate::Added, "new"),
+    ] {
+        let walls: Vec<String> = view
+            .walls
+            .iter()
+            .filter(|wall| wall.fate == fate && !wall.name.is_empty())
+            .map(|wall| {
+                format!(
+                    "{} ({} mm thick, {} mm long)",
+                    wall.name,
+                    mm(wall.thickness),
+                    mm(wall.length())
+                )
+            })
+            .collect();
+        if !walls.is_empty() {
+            alt += &format!("Walls, {word}: {}. ", list(&walls));
+        }
+    }
+    let marks: Vec<String> = view
+        .marks
+        .iter()
+        .chain(&view.beams)
+        .map(|mark| mark.mark.clone())
+        .collect();
+    if !marks.is_empty() {
+        alt += &format!("Marked: {}. ", list(&marks));
+    }
+    let winds: Vec<String> = view
+        .winds
+        .iter()
+        .map(|wind| wind.words().to_owned())
+        .collect();
+    if !winds.is_empty() {
+        alt += &format!("Wind arrows {}. ", list(&winds));
+    }
+    alt += &format!(
+        "North is {} degrees clockwise from the top of the sheet.",
+        mm(view.north)
+    );
+    alt
+}

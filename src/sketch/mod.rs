@@ -1,0 +1,52 @@
+//! Annotated drawings to scale, as data: strokes with pen names, hatching, labels, dimensions.
+//!
+//! Each drawing takes a small view of what it shows (lengths in mm at full size, values as they
+//! are printed) and yields a [`Drawing`] in paper millimetres with its caption, its scale and its
+//! spoken text. Drawn lengths are the given lengths divided by the scale, nothing else.
+//!
+//! * [`drawing`], [`pen`]: the finished drawing
+//! * [`text`]: how much paper a line of text takes
+//! * [`scale`]: preferred scales and the largest one that fits
+//! * [`place`]: where labels go, so that none overlap
+//! * [`board`]: strokes, fills and wishes for labels, until the drawing is finished
+//! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
+//! * the drawings: one file each
+
+pub mod board;
+pub mod dimension;
+pub mod drawing;
+pub mod hatch;
+pub mod key_plan;
+pub mod load;
+pub mod panel_elevation;
+pub mod panel_section;
+pub mod pen;
+pub mod place;
+pub mod plan;
+#[cfg(test)]
+mod preview;
+#[cfg(test)]
+mod properties;
+pub mod return_actions;
+pub mod return_elevation;
+pub mod return_section;
+pub mod scale;
+pub mod stability_plan;
+#[cfg(test)]
+mod tests;
+pub mod text;
+pub mod view;
+
+pub use drawing::{Drawing, Item};
+pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
+pub use panel_elevation::{
+    Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair,
+};
+pub use panel_section::{Floor, PanelSection, panel_section};
+pub use plan::{Fate, PlanWall};
+pub use return_actions::{Curve, ReturnActions, return_actions};
+pub use return_elevation::{PlacedLoad, ReturnElevation, return_elevation};
+pub use return_section::{Flange, ReturnSection, Stress, Toe, return_section};
+pub use scale::Frame;
+pub use stability_plan::{Share, StabilityPlan, stability_plan};
+pub use view::{Action, Layer, Side, Wind};

@@ -1,0 +1,62 @@
+//! Pens and inks by name. ISO 128 line widths; the reason for each stands beside it.
+
+/// The pen of a stroke.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, serde::Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum Pen {
+    /// Outline of masonry that the drawing cuts through: the heaviest line, 0.5 mm.
+    Cut,
+    /// Visible outline, 0.35 mm.
+    Outline,
+    /// What lies behind, 0.18 mm.
+    Beyond,
+    /// What is taken out, 0.35 mm dashed.
+    Removed,
+    /// Dimension and extension lines, 0.18 mm.
+    Dimension,
+    /// Hatching of cut material and of supported edges, 0.13 mm.
+    Hatch,
+    /// Shafts of actions, 0.35 mm.
+    Load,
+    /// Supports, 0.5 mm.
+    Support,
+    /// Curves of stress, moment and shear, 0.35 mm.
+    Diagram,
+    /// Centre lines, 0.18 mm chain-dashed.
+    Axis,
+    /// From a label to what it names, 0.18 mm.
+    Leader,
+}
+
+impl Pen {
+    /// Line width, mm (ISO 128-2 series; which width for which line is common practice).
+    pub const fn width(self) -> f64 {
+        match self {
+            Pen::Cut | Pen::Support => 0.5,
+            Pen::Outline | Pen::Removed | Pen::Load | Pen::Diagram => 0.35,
+            Pen::Beyond | Pen::Dimension | Pen::Axis | Pen::Leader => 0.18,
+            Pen::Hatch => 0.13,
+        }
+    }
+
+    /// Whether a label must keep off a stroke of this pen. Hatching may be masked under a label.
+    pub const fn keeps_labels_off(self) -> bool {
+        !matches!(self, Pen::Hatch)
+    }
+}
+
+/// The ink of a filled area.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, serde::Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum Ink {
+    /// White, hiding what lies below.
+    Paper,
+    /// Light grey: masonry in compression.
+    Stress,
+    /// Black: arrowheads.
+    Arrow,
+    /// White: an opening.
+    Opening,
+    /// White, under a label that stands on hatching.
+    Mask,
+}

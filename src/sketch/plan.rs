@@ -1,0 +1,283 @@
+//! Walls in plan, shared by the key plan and the stability plan: outlines that run into each
+//! other at junctions, hatching, what goes and what comes, north and wind.
+
+use kurbo::{Line, Point, Vec2};
+
+use super::board::{Board, polygon};
+use super::drawing::Role;
+use super::hatch::{self, Material};
+use super::load;
+use super::pen::{Ink, Pen};
+use super::place::{Note, Spot};
+use super::scale::Scale;
+use super::text::Text;
+
+/// A wall in plan, given by its centre line.
+#[derive(Clone, Debug)]
+pub struct PlanWall {
+    /// Its name; may be empty.
+    pub name: String,
+    /// Start of its centre line, mm, x to the right, y up.
+    pub from: (f64, f64),
+    /// End of its centre line, mm.
+    pub to: (f64, f64),
+    /// Thickness, mm.
+    pub thickness: f64,
+    /// What happens to it.
+    pub fate: Fate,
+}
+
+/// What happens to a wall.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Fate {
+    /// It stays.
+    Stays,
+    /// It is taken out.
+    Removed,
+    /// It is new.
+    Added,
+}
+
+/// Walls thinner than this on paper (mm) are not hatched: the lines would run together.
+const HATCHED: f64 = 1.3;
+
+impl PlanWall {
+    /// The four corners on the paper.
+    pub fn ring(&self, scale: Scale) -> [Point; 4] {
+        let (from, to) = (paper(scale, self.from), paper(scale, self.to));
+        let side = (to - from).normalize().turn_90() * scale.paper(self.thickness / 2.0);
+        [from + side, to + side, to - side, from - side]
+    }
+
+    /// The middle of its centre line on the paper.
+    pub fn middle(&self, scale: Scale) -> Point {
+        paper(scale, self.from).midpoint(paper(scale, self.to))
+    }
+
+    /// Length of the centre line, mm.
+    pub fn length(&self) -> f64 {
+        (self.to.0 - self.from.0).hypot(self.to.1 - self.from.1)
+    }
+}
+
+/// A place on the plan on the paper.
+pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
+    Point::new(scale.paper(x), -scale.paper(y))
+}
+
+/// Draws walls: what stays and comes in one body, what goes dashed.
+pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
+    let rings = |wanted: &dyn Fn(Fate) -> bool| -> Vec<(Fate, [Point; 4])> {
+        let chosen: Vec<&PlanWall> = walls.iter().filter(|w| wanted(w.fate)).collect();
+        chosen
+            .iter()
+            .map(|w| (w.fate, to_corners(w, &chosen).ring(scale)))
+            .collect()
+    };
+    let standing = rings(&|fate| fate != Fate::Removed);
+    let removed = rings(&|fate| fate == Fate::Removed);
+    for (index, (fate, ring)) in standing.iter().enumerate() {
+        // Where two walls share ground, the later one leaves it to the earlier.
+        let thick = (ring[0] - ring[3]).hypot();
+        if thick >= HATCHED {
+            let material = if *fate == Fate::Added {
+                Material::Concrete
+            } else {
+                Material::Brick
+            };
+            let lines = hatch::masonry(material, ring);
+            let earlier: Vec<_> = standing[..index].iter().map(|(_, ring)| *ring).collect();
+            let lines = lines
+                .into_iter()
+                .flat_map(|line| outside(line, &earlier))
+                .collect();
+            board.hatching(lines, ring);
+        }
+    }
+    outlines(board, Pen::Cut, &standing, &[]);
+    let solid: Vec<_> = standing.iter().map(|(_, ring)| *ring).collect();
+    outlines(board, Pen::Removed, &removed, &solid);
+}
+
+/// The wall with its ends run on to the far faces of walls that it meets at a corner.
+fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
+    let along = Vec2::new(wall.to.0 - wall.from.0, wall.to.1 - wall.from.1).normalize();
+    let run_on = |end: (f64, f64)| {
+        let meets = |other: &&&PlanWall| {
+            let near = |p: (f64, f64)| (p.0 - end.0).hypot(p.1 - end.1) < 1.0;
+            let way = Vec2::new(other.to.0 - other.from.0, other.to.1 - other.from.1).normalize();
+            (near(other.from) || near(other.to)) && way.cross(along).abs() > 0.99
+        };
+        others
+            .iter()
+            .filter(meets)
+            .map(|other| other.thickness / 2.0)
+            .fold(0.0, f64::max)
+    };
+    let (back, ahead) = (along * run_on(wall.from), along * run_on(wall.to));
+    PlanWall {
+        from: (wall.from.0 - back.x, wall.from.1 - back.y),
+        to: (wall.to.0 + ahead.x, wall.to.1 + ahead.y),
+        ..wall.clone()
+    }
+}
+
+/// Outlines without the pieces that lie inside another wall.
+fn outlines(board: &mut Board, pen: Pen, rings: &[(Fate, [Point; 4])], solid: &[[Point; 4]]) {
+    for (index, (_, ring)) in rings.iter().enumerate() {
+        let mut others: Vec<[Point; 4]> = solid.to_vec();
+        others.extend(
+            rings
+                .iter()
+                .enumerate()
+                .filter(|(i, _)| *i != index)
+                .map(|(_, (_, r))| *r),
+        );
+        for side in 0..4 {
+            let line = Line::new(ring[side], ring[(side + 1) % 4]);
+            for piece in outside(line, &others) {
+                board.line(pen, piece.p0, piece.p1);
+            }
+        }
+    }
+}
+
+/// The pieces of a line outside all of the given convex rings.
+fn outside(line: Line, rings: &[[Point; 4]]) -> Vec<Line> {
+    let mut pieces = vec![(0.0_f64, 1.0_f64)];
+    for ring in rings {
+        let Some((enter, leave)) = within(line, ring) else {
+            continue;
+        };
+        pieces = pieces
+            .into_iter()
+            .flat_map(|(a, b)| [(a, b.min(enter)), (a.max(leave), b)])
+            .filter(|(a, b)| (b - a) * line.p0.distance(line.p1) > 0.02)
+            .collect();
+    }
+    pieces
+        .into_iter()
+        .map(|(a, b)| Line::new(line.eval_at(a), line.eval_at(b)))
+        .collect()
+}
+
+/// The part of a line strictly inside a convex ring.
+fn within(line: Line, ring: &[Point; 4]) -> Option<(f64, f64)> {
+    let centre = Point::new(
+        ring.iter().map(|p| p.x).sum::<f64>() / 4.0,
+        ring.iter().map(|p| p.y).sum::<f64>() / 4.0,
+    );
+    let (mut enter, mut leave) = (0.0_f64, 1.0_f64);
+    for side in 0..4 {
+        let (a, b) = (ring[side], ring[(side + 1) % 4]);
+        let mut normal = (b - a).turn_90().normalize();
+        if normal.dot(centre - a) < 0.0 {
+            normal = -normal;
+        }
+        // A line along a face is not inside: both walls show it, one on the other.
+        let (from, step) = (
+            normal.dot(line.p0 - a) - 1e-6,
+            normal.dot(line.p1 - line.p0),
+        );
+        if step.abs() < 1e-12 {
+            if from <= 0.0 {
+                return None;
+            }
+        } else {
+            let at = -from / step;
+            if step > 0.0 {
+                enter = enter.max(at)
+            } else {
+                leave = leave.min(at)
+            }
+        }
+    }
+    (enter < leave).then_some((enter, leave))
+}
+
+/// Helper on lines.
+trait At {
+    /// The point at a share of the length.
+    fn eval_at(&self, share: f64) -> Point;
+}
+
+impl At for Line {
+    fn eval_at(&self, share: f64) -> Point {
+        self.p0.lerp(self.p1, share)
+    }
+}
+
+/// A label for a wall: beside its middle, or further along it.
+pub fn wall_note(wall: &PlanWall, scale: Scale, note: Note) -> Note {
+    let (from, to) = (paper(scale, wall.from), paper(scale, wall.to));
+    let half = scale.paper(wall.thickness / 2.0) + 1.0;
+    let upright = (to - from).x.abs() < (to - from).y.abs();
+    let mut note = Note {
+        target: wall.middle(scale),
+        ..note
+    };
+    for share in [0.5, 0.35, 0.65, 0.2, 0.8] {
+        let at = from.lerp(to, share);
+        let (a, b) = match upright {
+            true => (
+                Spot::new((at.x + half, at.y), 1.0, 0.0),
+                Spot::new((at.x - half, at.y), -1.0, 0.0),
+            ),
+            false => (
+                Spot::new((at.x, at.y - half), 0.0, -1.0),
+                Spot::new((at.x, at.y + half), 0.0, 1.0),
+            ),
+        };
+        note = note.spot(a).spot(b);
+    }
+    note
+}
+
+/// North point: a circle whose needle points `degrees` clockwise from the top of the sheet.
+pub fn north(board: &mut Board, centre: Point, degrees: f64) {
+    let radius = 4.0;
+    let up = Vec2::from_angle((degrees - 90.0).to_radians());
+    let side = up.turn_90();
+    load::circle(board, Pen::Beyond, centre, radius);
+    let (tip, foot) = (centre + up * radius, centre - up * radius);
+    board.fill(
+        Ink::Arrow,
+        polygon(&[tip, centre + side * 1.1, centre - side * 1.1]),
+    );
+    board.stroke(
+        Pen::Beyond,
+        polygon(&[foot, centre + side * 1.1, centre - side * 1.1]),
+    );
+    let beyond = tip + up * 2.4;
+    board.note(
+        Note::new(Role::Note, beyond, Text::plain("N"))
+            .spot(Spot::new(beyond, 0.0, 0.0))
+            .rank(0),
+    );
+}
+
+/// A wind arrow that blows `along` at `tip`, with its words behind it.
+pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
+    let tail = tip - along * 11.0;
+    load::open_arrow(board, tail, tip);
+    let middle = tail.midpoint(tip);
+    let (x, y) = (along.x.abs() * 2.0, along.y.abs() * 2.0);
+    let note = Note::new(Role::Load, middle, Text::plain(words))
+        .spot(Spot::new(
+            tail - along * 1.5,
+            -along.x.round(),
+            -along.y.round(),
+        ))
+        .spot(Spot::new((middle.x, middle.y - 3.0 - y), 0.0, -1.0).cost(1.0))
+        .spot(Spot::new((middle.x + 3.0 + x, middle.y), 1.0, 0.0).cost(1.0));
+    board.note(note.rank(1));
+}
+
+/// Extent of walls on the paper.
+pub fn extent(walls: &[PlanWall], scale: Scale) -> kurbo::Rect {
+    let points = walls.iter().flat_map(|wall| wall.ring(scale));
+    points
+        .map(|p| kurbo::Rect::from_points(p, p))
+        .reduce(|a, b| a.union(b))
+        .unwrap_or(kurbo::Rect::ZERO)
+}

@@ -1,0 +1,298 @@
+//! Rules that hold for any valid input: labels apart and inside, lengths true, mirrors alike.
+
+use kurbo::{BezPath, Shape};
+use proptest::prelude::*;
+
+use super::hatch::Material;
+use super::pen::{Ink, Pen};
+use super::tests::{
+    FRAME, actions, cavity_wall, edge, elevation, section, solid_section, sound, wall, wall_section,
+};
+use super::*;
+
+/// `n` of a drawing's scale `1:n`.
+fn scale_of(drawing: &Drawing) -> f64 {
+    drawing
+        .scale
+        .trim_start_matches("1:")
+        .parse()
+        .expect("a scale is 1:n")
+}
+
+/// Lengths of all straight pieces drawn with a pen.
+fn lengths(drawing: &Drawing, pen: Pen) -> Vec<f64> {
+    drawing
+        .strokes(pen)
+        .flat_map(|path| {
+            path.segments()
+                .map(|s| s.as_line().map_or(0.0, |l| l.length()))
+        })
+        .collect()
+}
+
+/// Whether a pen drew a straight line of `full` mm at the drawing's scale.
+fn has_length(drawing: &Drawing, pen: Pen, full: f64) -> bool {
+    let paper = full / scale_of(drawing);
+    lengths(drawing, pen)
+        .iter()
+        .any(|length| (length - paper).abs() < 1e-6)
+}
+
+/// Points of all strokes of a pen, sorted, mirrored on the drawing's centre where asked.
+fn points(drawing: &Drawing, pen: Pen, mirrored: bool) -> Vec<(i64, i64)> {
+    let bounds: Vec<&BezPath> = drawing
+        .strokes(Pen::Outline)
+        .chain(drawing.strokes(Pen::Cut))
+        .collect();
+    let extent = bounds
+        .iter()
+        .map(|p| p.bounding_box())
+        .reduce(|a, b| a.union(b))
+        .expect("something is drawn");
+    let mut points: Vec<(i64, i64)> = drawing
+        .strokes(pen)
+        .flat_map(|path| {
+            path.segments()
+                .flat_map(|s| s.as_line().map(|l| [l.p0, l.p1]))
+                .flatten()
+        })
+        .map(|p| {
+            let x = if mirrored {
+                extent.x1 - p.x
+            } else {
+                p.x - extent.x0
+            };
+            (
+                (x * 100.0).round() as i64,
+                ((p.y - extent.y0) * 100.0).round() as i64,
+            )
+        })
+        .collect();
+    points.sort_unstable();
+    points
+}
+
+fn layers() -> impl Strategy<Value = Vec<Layer>> {
+    let leaf = |thickness, material| Layer::Leaf {
+        thickness,
+        material,
+    };
+    prop_oneof![
+        Just(cavity_wall()),
+        Just(vec![leaf(100.0, Material::Block)]),
+        Just(vec![leaf(215.0, Material::Brick)]),
+        Just(vec![
+            leaf(102.5, Material::Brick),
+            Layer::Cavity { width: 50.0 },
+            leaf(102.5, Material::Brick)
+        ]),
+    ]
+}
+
+fn maybe<T: std::fmt::Debug + Clone>(value: T) -> impl Strategy<Value = Option<T>> {
+    prop_oneof![Just(None), Just(Some(value))]
+}
+
+prop_compose! {
+    fn any_elevation()(
+        length in 200..2400_i32, height in 1800..3600_i32, wall_layers in layers(), left: bool, dpc: bool,
+        shares in proptest::collection::vec(0.0..=1.0_f64, 1..=6), words: bool, toward: bool,
+        prop in maybe("W3, W4 and W7".to_owned()), removed in proptest::option::of(200.0..6000.0_f64),
+        forces in 0..=2_usize, moment in maybe(Action::new("M_head", "11.10 kNm", "storey above")),
+        line in maybe(Action::new("w_Ed", "12.95 kN/m", "")), tributary in maybe(2612.5),
+    ) -> ReturnElevation {
+        let length = f64::from(length);
+        let loads = shares.iter().enumerate().map(|(i, share)| PlacedLoad {
+            x: (share * length).round(),
+            action: Action::new(&format!("N_{}", i + 1), &format!("{}.4 kN", 7 * i + 2), if words { "new beam B1" } else { "" }),
+        }).collect();
+        let all = elevation().head_forces;
+        ReturnElevation {
+            length, height: f64::from(height), wall: if left { Side::Left } else { Side::Right }, wall_layers, prop, dpc,
+            removed, loads, head_forces: all[..forces].to_vec(), head_moment: moment, line_load: line, tributary,
+            wind: if toward { Wind::Toward } else { Wind::Away }, ..elevation()
+        }
+    }
+}
+
+prop_compose! {
+    fn any_section()(
+        length in 200..2400_i32, layers in layers(), wall_layers in layers(), left: bool, bonded: bool,
+        flange in proptest::option::of(0.3..1.0_f64), share in 0.05..=1.0_f64, at_wall: bool, two: bool,
+    ) -> ReturnSection {
+        let length = f64::from(length);
+        let leaf = wall_layers[0].thickness();
+        let flange = flange.filter(|_| bonded).map(|f| Flange { width: (f * 12.0 * leaf).round(), thickness: leaf });
+        let total = length + flange.map_or(0.0, |f| f.thickness);
+        let compressed = (share * total).round().max(1.0);
+        let (start, sense) = if at_wall { (length - total, 1.0) } else { (length, -1.0) };
+        let base = section();
+        let stress = base.stress.map(|stress| Stress {
+            toe: if at_wall { Toe::Wall } else { Toe::Free },
+            compressed, centroid: length / 2.0, resultant: start + sense * compressed / 3.0,
+            at_heel: (compressed == total).then(|| (0.3, Action::new("", "0.61 N/mm²", ""))),
+            ..stress
+        });
+        ReturnSection {
+            length, layers, loaded: 0, wall: if left { Side::Left } else { Side::Right }, wall_layers, bonded, flange,
+            stress: if two { stress } else { None }, ..solid_section()
+        }
+    }
+}
+
+fn any_edge() -> impl Strategy<Value = Edge> {
+    prop_oneof![
+        Just(edge(Support::Free, "")),
+        Just(edge(Support::Free, "opening")),
+        Just(edge(Support::Simple, "strapped floor")),
+        Just(edge(Support::Continuous, "bonded to return R1")),
+    ]
+}
+
+prop_compose! {
+    fn any_panel()(
+        length in 800..9000_i32, height in 2000..4000_i32, edges in [any_edge(), any_edge(), any_edge(), any_edge()],
+        opening in proptest::option::of((0.0..0.5_f64, 0.2..0.5_f64)), walls in proptest::collection::vec((0.0..1.0_f64, any::<bool>()), 0..3),
+    ) -> PanelElevation {
+        let (length, height) = (f64::from(length), f64::from(height));
+        let [left, right, top, base] = edges;
+        PanelElevation {
+            mark: "P1".into(), state: "after".into(), length, height, left, right, top, base,
+            openings: opening.map(|(x, w)| Opening {
+                x: (x * length).round(), y: (0.3 * height).round(), width: (w * length).round(), height: (0.4 * height).round(), words: "window".into(),
+            }).into_iter().collect(),
+            walls: walls.into_iter().enumerate().map(|(i, (x, removed))| WallBehind {
+                x: (x * length).round(), thickness: 100.0, words: format!("W{i}"), removed,
+            }).collect(),
+            yield_lines: vec![],
+            values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
+        }
+    }
+}
+
+prop_compose! {
+    fn any_plan()(
+        w in 4000..12000_i32, d in 4000..11000_i32, inner in proptest::collection::vec((0.05..0.95_f64, any::<bool>(), 0..3_usize, 0.1..1.0_f64), 0..=10),
+        north in 0.0..360.0_f64,
+    ) -> KeyPlan {
+        let (w, d) = (f64::from(w), f64::from(d));
+        let mut walls = vec![
+            wall("W1", (0.0, 0.0), (w, 0.0), 302.5, Fate::Stays), wall("W2", (w, 0.0), (w, d), 302.5, Fate::Stays),
+            wall("W3", (0.0, d), (w, d), 302.5, Fate::Stays), wall("W4", (0.0, 0.0), (0.0, d), 302.5, Fate::Stays),
+        ];
+        let mut marks = vec![PlanMark { mark: "P1".into(), from: (0.0, 0.0), to: (w, 0.0) }];
+        for (i, (at, upright, fate, reach)) in inner.into_iter().enumerate() {
+            let fate = [Fate::Stays, Fate::Removed, Fate::Added][fate];
+            let (from, to) = if upright { ((at * w, 0.0), (at * w, reach * d)) } else { ((0.0, at * d), (reach * w, at * d)) };
+            walls.push(wall(&format!("W{}", i + 5), from, to, 100.0, fate));
+            if fate == Fate::Stays {
+                marks.push(PlanMark { mark: format!("R{i}"), from, to });
+            }
+        }
+        KeyPlan {
+            name: "key-plan".into(), title: "ground floor".into(), walls, marks, beams: vec![],
+            north: north.round(), winds: vec![PlanWind::Upwards, PlanWind::Leftwards],
+        }
+    }
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig { cases: 48, failure_persistence: None, ..ProptestConfig::default() })]
+
+    #[test]
+    fn any_return_elevation_is_sound_and_true(view in any_elevation()) {
+        let drawing = return_elevation(&view, FRAME);
+        sound(&drawing);
+        prop_assert!(FRAME.holds(&drawing), "{} x {}", drawing.width, drawing.height);
+        prop_assert!(has_length(&drawing, Pen::Outline, view.length));
+        prop_assert!(has_length(&drawing, Pen::Outline, view.height));
+        prop_assert!(has_length(&drawing, Pen::Dimension, view.height));
+    }
+
+    #[test]
+    fn a_mirrored_return_has_mirrored_strokes(view in any_elevation()) {
+        let other = if view.wall == Side::Left { Side::Right } else { Side::Left };
+        let mirror = ReturnElevation { wall: other, ..view.clone() };
+        let (a, b) = (return_elevation(&view, FRAME), return_elevation(&mirror, FRAME));
+        prop_assume!(a.scale == b.scale);
+        for pen in [Pen::Cut, Pen::Removed, Pen::Load] {
+            let (a, b) = (points(&a, pen, false), points(&b, pen, true));
+            prop_assert_eq!(a.len(), b.len());
+            // Rounding to a hundredth may differ by one.
+            for p in &a {
+                prop_assert!(b.iter().any(|q| (p.0 - q.0).abs() <= 1 && (p.1 - q.1).abs() <= 1), "{p:?} of {pen:?}");
+            }
+        }
+    }
+
+    #[test]
+    fn any_return_section_is_sound_and_true(view in any_section()) {
+        let drawing = return_section(&view, FRAME);
+        sound(&drawing);
+        prop_assert!(FRAME.holds(&drawing), "{} x {}", drawing.width, drawing.height);
+        prop_assert!(has_length(&drawing, Pen::Cut, view.length));
+        if let Some(stress) = &view.stress {
+            prop_assert!(has_length(&drawing, Pen::Dimension, stress.compressed));
+            // Shaded leaf and flange together are as long as the compressed length.
+            let shaded = drawing.items.iter().filter_map(|item| match item {
+                Item::Fill { ink: Ink::Stress, path } => Some(path.0.bounding_box()),
+                _ => None,
+            });
+            let all: Vec<_> = shaded.collect();
+            let plan = all[..all.len() - 1].iter().copied().reduce(|a, b| a.union(b)).expect("something is shaded");
+            prop_assert!((plan.width() * scale_of(&drawing) - stress.compressed).abs() < 1e-6);
+            let diagram = all[all.len() - 1];
+            prop_assert!((diagram.width() * scale_of(&drawing) - stress.compressed).abs() < 1e-6);
+        }
+    }
+
+    #[test]
+    fn any_panel_is_sound_and_true(view in any_panel(), other in any_panel()) {
+        let frame = Frame::new(165.0, 130.0);
+        let other = PanelElevation { length: view.length, height: view.height, openings: vec![], walls: vec![], ..other };
+        let pair = panel_pair(&other, &view, frame);
+        prop_assert_eq!(&pair[0].scale, &pair[1].scale);
+        for drawing in &pair {
+            sound(drawing);
+            prop_assert!(frame.holds(drawing), "{} x {}", drawing.width, drawing.height);
+            prop_assert!(has_length(drawing, Pen::Dimension, view.length));
+            prop_assert!(has_length(drawing, Pen::Dimension, view.height));
+        }
+    }
+
+    #[test]
+    fn any_key_plan_is_sound_and_true(view in any_plan()) {
+        let frame = Frame::new(165.0, 220.0);
+        let drawing = key_plan(&view, frame);
+        sound(&drawing);
+        prop_assert!(frame.holds(&drawing), "{} x {}", drawing.width, drawing.height);
+        let wide = view.walls[0].to.0 + 302.5;
+        prop_assert!(has_length(&drawing, Pen::Dimension, wide));
+        let shares = (0..view.walls.len()).map(|wall| Share { wall, before: Some("12 %".into()), after: Some("18 %".into()) });
+        let plan = StabilityPlan { name: "stability".into(), title: "ground floor".into(), shares: shares.collect(), walls: view.walls, wind: PlanWind::Rightwards };
+        sound(&stability_plan(&plan, frame));
+    }
+
+    #[test]
+    fn any_panel_section_is_sound(layers in layers(), height in 2000..4000_i32, ties in 225..900_i32, top in 150..400_i32) {
+        let height = f64::from(height);
+        let mut view = wall_section();
+        view.precompression = view.precompression.map(|(_, action)| (layers.len() - 1, action));
+        (view.layers, view.height, view.ties) = (layers, height, Some(f64::from(ties)));
+        view.floors[1] = Floor { level: height + f64::from(top), depth: f64::from(top), concrete: false, words: "timber floor".into() };
+        let drawing = panel_section(&view, FRAME);
+        sound(&drawing);
+        prop_assert!(has_length(&drawing, Pen::Dimension, height));
+    }
+
+    #[test]
+    fn any_diagram_is_sound(propped: bool, factor in 0.1..10.0_f64, turn: bool) {
+        let mut view = actions(propped);
+        for curve in &mut view.curves {
+            for sample in &mut curve.samples {
+                sample.1 *= if turn { -factor } else { factor };
+            }
+        }
+        sound(&return_actions(&view, Frame::new(120.0, 120.0)));
+    }
+}

@@ -1,0 +1,473 @@
+//! A return looked at on its face: where it stands, what holds it, what acts on it.
+
+use kurbo::{Point, Vec2};
+
+use super::board::{Board, Words};
+use super::dimension::{self, mm};
+use super::drawing::{Drawing, Role};
+use super::load;
+use super::pen::Pen;
+use super::place::{Note, Spot};
+use super::scale::{Frame, Scale, fit};
+use super::text::Text;
+use super::view::{Action, Layer, Ruler, Side, Wind, layer_words, list, thickness};
+
+/// What the elevation of a return shows.
+#[derive(Clone, Debug)]
+pub struct ReturnElevation {
+    /// Mark of the return: `R1`.
+    pub mark: String,
+    /// Length from the inner face of the outer wall to the free end, mm.
+    pub length: f64,
+    /// Height from base to head, mm.
+    pub height: f64,
+    /// What the return is built of, for the label: `100 mm block`.
+    pub words: String,
+    /// Side on which the outer wall stands.
+    pub wall: Side,
+    /// Layers of the outer wall, from the inside.
+    pub wall_layers: Vec<Layer>,
+    /// The junction: `bonded`, `butted, not counted`.
+    pub junction: String,
+    /// Names of what holds the head (`W3, W4`); none where the head is free.
+    pub prop: Option<String>,
+    /// Whether a damp-proof course crosses the base.
+    pub dpc: bool,
+    /// Length of the removed wall beyond the free end, mm; none where nothing was removed there.
+    pub removed: Option<f64>,
+    /// Vertical loads on the head.
+    pub loads: Vec<PlacedLoad>,
+    /// Horizontal forces at head level (head force, tilt), the direction is the wind's.
+    pub head_forces: Vec<Action>,
+    /// Moment at the head, turning as the head forces would.
+    pub head_moment: Option<Action>,
+    /// Line load over the height, where wind comes sideways.
+    pub line_load: Option<Action>,
+    /// Front whose wind this return takes, mm.
+    pub tributary: Option<f64>,
+    /// Direction of the wind.
+    pub wind: Wind,
+}
+
+/// A vertical load at its place.
+#[derive(Clone, Debug)]
+pub struct PlacedLoad {
+    /// Distance from the inner face of the outer wall, mm.
+    pub x: f64,
+    /// Its value.
+    pub action: Action,
+}
+
+/// Paper distances, mm: the outer wall past head and base, the comb, the shortest load arrow.
+const WALL_PAST: f64 = 5.0;
+const COMB: (f64, f64) = (1.2, 8.0);
+const LOAD_ARROW: f64 = 8.0;
+const LOAD_STEP: f64 = 4.0;
+/// Longest piece of removed wall that is drawn, mm on paper.
+const REMOVED_SHOWN: f64 = 22.0;
+
+/// Draws the elevation of a return.
+pub fn return_elevation(view: &ReturnElevation, frame: Frame) -> Drawing {
+    fit(frame, 10.0, |scale| draw(view, scale))
+}
+
+fn draw(view: &ReturnElevation, scale: Scale) -> Drawing {
+    let mut board = Board::default();
+    let ruler = Ruler::new(scale, view.wall);
+    outer_wall(&mut board, view, ruler);
+    removed_wall(&mut board, view, ruler);
+    body(&mut board, view, ruler);
+    base_and_head(&mut board, view, ruler);
+    vertical_loads(&mut board, view, ruler);
+    sideways(&mut board, view, ruler);
+    dimensions(&mut board, view, ruler);
+    board.finish(Words {
+        name: format!("{}-elevation", view.mark),
+        caption: format!("{} elevation, looking at its face", view.mark),
+        scale: scale.text(),
+        alt: alt(view),
+    })
+}
+
+fn outer_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let mut x = 0.0;
+    let corner = |x, top: bool| match top {
+        true => ruler.by(x, view.height, 0.0, WALL_PAST),
+        false => ruler.by(x, 0.0, 0.0, -WALL_PAST),
+    };
+    for layer in &view.wall_layers {
+        let next = x - layer.thickness();
+        if let Layer::Leaf { material, .. } = layer {
+            let ring = [
+                corner(x, false),
+                corner(x, true),
+                corner(next, true),
+                corner(next, false),
+            ];
+            board.hatch(*material, &ring);
+            board.line(Pen::Cut, corner(x, false), corner(x, true));
+            board.line(Pen::Cut, corner(next, false), corner(next, true));
+        }
+        x = next;
+    }
+    for top in [true, false] {
+        let over = ruler.right() * 1.5;
+        load::break_line(
+            board,
+            Pen::Beyond,
+            corner(x, top) - over,
+            corner(0.0, top) + over,
+        );
+    }
+}
+
+fn removed_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let Some(removed) = view.removed else { return };
+    let shown = removed.min(ruler.scale.0 * REMOVED_SHOWN);
+    let (near, far) = (view.length, view.length + shown);
+    let corner = |x, y| ruler.at(x, y);
+    board.polyline(
+        Pen::Removed,
+        &[corner(near, view.height), corner(far, view.height)],
+    );
+    board.polyline(Pen::Removed, &[corner(near, 0.0), corner(far, 0.0)]);
+    if shown < removed {
+        let over = Vec2::new(0.0, 1.5);
+        let (from, to) = (corner(far, 0.0) + over, corner(far, view.height) - over);
+        load::break_line(board, Pen::Beyond, from, to);
+    } else {
+        board.line(Pen::Removed, corner(far, 0.0), corner(far, view.height));
+    }
+    let middle = corner((near + far) / 2.0, view.height / 2.0);
+    board.note(
+        Note::new(Role::Note, middle, Text::plain("removed"))
+            .spot(Spot::new(middle, 0.0, 0.0))
+            .spot(Spot::upwards(middle, 0.0, 0.0))
+            .spot(Spot::upwards(middle + Vec2::new(0.0, 12.0), 0.0, 0.0)),
+    );
+}
+
+fn body(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let (l, h) = (view.length, view.height);
+    let ring = [
+        ruler.at(0.0, 0.0),
+        ruler.at(l, 0.0),
+        ruler.at(l, h),
+        ruler.at(0.0, h),
+    ];
+    board.polyline(Pen::Outline, &[ring[0], ring[1], ring[2], ring[3]]);
+    let middle = ruler.at(l / 2.0, 0.42 * h);
+    board.note(
+        Note {
+            size: 9.0,
+            ..Note::new(Role::Mark, middle, Text::mark(&view.mark))
+        }
+        .spot(Spot::new(middle, 0.0, 0.0))
+        .rank(1),
+    );
+    let words = middle + Vec2::new(0.0, 3.0);
+    board.note(
+        Note::new(Role::Note, middle, Text::plain(&view.words))
+            .spot(Spot::new(words, 0.0, 1.0))
+            .spot(Spot::upwards(words, 0.0, 1.0))
+            .spot(Spot::upwards(words + Vec2::new(0.0, 10.0), 0.0, 1.0)),
+    );
+    let joint = ruler.at(0.0, 0.2 * h);
+    let aside = joint + ruler.right() * 4.0;
+    board.note(
+        Note::new(Role::Note, joint, Text::plain("junction"))
+            .words(&view.junction)
+            .spot(Spot::new(aside, ruler.hand, 0.0).led()),
+    );
+}
+
+fn base_and_head(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let (l, h) = (view.length, view.height);
+    load::ground(
+        board,
+        ruler.at(0.0, 0.0),
+        ruler.at(l, 0.0),
+        Vec2::new(0.0, 1.0),
+    );
+    let words = if view.dpc {
+        "dpc at the base"
+    } else {
+        "base bonded, no dpc"
+    };
+    let foot = ruler.by(l, 0.0, -0.5, 0.0);
+    board.note(
+        Note::new(Role::Note, foot, Text::plain(words))
+            .spot(Spot::new(ruler.by(l, 0.0, 3.5, -2.2), ruler.hand, 1.0).led()),
+    );
+    if view.dpc {
+        // The course runs through the return and through the leaves of the outer wall.
+        board.line(
+            Pen::Cut,
+            ruler.at(-thickness(&view.wall_layers), 0.0),
+            ruler.at(0.0, 0.0),
+        );
+    }
+    let corner = ruler.at(l, h);
+    let Some(names) = &view.prop else {
+        board.note(
+            Note::new(Role::Note, corner, Text::plain("head free"))
+                .spot(Spot::new(ruler.by(l, h, 1.2, -1.2), ruler.hand, 1.0))
+                .spot(Spot::new(ruler.by(l, h, -1.2, -1.2), -ruler.hand, 1.0)),
+        );
+        return;
+    };
+    load::restraint(board, corner, ruler.right());
+    let beside = ruler.by(l, h, 7.0, -1.2);
+    board.note(
+        Note::new(
+            Role::Note,
+            ruler.by(l, h, 5.0, -1.5),
+            Text::plain("head held by"),
+        )
+        .words(names)
+        .spot(Spot::new(beside, ruler.hand, 1.0)),
+    );
+}
+
+/// Vertical loads with a chain of dimensions, or with their places in words where it is crowded.
+fn vertical_loads(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let mut loads: Vec<&PlacedLoad> = view.loads.iter().collect();
+    loads.sort_by(|a, b| a.x.total_cmp(&b.x));
+    let mut places = vec![0.0];
+    for load in &loads {
+        if load.x - places[places.len() - 1] > 0.5 {
+            places.push(load.x);
+        }
+    }
+    let texts: Vec<Text> = places
+        .windows(2)
+        .map(|pair| mm(pair[1] - pair[0]).into())
+        .collect();
+    let paper: Vec<f64> = places.iter().map(|x| ruler.at(*x, 0.0).x).collect();
+    let chained = !texts.is_empty() && dimension::fits(&paper, &texts);
+    if chained {
+        let head = ruler.at(0.0, view.height).y;
+        dimension::chain_across(board, &paper, head + 7.0, head, &texts);
+    }
+
+    // Labels stand on the free side of their arrows; an arrow is longer than every arrow that
+    // its label passes over.
+    let label = |load: &PlacedLoad| {
+        let text = load.action.text();
+        let mut tail = String::new();
+        if !load.action.words.is_empty() {
+            tail = format!(", {}", load.action.words);
+        }
+        if !chained {
+            tail.push_str(&format!(", at {}", mm(load.x)));
+        }
+        text.and(&tail, super::drawing::Style::Plain)
+    };
+    let mut steps = vec![0_usize; loads.len()];
+    for index in (0..loads.len()).rev() {
+        let from = ruler.scale.paper(loads[index].x);
+        let reach = from + 1.0 + label(loads[index]).extent(8.0).width + 2.0;
+        let passed = (index + 1..loads.len()).filter(|j| ruler.scale.paper(loads[*j].x) < reach);
+        steps[index] = passed.map(|j| steps[j] + 1).max().unwrap_or(0);
+    }
+    for (load, step) in loads.iter().zip(steps) {
+        let tip = ruler.at(load.x, view.height);
+        let tail = tip - Vec2::new(0.0, LOAD_ARROW + LOAD_STEP * step as f64);
+        load::arrow(board, tail, tip);
+        let beside = tail + Vec2::new(ruler.hand * 1.0, -0.3);
+        board.note(
+            Note::new(Role::Load, tail, label(load))
+                .spot(Spot::new(beside, ruler.hand, 1.0))
+                .spot(Spot::new(tail - Vec2::new(0.0, 0.8), 0.0, -1.0))
+                .rank(1),
+        );
+    }
+}
+
+/// Wind, line load, head forces and head moment, all on the outer side.
+fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let (h, face) = (view.height, -thickness(&view.wall_layers));
+    let toward = view.wind == Wind::Toward;
+    let right = ruler.right();
+    let mut clear = 2.0;
+    if let Some(line_load) = &view.line_load {
+        let (gap, depth) = COMB;
+        let inset = if toward { gap } else { gap + depth };
+        let push = right * if toward { depth } else { -depth };
+        let side = |y| ruler.by(face, y, -inset, 0.0);
+        load::comb(board, side(0.0), side(h), push);
+        clear = gap + depth;
+        let back = ruler.by(face, 0.3 * h, -(gap + depth), 0.0);
+        let mut note = Note::new(Role::Load, back, line_load.text()).words(&line_load.words);
+        if let Some(front) = view.tributary {
+            note = note.words(&format!("from {} of front", mm(front)));
+        }
+        board.note(note.spot(Spot::new(back - right * 1.5, -ruler.hand, 0.0)));
+    } else if let Some(front) = view.tributary {
+        let at = ruler.by(face, 0.3 * h, -clear, 0.0);
+        let text = Text::plain(&format!("takes {} of front", mm(front)));
+        board.note(Note::new(Role::Note, at, text).spot(Spot::new(at, -ruler.hand, 0.0)));
+    }
+
+    // Forces at head level stand one behind the other on their common line.
+    let mut from = ruler.by(face, h, -clear - 0.8, 0.0);
+    if view.line_load.is_some() && !view.head_forces.is_empty() {
+        board.line(Pen::Dimension, ruler.by(face, h, -0.6, 0.0), from);
+    }
+    for action in &view.head_forces {
+        let length = (action.text().extent(8.0).width + 1.0).max(11.0);
+        let out = from - right * length;
+        let (tail, tip) = if toward { (out, from) } else { (from, out) };
+        load::arrow(board, tail, tip);
+        let middle = tail.midpoint(tip);
+        board.note(
+            Note::new(Role::Load, middle, action.text())
+                .spot(Spot::new(middle - Vec2::new(0.0, 1.3), 0.0, -1.0))
+                .rank(1),
+        );
+        if !action.words.is_empty() {
+            board.note(
+                Note::new(Role::Note, middle, Text::plain(&action.words)).spot(Spot::new(
+                    middle + Vec2::new(0.0, 1.3),
+                    0.0,
+                    1.0,
+                )),
+            );
+        }
+        from = out - right * 2.0;
+    }
+    head_moment(board, view, ruler, toward);
+
+    let reach = ruler.by(face, 0.62 * h, -clear - 5.0, 0.0);
+    let out = reach - right * 12.0;
+    let (tail, tip) = if toward { (out, reach) } else { (reach, out) };
+    load::open_arrow(board, tail, tip);
+    let middle = tail.midpoint(tip);
+    board.note(
+        Note::new(Role::Note, middle, Text::plain("wind")).spot(Spot::new(
+            middle - Vec2::new(0.0, 3.0),
+            0.0,
+            -1.0,
+        )),
+    );
+}
+
+fn head_moment(board: &mut Board, view: &ReturnElevation, ruler: Ruler, toward: bool) {
+    let Some(action) = &view.head_moment else {
+        return;
+    };
+    let radius = 3.5;
+    // On the face if the return is wide enough, else over the outer wall.
+    let inside = ruler.scale.paper(view.length) > 4.0 * radius;
+    let centre: Point = match inside {
+        true => ruler.by(view.length / 2.0, view.height, 0.0, -16.0),
+        false => ruler.by(
+            -thickness(&view.wall_layers),
+            view.height,
+            -4.0,
+            WALL_PAST + 8.0,
+        ),
+    };
+    load::moment(board, centre, radius, toward == (ruler.hand > 0.0));
+    let mut note = Note::new(Role::Load, centre, action.text()).words(&action.words);
+    for (across, down) in [(1.0, 0.0), (-1.0, 0.0), (0.0, -1.0), (0.0, 1.0)] {
+        let off = Vec2::new(across, down) * (radius + 1.5);
+        note = note.spot(Spot::new(centre + off, across, down));
+    }
+    board.note(note);
+}
+
+fn dimensions(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
+    let (l, h) = (view.length, view.height);
+    let outer = thickness(&view.wall_layers);
+    let base = ruler.at(0.0, 0.0).y;
+    let xs: Vec<f64> = [-outer, 0.0, l]
+        .iter()
+        .map(|x| ruler.at(*x, 0.0).x)
+        .collect();
+    dimension::chain_across(
+        board,
+        &xs,
+        base + 12.0,
+        base + WALL_PAST,
+        &[mm(outer).into(), mm(l).into()],
+    );
+    let shown = view
+        .removed
+        .map_or(0.0, |r| r.min(ruler.scale.0 * REMOVED_SHOWN));
+    let end = ruler.at(l + shown, 0.0).x;
+    let at = end + ruler.hand * if view.removed.is_some() { 8.0 } else { 24.0 };
+    dimension::up(
+        board,
+        (ruler.at(0.0, 0.0).y, ruler.at(0.0, h).y),
+        at,
+        end,
+        mm(h),
+    );
+}
+
+fn alt(view: &ReturnElevation) -> String {
+    let side = if view.wall == Side::Left {
+        "left"
+    } else {
+        "right"
+    };
+    let mut alt = format!(
+        "Elevation of return {}, {}, {} mm long and {} mm high. The outer wall stands on the {side}, {} mm thick ({}); junction {}. ",
+        view.mark,
+        view.words,
+        mm(view.length),
+        mm(view.height),
+        mm(thickness(&view.wall_layers)),
+        layer_words(&view.wall_layers),
+        view.junction,
+    );
+    alt += match view.dpc {
+        true => "A dpc lies at the base. ",
+        false => "The base is bonded, no dpc. ",
+    };
+    alt += &match &view.prop {
+        Some(names) => format!("The head is held by {names}. "),
+        None => "The head is free. ".to_owned(),
+    };
+    if view.removed.is_some() {
+        alt += "The wall beyond the free end is removed. ";
+    }
+    let mut loads: Vec<&PlacedLoad> = view.loads.iter().collect();
+    loads.sort_by(|a, b| a.x.total_cmp(&b.x));
+    let mut last = 0.0;
+    for load in loads {
+        let step = load.x - last;
+        alt += &format!(
+            "Vertical load {} at {} mm from the outer wall",
+            load.action.spoken(),
+            mm(load.x)
+        );
+        alt += &if step > 0.5 && last > 0.0 {
+            format!(", {} mm from the one before. ", mm(step))
+        } else {
+            ". ".to_owned()
+        };
+        if step > 0.5 {
+            last = load.x;
+        }
+    }
+    if !view.head_forces.is_empty() {
+        let forces: Vec<String> = view.head_forces.iter().map(Action::spoken).collect();
+        alt += &format!("Horizontal at the head: {}. ", list(&forces));
+    }
+    if let Some(moment) = &view.head_moment {
+        alt += &format!("Moment at the head: {}. ", moment.spoken());
+    }
+    if let Some(line_load) = &view.line_load {
+        alt += &format!("Along the height: {}. ", line_load.spoken());
+    }
+    if let Some(front) = view.tributary {
+        alt += &format!("It takes the wind from {} mm of front. ", mm(front));
+    }
+    alt += match view.wind {
+        Wind::Toward => "The wind blows onto the outer wall.",
+        Wind::Away => "The wind draws at the outer wall.",
+    };
+    alt
+}

@@ -1,0 +1,462 @@
+//! A plan section through a return: leaves, counted flange, resultant, compressed length, stress.
+
+use kurbo::{Point, Rect, Vec2};
+
+use super::board::{Board, Words, corners, polygon};
+use super::dimension::{self, mm};
+use super::drawing::{Drawing, Role, Style};
+use super::load;
+use super::pen::{Ink, Pen};
+use super::place::{Note, Spot};
+use super::scale::{Frame, Scale, fit};
+use super::text::Text;
+use super::view::{Action, Layer, Ruler, Side, layer_words, thickness};
+
+/// What the section of a return shows. Places `x` run from the inner face of the outer wall
+/// towards the free end.
+#[derive(Clone, Debug)]
+pub struct ReturnSection {
+    /// Mark of the return.
+    pub mark: String,
+    /// Length from the inner face of the outer wall to the free end, mm.
+    pub length: f64,
+    /// Layers of the return, from the lower edge of the drawing upwards.
+    pub layers: Vec<Layer>,
+    /// Index in `layers` of the leaf that carries the load and is checked.
+    pub loaded: usize,
+    /// Side on which the outer wall stands.
+    pub wall: Side,
+    /// Layers of the outer wall, from the inside.
+    pub wall_layers: Vec<Layer>,
+    /// Whether the junction is bonded; a butt joint is drawn as a line.
+    pub bonded: bool,
+    /// Flange counted at the junction, centred on the loaded leaf.
+    pub flange: Option<Flange>,
+    /// Resultant and stress, where the section is checked.
+    pub stress: Option<Stress>,
+}
+
+/// Counted part of the outer wall's inner leaf.
+#[derive(Clone, Copy, Debug)]
+pub struct Flange {
+    /// Counted width `b_f`, mm.
+    pub width: f64,
+    /// Thickness `t_f` from the inner face, mm.
+    pub thickness: f64,
+}
+
+/// The compressed part of the section.
+#[derive(Clone, Debug)]
+pub struct Stress {
+    /// End with the greatest stress.
+    pub toe: Toe,
+    /// Compressed length `l_c` from the toe, mm.
+    pub compressed: f64,
+    /// Place of the centroid, mm.
+    pub centroid: f64,
+    /// Place of the resultant, mm.
+    pub resultant: f64,
+    /// Resultant force and combination.
+    pub force: Action,
+    /// Stress at the toe.
+    pub at_toe: Action,
+    /// Stress at the other end as a share of the toe's, and its value; none where it lifts.
+    pub at_heel: Option<(f64, Action)>,
+}
+
+/// Which end of the return is pressed hardest.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Toe {
+    /// The end at the outer wall.
+    Wall,
+    /// The free end.
+    Free,
+}
+
+/// Height of the stress diagram at the toe, mm on paper.
+const DIAGRAM: f64 = 11.0;
+
+/// Draws the section of a return.
+pub fn return_section(view: &ReturnSection, frame: Frame) -> Drawing {
+    fit(frame, 5.0, |scale| draw(view, scale))
+}
+
+/// The section on the paper.
+struct Section<'a> {
+    view: &'a ReturnSection,
+    ruler: Ruler,
+    /// Bands of the return's layers: lower and upper edge, mm, loaded leaf centred on 0.
+    bands: Vec<(f64, f64)>,
+    /// How far the outer wall is drawn to each side, mm.
+    reach: f64,
+}
+
+fn draw(view: &ReturnSection, scale: Scale) -> Drawing {
+    let mut board = Board::default();
+    let section = Section::new(view, scale);
+    section.compressed_area(&mut board);
+    section.outer_wall(&mut board);
+    section.leaves(&mut board);
+    section.dimensions(&mut board);
+    if let Some(stress) = &view.stress {
+        section.resultant(&mut board, stress);
+        section.diagram(&mut board, stress);
+    }
+    board.finish(Words {
+        name: format!("{}-section", view.mark),
+        caption: format!("{} section in plan at the base", view.mark),
+        scale: scale.text(),
+        alt: alt(view),
+    })
+}
+
+impl<'a> Section<'a> {
+    fn new(view: &'a ReturnSection, scale: Scale) -> Self {
+        let mut edges = Vec::new();
+        let mut y = 0.0;
+        for layer in &view.layers {
+            edges.push((y, y + layer.thickness()));
+            y += layer.thickness();
+        }
+        let (low, high) = edges[view.loaded];
+        let zero = (low + high) / 2.0;
+        let bands: Vec<_> = edges.iter().map(|(a, b)| (a - zero, b - zero)).collect();
+        let body = bands
+            .iter()
+            .flat_map(|(a, b)| [a.abs(), b.abs()])
+            .fold(0.0, f64::max);
+        let flange = view.flange.map_or(0.0, |flange| flange.width / 2.0);
+        let reach = body.max(flange) + 6.0 * scale.0;
+        Self {
+            view,
+            ruler: Ruler::new(scale, view.wall),
+            bands,
+            reach,
+        }
+    }
+
+    /// Where the counted section starts: outer face of the flange, or the junction.
+    fn start(&self) -> f64 {
+        -self.view.flange.map_or(0.0, |flange| flange.thickness)
+    }
+
+    fn area(&self, x: (f64, f64), y: (f64, f64)) -> Rect {
+        Rect::from_points(self.ruler.at(x.0, y.0), self.ruler.at(x.1, y.1))
+    }
+
+    /// From where to where the section is compressed, mm.
+    fn pressed(&self, stress: &Stress) -> (f64, f64) {
+        match stress.toe {
+            Toe::Wall => (self.start(), self.start() + stress.compressed),
+            Toe::Free => (self.view.length - stress.compressed, self.view.length),
+        }
+    }
+
+    fn compressed_area(&self, board: &mut Board) {
+        let Some(stress) = &self.view.stress else {
+            return;
+        };
+        let (from, to) = self.pressed(stress);
+        let leaf = self.bands[self.view.loaded];
+        if to > 0.0 {
+            board.fill(
+                Ink::Stress,
+                polygon(&corners(self.area((from.max(0.0), to), leaf))),
+            );
+        }
+        if let Some(flange) = self.view.flange
+            && from < 0.0
+        {
+            let half = flange.width / 2.0;
+            let area = self.area((from, to.min(0.0)), (-half, half));
+            board.fill(Ink::Stress, polygon(&corners(area)));
+        }
+    }
+
+    fn outer_wall(&self, board: &mut Board) {
+        let mut x = 0.0;
+        let reach = self.reach;
+        let at = |x, y| self.ruler.at(x, y);
+        for (index, layer) in self.view.wall_layers.iter().enumerate() {
+            let next = x - layer.thickness();
+            if let Layer::Leaf { material, .. } = layer {
+                board.hatch(*material, &corners(self.area((x, next), (-reach, reach))));
+                board.line(Pen::Cut, at(next, -reach), at(next, reach));
+                if index == 0 && self.view.bonded {
+                    self.inner_face(board);
+                } else {
+                    board.line(Pen::Cut, at(x, -reach), at(x, reach));
+                }
+            }
+            x = next;
+        }
+        for y in [-reach, reach] {
+            let over = self.ruler.right() * 1.5;
+            load::break_line(board, Pen::Beyond, at(x, y) - over, at(0.0, y) + over);
+        }
+        if let Some(flange) = self.view.flange {
+            for y in [-flange.width / 2.0, flange.width / 2.0] {
+                board.line(Pen::Axis, at(-flange.thickness, y), at(0.0, y));
+            }
+        }
+    }
+
+    /// The inner face of the outer wall, open where leaves are bonded in.
+    fn inner_face(&self, board: &mut Board) {
+        let mut y = -self.reach;
+        for (layer, (low, high)) in self.view.layers.iter().zip(&self.bands) {
+            if let Layer::Leaf { .. } = layer {
+                if *low > y {
+                    board.line(Pen::Cut, self.ruler.at(0.0, y), self.ruler.at(0.0, *low));
+                }
+                y = *high;
+            }
+        }
+        board.line(
+            Pen::Cut,
+            self.ruler.at(0.0, y),
+            self.ruler.at(0.0, self.reach),
+        );
+    }
+
+    fn leaves(&self, board: &mut Board) {
+        let l = self.view.length;
+        for (layer, (low, high)) in self.view.layers.iter().zip(&self.bands) {
+            if let Layer::Leaf { material, .. } = layer {
+                board.hatch(*material, &corners(self.area((0.0, l), (*low, *high))));
+                let at = |x, y| self.ruler.at(x, y);
+                board.polyline(
+                    Pen::Cut,
+                    &[at(0.0, *low), at(l, *low), at(l, *high), at(0.0, *high)],
+                );
+            }
+        }
+    }
+
+    /// Upper and lower edge of all layers of the return on the paper.
+    fn edges(&self) -> (f64, f64) {
+        let low = self.bands.first().map_or(0.0, |band| band.0);
+        let high = self.bands.last().map_or(0.0, |band| band.1);
+        (self.ruler.at(0.0, high).y, self.ruler.at(0.0, low).y)
+    }
+
+    fn dimensions(&self, board: &mut Board) {
+        let view = self.view;
+        let (top, _) = self.edges();
+        let x = |x| self.ruler.at(x, 0.0).x;
+        let row = top - if view.stress.is_some() { 16.0 } else { 6.0 };
+        dimension::across(board, (x(0.0), x(view.length)), row, top, mm(view.length));
+        let ys: Vec<f64> = std::iter::once(self.bands[0].0)
+            .chain(self.bands.iter().map(|band| band.1))
+            .map(|y| self.ruler.at(0.0, y).y)
+            .collect();
+        let texts: Vec<Text> = view
+            .layers
+            .iter()
+            .map(|layer| mm(layer.thickness()).into())
+            .collect();
+        let free = x(view.length);
+        dimension::chain_up(board, &ys, free + self.ruler.hand * 8.0, free, &texts);
+
+        let wall = thickness(&view.wall_layers);
+        let crown = self.ruler.at(0.0, self.reach).y;
+        let mut xs = vec![x(-wall)];
+        let mut texts = Vec::new();
+        let mut edge = wall;
+        for layer in view.wall_layers.iter().rev() {
+            edge -= layer.thickness();
+            xs.push(x(-edge));
+            texts.push(mm(layer.thickness()).into());
+        }
+        dimension::chain_across(board, &xs, crown - 7.0, crown - 1.0, &texts);
+        if let Some(flange) = view.flange {
+            let half = flange.width / 2.0;
+            let y = |y| self.ruler.at(0.0, y).y;
+            let level = x(-wall) - self.ruler.hand * 8.0;
+            dimension::up(
+                board,
+                (y(-half), y(half)),
+                level,
+                x(-wall),
+                mm(flange.width),
+            );
+            let at = self.ruler.at(-flange.thickness / 2.0, half);
+            let text = Text::plain("counted flange ")
+                .and("b", Style::Italic)
+                .and("f", Style::Sub);
+            board.note(
+                Note::new(Role::Note, at, text).spot(
+                    Spot::new(
+                        self.ruler.at(0.0, half) + self.ruler.right() * 5.0,
+                        self.ruler.hand,
+                        0.0,
+                    )
+                    .led(),
+                ),
+            );
+        }
+    }
+
+    fn resultant(&self, board: &mut Board, stress: &Stress) {
+        let (top, bottom) = self.edges();
+        let (centroid, place) = (
+            self.ruler.at(stress.centroid, 0.0),
+            self.ruler.at(stress.resultant, 0.0),
+        );
+        let e = (stress.resultant - stress.centroid).abs();
+        let row = top - 9.0;
+        board.line(
+            Pen::Axis,
+            Point::new(centroid.x, row - 1.5),
+            Point::new(centroid.x, bottom + 1.2),
+        );
+        board.line(
+            Pen::Axis,
+            Point::new(place.x, row - 1.5),
+            Point::new(place.x, bottom + 1.2),
+        );
+        if e > 0.5 {
+            dimension::across(
+                board,
+                (centroid.x, place.x),
+                row,
+                row,
+                Text::value("e", &mm(e)),
+            );
+        }
+        // A force into the paper: circle and cross.
+        let radius = 1.5;
+        board.fill(
+            Ink::Paper,
+            kurbo::Shape::to_path(&kurbo::Circle::new(place, radius), 0.01),
+        );
+        load::circle(board, Pen::Load, place, radius);
+        let (a, b) = (
+            Vec2::new(1.0, 1.0) * radius * 0.7071,
+            Vec2::new(1.0, -1.0) * radius * 0.7071,
+        );
+        board.line(Pen::Load, place - a, place + a);
+        board.line(Pen::Load, place - b, place + b);
+        let text = match stress.force.words.is_empty() {
+            true => stress.force.text(),
+            false => stress
+                .force
+                .text()
+                .and(&format!(", {}", stress.force.words), Style::Plain),
+        };
+        let mut note = Note::new(Role::Load, place, text);
+        for across in [self.ruler.hand, -self.ruler.hand] {
+            note = note
+                .spot(Spot::new((place.x + across * 5.0, top - 2.2), across, -1.0).led())
+                .spot(Spot::new((place.x + across * 5.0, bottom + 2.4), across, 1.0).led());
+        }
+        board.note(note);
+    }
+
+    fn diagram(&self, board: &mut Board, stress: &Stress) {
+        let (_, bottom) = self.edges();
+        let (from, to) = self.pressed(stress);
+        // Under the flange there is no room beside the return: the diagram goes below the wall.
+        let base = match from < 0.0 {
+            true => self.ruler.at(0.0, -self.reach).y + 5.0,
+            false => bottom + 7.0,
+        };
+        let (toe, heel) = match stress.toe {
+            Toe::Wall => (from, to),
+            Toe::Free => (to, from),
+        };
+        let x = |x| self.ruler.at(x, 0.0).x;
+        let rest = stress
+            .at_heel
+            .as_ref()
+            .map_or(0.0, |(share, _)| DIAGRAM * share);
+        let ring = [
+            Point::new(x(toe), base),
+            Point::new(x(toe), base + DIAGRAM),
+            Point::new(x(heel), base + rest),
+            Point::new(x(heel), base),
+        ];
+        board.fill(Ink::Stress, polygon(&ring));
+        board.stroke(Pen::Diagram, polygon(&ring));
+        let rest = x(from.min(0.0));
+        board.line(
+            Pen::Beyond,
+            Point::new(rest, base),
+            Point::new(x(self.view.length), base),
+        );
+        let out = (x(toe) - x(heel)).signum();
+        let tip = Point::new(x(toe), base + DIAGRAM * 0.6);
+        board.note(
+            Note::new(Role::Load, tip, stress.at_toe.text())
+                .words(&stress.at_toe.words)
+                .spot(Spot::new(
+                    (x(toe) + out * 1.5, base + DIAGRAM * 0.55),
+                    out,
+                    0.0,
+                ))
+                .spot(Spot::new((x(toe) - out * 1.5, base + 1.0), -out, 1.0).cost(2.0))
+                .rank(1),
+        );
+        if let Some((_, action)) = &stress.at_heel {
+            let end = Point::new(x(heel), base + rest / 2.0);
+            board.note(
+                Note::new(Role::Load, end, action.text())
+                    .spot(Spot::new(
+                        (x(heel) - out * 1.5, base + rest / 2.0),
+                        -out,
+                        0.0,
+                    ))
+                    .rank(1),
+            );
+        }
+        let row = base + DIAGRAM + 6.0;
+        let text = Text::value("l_c", &mm(stress.compressed));
+        dimension::across(board, (x(from), x(to)), row, base + DIAGRAM, text);
+    }
+}
+
+fn alt(view: &ReturnSection) -> String {
+    let mut alt = format!(
+        "Plan section of return {}, {} mm long: {}. The outer wall is {}; the junction is {}. ",
+        view.mark,
+        mm(view.length),
+        layer_words(&view.layers),
+        layer_words(&view.wall_layers),
+        if view.bonded {
+            "bonded"
+        } else {
+            "a butt joint"
+        },
+    );
+    if let Some(flange) = view.flange {
+        alt += &format!(
+            "A flange {} mm wide and {} mm thick is counted. ",
+            mm(flange.width),
+            mm(flange.thickness)
+        );
+    }
+    if let Some(stress) = &view.stress {
+        alt += &format!(
+            "The resultant {} stands {} mm from the centroid, towards the {}. {} mm of the length are compressed, from the {}; stress there {}",
+            stress.force.spoken(),
+            mm((stress.resultant - stress.centroid).abs()),
+            if stress.resultant < stress.centroid {
+                "outer wall"
+            } else {
+                "free end"
+            },
+            mm(stress.compressed),
+            if stress.toe == Toe::Wall {
+                "outer wall"
+            } else {
+                "free end"
+            },
+            stress.at_toe.spoken(),
+        );
+        alt += &match &stress.at_heel {
+            Some((_, action)) => format!(", at the other end {}.", action.spoken()),
+            None => "; the rest lifts and is left out.".to_owned(),
+        };
+    }
+    alt.trim_end().to_owned()
+}

@@ -1,0 +1,79 @@
+//! Scales a draughtsman uses, and the choice between them.
+
+use super::drawing::Drawing;
+
+/// Preferred scales (`1:n`), largest drawing first. Common practice in the UK, no published source.
+pub const PREFERRED: [f64; 8] = [5.0, 10.0, 20.0, 25.0, 50.0, 100.0, 200.0, 500.0];
+
+/// A scale `1:n`.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Scale(pub f64);
+
+/// The paper a drawing may cover, mm.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Frame {
+    /// Greatest width, mm on paper.
+    pub width: f64,
+    /// Greatest height, mm on paper.
+    pub height: f64,
+}
+
+impl Frame {
+    /// A frame of `width` x `height` mm.
+    pub const fn new(width: f64, height: f64) -> Self {
+        Self { width, height }
+    }
+
+    /// Whether a finished drawing stays inside.
+    pub fn holds(&self, drawing: &Drawing) -> bool {
+        drawing.width <= self.width && drawing.height <= self.height
+    }
+}
+
+impl Scale {
+    /// Length on paper (mm) of a full-size length (mm).
+    pub fn paper(self, full_size: f64) -> f64 {
+        full_size / self.0
+    }
+
+    /// `1:20`.
+    pub fn text(self) -> String {
+        format!("1:{}", self.0)
+    }
+}
+
+/// The drawing at the largest preferred scale, from `from` (`1:from`) downwards, that fits the
+/// frame; at the one that sticks out least if none fits.
+pub fn fit(frame: Frame, from: f64, draw: impl Fn(Scale) -> Drawing) -> Drawing {
+    let [drawing] = fit_all(frame, from, |scale| [draw(scale)]);
+    drawing
+}
+
+/// Drawings to be compared, at one scale: the largest at which each of them fits the frame.
+///
+/// Labels do not shrink with the scale, so each candidate is drawn completely and then measured.
+pub fn fit_all<const N: usize>(
+    frame: Frame,
+    from: f64,
+    draw: impl Fn(Scale) -> [Drawing; N],
+) -> [Drawing; N] {
+    let mut best: Option<[Drawing; N]> = None;
+    for n in PREFERRED.into_iter().filter(|n| *n >= from) {
+        let drawings = draw(Scale(n));
+        if drawings.iter().all(|drawing| frame.holds(drawing)) {
+            return drawings;
+        }
+        best = Some(match best {
+            // Past some scale only the labels are left and nothing is gained.
+            Some(last) if excess(&last, frame) <= excess(&drawings, frame) => last,
+            _ => drawings,
+        });
+    }
+    best.expect("there is a preferred scale from 1:5 to 1:500")
+}
+
+/// How far drawings stick out of the frame, mm.
+fn excess(drawings: &[Drawing], frame: Frame) -> f64 {
+    let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
+    drawings.iter().map(over).sum()
+}
