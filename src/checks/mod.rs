@@ -12,6 +12,7 @@ pub mod stability;
 pub mod wind;
 
 mod return_sheet;
+mod shapes;
 mod return_views;
 
 use crate::building::Building;

@@ -1,0 +1,68 @@
+//! The key plan: walls, what comes out, and where every mark is.
+
+use super::{Job, Section};
+use crate::building::{Along, Building, PlanWall};
+use crate::quantity::Length;
+use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind};
+use crate::trace::Sheet;
+
+const FRAME: Frame = Frame::new(160.0, 150.0);
+
+/// The key plan, where the job gives walls as lines.
+pub fn sections(job: &Job<'_>) -> Vec<Section> {
+    let b = job.building;
+    if b.plan.is_empty() {
+        return Vec::new();
+    }
+    let mut sheet = Sheet::recorder();
+    sheet.drawings(&["key-plan"]);
+    let mut drawing = sketch::key_plan(&view(b), FRAME);
+    drawing.name = "key-plan".to_owned();
+    let mut section = Section::plain("plan", "Key plan", sheet);
+    section.drawings.push(drawing);
+    vec![section]
+}
+
+fn view(b: &Building) -> KeyPlan {
+    let walls = b.plan.iter().map(|w| wall(b, w)).collect();
+    let mut marks: Vec<PlanMark> = Vec::new();
+    for r in &b.returns {
+        if let Some((x, y)) = r.position {
+            let at = (x.base(), y.base());
+            marks.push(PlanMark { mark: r.mark.clone(), from: at, to: at });
+        }
+    }
+    for p in &b.panels {
+        if let Some(w) = p.on.as_ref().and_then(|on| b.plan.iter().find(|w| w.mark == *on)) {
+            let pair = |(x, y): (Length, Length)| (x.base(), y.base());
+            marks.push(PlanMark { mark: p.mark.clone(), from: pair(w.from), to: pair(w.to) });
+        }
+    }
+    let winds = match b.stability.as_ref().map(|s| s.wind_along) {
+        Some(Along::X) => vec![PlanWind::Rightwards, PlanWind::Leftwards],
+        Some(Along::Y) => vec![PlanWind::Upwards, PlanWind::Downwards],
+        None => Vec::new(),
+    };
+    KeyPlan {
+        name: "key-plan".to_owned(),
+        title: b.removed.storey.clone(),
+        walls,
+        marks,
+        beams: Vec::new(),
+        north: b.north,
+        winds,
+    }
+}
+
+fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
+    let thickness = b.build_up(&w.build_up).map_or(100.0, |u| {
+        u.leaves.iter().map(|l| l.thickness.base()).sum::<f64>() + u.cavity.map_or(0.0, |c| c.base())
+    });
+    sketch::PlanWall {
+        name: w.mark.clone(),
+        from: (w.from.0.base(), w.from.1.base()),
+        to: (w.to.0.base(), w.to.1.base()),
+        thickness,
+        fate: if w.removed { Fate::Removed } else { Fate::Stays },
+    }
+}

@@ -1,0 +1,33 @@
+//! The sheet of each return.
+
+use super::returns::build::Inputs;
+use super::returns::check;
+use super::{Job, Section, return_views};
+use crate::trace::Sheet;
+
+/// One section a return.
+pub fn sections(job: &Job<'_>) -> Vec<Section> {
+    job.building
+        .returns
+        .iter()
+        .map(|ret| {
+            let mut sheet = Sheet::recorder();
+            let mut drawings = Vec::new();
+            match &job.wind {
+                Ok(wind) => {
+                    let inputs = Inputs {
+                        building: job.building,
+                        ret,
+                        wind: *wind,
+                        storey: job.sharing(),
+                        annex: &job.annex,
+                    };
+                    let checked = check(&mut sheet, &inputs);
+                    drawings = return_views::drawings(job.building, ret, &checked, &job.annex);
+                }
+                Err(outside) => sheet.leave(outside.clone()),
+            }
+            Section { id: ret.mark.clone(), mark: ret.mark.clone(), title: ret.title.clone(), sheet, drawings }
+        })
+        .collect()
+}

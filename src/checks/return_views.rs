@@ -1,0 +1,216 @@
+//! What the drawings of a return show, from its models and its worst cases.
+
+use super::returns::Checked;
+use super::returns::actions::{self, Case, Direction, Toe as Pressed};
+use super::returns::in_plane;
+use super::returns::model::{At, Model};
+use super::returns::run::{Check, Matrix};
+use super::shapes::{layers, leaf_material};
+use crate::building::{BaseJoint, BuildUp, Building, Head, Return};
+use crate::quantity::{Dyn, Force, Length, print};
+use crate::sketch::{
+    Action, Curve, Drawing, Flange, Frame, Layer, PlacedLoad, ReturnActions, ReturnElevation, ReturnSection, Side,
+    Stress, Toe, Wind, return_actions, return_elevation, return_section,
+};
+use crate::standards::annex::Annex;
+use crate::trace::Sheet;
+
+/// Frames on the sheet, mm: elevation and section stand side by side.
+const ELEVATION: Frame = Frame::new(82.0, 92.0);
+const SECTION: Frame = Frame::new(78.0, 92.0);
+const ACTIONS: Frame = Frame::new(160.0, 70.0);
+
+/// The three drawings of a return.
+pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> Vec<Drawing> {
+    let Some((m, matrix)) = checked.models.first() else { return Vec::new() };
+    let Some(build_up) = b.build_up(&r.build_up) else { return Vec::new() };
+    let case = worst(matrix.as_ref(), Check::Overturning);
+    let mut out = vec![
+        return_elevation(&elevation(b, r, m, build_up, case, annex), ELEVATION),
+        return_section(&section(b, r, m, matrix.as_ref(), build_up, annex), SECTION),
+        return_actions(&diagram(r, m, case, annex), ACTIONS),
+    ];
+    for (drawing, kind) in out.iter_mut().zip(["elevation", "section", "actions"]) {
+        drawing.name = format!("{}-{kind}", r.mark);
+    }
+    out
+}
+
+fn worst(matrix: Option<&Matrix>, check: Check) -> Case {
+    matrix
+        .and_then(|x| {
+            let k = x.checks.iter().position(|c| *c == check)?;
+            x.worst(k).map(|i| x.cases[i])
+        })
+        .unwrap_or(Case::all()[0])
+}
+
+fn show(symbol: &str, value: Dyn, words: &str) -> Action {
+    Action::new(symbol, &print::show(symbol, value).to_string(), words)
+}
+
+fn wind(case: Case) -> Wind {
+    if case.direction == Direction::ToFree { Wind::Toward } else { Wind::Away }
+}
+
+fn elevation(b: &Building, r: &Return, m: &Model, build_up: &BuildUp, case: Case, annex: &Annex) -> ReturnElevation {
+    let design = design(m, case, annex);
+    let (k, leaf) = build_up.loaded();
+    let loads = r.loads.iter().filter(|l| l.leaf == k).enumerate().map(|(n, l)| PlacedLoad {
+        x: l.at.base(),
+        action: Action::new(
+            &format!("N_{}", n + 1),
+            &format!("{} + {}", kn(l.dead), print::show("Q", l.imposed.dynamic())),
+            &l.what,
+        ),
+    });
+    let flat = |f: Force| f > Force::ZERO;
+    ReturnElevation {
+        mark: r.mark.clone(),
+        length: m.l.base(),
+        height: m.h.base(),
+        words: format!("{} {}", print::show("t", leaf.thickness.dynamic()), leaf_material(b, leaf).word()),
+        wall: Side::Left,
+        wall_layers: wall_layers(b, r),
+        junction: if r.junction.bonded { "bonded".to_owned() } else { "butted, not counted".to_owned() },
+        prop: match &r.head {
+            Head::Free => None,
+            Head::Propped(walls) => Some(walls.join(", ")),
+        },
+        dpc: r.base == BaseJoint::Dpc,
+        removed: (b.removed.storey == r.storey).then_some(b.removed.length.base()),
+        loads: loads.collect(),
+        head_forces: if flat(design.H_Ed) { vec![show("H_Ed", design.H_Ed.dynamic(), "")] } else { Vec::new() },
+        head_moment: (design.M_h.base() > 0.0).then(|| show("M_h", design.M_h.dynamic(), "from above")),
+        line_load: (design.w_Ed.base() > 0.0).then(|| show("w_Ed", design.w_Ed.dynamic(), "")),
+        tributary: Some(r.tributary_width.base()),
+        wind: wind(case),
+    }
+}
+
+fn kn(f: Force) -> String {
+    print::show("G", f.dynamic()).value
+}
+
+/// The wall that the return meets: a plan wall of that mark, or one leaf of the thickness given.
+fn wall_layers(b: &Building, r: &Return) -> Vec<Layer> {
+    let met = b.plan.iter().find(|w| w.mark == r.junction.to).and_then(|w| b.build_up(&w.build_up));
+    match met {
+        Some(build_up) => {
+            let mut inside_first = layers(b, build_up);
+            inside_first.reverse();
+            inside_first
+        }
+        None => vec![Layer::Leaf { thickness: r.junction.thickness.base(), material: crate::sketch::hatch::Material::Block }],
+    }
+}
+
+fn section(
+    b: &Building,
+    r: &Return,
+    m: &Model,
+    matrix: Option<&Matrix>,
+    build_up: &BuildUp,
+    annex: &Annex,
+) -> ReturnSection {
+    let (k, _) = build_up.loaded();
+    let all = layers(b, build_up);
+    // A cavity lies between the leaves of the drawing.
+    let loaded = if all.len() == 3 && k == 1 { 2 } else { 0 };
+    ReturnSection {
+        mark: r.mark.clone(),
+        length: m.l.base(),
+        layers: all,
+        loaded,
+        wall: Side::Left,
+        wall_layers: wall_layers(b, r),
+        bonded: r.junction.bonded,
+        flange: m.flange.map(|f| Flange { width: f.b_f.base(), thickness: f.t_f.base() }),
+        stress: matrix.and_then(|x| stress(m, x, annex)),
+    }
+}
+
+/// The stress block of the case that uses the toe most.
+fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
+    let case = worst(Some(matrix), Check::Toe);
+    let mut s = Sheet::silent();
+    let a = actions::at(&mut s, m, annex, case, At::Foot);
+    let st = in_plane::stresses(&mut s, m, &a);
+    let sigma = st.sigma_toe?;
+    let (l, t_f) = (m.l, a.flange.map_or(Length::ZERO, |f| f.t_f));
+    let free = a.toe == Pressed::Free;
+    let centroid = match a.flange {
+        None => l / 2.0,
+        Some(f) => {
+            let (web, flange) = (l * m.t, f.b_f * f.t_f);
+            (web * (l / 2.0) - flange * (f.t_f / 2.0)) / (web + flange)
+        }
+    };
+    let depth = l + t_f;
+    let whole = if free || a.flange.is_none() { st.l_c } else { st.l_c + t_f };
+    let compressed = if whole > depth { depth } else { whole };
+    let full = a.flange.is_none() && st.l_c >= l;
+    let heel = full.then(|| {
+        let e = l / 2.0 - st.a;
+        let at = a.N_Ed / (m.t * l) * (1.0 - (e * 6.0 / l).base());
+        ((at / sigma).base(), show("sigma", at.dynamic(), ""))
+    });
+    Some(Stress {
+        toe: if free { Toe::Free } else { Toe::Wall },
+        compressed: compressed.base(),
+        centroid: centroid.base(),
+        resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() },
+        force: show("N_Ed", a.N_Ed.dynamic(), &case.name()),
+        at_toe: show("sigma", sigma.dynamic(), ""),
+        at_heel: heel,
+    })
+}
+
+fn design(m: &Model, case: Case, annex: &Annex) -> actions::Design {
+    let mut s = Sheet::silent();
+    let (_, _, gamma_W, _) = actions::factors(&mut s, case, annex, m.helping);
+    actions::design(&mut s, m, gamma_W)
+}
+
+/// Moment and shear of wind and tilt along the height; the moment of the vertical loads is constant
+/// and stands beside it on the sheet.
+fn diagram(r: &Return, m: &Model, case: Case, annex: &Annex) -> ReturnActions {
+    let d = design(m, case, annex);
+    let h = m.h;
+    let moment = |z: Length| {
+        if m.propped {
+            d.M_h + d.w_Ed * z * (h - z) / 2.0
+        } else {
+            d.M_h + d.H_Ed * (h - z) + d.w_Ed * (h - z) * (h - z) / 2.0
+        }
+    };
+    let shear = |z: Length| {
+        if m.propped { d.w_Ed * (h / 2.0 - z) } else { d.H_Ed + d.w_Ed * (h - z) }
+    };
+    let places: Vec<Length> = (0..=20).map(|i| h * (f64::from(i) / 20.0)).collect();
+    let value = |name: &str, q: Dyn| print::show(name, q).to_string();
+    let mut printed: Vec<Length> = vec![Length::ZERO, h];
+    if m.propped {
+        printed.insert(1, h / 2.0);
+    }
+    ReturnActions {
+        mark: r.mark.clone(),
+        height: h.base(),
+        propped: m.propped,
+        case: case.name(),
+        curves: vec![
+            Curve {
+                symbol: "M_W".to_owned(),
+                words: "moment of wind and tilt".to_owned(),
+                samples: places.iter().map(|&z| (z.base(), moment(z).base() / 1e6)).collect(),
+                values: printed.iter().map(|&z| (z.base(), value("M_W", moment(z).dynamic()))).collect(),
+            },
+            Curve {
+                symbol: "V_Ed".to_owned(),
+                words: "shear".to_owned(),
+                samples: places.iter().map(|&z| (z.base(), shear(z).base() / 1e3)).collect(),
+                values: [Length::ZERO, h].iter().map(|&z| (z.base(), value("V_Ed", shear(z).dynamic()))).collect(),
+            },
+        ],
+    }
+}
