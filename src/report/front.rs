@@ -1,0 +1,253 @@
+//! The words of the front sheets: outcome, summary, assumptions, cautions.
+
+use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
+use crate::checks::Results;
+use crate::checks::outcome::Outcome;
+use crate::pack::data::{Assumption, Summary};
+use crate::standards::{en1991_1_4, en1996};
+
+/// One plain sentence on the outcome.
+pub fn sentence(results: &Results) -> String {
+    let failing: Vec<&str> = results
+        .sections
+        .iter()
+        .filter(|s| s.sheet.verdicts.iter().any(|v| !v.holds))
+        .map(|s| if s.mark.is_empty() { s.title.as_str() } else { s.mark.as_str() })
+        .collect();
+    let outside: Vec<&str> = results
+        .sections
+        .iter()
+        .filter(|s| !s.sheet.outside.is_empty())
+        .map(|s| if s.mark.is_empty() { s.title.as_str() } else { s.mark.as_str() })
+        .collect();
+    match results.outcome {
+        Outcome::NotAdequate => format!(
+            "What is to stay is not enough as it stands: {} does not pass every check. The wall may not come out on \
+             the strength of this pack.",
+            list(&failing)
+        ),
+        Outcome::Outside => format!(
+            "No check fails, but {} leaves the range of a clause: this pack does not decide it, and the wall may not \
+             come out on its strength.",
+            list(&outside)
+        ),
+        Outcome::Conditional(_) => "Every check passes. The wall may come out only when each open hold point below \
+                                    is closed and signed."
+            .to_owned(),
+        Outcome::Adequate => "Every check passes, and every link of the load path is calculated, held by a named rule, \
+                              or was seen."
+            .to_owned(),
+    }
+}
+
+/// `a, b and c`.
+pub fn list(items: &[&str]) -> String {
+    match items {
+        [] => String::new(),
+        [one] => (*one).to_owned(),
+        [first @ .., last] => format!("{} and {last}", first.join(", ")),
+    }
+}
+
+/// The design summary.
+pub fn summary(b: &Building, _results: &Results) -> Vec<Summary> {
+    vec![
+        entry("The job", job(b)),
+        entry("Codes and edition", codes(b)),
+        entry("Basis", basis(b)),
+        entry("Load path and stability", stability(b)),
+        entry("Who is responsible for what", responsible(b)),
+    ]
+}
+
+fn entry(title: &str, lines: Vec<String>) -> Summary {
+    Summary { title: title.to_owned(), lines }
+}
+
+fn job(b: &Building) -> Vec<String> {
+    vec![
+        b.identity.building.clone(),
+        b.identity.work.clone(),
+        format!("{} carried: {}.", capital(&b.removed.wall), lower(&b.removed.carried)),
+        format!("It braced: {}.", lower(&b.removed.braced)),
+    ]
+}
+
+fn codes(_b: &Building) -> Vec<String> {
+    vec![
+        "BS EN 1990:2002+A1:2005 with UK National Annex".to_owned(),
+        en1991_1_4::EDITION.to_owned(),
+        en1996::EDITION.to_owned(),
+        "Approved Document A, 2013 edition, for rules printed beside the calculation".to_owned(),
+        "Figures of the standards were entered from memory and recalculated where possible; each carries its \
+         confidence (H, M, L). Check them against the purchased standard."
+            .to_owned(),
+    ]
+}
+
+fn basis(b: &Building) -> Vec<String> {
+    let factor = |name: &str, stated: &Option<Cause<f64>>| match stated {
+        Some(c) => format!("Material factor, {name}: {} stated, {}", c.value, lower(&c.reason)),
+        None => format!("Material factor, {name}: UK NA Table NA.1"),
+    };
+    let helping = &b.basis.helping_factor;
+    vec![
+        format!(
+            "Execution class {}, units of category {}",
+            b.basis.execution_class,
+            if b.basis.unit_category == 1 { "I" } else { "II" }
+        ),
+        factor("compression", &b.basis.gamma_m_compression),
+        factor("flexure", &b.basis.gamma_m_flexure),
+        factor("shear", &b.basis.gamma_m_shear),
+        if helping.reason.is_empty() {
+            format!("Only dead load helps, and it is taken {} times (EN 1990, set A)", helping.value)
+        } else {
+            format!("Only dead load helps, and it is taken {} times: {}", helping.value, lower(&helping.reason))
+        },
+        "Every check runs under four combinations and both directions of the wind; the worst is worked".to_owned(),
+    ]
+}
+
+fn stability(b: &Building) -> Vec<String> {
+    let mut out = vec![match b.wind.route {
+        WindRoute::Stated => "Wind: net pressure stated with a reason, see the wind sheet".to_owned(),
+        WindRoute::Terrain => "Wind: EN 1991-1-4 clause 4 with a terrain category, see the wind sheet".to_owned(),
+    }];
+    if let Some(st) = &b.stability {
+        out.push(match st.share_by {
+            ShareBy::Width => "A timber floor shares the storey's wind by tributary width".to_owned(),
+            ShareBy::Stiffness => "A concrete floor shares the storey's wind by stiffness, with torsion".to_owned(),
+        });
+    }
+    for r in &b.returns {
+        let path = match r.path {
+            Path::Sideways => "the wall spans sideways onto it",
+            Path::UpAndDown => "the wall spans up and down, and the floor brings the wind to its head",
+            Path::Both => "the wall spans sideways onto it and the floor brings wind to its head",
+        };
+        let head = match &r.head {
+            Head::Free => "it stands as a cantilever".to_owned(),
+            Head::Propped(walls) => {
+                let names: Vec<&str> = walls.iter().map(String::as_str).collect();
+                format!("its head is held by {}", list(&names))
+            }
+        };
+        out.push(format!("{}: {path}; {head}", r.mark));
+    }
+    out
+}
+
+fn responsible(b: &Building) -> Vec<String> {
+    let mut out: Vec<String> = b.responsible.iter().map(|(task, who)| format!("{}: {who}", capital(task))).collect();
+    if out.is_empty() {
+        out.push("Nobody is named for temporary support and the order of work: name them before work starts".to_owned());
+    }
+    out.push(format!("This calculation: {}", b.signatures.made.name));
+    out
+}
+
+/// The register of assumptions: those of the job, then those that the tool makes.
+pub fn assumptions(b: &Building) -> Vec<Assumption> {
+    let mut all: Vec<(String, String)> = b.assumptions.iter().map(|a| (a.text.clone(), a.source.clone())).collect();
+    if let (WindRoute::Stated, Some(st)) = (b.wind.route, &b.wind.stated) {
+        all.push(("The wind is the pressure stated. Confirm it against the site.".to_owned(), st.reason.clone()));
+    }
+    let helping = &b.basis.helping_factor;
+    all.push((
+        format!("Only dead load helps, taken {} times; imposed load never helps.", helping.value),
+        if helping.reason.is_empty() { "EN 1990 Table NA.A1.2(A)".to_owned() } else { helping.reason.clone() },
+    ));
+    for (name, c) in [
+        ("compression", &b.basis.gamma_m_compression),
+        ("flexure", &b.basis.gamma_m_flexure),
+        ("shear", &b.basis.gamma_m_shear),
+    ] {
+        if let Some(c) = c {
+            all.push((format!("The material factor in {name} is {}.", c.value), c.reason.clone()));
+        }
+    }
+    for m in &b.materials {
+        for (name, stated) in
+            [("f_b", &m.f_b), ("f_k", &m.f_k), ("f_vk0", &m.f_vk0), ("f_xk1", &m.f_xk1), ("f_xk2", &m.f_xk2)]
+        {
+            if let Some(c) = stated {
+                let value = crate::quantity::print::show("f", c.value.dynamic());
+                all.push((format!("{name} of {} is {value}, stated.", m.name), c.reason.clone()));
+            }
+        }
+    }
+    for r in &b.returns {
+        if r.base == crate::building::BaseJoint::Dpc {
+            let source = if r.mu.reason.is_empty() { "common practice, no published source" } else { &r.mu.reason };
+            all.push((
+                format!("Friction at the damp-proof course of {} is {}.", r.mark, r.mu.value.base()),
+                source.to_owned(),
+            ));
+        }
+    }
+    all.push((
+        "Plaster and render carry nothing; chases are taken off the thickness; wall ties carry no shear in the plane \
+         of a return."
+            .to_owned(),
+        "method of this pack".to_owned(),
+    ));
+    all.into_iter()
+        .enumerate()
+        .map(|(n, (text, source))| Assumption { mark: format!("A{}", n + 1), text, source })
+        .collect()
+}
+
+/// The cautions, written for this job.
+pub fn cautions(b: &Building) -> Vec<String> {
+    let place = b.identity.address.first().map_or("the address named", String::as_str);
+    let returns: Vec<&str> = b.returns.iter().map(|r| r.mark.as_str()).collect();
+    let seen = match &b.identity.visited {
+        Some(date) => format!("What was not seen on {} is not known.", crate::job::date_in_words(date)),
+        None => "The building was not visited. Everything about it is taken from others.".to_owned(),
+    };
+    let mut out = vec![
+        format!("This calculation is for {place} only, as described here, and for no other building."),
+        "Local codes and the judgement of a licensed engineer come first. This pack is worth nothing unsigned.".to_owned(),
+        "Temporary support comes before any masonry is cut. It is designed by the person named on the front sheets, \
+         for the unfactored loads of this pack, and stays until the permanent work carries."
+            .to_owned(),
+    ];
+    if !returns.is_empty() {
+        out.push(format!(
+            "Stop and call the engineer if the junction of {} is found butted where it is counted as bonded, if the \
+             mortar is soft, if a leaf is chased or cracked, or if a size differs from the sketch.",
+            list(&returns)
+        ));
+    }
+    out.push(seen);
+    out.push(
+        "Not covered: the steel or concrete beam, its bearing and padstone, the wall and footing below, and movement \
+         and fire. They need calculations of their own."
+            .to_owned(),
+    );
+    out.push(
+        "The resistance of a compressed end by a uniform block, friction at the foot, and flexure in plane are first \
+         principles, not formulas of the code. The sheets say so where they stand."
+            .to_owned(),
+    );
+    out
+}
+
+/// The text without its full stop, beginning small unless it begins with a name in capitals.
+fn lower(text: &str) -> String {
+    let text = text.trim_end_matches('.');
+    let mut letters = text.chars();
+    match (letters.next(), letters.next()) {
+        (Some(first), Some(second)) if second.is_lowercase() || second == ' ' => {
+            first.to_lowercase().collect::<String>() + &text[first.len_utf8()..]
+        }
+        _ => text.to_owned(),
+    }
+}
+
+fn capital(text: &str) -> String {
+    let text = text.replace('_', " ");
+    let mut letters = text.chars();
+    letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
+}

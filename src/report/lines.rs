@@ -1,0 +1,57 @@
+//! Results for the terminal: a line a check, then the outcome.
+
+use super::schedule;
+use crate::building::Building;
+use crate::checks::Results;
+use crate::checks::outcome;
+
+/// Whether a line is about something that does not hold, so that a terminal may stress it.
+pub struct Line {
+    /// The text, without its line end.
+    pub text: String,
+    /// Something is not adequate, outside or open.
+    pub stress: bool,
+}
+
+fn plain(text: impl Into<String>) -> Line {
+    Line { text: text.into(), stress: false }
+}
+
+/// The results of one job as lines.
+pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
+    let mut out = vec![plain(format!("{}  {}", b.identity.number, b.identity.title))];
+    for w in &b.warnings {
+        out.push(plain(format!("  odd but possible: {w}")));
+    }
+    for s in &results.sections {
+        let rows = schedule(s);
+        if rows.is_empty() {
+            continue;
+        }
+        let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
+        let name = if s.mark.is_empty() { s.title.clone() } else { format!("{}  {}", s.mark, s.title) };
+        out.push(plain(""));
+        let stress = outcome != outcome::Outcome::Adequate;
+        out.push(Line { text: format!("{name}: {}", outcome.words()), stress });
+        for r in rows {
+            let stress = r.verdict != "adequate";
+            let text = if r.ratio.is_empty() {
+                format!("  {:<34} {}", r.check, r.verdict)
+            } else {
+                let (demand, resistance) = (r.demand, r.resistance);
+                format!("  {:<34} {demand:>12} of {resistance:>12}   {:>5}  {}", r.check, r.ratio, r.verdict)
+            };
+            out.push(Line { text, stress });
+        }
+    }
+    let open: Vec<_> = results.holds.iter().filter(|h| h.closed.is_none()).collect();
+    if !open.is_empty() {
+        out.push(plain(""));
+        out.push(plain("Hold points"));
+        out.extend(open.iter().map(|h| plain(format!("  {}  {}", h.mark, h.text))));
+    }
+    out.push(plain(""));
+    let stress = results.outcome != outcome::Outcome::Adequate;
+    out.push(Line { text: format!("Outcome: {}", results.outcome.words()), stress });
+    out
+}

@@ -1,0 +1,184 @@
+//! From building and results to the pack's data and to the terminal's lines: words, no engineering.
+//!
+//! * [`pack`]: the data that the templates read
+//! * [`lines`]: the same results as plain text
+//! * [`machine`]: the same results as JSON
+
+mod blocks;
+mod front;
+pub mod lines;
+pub mod machine;
+mod notation;
+
+use crate::building::Building;
+use crate::checks::outcome::{self, Outcome};
+use crate::checks::{Results, Section};
+use crate::job::date_in_words;
+use crate::pack::data::{self, OutcomeKind};
+use crate::trace::{Value, Verdict};
+use crate::quantity::print;
+
+/// Name and version, as printed.
+pub const PROGRAM: (&str, &str) = ("Perpend", env!("CARGO_PKG_VERSION"));
+
+/// The words where no second person has checked.
+pub const SELF_CHECKED: &str = "self-checked, no second person";
+
+/// The pack's data. `text` is the job file and `digest` its SHA-256 in hexadecimal.
+pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::Pack {
+    let revision = b.revisions.last().map_or(String::new(), |r| r.letter.clone());
+    let of_person = |p: &crate::building::Person| (p.name.clone(), p.letters.clone(), date_in_words(&p.date));
+    let (name, letters, date) = of_person(&b.signatures.made);
+    let made = data::Made {
+        name,
+        letters,
+        qualification: b.signatures.made.qualification.clone().unwrap_or_default(),
+        date,
+    };
+    let checked = match &b.signatures.checked {
+        None => data::Checked {
+            text: SELF_CHECKED.to_owned(),
+            name: String::new(),
+            letters: String::new(),
+            date: String::new(),
+        },
+        Some(p) => {
+            let (name, letters, date) = of_person(p);
+            data::Checked { text: String::new(), name, letters, date }
+        }
+    };
+    data::Pack {
+        program: data::Program { name: PROGRAM.0.to_owned(), version: PROGRAM.1.to_owned() },
+        digest: grouped(&digest.chars().take(16).collect::<String>()),
+        digest_full: digest.to_owned(),
+        job: data::Job {
+            number: b.identity.number.clone(),
+            title: b.identity.title.clone(),
+            address: b.identity.address.clone(),
+            client: b.identity.client.clone(),
+            authority: b.identity.authority.clone(),
+            status: b.identity.status.word().to_owned(),
+            visited: b.identity.visited.as_deref().map_or("not visited".to_owned(), date_in_words),
+            revision,
+        },
+        made,
+        checked,
+        signed: false,
+        unsigned_text: "not signed".to_owned(),
+        revisions: b
+            .revisions
+            .iter()
+            .map(|r| data::Revision { letter: r.letter.clone(), date: date_in_words(&r.date), note: r.note.clone() })
+            .collect(),
+        outcome: data::FrontOutcome {
+            kind: kind(results.outcome),
+            words: results.outcome.words(),
+            sentence: front::sentence(results),
+        },
+        summary: front::summary(b, results),
+        assumptions: front::assumptions(b),
+        holds: results
+            .holds
+            .iter()
+            .map(|h| data::Hold {
+                mark: h.mark.clone(),
+                text: h.text.clone(),
+                closed: h.closed.clone().unwrap_or_default(),
+                waiting: h.of.clone(),
+            })
+            .collect(),
+        schedule: results.sections.iter().flat_map(schedule).collect(),
+        warnings: b.warnings.clone(),
+        // The chain has its own section with the same links.
+        chain: Vec::new(),
+        sections: results.sections.iter().map(|s| section(s, results)).collect(),
+        cautions: front::cautions(b),
+        photographs: b
+            .photographs
+            .iter()
+            .enumerate()
+            .map(|(n, p)| data::Photograph {
+                path: photograph_path(n, &p.file),
+                caption: p.caption.clone(),
+                mark: p.mark.clone().unwrap_or_default(),
+            })
+            .collect(),
+        inputs: text.to_owned(),
+        notation: notation::used(&results.sections),
+    }
+}
+
+/// The name by which the pack's data calls photograph `n`; every photograph arrives as JPEG.
+pub fn photograph_path(n: usize, _file: &str) -> String {
+    format!("/photo/{n}.jpg")
+}
+
+fn grouped(hex: &str) -> String {
+    hex.as_bytes().chunks(4).map(|c| String::from_utf8_lossy(c).into_owned()).collect::<Vec<_>>().join(" ")
+}
+
+fn kind(outcome: Outcome) -> OutcomeKind {
+    match outcome {
+        Outcome::Adequate => OutcomeKind::Adequate,
+        Outcome::Conditional(_) => OutcomeKind::Conditional,
+        Outcome::Outside => OutcomeKind::Outside,
+        Outcome::NotAdequate => OutcomeKind::NotAdequate,
+    }
+}
+
+fn section(s: &Section, results: &Results) -> data::Section {
+    let judged = !s.mark.is_empty();
+    let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
+    let plain_failure = !judged && (!s.sheet.verdicts.is_empty() || !s.sheet.outside.is_empty());
+    data::Section {
+        id: s.id.clone(),
+        title: s.title.clone(),
+        mark: s.mark.clone(),
+        outcome: (judged || plain_failure)
+            .then(|| data::SectionOutcome { kind: kind(outcome), words: outcome.words() }),
+        blocks: blocks::of_section(s),
+        new_page: judged || matches!(s.id.as_str(), "plan" | "wind"),
+    }
+}
+
+/// Lines of the results schedule, in the order of the section.
+pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
+    let amount = |v: &Value| print::show(&v.name, v.value).to_string();
+    let mark = if s.mark.is_empty() { s.title.clone() } else { s.mark.clone() };
+    let verdict = |v: &Verdict| data::Scheduled {
+        mark: mark.clone(),
+        check: v.words.clone(),
+        demand: amount(&v.demand),
+        resistance: amount(&v.resistance),
+        ratio: print::ratio(v.ratio),
+        bar: bar(v.ratio),
+        verdict: verdict_words(v.holds).to_owned(),
+        anchor: anchor(s, &v.id),
+    };
+    let outside = s.sheet.outside.iter().map(|o| data::Scheduled {
+        mark: mark.clone(),
+        check: o.words.clone(),
+        demand: String::new(),
+        resistance: String::new(),
+        ratio: String::new(),
+        bar: 0.0,
+        verdict: "outside the method".to_owned(),
+        anchor: anchor(s, &o.id),
+    });
+    s.sheet.verdicts.iter().map(verdict).chain(outside).collect()
+}
+
+/// `adequate` or `not adequate`.
+pub const fn verdict_words(holds: bool) -> &'static str {
+    if holds { "adequate" } else { "not adequate" }
+}
+
+/// The ratio for the scale, never above 2.
+fn bar(ratio: f64) -> f64 {
+    if ratio.is_finite() { ratio.clamp(0.0, 2.0) } else { 2.0 }
+}
+
+/// The anchor of a check on its sheet.
+fn anchor(s: &Section, id: &str) -> String {
+    format!("{}-{id}", s.id)
+}
