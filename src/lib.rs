@@ -4,7 +4,11 @@
 
 pub mod building;
 pub mod checks;
+pub mod error;
+pub mod job;
+pub mod pack;
 pub mod quantity;
+pub mod report;
 pub mod sketch;
 pub mod solve;
 pub mod standards;

@@ -1,0 +1,182 @@
+//! Looking over the finished sheets. The typesetter reports neither text over text nor text
+//! past the margins, and misses signs silently outside PDF/A.
+
+use std::fmt;
+
+use typst::layout::{Abs, Frame, FrameItem, Point, Transform};
+use typst::text::{FontFlags, TextItem};
+use typst_layout::PagedDocument;
+
+/// Ink may touch by this much, in points, before it counts: letters lean over their boxes.
+const TOLERANCE: f64 = 0.6;
+/// Ink may lean into a margin by this much, in points: the tail of a j begins left of its box.
+const LEAN: f64 = 1.5;
+/// The margins that text keeps to, in millimetres: binding edge, outer edge, head and foot.
+const MARGINS: Margins = Margins { left: 25.0, right: 15.0, top: 10.0, bottom: 8.0 };
+
+struct Margins {
+    left: f64,
+    right: f64,
+    top: f64,
+    bottom: f64,
+}
+
+/// A flaw on a sheet.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Finding {
+    /// The sheet, counted from 1.
+    pub sheet: usize,
+    /// Place of the text in mm from the sheet's top left corner.
+    pub at: (f64, f64),
+    /// What is wrong.
+    pub flaw: Flaw,
+}
+
+/// What can be wrong with text on a sheet.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub enum Flaw {
+    /// Two pieces of text print over each other.
+    Overlap(String, String),
+    /// Text runs into a margin or off the sheet.
+    Outside(String),
+    /// A sign that the face does not hold.
+    Missing(String),
+}
+
+impl fmt::Display for Finding {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        let (x, y) = self.at;
+        write!(f, "sheet {}, {x:.0} mm across, {y:.0} mm down: ", self.sheet)?;
+        match &self.flaw {
+            Flaw::Overlap(a, b) => write!(f, "\"{a}\" prints over \"{b}\""),
+            Flaw::Outside(text) => write!(f, "\"{text}\" runs into the margin"),
+            Flaw::Missing(text) => write!(f, "a sign of \"{text}\" is missing"),
+        }
+    }
+}
+
+/// A piece of text with the box of its ink, in points from the sheet's top left corner.
+struct Ink {
+    text: String,
+    min: Point,
+    max: Point,
+    missing: bool,
+    /// The size of the type and whether the face is the one for mathematics.
+    size: Abs,
+    mathematics: bool,
+}
+
+impl Ink {
+    fn holds(&self, point: Point) -> bool {
+        self.min.x < point.x && point.x < self.max.x && self.min.y < point.y && point.y < self.max.y
+    }
+
+    fn centre(&self) -> Point {
+        Point::new((self.min.x + self.max.x) / 2.0, (self.min.y + self.max.y) / 2.0)
+    }
+}
+
+/// Every flaw of a laid-out document, sheet by sheet.
+pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
+    let mut findings = Vec::new();
+    for (index, page) in document.pages().iter().enumerate() {
+        let mut inks = Vec::new();
+        walk(&page.frame, Transform::identity(), &mut inks);
+        let size = page.frame.size();
+        let mut report = |ink: &Ink, flaw| {
+            let at = (ink.min.x.to_mm(), ink.min.y.to_mm());
+            findings.push(Finding { sheet: index + 1, at, flaw });
+        };
+        for ink in &inks {
+            if ink.missing {
+                report(ink, Flaw::Missing(ink.text.clone()));
+            }
+            if outside(ink, size.x, size.y) {
+                report(ink, Flaw::Outside(ink.text.clone()));
+            }
+        }
+        for (ink, other) in overlaps(&mut inks) {
+            report(ink, Flaw::Overlap(ink.text.clone(), other.text.clone()));
+        }
+    }
+    findings
+}
+
+/// The runs of text of a laid-out document, in the order in which they print.
+#[cfg(test)]
+pub(super) fn words(document: &PagedDocument) -> Vec<String> {
+    let mut inks = Vec::new();
+    for page in document.pages() {
+        walk(&page.frame, Transform::identity(), &mut inks);
+    }
+    inks.into_iter().map(|ink| ink.text).collect()
+}
+
+fn walk(frame: &Frame, outer: Transform, inks: &mut Vec<Ink>) {
+    for (at, item) in frame.items() {
+        let here = outer.pre_concat(Transform::translate(at.x, at.y));
+        match item {
+            FrameItem::Group(group) => walk(&group.frame, here.pre_concat(group.transform), inks),
+            FrameItem::Text(text) => inks.extend(ink(text, here)),
+            _ => {}
+        }
+    }
+}
+
+/// The ink of one run of text; none for spaces.
+fn ink(item: &TextItem, place: Transform) -> Option<Ink> {
+    let bounds = item.bbox();
+    if !bounds.min.x.to_pt().is_finite() || item.text.trim().is_empty() {
+        return None;
+    }
+    // Turned labels: the box of the turned corners.
+    let corners = [
+        bounds.min,
+        bounds.max,
+        Point::new(bounds.min.x, bounds.max.y),
+        Point::new(bounds.max.x, bounds.min.y),
+    ]
+    .map(|corner| corner.transform(place));
+    let min = corners.iter().copied().reduce(Point::min)?;
+    let max = corners.iter().copied().reduce(Point::max)?;
+    let missing = item.glyphs.iter().any(|glyph| glyph.id == 0);
+    let mathematics = item.font.info().flags.contains(FontFlags::MATH);
+    Some(Ink { text: item.text.to_string(), min, max, missing, size: item.size, mathematics })
+}
+
+fn outside(ink: &Ink, width: Abs, height: Abs) -> bool {
+    let slack = Abs::pt(LEAN);
+    ink.min.x + slack < Abs::mm(MARGINS.left)
+        || ink.max.x - slack > width - Abs::mm(MARGINS.right)
+        || ink.min.y + slack < Abs::mm(MARGINS.top)
+        || ink.max.y - slack > height - Abs::mm(MARGINS.bottom)
+}
+
+/// Pairs whose ink boxes share more than the tolerance both ways. Sorted by height first, so
+/// that each piece meets only those that begin above its foot.
+fn overlaps(inks: &mut [Ink]) -> Vec<(&Ink, &Ink)> {
+    let slack = Abs::pt(TOLERANCE);
+    inks.sort_by(|a, b| a.min.y.cmp(&b.min.y));
+    let mut pairs = Vec::new();
+    for (index, a) in inks.iter().enumerate() {
+        for b in inks[index + 1..].iter().take_while(|b| b.min.y + slack < a.max.y) {
+            let shared = a.min.x + slack < b.max.x && b.min.x + slack < a.max.x;
+            if shared && b.max.y > b.min.y + slack && !tucked_in(a, b) {
+                pairs.push((a, b));
+            }
+        }
+    }
+    pairs
+}
+
+/// Whether one is an index that the face for mathematics tucks under the arm of its base
+/// (`V` and its subscript) or into a root sign. A piece that covers the middle of another is
+/// never that.
+fn tucked_in(a: &Ink, b: &Ink) -> bool {
+    let (base, index) = if a.size > b.size { (a, b) } else { (b, a) };
+    let root = base.text == "√";
+    base.mathematics
+        && index.mathematics
+        && base.size > index.size
+        && (root || (!base.holds(index.centre()) && !index.holds(base.centre())))
+}

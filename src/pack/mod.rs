@@ -1,0 +1,114 @@
+//! The calculation pack: data in, a typeset PDF out.
+//!
+//! | part | what it holds |
+//! |---|---|
+//! | [`data`] | the data file that the templates read, field by field |
+//! | `world` | templates, fonts and data as the files of a closed world |
+//! | `pdf` | compiling the templates and writing the PDF |
+//! | [`audit`] | looking over the finished sheets for overlaps, overflow and missing signs |
+//!
+//! The templates in `templates/` hold no engineering: every number arrives as text, formulas
+//! arrive as trees, drawings as positions in millimetres on paper. Nothing here reads a disk,
+//! a clock or a network, so the same data gives the same bytes anywhere.
+
+pub mod audit;
+pub mod data;
+mod pdf;
+mod world;
+
+use std::fmt;
+use std::time::Duration;
+
+use serde::Serialize;
+
+pub use audit::{Finding, Flaw};
+pub use pdf::evict;
+
+/// A typeset pack.
+#[derive(Debug, Clone)]
+pub struct Typeset {
+    /// The PDF file, PDF/A-3a and PDF/UA-1.
+    pub pdf: Vec<u8>,
+    /// The number of sheets.
+    pub pages: usize,
+    /// What the typesetter complained of; empty for a sound pack.
+    pub warnings: Vec<String>,
+    /// Where the time went.
+    pub times: Times,
+}
+
+/// The time each stage of typesetting took.
+#[derive(Debug, Clone, Copy, Default, PartialEq, Eq)]
+pub struct Times {
+    /// Turning the data into JSON and opening the world: fonts, templates, library.
+    pub fonts: Duration,
+    /// Laying out the sheets.
+    pub compile: Duration,
+    /// Writing the PDF.
+    pub export: Duration,
+}
+
+/// Why a pack could not be typeset.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub enum PackError {
+    /// The data does not turn into JSON.
+    Data(String),
+    /// A template stopped: a missing field, an unknown node, a missing photograph.
+    Template(Vec<String>),
+    /// The PDF could not be written: a sign that no embedded face has, mostly.
+    Export(Vec<String>),
+}
+
+impl fmt::Display for PackError {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        let (what, lines) = match self {
+            Self::Data(line) => ("the pack's data cannot be written", std::slice::from_ref(line)),
+            Self::Template(lines) => ("the pack cannot be set", lines.as_slice()),
+            Self::Export(lines) => ("the PDF cannot be written", lines.as_slice()),
+        };
+        write!(f, "{what}: {}", lines.join("; "))
+    }
+}
+
+impl std::error::Error for PackError {}
+
+/// The PDF of a pack from its data.
+///
+/// `data` serialises to the fields of [`data::Pack`]. `files` are the photographs, each with
+/// the path by which the data names it (`/photo/0.jpg`). `ident` fixes the file's identifier:
+/// give the digest of the job file, so that the same job gives the same bytes.
+///
+/// # Errors
+/// [`PackError`] where the data does not serialise, a template stops, or a sign has no glyph.
+pub fn typeset(
+    data: &impl Serialize,
+    files: &[(String, Vec<u8>)],
+    ident: &str,
+) -> Result<Typeset, PackError> {
+    let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
+    pdf::typeset(json, files, ident)
+}
+
+/// The PDF of a pack from its data as JSON text; otherwise as [`typeset`].
+///
+/// # Errors
+/// As [`typeset`].
+pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
+    pdf::typeset(json.as_bytes().to_vec(), files, ident)
+}
+
+/// The flaws of the finished sheets: text over text, text over the margins, missing signs.
+///
+/// Takes what [`typeset`] takes; meant for tests and for templates of a practice.
+///
+/// # Errors
+/// As [`typeset`].
+pub fn inspect(data: &impl Serialize, files: &[(String, Vec<u8>)]) -> Result<Vec<Finding>, PackError> {
+    let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
+    let world = world::World::new(json, files);
+    let (document, _) = pdf::compile(&world)?;
+    Ok(audit::audit(&document))
+}
+
+#[cfg(test)]
+mod tests;

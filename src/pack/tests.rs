@@ -1,0 +1,84 @@
+//! The sample pack is set, looked over, and set again.
+
+use super::*;
+
+const SAMPLE: &str = include_str!("../../tests/data/sample-pack.json");
+
+#[test]
+fn the_sample_is_set_without_a_warning() {
+    let pack = typeset_json(SAMPLE, &[], "sample").unwrap();
+    assert_eq!(pack.warnings, Vec::<String>::new());
+    assert!(pack.pdf.starts_with(b"%PDF-"));
+    assert!(pack.pages > 3);
+}
+
+#[test]
+fn the_sample_has_no_flaw() {
+    let data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    assert!(flaws.is_empty(), "{}", flaws.join("\n"));
+}
+
+#[test]
+fn the_same_data_gives_the_same_bytes() {
+    let first = typeset_json(SAMPLE, &[], "sample").unwrap();
+    evict(0);
+    let second = typeset_json(SAMPLE, &[], "sample").unwrap();
+    assert!(first.pdf == second.pdf);
+}
+
+/// Two labels at one point and one far right of the frame: the audit must see all three flaws.
+#[test]
+fn the_audit_finds_flaws() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let label = |x: f64, text: &str| {
+        serde_json::json!({"kind": "label", "x": x, "y": 5.0, "anchor": "start", "size": 8.0, "rotate": 0.0,
+            "runs": [{"text": text, "style": "plain"}], "width": 10.0, "height": 3.0, "role": "note"})
+    };
+    let items = [label(10.0, "first"), label(11.0, "second"), label(160.0, "far too far right")];
+    let drawing = serde_json::json!({"name": "flawed", "caption": "flawed", "scale": "1:20", "alt": "flawed",
+        "width": 40.0, "height": 10.0, "items": items});
+    data["sections"][0]["blocks"] = serde_json::json!([{"kind": "drawing", "drawing": drawing}]);
+    let flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
+    assert!(flaws.contains(&Flaw::Overlap("first".into(), "second".into())), "{flaws:?}");
+    assert!(flaws.contains(&Flaw::Outside("far too far right".into())), "{flaws:?}");
+}
+
+#[test]
+fn a_sign_without_a_glyph_is_refused() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    data["cautions"][0] = "The lintel is marked \u{6881}.".into();
+    let error = typeset(&data, &[], "sample").unwrap_err();
+    assert!(matches!(&error, PackError::Export(_)), "{error}");
+    let flaws = inspect(&data, &[]).unwrap();
+    assert!(flaws.iter().any(|finding| matches!(finding.flaw, Flaw::Missing(_))), "{flaws:?}");
+}
+
+#[test]
+fn a_photograph_that_is_not_there_is_named() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    data["photographs"] =
+        serde_json::json!([{"path": "/photo/0.jpg", "caption": "R1 from the garden", "mark": "R1"}]);
+    let error = typeset(&data, &[], "sample").unwrap_err();
+    let PackError::Template(lines) = &error else { panic!("{error}") };
+    assert!(lines.iter().any(|line| line.contains("photo/0.jpg")), "{error}");
+}
+
+/// Words from a job print as they stand: nothing in them is read as markup or code.
+#[test]
+fn words_print_literally() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let words = "#panic(1) *bold* _it_ $x$ <b> @ref [a] \\ // \"q\" = -- `raw`";
+    data["cautions"][0] = words.into();
+    data["job"]["title"] = words.into();
+    data["inputs"] = words.into();
+    let pack = typeset(&data, &[], "sample").unwrap();
+    assert_eq!(pack.warnings, Vec::<String>::new());
+    let all = printed(&data);
+    assert!(all.contains("#panic(1) *bold* _it_ $x$ <b> @ref [a]"), "{all}");
+}
+
+fn printed(data: &serde_json::Value) -> String {
+    let world = world::World::new(serde_json::to_vec(data).unwrap(), &[]);
+    audit::words(&pdf::compile(&world).unwrap().0).join(" ")
+}

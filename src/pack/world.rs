@@ -1,0 +1,128 @@
+//! The closed world in which the templates run: every file is in the program or in memory.
+
+use std::collections::HashMap;
+use std::path::PathBuf;
+use std::sync::OnceLock;
+
+use typst::diag::{FileError, FileResult};
+use typst::foundations::{Bytes, Datetime, Duration};
+use typst::syntax::{FileId, RootedPath, Source, VirtualPath, VirtualRoot};
+use typst::text::{Font, FontBook};
+use typst::utils::LazyHash;
+use typst::{Library, LibraryExt};
+
+/// The templates by their virtual paths; the first is the main one.
+const TEMPLATES: &[(&str, &str)] = &[
+    ("/templates/pack.typ", include_str!("../../templates/pack.typ")),
+    ("/templates/parts/back.typ", include_str!("../../templates/parts/back.typ")),
+    ("/templates/parts/blocks.typ", include_str!("../../templates/parts/blocks.typ")),
+    ("/templates/parts/date.typ", include_str!("../../templates/parts/date.typ")),
+    ("/templates/parts/drawing.typ", include_str!("../../templates/parts/drawing.typ")),
+    ("/templates/parts/front.typ", include_str!("../../templates/parts/front.typ")),
+    ("/templates/parts/furniture.typ", include_str!("../../templates/parts/furniture.typ")),
+    ("/templates/parts/math.typ", include_str!("../../templates/parts/math.typ")),
+    ("/templates/parts/row.typ", include_str!("../../templates/parts/row.typ")),
+    ("/templates/parts/scale.typ", include_str!("../../templates/parts/scale.typ")),
+    ("/templates/parts/schedule.typ", include_str!("../../templates/parts/schedule.typ")),
+    ("/templates/parts/section.typ", include_str!("../../templates/parts/section.typ")),
+    ("/templates/parts/style.typ", include_str!("../../templates/parts/style.typ")),
+];
+
+/// The faces of `fonts/`: text upright, italic and semibold, mathematics, listing.
+const FONTS: &[&[u8]] = &[
+    include_bytes!("../../fonts/STIXTwoText-Regular.ttf"),
+    include_bytes!("../../fonts/STIXTwoText-Italic.ttf"),
+    include_bytes!("../../fonts/STIXTwoText-SemiBold.ttf"),
+    include_bytes!("../../fonts/STIXTwoMath-Regular.ttf"),
+    include_bytes!("../../fonts/IBMPlexMono-Regular.ttf"),
+];
+
+const DATA: &str = "/data.json";
+
+/// What never changes between packs, made once in a process.
+struct Fixed {
+    library: LazyHash<Library>,
+    book: LazyHash<FontBook>,
+    fonts: Vec<Font>,
+    main: FileId,
+    sources: HashMap<FileId, Source>,
+}
+
+fn fixed() -> &'static Fixed {
+    static FIXED: OnceLock<Fixed> = OnceLock::new();
+    FIXED.get_or_init(|| {
+        let fonts: Vec<Font> = FONTS.iter().flat_map(|data| Font::iter(Bytes::new(*data))).collect();
+        let source = |(path, text): &(&str, &str)| {
+            let id = id_of(path).expect("the templates have plain paths");
+            (id, Source::new(id, (*text).to_owned()))
+        };
+        Fixed {
+            library: LazyHash::new(Library::builder().build()),
+            book: LazyHash::new(FontBook::from_fonts(&fonts)),
+            fonts,
+            main: id_of(TEMPLATES[0].0).expect("the main template has a plain path"),
+            sources: TEMPLATES.iter().map(source).collect(),
+        }
+    })
+}
+
+/// The typesetter's name for a virtual path. Names are kept for the life of the process and
+/// there are 65,535 of them, so paths must not vary from pack to pack.
+fn id_of(path: &str) -> Option<FileId> {
+    let path = VirtualPath::new(path).ok()?;
+    Some(RootedPath::new(VirtualRoot::Project, path).intern())
+}
+
+/// One pack's files: templates and fonts from the program, data and photographs from memory.
+pub(super) struct World {
+    files: HashMap<FileId, Bytes>,
+}
+
+impl World {
+    /// The world of one pack. A file whose path is not a plain virtual path is left out, and
+    /// a template that asks for it says that it was not found.
+    pub(super) fn new(json: Vec<u8>, files: &[(String, Vec<u8>)]) -> Self {
+        fixed();
+        let mut held: HashMap<FileId, Bytes> = files
+            .iter()
+            .filter_map(|(path, bytes)| Some((id_of(path)?, Bytes::new(bytes.clone()))))
+            .collect();
+        held.insert(id_of(DATA).expect("the data has a plain path"), Bytes::new(json));
+        Self { files: held }
+    }
+}
+
+impl typst::World for World {
+    fn library(&self) -> &LazyHash<Library> {
+        &fixed().library
+    }
+
+    fn book(&self) -> &LazyHash<FontBook> {
+        &fixed().book
+    }
+
+    fn main(&self) -> FileId {
+        fixed().main
+    }
+
+    fn source(&self, id: FileId) -> FileResult<Source> {
+        fixed().sources.get(&id).cloned().ok_or_else(|| missing(id))
+    }
+
+    fn file(&self, id: FileId) -> FileResult<Bytes> {
+        self.files.get(&id).cloned().ok_or_else(|| missing(id))
+    }
+
+    fn font(&self, index: usize) -> Option<Font> {
+        fixed().fonts.get(index).cloned()
+    }
+
+    /// No clock: a pack's dates come from its data alone.
+    fn today(&self, _offset: Option<Duration>) -> Option<Datetime> {
+        None
+    }
+}
+
+fn missing(id: FileId) -> FileError {
+    FileError::NotFound(PathBuf::from(id.get().vpath().get_with_slash()))
+}
