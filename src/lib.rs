@@ -1,9 +1,20 @@
 //! Perpend: calculation packs for masonry that stays when a load-bearing wall comes out.
+//!
+//! A job file becomes a building, the building is checked on sheets, the sheets and their drawings
+//! become a pack:
+//!
+//! ```text
+//! job (TOML) -> building -> checks + trace -> sketches -> pack (typst) -> PDF
+//! ```
+//!
+//! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
+//! this order: `error quantity trace standards solve job building sketch checks pack report cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
 pub mod building;
 pub mod checks;
+pub mod cli;
 pub mod error;
 pub mod job;
 pub mod pack;
@@ -13,3 +24,86 @@ pub mod sketch;
 pub mod solve;
 pub mod standards;
 pub mod trace;
+
+use std::path::Path;
+
+use sha2::{Digest, Sha256};
+
+use building::Building;
+use checks::Results;
+use error::{Error, Trouble};
+use pack::{Typeset, photograph};
+
+/// The building of a job file and what its checks found. `name` is the file's name for diagnostics.
+///
+/// # Errors
+/// [`Error::Job`] with every diagnostic of the file; [`Error::Internal`] where a sheet would print
+/// something that it did not compute.
+pub fn check(name: &str, text: &str) -> Result<(Building, Results), Error> {
+    let building = job::read(name, text)?;
+    let results = checks::run(&building);
+    if let Some((sheet, fault)) = results.faults().next() {
+        return Err(Error::Internal { step: format!("sheet {sheet}: {}: {}", fault.step, fault.what) });
+    }
+    Ok((building, results))
+}
+
+/// A job file carried through to its pack.
+pub struct Sheeted {
+    /// The building.
+    pub building: Building,
+    /// What its checks found.
+    pub results: Results,
+    /// The PDF.
+    pub typeset: Typeset,
+    /// The file name that the pack wants.
+    pub file_name: String,
+}
+
+/// Checks a job file and sets its pack. Photographs are looked for beside the job file, in `folder`.
+///
+/// # Errors
+/// As [`check`]; [`Error::File`] for a photograph that cannot be used; [`Error::Internal`] where the
+/// pack cannot be set.
+pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
+    let (building, results) = check(name, text)?;
+    let digest = digest(text);
+    let data = report::pack(&building, &results, text, &digest);
+    let files = photographs(&building, folder)?;
+    let typeset = pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+    let file_name = file_name(&building);
+    Ok(Sheeted { building, results, typeset, file_name })
+}
+
+fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Vec<u8>)>, Error> {
+    let taken_in = |(n, p): (usize, &building::Photograph)| {
+        let path = folder.join(&p.file);
+        let shown = path.display().to_string();
+        let bytes = std::fs::read(&path).map_err(|why| Error::File {
+            path: shown.clone(),
+            trouble: Trouble::Read(why),
+            help: "Photographs are looked for beside the job file: check the name under [[photographs]].".to_owned(),
+        })?;
+        let jpeg = photograph::take_in(&bytes).map_err(|why| Error::File {
+            path: shown,
+            trouble: Trouble::Content(why.to_string()),
+            help: "Give a JPEG or PNG that an image viewer opens, of 80 megapixels or less.".to_owned(),
+        })?;
+        Ok((report::photograph_path(n), jpeg))
+    };
+    building.photographs.iter().enumerate().map(taken_in).collect()
+}
+
+/// SHA-256 of a job file's text, in hexadecimal.
+pub fn digest(text: &str) -> String {
+    Sha256::digest(text.as_bytes()).iter().map(|b| format!("{b:02x}")).collect()
+}
+
+/// `2419 Calculations (A).pdf`: letters, digits, space, - _ ( ) and one full stop only.
+pub fn file_name(b: &Building) -> String {
+    let letter = b.revisions.last().map_or("-", |r| r.letter.as_str());
+    let clean = |text: &str| -> String {
+        text.chars().map(|c| if c.is_ascii_alphanumeric() || "-_".contains(c) { c } else { '-' }).collect()
+    };
+    format!("{} Calculations ({}).pdf", clean(&b.identity.number), clean(letter))
+}

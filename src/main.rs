@@ -1,1 +1,5 @@
-fn main() {}
+//! The `perpend` command.
+
+fn main() -> std::process::ExitCode {
+    std::process::ExitCode::from(perpend::cli::run())
+}

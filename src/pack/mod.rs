@@ -14,6 +14,7 @@
 pub mod audit;
 pub mod data;
 mod pdf;
+pub mod photograph;
 mod world;
 
 use std::fmt;

@@ -57,3 +57,8 @@ pub fn of_job(file: &str, b: &Building, results: &Results) -> Json {
 pub fn of_report(file: &str, report: &Report) -> Json {
     json!({"file": file, "outcome": "error", "diagnostics": report.records()})
 }
+
+/// A file that cannot be read, or a fault of the tool.
+pub fn of_error(file: &str, error: &crate::error::Error) -> Json {
+    json!({"file": file, "outcome": "error", "message": error.to_string()})
+}

@@ -98,7 +98,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
             .iter()
             .enumerate()
             .map(|(n, p)| data::Photograph {
-                path: photograph_path(n, &p.file),
+                path: photograph_path(n),
                 caption: p.caption.clone(),
                 mark: p.mark.clone().unwrap_or_default(),
             })
@@ -109,7 +109,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
 }
 
 /// The name by which the pack's data calls photograph `n`; every photograph arrives as JPEG.
-pub fn photograph_path(n: usize, _file: &str) -> String {
+pub fn photograph_path(n: usize) -> String {
     format!("/photo/{n}.jpg")
 }
 

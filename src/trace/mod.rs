@@ -18,6 +18,7 @@
 
 mod entry;
 pub mod expr;
+pub mod glossary;
 mod macros;
 pub mod math;
 mod parse;

@@ -33,3 +33,8 @@ pub fn split(name: &str) -> (String, String) {
 pub fn letter(base: &str) -> &str {
     GREEK.iter().find(|g| g.0 == base).map_or(base, |g| g.1)
 }
+
+/// What a symbol means, for the list of symbols; `None` where the glossary lacks it.
+pub fn meaning(name: &str) -> Option<&'static str> {
+    super::glossary::GLOSSARY.iter().find(|g| g.0 == name).map(|g| g.1)
+}

@@ -1,0 +1,381 @@
+//! `[[returns]]`: what stays and braces.
+
+use super::ground::{self, HEIGHT, STRIP};
+use super::limits::{Limits, Odd};
+use super::names::Names;
+use super::reader::Table;
+use crate::building::{
+    Acts, BaseJoint, BracingWall, BuildUp, Cause, Flange, FloorKind, FromAbove, Head, Load, Path, PlanWall, Proof,
+    Restraint, Return, Stability, Storey,
+};
+use crate::error::Kind;
+use crate::quantity::{Force, Length, Num};
+
+/// Most characters of a mark.
+pub const MARK: usize = 12;
+
+const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[
+    Odd::Below(200.0, "a nib this short is a scar on the wall more than a return; measure it again"),
+    Odd::Above(2500.0, "this is a wall more than a return"),
+]);
+const POSITION: Limits = Limits::new(-100.0, 100.0, "m");
+const MU: Limits = Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
+const TRIBUTARY: Limits = Limits::new(0.0, 20.0, "m").odd(&[Odd::Above(6.0, "wide for one return")]);
+const SUPPORTED: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
+const OPENING: Limits = Limits::new(0.0, 20.0, "m");
+const FORCE: Limits = Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
+const MOMENT: Limits = Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
+const ALONG: Limits = Limits::new(0.0, 6.0, "m");
+const ECCENTRICITY: Limits = Limits::new(-300.0, 300.0, "mm");
+const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm");
+const TO_END: Limits = Limits::new(0.0, 50.0, "m");
+const WALL_LOAD: Limits =
+    Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
+
+/// Coefficient of friction at a dpc: common practice, no published source.
+const MU_USUAL: f64 = 0.4;
+/// Difference of a wall's height from its storey's that passes without a word.
+const HEIGHT_DIFFERS: Length = Length::new(300.0);
+
+/// What a return may refer to.
+pub struct Around<'r, 'a> {
+    /// Build-ups.
+    pub build_ups: &'r Names<'a, BuildUp>,
+    /// Storeys.
+    pub storeys: &'r Names<'a, Storey>,
+    /// Walls of the plan.
+    pub plan: &'r Names<'a, PlanWall>,
+    /// Bracing walls.
+    pub bracing: &'r Names<'a, BracingWall>,
+    /// The storey's stability, with its table.
+    pub stability: Option<(&'r Table<'a>, &'r Stability)>,
+}
+
+/// Reads one return.
+pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
+    let mark = t.need("mark").mark(MARK);
+    let title = t.need("title").line();
+    let build_up = around.build_ups.refer(&t.need("build_up"));
+    let storey = around.storeys.refer(&t.need("storey"));
+    let length: Option<Length> = t.need("length").quantity(&LENGTH);
+    let height: Option<Length> = t.need("height").quantity(&HEIGHT);
+    let position = t.may("position").pair(&POSITION);
+    let (base, base_reason) = base(t);
+    let mu = t.may("mu").factor(MU_USUAL, &MU);
+    let head = head(t, around, mark.as_deref());
+    let (path, strip_height) = path(t);
+    let tributary_width: Option<Length> = t.need("tributary_width").quantity(&TRIBUTARY);
+    let from_above = from_above(t);
+    let restraint = t.need("restraint").choice(Restraint::WORDS, Restraint::from_word);
+    let supported_wall_height: Option<Length> = t.need("supported_wall_height").quantity(&SUPPORTED);
+    let nearest_opening = t.may("nearest_opening").quantity(&OPENING);
+    let acts = t.may("acts");
+    let acts = if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
+    let wall = build_up.as_ref().and_then(|b| around.build_ups.item(b));
+    let loads: Vec<Option<Load>> = t.may("loads").tables(&format!("{}, load", t.name), "what").iter().map(|lt| load(lt, t, length, wall)).collect();
+    let junction = t.need("junction").table(&format!("{}, junction", t.name)).and_then(|j| junction(&j, around));
+
+    if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
+        against_storey(t, height, seen.item.as_ref(), &seen.table);
+        restraint_fits(t, restraint, seen.item.as_ref(), &seen.table);
+    }
+    if let (Some(height), Some(supported)) = (height, supported_wall_height)
+        && supported < height
+    {
+        t.clash("the wall that it buttresses is lower than the return", "supported_wall_height", "height")
+            .allowed("the overall height of the supported wall, all storeys")
+            .help("correct one of the two");
+    }
+    if acts == Some(Acts::Each) && wall.is_some_and(|w| w.leaves.len() == 1) {
+        t.clash("each leaf is to act, but the build-up has one leaf", "acts", "build_up")
+            .allowed("\"each leaf\" with two leaves")
+            .help("take `acts` out, or correct the build-up");
+    }
+    if let (Some(width), Some((st, stability))) = (tributary_width, around.stability)
+        && width > stability.front.1 - stability.front.0 + Length::new(1.0)
+    {
+        t.fault(Kind::Contradiction, "its tributary width is more than the whole wind face")
+            .at(t.place("tributary_width"), "tributary width")
+            .and(st.place("front"), "extent of the wind face")
+            .allowed("half the distance to the next support on each side")
+            .help("correct one of the two");
+    }
+    if tributary_width == Some(Length::ZERO) {
+        t.warn("tributary width is 0: no wind at all comes to it");
+    }
+    if !t.has("loads") {
+        t.warn("no load from above is given; its own weight alone holds it down");
+    }
+    Some(Return {
+        mark: mark?,
+        title: title?,
+        build_up: build_up?,
+        storey: storey?,
+        length: length?,
+        height: height?,
+        position,
+        base: base?,
+        base_reason: base_reason?,
+        mu: mu.map(|c| Cause { value: Num::from(c.value), reason: c.reason })?,
+        head: head?,
+        path: path?,
+        tributary_width: tributary_width?,
+        strip_height,
+        from_above: from_above?,
+        restraint: restraint?,
+        supported_wall_height: supported_wall_height?,
+        nearest_opening,
+        acts: acts?,
+        loads: loads.into_iter().collect::<Option<_>>()?,
+        junction: junction?,
+    })
+}
+
+fn base(t: &Table<'_>) -> (Option<BaseJoint>, Option<String>) {
+    let base = t.need("base").choice(BaseJoint::WORDS, BaseJoint::from_word);
+    match (base, t.has("base_reason")) {
+        (Some(BaseJoint::Bonded), false) => {
+            t.fault(Kind::Missing, "the base is bonded, but `base_reason` is missing")
+                .at(t.place("base"), "bonded")
+                .allowed("\"bonded\" with the reason, or \"dpc\"")
+                .help("add base_reason = \"who saw it, where and when\", or write base = \"dpc\"");
+            (base, None)
+        }
+        (Some(BaseJoint::Dpc), true) => {
+            t.clash("`base_reason` is why a base is bonded, but the base is a dpc", "base_reason", "base")
+                .allowed("`base_reason` with base = \"bonded\"")
+                .help("take `base_reason` out, or correct the base");
+            (base, None)
+        }
+        (Some(BaseJoint::Dpc), false) => (base, Some(String::new())),
+        _ => (base, t.may("base_reason").text()),
+    }
+}
+
+fn head<'a>(t: &Table<'a>, around: &Around<'_, 'a>, mark: Option<&str>) -> Option<Head> {
+    let word = t.need("head").pick(&[("free", false), ("propped", true)]);
+    let given = t.has("propped_by");
+    let along = around.stability.map(|(_, s)| s.wind_along);
+    let by = if given { ground::props(&t.need("propped_by"), around.bracing, along, mark) } else { None };
+    match (word?, given) {
+        (true, false) => {
+            t.fault(Kind::Contradiction, "the head is propped, but `propped_by` is missing")
+                .at(t.place("head"), "propped by what?")
+                .and(t.head(), "has no `propped_by`")
+                .allowed("\"propped\" with the marks of the walls that take the reaction, or \"free\"")
+                .help("add propped_by = [\"...\"] with marks of [[bracing]] walls, or write head = \"free\"");
+            None
+        }
+        (false, true) => {
+            t.clash("the head is free, but `propped_by` names walls", "head", "propped_by")
+                .allowed("`propped_by` with head = \"propped\"")
+                .help("write head = \"propped\", or take `propped_by` out");
+            None
+        }
+        (true, true) => by.map(Head::Propped),
+        (false, false) => Some(Head::Free),
+    }
+}
+
+fn path(t: &Table<'_>) -> (Option<Path>, Option<Length>) {
+    let path = t.need("path").choice(Path::WORDS, Path::from_word);
+    let strip = t.may("strip_height").quantity(&STRIP);
+    match path {
+        Some(Path::UpAndDown | Path::Both) if !t.has("strip_height") => {
+            t.fault(Kind::Contradiction, "the floor brings wind to its head, but `strip_height` is missing")
+                .at(t.place("path"), "through the floor")
+                .and(t.head(), "has no `strip_height`")
+                .allowed("the height of wind face that the floor collects")
+                .help("add strip_height = \"... m\": half this storey and half the one above, or to the ridge");
+        }
+        Some(Path::Sideways) if t.has("strip_height") => {
+            t.clash("the wind comes sideways, but `strip_height` is what a floor collects", "strip_height", "path")
+                .allowed("`strip_height` with path = \"up and down\" or \"both\"")
+                .help("take `strip_height` out, or name the other path");
+        }
+        _ => {}
+    }
+    (path, strip)
+}
+
+fn from_above(t: &Table<'_>) -> Option<FromAbove> {
+    if !t.has("from_above") {
+        return Some(FromAbove::default());
+    }
+    let above = t.need("from_above").table(&format!("{}, from above", t.name))?;
+    let force = above.need("force").quantity(&FORCE);
+    let moment = above.need("moment").quantity(&MOMENT);
+    above.finish();
+    Some(FromAbove { force: force?, moment: moment? })
+}
+
+fn load(t: &Table<'_>, owner: &Table<'_>, length: Option<Length>, wall: Option<&BuildUp>) -> Option<Load> {
+    let what = t.need("what").line();
+    let dead: Option<Force> = t.need("dead").quantity(&FORCE);
+    let imposed = t.need("imposed").quantity(&FORCE);
+    let uplift: Option<Force> = t.may("uplift").quantity(&FORCE);
+    let at: Option<Length> = t.need("at").quantity(&ALONG);
+    let eccentricity: Option<Length> = t.may("eccentricity").quantity(&ECCENTRICITY);
+    let leaf = t.may("leaf").whole(&[1, 2]);
+    let source = t.may("source").text();
+    t.finish();
+
+    if let (Some(at), Some(length)) = (at, length)
+        && at > length
+    {
+        t.fault(Kind::Contradiction, "it stands beyond the end of the return")
+            .at(t.place("at"), "place of the load")
+            .and(owner.place("length"), "length of the return")
+            .allowed("0 mm at the junction end to the length of the return at its free end")
+            .help("correct one of the two");
+    }
+    if let (Some(dead), Some(uplift)) = (dead, uplift)
+        && uplift * 1.5 > dead * 0.9
+    {
+        t.warn("the uplift is more than its dead load holds down");
+    }
+    let place = match (leaf, wall) {
+        (Some(leaf), Some(wall)) if usize::from(leaf) > wall.leaves.len() => {
+            t.fault(Kind::Contradiction, "it stands on leaf 2 of a wall of one leaf")
+                .at(t.place("leaf"), "leaf")
+                .and(owner.place("build_up"), "one leaf")
+                .allowed("1 for the outer leaf, 2 for the inner")
+                .help("take `leaf` out, or correct the build-up");
+            return None;
+        }
+        (Some(leaf), _) => usize::from(leaf) - 1,
+        (None, Some(wall)) => wall.loaded().0,
+        (None, None) => 0,
+    };
+    if let (Some(e), Some(leaf)) = (eccentricity, wall.and_then(|w| w.leaves.get(place))) {
+        let thickness = leaf.thickness;
+        if e.abs() * 2.0 > thickness {
+            t.fault(Kind::Contradiction, "it stands beside the leaf that carries it")
+                .at(t.place("eccentricity"), "from the middle of the leaf")
+                .and(owner.place("build_up"), format!("that leaf is {:.1} mm thick", thickness.base()))
+                .allowed("at most half the thickness to either side")
+                .help("correct the eccentricity, or the leaf");
+        } else if e.abs() * 3.0 > thickness {
+            t.warn("the load stands in the outer sixth of the leaf");
+        }
+    }
+    Some(Load {
+        what: what?,
+        dead: dead?,
+        imposed: imposed?,
+        uplift: uplift.unwrap_or(Force::ZERO),
+        at: at?,
+        eccentricity: eccentricity.unwrap_or(Length::ZERO),
+        leaf: place,
+        source: source.unwrap_or_default(),
+    })
+}
+
+fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Flange> {
+    let entry = t.need("to");
+    let to = if around.plan.is_empty() { entry.line() } else { around.plan.refer(&entry) };
+    let bonded = t.need("bonded").flag();
+    let proof = t.may("proof").pick(&[("seen", Proof::Seen), ("assumed", Proof::Assumed)]);
+    let words = t.may("words").text();
+    let thickness: Option<Length> = t.need("thickness").quantity(&THICKNESS);
+    let left = t.need("left").quantity(&TO_END);
+    let right = t.need("right").quantity(&TO_END);
+    let next_wall_left = t.may("next_wall_left").quantity(&TO_END);
+    let next_wall_right = t.may("next_wall_right").quantity(&TO_END);
+    let dead = t.need("dead").quantity(&WALL_LOAD);
+    t.finish();
+
+    if bonded == Some(true) {
+        for key in ["proof", "words"].into_iter().filter(|key| !t.has(key)) {
+            t.fault(Kind::Contradiction, format_args!("it is bonded, but `{key}` is missing"))
+                .at(t.place("bonded"), "how is that known?")
+                .and(t.head(), format!("has no `{key}`"))
+                .allowed("bonded = true with proof = \"seen\" or \"assumed\", and the words for it")
+                .help("add proof = \"seen\" and words = \"who, where, when\"; or proof = \"assumed\", a hold point");
+        }
+    }
+    let leaf = to.as_ref().and_then(|to| around.plan.item(to)).and_then(|w| around.build_ups.item(&w.build_up));
+    if let (Some(thickness), Some(wall)) = (thickness, leaf) {
+        let met = wall.loaded().1.thickness;
+        if (thickness - met).abs() > Length::new(1.0) {
+            t.warn(format_args!(
+                "thickness is {:.1} mm, but the loaded leaf of \"{}\" is {:.1} mm",
+                thickness.base(),
+                wall.name,
+                met.base()
+            ));
+        }
+    }
+    Some(Flange {
+        to: to?,
+        bonded: bonded?,
+        proof: proof.unwrap_or(Proof::Assumed),
+        words: words.unwrap_or_default(),
+        thickness: thickness?,
+        left: left?,
+        right: right?,
+        next_wall_left,
+        next_wall_right,
+        dead: dead?,
+    })
+}
+
+/// Holds the height of a return or panel against its storey.
+pub fn against_storey(t: &Table<'_>, height: Option<Length>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+    let (Some(height), Some(storey)) = (height, storey) else { return };
+    if height > storey.total_height {
+        t.fault(Kind::Contradiction, "it is higher than the whole structure above its storey's base")
+            .at(t.place("height"), "height")
+            .and(storey_table.place("total_height"), "total height")
+            .allowed("the clear height between its supports")
+            .help("correct one of the two");
+    } else if (height - storey.clear_height).abs() > HEIGHT_DIFFERS {
+        t.warn(format_args!(
+            "height is {:.0} mm, but storey \"{}\" is {:.0} mm high",
+            height.base(),
+            storey.mark,
+            storey.clear_height.base()
+        ));
+    }
+}
+
+fn restraint_fits(t: &Table<'_>, restraint: Option<Restraint>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+    let (Some(Restraint::Concrete), Some(storey)) = (restraint, storey) else { return };
+    if storey.floor_above != FloorKind::Concrete {
+        t.fault(Kind::Contradiction, "a concrete floor is to hold its head, but the storey has none above")
+            .at(t.place("restraint"), "what holds head and foot")
+            .and(storey_table.place("floor_above"), "what is above")
+            .allowed("\"concrete floor\" under a concrete floor")
+            .help("write restraint = \"timber floor\" or \"none\", or correct the floor above the storey");
+    }
+}
+
+/// Holds the returns against each other: a wall that props another must not need a prop itself, and
+/// more tributary width than front is said aloud.
+pub fn together(returns: &Names<'_, Return>, around: &Around<'_, '_>) {
+    for seen in returns.iter() {
+        let Some(Return { head: Head::Propped(by), .. }) = &seen.item else { continue };
+        for mark in by {
+            if let Some(prop) = returns.get(mark)
+                && matches!(&prop.item, Some(Return { head: Head::Propped(_), .. }))
+            {
+                seen.table
+                    .fault(Kind::Contradiction, format_args!("\"{mark}\" props it, and needs a prop itself"))
+                    .at(seen.table.place("propped_by"), "propped by")
+                    .and(prop.table.place("head"), "propped as well")
+                    .allowed("walls whose own head is free")
+                    .help("name the walls at which the force ends");
+            }
+        }
+    }
+    let Some((st, stability)) = around.stability else { return };
+    let sum: Length = returns.iter().filter_map(|s| s.item.as_ref()).map(|r| r.tributary_width).sum();
+    let front = stability.front.1 - stability.front.0;
+    if sum > front + Length::new(1.0) {
+        st.warn(format_args!(
+            "the returns' tributary widths add up to {:.2} m on a front of {:.2} m",
+            sum.base() / 1e3,
+            front.base() / 1e3
+        ));
+    }
+}

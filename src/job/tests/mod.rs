@@ -1,0 +1,66 @@
+//! The reader against good jobs, bad jobs and noise.
+
+mod bad;
+mod noise;
+
+use super::read;
+
+/// A whole valid job, apart from the demo jobs so that those may change.
+const GOOD: &str = include_str!("good.toml");
+
+/// Every demo job, by file name.
+const DEMOS: &[(&str, &str)] = &[
+    ("rear-opening.toml", super::start::TEMPLATE),
+    ("short-nib.toml", include_str!("../../../jobs/short-nib.toml")),
+    ("lime-terrace.toml", include_str!("../../../jobs/lime-terrace.toml")),
+    ("concrete-hall.toml", include_str!("../../../jobs/concrete-hall.toml")),
+    ("hold-points.toml", include_str!("../../../jobs/hold-points.toml")),
+];
+
+#[test]
+fn every_demo_job_reads_without_error_or_warning_and_says_what_it_shows() {
+    for (name, text) in DEMOS {
+        assert!(text.starts_with("# Shows "), "{name} does not say in its first line what it shows");
+        match read(name, text) {
+            Ok(building) => assert_eq!(building.warnings, Vec::<String>::new(), "{name}"),
+            Err(report) => panic!("{}", report.render(false)),
+        }
+    }
+}
+
+#[test]
+fn the_fixture_becomes_the_building_that_it_describes() {
+    let building = read("good.toml", GOOD).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    insta::with_settings!({ prepend_module_to_snapshot => false }, {
+        insta::assert_debug_snapshot!("building", building);
+    });
+}
+
+#[test]
+fn nothing_given_for_a_thing_means_its_usual_value() {
+    let building = read("good.toml", GOOD).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    let r2 = building.returns.iter().find(|r| r.mark == "R2").expect("the fixture has R2");
+    assert_eq!(r2.mu.value.base(), 0.4);
+    assert!(r2.mu.reason.is_empty());
+    // The inner leaf is the loaded one, and a load without a leaf stands on the only one.
+    assert_eq!(building.build_ups[0].loaded().0, 1);
+    assert_eq!(r2.loads[0].leaf, 0);
+    assert_eq!(building.basis.helping_factor.value, 0.9);
+}
+
+#[test]
+fn a_chase_comes_off_the_leaf() {
+    let text = GOOD.replacen("thickness = \"102.5 mm\"", "thickness = \"102.5 mm\"\nchase = \"20 mm\"", 1);
+    let building = read("chase.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    let leaf = &building.build_ups[0].leaves[0];
+    assert_eq!((leaf.thickness.base(), leaf.chase.base()), (82.5, 20.0));
+}
+
+#[test]
+fn one_factor_on_everything_sets_all_three() {
+    let text = GOOD.replacen("[basis]", "[basis]\ngamma_M = { value = 3.0, reason = \"existing walls\" }", 1);
+    let basis = read("gamma.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false))).basis;
+    for factor in [basis.gamma_m_compression, basis.gamma_m_flexure, basis.gamma_m_shear] {
+        assert_eq!(factor.map(|c| c.value), Some(3.0));
+    }
+}

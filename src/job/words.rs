@@ -1,0 +1,54 @@
+//! The words of the job file for the kinds that the standards' tables are entered with.
+
+use crate::standards::masonry::{Edge, Mortar, TerrainCategory, UnitKind};
+
+/// Kinds of unit.
+pub const UNITS: &[(&str, UnitKind)] = &[
+    ("clay brick", UnitKind::ClayBrick),
+    ("calcium silicate brick", UnitKind::CalciumSilicateBrick),
+    ("concrete brick", UnitKind::ConcreteBrick),
+    ("aggregate block", UnitKind::AggregateBlock),
+    ("aac block", UnitKind::AacBlock),
+    ("manufactured stone", UnitKind::ManufacturedStone),
+    ("natural stone", UnitKind::NaturalStone),
+];
+
+/// Mortars.
+pub const MORTARS: &[(&str, Mortar)] = &[
+    ("M12", Mortar::M12),
+    ("M6", Mortar::M6),
+    ("M4", Mortar::M4),
+    ("M2", Mortar::M2),
+    ("lime", Mortar::Lime),
+];
+
+/// Terrain categories.
+pub const TERRAIN: &[(&str, TerrainCategory)] = &[
+    ("0", TerrainCategory::Sea),
+    ("I", TerrainCategory::I),
+    ("II", TerrainCategory::II),
+    ("III", TerrainCategory::III),
+    ("IV", TerrainCategory::IV),
+];
+
+/// Edges of a panel.
+pub const EDGES: &[(&str, Edge)] =
+    &[("free", Edge::Free), ("simple", Edge::Simple), ("continuous", Edge::Continuous)];
+
+/// Links of the chain from the wind face to the ground, in its order.
+pub const LINKS: &[&str] = &[
+    "wind face",
+    "panel",
+    "floor edge",
+    "diaphragm",
+    "bracing wall",
+    "junction",
+    "dpc",
+    "footing",
+];
+
+/// Where north is on the page, degrees clockwise from its top.
+pub const NORTH: &[(&str, f64)] = &[("up", 0.0), ("right", 90.0), ("down", 180.0), ("left", 270.0)];
+
+/// A turn in degrees.
+pub const TURN: super::limits::Limits = super::limits::Limits::new(0.0, 360.0, "");
