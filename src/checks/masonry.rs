@@ -145,7 +145,8 @@ fn compressive_strength(
             "3.6.1.2(6)",
             k_c = Num::new(compressive::COLLAR_JOINT)
         );
-        calc!(s, "3.6.1.2(6)", "constant K, joint parallel to the face", K = k_c * K);
+        given!(s, "constant K of the table", "above", K_t = K);
+        calc!(s, "3.6.1.2(6)", "constant K, joint parallel to the face", K = k_c * K_t);
         K
     } else {
         K
@@ -154,9 +155,9 @@ fn compressive_strength(
         Mortar::Lime => "lime mortar: cautious assumption from memory (L)",
         _ => "EN 998-2, strength class",
     };
-    given!(s, "mortar strength", strength_source, f_m = material.mortar.f_m() * MPA);
+    given!(s, "mortar strength", strength_source, f_mc = material.mortar.f_m() * MPA);
     let limit = "3.6.1.2(2), UK NA: limits of f_b and f_m";
-    calc!(s, limit, "mortar strength that counts", f_m = min(f_m, min(12.0 * MPA, 2.0 * f_b)));
+    calc!(s, limit, "mortar strength that counts", f_m = min(f_mc, min(12.0 * MPA, 2.0 * f_b)));
     calc!(s, limit, "unit strength that counts", f_bl = min(f_b, 110.0 * MPA));
     calc!(
         s,

@@ -17,7 +17,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                 continue;
             }
             let thickness = print::show("t", leaf.thickness.dynamic());
-            s.heading(2, format!("{}, {thickness}, in {}", material.name, build_up.name));
+            s.heading(1, format!("{}, {thickness}, in {}", material.name, build_up.name));
             if let Some(source) = &material.source {
                 s.note(format!("How it is known: {source}."));
             }

@@ -88,10 +88,18 @@ pub fn links(b: &Building) -> Vec<Link> {
 pub fn holds(b: &Building) -> Vec<Hold> {
     let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
     let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
-        let words = l.words.trim_end_matches('.').to_owned();
-        (format!("Before the wall comes down ({}): {words}.", l.link), l.of, None)
+        let words = l.words.trim_end_matches('.');
+        let begins = words.to_lowercase().starts_with("before the wall comes down");
+        let text = if begins { format!("{words}.") } else { format!("Before the wall comes down ({}): {words}.", l.link) };
+        (text, l.of, None)
     });
-    let junctions = b.returns.iter().filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed).map(|r| {
+    let told = |mark: &str| {
+        b.links.iter().any(|l| {
+            l.link == "junction" && l.proof == Proof::Assumed && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
+        })
+    };
+    let unseen = b.returns.iter().filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
+    let junctions = unseen.map(|r| {
         let text = format!(
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",
             r.mark, r.junction.to, r.junction.words

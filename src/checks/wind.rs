@@ -27,7 +27,7 @@ pub fn pressures(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Pressures
     let stated = b.wind.stated.as_ref();
     let terrain = match &b.wind.terrain {
         Some(t) => {
-            s.heading(2, "By terrain category");
+            s.heading(1, "By terrain category");
             Some(by_terrain(s, t, smallest_panel(b), annex)?)
         }
         None => None,
@@ -51,7 +51,7 @@ pub fn pressures(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Pressures
 }
 
 fn by_statement(s: &mut Sheet, st: &StatedWind) -> Pressures {
-    s.heading(2, "Stated");
+    s.heading(1, "Stated");
     let source = format!("stated: {}", st.reason);
     given!(s, "net overall pressure, for returns and storeys", &source, q_net = st.overall);
     let overall = q_net;

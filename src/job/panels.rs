@@ -7,7 +7,6 @@ use super::returns::{Around, MARK, against_storey};
 use super::words::EDGES;
 use crate::building::{Arching, Edge, Panel, PanelRoute, Sharing, Span};
 use crate::error::Kind;
-use crate::quantity::Length;
 use crate::standards::masonry;
 
 const LENGTH: Limits = Limits::new(0.3, 20.0, "m").odd(&[

@@ -63,7 +63,8 @@ pub fn ratio(x: f64) -> String {
     // A ratio of exactly two decimals must not be pushed up by its binary tail.
     let hundredths = (x * 100.0 - 1e-9).ceil() / 100.0;
     let hundredths = if x > 1.0 && hundredths <= 1.0 { 1.01 } else { hundredths };
-    format!("{:.2}", hundredths.max(0.0))
+    // Adding nought turns a negative nought into nought.
+    format!("{:.2}", hundredths.max(0.0) + 0.0)
 }
 
 /// A number as a formula writes it: `0.065`, `2`, without digits it does not need.

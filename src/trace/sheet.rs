@@ -49,6 +49,8 @@ pub struct Sheet {
     /// The case printed with each verdict until it changes.
     pub case: String,
     scope: HashMap<String, Dyn>,
+    /// How each standing symbol was last printed, so that nothing is printed twice.
+    printed: HashMap<String, String>,
 }
 
 impl Sheet {
@@ -82,9 +84,14 @@ impl Sheet {
         self.push(|| Entry::Heading(level, text.into()));
     }
 
-    /// A remark.
+    /// A remark, once.
     pub fn note(&mut self, text: impl Into<String>) {
-        self.push(|| Entry::Note(text.into()));
+        if self.recording {
+            let entry = Entry::Note(text.into());
+            if !self.entries.contains(&entry) {
+                self.entries.push(entry);
+            }
+        }
     }
 
     /// A table, made only when recording.
@@ -114,8 +121,11 @@ impl Sheet {
         self.outside.push(outside);
     }
 
-    /// Records an input; see [`given!`](crate::given).
+    /// Records an input, unless it stands already with this value; see [`given!`](crate::given).
     pub fn given(&mut self, name: &str, words: &str, source: &str, value: Dyn) {
+        if self.scope.get(name).is_some_and(|there| there.same(value)) {
+            return;
+        }
         let value = self.stand(name, value);
         self.entries.push(Entry::Given { value, words: words.to_owned(), source: source.to_owned() });
     }
@@ -163,7 +173,14 @@ impl Sheet {
             }
             None => self.fault(printed, "the printed formula cannot be evaluated".to_owned()),
         }
+        // The same formula with the same symbols as the last time stands above.
+        if self.scope.get(name).is_some_and(|there| there.same(value))
+            && self.printed.get(name).is_some_and(|last| *last == signature(tokens, symbols))
+        {
+            return;
+        }
         let result = self.stand(name, value);
+        self.printed.insert(name.to_owned(), signature(tokens, symbols));
         self.entries.push(Entry::Step(Step {
             words: words.to_owned(),
             clause: clause.to_owned(),
@@ -175,6 +192,9 @@ impl Sheet {
 
     /// Records a branch; see [`decide!`](crate::decide).
     pub fn decide(&mut self, words: &str, clause: &str, tokens: &str, holds: bool, symbols: &[(&str, Dyn)]) {
+        if self.said(tokens, symbols) {
+            return;
+        }
         if let Some(relation) = self.relation(tokens, holds, symbols) {
             self.entries.push(Entry::Decide { relation, words: words.to_owned(), clause: clause.to_owned() });
         }
@@ -229,6 +249,17 @@ impl Sheet {
         self.faults.push(Fault { step, what });
     }
 
+    /// Whether this relation with these values was printed last time it came up.
+    fn said(&mut self, tokens: &str, symbols: &[(&str, Dyn)]) -> bool {
+        let now = signature(tokens, symbols);
+        let key = format!("?{tokens}");
+        if self.printed.get(&key).is_some_and(|last| *last == now) {
+            return true;
+        }
+        self.printed.insert(key, now);
+        false
+    }
+
     fn push(&mut self, entry: impl FnOnce() -> Entry) {
         if self.recording {
             self.entries.push(entry());
@@ -237,6 +268,7 @@ impl Sheet {
 
     fn stand(&mut self, name: &str, value: Dyn) -> Value {
         self.scope.insert(name.to_owned(), value);
+        self.printed.remove(name);
         Value { name: name.to_owned(), value }
     }
 
@@ -282,6 +314,12 @@ fn use_ratio(demand: f64, resistance: f64, holds: bool) -> f64 {
         f64::INFINITY
     };
     if !holds && ratio <= 1.0 { 1.0_f64.next_up() } else { ratio }
+}
+
+/// A formula with the values it was worked with.
+fn signature(tokens: &str, symbols: &[(&str, Dyn)]) -> String {
+    let values: Vec<String> = symbols.iter().map(|(n, v)| format!("{n}={:x}", v.value.to_bits())).collect();
+    format!("{tokens}|{}", values.join(","))
 }
 
 fn values(symbols: &[(&str, Dyn)]) -> Vec<Value> {

@@ -62,7 +62,7 @@ pub fn models(s: &mut Sheet, i: &Inputs<'_>, change: Change) -> Result<Vec<Model
     for &k in &acting {
         let share = (build_up.leaves[k].thickness / total).base();
         if acting.len() > 1 {
-            s.heading(2, format!("{} leaf", if k == 0 { "Outer" } else { "Inner" }));
+            s.heading(1, format!("{} leaf", if k == 0 { "Outer" } else { "Inner" }));
         }
         let mut m = leaf(s, i, build_up, k, share, change)?;
         if acting.len() > 1 {
@@ -261,9 +261,12 @@ fn lateral(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> L
             "thickness over the sum of the leaves that act",
             k_l = Num::new(share)
         );
-        calc!(s, "statics", "line load on this leaf", w_k = k_l * w_k);
-        calc!(s, "statics", "head force on this leaf", H_k = k_l * H_k);
-        calc!(s, "statics", "head moment on this leaf", M_k = k_l * M_k);
+        given!(s, "line load on the whole return", "above", w_a = w_k);
+        given!(s, "head force on the whole return", "above", H_a = H_k);
+        given!(s, "head moment on the whole return", "above", M_a = M_k);
+        calc!(s, "statics", "line load on this leaf", w_k = k_l * w_a);
+        calc!(s, "statics", "head force on this leaf", H_k = k_l * H_a);
+        calc!(s, "statics", "head moment on this leaf", M_k = k_l * M_a);
         (w_k, H_k, M_k)
     } else {
         (w_k, H_k, M_k)

@@ -32,7 +32,7 @@ pub struct Checked {
 pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
     let r = i.ret;
     s.drawings(&[&format!("{}-elevation", r.mark), &format!("{}-section", r.mark)]);
-    s.heading(2, "Geometry, loads and wind");
+    s.heading(1, "Geometry, loads and wind");
     let models = match build::models(s, i, Change::NONE) {
         Ok(models) => models,
         Err(outside) => {
@@ -44,9 +44,9 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
     let mut out = Vec::new();
     for m in models {
         if !m.leaf.is_empty() {
-            s.heading(2, format!("{}leaf", m.leaf.replace('-', " ")));
+            s.heading(1, format!("{}leaf", m.leaf.replace('-', " ")));
         }
-        s.heading(2, "Strength and slenderness");
+        s.heading(1, "Strength and slenderness");
         let matrix = run::prepare(s, &m, i.annex).map(|ready| {
             let matrix = run::Matrix::run(&m, i.annex, ready);
             let mu_source = if r.mu.reason.is_empty() {
@@ -59,10 +59,10 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         });
         out.push((m, matrix));
     }
-    s.heading(2, "By rule, for information");
+    s.heading(1, "By rule, for information");
     rules::by_rule(s, r.length, r.supported_wall_height, r.nearest_opening);
     if !s.holds() {
-        s.heading(2, "What would make it pass");
+        s.heading(1, "What would make it pass");
         s.table(|| remedy::table(i));
         other_paths(s, i);
     }

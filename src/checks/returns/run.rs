@@ -1,11 +1,12 @@
 //! Every check under every case: silently first, then the worst of each on the sheet, named.
 
-use super::actions::{self, Case};
+use super::actions::{self, Case, Direction};
 use super::model::{At, Model};
 use super::vertical::{Reductions, Slender};
 use super::{flexure, in_plane, sliding, vertical};
 use crate::quantity::{Num, Stress, print};
 use crate::standards::annex::Annex;
+use crate::standards::en1990::Combination;
 use crate::trace::{Column, Sheet, Table};
 
 /// One check of a return in one case. The order is the order on the sheet.
@@ -23,7 +24,9 @@ pub enum Check {
     Junction,
     /// Shear at the head.
     ShearHead,
-    /// Flexure at mid-height (head held), or information at a bonded foot.
+    /// Mid-height of a return whose head is held: no tension, or flexure with precompression.
+    Middle,
+    /// Flexure at a bonded foot, for information.
     Flexure,
     /// Vertical resistance at the head.
     VerticalHead,
@@ -35,13 +38,14 @@ pub enum Check {
 
 impl Check {
     /// Every check, in order.
-    pub const ALL: [Self; 10] = [
+    pub const ALL: [Self; 11] = [
         Self::Overturning,
         Self::Toe,
         Self::Shear,
         Self::Sliding,
         Self::Junction,
         Self::ShearHead,
+        Self::Middle,
         Self::Flexure,
         Self::VerticalHead,
         Self::VerticalMiddle,
@@ -57,6 +61,7 @@ impl Check {
             Self::Sliding => "sliding",
             Self::Junction => "junction",
             Self::ShearHead => "shear-head",
+            Self::Middle => "middle",
             Self::Flexure => "flexure",
             Self::VerticalHead => "vertical-head",
             Self::VerticalMiddle => "vertical-middle",
@@ -64,19 +69,20 @@ impl Check {
         }
     }
 
-    /// A short heading for the table of cases.
+    /// Its name in the table of cases.
     const fn head(self) -> &'static str {
         match self {
-            Self::Overturning => "overt.",
+            Self::Overturning => "overturning",
             Self::Toe => "toe",
             Self::Shear => "shear",
             Self::Sliding => "sliding",
             Self::Junction => "junction",
-            Self::ShearHead => "head",
+            Self::ShearHead => "shear, head",
+            Self::Middle => "mid-height",
             Self::Flexure => "flexure",
-            Self::VerticalHead => "N head",
-            Self::VerticalMiddle => "N middle",
-            Self::VerticalFoot => "N foot",
+            Self::VerticalHead => "vertical, head",
+            Self::VerticalMiddle => "vertical, middle",
+            Self::VerticalFoot => "vertical, foot",
         }
     }
 
@@ -85,17 +91,17 @@ impl Check {
         match self {
             Self::Sliding => m.dpc,
             Self::Junction => m.flange.is_some(),
-            Self::Flexure => m.propped || !m.dpc,
+            Self::Middle => m.propped,
+            Self::Flexure => !m.dpc && !m.propped,
             _ => true,
         }
     }
 
     /// Where along the height it looks.
-    fn section(self, m: &Model) -> At {
+    fn section(self) -> At {
         match self {
             Self::ShearHead | Self::VerticalHead => At::Head,
-            Self::VerticalMiddle => At::Middle,
-            Self::Flexure if m.propped => At::Middle,
+            Self::VerticalMiddle | Self::Middle => At::Middle,
             _ => At::Foot,
         }
     }
@@ -146,7 +152,7 @@ impl Matrix {
         let cases = Case::all();
         let checks: Vec<Check> = Check::ALL
             .into_iter()
-            .filter(|c| c.applies(m) && !(*c == Check::Flexure && !m.propped))
+            .filter(|c| c.applies(m) && *c != Check::Flexure)
             .collect();
         let ratio = |case: Case, check: Check| {
             let mut s = Sheet::silent();
@@ -168,27 +174,32 @@ impl Matrix {
         self.ratios.iter().flatten().copied().filter(|r| !r.is_nan()).fold(0.0, f64::max)
     }
 
-    /// The table of all ratios, the worst of each check marked.
+    /// The table of all ratios, the worst of each check marked: a row a check, a column a case.
     pub fn table(&self) -> Table {
-        let mut columns = vec![Column::words("case")];
-        columns.extend(self.checks.iter().map(|c| Column::numbers(c.head())));
+        let mut columns = vec![Column::words("check")];
+        columns.extend(self.cases.iter().map(|c| Column::numbers(&short(*c))));
         let cell = |i: usize, k: usize| {
             let r = self.ratios[i][k];
-            let text = if r.is_nan() { "–".to_owned() } else { print::ratio(r) };
-            if self.worst(k) == Some(i) { format!("{text}*") } else { text }
+            if r.is_nan() {
+                return "–".to_owned();
+            }
+            let mark = if self.worst(k) == Some(i) { "*" } else { "" };
+            format!("{}{mark}", print::ratio(r))
         };
         let rows = self
-            .cases
+            .checks
             .iter()
             .enumerate()
-            .map(|(i, c)| {
-                let mut row = vec![c.name()];
-                row.extend((0..self.checks.len()).map(|k| cell(i, k)));
+            .map(|(k, check)| {
+                let mut row = vec![check.head().to_owned()];
+                row.extend((0..self.cases.len()).map(|i| cell(i, k)));
                 row
             })
             .collect();
         Table {
-            caption: "Use of every check in every case; * the case worked below".to_owned(),
+            caption: "Use in every case; * is worked below. H helping; W pressing, wind leads; Q pressing, imposed \
+                      leads; G gravity alone. f: pushed towards the free end; j: towards the junction."
+                .to_owned(),
             columns,
             rows,
             strong: Vec::new(),
@@ -196,8 +207,21 @@ impl Matrix {
     }
 }
 
+/// Two letters for a case: combination and direction.
+fn short(case: Case) -> String {
+    let combination = match case.combination {
+        Combination::Helping => "H",
+        Combination::PressingWind => "W",
+        Combination::PressingImposed => "Q",
+        Combination::Gravity => "G",
+    };
+    let direction = if case.direction == Direction::ToFree { "f" } else { "j" };
+    format!("{combination} {direction}")
+}
+
 /// Records the worst case of each check, checks of the same case under one heading.
 pub fn record(s: &mut Sheet, m: &Model, annex: &Annex, ready: Ready, matrix: &Matrix, mu_source: &str) {
+    s.heading(1, "Checks, the worst case of each");
     s.table(|| matrix.table());
     for (i, case) in matrix.cases.iter().enumerate() {
         let governed: Vec<Check> = matrix
@@ -220,7 +244,7 @@ pub fn record(s: &mut Sheet, m: &Model, annex: &Annex, ready: Ready, matrix: &Ma
         s.heading(2, title);
         work(s, m, annex, ready, *case, &governed, mu_source);
     }
-    if !m.dpc && !m.propped {
+    if Check::Flexure.applies(m) {
         let case = matrix.worst(0).map_or_else(|| matrix.cases[0], |i| matrix.cases[i]);
         s.case = case.name();
         work(s, m, annex, ready, case, &[Check::Flexure], mu_source);
@@ -246,11 +270,11 @@ fn work(
         .collect();
     let reductions = ready
         .slender
-        .filter(|_| !vertical_checks.is_empty() || checks.contains(&Check::Toe))
+        .filter(|_| !vertical_checks.is_empty() || checks.iter().any(|c| matches!(c, Check::Toe | Check::Middle)))
         .map(|sl| vertical::reductions(s, m, sl, annex, case));
     for at in [At::Foot, At::Middle, At::Head] {
         let here: Vec<Check> =
-            checks.iter().copied().filter(|c| c.section(m) == at && !vertical_checks.contains(c)).collect();
+            checks.iter().copied().filter(|c| c.section() == at && !vertical_checks.contains(c)).collect();
         if here.is_empty() {
             continue;
         }
@@ -260,7 +284,7 @@ fn work(
         }
         let stressed = here
             .iter()
-            .any(|c| matches!(c, Check::Toe | Check::Shear | Check::ShearHead | Check::Junction))
+            .any(|c| matches!(c, Check::Toe | Check::Shear | Check::ShearHead | Check::Junction | Check::Middle))
             .then(|| in_plane::stresses(s, m, &a));
         for check in here {
             let id = id(check);
@@ -275,15 +299,19 @@ fn work(
                         sliding::junction(s, m, f, &a, st, &id);
                     }
                 }
+                (Check::Middle, Some(st)) => {
+                    let phi = reductions.map_or(Num::new(1.0), |r| r.middle);
+                    flexure::at_mid_height(s, m, &a, st, phi, ready.f_d, &id);
+                }
                 (Check::Sliding, _) => sliding::sliding(s, m, &a, mu_source, &id),
-                (Check::Flexure, _) => flexure::flexure(s, m, &a, ready.f_d, &id),
+                (Check::Flexure, _) => flexure::at_bonded_foot(s, m, &a, ready.f_d, &id),
                 _ => {}
             }
         }
     }
     for check in vertical_checks {
         if let Some(r) = reductions {
-            vertical::resistance(s, m, annex, case, check.section(m), r, ready.f_d, &id(check));
+            vertical::resistance(s, m, annex, case, check.section(), r, ready.f_d, &id(check));
         }
     }
 }
