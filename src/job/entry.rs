@@ -3,7 +3,7 @@
 
 use toml::de::DeValue;
 
-use super::limits::{self, Limits, nearest, one_of};
+use super::limits::{Limits, nearest, one_of};
 use super::reader::{Fault, Reader, Span, Table};
 use crate::building::Cause;
 use crate::error::Kind;
@@ -19,6 +19,8 @@ pub struct Entry<'a> {
     pub(super) key: String,
     /// Where its table's head stands.
     pub(super) table: Span,
+    /// What stands before its key in a head: `signatures` of `[signatures.made]`.
+    pub(super) path: String,
     pub(super) needed: bool,
 }
 
@@ -56,15 +58,13 @@ impl<'a> Entry<'a> {
     /// A quantity with its unit, within `limits`.
     pub fn quantity<const F: i8, const L: i8, const T: i8>(&self, limits: &Limits) -> Option<Q<F, L, T>> {
         let dim = Dim { force: F, length: L, time: T };
-        let wanted = format!("{} with its unit, {}", limits::dimension(dim), limits.words());
+        let wanted = format!("{} with its unit, {}", limits.called(), limits.words());
         let DeValue::String(text) = self.present(&wanted)? else {
             self.no_unit(dim, &wanted, limits);
             return None;
         };
         match unit::read(text, dim) {
-            Ok(value) => {
-                self.within(value.value, text.trim(), limits).then(|| Q::new(value.value))
-            }
+            Ok(value) => self.within(value.value, text.trim(), limits).then(|| Q::new(value.value)),
             Err(misread) => {
                 self.misread(text, dim, misread, &wanted, limits);
                 None
@@ -75,15 +75,11 @@ impl<'a> Entry<'a> {
     /// A bare number within `limits`.
     pub fn number(&self, limits: &Limits) -> Option<f64> {
         let wanted = format!("a number, {}", limits.words());
-        let value = match self.present(&wanted)? {
-            DeValue::Integer(i) => i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64),
-            DeValue::Float(x) => x.as_str().parse::<f64>().ok(),
-            _ => {
-                self.wrong_type(&wanted, "write a number without quotes");
-                return None;
-            }
+        self.present(&wanted)?;
+        let Some(value) = self.bare() else {
+            self.wrong_type(&wanted, "write a number without quotes");
+            return None;
         };
-        let value = value.unwrap_or(f64::NAN);
         self.within(value, &self.shown(), limits).then_some(value)
     }
 
@@ -149,11 +145,19 @@ impl<'a> Entry<'a> {
         let DeValue::Table(map) = self.present(wanted)? else {
             self.fault(
                 Kind::Missing,
-                format_args!("`{}` is {}, which departs from the rule without a reason", self.key, self.shown()),
+                format_args!(
+                    "`{}` is {}, which departs from the rule without a reason",
+                    self.key,
+                    self.shown()
+                ),
             )
             .at(self.place(), "no reason")
             .allowed(wanted)
-            .help(format!("write {} = {{ value = {}, reason = \"...\" }}", self.key, self.source()));
+            .help(format!(
+                "write {} = {{ value = {}, reason = \"...\" }}",
+                self.key,
+                self.source()
+            ));
             return None;
         };
         let name = format!("{}, `{}`", self.whose, self.key);
@@ -166,16 +170,16 @@ impl<'a> Entry<'a> {
 
     /// A factor with a usual value: the usual one may stand bare or be left out, any other needs a reason.
     pub fn factor(&self, usual: f64, limits: &Limits) -> Option<Cause<f64>> {
-        let Some((value, _)) = &self.value else {
-            return Some(Cause { value: usual, reason: String::new() });
-        };
-        let bare = match value {
-            DeValue::Integer(i) => i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64),
-            DeValue::Float(x) => x.as_str().parse::<f64>().ok(),
-            _ => None,
-        };
+        let usually = || Some(Cause { value: usual, reason: String::new() });
+        let Some((value, _)) = &self.value else { return usually() };
+        let bare = self.bare();
         if bare == Some(usual) {
-            return Some(Cause { value: usual, reason: String::new() });
+            return usually();
+        }
+        if bare.is_none() && !matches!(value, DeValue::Table(_)) {
+            let wanted = format!("{usual}, or {{ value = ..., reason = \"...\" }} with {}", limits.words());
+            self.wrong_type(&wanted, "write a number without quotes");
+            return None;
         }
         self.cause(|e| e.number(limits))
     }
@@ -184,9 +188,14 @@ impl<'a> Entry<'a> {
     pub fn table(&self, name: &str) -> Option<Table<'a>> {
         let head = self.head();
         match self.present(&format!("a table, [{head}]"))? {
-            DeValue::Table(map) => Some(Table::new(self.reader, name.to_owned(), map, self.place())),
+            DeValue::Table(map) => {
+                Some(Table::new(self.reader, name.to_owned(), map, self.place()).under(head))
+            }
             _ => {
-                self.wrong_type(&format!("a table, [{head}]"), &format!("write [{head}] on a line of its own"));
+                self.wrong_type(
+                    &format!("a table, [{head}]"),
+                    &format!("write [{head}] on a line of its own"),
+                );
                 None
             }
         }
@@ -195,7 +204,9 @@ impl<'a> Entry<'a> {
     /// Tables under one head, `[[returns]]`, each called `what` and its mark.
     pub fn tables(&self, what: &str, mark: &str) -> Vec<Table<'a>> {
         let head = format!("[[{}]]", self.head());
-        let wanted = format!("at least one table {head}");
+        let number =
+            if self.needed { "at least one table" } else { "any number of tables, each under its own" };
+        let wanted = format!("{number} {head}");
         let Some(value) = self.present(&wanted) else { return Vec::new() };
         let items = match value {
             DeValue::Array(items) => items,
@@ -220,7 +231,7 @@ impl<'a> Entry<'a> {
                 self.item(i, item).wrong_type(&wanted, &format!("write {head} above each"));
                 continue;
             };
-            let mut table = Table::new(self.reader, String::new(), map, item.span());
+            let mut table = Table::new(self.reader, String::new(), map, item.span()).under(self.head());
             table.name = match table.peek(mark).map(str::trim).filter(|m| !m.is_empty()) {
                 Some(mark) => format!("{what} {}", short(mark)),
                 None => format!("{what} number {}", i + 1),
@@ -236,7 +247,11 @@ impl<'a> Entry<'a> {
         let mut tables = Vec::new();
         for (name, key_place, entry) in parent.entries() {
             let trimmed = name.trim();
-            if trimmed.is_empty() || trimmed != name || name.chars().any(hidden) || name.chars().count() > LINE {
+            if trimmed.is_empty()
+                || trimmed != name
+                || name.chars().any(hidden)
+                || name.chars().count() > LINE
+            {
                 parent
                     .fault(Kind::NotAllowed, format_args!("{} is no name for a {what}", quoted(&name)))
                     .at(key_place.clone(), "name")
@@ -313,19 +328,23 @@ impl<'a> Entry<'a> {
     }
 
     fn how_to_add(&self, wanted: &str) -> String {
-        match wanted.find('[') {
-            Some(_) if wanted.contains("table") => format!("add [{}] and what belongs under it", self.head()),
-            _ if wanted.starts_with("a date") => format!("add {} = 2026-10-14", self.key),
-            _ if wanted.starts_with("a number") || wanted.starts_with("true") => {
-                format!("add {} = ...", self.key)
+        let head = wanted.find('[').zip(wanted.rfind(']')).filter(|_| wanted.contains("table"));
+        match head {
+            Some((from, to)) => format!("add {} and what belongs under it", &wanted[from..=to]),
+            None if wanted.starts_with("a date") => format!("add {} = 2026-10-14", self.key),
+            None if wanted.contains("quotes") || wanted.contains("with its unit") => {
+                format!("add {} = \"...\"", self.key)
             }
-            _ => format!("add {} = \"...\"", self.key),
+            None if wanted.starts_with('"') => format!("add {} = \"...\"", self.key),
+            None => format!("add {} = ...", self.key),
         }
     }
 
+    /// The head under which its own table stands.
     fn head(&self) -> String {
-        let plain = self.key.chars().all(|c| c.is_ascii_alphanumeric() || c == '_' || c == '-');
-        if plain { self.key.clone() } else { format!("\"{}\"", short(&self.key)) }
+        let plain = |c: char| c.is_ascii_alphanumeric() || c == '_' || c == '-';
+        let key = if self.key.chars().all(plain) { self.key.clone() } else { quoted(&self.key) };
+        if self.path.is_empty() { key } else { format!("{}.{key}", self.path) }
     }
 
     fn item(&self, i: usize, value: &'a toml::Spanned<DeValue<'a>>) -> Entry<'a> {
@@ -335,6 +354,7 @@ impl<'a> Entry<'a> {
             whose: self.whose.clone(),
             key: format!("{}, item {}", self.key, i + 1),
             table: self.table.clone(),
+            path: self.path.clone(),
             needed: true,
         }
     }
@@ -346,7 +366,12 @@ impl<'a> Entry<'a> {
         };
         let text = raw.split_whitespace().collect::<Vec<_>>().join(" ");
         let wrong = if text.is_empty() {
-            Some(("is empty".to_owned(), "write what belongs here, or take the line out if it may be left out"))
+            let help = if self.needed {
+                "write what belongs here"
+            } else {
+                "write what belongs here, or take it out"
+            };
+            Some(("is empty".to_owned(), help))
         } else if text.chars().any(hidden) {
             Some(("has characters that cannot be seen".to_owned(), "type it again instead of pasting it"))
         } else if longest == LINE && raw.trim().contains('\n') {
@@ -381,31 +406,37 @@ impl<'a> Entry<'a> {
     }
 
     fn no_unit(&self, dim: Dim, wanted: &str, limits: &Limits) {
-        match self.value.as_ref().map(|(v, _)| *v) {
-            Some(DeValue::Integer(_) | DeValue::Float(_)) => {
-                let example = format!("{} = \"{} {}\"", self.key, self.source(), limits.unit);
-                self.fault(Kind::Unit, format_args!("`{}` is {} without a unit", self.key, self.shown()))
-                    .at(self.place(), "no unit")
-                    .allowed(format!("{wanted}; units: {}", limits::units(dim)))
-                    .help(format!("write the unit and the quotes, for example {example}"));
-            }
-            _ => self.wrong_type(wanted, &format!("write it in double quotes with its unit, {}", limits::units(dim))),
-        }
+        let Some(number) = self.bare() else {
+            let help = format!("write it in double quotes with its unit, {}", limits.units(dim));
+            self.wrong_type(wanted, &help);
+            return;
+        };
+        let unit = limits.meant(dim, number, "").unwrap_or(limits.unit);
+        let example = format!("{} = \"{} {unit}\"", self.key, self.source());
+        self.fault(Kind::Unit, format_args!("`{}` is {} without a unit", self.key, self.shown()))
+            .at(self.place(), "no unit")
+            .allowed(format!("{wanted}; units: {}", limits.units(dim)))
+            .help(format!("write the unit and the quotes, for example {example}"));
     }
 
     fn misread(&self, text: &str, dim: Dim, misread: Misread, wanted: &str, limits: &Limits) {
-        let units = limits::units(dim);
+        let units = limits.units(dim);
         let (found, label, help) = match misread {
-            Misread::NoNumber => {
-                ("has no number in front".to_owned(), "no number", format!("write a number and a unit, {units}"))
-            }
-            Misread::NoUnit => (
-                "has no unit".to_owned(),
-                "no unit",
-                format!("write the unit, for example \"{} {}\"", short(text.trim()), limits.unit),
+            Misread::NoNumber => (
+                "has no number in front".to_owned(),
+                "no number",
+                format!("write a number and a unit, {units}"),
             ),
+            Misread::NoUnit => {
+                let number = text.trim().parse().unwrap_or(f64::NAN);
+                let unit = limits.meant(dim, number, "").unwrap_or(limits.unit);
+                let help = format!("write the unit, for example \"{} {unit}\"", short(text.trim()));
+                ("has no unit".to_owned(), "no unit", help)
+            }
             Misread::UnknownUnit { found, nearest } => {
-                let help = match nearest {
+                let number = text.trim().strip_suffix(&found).and_then(|n| n.trim().parse().ok());
+                let meant = limits.meant(dim, number.unwrap_or(f64::NAN), &found).or(nearest);
+                let help = match meant {
                     _ if found.starts_with(',') => "write a point in place of the comma".to_owned(),
                     Some(near) => format!("write the unit as {near}"),
                     None => format!("write one of the units {units}"),
@@ -413,7 +444,7 @@ impl<'a> Entry<'a> {
                 (format!("has the unknown unit {}", quoted(&found)), "unknown unit", help)
             }
             Misread::WrongDimension { found } => (
-                format!("has the unit {found}, which is not that of {}", limits::dimension(dim)),
+                format!("has the unit {found}, which is not that of {}", limits.called()),
                 "unit of another kind",
                 format!("write one of the units {units}"),
             ),
@@ -422,6 +453,17 @@ impl<'a> Entry<'a> {
             .at(self.place(), label)
             .allowed(format!("{wanted}; units: {units}"))
             .help(help);
+    }
+
+    /// The value where it is a bare number.
+    fn bare(&self) -> Option<f64> {
+        match self.value.as_ref().map(|(v, _)| *v)? {
+            DeValue::Integer(i) => {
+                i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64).or(Some(f64::NAN))
+            }
+            DeValue::Float(x) => x.as_str().parse::<f64>().ok().or(Some(f64::NAN)),
+            _ => None,
+        }
     }
 
     /// The value as a message names it.

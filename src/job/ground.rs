@@ -3,7 +3,7 @@
 use toml::de::DeValue;
 
 use super::limits::{Limits, Odd};
-use super::names::{Names, known};
+use super::names::{Names, Seen, known};
 use super::reader::Table;
 use super::words::{NORTH, TURN};
 use crate::building::{
@@ -13,17 +13,17 @@ use crate::error::Kind;
 use crate::quantity::{Force, Length};
 
 /// Clear height of a storey, and of every wall in it.
-pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m").odd(&[
-    Odd::Below(2.0, "low for a storey"),
-    Odd::Above(3.6, "high for a storey of a house"),
-]);
-const TOTAL_HEIGHT: Limits =
-    Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
+pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m")
+    .odd(&[Odd::Below(2.0, "low for a storey"), Odd::Above(3.6, "high for a storey of a house")]);
+const TOTAL_HEIGHT: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
 const ON_PLAN: Limits = Limits::new(-100.0, 100.0, "m");
-const REMOVED_LENGTH: Limits = Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
-const WALL_LENGTH: Limits = Limits::new(0.05, 50.0, "m").odd(&[Odd::Above(20.0, "long for one wall of a house")]);
+const REMOVED_LENGTH: Limits =
+    Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
+const WALL_LENGTH: Limits =
+    Limits::new(0.05, 50.0, "m").odd(&[Odd::Above(20.0, "long for one wall of a house")]);
 /// Height of wind face that one floor or roof collects.
-pub const STRIP: Limits = Limits::new(0.5, 15.0, "m").odd(&[Odd::Above(6.0, "more than a storey and a gable")]);
+pub const STRIP: Limits =
+    Limits::new(0.5, 15.0, "m").odd(&[Odd::Above(6.0, "more than a storey and a gable")]);
 const FORCE_ABOVE: Limits = Limits::new(0.0, 1000.0, "kN").odd(&[Odd::Above(100.0, "much for a house")]);
 const STOREY_LOAD: Limits = Limits::new(0.0, 20000.0, "kN").odd(&[Odd::Above(3000.0, "much for a house")]);
 
@@ -46,6 +46,7 @@ pub fn storey(t: &Table<'_>) -> Option<Storey> {
         t.clash("the structure is lower than its own storey", "total_height", "clear_height")
             .allowed("a total height, from this storey's base to the top of the structure, of at least the clear height")
             .help("correct one of the two");
+        return None;
     }
     Some(Storey {
         mark: mark?,
@@ -111,31 +112,22 @@ pub fn removed<'a>(
                 .and(on_plan.place.clone(), "has no `removed = true`")
                 .allowed("a plan wall with removed = true")
                 .help("add removed = true to that wall of the plan, or name the wall that comes out");
-        }
-        if build_up.as_ref().is_some_and(|b| *b != line.build_up) {
-            t.fault(Kind::Contradiction, "the wall has two build-ups")
-                .at(t.place("build_up"), "here")
-                .and(on_plan.table.place("build_up"), "on the plan")
-                .allowed("the same build-up in both places")
-                .help("correct one of the two");
-        }
-        if length.is_some_and(|l| l > plan_length(line) + DRAWN) {
-            t.fault(Kind::Contradiction, "more comes out than the plan has of this wall")
-                .at(t.place("length"), "taken out")
-                .and(on_plan.table.place("to"), format!("{:.0} mm long on the plan", plan_length(line).base()))
-                .allowed("at most the length on the plan")
-                .help("correct the length or the plan");
-        }
-    }
-    for other in plan.iter() {
-        if other.item.as_ref().is_some_and(|w| w.removed && Some(&w.mark) != wall.as_ref()) && wall.is_some() {
-            other
-                .table
-                .fault(Kind::Contradiction, "it comes out on the plan, but another wall is named as the one removed")
-                .at(other.table.place("removed"), "comes out")
-                .and(t.place("wall"), "the wall removed")
-                .allowed("one wall that comes out")
-                .help("take removed = true out here, or name this wall under [removed]");
+        } else {
+            against_plan(t, on_plan, line, build_up.as_deref(), length);
+            for other in
+                plan.iter().filter(|o| o.item.as_ref().is_some_and(|w| w.removed && w.mark != line.mark))
+            {
+                other
+                    .table
+                    .fault(
+                        Kind::Contradiction,
+                        "it comes out on the plan, but another wall is named as the one removed",
+                    )
+                    .at(other.table.place("removed"), "comes out")
+                    .and(t.place("wall"), "the wall removed")
+                    .allowed("one wall that comes out")
+                    .help("take removed = true out here, or name this wall under [removed]");
+            }
         }
     }
     Some(Removed {
@@ -146,6 +138,30 @@ pub fn removed<'a>(
         carried: carried?,
         braced: braced?,
     })
+}
+
+/// Holds the removed wall against its line on the plan.
+fn against_plan(
+    t: &Table<'_>,
+    on_plan: &Seen<'_, PlanWall>,
+    line: &PlanWall,
+    build_up: Option<&str>,
+    length: Option<Length>,
+) {
+    if build_up.is_some_and(|b| b != line.build_up) {
+        t.fault(Kind::Contradiction, "the wall has two build-ups")
+            .at(t.place("build_up"), "here")
+            .and(on_plan.table.place("build_up"), "on the plan")
+            .allowed("the same build-up in both places")
+            .help("correct one of the two");
+    }
+    if length.is_some_and(|l| l > plan_length(line) + DRAWN) {
+        t.fault(Kind::Contradiction, "more comes out than the plan has of this wall")
+            .at(t.place("length"), "taken out")
+            .and(on_plan.table.place("to"), format!("{:.0} mm long on the plan", plan_length(line).base()))
+            .allowed("at most the length on the plan")
+            .help("correct the length or the plan");
+    }
 }
 
 /// Reads one bracing wall.
@@ -159,7 +175,8 @@ pub fn bracing_wall<'a>(t: &Table<'a>, build_ups: &Names<'a, BuildUp>) -> Option
     let build_up = build_ups.refer(&t.need("build_up"));
     let stands = t.need("stands").choice(Stands::WORDS, Stands::from_word);
     let ends = t.may("ends");
-    let ends = if ends.value.is_some() { ends.choice(Ends::WORDS, Ends::from_word) } else { Some(Ends::Cantilever) };
+    let ends =
+        if ends.value.is_some() { ends.choice(Ends::WORDS, Ends::from_word) } else { Some(Ends::Cantilever) };
     Some(BracingWall {
         mark: mark?,
         along: along?,
@@ -190,14 +207,14 @@ pub fn stability<'a>(
     let imposed = t.need("vertical_load_imposed").quantity(&STOREY_LOAD);
     t.finish();
 
-    if let Some((a, b)) = front
-        && b <= a
-    {
+    let backwards = front.is_some_and(|(a, b)| b <= a);
+    if backwards {
         t.fault(Kind::NotAllowed, "the wind face ends before it begins")
             .at(t.place("front"), "front")
             .allowed("the smaller position first: [\"0 m\", \"6.4 m\"]")
             .help("put the two the other way round");
     }
+    let front = front.filter(|_| !backwards);
     if let (Some(removed), Some(name)) = (removed, &storey)
         && removed.peek("storey").is_some_and(|s| s.trim() != name)
     {
@@ -233,7 +250,10 @@ fn floor_can_share(t: &Table<'_>, share_by: Option<ShareBy>, storey_table: &Tabl
     if share_by == Some(ShareBy::Stiffness) && storey.floor_above != FloorKind::Concrete {
         t.fault(
             Kind::Contradiction,
-            format_args!("a {} floor does not share wind by the stiffness of the walls", storey.floor_above.word()),
+            format_args!(
+                "a {} floor does not share wind by the stiffness of the walls",
+                storey.floor_above.word()
+            ),
         )
         .at(t.place("share_by"), "needs a stiff floor")
         .and(storey_table.place("floor_above"), "what is above")
@@ -319,11 +339,14 @@ pub fn props<'a>(
                     .help("name a wall that stays");
             }
             if wind_along.is_some_and(|along| along != wall.along) {
-                item.fault(Kind::Contradiction, format_args!("\"{mark}\" props it, but runs across the wind"))
-                    .at(item.place(), "props")
-                    .and(seen.table.place("along"), "its direction")
-                    .allowed("walls along the wind")
-                    .help("name a wall along the wind");
+                item.fault(
+                    Kind::Contradiction,
+                    format_args!("\"{mark}\" props it, but runs across the wind"),
+                )
+                .at(item.place(), "props")
+                .and(seen.table.place("along"), "its direction")
+                .allowed("walls along the wind")
+                .help("name a wall along the wind");
             }
         }
         marks.push(mark);

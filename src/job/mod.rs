@@ -29,7 +29,6 @@ mod words;
 #[cfg(test)]
 mod tests;
 
-
 use toml::de::DeTable;
 
 pub use date::in_words as date_in_words;
@@ -74,7 +73,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let basis = basis::basis(root.may("basis").table("basis").as_ref());
     let wind = root.need("wind").table("wind").and_then(|t| basis::wind(&t));
 
-    let materials = materials::by_name("material", root.need("materials").named("material"), materials::material);
+    let materials =
+        materials::by_name("material", root.need("materials").named("material"), materials::material);
     let build_ups = materials::by_name("build-up", root.need("build_ups").named("build-up"), |name, t| {
         materials::build_up(name, t, &materials)
     });
@@ -98,8 +98,9 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         ground::bracing_wall(t, &build_ups)
     });
     let stability_table = root.may("stability").table("stability");
-    let stability =
-        stability_table.as_ref().and_then(|t| ground::stability(t, &storeys, &bracing, removed_table.as_ref()));
+    let stability = stability_table
+        .as_ref()
+        .and_then(|t| ground::stability(t, &storeys, &bracing, removed_table.as_ref()));
 
     let (returns, panels) = {
         let around = Around {
@@ -127,7 +128,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let links: Vec<_> = link_tables.iter().map(|t| closing::link(t, &marks)).collect();
     closing::chain(reader, &link_tables, &links);
     let assumptions = all(&root.may("assumptions").tables("assumption", ""), closing::assumption);
-    let hold_points = all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
+    let hold_points =
+        all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
     let photographs =
         all(&root.may("photographs").tables("photograph", "file"), |t| closing::photograph(t, &marks));
     let responsible = match root.may("responsible").table("responsible") {
@@ -198,7 +200,8 @@ fn something_to_check(root: &Table<'_>) {
             .allowed("[[returns]] with [stability] and [[bracing]], which share the whole storey's wind")
             .help(format!("add {lacking}: every wall along the wind, before and after"));
     } else if bracing != stability {
-        let (there, lacking) = if bracing { ("bracing", "[stability]") } else { ("stability", "[[bracing]]") };
+        let (there, lacking) =
+            if bracing { ("bracing", "[stability]") } else { ("stability", "[[bracing]]") };
         root.fault(Kind::Missing, format_args!("there is `{there}`, but no {lacking}"))
             .at(root.place(there), "only one of the two")
             .allowed("[stability] and [[bracing]] together, or neither")

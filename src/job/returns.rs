@@ -2,11 +2,11 @@
 
 use super::ground::{self, HEIGHT, STRIP};
 use super::limits::{Limits, Odd};
-use super::names::Names;
+use super::names::{Names, Seen};
 use super::reader::Table;
 use crate::building::{
-    Acts, BaseJoint, BracingWall, BuildUp, Cause, Flange, FloorKind, FromAbove, Head, Load, Path, PlanWall, Proof,
-    Restraint, Return, Stability, Storey,
+    Acts, BaseJoint, BracingWall, BuildUp, Cause, Flange, FloorKind, FromAbove, Head, Load, Path, PlanWall,
+    Proof, Restraint, Return, Stability, Stands, Storey,
 };
 use crate::error::Kind;
 use crate::quantity::{Force, Length, Num};
@@ -19,9 +19,11 @@ const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[
     Odd::Above(2500.0, "this is a wall more than a return"),
 ]);
 const POSITION: Limits = Limits::new(-100.0, 100.0, "m");
-const MU: Limits = Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
+const MU: Limits =
+    Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
 const TRIBUTARY: Limits = Limits::new(0.0, 20.0, "m").odd(&[Odd::Above(6.0, "wide for one return")]);
-const SUPPORTED: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
+const SUPPORTED: Limits =
+    Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
 const OPENING: Limits = Limits::new(0.0, 20.0, "m");
 const FORCE: Limits = Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
 const MOMENT: Limits = Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
@@ -70,10 +72,17 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     let supported_wall_height: Option<Length> = t.need("supported_wall_height").quantity(&SUPPORTED);
     let nearest_opening = t.may("nearest_opening").quantity(&OPENING);
     let acts = t.may("acts");
-    let acts = if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
+    let acts =
+        if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
     let wall = build_up.as_ref().and_then(|b| around.build_ups.item(b));
-    let loads: Vec<Option<Load>> = t.may("loads").tables(&format!("{}, load", t.name), "what").iter().map(|lt| load(lt, t, length, wall)).collect();
-    let junction = t.need("junction").table(&format!("{}, junction", t.name)).and_then(|j| junction(&j, around));
+    let loads: Vec<Option<Load>> = t
+        .may("loads")
+        .tables(&format!("{}, load", t.name), "what")
+        .iter()
+        .map(|lt| load(lt, t, length, wall))
+        .collect();
+    let junction =
+        t.need("junction").table(&format!("{}, junction", t.name)).and_then(|j| junction(&j, around));
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
         against_storey(t, height, seen.item.as_ref(), &seen.table);
@@ -186,12 +195,18 @@ fn path(t: &Table<'_>) -> (Option<Path>, Option<Length>) {
                 .at(t.place("path"), "through the floor")
                 .and(t.head(), "has no `strip_height`")
                 .allowed("the height of wind face that the floor collects")
-                .help("add strip_height = \"... m\": half this storey and half the one above, or to the ridge");
+                .help(
+                    "add strip_height = \"... m\": half this storey and half the one above, or to the ridge",
+                );
         }
         Some(Path::Sideways) if t.has("strip_height") => {
-            t.clash("the wind comes sideways, but `strip_height` is what a floor collects", "strip_height", "path")
-                .allowed("`strip_height` with path = \"up and down\" or \"both\"")
-                .help("take `strip_height` out, or name the other path");
+            t.clash(
+                "the wind comes sideways, but `strip_height` is what a floor collects",
+                "strip_height",
+                "path",
+            )
+            .allowed("`strip_height` with path = \"up and down\" or \"both\"")
+            .help("take `strip_height` out, or name the other path");
         }
         _ => {}
     }
@@ -294,7 +309,8 @@ fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Flange> {
                 .help("add proof = \"seen\" and words = \"who, where, when\"; or proof = \"assumed\", a hold point");
         }
     }
-    let leaf = to.as_ref().and_then(|to| around.plan.item(to)).and_then(|w| around.build_ups.item(&w.build_up));
+    let leaf =
+        to.as_ref().and_then(|to| around.plan.item(to)).and_then(|w| around.build_ups.item(&w.build_up));
     if let (Some(thickness), Some(wall)) = (thickness, leaf) {
         let met = wall.loaded().1.thickness;
         if (thickness - met).abs() > Length::new(1.0) {
@@ -321,7 +337,12 @@ fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Flange> {
 }
 
 /// Holds the height of a return or panel against its storey.
-pub fn against_storey(t: &Table<'_>, height: Option<Length>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+pub fn against_storey(
+    t: &Table<'_>,
+    height: Option<Length>,
+    storey: Option<&Storey>,
+    storey_table: &Table<'_>,
+) {
     let (Some(height), Some(storey)) = (height, storey) else { return };
     if height > storey.total_height {
         t.fault(Kind::Contradiction, "it is higher than the whole structure above its storey's base")
@@ -339,7 +360,12 @@ pub fn against_storey(t: &Table<'_>, height: Option<Length>, storey: Option<&Sto
     }
 }
 
-fn restraint_fits(t: &Table<'_>, restraint: Option<Restraint>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+fn restraint_fits(
+    t: &Table<'_>,
+    restraint: Option<Restraint>,
+    storey: Option<&Storey>,
+    storey_table: &Table<'_>,
+) {
     let (Some(Restraint::Concrete), Some(storey)) = (restraint, storey) else { return };
     if storey.floor_above != FloorKind::Concrete {
         t.fault(Kind::Contradiction, "a concrete floor is to hold its head, but the storey has none above")
@@ -368,6 +394,11 @@ pub fn together(returns: &Names<'_, Return>, around: &Around<'_, '_>) {
             }
         }
     }
+    for seen in returns.iter() {
+        if let (Some(wall), Some(item)) = (around.bracing.get(&seen.name), &seen.item) {
+            same_wall(seen, item, wall);
+        }
+    }
     let Some((st, stability)) = around.stability else { return };
     let sum: Length = returns.iter().filter_map(|s| s.item.as_ref()).map(|r| r.tributary_width).sum();
     let front = stability.front.1 - stability.front.0;
@@ -377,5 +408,26 @@ pub fn together(returns: &Names<'_, Return>, around: &Around<'_, '_>) {
             sum.base() / 1e3,
             front.base() / 1e3
         ));
+    }
+}
+
+/// A bracing wall with the mark of a return is that return.
+fn same_wall(seen: &Seen<'_, Return>, item: &Return, wall: &Seen<'_, BracingWall>) {
+    let Some(bracing) = &wall.item else { return };
+    if (item.length - bracing.length).abs() > Length::new(1.0) {
+        seen.table
+            .fault(Kind::Contradiction, "it has another length as a bracing wall")
+            .at(seen.table.place("length"), "as a return")
+            .and(wall.table.place("length"), "as a bracing wall")
+            .allowed("one length for one mark")
+            .help("correct one of the two");
+    }
+    if bracing.stands == Stands::Before {
+        seen.table
+            .fault(Kind::Contradiction, "a return stays, but the bracing wall of its mark comes out")
+            .at(seen.table.place("mark"), "stays")
+            .and(wall.table.place("stands"), "stands before only")
+            .allowed("a return that stands after the removal")
+            .help("write stands = \"after\" for the piece that stays, and give the wall that comes out its own mark");
     }
 }
