@@ -1,14 +1,13 @@
 //! One entry of a table, read as what it should be. Every method records what is wrong and then
-//! yields nothing; an entry that may be left out yields nothing without a word.
+//! yields nothing; an entry that may be left out yields nothing without a word. Figures are read in
+//! `figure`, dates in `date`.
 
 use toml::de::DeValue;
 
-use super::limits::{Limits, nearest, one_of};
+use super::limits::{nearest, one_of};
 use super::reader::{Fault, Reader, Span, Table};
 use crate::building::Cause;
 use crate::error::Kind;
-use crate::quantity::unit::Misread;
-use crate::quantity::{Dim, Q, unit};
 
 /// An entry, present or not.
 pub struct Entry<'a> {
@@ -53,34 +52,6 @@ impl<'a> Entry<'a> {
             .allowed(allowed)
             .help("leave out spaces, points and strokes");
         None
-    }
-
-    /// A quantity with its unit, within `limits`.
-    pub fn quantity<const F: i8, const L: i8, const T: i8>(&self, limits: &Limits) -> Option<Q<F, L, T>> {
-        let dim = Dim { force: F, length: L, time: T };
-        let wanted = format!("{} with its unit, {}", limits.called(), limits.words());
-        let DeValue::String(text) = self.present(&wanted)? else {
-            self.no_unit(dim, &wanted, limits);
-            return None;
-        };
-        match unit::read(text, dim) {
-            Ok(value) => self.within(value.value, text.trim(), limits).then(|| Q::new(value.value)),
-            Err(misread) => {
-                self.misread(text, dim, misread, &wanted, limits);
-                None
-            }
-        }
-    }
-
-    /// A bare number within `limits`.
-    pub fn number(&self, limits: &Limits) -> Option<f64> {
-        let wanted = format!("a number, {}", limits.words());
-        self.present(&wanted)?;
-        let Some(value) = self.bare() else {
-            self.wrong_type(&wanted, "write a number without quotes");
-            return None;
-        };
-        self.within(value, &self.shown(), limits).then_some(value)
     }
 
     /// One of a few whole numbers.
@@ -168,22 +139,6 @@ impl<'a> Entry<'a> {
         Some(Cause { value: value?, reason: reason? })
     }
 
-    /// A factor with a usual value: the usual one may stand bare or be left out, any other needs a reason.
-    pub fn factor(&self, usual: f64, limits: &Limits) -> Option<Cause<f64>> {
-        let usually = || Some(Cause { value: usual, reason: String::new() });
-        let Some((value, _)) = &self.value else { return usually() };
-        let bare = self.bare();
-        if bare == Some(usual) {
-            return usually();
-        }
-        if bare.is_none() && !matches!(value, DeValue::Table(_)) {
-            let wanted = format!("{usual}, or {{ value = ..., reason = \"...\" }} with {}", limits.words());
-            self.wrong_type(&wanted, "write a number without quotes");
-            return None;
-        }
-        self.cause(|e| e.number(limits))
-    }
-
     /// A table.
     pub fn table(&self, name: &str) -> Option<Table<'a>> {
         let head = self.head();
@@ -246,16 +201,15 @@ impl<'a> Entry<'a> {
         let Some(parent) = self.table(&self.key) else { return Vec::new() };
         let mut tables = Vec::new();
         for (name, key_place, entry) in parent.entries() {
-            let trimmed = name.trim();
-            if trimmed.is_empty()
-                || trimmed != name
+            if name.is_empty()
+                || one_line(&name) != name
                 || name.chars().any(hidden)
                 || name.chars().count() > LINE
             {
                 parent
                     .fault(Kind::NotAllowed, format_args!("{} is no name for a {what}", quoted(&name)))
                     .at(key_place.clone(), "name")
-                    .allowed(format!("a text of 1 to {LINE} characters without blanks at its ends"))
+                    .allowed(format!("a text of 1 to {LINE} characters, blanks only between words"))
                     .help("give it the name that the survey notes use");
             }
             if let Some(table) = entry.table(&format!("{what} \"{}\"", short(&name))) {
@@ -274,24 +228,6 @@ impl<'a> Entry<'a> {
                 None
             }
         }
-    }
-
-    /// Two quantities: `["0 m", "6.4 m"]`.
-    pub fn pair<const F: i8, const L: i8, const T: i8>(
-        &self,
-        limits: &Limits,
-    ) -> Option<(Q<F, L, T>, Q<F, L, T>)> {
-        let wanted = format!("two quantities in square brackets, each {}", limits.words());
-        let items = self.list(&wanted)?;
-        let [a, b] = items.as_slice() else {
-            self.fault(Kind::WrongType, format_args!("`{}` has {} items", self.key, items.len()))
-                .at(self.place(), "two belong here")
-                .allowed(&wanted)
-                .help(format!("write {} = [\"0 m\", \"6.4 m\"]", self.key));
-            return None;
-        };
-        let (a, b) = (a.quantity(limits), b.quantity(limits));
-        Some((a?, b?))
     }
 
     /// Where its value stands; its table's head where it is not there.
@@ -364,7 +300,7 @@ impl<'a> Entry<'a> {
             self.wrong_type(wanted, "write it in double quotes");
             return None;
         };
-        let text = raw.split_whitespace().collect::<Vec<_>>().join(" ");
+        let text = one_line(raw);
         let wrong = if text.is_empty() {
             let help = if self.needed {
                 "write what belongs here"
@@ -390,84 +326,8 @@ impl<'a> Entry<'a> {
         None
     }
 
-    fn within(&self, base: f64, typed: &str, limits: &Limits) -> bool {
-        if !limits.allow(base) {
-            self.fault(Kind::NotAllowed, format_args!("`{}` is {}", self.key, short(typed)))
-                .at(self.place(), "outside the limits")
-                .allowed(limits.words())
-                .help("check the figure and its unit; a true value outside these limits is beyond what the tool judges");
-            return false;
-        }
-        if let Some(why) = limits.oddity(base) {
-            let what = self.key.replace('_', " ");
-            self.reader.warn(format!("{}: {what} is {typed}, {why}", self.whose));
-        }
-        true
-    }
-
-    fn no_unit(&self, dim: Dim, wanted: &str, limits: &Limits) {
-        let Some(number) = self.bare() else {
-            let help = format!("write it in double quotes with its unit, {}", limits.units(dim));
-            self.wrong_type(wanted, &help);
-            return;
-        };
-        let unit = limits.meant(dim, number, "").unwrap_or(limits.unit);
-        let example = format!("{} = \"{} {unit}\"", self.key, self.source());
-        self.fault(Kind::Unit, format_args!("`{}` is {} without a unit", self.key, self.shown()))
-            .at(self.place(), "no unit")
-            .allowed(format!("{wanted}; units: {}", limits.units(dim)))
-            .help(format!("write the unit and the quotes, for example {example}"));
-    }
-
-    fn misread(&self, text: &str, dim: Dim, misread: Misread, wanted: &str, limits: &Limits) {
-        let units = limits.units(dim);
-        let (found, label, help) = match misread {
-            Misread::NoNumber => (
-                "has no number in front".to_owned(),
-                "no number",
-                format!("write a number and a unit, {units}"),
-            ),
-            Misread::NoUnit => {
-                let number = text.trim().parse().unwrap_or(f64::NAN);
-                let unit = limits.meant(dim, number, "").unwrap_or(limits.unit);
-                let help = format!("write the unit, for example \"{} {unit}\"", short(text.trim()));
-                ("has no unit".to_owned(), "no unit", help)
-            }
-            Misread::UnknownUnit { found, nearest } => {
-                let number = text.trim().strip_suffix(&found).and_then(|n| n.trim().parse().ok());
-                let meant = limits.meant(dim, number.unwrap_or(f64::NAN), &found).or(nearest);
-                let help = match meant {
-                    _ if found.starts_with(',') => "write a point in place of the comma".to_owned(),
-                    Some(near) => format!("write the unit as {near}"),
-                    None => format!("write one of the units {units}"),
-                };
-                (format!("has the unknown unit {}", quoted(&found)), "unknown unit", help)
-            }
-            Misread::WrongDimension { found } => (
-                format!("has the unit {found}, which is not that of {}", limits.called()),
-                "unit of another kind",
-                format!("write one of the units {units}"),
-            ),
-        };
-        self.fault(Kind::Unit, format_args!("`{}`, {}, {found}", self.key, quoted(text)))
-            .at(self.place(), label)
-            .allowed(format!("{wanted}; units: {units}"))
-            .help(help);
-    }
-
-    /// The value where it is a bare number.
-    fn bare(&self) -> Option<f64> {
-        match self.value.as_ref().map(|(v, _)| *v)? {
-            DeValue::Integer(i) => {
-                i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64).or(Some(f64::NAN))
-            }
-            DeValue::Float(x) => x.as_str().parse::<f64>().ok().or(Some(f64::NAN)),
-            _ => None,
-        }
-    }
-
     /// The value as a message names it.
-    fn shown(&self) -> String {
+    pub(super) fn shown(&self) -> String {
         match self.value.as_ref().map(|(v, _)| *v) {
             None => "missing".to_owned(),
             Some(DeValue::String(s)) => format!("the text {}", quoted(s)),
@@ -481,7 +341,7 @@ impl<'a> Entry<'a> {
     }
 
     /// The value as it would be typed again.
-    fn source(&self) -> String {
+    pub(super) fn source(&self) -> String {
         match self.value.as_ref().map(|(v, _)| *v) {
             Some(DeValue::String(s)) => quoted(s),
             Some(DeValue::Integer(i)) => short(&i.to_string()),
@@ -498,12 +358,17 @@ fn hidden(c: char) -> bool {
         || matches!(c, '\u{200B}'..='\u{200F}' | '\u{202A}'..='\u{202E}' | '\u{2060}'..='\u{2069}' | '\u{FEFF}')
 }
 
+/// A text with single blanks for every run of blanks and line breaks.
+pub fn one_line(text: &str) -> String {
+    text.split_whitespace().collect::<Vec<_>>().join(" ")
+}
+
 /// A text in double quotes, short enough for a message.
 pub fn quoted(text: &str) -> String {
     format!("\"{}\"", short(text))
 }
 
-fn short(text: &str) -> String {
+pub fn short(text: &str) -> String {
     let mut out: String = text.chars().map(|c| if hidden(c) { '\u{FFFD}' } else { c }).take(60).collect();
     if text.chars().nth(60).is_some() {
         out.push('…');

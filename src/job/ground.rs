@@ -322,6 +322,12 @@ pub fn props<'a>(
     let mut marks = Vec::new();
     for item in &items {
         let mark = bracing.refer(item)?;
+        if marks.contains(&mark) {
+            item.fault(Kind::NotAllowed, format_args!("\"{mark}\" props it twice"))
+                .at(item.place(), "again")
+                .allowed("each wall once")
+                .help("take one of them out");
+        }
         if own_mark == Some(mark.as_str()) {
             item.fault(Kind::NotAllowed, "it cannot prop itself")
                 .at(item.place(), "its own mark")

@@ -7,13 +7,15 @@
 //! * [`read`]: the whole file
 //! * [`limits`]: what a number may be, declared beside each field
 //! * [`names`]: marks and names, and references to them
-//! * `identity basis materials ground returns panels closing`: the parts, in the file's order
+//! * `identity basis materials ground returns bearing panels closing`: the parts, in the file's order
 //! * [`start`]: the job to start from
 
 mod basis;
+mod bearing;
 mod closing;
 mod date;
 mod entry;
+mod figure;
 mod ground;
 mod identity;
 mod limits;
