@@ -42,9 +42,9 @@ impl<'a> Entry<'a> {
     /// A mark or number that goes into a file name: letters, digits, `-` and `_`.
     pub fn mark(&self, longest: usize) -> Option<String> {
         let text = self.line()?;
-        let allowed = format!("letters, digits, - and _, at most {longest} of them");
+        let allowed = format!("letters, digits, - and _, a letter or digit first, at most {longest} of them");
         let fits = text.chars().all(|c| c.is_ascii_alphanumeric() || c == '-' || c == '_');
-        if fits && text.len() <= longest {
+        if fits && text.starts_with(|c: char| c.is_ascii_alphanumeric()) && text.len() <= longest {
             return Some(text);
         }
         self.fault(Kind::NotAllowed, format_args!("{} cannot be part of a file name", quoted(&text)))

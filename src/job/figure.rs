@@ -18,7 +18,8 @@ impl Entry<'_> {
             self.no_unit(dim, &wanted, limits);
             return None;
         };
-        match unit::read(text, dim) {
+        let bare = dim == Dim::NONE && !text.trim_end().ends_with('%');
+        match unit::read(text, dim).and_then(|v| if bare { Err(Misread::NoUnit) } else { Ok(v) }) {
             Ok(value) => self.within(value.value, text.trim(), limits).then(|| Q::new(value.value)),
             Err(misread) => {
                 self.misread(text, dim, misread, &wanted, limits);

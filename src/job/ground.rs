@@ -56,6 +56,35 @@ pub fn storey(t: &Table<'_>) -> Option<Storey> {
     })
 }
 
+/// Holds storeys against the one below: lowest first, and a roof over the last one only.
+pub fn stacked(storeys: &Names<'_, Storey>) {
+    let all: Vec<_> = storeys.iter().filter_map(|s| Some((s, s.item.as_ref()?))).collect();
+    for pair in all.windows(2) {
+        let [(below, low), (above, high)] = pair else { continue };
+        if high.total_height >= low.total_height {
+            above
+                .table
+                .fault(
+                    Kind::Contradiction,
+                    "more stands above its base than above that of the storey before it",
+                )
+                .at(above.table.place("total_height"), "from this storey's base")
+                .and(below.table.place("total_height"), "from the base of the storey before")
+                .allowed("storeys lowest first; each total height less than the one before")
+                .help("put the storeys in order, or correct one of the two heights");
+        }
+        if low.floor_above == FloorKind::Roof {
+            below
+                .table
+                .fault(Kind::Contradiction, "it has the roof above, but another storey follows")
+                .at(below.table.place("floor_above"), "roof")
+                .and(above.place.clone(), "a storey above it")
+                .allowed("\"roof\" above the last storey only")
+                .help("write \"timber\" or \"concrete\", or put the storeys in order, lowest first");
+        }
+    }
+}
+
 /// Reads the direction of north, degrees clockwise from the top of the page.
 pub fn north(t: &Table<'_>) -> Option<f64> {
     let entry = t.need("north");

@@ -81,6 +81,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         materials::build_up(name, t, &materials)
     });
     let storeys = Names::marked("storey", root.need("storeys").tables("storey", "mark"), ground::storey);
+    ground::stacked(&storeys);
 
     let plan_table = root.may("plan").table("plan");
     let north = plan_table.as_ref().map_or(Some(0.0), ground::north);

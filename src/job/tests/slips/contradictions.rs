@@ -4,6 +4,20 @@ use super::{Slip, slip};
 
 pub const SLIPS: &[Slip] = &[
     slip(
+        "storeys upside down",
+        "total_height = \"4.75 m\"",
+        "total_height = \"7.75 m\"",
+        "\"7.75 m\"",
+        &["storey first: more stands above its base", "from the base of the storey before", "lowest first"],
+    ),
+    slip(
+        "roof under a storey",
+        "floor_above = \"timber\"",
+        "floor_above = \"roof\"",
+        "\"roof\"",
+        &["storey ground: it has the roof above, but another storey follows"],
+    ),
+    slip(
         "props named twice",
         "propped_by = [\"party wall\", \"flank wall\"]\npath = \"up and down\"\ntributary_width = \"0.40 m\"",
         "propped_by = [\"party wall\", \"flank wall\", \"party wall\"]\npath = \"up and down\"\ntributary_width = \"0.40 m\"",
@@ -208,9 +222,9 @@ pub const SLIPS: &[Slip] = &[
     ),
     slip(
         "strip higher than the house",
-        "total_height = \"7.40 m\"",
-        "total_height = \"2.60 m\"",
-        "\"2.65 m\"",
+        "strip_height = \"2.65 m\"\nshare_by",
+        "strip_height = \"7.60 m\"\nshare_by",
+        "\"7.60 m\"",
         &["the strip of wind face is higher than the structure", "total height"],
     ),
     slip(

@@ -4,6 +4,13 @@ use super::{Slip, slip};
 
 pub const SLIPS: &[Slip] = &[
     slip(
+        "ratio without its sign",
+        "water_absorption = \"9 %\"",
+        "water_absorption = \"0.09\"",
+        "\"0.09\"",
+        &["`water_absorption`, \"0.09\", has no unit", "0.5 % to 50 %"],
+    ),
+    slip(
         "bare number for a quantity",
         "length = \"640 mm\"",
         "length = 640",
