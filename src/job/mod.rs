@@ -1,12 +1,12 @@
 //! The job file: TOML text in, a building out, or everything that is wrong with the text.
 //!
-//! What the user typed stays a tree of TOML values with their places ([`reader`], [`entry`]); what
+//! What the user typed stays a tree of TOML values with their places (`reader`, `entry`); what
 //! the checks work with is the [`Building`]. Between them one function per part of the file reads
 //! its fields, holds them against each other and names both places where they contradict.
 //!
 //! * [`read`]: the whole file
-//! * [`limits`]: what a number may be, declared beside each field
-//! * [`names`]: marks and names, and references to them
+//! * `limits`: what a number may be, declared beside each field
+//! * `names`: marks and names, and references to them
 //! * `identity basis materials ground returns bearing panels closing`: the parts, in the file's order
 //! * [`start`]: the job to start from
 
