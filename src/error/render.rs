@@ -1,5 +1,7 @@
 //! A report as text: each diagnostic with its line, a caret, what is allowed and what to do.
 
+use std::ops::Range;
+
 use annotate_snippets::{AnnotationKind, Group, Level, Renderer, Snippet};
 
 use super::report::{Diagnostic, Report};
@@ -21,17 +23,33 @@ impl Report {
     }
 
     fn group<'a>(&'a self, d: &'a Diagnostic) -> Group<'a> {
-        let caret = AnnotationKind::Primary.span(d.span.clone()).label(d.label.as_str());
+        let lines = self.lines(d);
+        let moved = |span: &Range<usize>| span.start - lines.start..span.end - lines.start;
+        let caret = AnnotationKind::Primary.span(moved(&d.span)).label(d.label.as_str());
         let others = d
             .others
             .iter()
-            .map(|place| AnnotationKind::Context.span(place.span.clone()).label(place.label.as_str()));
-        let snippet =
-            Snippet::source(self.text.as_str()).path(self.name.as_str()).annotation(caret).annotations(others);
+            .map(|place| AnnotationKind::Context.span(moved(&place.span)).label(place.label.as_str()));
+        let snippet = Snippet::source(&self.text[lines.clone()])
+            .line_start(self.position(lines.start).0)
+            .path(self.name.as_str())
+            .annotation(caret)
+            .annotations(others);
         Level::ERROR
             .primary_title(d.message.as_str())
             .element(snippet)
             .element(Level::NOTE.with_name("allowed").message(d.allowed.as_str()))
             .element(Level::HELP.message(d.help.as_str()))
+    }
+
+    /// The whole lines that a diagnostic is about: a long file with many faults is not laid out anew
+    /// for each of them.
+    fn lines(&self, d: &Diagnostic) -> Range<usize> {
+        let spans = || std::iter::once(&d.span).chain(d.others.iter().map(|place| &place.span));
+        let first = spans().map(|s| s.start).min().unwrap_or(0);
+        let last = spans().map(|s| s.end).max().unwrap_or(0);
+        let start = self.text[..first].rfind('\n').map_or(0, |i| i + 1);
+        let end = self.text[last..].find('\n').map_or(self.text.len(), |i| last + i + 1);
+        start..end
     }
 }

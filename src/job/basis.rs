@@ -48,16 +48,21 @@ pub fn basis(t: Option<&Table<'_>>) -> Option<Basis> {
             helping_factor: usual(),
         });
     };
-    let execution_class = if t.has("execution_class") { t.need("execution_class").whole(&[1, 2]) } else { Some(2) };
+    let execution_class =
+        if t.has("execution_class") { t.need("execution_class").whole(&[1, 2]) } else { Some(2) };
     let unit_category =
         if t.has("unit_category") { t.need("unit_category").pick(&[("I", 1), ("II", 2)]) } else { Some(2) };
     let one = t.may("gamma_M").cause(|e| e.number(&GAMMA));
     let each = ["gamma_M_compression", "gamma_M_flexure", "gamma_M_shear"];
     for key in each {
         if t.has("gamma_M") && t.has(key) {
-            t.clash(format_args!("`gamma_M` sets every factor, and `{key}` sets one of them"), key, "gamma_M")
-                .allowed("`gamma_M` alone, or any of the three others")
-                .help("take one of them out");
+            t.clash(
+                format_args!("`gamma_M` sets every factor, and `{key}` sets one of them"),
+                key,
+                "gamma_M",
+            )
+            .allowed("`gamma_M` alone, or any of the three others")
+            .help("take one of them out");
         }
     }
     let [gamma_m_compression, gamma_m_flexure, gamma_m_shear] =
@@ -81,11 +86,14 @@ pub fn wind(t: &Table<'_>) -> Option<Wind> {
     let terrain = t.may("terrain").table("wind by terrain").and_then(|t| terrain(&t));
     for (wanted, key) in [(WindRoute::Stated, "stated"), (WindRoute::Terrain, "terrain")] {
         if route == Some(wanted) && !t.has(key) {
-            t.fault(Kind::Contradiction, format_args!("the route is \"{key}\", but there is no [wind.{key}]"))
-                .at(t.place("route"), "route")
-                .and(t.head(), format!("nothing under it is called `{key}`"))
-                .allowed("the route of a table that is there")
-                .help(format!("add [wind.{key}], or name the other route"));
+            t.fault(
+                Kind::Contradiction,
+                format_args!("the route is \"{key}\", but there is no [wind.{key}]"),
+            )
+            .at(t.place("route"), "route")
+            .and(t.head(), format!("nothing under it is called `{key}`"))
+            .allowed("the route of a table that is there")
+            .help(format!("add [wind.{key}], or name the other route"));
         }
     }
     t.finish();
@@ -138,9 +146,13 @@ fn terrain(t: &Table<'_>) -> Option<TerrainWind> {
 fn orography(t: &Table<'_>) -> Option<Cause<f64>> {
     match (t.has("orography"), t.has("c_o")) {
         (true, true) => {
-            t.clash("`orography` says that there is none, and `c_o` gives a factor for it", "c_o", "orography")
-                .allowed("one of the two")
-                .help("keep `orography` for level ground, or `c_o` with its reason for a hill");
+            t.clash(
+                "`orography` says that there is none, and `c_o` gives a factor for it",
+                "c_o",
+                "orography",
+            )
+            .allowed("one of the two")
+            .help("keep `orography` for level ground, or `c_o` with its reason for a hill");
             None
         }
         (false, true) => t.may("c_o").cause(|e| e.number(&OROGRAPHY)),

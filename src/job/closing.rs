@@ -79,9 +79,15 @@ fn beside(t: &Table<'_>, path: &str) -> bool {
     let wrong = if path.contains('\\') {
         Some(("has a backslash", "write / between folders"))
     } else if path.starts_with('/') || path.contains(':') {
-        Some(("does not begin beside the job file", "put the photograph beside the job file and write photos/name.jpg"))
+        Some((
+            "does not begin beside the job file",
+            "put the photograph beside the job file and write photos/name.jpg",
+        ))
     } else if path.split('/').any(|part| matches!(part, ".." | "." | "")) {
-        Some(("leaves its folder or has an empty part", "put the photograph beside the job file and write photos/name.jpg"))
+        Some((
+            "leaves its folder or has an empty part",
+            "put the photograph beside the job file and write photos/name.jpg",
+        ))
     } else if !IMAGES.iter().any(|ending| lower.ends_with(ending)) {
         Some(("is not an image that the pack can hold", "save it as .jpg or .png"))
     } else {

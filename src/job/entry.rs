@@ -1,14 +1,13 @@
 //! One entry of a table, read as what it should be. Every method records what is wrong and then
-//! yields nothing; an entry that may be left out yields nothing without a word.
+//! yields nothing; an entry that may be left out yields nothing without a word. Figures are read in
+//! `figure`, dates in `date`.
 
 use toml::de::DeValue;
 
-use super::limits::{self, Limits, nearest, one_of};
+use super::limits::{nearest, one_of};
 use super::reader::{Fault, Reader, Span, Table};
 use crate::building::Cause;
 use crate::error::Kind;
-use crate::quantity::unit::Misread;
-use crate::quantity::{Dim, Q, unit};
 
 /// An entry, present or not.
 pub struct Entry<'a> {
@@ -19,6 +18,8 @@ pub struct Entry<'a> {
     pub(super) key: String,
     /// Where its table's head stands.
     pub(super) table: Span,
+    /// What stands before its key in a head: `signatures` of `[signatures.made]`.
+    pub(super) path: String,
     pub(super) needed: bool,
 }
 
@@ -41,9 +42,9 @@ impl<'a> Entry<'a> {
     /// A mark or number that goes into a file name: letters, digits, `-` and `_`.
     pub fn mark(&self, longest: usize) -> Option<String> {
         let text = self.line()?;
-        let allowed = format!("letters, digits, - and _, at most {longest} of them");
+        let allowed = format!("letters, digits, - and _, a letter or digit first, at most {longest} of them");
         let fits = text.chars().all(|c| c.is_ascii_alphanumeric() || c == '-' || c == '_');
-        if fits && text.len() <= longest {
+        if fits && text.starts_with(|c: char| c.is_ascii_alphanumeric()) && text.len() <= longest {
             return Some(text);
         }
         self.fault(Kind::NotAllowed, format_args!("{} cannot be part of a file name", quoted(&text)))
@@ -51,40 +52,6 @@ impl<'a> Entry<'a> {
             .allowed(allowed)
             .help("leave out spaces, points and strokes");
         None
-    }
-
-    /// A quantity with its unit, within `limits`.
-    pub fn quantity<const F: i8, const L: i8, const T: i8>(&self, limits: &Limits) -> Option<Q<F, L, T>> {
-        let dim = Dim { force: F, length: L, time: T };
-        let wanted = format!("{} with its unit, {}", limits::dimension(dim), limits.words());
-        let DeValue::String(text) = self.present(&wanted)? else {
-            self.no_unit(dim, &wanted, limits);
-            return None;
-        };
-        match unit::read(text, dim) {
-            Ok(value) => {
-                self.within(value.value, text.trim(), limits).then(|| Q::new(value.value))
-            }
-            Err(misread) => {
-                self.misread(text, dim, misread, &wanted, limits);
-                None
-            }
-        }
-    }
-
-    /// A bare number within `limits`.
-    pub fn number(&self, limits: &Limits) -> Option<f64> {
-        let wanted = format!("a number, {}", limits.words());
-        let value = match self.present(&wanted)? {
-            DeValue::Integer(i) => i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64),
-            DeValue::Float(x) => x.as_str().parse::<f64>().ok(),
-            _ => {
-                self.wrong_type(&wanted, "write a number without quotes");
-                return None;
-            }
-        };
-        let value = value.unwrap_or(f64::NAN);
-        self.within(value, &self.shown(), limits).then_some(value)
     }
 
     /// One of a few whole numbers.
@@ -149,11 +116,19 @@ impl<'a> Entry<'a> {
         let DeValue::Table(map) = self.present(wanted)? else {
             self.fault(
                 Kind::Missing,
-                format_args!("`{}` is {}, which departs from the rule without a reason", self.key, self.shown()),
+                format_args!(
+                    "`{}` is {}, which departs from the rule without a reason",
+                    self.key,
+                    self.shown()
+                ),
             )
             .at(self.place(), "no reason")
             .allowed(wanted)
-            .help(format!("write {} = {{ value = {}, reason = \"...\" }}", self.key, self.source()));
+            .help(format!(
+                "write {} = {{ value = {}, reason = \"...\" }}",
+                self.key,
+                self.source()
+            ));
             return None;
         };
         let name = format!("{}, `{}`", self.whose, self.key);
@@ -164,29 +139,18 @@ impl<'a> Entry<'a> {
         Some(Cause { value: value?, reason: reason? })
     }
 
-    /// A factor with a usual value: the usual one may stand bare or be left out, any other needs a reason.
-    pub fn factor(&self, usual: f64, limits: &Limits) -> Option<Cause<f64>> {
-        let Some((value, _)) = &self.value else {
-            return Some(Cause { value: usual, reason: String::new() });
-        };
-        let bare = match value {
-            DeValue::Integer(i) => i64::from_str_radix(i.as_str(), i.radix()).ok().map(|x| x as f64),
-            DeValue::Float(x) => x.as_str().parse::<f64>().ok(),
-            _ => None,
-        };
-        if bare == Some(usual) {
-            return Some(Cause { value: usual, reason: String::new() });
-        }
-        self.cause(|e| e.number(limits))
-    }
-
     /// A table.
     pub fn table(&self, name: &str) -> Option<Table<'a>> {
         let head = self.head();
         match self.present(&format!("a table, [{head}]"))? {
-            DeValue::Table(map) => Some(Table::new(self.reader, name.to_owned(), map, self.place())),
+            DeValue::Table(map) => {
+                Some(Table::new(self.reader, name.to_owned(), map, self.place()).under(head))
+            }
             _ => {
-                self.wrong_type(&format!("a table, [{head}]"), &format!("write [{head}] on a line of its own"));
+                self.wrong_type(
+                    &format!("a table, [{head}]"),
+                    &format!("write [{head}] on a line of its own"),
+                );
                 None
             }
         }
@@ -195,7 +159,9 @@ impl<'a> Entry<'a> {
     /// Tables under one head, `[[returns]]`, each called `what` and its mark.
     pub fn tables(&self, what: &str, mark: &str) -> Vec<Table<'a>> {
         let head = format!("[[{}]]", self.head());
-        let wanted = format!("at least one table {head}");
+        let number =
+            if self.needed { "at least one table" } else { "any number of tables, each under its own" };
+        let wanted = format!("{number} {head}");
         let Some(value) = self.present(&wanted) else { return Vec::new() };
         let items = match value {
             DeValue::Array(items) => items,
@@ -220,7 +186,7 @@ impl<'a> Entry<'a> {
                 self.item(i, item).wrong_type(&wanted, &format!("write {head} above each"));
                 continue;
             };
-            let mut table = Table::new(self.reader, String::new(), map, item.span());
+            let mut table = Table::new(self.reader, String::new(), map, item.span()).under(self.head());
             table.name = match table.peek(mark).map(str::trim).filter(|m| !m.is_empty()) {
                 Some(mark) => format!("{what} {}", short(mark)),
                 None => format!("{what} number {}", i + 1),
@@ -235,12 +201,15 @@ impl<'a> Entry<'a> {
         let Some(parent) = self.table(&self.key) else { return Vec::new() };
         let mut tables = Vec::new();
         for (name, key_place, entry) in parent.entries() {
-            let trimmed = name.trim();
-            if trimmed.is_empty() || trimmed != name || name.chars().any(hidden) || name.chars().count() > LINE {
+            if name.is_empty()
+                || one_line(&name) != name
+                || name.chars().any(hidden)
+                || name.chars().count() > LINE
+            {
                 parent
                     .fault(Kind::NotAllowed, format_args!("{} is no name for a {what}", quoted(&name)))
                     .at(key_place.clone(), "name")
-                    .allowed(format!("a text of 1 to {LINE} characters without blanks at its ends"))
+                    .allowed(format!("a text of 1 to {LINE} characters, blanks only between words"))
                     .help("give it the name that the survey notes use");
             }
             if let Some(table) = entry.table(&format!("{what} \"{}\"", short(&name))) {
@@ -259,24 +228,6 @@ impl<'a> Entry<'a> {
                 None
             }
         }
-    }
-
-    /// Two quantities: `["0 m", "6.4 m"]`.
-    pub fn pair<const F: i8, const L: i8, const T: i8>(
-        &self,
-        limits: &Limits,
-    ) -> Option<(Q<F, L, T>, Q<F, L, T>)> {
-        let wanted = format!("two quantities in square brackets, each {}", limits.words());
-        let items = self.list(&wanted)?;
-        let [a, b] = items.as_slice() else {
-            self.fault(Kind::WrongType, format_args!("`{}` has {} items", self.key, items.len()))
-                .at(self.place(), "two belong here")
-                .allowed(&wanted)
-                .help(format!("write {} = [\"0 m\", \"6.4 m\"]", self.key));
-            return None;
-        };
-        let (a, b) = (a.quantity(limits), b.quantity(limits));
-        Some((a?, b?))
     }
 
     /// Where its value stands; its table's head where it is not there.
@@ -313,19 +264,23 @@ impl<'a> Entry<'a> {
     }
 
     fn how_to_add(&self, wanted: &str) -> String {
-        match wanted.find('[') {
-            Some(_) if wanted.contains("table") => format!("add [{}] and what belongs under it", self.head()),
-            _ if wanted.starts_with("a date") => format!("add {} = 2026-10-14", self.key),
-            _ if wanted.starts_with("a number") || wanted.starts_with("true") => {
-                format!("add {} = ...", self.key)
+        let head = wanted.find('[').zip(wanted.rfind(']')).filter(|_| wanted.contains("table"));
+        match head {
+            Some((from, to)) => format!("add {} and what belongs under it", &wanted[from..=to]),
+            None if wanted.starts_with("a date") => format!("add {} = 2026-10-14", self.key),
+            None if wanted.contains("quotes") || wanted.contains("with its unit") => {
+                format!("add {} = \"...\"", self.key)
             }
-            _ => format!("add {} = \"...\"", self.key),
+            None if wanted.starts_with('"') => format!("add {} = \"...\"", self.key),
+            None => format!("add {} = ...", self.key),
         }
     }
 
+    /// The head under which its own table stands.
     fn head(&self) -> String {
-        let plain = self.key.chars().all(|c| c.is_ascii_alphanumeric() || c == '_' || c == '-');
-        if plain { self.key.clone() } else { format!("\"{}\"", short(&self.key)) }
+        let plain = |c: char| c.is_ascii_alphanumeric() || c == '_' || c == '-';
+        let key = if self.key.chars().all(plain) { self.key.clone() } else { quoted(&self.key) };
+        if self.path.is_empty() { key } else { format!("{}.{key}", self.path) }
     }
 
     fn item(&self, i: usize, value: &'a toml::Spanned<DeValue<'a>>) -> Entry<'a> {
@@ -335,6 +290,7 @@ impl<'a> Entry<'a> {
             whose: self.whose.clone(),
             key: format!("{}, item {}", self.key, i + 1),
             table: self.table.clone(),
+            path: self.path.clone(),
             needed: true,
         }
     }
@@ -344,9 +300,14 @@ impl<'a> Entry<'a> {
             self.wrong_type(wanted, "write it in double quotes");
             return None;
         };
-        let text = raw.split_whitespace().collect::<Vec<_>>().join(" ");
+        let text = one_line(raw);
         let wrong = if text.is_empty() {
-            Some(("is empty".to_owned(), "write what belongs here, or take the line out if it may be left out"))
+            let help = if self.needed {
+                "write what belongs here"
+            } else {
+                "write what belongs here, or take it out"
+            };
+            Some(("is empty".to_owned(), help))
         } else if text.chars().any(hidden) {
             Some(("has characters that cannot be seen".to_owned(), "type it again instead of pasting it"))
         } else if longest == LINE && raw.trim().contains('\n') {
@@ -365,67 +326,8 @@ impl<'a> Entry<'a> {
         None
     }
 
-    fn within(&self, base: f64, typed: &str, limits: &Limits) -> bool {
-        if !limits.allow(base) {
-            self.fault(Kind::NotAllowed, format_args!("`{}` is {}", self.key, short(typed)))
-                .at(self.place(), "outside the limits")
-                .allowed(limits.words())
-                .help("check the figure and its unit; a true value outside these limits is beyond what the tool judges");
-            return false;
-        }
-        if let Some(why) = limits.oddity(base) {
-            let what = self.key.replace('_', " ");
-            self.reader.warn(format!("{}: {what} is {typed}, {why}", self.whose));
-        }
-        true
-    }
-
-    fn no_unit(&self, dim: Dim, wanted: &str, limits: &Limits) {
-        match self.value.as_ref().map(|(v, _)| *v) {
-            Some(DeValue::Integer(_) | DeValue::Float(_)) => {
-                let example = format!("{} = \"{} {}\"", self.key, self.source(), limits.unit);
-                self.fault(Kind::Unit, format_args!("`{}` is {} without a unit", self.key, self.shown()))
-                    .at(self.place(), "no unit")
-                    .allowed(format!("{wanted}; units: {}", limits::units(dim)))
-                    .help(format!("write the unit and the quotes, for example {example}"));
-            }
-            _ => self.wrong_type(wanted, &format!("write it in double quotes with its unit, {}", limits::units(dim))),
-        }
-    }
-
-    fn misread(&self, text: &str, dim: Dim, misread: Misread, wanted: &str, limits: &Limits) {
-        let units = limits::units(dim);
-        let (found, label, help) = match misread {
-            Misread::NoNumber => {
-                ("has no number in front".to_owned(), "no number", format!("write a number and a unit, {units}"))
-            }
-            Misread::NoUnit => (
-                "has no unit".to_owned(),
-                "no unit",
-                format!("write the unit, for example \"{} {}\"", short(text.trim()), limits.unit),
-            ),
-            Misread::UnknownUnit { found, nearest } => {
-                let help = match nearest {
-                    _ if found.starts_with(',') => "write a point in place of the comma".to_owned(),
-                    Some(near) => format!("write the unit as {near}"),
-                    None => format!("write one of the units {units}"),
-                };
-                (format!("has the unknown unit {}", quoted(&found)), "unknown unit", help)
-            }
-            Misread::WrongDimension { found } => (
-                format!("has the unit {found}, which is not that of {}", limits::dimension(dim)),
-                "unit of another kind",
-                format!("write one of the units {units}"),
-            ),
-        };
-        self.fault(Kind::Unit, format_args!("`{}`, {}, {found}", self.key, quoted(text)))
-            .at(self.place(), label)
-            .allowed(format!("{wanted}; units: {units}"))
-            .help(help);
-    }
-
     /// The value as a message names it.
-    fn shown(&self) -> String {
+    pub(super) fn shown(&self) -> String {
         match self.value.as_ref().map(|(v, _)| *v) {
             None => "missing".to_owned(),
             Some(DeValue::String(s)) => format!("the text {}", quoted(s)),
@@ -439,7 +341,7 @@ impl<'a> Entry<'a> {
     }
 
     /// The value as it would be typed again.
-    fn source(&self) -> String {
+    pub(super) fn source(&self) -> String {
         match self.value.as_ref().map(|(v, _)| *v) {
             Some(DeValue::String(s)) => quoted(s),
             Some(DeValue::Integer(i)) => short(&i.to_string()),
@@ -456,12 +358,17 @@ fn hidden(c: char) -> bool {
         || matches!(c, '\u{200B}'..='\u{200F}' | '\u{202A}'..='\u{202E}' | '\u{2060}'..='\u{2069}' | '\u{FEFF}')
 }
 
+/// A text with single blanks for every run of blanks and line breaks.
+pub fn one_line(text: &str) -> String {
+    text.split_whitespace().collect::<Vec<_>>().join(" ")
+}
+
 /// A text in double quotes, short enough for a message.
 pub fn quoted(text: &str) -> String {
     format!("\"{}\"", short(text))
 }
 
-fn short(text: &str) -> String {
+pub fn short(text: &str) -> String {
     let mut out: String = text.chars().map(|c| if hidden(c) { '\u{FFFD}' } else { c }).take(60).collect();
     if text.chars().nth(60).is_some() {
         out.push('…');

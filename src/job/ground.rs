@@ -3,7 +3,7 @@
 use toml::de::DeValue;
 
 use super::limits::{Limits, Odd};
-use super::names::{Names, known};
+use super::names::{Names, Seen, known};
 use super::reader::Table;
 use super::words::{NORTH, TURN};
 use crate::building::{
@@ -13,17 +13,17 @@ use crate::error::Kind;
 use crate::quantity::{Force, Length};
 
 /// Clear height of a storey, and of every wall in it.
-pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m").odd(&[
-    Odd::Below(2.0, "low for a storey"),
-    Odd::Above(3.6, "high for a storey of a house"),
-]);
-const TOTAL_HEIGHT: Limits =
-    Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
+pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m")
+    .odd(&[Odd::Below(2.0, "low for a storey"), Odd::Above(3.6, "high for a storey of a house")]);
+const TOTAL_HEIGHT: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
 const ON_PLAN: Limits = Limits::new(-100.0, 100.0, "m");
-const REMOVED_LENGTH: Limits = Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
-const WALL_LENGTH: Limits = Limits::new(0.05, 50.0, "m").odd(&[Odd::Above(20.0, "long for one wall of a house")]);
+const REMOVED_LENGTH: Limits =
+    Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
+const WALL_LENGTH: Limits =
+    Limits::new(0.05, 50.0, "m").odd(&[Odd::Above(20.0, "long for one wall of a house")]);
 /// Height of wind face that one floor or roof collects.
-pub const STRIP: Limits = Limits::new(0.5, 15.0, "m").odd(&[Odd::Above(6.0, "more than a storey and a gable")]);
+pub const STRIP: Limits =
+    Limits::new(0.5, 15.0, "m").odd(&[Odd::Above(6.0, "more than a storey and a gable")]);
 const FORCE_ABOVE: Limits = Limits::new(0.0, 1000.0, "kN").odd(&[Odd::Above(100.0, "much for a house")]);
 const STOREY_LOAD: Limits = Limits::new(0.0, 20000.0, "kN").odd(&[Odd::Above(3000.0, "much for a house")]);
 
@@ -46,6 +46,7 @@ pub fn storey(t: &Table<'_>) -> Option<Storey> {
         t.clash("the structure is lower than its own storey", "total_height", "clear_height")
             .allowed("a total height, from this storey's base to the top of the structure, of at least the clear height")
             .help("correct one of the two");
+        return None;
     }
     Some(Storey {
         mark: mark?,
@@ -53,6 +54,35 @@ pub fn storey(t: &Table<'_>) -> Option<Storey> {
         floor_above: floor_above?,
         total_height: total_height?,
     })
+}
+
+/// Holds storeys against the one below: lowest first, and a roof over the last one only.
+pub fn stacked(storeys: &Names<'_, Storey>) {
+    let all: Vec<_> = storeys.iter().filter_map(|s| Some((s, s.item.as_ref()?))).collect();
+    for pair in all.windows(2) {
+        let [(below, low), (above, high)] = pair else { continue };
+        if high.total_height >= low.total_height {
+            above
+                .table
+                .fault(
+                    Kind::Contradiction,
+                    "more stands above its base than above that of the storey before it",
+                )
+                .at(above.table.place("total_height"), "from this storey's base")
+                .and(below.table.place("total_height"), "from the base of the storey before")
+                .allowed("storeys lowest first; each total height less than the one before")
+                .help("put the storeys in order, or correct one of the two heights");
+        }
+        if low.floor_above == FloorKind::Roof {
+            below
+                .table
+                .fault(Kind::Contradiction, "it has the roof above, but another storey follows")
+                .at(below.table.place("floor_above"), "roof")
+                .and(above.place.clone(), "a storey above it")
+                .allowed("\"roof\" above the last storey only")
+                .help("write \"timber\" or \"concrete\", or put the storeys in order, lowest first");
+        }
+    }
 }
 
 /// Reads the direction of north, degrees clockwise from the top of the page.
@@ -111,31 +141,22 @@ pub fn removed<'a>(
                 .and(on_plan.place.clone(), "has no `removed = true`")
                 .allowed("a plan wall with removed = true")
                 .help("add removed = true to that wall of the plan, or name the wall that comes out");
-        }
-        if build_up.as_ref().is_some_and(|b| *b != line.build_up) {
-            t.fault(Kind::Contradiction, "the wall has two build-ups")
-                .at(t.place("build_up"), "here")
-                .and(on_plan.table.place("build_up"), "on the plan")
-                .allowed("the same build-up in both places")
-                .help("correct one of the two");
-        }
-        if length.is_some_and(|l| l > plan_length(line) + DRAWN) {
-            t.fault(Kind::Contradiction, "more comes out than the plan has of this wall")
-                .at(t.place("length"), "taken out")
-                .and(on_plan.table.place("to"), format!("{:.0} mm long on the plan", plan_length(line).base()))
-                .allowed("at most the length on the plan")
-                .help("correct the length or the plan");
-        }
-    }
-    for other in plan.iter() {
-        if other.item.as_ref().is_some_and(|w| w.removed && Some(&w.mark) != wall.as_ref()) && wall.is_some() {
-            other
-                .table
-                .fault(Kind::Contradiction, "it comes out on the plan, but another wall is named as the one removed")
-                .at(other.table.place("removed"), "comes out")
-                .and(t.place("wall"), "the wall removed")
-                .allowed("one wall that comes out")
-                .help("take removed = true out here, or name this wall under [removed]");
+        } else {
+            against_plan(t, on_plan, line, build_up.as_deref(), length);
+            for other in
+                plan.iter().filter(|o| o.item.as_ref().is_some_and(|w| w.removed && w.mark != line.mark))
+            {
+                other
+                    .table
+                    .fault(
+                        Kind::Contradiction,
+                        "it comes out on the plan, but another wall is named as the one removed",
+                    )
+                    .at(other.table.place("removed"), "comes out")
+                    .and(t.place("wall"), "the wall removed")
+                    .allowed("one wall that comes out")
+                    .help("take removed = true out here, or name this wall under [removed]");
+            }
         }
     }
     Some(Removed {
@@ -146,6 +167,30 @@ pub fn removed<'a>(
         carried: carried?,
         braced: braced?,
     })
+}
+
+/// Holds the removed wall against its line on the plan.
+fn against_plan(
+    t: &Table<'_>,
+    on_plan: &Seen<'_, PlanWall>,
+    line: &PlanWall,
+    build_up: Option<&str>,
+    length: Option<Length>,
+) {
+    if build_up.is_some_and(|b| b != line.build_up) {
+        t.fault(Kind::Contradiction, "the wall has two build-ups")
+            .at(t.place("build_up"), "here")
+            .and(on_plan.table.place("build_up"), "on the plan")
+            .allowed("the same build-up in both places")
+            .help("correct one of the two");
+    }
+    if length.is_some_and(|l| l > plan_length(line) + DRAWN) {
+        t.fault(Kind::Contradiction, "more comes out than the plan has of this wall")
+            .at(t.place("length"), "taken out")
+            .and(on_plan.table.place("to"), format!("{:.0} mm long on the plan", plan_length(line).base()))
+            .allowed("at most the length on the plan")
+            .help("correct the length or the plan");
+    }
 }
 
 /// Reads one bracing wall.
@@ -159,7 +204,8 @@ pub fn bracing_wall<'a>(t: &Table<'a>, build_ups: &Names<'a, BuildUp>) -> Option
     let build_up = build_ups.refer(&t.need("build_up"));
     let stands = t.need("stands").choice(Stands::WORDS, Stands::from_word);
     let ends = t.may("ends");
-    let ends = if ends.value.is_some() { ends.choice(Ends::WORDS, Ends::from_word) } else { Some(Ends::Cantilever) };
+    let ends =
+        if ends.value.is_some() { ends.choice(Ends::WORDS, Ends::from_word) } else { Some(Ends::Cantilever) };
     Some(BracingWall {
         mark: mark?,
         along: along?,
@@ -190,14 +236,14 @@ pub fn stability<'a>(
     let imposed = t.need("vertical_load_imposed").quantity(&STOREY_LOAD);
     t.finish();
 
-    if let Some((a, b)) = front
-        && b <= a
-    {
+    let backwards = front.is_some_and(|(a, b)| b <= a);
+    if backwards {
         t.fault(Kind::NotAllowed, "the wind face ends before it begins")
             .at(t.place("front"), "front")
             .allowed("the smaller position first: [\"0 m\", \"6.4 m\"]")
             .help("put the two the other way round");
     }
+    let front = front.filter(|_| !backwards);
     if let (Some(removed), Some(name)) = (removed, &storey)
         && removed.peek("storey").is_some_and(|s| s.trim() != name)
     {
@@ -233,7 +279,10 @@ fn floor_can_share(t: &Table<'_>, share_by: Option<ShareBy>, storey_table: &Tabl
     if share_by == Some(ShareBy::Stiffness) && storey.floor_above != FloorKind::Concrete {
         t.fault(
             Kind::Contradiction,
-            format_args!("a {} floor does not share wind by the stiffness of the walls", storey.floor_above.word()),
+            format_args!(
+                "a {} floor does not share wind by the stiffness of the walls",
+                storey.floor_above.word()
+            ),
         )
         .at(t.place("share_by"), "needs a stiff floor")
         .and(storey_table.place("floor_above"), "what is above")
@@ -302,6 +351,12 @@ pub fn props<'a>(
     let mut marks = Vec::new();
     for item in &items {
         let mark = bracing.refer(item)?;
+        if marks.contains(&mark) {
+            item.fault(Kind::NotAllowed, format_args!("\"{mark}\" props it twice"))
+                .at(item.place(), "again")
+                .allowed("each wall once")
+                .help("take one of them out");
+        }
         if own_mark == Some(mark.as_str()) {
             item.fault(Kind::NotAllowed, "it cannot prop itself")
                 .at(item.place(), "its own mark")
@@ -319,11 +374,14 @@ pub fn props<'a>(
                     .help("name a wall that stays");
             }
             if wind_along.is_some_and(|along| along != wall.along) {
-                item.fault(Kind::Contradiction, format_args!("\"{mark}\" props it, but runs across the wind"))
-                    .at(item.place(), "props")
-                    .and(seen.table.place("along"), "its direction")
-                    .allowed("walls along the wind")
-                    .help("name a wall along the wind");
+                item.fault(
+                    Kind::Contradiction,
+                    format_args!("\"{mark}\" props it, but runs across the wind"),
+                )
+                .at(item.place(), "props")
+                .and(seen.table.place("along"), "its direction")
+                .allowed("walls along the wind")
+                .help("name a wall along the wind");
             }
         }
         marks.push(mark);

@@ -69,7 +69,11 @@ pub fn signatures(t: &Table<'_>) -> Option<Signatures> {
         if c.date < m.date {
             ct.fault(
                 Kind::Contradiction,
-                format_args!("it was checked on {}, before it was made on {}", in_words(&c.date), in_words(&m.date)),
+                format_args!(
+                    "it was checked on {}, before it was made on {}",
+                    in_words(&c.date),
+                    in_words(&m.date)
+                ),
             )
             .at(ct.place("date"), "checked")
             .and(mt.place("date"), "made")

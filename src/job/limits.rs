@@ -69,29 +69,45 @@ impl Limits {
 
     fn figure(&self, x: f64) -> String {
         let gap = if self.unit.is_empty() { "" } else { " " };
-        format!("{}{gap}{}", print::literal(x), self.unit)
+        // A figure that may be typed again has the hyphen that a keyboard has.
+        format!("{}{gap}{}", print::literal(x).replace('−', "-"), self.unit)
     }
 }
 
-/// What a dimension is called, with its article.
-pub fn dimension(dim: Dim) -> &'static str {
-    match (dim.force, dim.length, dim.time) {
-        (0, 0, 0) => "a ratio",
-        (0, 1, 0) => "a length",
-        (1, 0, 0) => "a force",
-        (1, 1, 0) => "a moment",
-        (1, -1, 0) => "a load per length",
-        (1, -2, 0) => "a pressure or strength",
-        (1, -3, 0) => "a weight per volume",
-        (0, -2, 0) => "a number per area",
-        (0, 1, -1) => "a speed",
-        _ => "a quantity",
+impl Limits {
+    /// What a quantity of these limits is called, with its article.
+    pub fn called(&self) -> &'static str {
+        match self.unit {
+            "mm" | "m" => "a length",
+            "kN" => "a force",
+            "kNm" => "a moment",
+            "kN/m" => "a load per length",
+            "kN/m2" => "a pressure",
+            "N/mm2" => "a strength",
+            "kN/m3" => "a weight per volume",
+            "per m2" => "a number per area",
+            "m/s" => "a speed",
+            _ => "a quantity",
+        }
     }
-}
 
-/// `mm, m or cm`.
-pub fn units(dim: Dim) -> String {
-    one_of(&unit::allowed(dim))
+    /// The units that may be typed, those that these limits are given in first.
+    pub fn units(&self, dim: Dim) -> String {
+        let mut units = unit::allowed(dim);
+        units.sort_by_key(|u| *u != self.unit);
+        one_of(&units)
+    }
+
+    /// The unit that was meant behind `number`, where the text has `found` or nothing: near in
+    /// spelling, and such that the value is allowed.
+    pub fn meant(&self, dim: Dim, number: f64, found: &str) -> Option<&'static str> {
+        let distance = |u: &str| strsim::damerau_levenshtein(&found.to_lowercase(), &u.to_lowercase());
+        unit::allowed(dim)
+            .into_iter()
+            .filter(|u| found.is_empty() || distance(u) <= 2)
+            .filter(|u| unit::find(u).is_some_and(|u| self.allow(number * u.factor)))
+            .min_by_key(|u| (if found.is_empty() { 0 } else { distance(u) }, *u != self.unit))
+    }
 }
 
 /// Words joined as a choice: `a, b or c`.
@@ -137,6 +153,17 @@ mod tests {
     fn odd_values_name_the_bound() {
         assert_eq!(LENGTH.oddity(90.0).as_deref(), Some("under 200 mm: a short nib"));
         assert_eq!(LENGTH.oddity(200.0), None);
+    }
+
+    #[test]
+    fn the_unit_that_was_meant_fits_the_value() {
+        let dim = crate::quantity::Length::ZERO.dynamic().dim;
+        let height = Limits::new(1.5, 6.0, "m");
+        assert_eq!(height.meant(dim, 2400.0, ""), Some("mm"));
+        assert_eq!(height.meant(dim, 2.4, ""), Some("m"));
+        assert_eq!(height.meant(dim, 2400.0, "mn"), Some("mm"));
+        assert_eq!(height.meant(dim, 1e9, ""), None);
+        assert_eq!(height.units(dim), "m, mm or cm");
     }
 
     #[test]

@@ -9,11 +9,14 @@ use crate::error::Kind;
 use crate::quantity::{Length, Stress};
 use crate::standards::masonry::{Mortar, UnitKind};
 
-const UNIT_STRENGTH: Limits = Limits::new(0.5, 200.0, "N/mm2")
-    .odd(&[Odd::Below(1.5, "weaker than any unit sold"), Odd::Above(125.0, "stronger than engineering brick")]);
+const UNIT_STRENGTH: Limits = Limits::new(0.5, 200.0, "N/mm2").odd(&[
+    Odd::Below(1.5, "weaker than any unit sold"),
+    Odd::Above(125.0, "stronger than engineering brick"),
+]);
 const UNIT_HEIGHT: Limits = Limits::new(30.0, 600.0, "mm");
 const UNIT_WIDTH: Limits = Limits::new(40.0, 600.0, "mm");
-const ABSORPTION: Limits = Limits::new(0.5, 50.0, "%").odd(&[Odd::Above(30.0, "more than clay bricks take up")]);
+const ABSORPTION: Limits =
+    Limits::new(0.5, 50.0, "%").odd(&[Odd::Above(30.0, "more than clay bricks take up")]);
 const DENSITY: Limits = Limits::new(4.0, 30.0, "kN/m3");
 const F_B: Limits = Limits::new(0.5, 200.0, "N/mm2");
 const F_K: Limits = Limits::new(0.1, 60.0, "N/mm2").odd(&[Odd::Above(20.0, "high for a masonry wall")]);
@@ -58,8 +61,7 @@ pub fn material(name: &str, t: &Table<'_>) -> Option<Material> {
     let mortar = t.need("mortar").pick(MORTARS);
     let water_absorption = t.may("water_absorption").quantity(&ABSORPTION).map(crate::quantity::Num::base);
     let density = t.need("density").quantity(&DENSITY);
-    let perpends_filled =
-        t.may("perpends").pick(&[("filled", true), ("unfilled", false)]).unwrap_or(true);
+    let perpends_filled = t.may("perpends").pick(&[("filled", true), ("unfilled", false)]).unwrap_or(true);
     let source = t.may("source").text();
     let f_b = t.may("f_b").cause(|e| e.quantity(&F_B));
     let f_k = t.may("f_k").cause(|e| e.quantity::<1, -2, 0>(&F_K));
@@ -75,11 +77,14 @@ pub fn material(name: &str, t: &Table<'_>) -> Option<Material> {
             let weight: f64 = crate::quantity::Weight::base(density) * 1e6;
             if weight < *low || weight > *high {
                 let kind = t.peek("unit").unwrap_or_default();
-                t.warn(format_args!("density is {weight:.1} kN/m3, outside the {low} to {high} kN/m3 usual for {kind}"));
+                t.warn(format_args!(
+                    "density is {weight:.1} kN/m3, outside the {low} to {high} kN/m3 usual for {kind}"
+                ));
             }
         }
     }
-    if let (Some(f_k), Some(UnitStrength::Mean { strength, .. } | UnitStrength::Normalised(strength))) = (&f_k, &strength)
+    if let (Some(f_k), Some(UnitStrength::Mean { strength, .. } | UnitStrength::Normalised(strength))) =
+        (&f_k, &strength)
         && f_k.value > *strength
     {
         t.clash("`f_k` of the wall is more than the strength of its units", "f_k", "strength")
@@ -136,9 +141,13 @@ fn fits_unit(t: &Table<'_>, unit: UnitKind, mortar: Option<Mortar>, laid_flat: b
     let kind = t.peek("unit").unwrap_or_default();
     let absorption = t.has("water_absorption");
     if absorption && unit != UnitKind::ClayBrick {
-        t.clash(format_args!("`water_absorption` belongs to clay brick, not to {kind}"), "water_absorption", "unit")
-            .allowed("`water_absorption` with \"clay brick\" only")
-            .help("take it out, or correct the unit");
+        t.clash(
+            format_args!("`water_absorption` belongs to clay brick, not to {kind}"),
+            "water_absorption",
+            "unit",
+        )
+        .allowed("`water_absorption` with \"clay brick\" only")
+        .help("take it out, or correct the unit");
     }
     let stated = t.has("f_xk1") && t.has("f_xk2");
     if unit == UnitKind::ClayBrick && !absorption && !stated && mortar.is_some_and(|m| m != Mortar::Lime) {
@@ -161,7 +170,8 @@ pub fn build_up<'a>(name: &str, t: &Table<'a>, materials: &Names<'a, Material>) 
     let tie_strength = t.may("tie_strength").cause(|e| e.quantity(&TIE_STRENGTH));
     let collar_joint = t.may("collar_joint").flag();
     let tables = t.need("leaves").tables(&format!("{}, leaf", t.name), "");
-    let leaves: Vec<Option<Leaf>> = tables.iter().map(|leaf_table| leaf(leaf_table, tables.len(), materials)).collect();
+    let leaves: Vec<Option<Leaf>> =
+        tables.iter().map(|leaf_table| leaf(leaf_table, tables.len(), materials)).collect();
     t.finish();
 
     if tables.len() > 2 {
@@ -241,7 +251,7 @@ fn one_loaded(t: &Table<'_>, leaves: &[Table<'_>]) {
         }
         (2, []) => {
             t.fault(Kind::Missing, "neither leaf is marked as loaded")
-                .at(t.place("leaves"), "two leaves")
+                .at(t.head(), "two leaves")
                 .allowed("exactly one loaded leaf")
                 .help("add loaded = true to the leaf that carries floor and roof");
         }

@@ -1,19 +1,21 @@
 //! The job file: TOML text in, a building out, or everything that is wrong with the text.
 //!
-//! What the user typed stays a tree of TOML values with their places ([`reader`], [`entry`]); what
+//! What the user typed stays a tree of TOML values with their places (`reader`, `entry`); what
 //! the checks work with is the [`Building`]. Between them one function per part of the file reads
 //! its fields, holds them against each other and names both places where they contradict.
 //!
 //! * [`read`]: the whole file
-//! * [`limits`]: what a number may be, declared beside each field
-//! * [`names`]: marks and names, and references to them
-//! * `identity basis materials ground returns panels closing`: the parts, in the file's order
+//! * `limits`: what a number may be, declared beside each field
+//! * `names`: marks and names, and references to them
+//! * `identity basis materials ground returns bearing panels closing`: the parts, in the file's order
 //! * [`start`]: the job to start from
 
 mod basis;
+mod bearing;
 mod closing;
 mod date;
 mod entry;
+mod figure;
 mod ground;
 mod identity;
 mod limits;
@@ -28,7 +30,6 @@ mod words;
 
 #[cfg(test)]
 mod tests;
-
 
 use toml::de::DeTable;
 
@@ -74,11 +75,13 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let basis = basis::basis(root.may("basis").table("basis").as_ref());
     let wind = root.need("wind").table("wind").and_then(|t| basis::wind(&t));
 
-    let materials = materials::by_name("material", root.need("materials").named("material"), materials::material);
+    let materials =
+        materials::by_name("material", root.need("materials").named("material"), materials::material);
     let build_ups = materials::by_name("build-up", root.need("build_ups").named("build-up"), |name, t| {
         materials::build_up(name, t, &materials)
     });
     let storeys = Names::marked("storey", root.need("storeys").tables("storey", "mark"), ground::storey);
+    ground::stacked(&storeys);
 
     let plan_table = root.may("plan").table("plan");
     let north = plan_table.as_ref().map_or(Some(0.0), ground::north);
@@ -98,8 +101,9 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         ground::bracing_wall(t, &build_ups)
     });
     let stability_table = root.may("stability").table("stability");
-    let stability =
-        stability_table.as_ref().and_then(|t| ground::stability(t, &storeys, &bracing, removed_table.as_ref()));
+    let stability = stability_table
+        .as_ref()
+        .and_then(|t| ground::stability(t, &storeys, &bracing, removed_table.as_ref()));
 
     let (returns, panels) = {
         let around = Around {
@@ -127,7 +131,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let links: Vec<_> = link_tables.iter().map(|t| closing::link(t, &marks)).collect();
     closing::chain(reader, &link_tables, &links);
     let assumptions = all(&root.may("assumptions").tables("assumption", ""), closing::assumption);
-    let hold_points = all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
+    let hold_points =
+        all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
     let photographs =
         all(&root.may("photographs").tables("photograph", "file"), |t| closing::photograph(t, &marks));
     let responsible = match root.may("responsible").table("responsible") {
@@ -198,7 +203,8 @@ fn something_to_check(root: &Table<'_>) {
             .allowed("[[returns]] with [stability] and [[bracing]], which share the whole storey's wind")
             .help(format!("add {lacking}: every wall along the wind, before and after"));
     } else if bracing != stability {
-        let (there, lacking) = if bracing { ("bracing", "[stability]") } else { ("stability", "[[bracing]]") };
+        let (there, lacking) =
+            if bracing { ("bracing", "[stability]") } else { ("stability", "[[bracing]]") };
         root.fault(Kind::Missing, format_args!("there is `{there}`, but no {lacking}"))
             .at(root.place(there), "only one of the two")
             .allowed("[stability] and [[bracing]] together, or neither")

@@ -1,6 +1,6 @@
 //! Names that one part of the file gives and another refers to.
 
-use super::entry::{Entry, quoted};
+use super::entry::{Entry, one_line, quoted};
 use super::limits::{nearest, one_of};
 use super::reader::{Reader, Span, Table};
 use crate::error::Kind;
@@ -39,7 +39,7 @@ impl<'a, T> Names<'a, T> {
         for table in tables {
             let item = read(&table);
             table.finish();
-            let name = table.peek("mark").map(str::trim).filter(|m| !m.is_empty()).map(str::to_owned);
+            let name = table.peek("mark").map(one_line).filter(|m| !m.is_empty());
             let Some(name) = name else { continue };
             let place = table.place("mark");
             names.refuse_twice(table.reader, &name, &place);

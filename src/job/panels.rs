@@ -9,10 +9,8 @@ use crate::building::{Arching, Edge, Panel, PanelRoute, Sharing, Span};
 use crate::error::Kind;
 use crate::standards::masonry;
 
-const LENGTH: Limits = Limits::new(0.3, 20.0, "m").odd(&[
-    Odd::Below(0.6, "a strip more than a panel"),
-    Odd::Above(9.0, "long for the wall of a room"),
-]);
+const LENGTH: Limits = Limits::new(0.3, 20.0, "m")
+    .odd(&[Odd::Below(0.6, "a strip more than a panel"), Odd::Above(15.0, "long for one panel")]);
 const DEAD: Limits = Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
 const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2")
     .odd(&[Odd::Above(2.0, "more than UK sites of two or three storeys give, mostly a slip of the point")]);
@@ -61,7 +59,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     }
     if let (Some(bt), Some(at), Some(before), Some(after)) = (&before_table, &after_table, &before, &after) {
         compare(t, (bt, before), (at, after));
-        if wall_at.is_some_and(|place| place > after.length) {
+        if after.length >= before.length && wall_at.is_some_and(|place| place > after.length) {
             at.clash("the removed wall met it beyond its end", "wall_at", "length")
                 .allowed("0 m at the left end to the length after the removal")
                 .help("correct one of the two");

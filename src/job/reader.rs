@@ -112,6 +112,7 @@ pub struct Table<'a> {
     /// What it is called in messages: `return R1`.
     pub name: String,
     span: Span,
+    path: String,
     map: &'a DeTable<'a>,
     asked: RefCell<Vec<&'static str>>,
 }
@@ -119,7 +120,12 @@ pub struct Table<'a> {
 impl<'a> Table<'a> {
     /// A table that stands at `span`.
     pub fn new(reader: &'a Reader, name: String, map: &'a DeTable<'a>, span: Span) -> Self {
-        Self { reader, name, span, map, asked: RefCell::default() }
+        Self { reader, name, span, path: String::new(), map, asked: RefCell::default() }
+    }
+
+    /// The same table, whose head is `[path]`.
+    pub fn under(self, path: String) -> Self {
+        Self { path, ..self }
     }
 
     /// The entry `key`, which must be there.
@@ -136,6 +142,7 @@ impl<'a> Table<'a> {
             whose: self.name.clone(),
             key: key.to_owned(),
             table: self.span.clone(),
+            path: self.path.clone(),
             needed: false,
         }
     }
@@ -185,6 +192,7 @@ impl<'a> Table<'a> {
                     whose: self.name.clone(),
                     key: key.get_ref().to_string(),
                     table: self.span.clone(),
+                    path: self.path.clone(),
                     needed: true,
                 };
                 (key.get_ref().to_string(), key.span(), entry)

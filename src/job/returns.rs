@@ -1,15 +1,16 @@
 //! `[[returns]]`: what stays and braces.
 
+use super::bearing;
 use super::ground::{self, HEIGHT, STRIP};
 use super::limits::{Limits, Odd};
-use super::names::Names;
+use super::names::{Names, Seen};
 use super::reader::Table;
 use crate::building::{
-    Acts, BaseJoint, BracingWall, BuildUp, Cause, Flange, FloorKind, FromAbove, Head, Load, Path, PlanWall, Proof,
-    Restraint, Return, Stability, Storey,
+    Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
+    Restraint, Return, Stability, Stands, Storey,
 };
 use crate::error::Kind;
-use crate::quantity::{Force, Length, Num};
+use crate::quantity::{Length, Num};
 
 /// Most characters of a mark.
 pub const MARK: usize = 12;
@@ -19,18 +20,16 @@ const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[
     Odd::Above(2500.0, "this is a wall more than a return"),
 ]);
 const POSITION: Limits = Limits::new(-100.0, 100.0, "m");
-const MU: Limits = Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
+const MU: Limits =
+    Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
 const TRIBUTARY: Limits = Limits::new(0.0, 20.0, "m").odd(&[Odd::Above(6.0, "wide for one return")]);
-const SUPPORTED: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
+const SUPPORTED: Limits =
+    Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
 const OPENING: Limits = Limits::new(0.0, 20.0, "m");
-const FORCE: Limits = Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
+/// A force on a wall of a house.
+pub const FORCE: Limits =
+    Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
 const MOMENT: Limits = Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
-const ALONG: Limits = Limits::new(0.0, 6.0, "m");
-const ECCENTRICITY: Limits = Limits::new(-300.0, 300.0, "mm");
-const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm");
-const TO_END: Limits = Limits::new(0.0, 50.0, "m");
-const WALL_LOAD: Limits =
-    Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
 
 /// Coefficient of friction at a dpc: common practice, no published source.
 const MU_USUAL: f64 = 0.4;
@@ -70,10 +69,19 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     let supported_wall_height: Option<Length> = t.need("supported_wall_height").quantity(&SUPPORTED);
     let nearest_opening = t.may("nearest_opening").quantity(&OPENING);
     let acts = t.may("acts");
-    let acts = if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
+    let acts =
+        if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
     let wall = build_up.as_ref().and_then(|b| around.build_ups.item(b));
-    let loads: Vec<Option<Load>> = t.may("loads").tables(&format!("{}, load", t.name), "what").iter().map(|lt| load(lt, t, length, wall)).collect();
-    let junction = t.need("junction").table(&format!("{}, junction", t.name)).and_then(|j| junction(&j, around));
+    let loads: Vec<Option<Load>> = t
+        .may("loads")
+        .tables(&format!("{}, load", t.name), "what")
+        .iter()
+        .map(|lt| bearing::load(lt, t, length, wall))
+        .collect();
+    let junction = t
+        .need("junction")
+        .table(&format!("{}, junction", t.name))
+        .and_then(|j| bearing::junction(&j, around));
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
         against_storey(t, height, seen.item.as_ref(), &seen.table);
@@ -186,12 +194,18 @@ fn path(t: &Table<'_>) -> (Option<Path>, Option<Length>) {
                 .at(t.place("path"), "through the floor")
                 .and(t.head(), "has no `strip_height`")
                 .allowed("the height of wind face that the floor collects")
-                .help("add strip_height = \"... m\": half this storey and half the one above, or to the ridge");
+                .help(
+                    "add strip_height = \"... m\": half this storey and half the one above, or to the ridge",
+                );
         }
         Some(Path::Sideways) if t.has("strip_height") => {
-            t.clash("the wind comes sideways, but `strip_height` is what a floor collects", "strip_height", "path")
-                .allowed("`strip_height` with path = \"up and down\" or \"both\"")
-                .help("take `strip_height` out, or name the other path");
+            t.clash(
+                "the wind comes sideways, but `strip_height` is what a floor collects",
+                "strip_height",
+                "path",
+            )
+            .allowed("`strip_height` with path = \"up and down\" or \"both\"")
+            .help("take `strip_height` out, or name the other path");
         }
         _ => {}
     }
@@ -209,119 +223,13 @@ fn from_above(t: &Table<'_>) -> Option<FromAbove> {
     Some(FromAbove { force: force?, moment: moment? })
 }
 
-fn load(t: &Table<'_>, owner: &Table<'_>, length: Option<Length>, wall: Option<&BuildUp>) -> Option<Load> {
-    let what = t.need("what").line();
-    let dead: Option<Force> = t.need("dead").quantity(&FORCE);
-    let imposed = t.need("imposed").quantity(&FORCE);
-    let uplift: Option<Force> = t.may("uplift").quantity(&FORCE);
-    let at: Option<Length> = t.need("at").quantity(&ALONG);
-    let eccentricity: Option<Length> = t.may("eccentricity").quantity(&ECCENTRICITY);
-    let leaf = t.may("leaf").whole(&[1, 2]);
-    let source = t.may("source").text();
-    t.finish();
-
-    if let (Some(at), Some(length)) = (at, length)
-        && at > length
-    {
-        t.fault(Kind::Contradiction, "it stands beyond the end of the return")
-            .at(t.place("at"), "place of the load")
-            .and(owner.place("length"), "length of the return")
-            .allowed("0 mm at the junction end to the length of the return at its free end")
-            .help("correct one of the two");
-    }
-    if let (Some(dead), Some(uplift)) = (dead, uplift)
-        && uplift * 1.5 > dead * 0.9
-    {
-        t.warn("the uplift is more than its dead load holds down");
-    }
-    let place = match (leaf, wall) {
-        (Some(leaf), Some(wall)) if usize::from(leaf) > wall.leaves.len() => {
-            t.fault(Kind::Contradiction, "it stands on leaf 2 of a wall of one leaf")
-                .at(t.place("leaf"), "leaf")
-                .and(owner.place("build_up"), "one leaf")
-                .allowed("1 for the outer leaf, 2 for the inner")
-                .help("take `leaf` out, or correct the build-up");
-            return None;
-        }
-        (Some(leaf), _) => usize::from(leaf) - 1,
-        (None, Some(wall)) => wall.loaded().0,
-        (None, None) => 0,
-    };
-    if let (Some(e), Some(leaf)) = (eccentricity, wall.and_then(|w| w.leaves.get(place))) {
-        let thickness = leaf.thickness;
-        if e.abs() * 2.0 > thickness {
-            t.fault(Kind::Contradiction, "it stands beside the leaf that carries it")
-                .at(t.place("eccentricity"), "from the middle of the leaf")
-                .and(owner.place("build_up"), format!("that leaf is {:.1} mm thick", thickness.base()))
-                .allowed("at most half the thickness to either side")
-                .help("correct the eccentricity, or the leaf");
-        } else if e.abs() * 3.0 > thickness {
-            t.warn("the load stands in the outer sixth of the leaf");
-        }
-    }
-    Some(Load {
-        what: what?,
-        dead: dead?,
-        imposed: imposed?,
-        uplift: uplift.unwrap_or(Force::ZERO),
-        at: at?,
-        eccentricity: eccentricity.unwrap_or(Length::ZERO),
-        leaf: place,
-        source: source.unwrap_or_default(),
-    })
-}
-
-fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Flange> {
-    let entry = t.need("to");
-    let to = if around.plan.is_empty() { entry.line() } else { around.plan.refer(&entry) };
-    let bonded = t.need("bonded").flag();
-    let proof = t.may("proof").pick(&[("seen", Proof::Seen), ("assumed", Proof::Assumed)]);
-    let words = t.may("words").text();
-    let thickness: Option<Length> = t.need("thickness").quantity(&THICKNESS);
-    let left = t.need("left").quantity(&TO_END);
-    let right = t.need("right").quantity(&TO_END);
-    let next_wall_left = t.may("next_wall_left").quantity(&TO_END);
-    let next_wall_right = t.may("next_wall_right").quantity(&TO_END);
-    let dead = t.need("dead").quantity(&WALL_LOAD);
-    t.finish();
-
-    if bonded == Some(true) {
-        for key in ["proof", "words"].into_iter().filter(|key| !t.has(key)) {
-            t.fault(Kind::Contradiction, format_args!("it is bonded, but `{key}` is missing"))
-                .at(t.place("bonded"), "how is that known?")
-                .and(t.head(), format!("has no `{key}`"))
-                .allowed("bonded = true with proof = \"seen\" or \"assumed\", and the words for it")
-                .help("add proof = \"seen\" and words = \"who, where, when\"; or proof = \"assumed\", a hold point");
-        }
-    }
-    let leaf = to.as_ref().and_then(|to| around.plan.item(to)).and_then(|w| around.build_ups.item(&w.build_up));
-    if let (Some(thickness), Some(wall)) = (thickness, leaf) {
-        let met = wall.loaded().1.thickness;
-        if (thickness - met).abs() > Length::new(1.0) {
-            t.warn(format_args!(
-                "thickness is {:.1} mm, but the loaded leaf of \"{}\" is {:.1} mm",
-                thickness.base(),
-                wall.name,
-                met.base()
-            ));
-        }
-    }
-    Some(Flange {
-        to: to?,
-        bonded: bonded?,
-        proof: proof.unwrap_or(Proof::Assumed),
-        words: words.unwrap_or_default(),
-        thickness: thickness?,
-        left: left?,
-        right: right?,
-        next_wall_left,
-        next_wall_right,
-        dead: dead?,
-    })
-}
-
 /// Holds the height of a return or panel against its storey.
-pub fn against_storey(t: &Table<'_>, height: Option<Length>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+pub fn against_storey(
+    t: &Table<'_>,
+    height: Option<Length>,
+    storey: Option<&Storey>,
+    storey_table: &Table<'_>,
+) {
     let (Some(height), Some(storey)) = (height, storey) else { return };
     if height > storey.total_height {
         t.fault(Kind::Contradiction, "it is higher than the whole structure above its storey's base")
@@ -339,7 +247,12 @@ pub fn against_storey(t: &Table<'_>, height: Option<Length>, storey: Option<&Sto
     }
 }
 
-fn restraint_fits(t: &Table<'_>, restraint: Option<Restraint>, storey: Option<&Storey>, storey_table: &Table<'_>) {
+fn restraint_fits(
+    t: &Table<'_>,
+    restraint: Option<Restraint>,
+    storey: Option<&Storey>,
+    storey_table: &Table<'_>,
+) {
     let (Some(Restraint::Concrete), Some(storey)) = (restraint, storey) else { return };
     if storey.floor_above != FloorKind::Concrete {
         t.fault(Kind::Contradiction, "a concrete floor is to hold its head, but the storey has none above")
@@ -368,7 +281,20 @@ pub fn together(returns: &Names<'_, Return>, around: &Around<'_, '_>) {
             }
         }
     }
+    for seen in returns.iter() {
+        if let (Some(wall), Some(item)) = (around.bracing.get(&seen.name), &seen.item) {
+            same_wall(seen, item, wall);
+        }
+    }
     let Some((st, stability)) = around.stability else { return };
+    for seen in returns.iter().filter(|s| s.item.as_ref().is_some_and(|r| r.storey != stability.storey)) {
+        seen.table
+            .fault(Kind::Contradiction, "it stands in another storey than the one judged")
+            .at(seen.table.place("storey"), "its storey")
+            .and(st.place("storey"), "the storey judged")
+            .allowed("returns in the storey of the removed wall")
+            .help("correct one of the two; what is above comes in as `from_above`");
+    }
     let sum: Length = returns.iter().filter_map(|s| s.item.as_ref()).map(|r| r.tributary_width).sum();
     let front = stability.front.1 - stability.front.0;
     if sum > front + Length::new(1.0) {
@@ -377,5 +303,26 @@ pub fn together(returns: &Names<'_, Return>, around: &Around<'_, '_>) {
             sum.base() / 1e3,
             front.base() / 1e3
         ));
+    }
+}
+
+/// A bracing wall with the mark of a return is that return.
+fn same_wall(seen: &Seen<'_, Return>, item: &Return, wall: &Seen<'_, BracingWall>) {
+    let Some(bracing) = &wall.item else { return };
+    if (item.length - bracing.length).abs() > Length::new(1.0) {
+        seen.table
+            .fault(Kind::Contradiction, "it has another length as a bracing wall")
+            .at(seen.table.place("length"), "as a return")
+            .and(wall.table.place("length"), "as a bracing wall")
+            .allowed("one length for one mark")
+            .help("correct one of the two");
+    }
+    if bracing.stands == Stands::Before {
+        seen.table
+            .fault(Kind::Contradiction, "a return stays, but the bracing wall of its mark comes out")
+            .at(seen.table.place("mark"), "stays")
+            .and(wall.table.place("stands"), "stands before only")
+            .allowed("a return that stands after the removal")
+            .help("write stands = \"after\" for the piece that stays, and give the wall that comes out its own mark");
     }
 }

@@ -36,16 +36,8 @@ pub const EDGES: &[(&str, Edge)] =
     &[("free", Edge::Free), ("simple", Edge::Simple), ("continuous", Edge::Continuous)];
 
 /// Links of the chain from the wind face to the ground, in its order.
-pub const LINKS: &[&str] = &[
-    "wind face",
-    "panel",
-    "floor edge",
-    "diaphragm",
-    "bracing wall",
-    "junction",
-    "dpc",
-    "footing",
-];
+pub const LINKS: &[&str] =
+    &["wind face", "panel", "floor edge", "diaphragm", "bracing wall", "junction", "dpc", "footing"];
 
 /// Where north is on the page, degrees clockwise from its top.
 pub const NORTH: &[(&str, f64)] = &[("up", 0.0), ("right", 90.0), ("down", 180.0), ("left", 270.0)];

@@ -2,6 +2,7 @@
 
 mod bad;
 mod noise;
+mod slips;
 
 use super::read;
 
@@ -63,4 +64,23 @@ fn one_factor_on_everything_sets_all_three() {
     for factor in [basis.gamma_m_compression, basis.gamma_m_flexure, basis.gamma_m_shear] {
         assert_eq!(factor.map(|c| c.value), Some(3.0));
     }
+}
+
+#[test]
+fn line_ends_and_byte_order_marks_of_other_systems_are_read() {
+    let text = GOOD.replace('\n', "\r\n");
+    assert!(read("crlf.toml", &text).is_ok());
+    assert!(read("bom.toml", &format!("\u{feff}{GOOD}")).is_ok());
+    let report =
+        read("crlf.toml", &text.replace("mu = 0.4", "mu = 4")).expect_err("a factor without a reason");
+    let line = GOOD.lines().position(|l| l == "mu = 0.4").expect("the fixture states it") + 1;
+    let record = &report.records()[0];
+    assert_eq!((record.line, record.column), (line, 6));
+}
+
+#[test]
+fn blanks_in_names_count_once() {
+    let text = GOOD.replace("mark = \"rear wall\"", "mark = \" rear  wall\"");
+    let building = read("blanks.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    assert_eq!(building.plan[0].mark, "rear wall");
 }

@@ -8,10 +8,52 @@ use crate::job::read;
 
 /// What a mutation may put into a job file: the sort of thing that a hand or a broken disk does.
 const PIECES: &[&str] = &[
-    "\"", "'", "=", "[", "]", "[[", "]]", "{", "}", ",", ".", "#", "\n", "\r\n", "\r", "\t", "\\", "0", "-1",
-    "nan", "inf", "1e999", "99999999999999999999", "true", "\"\"", "\" \"", "\"900 mm\"", "\"900\"", "\"1e9 m\"",
-    "\"-5 kN\"", "2026-02-30", "12:00:00", "2026-10-14T12:00:00Z", "[returns]", "[[returns]]", "[plan]",
-    "{ value = 1 }", "é", "\u{202e}", "\u{feff}", "\u{0}", "\"\\u0000\"", "🧱", "removed = true\n", "'''", "\"\"\"",
+    "\"",
+    "'",
+    "=",
+    "[",
+    "]",
+    "[[",
+    "]]",
+    "{",
+    "}",
+    ",",
+    ".",
+    "#",
+    "\n",
+    "\r\n",
+    "\r",
+    "\t",
+    "\\",
+    "0",
+    "-1",
+    "nan",
+    "inf",
+    "1e999",
+    "99999999999999999999",
+    "true",
+    "\"\"",
+    "\" \"",
+    "\"900 mm\"",
+    "\"900\"",
+    "\"1e9 m\"",
+    "\"-5 kN\"",
+    "2026-02-30",
+    "12:00:00",
+    "2026-10-14T12:00:00Z",
+    "[returns]",
+    "[[returns]]",
+    "[plan]",
+    "{ value = 1 }",
+    "é",
+    "\u{202e}",
+    "\u{feff}",
+    "\u{0}",
+    "\"\\u0000\"",
+    "🧱",
+    "removed = true\n",
+    "'''",
+    "\"\"\"",
 ];
 
 fn settings() -> ProptestConfig {
@@ -92,7 +134,9 @@ proptest! {
 
 #[test]
 fn nothing_and_odd_endings_are_refused_with_a_place() {
-    for text in ["", "\n", "\r", "[job]", "[[job]]", "job = 1", "\u{feff}", "[returns]\n", "materials = []", "é"] {
+    for text in
+        ["", "\n", "\r", "[job]", "[[job]]", "job = 1", "\u{feff}", "[returns]\n", "materials = []", "é"]
+    {
         let report = read("odd.toml", text).expect_err("no job stands in so little text");
         refused(&report, text).unwrap_or_else(|e| panic!("{text:?}: {e}"));
     }
@@ -104,4 +148,12 @@ fn deep_brackets_do_not_exhaust_the_stack() {
         let text = format!("a = {}", piece.repeat(20_000));
         assert!(read("deep.toml", &text).is_err(), "{piece}");
     }
+}
+
+#[test]
+fn thousands_of_faults_are_all_shown() {
+    let text: String = (0..3000).map(|i| format!("entry_{i} = 1\n")).collect();
+    let report = read("long.toml", &text).expect_err("nobody reads these");
+    assert!(report.diagnostics().len() > 3000);
+    assert!(report.render(false).contains("--> long.toml:3000:1\n"));
 }
