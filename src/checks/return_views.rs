@@ -168,7 +168,7 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
 
 fn design(m: &Model, case: Case, annex: &Annex) -> actions::Design {
     let mut s = Sheet::silent();
-    let (_, _, gamma_W, _) = actions::factors(&mut s, case, annex, m.helping);
+    let (.., gamma_W) = actions::factors(&mut s, case, annex, m.helping);
     actions::design(&mut s, m, gamma_W)
 }
 

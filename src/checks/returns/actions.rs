@@ -1,7 +1,7 @@
 //! Design actions on a section of a return, for one combination and one direction of the wind.
 
 use super::model::{At, Flange, Model, Vertical};
-use crate::quantity::functions::{abs, metres, sqrt};
+use crate::quantity::functions::{abs, metres, sq, sqrt};
 use crate::quantity::{Force, Length, LineLoad, Moment, Num};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
@@ -88,19 +88,18 @@ pub struct Actions {
 }
 
 /// Partial factors of the case, noted on the sheet.
-pub fn factors(s: &mut Sheet, case: Case, annex: &Annex, helping: f64) -> (Num, Num, Num, Num) {
+pub fn factors(s: &mut Sheet, case: Case, annex: &Annex, helping: f64) -> (Num, Num, Num) {
     let f = case.combination.factors(annex, helping);
     let source = case.combination.clause();
     given!(s, "factor on dead load", source, gamma_G = Num::new(f.gamma_G));
     given!(s, "factor on imposed load", source, gamma_Q = Num::new(f.gamma_Q));
     given!(s, "factor on wind", source, gamma_W = Num::new(f.gamma_W));
-    given!(s, "factor on roof uplift taken off the dead load", source, gamma_U = Num::new(f.gamma_U));
-    (gamma_G, gamma_Q, gamma_W, gamma_U)
+    (gamma_G, gamma_Q, gamma_W)
 }
 
 /// Actions at a section. `l`, `h` and the loads of the model stand on the sheet or are noted here.
 pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Actions {
-    let (gamma_G, gamma_Q, gamma_W, gamma_U) = factors(s, case, annex, m.helping);
+    let (gamma_G, gamma_Q, gamma_W) = factors(s, case, annex, m.helping);
     let Vertical { G, Q, U, S_G, S_Q, S_U, .. } = m.vertical(at);
     let source = "load table of this sheet";
     given!(s, "dead load at the section, own weight above included", source, G = G);
@@ -112,6 +111,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         calc!(s, "statics", "moment of the vertical loads", M_N = gamma_G * S_G + gamma_Q * S_Q);
         (N_Ed, M_N)
     } else {
+        let f = case.combination.factors(annex, m.helping);
+        given!(s, "factor on roof uplift", case.combination.clause(), gamma_U = Num::new(f.gamma_U));
         given!(s, "roof uplift", source, U = U);
         given!(s, "first moment of the uplift", source, S_U = S_U);
         calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q - gamma_U * U);
@@ -162,52 +163,107 @@ pub struct Design {
     pub M_h: Moment,
 }
 
-/// Wind and tilt at design value; `gamma_W` stands on the sheet.
+/// Wind and tilt at design value; `gamma_W` stands on the sheet. What is nought is not printed.
 pub fn design(s: &mut Sheet, m: &Model, gamma_W: Num) -> Design {
     let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
     let H_nu = tilt(s, m);
     calc!(s, "EN 1990 6.4.3.2", "force at the head, tilt included", H_Ed = gamma_W * H_k + H_nu);
-    calc!(s, "EN 1990 6.4.3.2", "line load", w_Ed = gamma_W * w_k);
-    calc!(s, "EN 1990 6.4.3.2", "moment at the head", M_h = gamma_W * M_k);
+    let w_Ed = if w_k == LineLoad::ZERO {
+        LineLoad::ZERO
+    } else {
+        calc!(s, "EN 1990 6.4.3.2", "line load", w_Ed = gamma_W * w_k);
+        w_Ed
+    };
+    let M_h = if M_k == Moment::ZERO {
+        Moment::ZERO
+    } else {
+        calc!(s, "EN 1990 6.4.3.2", "moment at the head", M_h = gamma_W * M_k);
+        M_h
+    };
     Design { H_Ed, w_Ed, M_h }
 }
 
 /// Moment and shear of wind and tilt at the section.
 fn lateral(s: &mut Sheet, m: &Model, gamma_W: Num, at: At) -> (Moment, Force) {
+    let d = design(s, m, gamma_W);
+    let M_W = if m.propped { held(s, m, d, at) } else { cantilever(s, m, d, at) };
+    let V_Ed = shear(s, m, d, at);
+    (M_W, V_Ed)
+}
+
+/// Moment of the lateral loads in a cantilever.
+fn cantilever(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
     let h = m.h;
-    let Design { H_Ed, w_Ed, M_h } = design(s, m, gamma_W);
-    match (m.propped, at) {
-        (false, At::Head) => {
-            calc!(s, "statics", "moment of the lateral loads", M_W = 1.0 * M_h);
-            calc!(s, "statics", "shear", V_Ed = H_Ed);
-            (M_W, V_Ed)
+    let Design { H_Ed, w_Ed, M_h } = d;
+    match (at, M_h == Moment::ZERO, w_Ed == LineLoad::ZERO) {
+        (At::Head, true, _) => {
+            given!(s, "moment of the lateral loads at the head", "none from above", M_W = Moment::ZERO);
+            M_W
         }
-        (false, _) => {
-            calc!(
-                s,
-                "statics, head free",
-                "moment of the lateral loads",
-                M_W = M_h + H_Ed * h + w_Ed * h * h / 2.0
-            );
-            calc!(s, "statics, head free", "shear", V_Ed = H_Ed + w_Ed * h);
-            (M_W, V_Ed)
+        (At::Head, false, _) => {
+            calc!(s, "statics", "moment of the lateral loads at the head", M_W = M_h);
+            M_W
         }
-        (true, At::Middle) => {
-            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h + w_Ed * h * h / 8.0);
-            calc!(s, "statics, head held", "shear", V_Ed = 0.0 * w_Ed * h);
-            (M_W, V_Ed)
+        (_, true, true) => {
+            calc!(s, "statics, head free", "moment of the lateral loads", M_W = H_Ed * h);
+            M_W
         }
-        (true, _) => {
-            calc!(s, "statics, head held", "moment of the lateral loads", M_W = 1.0 * M_h);
-            calc!(
-                s,
-                "statics, head held",
-                "shear; the named walls take the head force",
-                V_Ed = w_Ed * h / 2.0
-            );
-            (M_W, V_Ed)
+        (_, false, true) => {
+            calc!(s, "statics, head free", "moment of the lateral loads", M_W = M_h + H_Ed * h);
+            M_W
+        }
+        (_, true, false) => {
+            calc!(s, "statics, head free", "moment of the lateral loads", M_W = H_Ed * h + w_Ed * sq(h) / 2.0);
+            M_W
+        }
+        (_, false, false) => {
+            calc!(s, "statics, head free", "moment of the lateral loads", M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0);
+            M_W
         }
     }
+}
+
+/// Moment of the lateral loads where the head is held.
+fn held(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
+    let h = m.h;
+    let Design { w_Ed, M_h, .. } = d;
+    match (at == At::Middle && w_Ed > LineLoad::ZERO, M_h == Moment::ZERO) {
+        (false, true) => {
+            given!(s, "moment of the lateral loads", "head held: none here", M_W = Moment::ZERO);
+            M_W
+        }
+        (false, false) => {
+            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h);
+            M_W
+        }
+        (true, true) => {
+            calc!(s, "statics, head held", "moment of the lateral loads", M_W = w_Ed * sq(h) / 8.0);
+            M_W
+        }
+        (true, false) => {
+            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h + w_Ed * sq(h) / 8.0);
+            M_W
+        }
+    }
+}
+
+/// Shear at the section; a held head passes its force to the named walls.
+fn shear(s: &mut Sheet, m: &Model, d: Design, at: At) -> Force {
+    let h = m.h;
+    let Design { H_Ed, w_Ed, .. } = d;
+    if m.propped {
+        if !m.sheared() || at == At::Middle {
+            return Force::ZERO;
+        }
+        calc!(s, "statics, head held", "shear; the named walls take the head force", V_Ed = w_Ed * h / 2.0);
+        return V_Ed;
+    }
+    if at == At::Head || w_Ed == LineLoad::ZERO {
+        calc!(s, "statics, head free", "shear", V_Ed = H_Ed);
+        return V_Ed;
+    }
+    calc!(s, "statics, head free", "shear", V_Ed = H_Ed + w_Ed * h);
+    V_Ed
 }
 
 /// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.

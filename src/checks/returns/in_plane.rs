@@ -49,7 +49,8 @@ pub fn overturning(s: &mut Sheet, m: &Model, a: &Actions, id: &str) {
 /// Stresses of the section, no tension taken: 6.2(2) for a plain return, first principles with a flange.
 pub fn stresses(s: &mut Sheet, m: &Model, a: &Actions) -> Stressed {
     let (l, t, N_Ed, M_Ed) = (m.l, m.t, a.N_Ed, a.M_Ed);
-    if !decide!(s, "6.2", "", "nothing presses the section", N_Ed > 0.0 * KN) {
+    if N_Ed <= Force::ZERO {
+        decide!(s, "6.2", "", "nothing presses the section", N_Ed > 0.0 * KN);
         return Stressed {
             l_c: Length::ZERO,
             N_web: Force::ZERO,

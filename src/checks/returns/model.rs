@@ -133,6 +133,11 @@ impl At {
 }
 
 impl Model {
+    /// Whether any shear reaches the return: a head that is held passes its force on.
+    pub fn sheared(&self) -> bool {
+        !self.propped || self.lateral.w_k > LineLoad::ZERO
+    }
+
     /// Vertical loads at a section: own weight above it, and at the foot what the flange brings.
     pub fn vertical(&self, at: At) -> Vertical {
         let v = self.at_head.with_dead(self.own * at.share(), Length::ZERO);

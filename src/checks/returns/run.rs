@@ -7,6 +7,7 @@ use super::{flexure, in_plane, sliding, vertical};
 use crate::quantity::{Num, Stress, print};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
+use crate::given;
 use crate::trace::{Column, Sheet, Table};
 
 /// One check of a return in one case. The order is the order on the sheet.
@@ -89,7 +90,8 @@ impl Check {
     /// Whether it applies to this return.
     pub fn applies(self, m: &Model) -> bool {
         match self {
-            Self::Sliding => m.dpc,
+            Self::Shear | Self::ShearHead => m.sheared(),
+            Self::Sliding => m.dpc && m.sheared(),
             Self::Junction => m.flange.is_some(),
             Self::Middle => m.propped,
             Self::Flexure => !m.dpc && !m.propped,
@@ -252,6 +254,17 @@ pub fn record(s: &mut Sheet, m: &Model, annex: &Annex, ready: Ready, matrix: &Ma
     s.case.clear();
 }
 
+/// The least reduction; 1 where slenderness left its range, which no return passes anyhow.
+fn least(s: &mut Sheet, reductions: Option<Reductions>) -> Num {
+    match reductions {
+        Some(r) => r.least(s),
+        None => {
+            given!(s, "reduction across the wall: slenderness is outside the method", "this sheet", Phi = Num::new(1.0));
+            Phi
+        }
+    }
+}
+
 /// Works checks of one case: the actions once per section, the stresses once, the reductions once.
 fn work(
     s: &mut Sheet,
@@ -290,7 +303,7 @@ fn work(
             let id = id(check);
             match (check, &stressed) {
                 (Check::Toe, Some(st)) => {
-                    let phi = reductions.map_or(Num::new(1.0), Reductions::least);
+                    let phi = least(s, reductions);
                     in_plane::toe(s, &a, st, phi, ready.f_d, &id);
                 }
                 (Check::Shear | Check::ShearHead, Some(st)) => sliding::shear(s, m, &a, st, &id),
@@ -300,7 +313,7 @@ fn work(
                     }
                 }
                 (Check::Middle, Some(st)) => {
-                    let phi = reductions.map_or(Num::new(1.0), |r| r.middle);
+                    let phi = least(s, reductions);
                     flexure::at_mid_height(s, m, &a, st, phi, ready.f_d, &id);
                 }
                 (Check::Sliding, _) => sliding::sliding(s, m, &a, mu_source, &id),

@@ -32,12 +32,16 @@ pub fn shear(s: &mut Sheet, m: &Model, a: &Actions, st: &Stressed, id: &str) {
         given!(s, "initial shear strength", "materials sheet", f_vk0 = m.masonry.f_vk0);
         f_vk0
     };
-    given!(s, "vertical force in the return itself", "from the stress block", N_web = st.N_web);
-    given!(s, "compressed length", "from the stress block", l_c = l_c);
-    calc!(s, "3.6.2(3)", "compressive stress over the compressed length", sigma_d = N_web / (t * l_c));
-    let gamma_M = gamma_Mv;
-    given!(s, "the same, as the formula names it", "Table NA.1", gamma_M = gamma_M);
-    let f_vd = clause::design_strength(s, m.masonry.perpends_filled, f_vk0, sigma_d, f_b, gamma_M);
+    let sigma_d = if a.flange.is_some() {
+        given!(s, "vertical force in the return itself", "from the stress block", N_web = st.N_web);
+        calc!(s, "3.6.2(3)", "compressive stress over the compressed length", sigma_d = N_web / (t * l_c));
+        sigma_d
+    } else {
+        let N_Ed = st.N_web;
+        calc!(s, "3.6.2(3)", "compressive stress over the compressed length", sigma_d = N_Ed / (t * l_c));
+        sigma_d
+    };
+    let f_vd = clause::design_strength(s, m.masonry.perpends_filled, f_vk0, sigma_d, f_b, gamma_Mv);
     calc!(s, "6.2(2) eq. 6.13", "shear resistance", V_Rd = f_vd * t * l_c);
     verify!(s, id, "6.2(1) eq. 6.12", words, V_Ed <= V_Rd);
 }

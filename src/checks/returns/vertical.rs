@@ -2,12 +2,12 @@
 
 use super::actions::{Case, factors};
 use super::model::{At, Model};
-use crate::quantity::functions::{KN, abs};
-use crate::quantity::{Length, Num, Stress};
+use crate::quantity::functions::{abs, min};
+use crate::quantity::{Force, Length, Moment, Num, Stress};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::{reduction, slenderness};
 use crate::trace::{Outside, Sheet};
-use crate::{calc, decide, given, require, verify};
+use crate::{calc, given, require, verify};
 
 /// What does not depend on the case: effective height and thickness, initial eccentricity.
 #[derive(Clone, Copy, Debug)]
@@ -77,9 +77,11 @@ pub struct Reductions {
 }
 
 impl Reductions {
-    /// The least of the three.
-    pub fn least(self) -> Num {
-        [self.middle, self.foot].into_iter().fold(self.head, |a, b| if b < a { b } else { a })
+    /// The least of the three, on the sheet.
+    pub fn least(self, s: &mut Sheet) -> Num {
+        let (Phi_h, Phi_m, Phi_f) = (self.head, self.middle, self.foot);
+        calc!(s, "6.1.2.1(2)", "least reduction across the wall", Phi = min(Phi_h, min(Phi_m, Phi_f)));
+        Phi
     }
 }
 
@@ -87,32 +89,24 @@ impl Reductions {
 /// nil at the foot; half of it is taken in the middle.
 pub fn reductions(s: &mut Sheet, m: &Model, sl: Slender, annex: &Annex, case: Case) -> Reductions {
     let (t, e_init, f_k) = (m.t, sl.e_init, m.masonry.f_k);
-    let (gamma_G, gamma_Q, _, _) = factors(s, case, annex, m.helping);
+    let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
     let v = m.vertical(At::Head);
-    given!(s, "dead load at the head", "load table", G_h = v.G);
-    given!(s, "imposed load at the head", "load table", Q_h = v.Q);
-    given!(s, "moment of the dead load across the wall", "load table", T_G = v.T_G);
-    given!(s, "moment of the imposed load across the wall", "load table", T_Q = v.T_Q);
-    calc!(s, "statics", "vertical force at the head", N_h = gamma_G * G_h + gamma_Q * Q_h);
-    let loaded = decide!(s, "6.1.2.2", "", "no load at the head, so none is eccentric", N_h > 0.0 * KN);
-    let e_head = if loaded {
-        calc!(
-            s,
-            "6.1.2.2(1)",
-            "eccentricity of the loads at the head",
-            e_head = abs(gamma_G * T_G + gamma_Q * T_Q) / N_h
-        );
-        e_head
+    let central = v.T_G == Moment::ZERO && v.T_Q == Moment::ZERO;
+    let e_h = if central || v.G + v.Q <= Force::ZERO {
+        given!(s, "eccentricity of the loads at the head", "load table: all loads central", e_h = Length::ZERO);
+        e_h
     } else {
-        given!(s, "eccentricity of the loads at the head", "no load", e_head = Length::ZERO);
-        e_head
+        given!(s, "dead load at the head", "load table", G_h = v.G);
+        given!(s, "imposed load at the head", "load table", Q_h = v.Q);
+        given!(s, "moment of the dead load across the wall", "load table", T_G = v.T_G);
+        given!(s, "moment of the imposed load across the wall", "load table", T_Q = v.T_Q);
+        calc!(s, "6.1.2.2(1)", "eccentricity of the loads at the head",
+            e_h = abs(gamma_G * T_G + gamma_Q * T_Q) / (gamma_G * G_h + gamma_Q * Q_h));
+        e_h
     };
-    given!(s, "as the formula names it, at the head", "above", e_load = e_head);
-    let head = reduction::at_end(s, t, e_init, e_load);
-    calc!(s, "6.1.2.2(1)", "eccentricity of the loads in the middle", e_load = e_head / 2.0);
-    let middle = reduction::in_middle(s, t, sl.t_ef, sl.h_ef, e_init, e_load, f_k);
-    given!(s, "eccentricity of the loads at the foot", "held at the foot", e_load = Length::ZERO);
-    let foot = reduction::at_end(s, t, e_init, e_load);
+    let head = reduction::at_head(s, t, e_init, e_h);
+    let middle = reduction::in_middle(s, t, sl.t_ef, sl.h_ef, e_init, e_h, f_k);
+    let foot = reduction::at_foot(s, t, e_init);
     Reductions { head, middle, foot }
 }
 
@@ -128,17 +122,26 @@ pub fn resistance(
     id: &str,
 ) {
     let (l, t) = (m.l, m.t);
-    let (gamma_G, gamma_Q, _, _) = factors(s, case, annex, m.helping);
+    let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
     let v = m.at_head.with_dead(m.own * at.share(), Length::ZERO);
     given!(s, "dead load at the section", "load table", G = v.G);
-    given!(s, "imposed load at the section", "load table", Q = v.Q);
-    calc!(s, "statics", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
-    let (phi, words) = match at {
-        At::Head => (r.head, "vertical resistance at the head"),
-        At::Middle => (r.middle, "vertical resistance in the middle"),
-        At::Foot => (r.foot, "vertical resistance at the foot"),
-    };
-    given!(s, "reduction at this section", "above", Phi = phi);
-    calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi * t * l * f_d);
-    verify!(s, id, "6.1.2.1(1) eq. 6.1", words, N_Ed <= N_Rd);
+    given!(s, "imposed load", "load table", Q = v.Q);
+    calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
+    match at {
+        At::Head => {
+            let Phi_h = r.head;
+            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_h * t * l * f_d);
+            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the head", N_Ed <= N_Rd);
+        }
+        At::Middle => {
+            let Phi_m = r.middle;
+            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_m * t * l * f_d);
+            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance in the middle", N_Ed <= N_Rd);
+        }
+        At::Foot => {
+            let Phi_f = r.foot;
+            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_f * t * l * f_d);
+            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the foot", N_Ed <= N_Rd);
+        }
+    }
 }

@@ -3,19 +3,26 @@
 use crate::quantity::functions::{exp, max, sq, sqrt};
 use crate::quantity::{Length, Num, Stress};
 use crate::trace::Sheet;
-use crate::{calc, given};
+use crate::calc;
 
-/// Phi_i at head or foot, from the eccentricity `e_load = M_id/N_id` of the loads.
+/// Phi at the head, from the eccentricity `e_h = M_id/N_id` of the loads there.
 ///
-/// 6.1.2.2(1) eq. 6.4 and 6.5: `e_i = max(e_load + e_init, 0.05 t)`, `Phi_i = 1 - 2 e_i/t`, with
-/// `e_init = h_ef/450`. `t`, `e_init` and `e_load` stand on the sheet.
-pub fn at_end(s: &mut Sheet, t: Length, e_init: Length, e_load: Length) -> Num {
-    calc!(s, "6.1.2.2(1) eq. 6.5", "eccentricity at head or foot", e_i = max(e_load + e_init, 0.05 * t));
-    calc!(s, "6.1.2.2(1) eq. 6.4", "reduction at head or foot", Phi_i = 1.0 - 2.0 * e_i / t);
-    Phi_i
+/// 6.1.2.2(1) eq. 6.4 and 6.5: `e_i = max(e_h + e_init, 0.05 t)`, `Phi = 1 - 2 e_i/t`, with
+/// `e_init = h_ef/450`. `t`, `e_init` and `e_h` stand on the sheet.
+pub fn at_head(s: &mut Sheet, t: Length, e_init: Length, e_h: Length) -> Num {
+    calc!(s, "6.1.2.2(1) eq. 6.5", "eccentricity at the head", e_ih = max(e_h + e_init, 0.05 * t));
+    calc!(s, "6.1.2.2(1) eq. 6.4", "reduction at the head", Phi_h = 1.0 - 2.0 * e_ih / t);
+    Phi_h
 }
 
-/// Phi_m in the middle fifth, from the eccentricity `e_load` there.
+/// Phi at the foot, where the loads are taken to be central: as [`at_head`] with no eccentricity.
+pub fn at_foot(s: &mut Sheet, t: Length, e_init: Length) -> Num {
+    calc!(s, "6.1.2.2(1) eq. 6.5", "eccentricity at the foot, loads central", e_if = max(e_init, 0.05 * t));
+    calc!(s, "6.1.2.2(1) eq. 6.4", "reduction at the foot", Phi_f = 1.0 - 2.0 * e_if / t);
+    Phi_f
+}
+
+/// Phi_m in the middle fifth, from half the eccentricity `e_h` of the loads at the head.
 ///
 /// 6.1.2.2(1) eq. 6.6 to 6.8 and Annex G: `Phi_m = A_1 exp(-u^2/2)`, `A_1 = 1 - 2 e_mk/t`,
 /// `u = (lambda - 0.063)/(0.73 - 1.17 e_mk/t)`, `lambda = (h_ef/t_ef) sqrt(f_k/E)`. Creep eccentricity
@@ -26,15 +33,15 @@ pub fn in_middle(
     t_ef: Length,
     h_ef: Length,
     e_init: Length,
-    e_load: Length,
+    e_h: Length,
     f_k: Stress,
 ) -> Num {
-    given!(s, "eccentricity from creep", "6.1.2.2(2), UK: nil up to a slenderness of 27", e_k = Length::ZERO);
-    calc!(s, "6.1.2.2(1) eq. 6.6", "eccentricity in the middle", e_mk = max(e_load + e_init + e_k, 0.05 * t));
+    calc!(s, "6.1.2.2(1) eq. 6.6", "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
+        e_mk = max(e_h / 2.0 + e_init, 0.05 * t));
     calc!(s, "3.7.2(2)", "modulus of elasticity, UK", E = 1000.0 * f_k);
-    calc!(s, "Annex G eq. G.4", lambda = h_ef / t_ef * sqrt(f_k / E));
-    calc!(s, "Annex G eq. G.3", u = (lambda - 0.063) / (0.73 - 1.17 * e_mk / t));
-    calc!(s, "Annex G eq. G.2", A_1 = 1.0 - 2.0 * e_mk / t);
+    calc!(s, "Annex G eq. G.4", "slenderness for Annex G", lambda = h_ef / t_ef * sqrt(f_k / E));
+    calc!(s, "Annex G eq. G.3", "exponent", u = (lambda - 0.063) / (0.73 - 1.17 * e_mk / t));
+    calc!(s, "Annex G eq. G.2", "factor for eccentricity", A_1 = 1.0 - 2.0 * e_mk / t);
     calc!(s, "Annex G eq. G.1", "reduction in the middle", Phi_m = A_1 * exp(-(sq(u) / 2.0)));
     Phi_m
 }
@@ -52,7 +59,7 @@ mod tests {
             t,
             Length::new(100.0 * slenderness),
             Length::ZERO,
-            e,
+            e * 2.0,
             Stress::new(5.0),
         )
         .base()
@@ -81,7 +88,7 @@ mod tests {
     #[test]
     fn an_end_with_a_small_eccentricity_keeps_the_minimum() {
         let mut s = Sheet::silent();
-        let phi = at_end(&mut s, Length::new(100.0), Length::new(1.0), Length::ZERO);
+        let phi = at_head(&mut s, Length::new(100.0), Length::new(1.0), Length::ZERO);
         assert!((phi.base() - 0.9).abs() < 1e-12);
     }
 }

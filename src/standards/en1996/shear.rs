@@ -16,7 +16,7 @@ pub fn design_strength(
     f_vk0: Stress,
     sigma_d: Stress,
     f_b: Stress,
-    gamma_M: Num,
+    gamma_Mv: Num,
 ) -> Stress {
     if perpends_filled {
         calc!(
@@ -25,7 +25,7 @@ pub fn design_strength(
             "characteristic shear strength",
             f_vk = min(f_vk0 + 0.4 * sigma_d, 0.065 * f_b)
         );
-        calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_M);
+        calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_Mv);
         f_vd
     } else {
         calc!(
@@ -34,7 +34,7 @@ pub fn design_strength(
             "characteristic shear strength, perpends not filled",
             f_vk = min(0.5 * f_vk0 + 0.4 * sigma_d, 0.045 * f_b)
         );
-        calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_M);
+        calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_Mv);
         f_vd
     }
 }
@@ -51,19 +51,18 @@ pub fn compressed_length(
         s,
         "6.2(2)",
         "the whole length is compressed",
-        "part of the length would be in tension and is left out",
+        "the part in tension is left out",
         e <= l / 6.0
     );
     if whole {
         calc!(s, "6.2(2)", "compressed length", l_c = l);
         return l_c;
     }
-    let stands = decide!(s, "6.2(2)", "", "no length stays compressed", e < l / 2.0);
-    if stands {
+    if e < l / 2.0 {
         calc!(s, "6.2(2)", "compressed length", l_c = 3.0 * (l / 2.0 - e));
-        l_c
-    } else {
-        calc!(s, "6.2(2)", "compressed length", l_c = 0.0 * MM);
-        l_c
+        return l_c;
     }
+    decide!(s, "6.2(2)", "", "no length stays compressed", e < l / 2.0);
+    calc!(s, "6.2(2)", "compressed length", l_c = 0.0 * MM);
+    l_c
 }
