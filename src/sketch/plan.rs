@@ -7,8 +7,8 @@ use super::board::{Board, polygon};
 use super::drawing::Role;
 use super::hatch::{self, Material};
 use super::load;
+use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
-use super::place::{Note, Spot};
 use super::scale::Scale;
 use super::text::Text;
 

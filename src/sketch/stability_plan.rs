@@ -5,7 +5,7 @@ use kurbo::Point;
 use super::board::{Board, Words};
 use super::drawing::{Drawing, Role};
 use super::key_plan::{PlanWind, surroundings};
-use super::place::Note;
+use super::note::Note;
 use super::plan::{self, Fate, PlanWall, wall_note};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
