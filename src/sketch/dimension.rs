@@ -71,7 +71,7 @@ fn chain(board: &mut Board, way: Way, places: &[f64], level: f64, from: f64, tex
         Way::Up => Point::new(level, place),
     };
     let side = if level >= from { 1.0 } else { -1.0 };
-    let (first, last) = (places[0], places[places.len() - 1]);
+    let [first, .., last] = *places else { return };
     board.line(Pen::Dimension, at(first, level), at(last, level));
     for place in places {
         if (level - from).abs() > GAP {

@@ -135,8 +135,8 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     let stations = stations(view);
     let xs: Vec<f64> = stations.iter().map(|x| ruler.at(*x, 0.0).x).collect();
     let texts: Vec<Text> = steps(&stations).into_iter().map(Text::from).collect();
-    let deeper = |edge, length| if in_two_lines(edge, length) { 4.0 } else { 0.0 };
-    let mut row = y + 10.0;
+    let deeper = |edge, length| if in_two_lines(edge, length) { 3.5 } else { 0.0 };
+    let mut row = y + 8.5;
     if texts.len() > 1 {
         dimension::chain_across(&mut board, &xs, row, y, &texts);
         row += dimension::ROW + 1.0;
@@ -145,7 +145,7 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     dimension::up(
         &mut board,
         (panel.y1, panel.y0),
-        x - 10.0 - deeper(&view.left, panel.height()),
+        x - 8.5 - deeper(&view.left, panel.height()),
         x,
         mm(view.height),
     );
@@ -297,7 +297,7 @@ fn words(board: &mut Board, view: &PanelElevation, panel: Rect) {
         note = note.line(value.text());
     }
     for down in [0.5, 0.35, 0.65, 0.2, 0.8, 0.1, 0.9] {
-        for across in [0.5, 0.35, 0.65, 0.22, 0.78, 0.12, 0.88] {
+        for across in [0.5, 0.35, 0.65, 0.25, 0.75, 0.18, 0.82, 0.12, 0.88] {
             let at = panel.origin() + Vec2::new(across * panel.width(), down * panel.height());
             note = note.spot(Spot::new(at, 0.0, 0.0));
         }

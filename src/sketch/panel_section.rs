@@ -263,9 +263,11 @@ fn actions(board: &mut Board, view: &PanelSection, ruler: Ruler, high: f64) {
                 .spot(Spot::new(back - Vec2::new(1.5, 0.0), -1.0, 0.0)),
         );
     }
-    if let Some((index, action)) = &view.precompression {
+    if let Some((index, action)) = &view.precompression
+        && let Some(layer) = view.layers.get(*index)
+    {
         let before = thickness(&view.layers[..*index]);
-        let middle = before + view.layers[*index].thickness() / 2.0;
+        let middle = before + layer.thickness() / 2.0;
         let tip = ruler.by(middle, high, 0.0, PAST + 2.0);
         let tail = tip - Vec2::new(0.0, 9.0);
         load::arrow(board, tail, tip);

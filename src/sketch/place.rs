@@ -26,7 +26,7 @@ const CROSSING_COST: f64 = 2.0;
 /// Cost of a label that needs a mask.
 const MASK_COST: f64 = 9.0;
 /// Cost per millimetre by which a label makes the drawing larger.
-const GROWTH_COST: f64 = 0.25;
+const GROWTH_COST: f64 = 0.5;
 
 /// Decides the place of every note; the answer is in the order of the notes.
 pub fn place(notes: &[Note], ground: &Ground, bounds: Rect) -> Vec<Block> {

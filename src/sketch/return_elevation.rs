@@ -62,7 +62,7 @@ pub struct PlacedLoad {
 /// The outer wall past head and base, mm on paper.
 pub(super) const WALL_PAST: f64 = 5.0;
 /// Longest piece of removed wall that is drawn, mm on paper.
-const REMOVED_SHOWN: f64 = 22.0;
+const REMOVED_SHOWN: f64 = 27.0;
 
 /// Draws the elevation of a return.
 pub fn return_elevation(view: &ReturnElevation, frame: Frame) -> Drawing {
@@ -187,7 +187,7 @@ fn body(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
         note = note.spot(Spot::new(ruler.by(0.0, share * h, 4.0, 0.0), ruler.hand, 0.0).led());
     }
     for share in [0.12, 0.2, 0.28] {
-        note = note.spot(Spot::new(ruler.by(l, share * h, 4.0, 0.0), ruler.hand, 0.0).led());
+        note = note.spot(Spot::new(ruler.by(l, share * h, 3.0, 0.0), ruler.hand, 0.0).led());
     }
     board.note(note);
 }

@@ -22,7 +22,8 @@ pub struct ReturnSection {
     pub length: f64,
     /// Layers of the return, from the lower edge of the drawing upwards.
     pub layers: Vec<Layer>,
-    /// Index in `layers` of the leaf that carries the load and is checked.
+    /// Index in `layers` of the leaf that carries the load and is checked; the whole thickness
+    /// where there is no such layer.
     pub loaded: usize,
     /// Side on which the outer wall stands.
     pub wall: Side,
@@ -120,7 +121,7 @@ impl<'a> Section<'a> {
             edges.push((y, y + layer.thickness()));
             y += layer.thickness();
         }
-        let (low, high) = edges[view.loaded];
+        let (low, high) = edges.get(view.loaded).copied().unwrap_or((0.0, y));
         let zero = (low + high) / 2.0;
         let bands: Vec<_> = edges.iter().map(|(a, b)| (a - zero, b - zero)).collect();
         let body = bands
@@ -216,9 +217,14 @@ impl<'a> Section<'a> {
 
     /// Upper and lower edge of all layers of the return on the paper.
     pub fn edges(&self) -> (f64, f64) {
-        let low = self.bands.first().map_or(0.0, |band| band.0);
-        let high = self.bands.last().map_or(0.0, |band| band.1);
+        let (low, high) = self.whole();
         (self.ruler.at(0.0, high).y, self.ruler.at(0.0, low).y)
+    }
+
+    /// Lower and upper edge of all layers of the return, mm.
+    pub fn whole(&self) -> (f64, f64) {
+        let low = self.bands.first().map_or(0.0, |band| band.0);
+        (low, self.bands.last().map_or(0.0, |band| band.1))
     }
 
     fn dimensions(&self, board: &mut Board) {
@@ -227,7 +233,7 @@ impl<'a> Section<'a> {
         let x = |x| self.ruler.at(x, 0.0).x;
         let row = top - if view.stress.is_some() { 16.0 } else { 6.0 };
         dimension::across(board, (x(0.0), x(view.length)), row, top, mm(view.length));
-        let ys: Vec<f64> = std::iter::once(self.bands[0].0)
+        let ys: Vec<f64> = std::iter::once(self.whole().0)
             .chain(self.bands.iter().map(|band| band.1))
             .map(|y| self.ruler.at(0.0, y).y)
             .collect();

@@ -20,7 +20,11 @@ impl Section<'_> {
             return;
         };
         let (from, to) = self.pressed(stress);
-        let leaf = self.bands[self.view.loaded];
+        let leaf = self
+            .bands
+            .get(self.view.loaded)
+            .copied()
+            .unwrap_or(self.whole());
         if to > 0.0 {
             board.fill(
                 Ink::Stress,

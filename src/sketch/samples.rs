@@ -116,21 +116,18 @@ pub fn solid_section() -> ReturnSection {
 pub fn actions(propped: bool) -> ReturnActions {
     let h = 2400.0;
     let samples = |f: &dyn Fn(f64) -> f64| {
-        (0..=24)
-            .map(|i| (h * f64::from(i) / 24.0, f(h * f64::from(i) / 24.0)))
-            .collect()
+        let heights = (0..=24).map(|i| h * f64::from(i) / 24.0);
+        heights.map(|z| (z, f(z))).collect()
     };
-    let w = 0.00195;
-    let (m, v): (Box<dyn Fn(f64) -> f64>, Box<dyn Fn(f64) -> f64>) = if propped {
-        (
-            Box::new(move |z| w * z * (h - z) / 2.0),
-            Box::new(move |z| w * (h / 2.0 - z)),
-        )
-    } else {
-        (
-            Box::new(move |z| w * (h - z).powi(2) / 2.0 + 2.9 * (h - z)),
-            Box::new(move |z| w * (h - z) + 2.9),
-        )
+    // kN/mm and kN, so that the values are in kNmm and kN: only their proportions are drawn.
+    let (w, head) = (0.00195, 2.9);
+    let m = |z: f64| match propped {
+        true => w * z * (h - z) / 2.0,
+        false => w * (h - z).powi(2) / 2.0 + head * (h - z),
+    };
+    let v = |z: f64| match propped {
+        true => w * (h / 2.0 - z),
+        false => w * (h - z) + head,
     };
     let (m_values, v_values) = if propped {
         (

@@ -44,8 +44,7 @@ pub fn stability_plan(view: &StabilityPlan, frame: Frame) -> Drawing {
 fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
     let mut board = Board::default();
     plan::walls(&mut board, &view.walls, scale);
-    for share in &view.shares {
-        let wall = &view.walls[share.wall];
+    for (wall, share) in bracing(view) {
         let mut note = Note::new(Role::Load, Point::ZERO, Text::mark(&wall.name));
         for line in lines(share, wall.fate) {
             note = note.words(&line);
@@ -68,6 +67,13 @@ fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
     })
 }
 
+/// The shares with their walls.
+fn bracing(view: &StabilityPlan) -> impl Iterator<Item = (&PlanWall, &Share)> {
+    view.shares
+        .iter()
+        .filter_map(|share| Some((view.walls.get(share.wall)?, share)))
+}
+
 /// `before 24 %` and `after 31 %`; empty where there is nothing to say.
 fn lines(share: &Share, fate: Fate) -> [String; 2] {
     let line = |word, value: &Option<String>, none: (Fate, &str)| match value {
@@ -86,8 +92,7 @@ fn alt(view: &StabilityPlan) -> String {
         "Plan of the {} with each bracing wall's share of the storey's wind. ",
         view.title
     );
-    for share in &view.shares {
-        let wall = &view.walls[share.wall];
+    for (wall, share) in bracing(view) {
         alt += &match (&share.before, &share.after) {
             (Some(before), Some(after)) => {
                 format!(

@@ -201,3 +201,29 @@ fn awkward_cases_are_sound() {
         tidy(drawing);
     }
 }
+
+/// Frames of half a page width, beside one another or beside text.
+#[test]
+fn small_frames_are_kept() {
+    let half = Frame::new(82.0, 80.0);
+    let [before, after] = panels();
+    let pair = panel_pair(&before, &after, half);
+    let column = Frame::new(105.0, 110.0);
+    let mut drawings = pair.to_vec();
+    assert!(pair.iter().all(|drawing| half.holds(drawing)));
+    drawings.push(return_elevation(&elevation(), column));
+    drawings.push(return_section(&section(), column));
+    drawings.push(return_actions(&actions(true), column));
+    drawings.push(panel_section(&wall_section(), column));
+    drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
+    for drawing in &drawings {
+        show(drawing, "-small");
+        tidy(drawing);
+        assert!(
+            drawing.width <= column.width,
+            "{} is {} wide",
+            drawing.name,
+            drawing.width
+        );
+    }
+}
