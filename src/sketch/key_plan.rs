@@ -245,7 +245,7 @@ fn key(view: &KeyPlan) -> String {
         key += "; dashed: removed";
     }
     if has(Fate::Added) {
-        key += "; strewn hatching: new";
+        key += "; crossed hatching: new";
     }
     if !view.beams.is_empty() {
         key += "; chain line: beam over";

@@ -203,6 +203,8 @@ proptest! {
     fn any_return_elevation_is_sound_and_true(view in any_elevation()) {
         let drawing = return_elevation(&view, FRAME);
         sound(&drawing);
+        let json = |drawing: &Drawing| serde_json::to_string(drawing).expect("serialises");
+        prop_assert_eq!(json(&drawing), json(&return_elevation(&view, FRAME)));
         prop_assert!(FRAME.holds(&drawing), "{} x {}", drawing.width, drawing.height);
         prop_assert!(has_length(&drawing, Pen::Outline, view.length));
         prop_assert!(has_length(&drawing, Pen::Outline, view.height));

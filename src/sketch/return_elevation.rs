@@ -211,12 +211,15 @@ fn base_and_head(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
             .spot(Spot::new(ruler.by(l, 0.0, 3.5, -2.2), ruler.hand, 1.0).led()),
     );
     if view.dpc {
-        // The course runs through the return and through the leaves of the outer wall.
-        board.line(
-            Pen::Cut,
-            ruler.at(-thickness(&view.wall_layers), 0.0),
-            ruler.at(0.0, 0.0),
-        );
+        // The course runs through the return and through each leaf of the outer wall.
+        let mut x = 0.0;
+        for layer in &view.wall_layers {
+            let next = x - layer.thickness();
+            if matches!(layer, Layer::Leaf { .. }) {
+                board.line(Pen::Cut, ruler.at(next, 0.0), ruler.at(x, 0.0));
+            }
+            x = next;
+        }
     }
     let corner = ruler.at(l, h);
     let Some(names) = &view.prop else {

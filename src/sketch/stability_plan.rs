@@ -52,14 +52,21 @@ fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
         board.note(wall_note(wall, scale, note));
     }
     surroundings(&mut board, &view.walls, &[view.wind], None, scale, false);
-    let dashed = match view.walls.iter().any(|wall| wall.fate == Fate::Removed) {
-        true => "; dashed: removed",
-        false => "",
+    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
+    let dashed = if has(Fate::Removed) {
+        "; dashed: removed"
+    } else {
+        ""
+    };
+    let crossed = if has(Fate::Added) {
+        "; crossed hatching: new"
+    } else {
+        ""
     };
     board.finish(Words {
         name: view.name.clone(),
         caption: format!(
-            "Shares of the storey's wind, {}, before and after{dashed}",
+            "Shares of the storey's wind, {}, before and after{dashed}{crossed}",
             view.title
         ),
         scale: scale.text(),

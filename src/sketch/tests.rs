@@ -13,6 +13,9 @@ pub const FRAME: Frame = Frame::new(165.0, 175.0);
 
 /// Asserts what every drawing owes: labels apart and inside, every value spoken, valid data.
 pub fn sound(drawing: &Drawing) {
+    let valid = |c: char| c.is_ascii_alphanumeric() || c == '-';
+    assert!(drawing.name.chars().all(valid), "{}", drawing.name);
+    assert!(drawing.labels().all(|label| label.size >= 7.5));
     let areas: Vec<_> = drawing
         .labels()
         .map(|label| (label.plain(), label.area()))
