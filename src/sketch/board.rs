@@ -6,9 +6,11 @@
 use kurbo::{Affine, BezPath, Line, PathEl, Point, Rect, Shape, Vec2};
 
 use super::drawing::{Anchor, Drawing, Item, Label, Path};
+use super::ground::Ground;
 use super::hatch::{self, Material};
+use super::note::{Block, Note};
 use super::pen::{Ink, Pen};
-use super::place::{self, Block, Ground, Note};
+use super::place;
 
 /// White border around everything drawn, mm.
 const BORDER: f64 = 1.0;
@@ -71,6 +73,12 @@ impl Board {
             ink,
             path: Path(path),
         });
+    }
+
+    /// Keeps labels off an area without drawing anything.
+    pub fn reserve(&mut self, area: Rect) {
+        let [a, b, c, d] = corners(area);
+        self.ground.bar(&polygon(&[a, c, b, d]), 0.0);
     }
 
     /// Hatches a closed polygon as cut masonry.
@@ -151,7 +159,7 @@ impl Board {
             }
         }
         Drawing {
-            name: words.name,
+            name: identifier(&words.name),
             caption: words.caption,
             scale: words.scale,
             alt: words.alt,
@@ -160,6 +168,13 @@ impl Board {
             items: self.items,
         }
     }
+}
+
+/// A name of letters, digits and `-`.
+fn identifier(name: &str) -> String {
+    name.chars()
+        .map(|c| if c.is_ascii_alphanumeric() { c } else { '-' })
+        .collect()
 }
 
 /// The lines of a placed note.

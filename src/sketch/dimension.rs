@@ -5,8 +5,8 @@ use kurbo::{Point, Vec2};
 
 use super::board::Board;
 use super::drawing::Role;
+use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::place::{Note, Spot};
 use super::text::Text;
 
 /// Extension line past the dimension line, and its gap to what is measured, mm.
@@ -71,7 +71,7 @@ fn chain(board: &mut Board, way: Way, places: &[f64], level: f64, from: f64, tex
         Way::Up => Point::new(level, place),
     };
     let side = if level >= from { 1.0 } else { -1.0 };
-    let (first, last) = (places[0], places[places.len() - 1]);
+    let [first, .., last] = *places else { return };
     board.line(Pen::Dimension, at(first, level), at(last, level));
     for place in places {
         if (level - from).abs() > GAP {
@@ -122,5 +122,70 @@ fn chain(board: &mut Board, way: Way, places: &[f64], level: f64, from: f64, tex
             Way::Across => note.spot(Spot::new((middle.x, beyond), 0.0, side).cost(2.0)),
             Way::Up => note.spot(Spot::upwards((beyond, middle.y), side, 0.0).cost(2.0)),
         });
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::sketch::board::Words;
+    use crate::sketch::drawing::Drawing;
+
+    fn drawn(places: &[f64]) -> Drawing {
+        let mut board = Board::default();
+        let texts: Vec<Text> = places
+            .windows(2)
+            .map(|p| mm(100.0 * (p[1] - p[0])).into())
+            .collect();
+        chain_across(&mut board, places, 10.0, 0.0, &texts);
+        let empty = String::new;
+        board.finish(Words {
+            name: empty(),
+            caption: empty(),
+            scale: empty(),
+            alt: empty(),
+        })
+    }
+
+    #[test]
+    fn lengths_are_whole_millimetres_or_have_one_decimal() {
+        assert_eq!(mm(640.0), "640");
+        assert_eq!(mm(102.5), "102.5");
+        assert_eq!(mm(99.999), "100");
+    }
+
+    #[test]
+    fn a_number_never_stands_over_the_neighbouring_piece() {
+        // Pieces of 4.1, 3 and 4 mm are narrower than their numbers.
+        let drawing = drawn(&[0.0, 4.1, 7.1, 11.1]);
+        let line = drawing
+            .strokes(Pen::Dimension)
+            .next()
+            .and_then(|p| kurbo::Shape::as_line(&p.segments().next()?));
+        let line = line.expect("the dimension line comes first");
+        for (label, (low, high)) in drawing.labels().zip([(0.0, 4.1), (4.1, 7.1), (7.1, 11.1)]) {
+            let centre = label.area().center().x - line.p0.x;
+            let own = (low..=high).contains(&centre);
+            assert!(
+                own || !(0.0..=11.1).contains(&centre),
+                "{} at {centre}",
+                label.plain()
+            );
+        }
+    }
+
+    #[test]
+    fn vertical_dimensions_read_upwards() {
+        let mut board = Board::default();
+        up(&mut board, (0.0, -40.0), -10.0, 0.0, mm(800.0));
+        let empty = String::new;
+        let drawing = board.finish(Words {
+            name: empty(),
+            caption: empty(),
+            scale: empty(),
+            alt: empty(),
+        });
+        let label = drawing.labels().next().expect("one label");
+        assert_eq!((label.plain().as_str(), label.rotate), ("800", -90.0));
     }
 }

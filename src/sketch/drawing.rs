@@ -20,8 +20,10 @@ pub struct Drawing {
     /// Spoken text, made from the data that made the strokes.
     pub alt: String,
     /// Width of the frame, mm on paper.
+    #[serde(serialize_with = "rounded")]
     pub width: f64,
     /// Height of the frame, mm on paper.
+    #[serde(serialize_with = "rounded")]
     pub height: f64,
     /// What is drawn, in drawing order.
     pub items: Vec<Item>,
@@ -210,5 +212,76 @@ impl Serialize for Path {
             }
         }
         segments.end()
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn items_serialise_in_the_form_the_page_reads() {
+        let path = BezPath::from_svg("M0 0 L10.00049 0 C1 2 3 4 5 6 Z").expect("valid path");
+        let stroke = Item::Stroke {
+            pen: Pen::Cut,
+            path: Path(path),
+        };
+        assert_eq!(
+            serde_json::to_string(&stroke).expect("serialises"),
+            r#"{"kind":"stroke","pen":"cut","path":[["M",0.0,0.0],["L",10.0,0.0],["C",1.0,2.0,3.0,4.0,5.0,6.0],["Z"]]}"#
+        );
+        let label = Item::Label(Label {
+            x: 1.0,
+            y: 2.0,
+            anchor: Anchor::Start,
+            size: 8.0,
+            rotate: -90.0,
+            runs: vec![
+                Run {
+                    text: "N".into(),
+                    style: Style::Italic,
+                },
+                Run {
+                    text: "Ed".into(),
+                    style: Style::Sub,
+                },
+            ],
+            width: 5.0,
+            height: 2.0,
+            ascent: 1.5,
+            role: Role::Load,
+        });
+        assert_eq!(
+            serde_json::to_string(&label).expect("serialises"),
+            r#"{"kind":"label","x":1.0,"y":2.0,"anchor":"start","size":8.0,"rotate":-90.0,"runs":[{"text":"N","style":"italic"},{"text":"Ed","style":"sub"}],"width":5.0,"height":2.0,"role":"load"}"#
+        );
+    }
+
+    #[test]
+    fn a_turned_label_covers_paper_upwards_from_its_anchor() {
+        let label = |rotate, anchor| Label {
+            x: 10.0,
+            y: 20.0,
+            anchor,
+            size: 8.0,
+            rotate,
+            runs: vec![],
+            width: 6.0,
+            height: 3.0,
+            ascent: 2.0,
+            role: Role::Note,
+        };
+        assert_eq!(
+            label(0.0, Anchor::End).area(),
+            Rect::new(4.0, 18.0, 10.0, 21.0)
+        );
+        assert_eq!(
+            label(-90.0, Anchor::Start).area(),
+            Rect::new(8.0, 14.0, 11.0, 20.0)
+        );
+        assert_eq!(
+            label(-90.0, Anchor::Middle).area(),
+            Rect::new(8.0, 17.0, 11.0, 23.0)
+        );
     }
 }

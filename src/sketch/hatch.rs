@@ -137,3 +137,60 @@ fn sides(ring: &[Point]) -> impl Iterator<Item = (Point, Point)> + '_ {
         .zip(ring.iter().cycle().skip(1))
         .map(|(a, b)| (*a, *b))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn shape() -> Vec<Point> {
+        // An L, so that lines are cut in two.
+        [
+            (0.0, 0.0),
+            (30.0, 0.0),
+            (30.0, 8.0),
+            (8.0, 8.0),
+            (8.0, 25.0),
+            (0.0, 25.0),
+        ]
+        .map(Point::from)
+        .to_vec()
+    }
+
+    #[test]
+    fn hatching_stays_inside_its_area_and_fills_it() {
+        let outline = polygon(&shape());
+        for material in [Material::Brick, Material::Block, Material::Concrete] {
+            let lines = masonry(material, &shape());
+            assert!(lines.len() > 15, "{material:?} has {} strokes", lines.len());
+            for line in &lines {
+                for share in [0.02, 0.5, 0.98] {
+                    assert!(
+                        outline.contains(line.p0.lerp(line.p1, share)),
+                        "{material:?} {line:?}"
+                    );
+                }
+            }
+        }
+    }
+
+    #[test]
+    fn materials_differ_and_repeat() {
+        let [brick, block, concrete] =
+            [Material::Brick, Material::Block, Material::Concrete].map(|m| masonry(m, &shape()));
+        assert_ne!(brick.len(), block.len());
+        assert_eq!(concrete, masonry(Material::Concrete, &shape()));
+        assert!(
+            brick
+                .iter()
+                .all(|l| ((l.p1 - l.p0).x + (l.p1 - l.p0).y).abs() < 1e-9)
+        );
+    }
+
+    #[test]
+    fn a_line_is_clipped_to_the_pieces_inside() {
+        let pieces = clip(Line::new((-5.0, 20.0), (40.0, 20.0)), &shape());
+        assert_eq!(pieces.len(), 1);
+        assert!((pieces[0].p0.x).abs() < 1e-9 && (pieces[0].p1.x - 8.0).abs() < 1e-9);
+        assert!(clip(Line::new((-5.0, 30.0), (40.0, 30.0)), &shape()).is_empty());
+    }
+}

@@ -5,8 +5,8 @@ use kurbo::{Point, Vec2};
 use super::board::{Board, Words};
 use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role};
+use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::place::{Note, Spot};
 use super::plan::{self, Fate, PlanWall, paper, wall_note};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
@@ -21,8 +21,10 @@ pub struct KeyPlan {
     pub title: String,
     /// Walls; a return is a wall too.
     pub walls: Vec<PlanWall>,
-    /// Marks of returns and panels.
+    /// Marks of returns.
     pub marks: Vec<PlanMark>,
+    /// Panels: a line with ticks beside the wall shows from where to where each runs.
+    pub panels: Vec<PlanMark>,
     /// Beams and padstones, as centre lines with their mark.
     pub beams: Vec<PlanMark>,
     /// Where north is, degrees clockwise from the top of the sheet.
@@ -97,6 +99,9 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
             .fold(0.0, f64::max);
         board.note(stretch_note(from, to, scale.paper(half) + 1.2, Text::mark(&mark.mark)).rank(1));
     }
+    for panel in &view.panels {
+        stretch(&mut board, view, panel, scale);
+    }
     let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
     for wall in view
         .walls
@@ -129,6 +134,48 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
         scale: scale.text(),
         alt: alt(view),
     })
+}
+
+/// Distance of a panel's line from the thickest wall's face, mm on paper.
+const STRETCH: f64 = 2.2;
+
+/// The line that shows how far a panel runs, on the side away from the middle of the plan.
+fn stretch(board: &mut Board, view: &KeyPlan, panel: &PlanMark, scale: Scale) {
+    let (from, to) = (paper(scale, panel.from), paper(scale, panel.to));
+    let along = (to - from).normalize();
+    let side = along.turn_90();
+    let centre = plan::extent(&view.walls, scale).center();
+    let out = if (from.midpoint(to) - centre).dot(side) < 0.0 {
+        -side
+    } else {
+        side
+    };
+    let half = view
+        .walls
+        .iter()
+        .map(|wall| wall.thickness / 2.0)
+        .fold(0.0, f64::max);
+    let shift = out * (scale.paper(half) + STRETCH);
+    board.line(Pen::Leader, from + shift, to + shift);
+    for end in [from, to] {
+        board.line(Pen::Leader, end + shift - out, end + shift + out);
+    }
+    let mut note = Note::new(
+        Role::Mark,
+        from.midpoint(to) + shift,
+        Text::mark(&panel.mark),
+    );
+    for share in [0.5, 0.4, 0.6, 0.3, 0.7] {
+        for sign in [1.0, -1.0] {
+            let at = from.lerp(to, share) + shift + out * sign;
+            note = note.spot(Spot::new(
+                at,
+                (out.x * sign).round(),
+                (out.y * sign).round(),
+            ));
+        }
+    }
+    board.note(note.rank(1));
 }
 
 /// A mark beside a stretch of wall.
@@ -198,7 +245,7 @@ fn key(view: &KeyPlan) -> String {
         key += "; dashed: removed";
     }
     if has(Fate::Added) {
-        key += "; strewn hatching: new";
+        key += "; crossed hatching: new";
     }
     if !view.beams.is_empty() {
         key += "; chain line: beam over";
@@ -239,6 +286,7 @@ fn alt(view: &KeyPlan) -> String {
     let marks: Vec<String> = view
         .marks
         .iter()
+        .chain(&view.panels)
         .chain(&view.beams)
         .map(|mark| mark.mark.clone())
         .collect();

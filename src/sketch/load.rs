@@ -1,6 +1,6 @@
 //! Actions and supports: arrows, distributed loads, moments, restraints, break lines.
 
-use kurbo::{Arc, BezPath, Point, Shape, Vec2};
+use kurbo::{Arc, BezPath, Point, Rect, Shape, Vec2};
 
 use super::board::{Board, polygon, polyline};
 use super::pen::{Ink, Pen};
@@ -46,6 +46,8 @@ pub fn moment(board: &mut Board, centre: Point, radius: f64, clockwise: bool) {
     path.move_to(centre + Vec2::from_angle(start) * radius);
     path.extend(arc.append_iter(0.01));
     board.stroke(Pen::Load, path);
+    // Nothing is written inside the arc.
+    board.reserve(Rect::from_center_size(centre, (2.0 * radius, 2.0 * radius)));
     let end = Vec2::from_angle(start + sweep);
     head(
         board,

@@ -7,17 +7,19 @@
 //! * [`drawing`], [`pen`]: the finished drawing
 //! * [`text`]: how much paper a line of text takes
 //! * [`scale`]: preferred scales and the largest one that fits
-//! * [`place`]: where labels go, so that none overlap
+//! * [`note`], [`ground`], [`place`]: labels, what they keep off, and where they go
 //! * [`board`]: strokes, fills and wishes for labels, until the drawing is finished
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
-//! * the drawings: one file each
+//! * the drawings: one file each; [`return_elevation`] and [`return_section`] have a second for their actions
 
 pub mod board;
 pub mod dimension;
 pub mod drawing;
+pub mod ground;
 pub mod hatch;
 pub mod key_plan;
 pub mod load;
+pub mod note;
 pub mod panel_elevation;
 pub mod panel_section;
 pub mod pen;
@@ -29,7 +31,11 @@ mod preview;
 mod properties;
 pub mod return_actions;
 pub mod return_elevation;
+mod return_loads;
 pub mod return_section;
+mod return_stress;
+#[cfg(test)]
+mod samples;
 pub mod scale;
 pub mod stability_plan;
 #[cfg(test)]

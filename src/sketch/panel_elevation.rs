@@ -10,8 +10,8 @@ use super::board::{Board, Words, corners, polygon};
 use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role};
 use super::hatch::diagonals;
+use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
-use super::place::{Note, Spot};
 use super::scale::{Frame, Scale, fit, fit_all};
 use super::text::Text;
 use super::view::{Action, Ruler, Side, list};
@@ -63,6 +63,16 @@ pub enum Support {
     Simple,
     /// Held and continuous.
     Continuous,
+}
+
+impl Support {
+    fn word(self) -> &'static str {
+        match self {
+            Support::Free => "free",
+            Support::Simple => "simple",
+            Support::Continuous => "continuous",
+        }
+    }
 }
 
 /// An opening in a panel.
@@ -125,7 +135,8 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     let stations = stations(view);
     let xs: Vec<f64> = stations.iter().map(|x| ruler.at(*x, 0.0).x).collect();
     let texts: Vec<Text> = steps(&stations).into_iter().map(Text::from).collect();
-    let mut row = y + 10.0;
+    let deeper = |edge, length| if in_two_lines(edge, length) { 3.5 } else { 0.0 };
+    let mut row = y + 8.5;
     if texts.len() > 1 {
         dimension::chain_across(&mut board, &xs, row, y, &texts);
         row += dimension::ROW + 1.0;
@@ -134,7 +145,7 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     dimension::up(
         &mut board,
         (panel.y1, panel.y0),
-        x - 10.0,
+        x - 8.5 - deeper(&view.left, panel.height()),
         x,
         mm(view.height),
     );
@@ -201,8 +212,14 @@ fn edges(board: &mut Board, view: &PanelElevation, panel: Rect) {
             board.hatching(diagonals(&ring, BAND_HATCH, 0.0, false), &ring);
         }
         let middle = from.midpoint(to);
-        let text = Text::plain(&edge_words(edge));
-        let mut note = Note::new(Role::Note, middle + out * (BAND / 2.0), text);
+        let target = middle + out * (BAND / 2.0);
+        let mut note = Note::new(Role::Note, target, Text::plain(&edge_words(edge)));
+        if out.y == 0.0 && in_two_lines(edge, (to - from).hypot()) {
+            note.lines = vec![
+                Text::plain(&format!("{}:", edge.support.word())),
+                Text::plain(&edge.why),
+            ];
+        }
         for share in [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8, 0.1, 0.9] {
             let beside = from.lerp(to, share) + out * (BAND + 1.2);
             note = match out.x == 0.0 {
@@ -215,16 +232,17 @@ fn edges(board: &mut Board, view: &PanelElevation, panel: Rect) {
 }
 
 fn edge_words(edge: &Edge) -> String {
-    let support = match edge.support {
-        Support::Free => "free",
-        Support::Simple => "simple",
-        Support::Continuous => "continuous",
-    };
+    let support = edge.support.word();
     if edge.why.is_empty() {
         support.to_owned()
     } else {
         format!("{support}: {}", edge.why)
     }
+}
+
+/// Whether the words on an edge are longer than the edge, mm on paper.
+fn in_two_lines(edge: &Edge, length: f64) -> bool {
+    !edge.why.is_empty() && Text::plain(&edge_words(edge)).extent(8.0).width + 2.0 > length
 }
 
 fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
@@ -273,12 +291,13 @@ fn openings(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
 
 /// Mark and values, in the middle or wherever the panel is clear.
 fn words(board: &mut Board, view: &PanelElevation, panel: Rect) {
-    let mut note = Note::new(Role::Mark, panel.center(), Text::mark(&view.mark));
+    let target = panel.origin() + Vec2::new(0.3 * panel.width(), 0.45 * panel.height());
+    let mut note = Note::new(Role::Mark, target, Text::mark(&view.mark));
     for value in &view.values {
         note = note.line(value.text());
     }
     for down in [0.5, 0.35, 0.65, 0.2, 0.8, 0.1, 0.9] {
-        for across in [0.5, 0.35, 0.65, 0.22, 0.78, 0.12, 0.88] {
+        for across in [0.5, 0.35, 0.65, 0.25, 0.75, 0.18, 0.82, 0.12, 0.88] {
             let at = panel.origin() + Vec2::new(across * panel.width(), down * panel.height());
             note = note.spot(Spot::new(at, 0.0, 0.0));
         }

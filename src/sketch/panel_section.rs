@@ -7,11 +7,11 @@ use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role};
 use super::hatch::Material;
 use super::load;
+use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::place::{Note, Spot};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::{Action, Layer, Ruler, Side, Wind, layer_words, list, thickness};
+use super::view::{Action, Layer, Ruler, Side, Wind, hatch_key, layer_words, list, thickness};
 
 /// What the section through a panel shows. The outside is on the left.
 #[derive(Clone, Debug)]
@@ -94,7 +94,11 @@ fn draw(view: &PanelSection, scale: Scale) -> Drawing {
     );
     board.finish(Words {
         name: format!("{}-wall-section", view.mark),
-        caption: format!("{} vertical section, outside on the left", view.mark),
+        caption: format!(
+            "{} vertical section, outside on the left{}",
+            view.mark,
+            hatch_key(&view.layers)
+        ),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -259,9 +263,11 @@ fn actions(board: &mut Board, view: &PanelSection, ruler: Ruler, high: f64) {
                 .spot(Spot::new(back - Vec2::new(1.5, 0.0), -1.0, 0.0)),
         );
     }
-    if let Some((index, action)) = &view.precompression {
+    if let Some((index, action)) = &view.precompression
+        && let Some(layer) = view.layers.get(*index)
+    {
         let before = thickness(&view.layers[..*index]);
-        let middle = before + view.layers[*index].thickness() / 2.0;
+        let middle = before + layer.thickness() / 2.0;
         let tip = ruler.by(middle, high, 0.0, PAST + 2.0);
         let tail = tip - Vec2::new(0.0, 9.0);
         load::arrow(board, tail, tip);

@@ -1,5 +1,5 @@
 //! Walls in plan, shared by the key plan and the stability plan: outlines that run into each
-//! other at junctions, hatching, what goes and what comes, north and wind.
+//! other at junctions, hatching (crossed where a wall is new), what goes, north and wind.
 
 use kurbo::{Line, Point, Vec2};
 
@@ -7,8 +7,8 @@ use super::board::{Board, polygon};
 use super::drawing::Role;
 use super::hatch::{self, Material};
 use super::load;
+use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
-use super::place::{Note, Spot};
 use super::scale::Scale;
 use super::text::Text;
 
@@ -40,6 +40,8 @@ pub enum Fate {
 
 /// Walls thinner than this on paper (mm) are not hatched: the lines would run together.
 const HATCHED: f64 = 1.3;
+/// Distance between the crossed hatch lines of a new wall, mm on paper.
+const CROSSED: f64 = 1.1;
 
 impl PlanWall {
     /// The four corners on the paper.
@@ -79,13 +81,13 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
     for (index, (fate, ring)) in standing.iter().enumerate() {
         // Where two walls share ground, the later one leaves it to the earlier.
         let thick = (ring[0] - ring[3]).hypot();
-        if thick >= HATCHED {
-            let material = if *fate == Fate::Added {
-                Material::Concrete
-            } else {
-                Material::Brick
-            };
-            let lines = hatch::masonry(material, ring);
+        let added = *fate == Fate::Added;
+        if added || thick >= HATCHED {
+            let mut lines = hatch::masonry(Material::Brick, ring);
+            if added {
+                lines = hatch::diagonals(ring, CROSSED, 0.0, true);
+                lines.extend(hatch::diagonals(ring, CROSSED, 0.0, false));
+            }
             let earlier: Vec<_> = standing[..index].iter().map(|(_, ring)| *ring).collect();
             let lines = lines
                 .into_iter()

@@ -5,9 +5,8 @@ use proptest::prelude::*;
 
 use super::hatch::Material;
 use super::pen::{Ink, Pen};
-use super::tests::{
-    FRAME, actions, cavity_wall, edge, elevation, section, solid_section, sound, wall, wall_section,
-};
+use super::samples::*;
+use super::tests::{FRAME, sound};
 use super::*;
 
 /// `n` of a drawing's scale `1:n`.
@@ -180,7 +179,8 @@ prop_compose! {
             wall("W1", (0.0, 0.0), (w, 0.0), 302.5, Fate::Stays), wall("W2", (w, 0.0), (w, d), 302.5, Fate::Stays),
             wall("W3", (0.0, d), (w, d), 302.5, Fate::Stays), wall("W4", (0.0, 0.0), (0.0, d), 302.5, Fate::Stays),
         ];
-        let mut marks = vec![PlanMark { mark: "P1".into(), from: (0.0, 0.0), to: (w, 0.0) }];
+        let panels = vec![PlanMark { mark: "P1".into(), from: (0.0, 0.0), to: (w, 0.0) }];
+        let mut marks = Vec::new();
         for (i, (at, upright, fate, reach)) in inner.into_iter().enumerate() {
             let fate = [Fate::Stays, Fate::Removed, Fate::Added][fate];
             let (from, to) = if upright { ((at * w, 0.0), (at * w, reach * d)) } else { ((0.0, at * d), (reach * w, at * d)) };
@@ -190,7 +190,7 @@ prop_compose! {
             }
         }
         KeyPlan {
-            name: "key-plan".into(), title: "ground floor".into(), walls, marks, beams: vec![],
+            name: "key-plan".into(), title: "ground floor".into(), walls, marks, panels, beams: vec![],
             north: north.round(), winds: vec![PlanWind::Upwards, PlanWind::Leftwards],
         }
     }
@@ -203,6 +203,8 @@ proptest! {
     fn any_return_elevation_is_sound_and_true(view in any_elevation()) {
         let drawing = return_elevation(&view, FRAME);
         sound(&drawing);
+        let json = |drawing: &Drawing| serde_json::to_string(drawing).expect("serialises");
+        prop_assert_eq!(json(&drawing), json(&return_elevation(&view, FRAME)));
         prop_assert!(FRAME.holds(&drawing), "{} x {}", drawing.width, drawing.height);
         prop_assert!(has_length(&drawing, Pen::Outline, view.length));
         prop_assert!(has_length(&drawing, Pen::Outline, view.height));

@@ -6,8 +6,8 @@ use super::board::{Board, Words, polyline};
 use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role, Style};
 use super::load;
+use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::place::{Note, Spot};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
 use super::view::list;
@@ -40,7 +40,7 @@ pub struct Curve {
     pub values: Vec<(f64, String)>,
 }
 
-/// Greatest ordinate, and distance between the base lines of two curves, mm on paper.
+/// Width of a curve, and clear distance between two curves with their labels, mm on paper.
 const ORDINATE: f64 = 16.0;
 const APART: f64 = 6.0;
 /// Distance between the ordinates drawn inside a curve, mm on paper.
@@ -69,17 +69,13 @@ fn draw(view: &ReturnActions, scale: Scale) -> Drawing {
 
     let mut edge = 4.0;
     for curve in &view.curves {
-        let greatest = curve
-            .samples
-            .iter()
-            .map(|(_, v)| v.abs())
-            .fold(0.0, f64::max);
-        let unit = if greatest > 0.0 {
-            ORDINATE / greatest
+        let values = || curve.samples.iter().map(|(_, v)| *v);
+        let (low, high) = (values().fold(0.0, f64::min), values().fold(0.0, f64::max));
+        let unit = if high > low {
+            ORDINATE / (high - low)
         } else {
             0.0
         };
-        let low = curve.samples.iter().map(|(_, v)| *v).fold(0.0, f64::min);
         let labels = curve
             .values
             .iter()
@@ -87,7 +83,6 @@ fn draw(view: &ReturnActions, scale: Scale) -> Drawing {
         let label = labels.fold(0.0, f64::max) + 2.0;
         let base = edge + APART + if low < 0.0 { label } else { 0.0 } - low * unit;
         draw_curve(&mut board, curve, base, unit, &y, top.y);
-        let high = curve.samples.iter().map(|(_, v)| *v).fold(0.0, f64::max);
         edge = base + (high * unit + label).max(title(curve).extent(8.0).width);
     }
     let case = if view.case.is_empty() {

@@ -1,16 +1,16 @@
 //! A plan section through a return: leaves, counted flange, resultant, compressed length, stress.
 
-use kurbo::{Point, Rect, Vec2};
+use kurbo::Rect;
 
-use super::board::{Board, Words, corners, polygon};
+use super::board::{Board, Words, corners};
 use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role, Style};
 use super::load;
-use super::pen::{Ink, Pen};
-use super::place::{Note, Spot};
+use super::note::{Note, Spot};
+use super::pen::Pen;
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::{Action, Layer, Ruler, Side, layer_words, thickness};
+use super::view::{Action, Layer, Ruler, Side, hatch_key, layer_words, thickness};
 
 /// What the section of a return shows. Places `x` run from the inner face of the outer wall
 /// towards the free end.
@@ -22,7 +22,8 @@ pub struct ReturnSection {
     pub length: f64,
     /// Layers of the return, from the lower edge of the drawing upwards.
     pub layers: Vec<Layer>,
-    /// Index in `layers` of the leaf that carries the load and is checked.
+    /// Index in `layers` of the leaf that carries the load and is checked; the whole thickness
+    /// where there is no such layer.
     pub loaded: usize,
     /// Side on which the outer wall stands.
     pub wall: Side,
@@ -73,22 +74,19 @@ pub enum Toe {
     Free,
 }
 
-/// Height of the stress diagram at the toe, mm on paper.
-const DIAGRAM: f64 = 11.0;
-
 /// Draws the section of a return.
 pub fn return_section(view: &ReturnSection, frame: Frame) -> Drawing {
     fit(frame, 5.0, |scale| draw(view, scale))
 }
 
 /// The section on the paper.
-struct Section<'a> {
-    view: &'a ReturnSection,
-    ruler: Ruler,
+pub(super) struct Section<'a> {
+    pub view: &'a ReturnSection,
+    pub ruler: Ruler,
     /// Bands of the return's layers: lower and upper edge, mm, loaded leaf centred on 0.
-    bands: Vec<(f64, f64)>,
+    pub bands: Vec<(f64, f64)>,
     /// How far the outer wall is drawn to each side, mm.
-    reach: f64,
+    pub reach: f64,
 }
 
 fn draw(view: &ReturnSection, scale: Scale) -> Drawing {
@@ -102,9 +100,14 @@ fn draw(view: &ReturnSection, scale: Scale) -> Drawing {
         section.resultant(&mut board, stress);
         section.diagram(&mut board, stress);
     }
+    let all = [&view.layers[..], &view.wall_layers[..]].concat();
     board.finish(Words {
         name: format!("{}-section", view.mark),
-        caption: format!("{} section in plan at the base", view.mark),
+        caption: format!(
+            "{} section in plan at the base{}",
+            view.mark,
+            hatch_key(&all)
+        ),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -118,7 +121,7 @@ impl<'a> Section<'a> {
             edges.push((y, y + layer.thickness()));
             y += layer.thickness();
         }
-        let (low, high) = edges[view.loaded];
+        let (low, high) = edges.get(view.loaded).copied().unwrap_or((0.0, y));
         let zero = (low + high) / 2.0;
         let bands: Vec<_> = edges.iter().map(|(a, b)| (a - zero, b - zero)).collect();
         let body = bands
@@ -136,40 +139,19 @@ impl<'a> Section<'a> {
     }
 
     /// Where the counted section starts: outer face of the flange, or the junction.
-    fn start(&self) -> f64 {
+    pub fn start(&self) -> f64 {
         -self.view.flange.map_or(0.0, |flange| flange.thickness)
     }
 
-    fn area(&self, x: (f64, f64), y: (f64, f64)) -> Rect {
+    pub fn area(&self, x: (f64, f64), y: (f64, f64)) -> Rect {
         Rect::from_points(self.ruler.at(x.0, y.0), self.ruler.at(x.1, y.1))
     }
 
     /// From where to where the section is compressed, mm.
-    fn pressed(&self, stress: &Stress) -> (f64, f64) {
+    pub fn pressed(&self, stress: &Stress) -> (f64, f64) {
         match stress.toe {
             Toe::Wall => (self.start(), self.start() + stress.compressed),
             Toe::Free => (self.view.length - stress.compressed, self.view.length),
-        }
-    }
-
-    fn compressed_area(&self, board: &mut Board) {
-        let Some(stress) = &self.view.stress else {
-            return;
-        };
-        let (from, to) = self.pressed(stress);
-        let leaf = self.bands[self.view.loaded];
-        if to > 0.0 {
-            board.fill(
-                Ink::Stress,
-                polygon(&corners(self.area((from.max(0.0), to), leaf))),
-            );
-        }
-        if let Some(flange) = self.view.flange
-            && from < 0.0
-        {
-            let half = flange.width / 2.0;
-            let area = self.area((from, to.min(0.0)), (-half, half));
-            board.fill(Ink::Stress, polygon(&corners(area)));
         }
     }
 
@@ -234,10 +216,15 @@ impl<'a> Section<'a> {
     }
 
     /// Upper and lower edge of all layers of the return on the paper.
-    fn edges(&self) -> (f64, f64) {
-        let low = self.bands.first().map_or(0.0, |band| band.0);
-        let high = self.bands.last().map_or(0.0, |band| band.1);
+    pub fn edges(&self) -> (f64, f64) {
+        let (low, high) = self.whole();
         (self.ruler.at(0.0, high).y, self.ruler.at(0.0, low).y)
+    }
+
+    /// Lower and upper edge of all layers of the return, mm.
+    pub fn whole(&self) -> (f64, f64) {
+        let low = self.bands.first().map_or(0.0, |band| band.0);
+        (low, self.bands.last().map_or(0.0, |band| band.1))
     }
 
     fn dimensions(&self, board: &mut Board) {
@@ -246,7 +233,7 @@ impl<'a> Section<'a> {
         let x = |x| self.ruler.at(x, 0.0).x;
         let row = top - if view.stress.is_some() { 16.0 } else { 6.0 };
         dimension::across(board, (x(0.0), x(view.length)), row, top, mm(view.length));
-        let ys: Vec<f64> = std::iter::once(self.bands[0].0)
+        let ys: Vec<f64> = std::iter::once(self.whole().0)
             .chain(self.bands.iter().map(|band| band.1))
             .map(|y| self.ruler.at(0.0, y).y)
             .collect();
@@ -295,123 +282,6 @@ impl<'a> Section<'a> {
                 ),
             );
         }
-    }
-
-    fn resultant(&self, board: &mut Board, stress: &Stress) {
-        let (top, bottom) = self.edges();
-        let (centroid, place) = (
-            self.ruler.at(stress.centroid, 0.0),
-            self.ruler.at(stress.resultant, 0.0),
-        );
-        let e = (stress.resultant - stress.centroid).abs();
-        let row = top - 9.0;
-        board.line(
-            Pen::Axis,
-            Point::new(centroid.x, row - 1.5),
-            Point::new(centroid.x, bottom + 1.2),
-        );
-        board.line(
-            Pen::Axis,
-            Point::new(place.x, row - 1.5),
-            Point::new(place.x, bottom + 1.2),
-        );
-        if e > 0.5 {
-            dimension::across(
-                board,
-                (centroid.x, place.x),
-                row,
-                row,
-                Text::value("e", &mm(e)),
-            );
-        }
-        // A force into the paper: circle and cross.
-        let radius = 1.5;
-        board.fill(
-            Ink::Paper,
-            kurbo::Shape::to_path(&kurbo::Circle::new(place, radius), 0.01),
-        );
-        load::circle(board, Pen::Load, place, radius);
-        let (a, b) = (
-            Vec2::new(1.0, 1.0) * radius * 0.7071,
-            Vec2::new(1.0, -1.0) * radius * 0.7071,
-        );
-        board.line(Pen::Load, place - a, place + a);
-        board.line(Pen::Load, place - b, place + b);
-        let text = match stress.force.words.is_empty() {
-            true => stress.force.text(),
-            false => stress
-                .force
-                .text()
-                .and(&format!(", {}", stress.force.words), Style::Plain),
-        };
-        let mut note = Note::new(Role::Load, place, text);
-        for across in [self.ruler.hand, -self.ruler.hand] {
-            note = note
-                .spot(Spot::new((place.x + across * 5.0, top - 2.2), across, -1.0).led())
-                .spot(Spot::new((place.x + across * 5.0, bottom + 2.4), across, 1.0).led());
-        }
-        board.note(note);
-    }
-
-    fn diagram(&self, board: &mut Board, stress: &Stress) {
-        let (_, bottom) = self.edges();
-        let (from, to) = self.pressed(stress);
-        // Under the flange there is no room beside the return: the diagram goes below the wall.
-        let base = match from < 0.0 {
-            true => self.ruler.at(0.0, -self.reach).y + 5.0,
-            false => bottom + 7.0,
-        };
-        let (toe, heel) = match stress.toe {
-            Toe::Wall => (from, to),
-            Toe::Free => (to, from),
-        };
-        let x = |x| self.ruler.at(x, 0.0).x;
-        let rest = stress
-            .at_heel
-            .as_ref()
-            .map_or(0.0, |(share, _)| DIAGRAM * share);
-        let ring = [
-            Point::new(x(toe), base),
-            Point::new(x(toe), base + DIAGRAM),
-            Point::new(x(heel), base + rest),
-            Point::new(x(heel), base),
-        ];
-        board.fill(Ink::Stress, polygon(&ring));
-        board.stroke(Pen::Diagram, polygon(&ring));
-        let rest = x(from.min(0.0));
-        board.line(
-            Pen::Beyond,
-            Point::new(rest, base),
-            Point::new(x(self.view.length), base),
-        );
-        let out = (x(toe) - x(heel)).signum();
-        let tip = Point::new(x(toe), base + DIAGRAM * 0.6);
-        board.note(
-            Note::new(Role::Load, tip, stress.at_toe.text())
-                .words(&stress.at_toe.words)
-                .spot(Spot::new(
-                    (x(toe) + out * 1.5, base + DIAGRAM * 0.55),
-                    out,
-                    0.0,
-                ))
-                .spot(Spot::new((x(toe) - out * 1.5, base + 1.0), -out, 1.0).cost(2.0))
-                .rank(1),
-        );
-        if let Some((_, action)) = &stress.at_heel {
-            let end = Point::new(x(heel), base + rest / 2.0);
-            board.note(
-                Note::new(Role::Load, end, action.text())
-                    .spot(Spot::new(
-                        (x(heel) - out * 1.5, base + rest / 2.0),
-                        -out,
-                        0.0,
-                    ))
-                    .rank(1),
-            );
-        }
-        let row = base + DIAGRAM + 6.0;
-        let text = Text::value("l_c", &mm(stress.compressed));
-        dimension::across(board, (x(from), x(to)), row, base + DIAGRAM, text);
     }
 }
 

@@ -77,3 +77,45 @@ fn excess(drawings: &[Drawing], frame: Frame) -> f64 {
     let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
     drawings.iter().map(over).sum()
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn square(side: f64) -> impl Fn(Scale) -> Drawing {
+        let empty = String::new;
+        move |scale| Drawing {
+            name: empty(),
+            caption: empty(),
+            scale: scale.text(),
+            alt: empty(),
+            width: scale.paper(side),
+            height: scale.paper(side),
+            items: vec![],
+        }
+    }
+
+    #[test]
+    fn the_largest_preferred_scale_that_fits_is_taken() {
+        let frame = Frame::new(100.0, 120.0);
+        assert_eq!(fit(frame, 5.0, square(2000.0)).scale, "1:20");
+        assert_eq!(fit(frame, 5.0, square(2001.0)).scale, "1:25");
+        assert_eq!(fit(frame, 10.0, square(100.0)).scale, "1:10");
+    }
+
+    #[test]
+    fn drawings_to_be_compared_share_the_scale_of_the_larger() {
+        let both = fit_all(Frame::new(100.0, 100.0), 5.0, |s| {
+            [square(400.0)(s), square(4000.0)(s)]
+        });
+        assert_eq!(both.map(|drawing| drawing.scale), ["1:50", "1:50"]);
+    }
+
+    #[test]
+    fn what_never_fits_is_drawn_as_small_as_it_goes() {
+        assert_eq!(
+            fit(Frame::new(10.0, 10.0), 5.0, square(90_000.0)).scale,
+            "1:500"
+        );
+    }
+}

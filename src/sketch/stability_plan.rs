@@ -5,7 +5,7 @@ use kurbo::Point;
 use super::board::{Board, Words};
 use super::drawing::{Drawing, Role};
 use super::key_plan::{PlanWind, surroundings};
-use super::place::Note;
+use super::note::Note;
 use super::plan::{self, Fate, PlanWall, wall_note};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
@@ -44,8 +44,7 @@ pub fn stability_plan(view: &StabilityPlan, frame: Frame) -> Drawing {
 fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
     let mut board = Board::default();
     plan::walls(&mut board, &view.walls, scale);
-    for share in &view.shares {
-        let wall = &view.walls[share.wall];
+    for (wall, share) in bracing(view) {
         let mut note = Note::new(Role::Load, Point::ZERO, Text::mark(&wall.name));
         for line in lines(share, wall.fate) {
             note = note.words(&line);
@@ -53,19 +52,33 @@ fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
         board.note(wall_note(wall, scale, note));
     }
     surroundings(&mut board, &view.walls, &[view.wind], None, scale, false);
-    let dashed = match view.walls.iter().any(|wall| wall.fate == Fate::Removed) {
-        true => "; dashed: removed",
-        false => "",
+    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
+    let dashed = if has(Fate::Removed) {
+        "; dashed: removed"
+    } else {
+        ""
+    };
+    let crossed = if has(Fate::Added) {
+        "; crossed hatching: new"
+    } else {
+        ""
     };
     board.finish(Words {
         name: view.name.clone(),
         caption: format!(
-            "Shares of the storey's wind, {}, before and after{dashed}",
+            "Shares of the storey's wind, {}, before and after{dashed}{crossed}",
             view.title
         ),
         scale: scale.text(),
         alt: alt(view),
     })
+}
+
+/// The shares with their walls.
+fn bracing(view: &StabilityPlan) -> impl Iterator<Item = (&PlanWall, &Share)> {
+    view.shares
+        .iter()
+        .filter_map(|share| Some((view.walls.get(share.wall)?, share)))
 }
 
 /// `before 24 %` and `after 31 %`; empty where there is nothing to say.
@@ -86,8 +99,7 @@ fn alt(view: &StabilityPlan) -> String {
         "Plan of the {} with each bracing wall's share of the storey's wind. ",
         view.title
     );
-    for share in &view.shares {
-        let wall = &view.walls[share.wall];
+    for (wall, share) in bracing(view) {
         alt += &match (&share.before, &share.after) {
             (Some(before), Some(after)) => {
                 format!(

@@ -1,7 +1,11 @@
 //! Rules that hold for every drawing.
 
-use super::hatch::Material;
+use kurbo::Shape;
+
+use super::ground::crosses;
+use super::pen::Pen;
 use super::preview::show;
+use super::samples::*;
 use super::*;
 
 /// Frame of a whole page width.
@@ -9,6 +13,9 @@ pub const FRAME: Frame = Frame::new(165.0, 175.0);
 
 /// Asserts what every drawing owes: labels apart and inside, every value spoken, valid data.
 pub fn sound(drawing: &Drawing) {
+    let valid = |c: char| c.is_ascii_alphanumeric() || c == '-';
+    assert!(drawing.name.chars().all(valid), "{}", drawing.name);
+    assert!(drawing.labels().all(|label| label.size >= 7.5));
     let areas: Vec<_> = drawing
         .labels()
         .map(|label| (label.plain(), label.area()))
@@ -38,7 +45,37 @@ pub fn sound(drawing: &Drawing) {
             );
         }
     }
+    let lines = crossings(drawing, |pen| pen.keeps_labels_off() && pen != Pen::Leader);
+    assert!(lines.is_empty(), "{lines:?} in {}", drawing.name);
     serde_json::to_string(drawing).expect("a drawing serialises");
+}
+
+/// Asserts what a drawing with room owes besides: no leader runs through a label.
+fn tidy(drawing: &Drawing) {
+    sound(drawing);
+    let lines = crossings(drawing, |pen| pen == Pen::Leader);
+    assert!(lines.is_empty(), "{lines:?} in {}", drawing.name);
+}
+
+/// Labels crossed by lines of the chosen pens.
+fn crossings(drawing: &Drawing, chosen: impl Fn(Pen) -> bool) -> Vec<String> {
+    let strokes = drawing.items.iter().filter_map(|item| match item {
+        Item::Stroke { pen, path } if chosen(*pen) => Some(path),
+        _ => None,
+    });
+    let lines: Vec<_> = strokes
+        .flat_map(|path| path.0.segments().filter_map(|segment| segment.as_line()))
+        .collect();
+    let crossed = |label: &&drawing::Label| {
+        lines
+            .iter()
+            .any(|line| crosses(*line, label.area().inset(-0.1)))
+    };
+    drawing
+        .labels()
+        .filter(crossed)
+        .map(|label| label.plain())
+        .collect()
 }
 
 fn numbers(text: &str) -> Vec<String> {
@@ -48,58 +85,11 @@ fn numbers(text: &str) -> Vec<String> {
         .collect()
 }
 
-pub fn cavity_wall() -> Vec<Layer> {
-    vec![
-        Layer::Leaf {
-            thickness: 100.0,
-            material: Material::Block,
-        },
-        Layer::Cavity { width: 75.0 },
-        Layer::Leaf {
-            thickness: 102.5,
-            material: Material::Brick,
-        },
-    ]
-}
-
-pub fn elevation() -> ReturnElevation {
-    ReturnElevation {
-        mark: "R1".into(),
-        length: 640.0,
-        height: 2400.0,
-        words: "100 mm block".into(),
-        wall: Side::Left,
-        wall_layers: cavity_wall(),
-        junction: "bonded".into(),
-        prop: None,
-        dpc: true,
-        removed: Some(3600.0),
-        loads: vec![
-            PlacedLoad {
-                x: 320.0,
-                action: Action::new("N_1", "8.4 kN", "floor over"),
-            },
-            PlacedLoad {
-                x: 590.0,
-                action: Action::new("N_2", "36.2 kN", "beam B1"),
-            },
-        ],
-        head_forces: vec![
-            Action::new("H_Ed", "2.95 kN", ""),
-            Action::new("H_nu", "0.29 kN", "tilt"),
-        ],
-        head_moment: Some(Action::new("M_head", "1.10 kNm", "")),
-        line_load: Some(Action::new("w_Ed", "1.95 kN/m", "")),
-        tributary: Some(2600.0),
-        wind: Wind::Toward,
-    }
-}
-
 #[test]
 fn elevation_of_a_return() {
     let drawing = return_elevation(&elevation(), FRAME);
     show(&drawing, "-cantilever");
-    sound(&drawing);
+    tidy(&drawing);
     let mut view = elevation();
     view.wall = Side::Right;
     view.wind = Wind::Away;
@@ -108,7 +98,7 @@ fn elevation_of_a_return() {
     view.head_moment = None;
     view.wall_layers = vec![Layer::Leaf {
         thickness: 215.0,
-        material: Material::Brick,
+        material: hatch::Material::Brick,
     }];
     for (x, n) in [(100.0, 3), (150.0, 4), (200.0, 5)] {
         let action = Action::new(&format!("N_{n}"), "4.2 kN", "joists");
@@ -116,295 +106,7 @@ fn elevation_of_a_return() {
     }
     let drawing = return_elevation(&view, FRAME);
     show(&drawing, "-propped");
-    sound(&drawing);
-}
-
-pub fn section() -> ReturnSection {
-    ReturnSection {
-        mark: "R1".into(),
-        length: 640.0,
-        layers: vec![Layer::Leaf {
-            thickness: 100.0,
-            material: Material::Block,
-        }],
-        loaded: 0,
-        wall: Side::Left,
-        wall_layers: cavity_wall(),
-        bonded: true,
-        flange: Some(Flange {
-            width: 600.0,
-            thickness: 100.0,
-        }),
-        stress: Some(Stress {
-            toe: Toe::Free,
-            compressed: 391.5,
-            centroid: 190.0,
-            resultant: 509.5,
-            force: Action::new("N_Ed", "40.1 kN", "helping"),
-            at_toe: Action::new("sigma", "2.05 N/mm²", "at the toe"),
-            at_heel: None,
-        }),
-    }
-}
-
-pub fn solid_section() -> ReturnSection {
-    ReturnSection {
-        mark: "R2".into(),
-        length: 900.0,
-        layers: vec![
-            Layer::Leaf {
-                thickness: 100.0,
-                material: Material::Block,
-            },
-            Layer::Cavity { width: 50.0 },
-            Layer::Leaf {
-                thickness: 102.5,
-                material: Material::Brick,
-            },
-        ],
-        loaded: 0,
-        wall: Side::Right,
-        wall_layers: vec![Layer::Leaf {
-            thickness: 215.0,
-            material: Material::Brick,
-        }],
-        bonded: false,
-        flange: None,
-        stress: Some(Stress {
-            toe: Toe::Wall,
-            compressed: 900.0,
-            centroid: 450.0,
-            resultant: 380.0,
-            force: Action::new("N_Ed", "61.0 kN", "pressing, wind leads"),
-            at_toe: Action::new("sigma_toe", "0.99 N/mm²", ""),
-            at_heel: Some((0.363, Action::new("", "0.36 N/mm²", ""))),
-        }),
-    }
-}
-
-pub fn actions(propped: bool) -> ReturnActions {
-    let h = 2400.0;
-    let samples = |f: &dyn Fn(f64) -> f64| {
-        (0..=24)
-            .map(|i| (h * f64::from(i) / 24.0, f(h * f64::from(i) / 24.0)))
-            .collect()
-    };
-    let w = 0.00195;
-    let (m, v): (Box<dyn Fn(f64) -> f64>, Box<dyn Fn(f64) -> f64>) = if propped {
-        (
-            Box::new(move |z| w * z * (h - z) / 2.0),
-            Box::new(move |z| w * (h / 2.0 - z)),
-        )
-    } else {
-        (
-            Box::new(move |z| w * (h - z).powi(2) / 2.0 + 2.9 * (h - z)),
-            Box::new(move |z| w * (h - z) + 2.9),
-        )
-    };
-    let (m_values, v_values) = if propped {
-        (
-            vec![(1200.0, "1.40 kNm".into())],
-            vec![(0.0, "2.34 kN".into()), (2400.0, "−2.34 kN".into())],
-        )
-    } else {
-        (
-            vec![(0.0, "12.6 kNm".into()), (2400.0, "0".into())],
-            vec![(0.0, "7.58 kN".into()), (2400.0, "2.90 kN".into())],
-        )
-    };
-    ReturnActions {
-        mark: if propped { "R2" } else { "R1" }.into(),
-        height: h,
-        propped,
-        case: "helping".into(),
-        curves: vec![
-            Curve {
-                symbol: "M_Ed".into(),
-                words: "bending moment".into(),
-                samples: samples(&m),
-                values: m_values,
-            },
-            Curve {
-                symbol: "V_Ed".into(),
-                words: "shear".into(),
-                samples: samples(&v),
-                values: v_values,
-            },
-        ],
-    }
-}
-
-pub fn edge(support: Support, why: &str) -> Edge {
-    Edge {
-        support,
-        why: why.into(),
-    }
-}
-
-pub fn panels() -> [PanelElevation; 2] {
-    let before = PanelElevation {
-        mark: "P1".into(),
-        state: "before".into(),
-        length: 5200.0,
-        height: 2400.0,
-        left: edge(Support::Continuous, "bonded corner"),
-        right: edge(Support::Simple, "butted to W4"),
-        top: edge(Support::Free, "floor not strapped"),
-        base: edge(Support::Simple, "dpc"),
-        openings: vec![Opening {
-            x: 3400.0,
-            y: 900.0,
-            width: 1200.0,
-            height: 1050.0,
-            words: "window".into(),
-        }],
-        walls: vec![WallBehind {
-            x: 2600.0,
-            thickness: 100.0,
-            words: "W2".into(),
-            removed: false,
-        }],
-        yield_lines: vec![],
-        values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
-    };
-    let mut after = before.clone();
-    after.state = "after".into();
-    after.top = edge(Support::Simple, "straps at 2 m");
-    after.walls = vec![
-        WallBehind {
-            x: 2600.0,
-            thickness: 100.0,
-            words: "R1".into(),
-            removed: false,
-        },
-        WallBehind {
-            x: 900.0,
-            thickness: 100.0,
-            words: "W3".into(),
-            removed: true,
-        },
-    ];
-    after.yield_lines = vec![
-        [(0.0, 0.0), (1200.0, 1200.0)],
-        [(0.0, 2400.0), (1200.0, 1200.0)],
-    ];
-    [before, after]
-}
-
-pub fn wall_section() -> PanelSection {
-    let mut layers = cavity_wall();
-    layers.reverse();
-    PanelSection {
-        mark: "P1".into(),
-        height: 2400.0,
-        layers,
-        floors: vec![
-            Floor {
-                level: 0.0,
-                depth: 150.0,
-                concrete: true,
-                words: "ground slab".into(),
-            },
-            Floor {
-                level: 2625.0,
-                depth: 225.0,
-                concrete: false,
-                words: "timber floor, strapped".into(),
-            },
-        ],
-        dpc: Some(-75.0),
-        ties: Some(450.0),
-        wind: Some((
-            Wind::Toward,
-            Action::new("W_Ed", "0.90 kN/m²", "corner zone"),
-        )),
-        precompression: Some((2, Action::new("N_G", "12.4 kN/m", "dead load, helping"))),
-    }
-}
-
-pub fn wall(name: &str, from: (f64, f64), to: (f64, f64), thickness: f64, fate: Fate) -> PlanWall {
-    PlanWall {
-        name: name.into(),
-        from,
-        to,
-        thickness,
-        fate,
-    }
-}
-
-pub fn plan() -> KeyPlan {
-    KeyPlan {
-        name: "key-plan".into(),
-        title: "ground floor".into(),
-        walls: vec![
-            wall("W1", (0.0, 0.0), (8200.0, 0.0), 277.5, Fate::Stays),
-            wall("W2", (8200.0, 0.0), (8200.0, 7000.0), 277.5, Fate::Stays),
-            wall("W3", (0.0, 7000.0), (8200.0, 7000.0), 277.5, Fate::Stays),
-            wall("W4", (0.0, 0.0), (0.0, 7000.0), 277.5, Fate::Stays),
-            wall("R1", (4000.0, 0.0), (4000.0, 780.0), 100.0, Fate::Stays),
-            wall("R2", (4000.0, 6300.0), (4000.0, 7000.0), 100.0, Fate::Stays),
-            wall(
-                "W5",
-                (4000.0, 780.0),
-                (4000.0, 6300.0),
-                100.0,
-                Fate::Removed,
-            ),
-            wall(
-                "W6",
-                (4000.0, 3500.0),
-                (8200.0, 3500.0),
-                100.0,
-                Fate::Removed,
-            ),
-            wall("W7", (0.0, 4200.0), (4000.0, 4200.0), 215.0, Fate::Added),
-        ],
-        marks: vec![
-            PlanMark {
-                mark: "R1".into(),
-                from: (4000.0, 140.0),
-                to: (4000.0, 780.0),
-            },
-            PlanMark {
-                mark: "R2".into(),
-                from: (4000.0, 6300.0),
-                to: (4000.0, 6860.0),
-            },
-            PlanMark {
-                mark: "P1".into(),
-                from: (140.0, 0.0),
-                to: (8060.0, 0.0),
-            },
-        ],
-        beams: vec![PlanMark {
-            mark: "B1".into(),
-            from: (4000.0, 600.0),
-            to: (4000.0, 6450.0),
-        }],
-        north: 20.0,
-        winds: vec![PlanWind::Upwards, PlanWind::Downwards],
-    }
-}
-
-pub fn stability() -> StabilityPlan {
-    let plan = plan();
-    let share = |wall, before: Option<&str>, after: Option<&str>| Share {
-        wall,
-        before: before.map(Into::into),
-        after: after.map(Into::into),
-    };
-    StabilityPlan {
-        name: "stability-y".into(),
-        title: plan.title,
-        walls: plan.walls,
-        shares: vec![
-            share(1, Some("26 %"), Some("48 %")),
-            share(3, Some("25 %"), Some("50 %")),
-            share(6, Some("49 %"), None),
-            share(4, None, Some("2 %")),
-        ],
-        wind: PlanWind::Upwards,
-    }
+    tidy(&drawing);
 }
 
 #[test]
@@ -424,7 +126,7 @@ fn hand_cases_are_sound() {
         show(drawing, "");
     }
     for drawing in &drawings {
-        sound(drawing);
+        tidy(drawing);
     }
 }
 
@@ -499,6 +201,32 @@ fn awkward_cases_are_sound() {
     ];
     for drawing in &drawings {
         show(drawing, "-awkward");
-        sound(drawing);
+        tidy(drawing);
+    }
+}
+
+/// Frames of half a page width, beside one another or beside text.
+#[test]
+fn small_frames_are_kept() {
+    let half = Frame::new(82.0, 80.0);
+    let [before, after] = panels();
+    let pair = panel_pair(&before, &after, half);
+    let column = Frame::new(105.0, 110.0);
+    let mut drawings = pair.to_vec();
+    assert!(pair.iter().all(|drawing| half.holds(drawing)));
+    drawings.push(return_elevation(&elevation(), column));
+    drawings.push(return_section(&section(), column));
+    drawings.push(return_actions(&actions(true), column));
+    drawings.push(panel_section(&wall_section(), column));
+    drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
+    for drawing in &drawings {
+        show(drawing, "-small");
+        tidy(drawing);
+        assert!(
+            drawing.width <= column.width,
+            "{} is {} wide",
+            drawing.name,
+            drawing.width
+        );
     }
 }

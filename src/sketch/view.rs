@@ -88,6 +88,25 @@ pub fn layer_words(layers: &[Layer]) -> String {
     words.join(", ")
 }
 
+/// What the hatching stands for: `; single hatching: brick, paired: block`.
+pub(super) fn hatch_key(layers: &[Layer]) -> String {
+    let has = |wanted| {
+        layers
+            .iter()
+            .any(|l| matches!(l, Layer::Leaf { material, .. } if *material == wanted))
+    };
+    let kinds = [
+        (Material::Brick, "single hatching: brick"),
+        (Material::Block, "paired hatching: block"),
+        (Material::Concrete, "strewn strokes: concrete"),
+    ];
+    kinds
+        .iter()
+        .filter(|(kind, _)| has(*kind))
+        .map(|(_, words)| format!("; {words}"))
+        .collect()
+}
+
 impl Action {
     /// An action of symbol, value and origin.
     pub fn new(symbol: &str, value: &str, words: &str) -> Self {
