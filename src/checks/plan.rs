@@ -26,6 +26,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
 fn view(b: &Building) -> KeyPlan {
     let walls = b.plan.iter().map(|w| wall(b, w)).collect();
     let mut marks: Vec<PlanMark> = Vec::new();
+    let mut panels: Vec<PlanMark> = Vec::new();
     for r in &b.returns {
         if let Some((x, y)) = r.position {
             let at = (x.base(), y.base());
@@ -35,7 +36,7 @@ fn view(b: &Building) -> KeyPlan {
     for p in &b.panels {
         if let Some(w) = p.on.as_ref().and_then(|on| b.plan.iter().find(|w| w.mark == *on)) {
             let pair = |(x, y): (Length, Length)| (x.base(), y.base());
-            marks.push(PlanMark { mark: p.mark.clone(), from: pair(w.from), to: pair(w.to) });
+            panels.push(PlanMark { mark: p.mark.clone(), from: pair(w.from), to: pair(w.to) });
         }
     }
     let winds = match b.stability.as_ref().map(|s| s.wind_along) {
@@ -48,6 +49,7 @@ fn view(b: &Building) -> KeyPlan {
         title: b.removed.storey.clone(),
         walls,
         marks,
+        panels,
         beams: Vec::new(),
         north: b.north,
         winds,
