@@ -1,3 +1,4 @@
 //! What is verified.
 pub mod masonry;
+pub mod panels;
 pub mod returns;
