@@ -9,6 +9,18 @@ use crate::standards::annex::Annex;
 use crate::standards::tables::annex_e::Edge;
 use crate::trace::{Sheet, Value};
 
+/// Lengths are given in steps of 10 mm, loads with the three digits that are printed; always rounded to the
+/// side that passes.
+const LENGTH_STEP: f64 = 10.0;
+
+fn digits_step(x: f64) -> f64 {
+    if x > 0.0 { 10f64.powf(x.log10().floor() - 2.0) } else { 1.0 }
+}
+
+fn down(x: f64, step: f64) -> f64 {
+    (x / step).floor() * step
+}
+
 /// One way to pass, or the finding that there is none that way.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Remedy {
@@ -31,7 +43,7 @@ pub fn passes(m: &PanelModel, annex: &Annex) -> bool {
 /// not pass without wind.
 pub fn greatest_wind(m: &PanelModel, annex: &Annex) -> Option<Stress> {
     let at = |q: f64| passes(&PanelModel { q_net: Stress::new(q), ..m.clone() }, annex);
-    greatest(at, 0.0, 20e-3, 1, 1e-9).map(Stress::new)
+    greatest(at, 0.0, 20e-3, 1, 1e-9).map(|q| Stress::new(down(q, digits_step(q))))
 }
 
 /// Greatest length after the removal, up to the given one times four, at which the panel passes; `None`
@@ -43,7 +55,7 @@ pub fn greatest_length(m: &PanelModel, annex: &Annex) -> Option<Length> {
         shorter.after.length = Length::new(l);
         passes(&shorter, annex)
     };
-    greatest(at, l / 10.0, l * 4.0, 195, 0.5).map(Length::new)
+    greatest(at, l / 10.0, l * 4.0, 195, 0.5).map(|l| Length::new(down(l, LENGTH_STEP)))
 }
 
 /// Least dead load per length on the loaded leaf at which the panel passes, up to 500 kN/m; `None` where
@@ -55,7 +67,7 @@ pub fn least_dead(m: &PanelModel, annex: &Annex) -> Option<LineLoad> {
         heavier.leaves[i].G_above = LineLoad::new(g);
         passes(&heavier, annex)
     };
-    least(at, 0.0, 500.0, 100, 1e-3).map(LineLoad::new)
+    least(at, 0.0, 500.0, 100, 1e-3).map(|g| LineLoad::new((g / digits_step(g)).ceil() * digits_step(g)))
 }
 
 /// Simple edges that would do it if one of them alone were continuous, by name.
