@@ -170,10 +170,17 @@ fn plate(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Resu
     let h = m.h;
     let (resistance, ratio) = strength.across.ok_or_else(|| missing(state))?;
     let above = format!("{}, above", m.leaf_name(i));
-    given!(s, "actual thickness", &above, t = strength.t);
-    given!(s, "orthogonal ratio", &above, mu = ratio);
+    // Before has the same thickness and ratio: its limits are tried without printing them twice.
+    let mut quiet = Sheet::silent();
+    let limits = if state.phase == "before" { &mut quiet } else { &mut *s };
+    given!(limits, "actual thickness", &above, t = strength.t);
+    given!(limits, "orthogonal ratio", &above, mu = ratio);
+    coefficient::applies(limits, &id(state), t, mu)?;
+    if state.phase == "before" {
+        given!(s, "orthogonal ratio", &above, mu = ratio);
+    }
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
-    let found = coefficient::alpha_2(s, &id(state), edges, t, h, l, mu)?;
+    let found = coefficient::alpha_2(s, &id(state), edges, h, l, mu)?;
     let alpha_2 = found.alpha_2;
     let w_Rd = by_leaf!(s, m, i, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
     let mut out =

@@ -22,4 +22,8 @@ pub use run::{check, hold_points};
 #[path = "../../../tests/examples/hand_panel.rs"]
 mod hand_panel;
 #[cfg(test)]
+mod properties;
+#[cfg(test)]
 mod tests;
+#[cfg(test)]
+mod tests_model;

@@ -25,7 +25,7 @@ pub fn cavity(
     let State { m, W_Ed, form, phase, .. } = state;
     let (w_Rd_o, w_Rd_i) = (leaves[0].w_Rd, leaves[1].w_Rd);
     let id = format!("{}-{phase}", form.id());
-    let tied = counted(s, m.ties);
+    let tied = counted(s, m.ties, phase);
     if !tied {
         s.note(
             "Without ties enough to count, the wind may stay on either leaf: the weaker leaf decides for the \
@@ -69,26 +69,37 @@ pub fn cavity(
         );
         (w_Rd, a.max(b), W_o, W_i)
     };
+    // Before is information on bending alone.
+    if phase == "before" {
+        return (w_Rd, ratio);
+    }
     calc!(s, "6.5", "pressure that the ties pass: the wind may meet either leaf first", W_t = max(W_o, W_i));
-    ties(s, annex, m.ties, m.tie_strength.as_ref(), W_t, phase);
+    ties(s, annex, m.ties, m.tie_strength.as_ref(), W_t);
     (w_Rd, ratio)
 }
 
+/// Least number of ties.
+fn least() -> PerArea {
+    PerArea::new(clause::LEAST_PER_M2 * 1e-6)
+}
+
+/// Whether so many ties count.
+pub fn enough(ties: PerArea) -> bool {
+    ties >= least()
+}
+
 /// Whether the ties are enough in number to let leaves share.
-pub fn counted(s: &mut Sheet, ties: Option<PerArea>) -> bool {
+pub fn counted(s: &mut Sheet, ties: Option<PerArea>, phase: &str) -> bool {
     let source = "6.5, 8.5.2.2, UK: from memory, check against the standard";
     let Some(number) = ties else {
-        s.rule(
-            "ties-by-rule",
-            source,
-            "wall ties of at least 2.5 per m²",
-            "none are stated".to_owned(),
-            false,
-        );
+        if phase == "after" {
+            let words = "wall ties of at least 2.5 per m²";
+            s.rule("ties-by-rule", source, words, "none are stated".to_owned(), false);
+        }
         return false;
     };
     given!(s, "wall ties", "job file", n_t = number);
-    given!(s, "least number of ties", source, n_min = PerArea::new(clause::LEAST_PER_M2 * 1e-6));
+    given!(s, "least number of ties", source, n_min = least());
     decide!(s, "6.5", "the ties count", "the ties are too few to count", n_t >= n_min)
 }
 
@@ -99,7 +110,6 @@ pub fn ties(
     number: Option<PerArea>,
     strength: Option<&Cause<Force>>,
     W_t: Stress,
-    phase: &str,
 ) {
     let Some(n_t) = number else { return };
     let Some(stated) = strength else {
@@ -108,7 +118,7 @@ pub fn ties(
             "6.5; Approved Document A 2C",
             "ties by number alone: no strength of a tie is stated, a hold point stands for it",
             format!("{} ties", print::show("n_t", n_t.dynamic())),
-            n_t >= PerArea::new(clause::LEAST_PER_M2 * 1e-6),
+            enough(n_t),
         );
         return;
     };
@@ -121,6 +131,5 @@ pub fn ties(
     let source = "UK NA Table NA.1: from memory, check against the standard (L)";
     given!(s, "material factor, wall ties", source, gamma_Mt = Num::new(annex.gamma_M_ties));
     let w_t = clause::transfer(s, n_t, F_k, gamma_Mt);
-    let id = if phase == "after" { "ties".to_owned() } else { format!("ties-{phase}") };
-    verify!(s, &id, "6.5", "wall ties", W_t <= w_t);
+    verify!(s, "ties", "6.5", "wall ties", W_t <= w_t);
 }

@@ -91,17 +91,15 @@ mod tests {
             (e(S, S, C, C), 49.2804e6),
         ] {
             let at = |area: f64| {
-                let h = Length::new(6500.0);
-                let l = Length::new(area / 6500.0);
                 let mut s = Sheet::recorder();
-                given!(s, "", "", h = h);
-                given!(s, "", "", l = l);
+                given!(s, "", "", h = Length::new(7500.0));
+                given!(s, "", "", l = Length::new(area / 7500.0));
                 given!(s, "", "", t_ef = Length::new(156.0));
                 let result = limits(&mut s, "size", edges, false, h, l, t_ef);
                 assert!(s.faults.is_empty(), "{:?}", s.faults);
                 result
             };
-            assert!(at(area - 10.0).is_ok() || area / 6500.0 > 7800.0, "{edges:?}");
+            assert!(at(area - 10.0).is_ok(), "{edges:?}");
             assert!(at(area + 10.0).is_err(), "{edges:?}");
         }
         let side = |l: f64| {

@@ -85,3 +85,43 @@ pub fn orthogonal_ratio(s: &mut Sheet, f_xd1_app: Stress, f_xd2: Stress) -> Num 
     calc!(s, "5.5.5, Annex E", "orthogonal ratio", mu = min(f_xd1_app / f_xd2, mu_max));
     mu
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// By hand: 10 kN/m on 100 mm, 20 kN/m³, 2.4 m: 10 + 20 x 0.1 x 1.2 = 12.4 kN/m; 0.9 x 12.4/100 = 0.1116
+    /// N/mm²; f_d 0.5 caps it at 0.1.
+    #[test]
+    fn precompression_and_its_cap() {
+        let at = |f_d: f64| {
+            precompression(
+                &mut Sheet::silent(),
+                Num::new(0.9),
+                LineLoad::new(10.0),
+                Weight::new(20e-6),
+                Length::new(100.0),
+                Length::new(2400.0),
+                Stress::new(f_d),
+            )
+        };
+        assert!((at(2.0).sigma_d.base() - 0.1116).abs() < 1e-12);
+        assert!((at(0.5).sigma_d.base() - 0.1).abs() < 1e-12);
+        assert!((at(0.5).sigma_v.base() - 0.1116).abs() < 1e-12);
+    }
+
+    /// By hand: f_xk1 0.27, gamma_M 2.7, sigma_d 0.1: 0.1 + 0.1 = 0.2 N/mm²; t 120: Z = 2400; 0.48 kNm/m.
+    /// f_xk2 1.08: 0.4 N/mm², 0.96 kNm/m; mu = 0.5, and 1 where the bed joint is the stronger.
+    #[test]
+    fn strengths_and_resistances() {
+        let mut s = Sheet::silent();
+        let (gamma, t) = (Num::new(2.7), Length::new(120.0));
+        let p = parallel(&mut s, t, Stress::new(0.27), gamma, Stress::new(0.1));
+        assert!((p.f_xd1_app.base() - 0.2).abs() < 1e-12 && (p.Z.base() - 2400.0).abs() < 1e-9);
+        assert!((p.M_Rd1.base() - 480.0).abs() < 1e-9);
+        let a = across(&mut s, Stress::new(1.08), gamma, p.Z);
+        assert!((a.M_Rd2.base() - 960.0).abs() < 1e-9);
+        assert!((orthogonal_ratio(&mut s, p.f_xd1_app, a.f_xd2).base() - 0.5).abs() < 1e-12);
+        assert_eq!(orthogonal_ratio(&mut s, a.f_xd2, p.f_xd1_app), 1.0);
+    }
+}
