@@ -6,11 +6,14 @@ pub mod loads;
 pub mod masonry;
 pub mod materials;
 pub mod outcome;
+pub mod panels;
 pub mod plan;
 pub mod returns;
 pub mod stability;
 pub mod wind;
 
+mod panel_sheet;
+mod panel_views;
 mod return_sheet;
 mod shapes;
 mod return_views;
@@ -67,7 +70,10 @@ impl<'a> Job<'a> {
             let pressures = wind.clone()?;
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
-        Self { building, annex, wind, storey, holds: outcome::holds(building) }
+        let mut job = Self { building, annex, wind, storey, holds: outcome::holds(building) };
+        let found = panel_sheet::holds(&job);
+        outcome::add(&mut job.holds, found);
+        job
     }
 
     /// The storey's sharing, where it was given and could be worked out.
@@ -87,6 +93,7 @@ pub const LIST: &[Check] = &[
     materials::sections,
     stability::sections,
     return_sheet::sections,
+    panel_sheet::sections,
     chain::sections,
 ];
 

@@ -114,6 +114,13 @@ pub fn holds(b: &Building) -> Vec<Hold> {
         .collect()
 }
 
+/// Adds hold points found by the checks, each with the mark it concerns, numbered on.
+pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>) {
+    for (mark, text) in found {
+        holds.push(Hold { mark: format!("H{}", holds.len() + 1), text, of: vec![mark], closed: None });
+    }
+}
+
 /// The outcome of one sheet; hold points that concern `mark` or the whole job make it conditional.
 pub fn of_sheet(sheet: &Sheet, mark: &str, holds: &[Hold]) -> Outcome {
     let open = holds

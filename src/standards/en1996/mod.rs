@@ -3,6 +3,7 @@
 //! A function's parameters carry the symbols' names and must already stand on the sheet.
 
 pub mod flange;
+pub mod lateral;
 pub mod reduction;
 pub mod section;
 pub mod shear;

@@ -1,0 +1,56 @@
+//! The sheet of each panel, before and after the removal.
+
+use super::panels::{self, PanelModel};
+use super::{Job, Section, masonry, panel_views};
+use crate::building::Panel;
+use crate::trace::{Outside, Sheet};
+
+/// One section a panel.
+pub fn sections(job: &Job<'_>) -> Vec<Section> {
+    job.building.panels.iter().map(|p| section(job, p)).collect()
+}
+
+/// Hold points that the panels bring, each with its mark.
+pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
+    let of = |p: &Panel| {
+        let texts = model(job, p).map(|m| panels::hold_points(&m)).unwrap_or_default();
+        texts.into_iter().map(|t| (p.mark.clone(), t)).collect::<Vec<_>>()
+    };
+    job.building.panels.iter().flat_map(of).collect()
+}
+
+fn section(job: &Job<'_>, p: &Panel) -> Section {
+    let mut sheet = Sheet::recorder();
+    let mut drawings = Vec::new();
+    match model(job, p) {
+        Ok(m) => {
+            let name = |kind: &str| format!("{}-{kind}", p.mark);
+            sheet.drawings(&[&name("before"), &name("after")]);
+            panels::check(&mut sheet, &m, &job.annex);
+            if !sheet.holds() {
+                sheet.heading(1, "What would make it pass");
+                for remedy in panels::remedies(&m, &job.annex) {
+                    sheet.note(remedy.sentence);
+                }
+            }
+            sheet.drawings(&[&name("section")]);
+            drawings = panel_views::drawings(job.building, p, &m);
+        }
+        Err(outside) => sheet.leave(outside),
+    }
+    Section { id: p.mark.clone(), mark: p.mark.clone(), title: p.title.clone(), sheet, drawings }
+}
+
+/// The model of a panel, strengths derived silently: they stand on the materials sheet.
+fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
+    let b = job.building;
+    let wind = job.wind.clone()?;
+    let missing = || Outside::new("build-up", "job file", "the build-up is not given");
+    let build_up = b.build_up(&p.build_up).ok_or_else(missing)?;
+    let mut leaves = Vec::new();
+    for leaf in &build_up.leaves {
+        let material = b.material(&leaf.material).ok_or_else(missing)?;
+        leaves.push(masonry::derive(&mut Sheet::silent(), b, material, build_up, leaf.thickness)?);
+    }
+    panels::model(b, p, &leaves, wind.panel, "wind sheet").ok_or_else(missing)
+}

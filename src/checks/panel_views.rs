@@ -1,0 +1,91 @@
+//! What the drawings of a panel show.
+
+use super::panels::PanelModel;
+use super::shapes::layers;
+use crate::building::{BuildUp, Building, Edge, FloorKind, Panel, Span};
+use crate::quantity::print;
+use crate::sketch::{
+    self, Action, Drawing, Floor, Frame, PanelElevation, PanelSection, Support, WallBehind, Wind, panel_pair,
+    panel_section,
+};
+use crate::standards::masonry::Edge as Kind;
+
+/// Frames on the sheet, mm: before and after stand side by side at one scale.
+const ELEVATION: Frame = Frame::new(78.0, 80.0);
+const SECTION: Frame = Frame::new(110.0, 90.0);
+/// Depth at which floors are drawn, mm; the job file does not give it. For the picture only.
+const FLOOR_DEPTH: f64 = 220.0;
+
+/// Elevation before and after, and the section.
+pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
+    let Some(build_up) = b.build_up(&p.build_up) else { return Vec::new() };
+    let thickness = b.build_up(&b.removed.build_up).map_or(100.0, |u| u.loaded().1.thickness.base());
+    let removed = |words: &str, gone: bool| {
+        p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words: words.to_owned(), removed: gone })
+    };
+    let before = elevation(p, &p.before, "before", m, None);
+    let after = elevation(p, &p.after, "after", m, removed("wall removed", true));
+    let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);
+    first.name = format!("{}-before", p.mark);
+    second.name = format!("{}-after", p.mark);
+    let mut third = panel_section(&section(b, p, m, build_up), SECTION);
+    third.name = format!("{}-section", p.mark);
+    vec![first, second, third]
+}
+
+fn edge(e: &Edge) -> sketch::Edge {
+    let support = match e.kind {
+        Kind::Free => Support::Free,
+        Kind::Simple => Support::Simple,
+        Kind::Continuous => Support::Continuous,
+    };
+    // The reason stands in the table of the sheet; the drawing has the key.
+    sketch::Edge { support, why: String::new() }
+}
+
+fn elevation(p: &Panel, span: &Span, state: &str, m: &PanelModel, wall: Option<WallBehind>) -> PanelElevation {
+    let inside = wall.filter(|w| w.x > 0.0 && w.x < span.length.base());
+    PanelElevation {
+        mark: p.mark.clone(),
+        state: state.to_owned(),
+        length: span.length.base(),
+        height: p.height.base(),
+        left: edge(&span.left),
+        right: edge(&span.right),
+        top: edge(&span.top),
+        base: edge(&span.base),
+        openings: Vec::new(),
+        walls: inside.into_iter().collect(),
+        yield_lines: Vec::new(),
+        values: vec![Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), "")],
+    }
+}
+
+fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> PanelSection {
+    let all = layers(b, build_up);
+    let (k, _) = build_up.loaded();
+    let loaded = if all.len() == 3 { 2 * k } else { 0 };
+    let above = b.storey(&p.storey).map_or(FloorKind::Timber, |s| s.floor_above);
+    let words = match above {
+        FloorKind::Timber => "timber floor",
+        FloorKind::Concrete => "concrete floor",
+        FloorKind::Roof => "roof",
+    };
+    let held = |e: &Edge| if e.kind == Kind::Free { "not held" } else { "holds the panel" };
+    PanelSection {
+        mark: p.mark.clone(),
+        height: p.height.base(),
+        layers: all,
+        floors: vec![Floor {
+            level: p.height.base() + FLOOR_DEPTH,
+            depth: FLOOR_DEPTH,
+            concrete: above == FloorKind::Concrete,
+            words: format!("{words}, {}", held(&p.after.top)),
+        }],
+        dpc: Some(0.0),
+        // Spacing of ties on a square grid, from their number per area.
+        ties: build_up.ties.map(|n| (1.0 / n.base()).sqrt()),
+        wind: Some((Wind::Toward, Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""))),
+        precompression: Some((loaded, Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""))),
+    }
+}

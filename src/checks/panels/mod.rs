@@ -1,0 +1,29 @@
+//! An outer wall across its plane, before and after the removal.
+//!
+//! * [`model`]: what the check needs, quantities only, and how a building yields it
+//! * [`strength`]: what each leaf resists per unit width
+//! * [`form`]: which way the panel spans, what pressure a leaf can take
+//! * [`sharing`]: two leaves and their ties
+//! * [`run`]: the check: before as information, after as the verdict, both side by side
+//! * [`remedy`]: what would make it pass
+
+pub mod form;
+pub mod model;
+pub mod remedy;
+pub mod run;
+pub mod sharing;
+pub mod strength;
+
+pub use model::{PanelLeaf, PanelModel, model};
+pub use remedy::{Remedy, remedies};
+pub use run::{check, hold_points};
+
+#[cfg(test)]
+#[path = "../../../tests/examples/hand_panel.rs"]
+mod hand_panel;
+#[cfg(test)]
+mod properties;
+#[cfg(test)]
+mod tests;
+#[cfg(test)]
+mod tests_model;

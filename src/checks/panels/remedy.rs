@@ -1,0 +1,134 @@
+//! What would make a panel pass: by search on the same check, on a silent sheet.
+
+use super::model::PanelModel;
+use super::run::check;
+use crate::quantity::print::show;
+use crate::quantity::{Length, LineLoad, Stress};
+use crate::solve::root::{greatest, least};
+use crate::standards::annex::Annex;
+use crate::standards::tables::annex_e::Edge;
+use crate::trace::{Sheet, Value};
+
+/// Lengths are given in steps of 10 mm, loads with the three digits that are printed; always rounded to the
+/// side that passes.
+const LENGTH_STEP: f64 = 10.0;
+
+fn digits_step(x: f64) -> f64 {
+    if x > 0.0 { 10f64.powf(x.log10().floor() - 2.0) } else { 1.0 }
+}
+
+fn down(x: f64, step: f64) -> f64 {
+    (x / step).floor() * step
+}
+
+/// One way to pass, or the finding that there is none that way.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Remedy {
+    /// Which: `wind`, `length`, `dead-load`, `edge`.
+    pub id: &'static str,
+    /// The value at which it passes, where there is one.
+    pub value: Option<Value>,
+    /// One sentence for the sheet.
+    pub sentence: String,
+}
+
+/// Whether the panel passes: every verdict after the removal holds and no limit is left.
+pub fn passes(m: &PanelModel, annex: &Annex) -> bool {
+    let mut s = Sheet::silent();
+    check(&mut s, m, annex);
+    s.holds()
+}
+
+/// Greatest net pressure, characteristic, at which the panel passes, up to 20 kN/m²; `None` where it does
+/// not pass without wind.
+pub fn greatest_wind(m: &PanelModel, annex: &Annex) -> Option<Stress> {
+    let at = |q: f64| passes(&PanelModel { q_net: Stress::new(q), ..m.clone() }, annex);
+    greatest(at, 0.0, 20e-3, 1, 1e-9).map(|q| Stress::new(down(q, digits_step(q))))
+}
+
+/// Greatest length after the removal, up to the given one times four, at which the panel passes; `None`
+/// where even a tenth of it does not.
+pub fn greatest_length(m: &PanelModel, annex: &Annex) -> Option<Length> {
+    let l = m.after.length.base();
+    let at = |l: f64| {
+        let mut shorter = m.clone();
+        shorter.after.length = Length::new(l);
+        passes(&shorter, annex)
+    };
+    greatest(at, l / 10.0, l * 4.0, 195, 0.5).map(|l| Length::new(down(l, LENGTH_STEP)))
+}
+
+/// Least dead load per length on the loaded leaf at which the panel passes, up to 500 kN/m; `None` where
+/// none does.
+pub fn least_dead(m: &PanelModel, annex: &Annex) -> Option<LineLoad> {
+    let i = m.loaded();
+    let at = |g: f64| {
+        let mut heavier = m.clone();
+        heavier.leaves[i].G_above = LineLoad::new(g);
+        passes(&heavier, annex)
+    };
+    least(at, 0.0, 500.0, 100, 1e-3).map(|g| LineLoad::new((g / digits_step(g)).ceil() * digits_step(g)))
+}
+
+/// Simple edges that would do it if one of them alone were continuous, by name.
+pub fn continuous_edges(m: &PanelModel, annex: &Annex) -> Vec<&'static str> {
+    let names = ["top", "base", "left", "right"];
+    (0..4)
+        .filter(|&i| {
+            let mut held = m.clone();
+            let a = &mut held.after;
+            let edge = [&mut a.top, &mut a.base, &mut a.left, &mut a.right].into_iter().nth(i);
+            match edge {
+                Some(edge) if edge.kind == Edge::Simple => {
+                    edge.kind = Edge::Continuous;
+                    passes(&held, annex)
+                }
+                _ => false,
+            }
+        })
+        .map(|i| names[i])
+        .collect()
+}
+
+/// What would make the panel pass, one change at a time.
+pub fn remedies(m: &PanelModel, annex: &Annex) -> Vec<Remedy> {
+    let value = |name: &str, v: crate::quantity::Dyn| Value { name: name.to_owned(), value: v };
+    let shown = |v: &Value| show(&v.name, v.value).to_string();
+    let mut out = Vec::new();
+
+    let wind = greatest_wind(m, annex).map(|q| value("q_net", q.dynamic()));
+    let sentence = match &wind {
+        Some(q) => format!("As it stands the panel takes a net pressure of {}, characteristic.", shown(q)),
+        None => "The panel does not pass even without wind.".to_owned(),
+    };
+    out.push(Remedy { id: "wind", value: wind, sentence });
+
+    let length = greatest_length(m, annex).map(|l| value("l", l.dynamic()));
+    let sentence = match &length {
+        Some(l) if l.value.value < m.after.length.base() => format!(
+            "It passes up to a length of {} between vertical supports: a return, pier or post no further apart.",
+            shown(l)
+        ),
+        Some(_) => "Its length is not what makes it fail.".to_owned(),
+        None => "No shorter length makes it pass.".to_owned(),
+    };
+    out.push(Remedy { id: "length", value: length, sentence });
+
+    let dead = least_dead(m, annex).map(|g| value("g", g.dynamic()));
+    let sentence = match &dead {
+        Some(g) => {
+            format!("It passes with a dead load of {} on the loaded leaf, if that load is there.", shown(g))
+        }
+        None => "No dead load makes it pass: it counts up to 0.2 f_d alone.".to_owned(),
+    };
+    out.push(Remedy { id: "dead-load", value: dead, sentence });
+
+    let edges = continuous_edges(m, annex);
+    let sentence = match edges.as_slice() {
+        [] => "No single simple edge, made continuous, makes it pass.".to_owned(),
+        [one] => format!("It passes with the {one} edge continuous, if that can be built and shown."),
+        several => format!("It passes with one of these edges continuous: {}.", several.join(", ")),
+    };
+    out.push(Remedy { id: "edge", value: None, sentence });
+    out
+}
