@@ -87,7 +87,7 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
 
 /// Design pressure, with what is taken for granted.
 fn wind(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Stress {
-    s.heading(2, "Wind on the panel");
+    s.heading(1, "Wind on the panel");
     given!(s, "net pressure on the panel, characteristic", &m.q_source, q_net = m.q_net);
     given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
     calc!(s, "EN 1990 6.4.3.2", "design pressure", W_Ed = gamma_W * q_net);

@@ -1,0 +1,19 @@
+//! The one test binary: every binary would link the typesetter again.
+//!
+//! * `trace`: the three locks and the three renderings
+//! * `examples`: one file a published source, and two hand calculations
+//! * `properties`: what must be monotone, symmetric or continuous
+//! * `sheets`: every demo job as text
+//! * `pdf`: the packs, read back
+//! * `cli`: the command as a person runs it
+//! * `conventions`: arrows between modules, coverage files, the glossary
+
+#![allow(non_snake_case, missing_docs, reason = "symbols as the standards write them; tests need no docs")]
+
+mod cli;
+mod conventions;
+mod examples;
+mod pdf;
+mod properties;
+mod sheets;
+mod trace;
