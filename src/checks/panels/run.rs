@@ -38,18 +38,18 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     let W_Ed = wind(s, m, annex);
     let strengths: Vec<Strength> = (0..m.leaves.len()).map(|i| strength::of_leaf(s, m, i)).collect();
     let before = if s.recording() {
-        s.heading(2, "Before the removal");
+        s.heading(1, "Before the removal");
         aside(s, |s| state(s, m, annex, &m.before, W_Ed, &strengths, "before"))
     } else {
         None
     };
-    s.heading(2, "After the removal");
+    s.heading(1, "After the removal");
     let (v, o) = (s.verdicts.len(), s.outside.len());
     let after = state(s, m, annex, &m.after, W_Ed, &strengths, "after");
     if s.recording() {
         s.table(|| side_by_side(m, before.as_ref(), after.as_ref()));
         if s.verdicts[v..].iter().any(|v| !v.holds) && s.outside.len() == o {
-            s.heading(2, "What would make it pass");
+            s.heading(1, "What would make it pass");
             for r in remedy::remedies(m, annex) {
                 s.note(r.sentence);
             }
