@@ -102,14 +102,15 @@ pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
     findings
 }
 
-/// The runs of text of a laid-out document, in the order in which they print.
+/// The text of each sheet of a laid-out document, in the order in which it prints.
 #[cfg(test)]
-pub(super) fn words(document: &PagedDocument) -> Vec<String> {
-    let mut inks = Vec::new();
-    for page in document.pages() {
-        walk(&page.frame, Transform::identity(), &mut inks);
-    }
-    inks.into_iter().map(|ink| ink.text).collect()
+pub(super) fn sheets(document: &PagedDocument) -> Vec<String> {
+    let words = |frame: &Frame| {
+        let mut inks = Vec::new();
+        walk(frame, Transform::identity(), &mut inks);
+        inks.into_iter().map(|ink| ink.text).collect::<Vec<_>>().join("")
+    };
+    document.pages().iter().map(|page| words(&page.frame)).collect()
 }
 
 fn walk(frame: &Frame, outer: Transform, inks: &mut Vec<Ink>) {
