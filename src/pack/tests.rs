@@ -27,21 +27,44 @@ fn the_same_data_gives_the_same_bytes() {
     assert!(first.pdf == second.pdf);
 }
 
-/// Two labels at one point and one far right of the frame: the audit must see all three flaws.
+/// Labels spoilt in each way, and labels beside them that are sound.
 #[test]
 fn the_audit_finds_flaws() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let label = |x: f64, text: &str| {
-        serde_json::json!({"kind": "label", "x": x, "y": 5.0, "anchor": "start", "size": 8.0, "rotate": 0.0,
+    let label = |x: f64, y: f64, rotate: f64, text: &str| {
+        serde_json::json!({"kind": "label", "x": x, "y": y, "anchor": "middle", "size": 8.0, "rotate": rotate,
             "runs": [{"text": text, "style": "plain"}], "width": 10.0, "height": 3.0, "role": "note"})
     };
-    let items = [label(10.0, "first"), label(11.0, "second"), label(160.0, "far too far right")];
+    let stroke = |y: f64| serde_json::json!({"kind": "stroke", "pen": "leader", "path": [["M", 0.0, y], ["L", 60.0, y]]});
+    let area = serde_json::json!({"kind": "fill", "ink": "mask",
+        "path": [["M", 40.0, 25.0], ["L", 60.0, 25.0], ["L", 60.0, 35.0], ["L", 40.0, 35.0], ["Z"]]});
+    let items = [
+        label(10.0, 5.0, 0.0, "first"),
+        label(11.0, 5.0, 0.0, "second"),
+        label(170.0, 5.0, 0.0, "far right"),
+        stroke(14.0),
+        label(10.0, 15.0, 0.0, "over the line"),
+        label(10.0, 21.0, 0.0, "struck"),
+        stroke(20.0),
+        label(50.0, 31.0, 0.0, "covered"),
+        label(20.0, 31.0, 0.0, "clear"),
+        label(28.0, 33.0, -90.0, "upright"),
+        stroke(33.0),
+        area,
+    ];
     let drawing = serde_json::json!({"name": "flawed", "caption": "flawed", "scale": "1:20", "alt": "flawed",
-        "width": 40.0, "height": 10.0, "items": items});
+        "width": 60.0, "height": 40.0, "items": items});
     data["sections"][0]["blocks"] = serde_json::json!([{"kind": "drawing", "drawing": drawing}]);
-    let flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
-    assert!(flaws.contains(&Flaw::Overlap("first".into(), "second".into())), "{flaws:?}");
-    assert!(flaws.contains(&Flaw::Outside("far too far right".into())), "{flaws:?}");
+    let mut flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
+    flaws.sort_by_key(|flaw| format!("{flaw:?}"));
+    let expected = [
+        Flaw::Crossed("covered".into()),
+        Flaw::Crossed("struck".into()),
+        Flaw::Crossed("upright".into()),
+        Flaw::Outside("far right".into()),
+        Flaw::Overlap("first".into(), "second".into()),
+    ];
+    assert_eq!(flaws, expected);
 }
 
 #[test]
