@@ -40,7 +40,7 @@ pub enum Flaw {
     Overlap(String, String),
     /// Text runs into a margin or off the sheet.
     Outside(String),
-    /// A line or an area is drawn over text.
+    /// A line runs through text, or an area is drawn over it.
     Crossed(String),
     /// A sign that the face does not hold.
     Missing(String),
@@ -63,24 +63,24 @@ impl fmt::Display for Finding {
 pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
     let mut findings = Vec::new();
     for (index, page) in document.pages().iter().enumerate() {
-        let Sheet { mut inks, marks } = Sheet::of(&page.frame);
+        let mut sheet = Sheet::of(&page.frame);
         let size = page.frame.size();
         let mut report = |ink: &Ink, flaw| {
             let at = (ink.min.x.to_mm(), ink.min.y.to_mm());
             findings.push(Finding { sheet: index + 1, at, flaw });
         };
-        for ink in &inks {
+        for ink in &sheet.inks {
             if ink.missing {
                 report(ink, Flaw::Missing(ink.text.clone()));
             }
             if outside(ink, size.x, size.y) {
                 report(ink, Flaw::Outside(ink.text.clone()));
             }
-            if marks.iter().any(|mark| mark.hides(ink, Abs::pt(TOLERANCE))) {
+            if sheet.spoils(ink, Abs::pt(TOLERANCE)) {
                 report(ink, Flaw::Crossed(ink.text.clone()));
             }
         }
-        for (ink, other) in overlaps(&mut inks) {
+        for (ink, other) in overlaps(&mut sheet.inks) {
             report(ink, Flaw::Overlap(ink.text.clone(), other.text.clone()));
         }
     }

@@ -42,18 +42,10 @@ pub(super) struct Mark {
 }
 
 impl Mark {
-    /// Whether the mark prints later than the text and over it: a line through the ink by more
-    /// than `slack`, or an area over its middle. What printed earlier lies under the text.
-    pub(super) fn hides(&self, ink: &Ink, slack: Abs) -> bool {
-        if self.order < ink.order {
-            return false;
-        }
-        let crossed = self.stroked
-            && self
-                .paths
-                .iter()
-                .any(|path| path.windows(2).any(|ends| crosses(ends[0], ends[1], ink, slack)));
-        crossed || (self.filled && self.covers(ink.centre()))
+    /// Whether a line of the mark runs through the ink by more than `slack`.
+    fn strikes(&self, ink: &Ink, slack: Abs) -> bool {
+        let through = |ends: &[Point]| crosses(ends[0], ends[1], ink, slack);
+        self.stroked && self.paths.iter().any(|path| path.windows(2).any(through))
     }
 
     /// Even-odd rule over the corners.
@@ -102,6 +94,16 @@ impl Sheet {
         let mut sheet = Self::default();
         sheet.walk(frame, Transform::identity());
         sheet
+    }
+
+    /// Whether the text cannot be read for what is drawn: a line through it, or an area printed
+    /// over its middle. A line that printed earlier is harmless where an area printed between
+    /// the two clears the ground.
+    pub(super) fn spoils(&self, ink: &Ink, slack: Abs) -> bool {
+        let areas = || self.marks.iter().filter(|mark| mark.filled && mark.covers(ink.centre()));
+        let covered = areas().any(|area| area.order > ink.order);
+        let cleared = |line: &Mark| areas().any(|area| line.order < area.order && area.order < ink.order);
+        covered || self.marks.iter().any(|mark| mark.strikes(ink, slack) && !cleared(mark))
     }
 
     fn walk(&mut self, frame: &Frame, outer: Transform) {

@@ -43,12 +43,16 @@ fn the_audit_finds_flaws() {
         label(11.0, 5.0, 0.0, "second"),
         label(170.0, 5.0, 0.0, "far right"),
         stroke(14.0),
-        label(10.0, 15.0, 0.0, "over the line"),
+        label(10.0, 15.0, 0.0, "on the line"),
         label(10.0, 21.0, 0.0, "struck"),
         stroke(20.0),
         label(50.0, 31.0, 0.0, "covered"),
         label(20.0, 31.0, 0.0, "clear"),
         label(28.0, 33.0, -90.0, "upright"),
+        stroke(38.0),
+        serde_json::json!({"kind": "fill", "ink": "mask",
+            "path": [["M", 5.0, 36.0], ["L", 15.0, 36.0], ["L", 15.0, 40.0], ["L", 5.0, 40.0], ["Z"]]}),
+        label(10.0, 39.0, 0.0, "cleared"),
         stroke(33.0),
         area,
     ];
@@ -59,6 +63,7 @@ fn the_audit_finds_flaws() {
     flaws.sort_by_key(|flaw| format!("{flaw:?}"));
     let expected = [
         Flaw::Crossed("covered".into()),
+        Flaw::Crossed("on the line".into()),
         Flaw::Crossed("struck".into()),
         Flaw::Crossed("upright".into()),
         Flaw::Outside("far right".into()),
