@@ -3,9 +3,10 @@
 
 use std::fmt;
 
-use typst::layout::{Abs, Frame, FrameItem, Point, Transform};
-use typst::text::{FontFlags, TextItem};
+use typst::layout::Abs;
 use typst_layout::PagedDocument;
+
+use super::ink::{Ink, Sheet};
 
 /// Ink may touch by this much, in points, before it counts: letters lean over their boxes.
 const TOLERANCE: f64 = 0.6;
@@ -39,6 +40,8 @@ pub enum Flaw {
     Overlap(String, String),
     /// Text runs into a margin or off the sheet.
     Outside(String),
+    /// A line runs through text, or an area is drawn over it.
+    Crossed(String),
     /// A sign that the face does not hold.
     Missing(String),
 }
@@ -50,29 +53,9 @@ impl fmt::Display for Finding {
         match &self.flaw {
             Flaw::Overlap(a, b) => write!(f, "\"{a}\" prints over \"{b}\""),
             Flaw::Outside(text) => write!(f, "\"{text}\" runs into the margin"),
+            Flaw::Crossed(text) => write!(f, "\"{text}\" is drawn over"),
             Flaw::Missing(text) => write!(f, "a sign of \"{text}\" is missing"),
         }
-    }
-}
-
-/// A piece of text with the box of its ink, in points from the sheet's top left corner.
-struct Ink {
-    text: String,
-    min: Point,
-    max: Point,
-    missing: bool,
-    /// The size of the type and whether the face is the one for mathematics.
-    size: Abs,
-    mathematics: bool,
-}
-
-impl Ink {
-    fn holds(&self, point: Point) -> bool {
-        self.min.x < point.x && point.x < self.max.x && self.min.y < point.y && point.y < self.max.y
-    }
-
-    fn centre(&self) -> Point {
-        Point::new((self.min.x + self.max.x) / 2.0, (self.min.y + self.max.y) / 2.0)
     }
 }
 
@@ -80,68 +63,35 @@ impl Ink {
 pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
     let mut findings = Vec::new();
     for (index, page) in document.pages().iter().enumerate() {
-        let mut inks = Vec::new();
-        walk(&page.frame, Transform::identity(), &mut inks);
+        let mut sheet = Sheet::of(&page.frame);
         let size = page.frame.size();
         let mut report = |ink: &Ink, flaw| {
             let at = (ink.min.x.to_mm(), ink.min.y.to_mm());
             findings.push(Finding { sheet: index + 1, at, flaw });
         };
-        for ink in &inks {
+        for ink in &sheet.inks {
             if ink.missing {
                 report(ink, Flaw::Missing(ink.text.clone()));
             }
             if outside(ink, size.x, size.y) {
                 report(ink, Flaw::Outside(ink.text.clone()));
             }
+            if sheet.spoils(ink, Abs::pt(TOLERANCE)) {
+                report(ink, Flaw::Crossed(ink.text.clone()));
+            }
         }
-        for (ink, other) in overlaps(&mut inks) {
+        for (ink, other) in overlaps(&mut sheet.inks) {
             report(ink, Flaw::Overlap(ink.text.clone(), other.text.clone()));
         }
     }
     findings
 }
 
-/// The runs of text of a laid-out document, in the order in which they print.
+/// The text of each sheet of a laid-out document, in the order in which it prints.
 #[cfg(test)]
-pub(super) fn words(document: &PagedDocument) -> Vec<String> {
-    let mut inks = Vec::new();
-    for page in document.pages() {
-        walk(&page.frame, Transform::identity(), &mut inks);
-    }
-    inks.into_iter().map(|ink| ink.text).collect()
-}
-
-fn walk(frame: &Frame, outer: Transform, inks: &mut Vec<Ink>) {
-    for (at, item) in frame.items() {
-        let here = outer.pre_concat(Transform::translate(at.x, at.y));
-        match item {
-            FrameItem::Group(group) => walk(&group.frame, here.pre_concat(group.transform), inks),
-            FrameItem::Text(text) => inks.extend(ink(text, here)),
-            _ => {}
-        }
-    }
-}
-
-/// The ink of one run of text; none for spaces.
-fn ink(item: &TextItem, place: Transform) -> Option<Ink> {
-    let bounds = item.bbox();
-    if !bounds.min.x.to_pt().is_finite() || item.text.trim().is_empty() {
-        return None;
-    }
-    // Turned labels: the box of the turned corners.
-    let corners = [
-        bounds.min,
-        bounds.max,
-        Point::new(bounds.min.x, bounds.max.y),
-        Point::new(bounds.max.x, bounds.min.y),
-    ]
-    .map(|corner| corner.transform(place));
-    let min = corners.iter().copied().reduce(Point::min)?;
-    let max = corners.iter().copied().reduce(Point::max)?;
-    let missing = item.glyphs.iter().any(|glyph| glyph.id == 0);
-    let mathematics = item.font.info().flags.contains(FontFlags::MATH);
-    Some(Ink { text: item.text.to_string(), min, max, missing, size: item.size, mathematics })
+pub(super) fn sheets(document: &PagedDocument) -> Vec<String> {
+    let words = |sheet: Sheet| sheet.inks.into_iter().map(|ink| ink.text).collect::<String>();
+    document.pages().iter().map(|page| words(Sheet::of(&page.frame))).collect()
 }
 
 fn outside(ink: &Ink, width: Abs, height: Abs) -> bool {
@@ -156,7 +106,7 @@ fn outside(ink: &Ink, width: Abs, height: Abs) -> bool {
 /// that each piece meets only those that begin above its foot.
 fn overlaps(inks: &mut [Ink]) -> Vec<(&Ink, &Ink)> {
     let slack = Abs::pt(TOLERANCE);
-    inks.sort_by(|a, b| a.min.y.cmp(&b.min.y));
+    inks.sort_by_key(|ink| ink.min.y);
     let mut pairs = Vec::new();
     for (index, a) in inks.iter().enumerate() {
         for b in inks[index + 1..].iter().take_while(|b| b.min.y + slack < a.max.y) {

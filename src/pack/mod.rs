@@ -6,6 +6,7 @@
 //! | `world` | templates, fonts and data as the files of a closed world |
 //! | `pdf` | compiling the templates and writing the PDF |
 //! | [`audit`] | looking over the finished sheets for overlaps, overflow and missing signs |
+//! | `ink` | what a finished sheet prints and where |
 //!
 //! The templates in `templates/` hold no engineering: every number arrives as text, formulas
 //! arrive as trees, drawings as positions in millimetres on paper. Nothing here reads a disk,
@@ -13,6 +14,7 @@
 
 pub mod audit;
 pub mod data;
+mod ink;
 mod pdf;
 pub mod photograph;
 mod world;

@@ -27,21 +27,49 @@ fn the_same_data_gives_the_same_bytes() {
     assert!(first.pdf == second.pdf);
 }
 
-/// Two labels at one point and one far right of the frame: the audit must see all three flaws.
+/// Labels spoilt in each way, and labels beside them that are sound.
 #[test]
 fn the_audit_finds_flaws() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let label = |x: f64, text: &str| {
-        serde_json::json!({"kind": "label", "x": x, "y": 5.0, "anchor": "start", "size": 8.0, "rotate": 0.0,
+    let label = |x: f64, y: f64, rotate: f64, text: &str| {
+        serde_json::json!({"kind": "label", "x": x, "y": y, "anchor": "middle", "size": 8.0, "rotate": rotate,
             "runs": [{"text": text, "style": "plain"}], "width": 10.0, "height": 3.0, "role": "note"})
     };
-    let items = [label(10.0, "first"), label(11.0, "second"), label(160.0, "far too far right")];
+    let stroke = |y: f64| serde_json::json!({"kind": "stroke", "pen": "leader", "path": [["M", 0.0, y], ["L", 60.0, y]]});
+    let area = serde_json::json!({"kind": "fill", "ink": "mask",
+        "path": [["M", 40.0, 25.0], ["L", 60.0, 25.0], ["L", 60.0, 35.0], ["L", 40.0, 35.0], ["Z"]]});
+    let items = [
+        label(10.0, 5.0, 0.0, "first"),
+        label(11.0, 5.0, 0.0, "second"),
+        label(170.0, 5.0, 0.0, "far right"),
+        stroke(14.0),
+        label(10.0, 15.0, 0.0, "on the line"),
+        label(10.0, 21.0, 0.0, "struck"),
+        stroke(20.0),
+        label(50.0, 31.0, 0.0, "covered"),
+        label(20.0, 31.0, 0.0, "clear"),
+        label(28.0, 33.0, -90.0, "upright"),
+        stroke(38.0),
+        serde_json::json!({"kind": "fill", "ink": "mask",
+            "path": [["M", 5.0, 36.0], ["L", 15.0, 36.0], ["L", 15.0, 40.0], ["L", 5.0, 40.0], ["Z"]]}),
+        label(10.0, 39.0, 0.0, "cleared"),
+        stroke(33.0),
+        area,
+    ];
     let drawing = serde_json::json!({"name": "flawed", "caption": "flawed", "scale": "1:20", "alt": "flawed",
-        "width": 40.0, "height": 10.0, "items": items});
+        "width": 60.0, "height": 40.0, "items": items});
     data["sections"][0]["blocks"] = serde_json::json!([{"kind": "drawing", "drawing": drawing}]);
-    let flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
-    assert!(flaws.contains(&Flaw::Overlap("first".into(), "second".into())), "{flaws:?}");
-    assert!(flaws.contains(&Flaw::Outside("far too far right".into())), "{flaws:?}");
+    let mut flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
+    flaws.sort_by_key(|flaw| format!("{flaw:?}"));
+    let expected = [
+        Flaw::Crossed("covered".into()),
+        Flaw::Crossed("on the line".into()),
+        Flaw::Crossed("struck".into()),
+        Flaw::Crossed("upright".into()),
+        Flaw::Outside("far right".into()),
+        Flaw::Overlap("first".into(), "second".into()),
+    ];
+    assert_eq!(flaws, expected);
 }
 
 #[test]
@@ -64,6 +92,75 @@ fn a_photograph_that_is_not_there_is_named() {
     assert!(lines.iter().any(|line| line.contains("photo/0.jpg")), "{error}");
 }
 
+/// Long titles, long words, long tables and long formulas still keep clear of each other.
+#[test]
+fn long_words_keep_clear() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let words = "vertical load on the toe of the return at the damp-proof course, before and after the wall comes out";
+    data["job"]["title"] = words.into();
+    data["outcome"]["words"] =
+        "adequate once 3 hold points are closed and the junction of R1 has been seen".into();
+    data["warnings"] = serde_json::json!([words, words, words]);
+    data["checked"] =
+        serde_json::json!({"text": "", "name": "Ines Okafor", "letters": "IO", "date": "22 October 2026"});
+    let rows = vec![data["schedule"].as_array().unwrap().clone(); 8].concat();
+    data["schedule"] = rows.into();
+    data["inputs"] = format!("{}\n{}\n", "x".repeat(300), words.repeat(4)).into();
+    for section in data["sections"].as_array_mut().unwrap() {
+        section["title"] = words.into();
+        section["outcome"] = serde_json::json!({"kind": "conditional", "words": words});
+        for block in section["blocks"].as_array_mut().unwrap() {
+            let kind = block["kind"].as_str().unwrap().to_owned();
+            if kind == "table" {
+                let rows = vec![block["rows"].as_array().unwrap().clone(); 30].concat();
+                block["rows"] = rows.into();
+            } else if kind == "verify" {
+                block["case"] = words.into();
+                block["ratio"] = "12.40".into();
+                block["bar"] = 2.0.into();
+            }
+            if block.get("words").is_some() {
+                block["words"] = words.into();
+            }
+            if block.get("clause").is_some() {
+                block["clause"] = "EN 1996-1-1 6.1.2.1(3) with the UK National Annex, from memory".into();
+            }
+        }
+    }
+    let pack = typeset(&data, &[], "sample").unwrap();
+    assert_eq!(pack.warnings, Vec::<String>::new());
+    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    assert!(flaws.is_empty(), "{}", flaws.join("\n"));
+}
+
+/// Every sheet carries the title block: number, sheet, who made and checked it, revision,
+/// status, program and digest, and that it is not signed.
+#[test]
+fn every_sheet_says_what_it_is() {
+    let data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let world = world::World::new(SAMPLE.as_bytes().to_vec(), &[]);
+    let document = pdf::compile(&world).unwrap().0;
+    let sheets = audit::sheets(&document);
+    let digest = data["digest"].as_str().unwrap();
+    for (index, words) in sheets.iter().enumerate() {
+        let number = format!("sheet {} of {}", index + 1, sheets.len());
+        for part in [
+            "2419",
+            &number,
+            "Rowan Hale",
+            "20 October 2026",
+            "self-checked",
+            "revision A",
+            "for building control",
+            "Perpend 0.1.0",
+            digest,
+            "not signed",
+        ] {
+            assert!(words.contains(part), "sheet {}: {part} is not in {words}", index + 1);
+        }
+    }
+}
+
 /// Words from a job print as they stand: nothing in them is read as markup or code.
 #[test]
 fn words_print_literally() {
@@ -80,5 +177,5 @@ fn words_print_literally() {
 
 fn printed(data: &serde_json::Value) -> String {
     let world = world::World::new(serde_json::to_vec(data).unwrap(), &[]);
-    audit::words(&pdf::compile(&world).unwrap().0).join(" ")
+    audit::sheets(&pdf::compile(&world).unwrap().0).concat()
 }
