@@ -27,12 +27,6 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             let name = |kind: &str| format!("{}-{kind}", p.mark);
             sheet.drawings(&[&name("before"), &name("after")]);
             panels::check(&mut sheet, &m, &job.annex);
-            if !sheet.holds() {
-                sheet.heading(1, "What would make it pass");
-                for remedy in panels::remedies(&m, &job.annex) {
-                    sheet.note(remedy.sentence);
-                }
-            }
             sheet.drawings(&[&name("section")]);
             drawings = panel_views::drawings(job.building, p, &m);
         }
