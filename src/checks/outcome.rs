@@ -1,7 +1,7 @@
 //! Outcomes in the only words there are, and the hold points that make one conditional.
 
 use super::Section;
-use crate::building::{Building, Link, Proof};
+use crate::building::{Building, Head, Link, Proof};
 use crate::trace::Sheet;
 
 /// The outcome of a sheet or of the job.
@@ -78,9 +78,32 @@ pub fn links(b: &Building) -> Vec<Link> {
                 of: Vec::new(),
             });
         }
-        out.extend(given.into_iter().cloned());
+        out.extend(given.into_iter().map(|l| proven(b, l)));
     }
     out
+}
+
+/// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
+fn proven(b: &Building, link: &Link) -> Link {
+    let held_elsewhere = b.returns.iter().any(|r| match &r.head {
+        Head::Free => false,
+        Head::Propped(walls) => walls.iter().any(|w| !b.returns.iter().any(|o| o.mark == *w)),
+    });
+    let here = match link.link.as_str() {
+        "wind face" | "panel" => !b.panels.is_empty(),
+        "bracing wall" => !b.returns.is_empty() && !held_elsewhere,
+        "junction" | "dpc" => !b.returns.is_empty(),
+        // Floors and footings are not calculated in this pack.
+        _ => false,
+    };
+    if link.proof != Proof::Calculated || here || !link.words.trim().is_empty() {
+        return link.clone();
+    }
+    Link {
+        proof: Proof::Assumed,
+        words: format!("show the calculation of the {}: it is said to be calculated, but not in this pack", link.link),
+        ..link.clone()
+    }
 }
 
 /// Hold points: those given, one for every link that is assumed, one for every junction that is

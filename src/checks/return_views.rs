@@ -160,7 +160,7 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
         compressed: compressed.base(),
         centroid: centroid.base(),
         resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() },
-        force: show("N_Ed", a.N_Ed.dynamic(), &case.name()),
+        force: show("N_Ed", a.N_Ed.dynamic(), ""),
         at_toe: show("sigma", sigma.dynamic(), ""),
         at_heel: heel,
     })
