@@ -213,11 +213,21 @@ fn cantilever(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
             M_W
         }
         (_, true, false) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = H_Ed * h + w_Ed * sq(h) / 2.0);
+            calc!(
+                s,
+                "statics, head free",
+                "moment of the lateral loads",
+                M_W = H_Ed * h + w_Ed * sq(h) / 2.0
+            );
             M_W
         }
         (_, false, false) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0);
+            calc!(
+                s,
+                "statics, head free",
+                "moment of the lateral loads",
+                M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0
+            );
             M_W
         }
     }
