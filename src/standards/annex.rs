@@ -1,6 +1,6 @@
 //! National values: everything a National Annex may choose, in one struct that is passed, never global.
 
-use super::tables::{compressive, gamma_m, shear, wind};
+use super::tables::{compressive, gamma_m, wind};
 
 /// National values of EN 1990, EN 1991-1-4 and EN 1996-1-1.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -52,8 +52,8 @@ impl Annex {
         gamma_M_ties: gamma_m::WALL_TIES,
         f_m_limit: compressive::F_M_LIMIT,
         f_b_limit: compressive::F_B_LIMIT,
-        shear_limit: shear::LIMIT_FILLED,
-        shear_limit_unfilled: shear::LIMIT_UNFILLED,
-        E_over_f_k: compressive::E_PER_F_K,
+        shear_limit: 0.065,
+        shear_limit_unfilled: 0.045,
+        E_over_f_k: 1000.0,
     };
 }
