@@ -152,7 +152,7 @@ fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, l: Length, t: Length) -> Opt
     let h_tot = i.building.storey(&i.ret.storey).map_or(h, |x| x.total_height);
     let _ = l;
     given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
-    given!(s, "height to the top of the structure", "job file", h_tot = h_tot);
+    given!(s, "height to the top of the structure", "job file", h_tot);
     let b_L = flange::left(s, Side { to_end: j.left, to_next: j.next_wall_left }, h_tot, h, t_f);
     let b_R = flange::right(s, Side { to_end: j.right, to_next: j.next_wall_right }, h_tot, h, t_f);
     calc!(s, "5.5.3", "width of the flange that counts", b_f = b_L + t + b_R);
