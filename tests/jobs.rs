@@ -67,16 +67,19 @@ struct Variation {
     dice: Dice,
     wind: f64,
     panel: f64,
+    /// The returns stand among the bracing walls too, with the same length.
+    lengths_twice: bool,
 }
 
 impl Variation {
     fn new(seed: u64) -> Self {
         let mut dice = Dice(seed);
         let (wind, panel) = (dice.between(0.5, 2.0), dice.between(0.6, 1.3));
-        Self { seed, dice, wind, panel }
+        Self { seed, dice, wind, panel, lengths_twice: false }
     }
 
     fn of(&mut self, text: &str) -> String {
+        self.lengths_twice = text.contains("[[bracing]]\nmark = \"R");
         let mut out = String::new();
         let mut section = String::new();
         for line in text.lines() {
@@ -134,7 +137,7 @@ impl Variation {
             ("wind.stated", "overall" | "panel") => times(value, self.wind, 3),
             ("wind.terrain", "v_map") => format!("v_map = \"{:.1} m/s\"", self.dice.between(20.0, 26.0)),
             (_, "strength") if material => times(value, self.dice.between(0.8, 1.6), 1),
-            ("returns", "length") => times(value, self.dice.between(1.0, 1.9), 0),
+            ("returns", "length") if !self.lengths_twice => times(value, self.dice.between(1.0, 1.9), 0),
             ("returns.loads", "dead" | "imposed") => times(value, self.dice.between(0.3, 2.0), 1),
             ("panels.before" | "panels.after", "length" | "wall_at") => times(value, self.panel, 2),
             ("panels", "dead_above") => times(value, self.dice.between(0.5, 3.0), 1),
