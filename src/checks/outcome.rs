@@ -57,7 +57,10 @@ pub struct Hold {
 pub const LINKS: [(&str, &str); 8] = [
     ("wind face", "the outer walls be shown to carry the wind between their supports"),
     ("panel", "the outer wall panels be shown to be sound and held as drawn"),
-    ("floor edge", "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included"),
+    (
+        "floor edge",
+        "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included",
+    ),
     ("diaphragm", "the floor or roof be shown to carry the wind in its plane to the bracing walls"),
     ("bracing wall", "the walls that take the wind now be shown to carry it"),
     ("junction", "the junction between return and outer wall be opened up and seen"),
@@ -101,7 +104,10 @@ fn proven(b: &Building, link: &Link) -> Link {
     }
     Link {
         proof: Proof::Assumed,
-        words: format!("show the calculation of the {}: it is said to be calculated, but not in this pack", link.link),
+        words: format!(
+            "show the calculation of the {}: it is said to be calculated, but not in this pack",
+            link.link
+        ),
         ..link.clone()
     }
 }
@@ -113,15 +119,24 @@ pub fn holds(b: &Building) -> Vec<Hold> {
     let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
         let words = l.words.trim_end_matches('.');
         let begins = words.to_lowercase().starts_with("before the wall comes down");
-        let text = if begins { format!("{words}.") } else { format!("Before the wall comes down ({}): {words}.", l.link) };
+        let text = if begins {
+            format!("{words}.")
+        } else {
+            format!("Before the wall comes down ({}): {words}.", l.link)
+        };
         (text, l.of, None)
     });
     let told = |mark: &str| {
         b.links.iter().any(|l| {
-            l.link == "junction" && l.proof == Proof::Assumed && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
+            l.link == "junction"
+                && l.proof == Proof::Assumed
+                && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
         })
     };
-    let unseen = b.returns.iter().filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
+    let unseen = b
+        .returns
+        .iter()
+        .filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
     let junctions = unseen.map(|r| {
         let text = format!(
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",

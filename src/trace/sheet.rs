@@ -247,7 +247,8 @@ impl Sheet {
 
     /// An id that nothing on this sheet has yet.
     fn unique(&self, id: &str) -> String {
-        let taken = |id: &str| self.verdicts.iter().any(|v| v.id == id) || self.outside.iter().any(|o| o.id == id);
+        let taken =
+            |id: &str| self.verdicts.iter().any(|v| v.id == id) || self.outside.iter().any(|o| o.id == id);
         if !taken(id) {
             return id.to_owned();
         }

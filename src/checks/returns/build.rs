@@ -134,7 +134,8 @@ fn strengths(s: &mut Sheet, i: &Inputs<'_>, build_up: &BuildUp, k: usize) -> Res
     let Some(material) = i.building.material(&this.material) else {
         return Err(Outside::new("material", "job file", "the material is not given"));
     };
-    let found = masonry::derive(&mut Sheet::silent(), i.building, material, build_up, this.thickness)?;
+    let found =
+        masonry::derive(&mut Sheet::silent(), i.building, i.annex, material, build_up, this.thickness)?;
     let source = format!("materials sheet, {}", found.name);
     given!(s, "normalised unit strength", &source, f_b = found.f_b);
     given!(s, "characteristic compressive strength", &source, f_k = found.f_k);
@@ -151,7 +152,7 @@ fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, l: Length, t: Length) -> Opt
     let h_tot = i.building.storey(&i.ret.storey).map_or(h, |x| x.total_height);
     let _ = l;
     given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
-    given!(s, "height to the top of the structure", "job file", h_tot = h_tot);
+    given!(s, "height to the top of the structure", "job file", h_tot);
     let b_L = flange::left(s, Side { to_end: j.left, to_next: j.next_wall_left }, h_tot, h, t_f);
     let b_R = flange::right(s, Side { to_end: j.right, to_next: j.next_wall_right }, h_tot, h, t_f);
     calc!(s, "5.5.3", "width of the flange that counts", b_f = b_L + t + b_R);
@@ -257,7 +258,12 @@ fn lateral(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> L
     let received = received(i, wind);
     let H_k = if received.force > Force::ZERO {
         given!(s, "force at the head of its own", "above", H_o = H_k);
-        given!(s, "reaction of the heads that this wall holds", received.words.as_str(), R_k = received.force);
+        given!(
+            s,
+            "reaction of the heads that this wall holds",
+            received.words.as_str(),
+            R_k = received.force
+        );
         calc!(s, "statics", "force at the head with these reactions", H_k = H_o + R_k);
         H_k
     } else {
@@ -282,10 +288,7 @@ fn lateral(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> L
     };
     let h_nu = i.building.storey(&r.storey).map_or(m.h, |x| x.total_height);
     let (G_nu, Q_nu) = match part {
-        Some((st, p)) => (
-            (st.dead * p + received.dead) * share,
-            (st.imposed * p + received.imposed) * share,
-        ),
+        Some((st, p)) => ((st.dead * p + received.dead) * share, (st.imposed * p + received.imposed) * share),
         None => {
             let foot = m.vertical(super::model::At::Foot);
             (foot.G, foot.Q)
@@ -321,7 +324,11 @@ fn received(i: &Inputs<'_>, wind: f64) -> Received {
             out.force = out.force + r.force * part;
             out.dead = out.dead + r.dead * part;
             out.imposed = out.imposed + r.imposed * part;
-            out.words = if out.words.is_empty() { other.mark.clone() } else { format!("{}, {}", out.words, other.mark) };
+            out.words = if out.words.is_empty() {
+                other.mark.clone()
+            } else {
+                format!("{}, {}", out.words, other.mark)
+            };
         }
     }
     out
@@ -348,7 +355,12 @@ pub fn head_reaction(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let d = super::actions::design(s, m, gamma_W);
     let (H_Ed, w_Ed) = (d.H_Ed, d.w_Ed);
     if w_Ed > LineLoad::ZERO {
-        calc!(s, "statics, head held", "reaction at the head, on the walls that hold it", R_Ed = H_Ed + w_Ed * h / 2.0);
+        calc!(
+            s,
+            "statics, head held",
+            "reaction at the head, on the walls that hold it",
+            R_Ed = H_Ed + w_Ed * h / 2.0
+        );
         R_Ed
     } else {
         calc!(s, "statics, head held", "reaction at the head, on the walls that hold it", R_Ed = H_Ed);

@@ -99,7 +99,10 @@ fn held_by(s: &mut Sheet, i: &Inputs<'_>) {
         walls.iter().partition(|w| i.building.returns.iter().any(|r| r.mark == **w));
     let join = |v: &[&String]| v.iter().map(|w| w.as_str()).collect::<Vec<_>>().join(", ");
     if !here.is_empty() {
-        s.note(format!("The head is held in plane by {}: the reaction is added to their load, in equal parts.", join(&here)));
+        s.note(format!(
+            "The head is held in plane by {}: the reaction is added to their load, in equal parts.",
+            join(&here)
+        ));
     }
     if !elsewhere.is_empty() {
         s.note(format!(
