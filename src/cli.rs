@@ -105,17 +105,32 @@ fn start(file: &Path) -> Result<(), Error> {
         });
     }
     write_whole(file, job::start::TEMPLATE.as_bytes())?;
-    let _ = writeln!(anstream::stdout(), "{} written: a complete invented job. Edit it, then run", file.display());
+    let _ = writeln!(
+        anstream::stdout(),
+        "{} written: a complete invented job. Edit it, then run",
+        file.display()
+    );
     let _ = writeln!(anstream::stdout(), "  perpend check {}", file.display());
     Ok(())
 }
 
 fn read(file: &Path) -> Result<String, Error> {
-    let trouble = |trouble, help: &str| Error::File { path: file.display().to_string(), trouble, help: help.to_owned() };
-    let bytes = std::fs::read(file)
-        .map_err(|e| trouble(Trouble::Read(e), "Check the spelling of the path; 'perpend start' writes a job to begin from."))?;
+    let trouble = |trouble, help: &str| Error::File {
+        path: file.display().to_string(),
+        trouble,
+        help: help.to_owned(),
+    };
+    let bytes = std::fs::read(file).map_err(|e| {
+        trouble(
+            Trouble::Read(e),
+            "Check the spelling of the path; 'perpend start' writes a job to begin from.",
+        )
+    })?;
     String::from_utf8(bytes).map_err(|_| {
-        trouble(Trouble::Content("it is not UTF-8 text".to_owned()), "Save the job file as UTF-8 in a text editor.")
+        trouble(
+            Trouble::Content("it is not UTF-8 text".to_owned()),
+            "Save the job file as UTF-8 in a text editor.",
+        )
     })
 }
 
@@ -165,7 +180,11 @@ fn print_lines(all: &[lines::Line]) {
     let bold = Style::new().effects(Effects::BOLD);
     let mut out = anstream::stdout().lock();
     for line in all {
-        let _ = if line.stress { writeln!(out, "{bold}{}{bold:#}", line.text) } else { writeln!(out, "{}", line.text) };
+        let _ = if line.stress {
+            writeln!(out, "{bold}{}{bold:#}", line.text)
+        } else {
+            writeln!(out, "{}", line.text)
+        };
     }
 }
 
@@ -266,7 +285,11 @@ impl Progress {
     fn new(jobs: usize) -> Self {
         let bar = indicatif::ProgressBar::with_draw_target(
             Some(jobs as u64),
-            if jobs > 1 { indicatif::ProgressDrawTarget::stderr() } else { indicatif::ProgressDrawTarget::hidden() },
+            if jobs > 1 {
+                indicatif::ProgressDrawTarget::stderr()
+            } else {
+                indicatif::ProgressDrawTarget::hidden()
+            },
         );
         bar.set_style(
             indicatif::ProgressStyle::with_template("{pos} of {len} packs  {wide_bar}  {msg}")

@@ -70,7 +70,8 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let digest = digest(text);
     let data = report::pack(&building, &results, text, &digest);
     let files = photographs(&building, folder)?;
-    let typeset = pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+    let typeset =
+        pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
 }
@@ -82,7 +83,8 @@ fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Vec<u8
         let bytes = std::fs::read(&path).map_err(|why| Error::File {
             path: shown.clone(),
             trouble: Trouble::Read(why),
-            help: "Photographs are looked for beside the job file: check the name under [[photographs]].".to_owned(),
+            help: "Photographs are looked for beside the job file: check the name under [[photographs]]."
+                .to_owned(),
         })?;
         let jpeg = photograph::take_in(&bytes).map_err(|why| Error::File {
             path: shown,

@@ -15,8 +15,8 @@ pub mod wind;
 mod panel_sheet;
 mod panel_views;
 mod return_sheet;
-mod shapes;
 mod return_views;
+mod shapes;
 
 use crate::building::Building;
 use crate::sketch::Drawing;

@@ -43,7 +43,13 @@ fn edge(e: &Edge) -> sketch::Edge {
     sketch::Edge { support, why: String::new() }
 }
 
-fn elevation(p: &Panel, span: &Span, state: &str, m: &PanelModel, wall: Option<WallBehind>) -> PanelElevation {
+fn elevation(
+    p: &Panel,
+    span: &Span,
+    state: &str,
+    m: &PanelModel,
+    wall: Option<WallBehind>,
+) -> PanelElevation {
     let inside = wall.filter(|w| w.x > 0.0 && w.x < span.length.base());
     PanelElevation {
         mark: p.mark.clone(),
@@ -85,7 +91,13 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> Panel
         dpc: Some(0.0),
         // Spacing of ties on a square grid, from their number per area.
         ties: build_up.ties.map(|n| (1.0 / n.base()).sqrt()),
-        wind: Some((Wind::Toward, Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""))),
-        precompression: Some((loaded, Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""))),
+        wind: Some((
+            Wind::Toward,
+            Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""),
+        )),
+        precompression: Some((
+            loaded,
+            Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""),
+        )),
     }
 }

@@ -185,12 +185,7 @@ pub fn compressive_strength(s: &mut Sheet, m: &Model, id: &str) -> Result<Stress
 /// First principles, not a formula of the code.
 pub fn toe(s: &mut Sheet, a: &Actions, st: &Stressed, Phi: Num, f_d: Stress, id: &str) {
     let (N_Ed, A_c) = (a.N_Ed, st.A_c);
-    given!(
-        s,
-        "least reduction across the wall: head, middle, foot",
-        "vertical resistance, this sheet",
-        Phi = Phi
-    );
+    given!(s, "least reduction across the wall: head, middle, foot", "vertical resistance, this sheet", Phi);
     calc!(
         s,
         "6.1.2.1(2) with first principles",
