@@ -81,6 +81,8 @@ pub struct Actions {
     pub V_Ed: Force,
     /// Pressed edge.
     pub toe: Toe,
+    /// N acts between mid-length and the junction, or beyond it: M turns towards the junction.
+    pub back: bool,
     /// Flange that acts, with its thickness; foot only.
     pub flange: Option<Flange>,
     /// Factor on dead load in this case.
@@ -135,7 +137,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         calc!(s, "statics", "moment in plane about mid-length", M_Ed = abs(M_N - M_W));
         M_Ed
     };
-    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), flange, gamma_G }
+    let back = signed < Moment::ZERO;
+    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), back, flange, gamma_G }
 }
 
 /// The edge on whose side of the section's centroid the resultant acts.
