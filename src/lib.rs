@@ -8,7 +8,7 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity trace standards solve job building sketch checks pack report cli`.
+//! this order: `error quantity trace standards solve job building sketch checks pack report files many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
@@ -16,7 +16,9 @@ pub mod building;
 pub mod checks;
 pub mod cli;
 pub mod error;
+pub mod files;
 pub mod job;
+pub mod many;
 pub mod pack;
 pub mod quantity;
 pub mod report;
@@ -70,7 +72,8 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let digest = digest(text);
     let data = report::pack(&building, &results, text, &digest);
     let files = photographs(&building, folder)?;
-    let typeset = pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+    let typeset =
+        pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
 }
@@ -82,7 +85,8 @@ fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Vec<u8
         let bytes = std::fs::read(&path).map_err(|why| Error::File {
             path: shown.clone(),
             trouble: Trouble::Read(why),
-            help: "Photographs are looked for beside the job file: check the name under [[photographs]].".to_owned(),
+            help: "Photographs are looked for beside the job file: check the name under [[photographs]]."
+                .to_owned(),
         })?;
         let jpeg = photograph::take_in(&bytes).map_err(|why| Error::File {
             path: shown,

@@ -8,9 +8,11 @@ use crate::trace::{Column, Sheet, Table};
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let mut s = Sheet::recorder();
     let links = outcome::links(job.building);
-    let strong = links.iter().enumerate().filter(|(_, l)| l.proof == Proof::Assumed).map(|(i, _)| i).collect();
+    let strong =
+        links.iter().enumerate().filter(|(_, l)| l.proof == Proof::Assumed).map(|(i, _)| i).collect();
     s.table(|| Table {
-        caption: "Each link of the load path, from the wind face to the ground, and how it is known".to_owned(),
+        caption: "Each link of the load path, from the wind face to the ground, and how it is known"
+            .to_owned(),
         columns: vec![
             Column::words("link"),
             Column::words("for"),

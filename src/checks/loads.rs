@@ -43,6 +43,8 @@ fn rows(r: &Return) -> Vec<Vec<String>> {
     let kn = |f: Force| print::show("G", f.dynamic()).value;
     r.loads
         .iter()
-        .map(|l| vec![r.mark.clone(), l.what.clone(), kn(l.dead), kn(l.imposed), kn(l.uplift), l.source.clone()])
+        .map(|l| {
+            vec![r.mark.clone(), l.what.clone(), kn(l.dead), kn(l.imposed), kn(l.uplift), l.source.clone()]
+        })
         .collect()
 }

@@ -3,6 +3,7 @@
 use crate::building::{BuildUp, Building, Cause, Material, UnitStrength};
 use crate::quantity::functions::{MPA, min, mpa, pow};
 use crate::quantity::{Length, Num, Stress, Weight};
+use crate::standards::annex::Annex;
 use crate::standards::masonry::{Category, ExecutionClass, Group, Mortar, UnitKind};
 use crate::standards::source::OutOfTable;
 use crate::standards::tables::gamma_m::{Action, gamma_m};
@@ -52,12 +53,13 @@ pub struct Masonry {
 pub fn derive(
     s: &mut Sheet,
     b: &Building,
+    annex: &Annex,
     material: &Material,
     build_up: &BuildUp,
     thickness: Length,
 ) -> Result<Masonry, Outside> {
     let f_b = unit_strength(s, material)?;
-    let f_k = compressive_strength(s, material, build_up, f_b)?;
+    let f_k = compressive_strength(s, annex, material, build_up, f_b)?;
     let f_vk0 = match &material.f_vk0 {
         Some(stated) => {
             given!(s, "initial shear strength", &because(stated), f_vk0 = stated.value);
@@ -126,6 +128,7 @@ fn unit_strength(s: &mut Sheet, material: &Material) -> Result<Stress, Outside> 
 
 fn compressive_strength(
     s: &mut Sheet,
+    annex: &Annex,
     material: &Material,
     build_up: &BuildUp,
     f_b: Stress,
@@ -156,9 +159,11 @@ fn compressive_strength(
         _ => "EN 998-2, strength class",
     };
     given!(s, "mortar strength", strength_source, f_mc = material.mortar.f_m() * MPA);
-    let limit = "3.6.1.2(2), UK NA: limits of f_b and f_m";
-    calc!(s, limit, "mortar strength that counts", f_m = min(f_mc, min(12.0 * MPA, 2.0 * f_b)));
-    calc!(s, limit, "unit strength that counts", f_bl = min(f_b, 110.0 * MPA));
+    let limit = "3.6.1.2(2), UK NA";
+    given!(s, "largest mortar strength that counts", limit, f_ml = annex.f_m_limit * MPA);
+    given!(s, "largest unit strength that counts", limit, f_bm = annex.f_b_limit * MPA);
+    calc!(s, limit, "mortar strength that counts", f_m = min(f_mc, min(f_ml, 2.0 * f_b)));
+    calc!(s, limit, "unit strength that counts", f_bl = min(f_b, f_bm));
     calc!(
         s,
         "3.6.1.2(1) eq. 3.1",

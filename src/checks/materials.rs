@@ -21,7 +21,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             if let Some(source) = &material.source {
                 s.note(format!("How it is known: {source}."));
             }
-            if let Err(outside) = masonry::derive(&mut s, b, material, build_up, leaf.thickness) {
+            if let Err(outside) = masonry::derive(&mut s, b, &job.annex, material, build_up, leaf.thickness) {
                 s.leave(outside);
             }
             done.push(key);

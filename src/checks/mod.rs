@@ -14,9 +14,10 @@ pub mod wind;
 
 mod panel_sheet;
 mod panel_views;
+mod place;
 mod return_sheet;
-mod shapes;
 mod return_views;
+mod shapes;
 
 use crate::building::Building;
 use crate::sketch::Drawing;

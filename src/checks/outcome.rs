@@ -1,7 +1,7 @@
 //! Outcomes in the only words there are, and the hold points that make one conditional.
 
 use super::Section;
-use crate::building::{Building, Link, Proof};
+use crate::building::{Building, Head, Link, Proof};
 use crate::trace::Sheet;
 
 /// The outcome of a sheet or of the job.
@@ -57,7 +57,10 @@ pub struct Hold {
 pub const LINKS: [(&str, &str); 8] = [
     ("wind face", "the outer walls be shown to carry the wind between their supports"),
     ("panel", "the outer wall panels be shown to be sound and held as drawn"),
-    ("floor edge", "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included"),
+    (
+        "floor edge",
+        "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included",
+    ),
     ("diaphragm", "the floor or roof be shown to carry the wind in its plane to the bracing walls"),
     ("bracing wall", "the walls that take the wind now be shown to carry it"),
     ("junction", "the junction between return and outer wall be opened up and seen"),
@@ -78,9 +81,35 @@ pub fn links(b: &Building) -> Vec<Link> {
                 of: Vec::new(),
             });
         }
-        out.extend(given.into_iter().cloned());
+        out.extend(given.into_iter().map(|l| proven(b, l)));
     }
     out
+}
+
+/// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
+fn proven(b: &Building, link: &Link) -> Link {
+    let held_elsewhere = b.returns.iter().any(|r| match &r.head {
+        Head::Free => false,
+        Head::Propped(walls) => walls.iter().any(|w| !b.returns.iter().any(|o| o.mark == *w)),
+    });
+    let here = match link.link.as_str() {
+        "wind face" | "panel" => !b.panels.is_empty(),
+        "bracing wall" => !b.returns.is_empty() && !held_elsewhere,
+        "junction" | "dpc" => !b.returns.is_empty(),
+        // Floors and footings are not calculated in this pack.
+        _ => false,
+    };
+    if link.proof != Proof::Calculated || here || !link.words.trim().is_empty() {
+        return link.clone();
+    }
+    Link {
+        proof: Proof::Assumed,
+        words: format!(
+            "show the calculation of the {}: it is said to be calculated, but not in this pack",
+            link.link
+        ),
+        ..link.clone()
+    }
 }
 
 /// Hold points: those given, one for every link that is assumed, one for every junction that is
@@ -90,15 +119,24 @@ pub fn holds(b: &Building) -> Vec<Hold> {
     let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
         let words = l.words.trim_end_matches('.');
         let begins = words.to_lowercase().starts_with("before the wall comes down");
-        let text = if begins { format!("{words}.") } else { format!("Before the wall comes down ({}): {words}.", l.link) };
+        let text = if begins {
+            format!("{words}.")
+        } else {
+            format!("Before the wall comes down ({}): {words}.", l.link)
+        };
         (text, l.of, None)
     });
     let told = |mark: &str| {
         b.links.iter().any(|l| {
-            l.link == "junction" && l.proof == Proof::Assumed && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
+            l.link == "junction"
+                && l.proof == Proof::Assumed
+                && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
         })
     };
-    let unseen = b.returns.iter().filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
+    let unseen = b
+        .returns
+        .iter()
+        .filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
     let junctions = unseen.map(|r| {
         let text = format!(
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",

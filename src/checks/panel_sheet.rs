@@ -44,7 +44,14 @@ fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
     let mut leaves = Vec::new();
     for leaf in &build_up.leaves {
         let material = b.material(&leaf.material).ok_or_else(missing)?;
-        leaves.push(masonry::derive(&mut Sheet::silent(), b, material, build_up, leaf.thickness)?);
+        leaves.push(masonry::derive(
+            &mut Sheet::silent(),
+            b,
+            &job.annex,
+            material,
+            build_up,
+            leaf.thickness,
+        )?);
     }
     panels::model(b, p, &leaves, wind.panel, "wind sheet").ok_or_else(missing)
 }

@@ -20,11 +20,19 @@ const FLOOR_DEPTH: f64 = 220.0;
 pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
     let Some(build_up) = b.build_up(&p.build_up) else { return Vec::new() };
     let thickness = b.build_up(&b.removed.build_up).map_or(100.0, |u| u.loaded().1.thickness.base());
-    let removed = |words: &str, gone: bool| {
-        p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words: words.to_owned(), removed: gone })
+    let wall = |words: String, removed: bool| {
+        p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words, removed })
     };
-    let before = elevation(p, &p.before, "before", m, None);
-    let after = elevation(p, &p.after, "after", m, removed("wall removed", true));
+    let stays: Vec<&str> = b
+        .returns
+        .iter()
+        .filter(|r| p.on.as_deref() == Some(&r.junction.to))
+        .map(|r| r.mark.as_str())
+        .collect();
+    let now =
+        if stays.is_empty() { "wall out".to_owned() } else { format!("wall out, {}", stays.join(", ")) };
+    let before = elevation(p, &p.before, "before", m, wall("wall".to_owned(), false));
+    let after = elevation(p, &p.after, "after", m, wall(now, true));
     let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);
     first.name = format!("{}-before", p.mark);
     second.name = format!("{}-after", p.mark);
@@ -43,8 +51,14 @@ fn edge(e: &Edge) -> sketch::Edge {
     sketch::Edge { support, why: String::new() }
 }
 
-fn elevation(p: &Panel, span: &Span, state: &str, m: &PanelModel, wall: Option<WallBehind>) -> PanelElevation {
-    let inside = wall.filter(|w| w.x > 0.0 && w.x < span.length.base());
+fn elevation(
+    p: &Panel,
+    span: &Span,
+    state: &str,
+    m: &PanelModel,
+    wall: Option<WallBehind>,
+) -> PanelElevation {
+    let inside = wall.filter(|w| w.x >= 0.0 && w.x <= span.length.base());
     PanelElevation {
         mark: p.mark.clone(),
         state: state.to_owned(),
@@ -85,7 +99,13 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> Panel
         dpc: Some(0.0),
         // Spacing of ties on a square grid, from their number per area.
         ties: build_up.ties.map(|n| (1.0 / n.base()).sqrt()),
-        wind: Some((Wind::Toward, Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""))),
-        precompression: Some((loaded, Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""))),
+        wind: Some((
+            Wind::Toward,
+            Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""),
+        )),
+        precompression: Some((
+            loaded,
+            Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""),
+        )),
     }
 }

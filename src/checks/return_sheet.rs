@@ -27,7 +27,13 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                 }
                 Err(outside) => sheet.leave(outside.clone()),
             }
-            Section { id: ret.mark.clone(), mark: ret.mark.clone(), title: ret.title.clone(), sheet, drawings }
+            Section {
+                id: ret.mark.clone(),
+                mark: ret.mark.clone(),
+                title: ret.title.clone(),
+                sheet,
+                drawings,
+            }
         })
         .collect()
 }

@@ -9,8 +9,8 @@ use super::shapes::{layers, leaf_material};
 use crate::building::{BaseJoint, BuildUp, Building, Head, Return};
 use crate::quantity::{Dyn, Force, Length, print};
 use crate::sketch::{
-    Action, Curve, Drawing, Flange, Frame, Layer, PlacedLoad, ReturnActions, ReturnElevation, ReturnSection, Side,
-    Stress, Toe, Wind, return_actions, return_elevation, return_section,
+    Action, Curve, Drawing, Flange, Frame, Layer, PlacedLoad, ReturnActions, ReturnElevation, ReturnSection,
+    Side, Stress, Toe, Wind, return_actions, return_elevation, return_section,
 };
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
@@ -55,7 +55,14 @@ fn wind(case: Case) -> Wind {
     if case.direction == Direction::ToFree { Wind::Toward } else { Wind::Away }
 }
 
-fn elevation(b: &Building, r: &Return, m: &Model, build_up: &BuildUp, case: Case, annex: &Annex) -> ReturnElevation {
+fn elevation(
+    b: &Building,
+    r: &Return,
+    m: &Model,
+    build_up: &BuildUp,
+    case: Case,
+    annex: &Annex,
+) -> ReturnElevation {
     let design = design(m, case, annex);
     let (k, leaf) = build_up.loaded();
     let loads = r.loads.iter().filter(|l| l.leaf == k).enumerate().map(|(n, l)| PlacedLoad {
@@ -82,7 +89,11 @@ fn elevation(b: &Building, r: &Return, m: &Model, build_up: &BuildUp, case: Case
         dpc: r.base == BaseJoint::Dpc,
         removed: (b.removed.storey == r.storey).then_some(b.removed.length.base()),
         loads: loads.collect(),
-        head_forces: if flat(design.H_Ed) { vec![show("H_Ed", design.H_Ed.dynamic(), "")] } else { Vec::new() },
+        head_forces: if flat(design.H_Ed) {
+            vec![show("H_Ed", design.H_Ed.dynamic(), "")]
+        } else {
+            Vec::new()
+        },
         head_moment: (design.M_h.base() > 0.0).then(|| show("M_h", design.M_h.dynamic(), "from above")),
         line_load: (design.w_Ed.base() > 0.0).then(|| show("w_Ed", design.w_Ed.dynamic(), "")),
         tributary: Some(r.tributary_width.base()),
@@ -103,7 +114,10 @@ fn wall_layers(b: &Building, r: &Return) -> Vec<Layer> {
             inside_first.reverse();
             inside_first
         }
-        None => vec![Layer::Leaf { thickness: r.junction.thickness.base(), material: crate::sketch::hatch::Material::Block }],
+        None => vec![Layer::Leaf {
+            thickness: r.junction.thickness.base(),
+            material: crate::sketch::hatch::Material::Block,
+        }],
     }
 }
 
@@ -211,7 +225,10 @@ fn diagram(r: &Return, m: &Model, case: Case, annex: &Annex) -> ReturnActions {
                 symbol: "V_Ed".to_owned(),
                 words: "shear".to_owned(),
                 samples: places.iter().map(|&z| (z.base(), shear(z).base() / 1e3)).collect(),
-                values: [Length::ZERO, h].iter().map(|&z| (z.base(), value("V_Ed", shear(z).dynamic()))).collect(),
+                values: [Length::ZERO, h]
+                    .iter()
+                    .map(|&z| (z.base(), value("V_Ed", shear(z).dynamic())))
+                    .collect(),
             },
         ],
     }

@@ -66,7 +66,7 @@ pub fn share(
     calc!(s, "EN 1990 eq. 6.10", "design wind force of the storey", F_Ed = gamma_Q * F_k);
     given!(s, "dead load of the level, for the tilt", "job file", G_s = st.dead);
     given!(s, "imposed load of the level", "job file", Q_s = st.imposed);
-    given!(s, "height of the structure, in m in the next line", "job file", h_tot = h_tot);
+    given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
     calc!(
         s,

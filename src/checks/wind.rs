@@ -118,7 +118,6 @@ fn walls(s: &mut Sheet, t: &TerrainWind, area: Area, q_p: Stress) -> Result<Pres
     Ok(net(s, q_p, q_net, c_D, c_A, c_B, c_pi, c_si))
 }
 
-#[allow(clippy::too_many_arguments, reason = "coefficients of one table, each named")]
 fn net(
     s: &mut Sheet,
     q_p: Stress,

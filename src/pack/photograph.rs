@@ -48,8 +48,9 @@ impl std::error::Error for Refused {}
 /// [`Refused`] where it is no JPEG or PNG, too large, or broken.
 pub fn take_in(bytes: &[u8]) -> Result<Vec<u8>, Refused> {
     let broken = |e: image::ImageError| Refused::Broken(e.to_string());
-    let mut reader =
-        ImageReader::new(Cursor::new(bytes)).with_guessed_format().map_err(|e| Refused::Broken(e.to_string()))?;
+    let mut reader = ImageReader::new(Cursor::new(bytes))
+        .with_guessed_format()
+        .map_err(|e| Refused::Broken(e.to_string()))?;
     if !matches!(reader.format(), Some(ImageFormat::Jpeg | ImageFormat::Png)) {
         return Err(Refused::Kind);
     }
@@ -90,7 +91,9 @@ mod tests {
 
     /// A picture 3 wide and 2 high, red in its upper left corner.
     fn picture(w: u32, h: u32) -> RgbImage {
-        RgbImage::from_fn(w, h, |x, y| if x < w / 2 && y < h / 2 { image::Rgb([250, 10, 10]) } else { image::Rgb([20, 20, 200]) })
+        RgbImage::from_fn(w, h, |x, y| {
+            if x < w / 2 && y < h / 2 { image::Rgb([250, 10, 10]) } else { image::Rgb([20, 20, 200]) }
+        })
     }
 
     fn jpeg(w: u32, h: u32) -> Vec<u8> {
@@ -101,7 +104,9 @@ mod tests {
 
     /// The same JPEG with an EXIF block that says "turned 90 degrees clockwise" and a place name.
     fn with_exif(plain: &[u8]) -> Vec<u8> {
-        let mut exif = b"Exif\0\0MM\0\x2a\0\0\0\x08\0\x01\x01\x12\0\x03\0\0\0\x01\0\x06\0\0\0\0\0\0SECRET-PLACE".to_vec();
+        let mut exif =
+            b"Exif\0\0MM\0\x2a\0\0\0\x08\0\x01\x01\x12\0\x03\0\0\0\x01\0\x06\0\0\0\0\0\0SECRET-PLACE"
+                .to_vec();
         let length = u16::try_from(exif.len() + 2).expect("short").to_be_bytes();
         let mut out = vec![0xFF, 0xD8, 0xFF, 0xE1];
         out.extend(length);

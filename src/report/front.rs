@@ -31,12 +31,16 @@ pub fn sentence(results: &Results) -> String {
              come out on its strength.",
             list(&outside)
         ),
-        Outcome::Conditional(_) => "Every check passes. The wall may come out only when each open hold point below \
+        Outcome::Conditional(_) => {
+            "Every check passes. The wall may come out only when each open hold point below \
                                     is closed and signed."
-            .to_owned(),
-        Outcome::Adequate => "Every check passes, and every link of the load path is calculated, held by a named rule, \
+                .to_owned()
+        }
+        Outcome::Adequate => {
+            "Every check passes, and every link of the load path is calculated, held by a named rule, \
                               or was seen."
-            .to_owned(),
+                .to_owned()
+        }
     }
 }
 
@@ -103,21 +107,30 @@ fn basis(b: &Building) -> Vec<String> {
         if helping.reason.is_empty() {
             format!("Only dead load helps, and it is taken {} times (EN 1990, set A)", helping.value)
         } else {
-            format!("Only dead load helps, and it is taken {} times: {}", helping.value, lower(&helping.reason))
+            format!(
+                "Only dead load helps, and it is taken {} times: {}",
+                helping.value,
+                lower(&helping.reason)
+            )
         },
-        "Every check runs under four combinations and both directions of the wind; the worst is worked".to_owned(),
+        "Every check runs under four combinations and both directions of the wind; the worst is worked"
+            .to_owned(),
     ]
 }
 
 fn stability(b: &Building) -> Vec<String> {
     let mut out = vec![match b.wind.route {
         WindRoute::Stated => "Wind: net pressure stated with a reason, see the wind sheet".to_owned(),
-        WindRoute::Terrain => "Wind: EN 1991-1-4 clause 4 with a terrain category, see the wind sheet".to_owned(),
+        WindRoute::Terrain => {
+            "Wind: EN 1991-1-4 clause 4 with a terrain category, see the wind sheet".to_owned()
+        }
     }];
     if let Some(st) = &b.stability {
         out.push(match st.share_by {
             ShareBy::Width => "A timber floor shares the storey's wind by tributary width".to_owned(),
-            ShareBy::Stiffness => "A concrete floor shares the storey's wind by stiffness, with torsion".to_owned(),
+            ShareBy::Stiffness => {
+                "A concrete floor shares the storey's wind by stiffness, with torsion".to_owned()
+            }
         });
     }
     for r in &b.returns {
@@ -139,9 +152,13 @@ fn stability(b: &Building) -> Vec<String> {
 }
 
 fn responsible(b: &Building) -> Vec<String> {
-    let mut out: Vec<String> = b.responsible.iter().map(|(task, who)| format!("{}: {who}", capital(task))).collect();
+    let mut out: Vec<String> =
+        b.responsible.iter().map(|(task, who)| format!("{}: {who}", capital(task))).collect();
     if out.is_empty() {
-        out.push("Nobody is named for temporary support and the order of work: name them before work starts".to_owned());
+        out.push(
+            "Nobody is named for temporary support and the order of work: name them before work starts"
+                .to_owned(),
+        );
     }
     out.push(format!("This calculation: {}", b.signatures.made.name));
     out
@@ -149,14 +166,22 @@ fn responsible(b: &Building) -> Vec<String> {
 
 /// The register of assumptions: those of the job, then those that the tool makes.
 pub fn assumptions(b: &Building) -> Vec<Assumption> {
-    let mut all: Vec<(String, String)> = b.assumptions.iter().map(|a| (a.text.clone(), a.source.clone())).collect();
+    let mut all: Vec<(String, String)> =
+        b.assumptions.iter().map(|a| (a.text.clone(), a.source.clone())).collect();
     if let (WindRoute::Stated, Some(st)) = (b.wind.route, &b.wind.stated) {
-        all.push(("The wind is the pressure stated. Confirm it against the site.".to_owned(), st.reason.clone()));
+        all.push((
+            "The wind is the pressure stated. Confirm it against the site.".to_owned(),
+            st.reason.clone(),
+        ));
     }
     let helping = &b.basis.helping_factor;
     all.push((
         format!("Only dead load helps, taken {} times; imposed load never helps.", helping.value),
-        if helping.reason.is_empty() { "EN 1990 Table NA.A1.2(A)".to_owned() } else { helping.reason.clone() },
+        if helping.reason.is_empty() {
+            "EN 1990 Table NA.A1.2(A)".to_owned()
+        } else {
+            helping.reason.clone()
+        },
     ));
     for (name, c) in [
         ("compression", &b.basis.gamma_m_compression),
@@ -179,7 +204,8 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
     }
     for r in &b.returns {
         if r.base == crate::building::BaseJoint::Dpc {
-            let source = if r.mu.reason.is_empty() { "common practice, no published source" } else { &r.mu.reason };
+            let source =
+                if r.mu.reason.is_empty() { "common practice, no published source" } else { &r.mu.reason };
             all.push((
                 format!("Friction at the damp-proof course of {} is {}.", r.mark, r.mu.value.base()),
                 source.to_owned(),

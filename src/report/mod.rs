@@ -15,8 +15,8 @@ use crate::checks::outcome::{self, Outcome};
 use crate::checks::{Results, Section};
 use crate::job::date_in_words;
 use crate::pack::data::{self, OutcomeKind};
-use crate::trace::{Value, Verdict};
 use crate::quantity::print;
+use crate::trace::{Value, Verdict};
 
 /// Name and version, as printed.
 pub const PROGRAM: (&str, &str) = ("Perpend", env!("CARGO_PKG_VERSION"));
@@ -68,7 +68,11 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
         revisions: b
             .revisions
             .iter()
-            .map(|r| data::Revision { letter: r.letter.clone(), date: date_in_words(&r.date), note: r.note.clone() })
+            .map(|r| data::Revision {
+                letter: r.letter.clone(),
+                date: date_in_words(&r.date),
+                note: r.note.clone(),
+            })
             .collect(),
         outcome: data::FrontOutcome {
             kind: kind(results.outcome),

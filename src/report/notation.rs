@@ -12,7 +12,8 @@ pub fn used(sections: &[Section]) -> Vec<Notation> {
     names
         .into_iter()
         .filter_map(|n| {
-            symbol::meaning(&n).map(|words| Notation { symbol: math::symbol(&n).json(), words: words.to_owned() })
+            symbol::meaning(&n)
+                .map(|words| Notation { symbol: math::symbol(&n).json(), words: words.to_owned() })
         })
         .collect()
 }
@@ -20,7 +21,9 @@ pub fn used(sections: &[Section]) -> Vec<Notation> {
 /// Names of all symbols that stand on the sheets.
 pub fn names(sections: &[Section]) -> Vec<String> {
     let of_entry = |e: &Entry| match e {
-        Entry::Given { value, .. } | Entry::Lookup { value, .. } | Entry::Found { value, .. } => Some(value.name.clone()),
+        Entry::Given { value, .. } | Entry::Lookup { value, .. } | Entry::Found { value, .. } => {
+            Some(value.name.clone())
+        }
         Entry::Step(step) => Some(step.result.name.clone()),
         _ => None,
     };

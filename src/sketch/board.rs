@@ -43,10 +43,7 @@ impl Board {
         if pen.keeps_labels_off() {
             self.ground.bar(&path, pen.width() / 2.0);
         }
-        self.items.push(Item::Stroke {
-            pen,
-            path: Path(path),
-        });
+        self.items.push(Item::Stroke { pen, path: Path(path) });
     }
 
     /// Draws a straight line.
@@ -69,10 +66,7 @@ impl Board {
         if ink == Ink::Arrow {
             self.ground.bar(&path, 0.0);
         }
-        self.items.push(Item::Fill {
-            ink,
-            path: Path(path),
-        });
+        self.items.push(Item::Fill { ink, path: Path(path) });
     }
 
     /// Keeps labels off an area without drawing anything.
@@ -95,10 +89,7 @@ impl Board {
         }
         if !path.elements().is_empty() {
             self.ground.soft.push(ring.to_vec());
-            self.items.push(Item::Stroke {
-                pen: Pen::Hatch,
-                path: Path(path),
-            });
+            self.items.push(Item::Stroke { pen: Pen::Hatch, path: Path(path) });
         }
     }
 
@@ -128,17 +119,11 @@ impl Board {
         for (note, block) in self.notes.iter().zip(&blocks) {
             if let Some(leader) = block.leader {
                 let path = Path(leader.to_path(0.1));
-                self.items.push(Item::Stroke {
-                    pen: Pen::Leader,
-                    path,
-                });
+                self.items.push(Item::Stroke { pen: Pen::Leader, path });
             }
             if self.ground.hatched(block.area) {
                 let area = block.area.inflate(MASK_MARGIN, MASK_MARGIN);
-                masks.push(Item::Fill {
-                    ink: Ink::Mask,
-                    path: Path(area.to_path(0.1)),
-                });
+                masks.push(Item::Fill { ink: Ink::Mask, path: Path(area.to_path(0.1)) });
             }
             labels.extend(lines(note, block).map(Item::Label));
         }
@@ -172,9 +157,7 @@ impl Board {
 
 /// A name of letters, digits and `-`.
 fn identifier(name: &str) -> String {
-    name.chars()
-        .map(|c| if c.is_ascii_alphanumeric() { c } else { '-' })
-        .collect()
+    name.chars().map(|c| if c.is_ascii_alphanumeric() { c } else { '-' }).collect()
 }
 
 /// The lines of a placed note.
@@ -211,11 +194,7 @@ fn lines<'a>(note: &'a Note, block: &'a Block) -> impl Iterator<Item = Label> + 
 pub fn polyline(points: &[Point]) -> BezPath {
     let mut elements = Vec::with_capacity(points.len());
     for (index, point) in points.iter().enumerate() {
-        elements.push(if index == 0 {
-            PathEl::MoveTo(*point)
-        } else {
-            PathEl::LineTo(*point)
-        });
+        elements.push(if index == 0 { PathEl::MoveTo(*point) } else { PathEl::LineTo(*point) });
     }
     BezPath::from_vec(elements)
 }

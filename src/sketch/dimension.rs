@@ -75,26 +75,14 @@ fn chain(board: &mut Board, way: Way, places: &[f64], level: f64, from: f64, tex
     board.line(Pen::Dimension, at(first, level), at(last, level));
     for place in places {
         if (level - from).abs() > GAP {
-            board.line(
-                Pen::Dimension,
-                at(*place, from + side * GAP),
-                at(*place, level + side * PAST),
-            );
+            board.line(Pen::Dimension, at(*place, from + side * GAP), at(*place, level + side * PAST));
         }
         let tick = Vec2::new(TICK, -TICK);
-        board.line(
-            Pen::Outline,
-            at(*place, level) - tick,
-            at(*place, level) + tick,
-        );
+        board.line(Pen::Outline, at(*place, level) - tick, at(*place, level) + tick);
     }
     for (index, (pair, text)) in places.windows(2).zip(texts).enumerate() {
         let middle = at((pair[0] + pair[1]) / 2.0, level);
-        let note = Note {
-            size: SIZE,
-            rank: 0,
-            ..Note::new(Role::Dimension, middle, text.clone())
-        };
+        let note = Note { size: SIZE, rank: 0, ..Note::new(Role::Dimension, middle, text.clone()) };
         // Text stands on its own piece of the line. Only past the ends of the whole chain may it
         // stand beside it: over a neighbour's piece it would give the neighbour a wrong length.
         let mut note = match way {
@@ -133,18 +121,10 @@ mod tests {
 
     fn drawn(places: &[f64]) -> Drawing {
         let mut board = Board::default();
-        let texts: Vec<Text> = places
-            .windows(2)
-            .map(|p| mm(100.0 * (p[1] - p[0])).into())
-            .collect();
+        let texts: Vec<Text> = places.windows(2).map(|p| mm(100.0 * (p[1] - p[0])).into()).collect();
         chain_across(&mut board, places, 10.0, 0.0, &texts);
         let empty = String::new;
-        board.finish(Words {
-            name: empty(),
-            caption: empty(),
-            scale: empty(),
-            alt: empty(),
-        })
+        board.finish(Words { name: empty(), caption: empty(), scale: empty(), alt: empty() })
     }
 
     #[test]
@@ -158,19 +138,13 @@ mod tests {
     fn a_number_never_stands_over_the_neighbouring_piece() {
         // Pieces of 4.1, 3 and 4 mm are narrower than their numbers.
         let drawing = drawn(&[0.0, 4.1, 7.1, 11.1]);
-        let line = drawing
-            .strokes(Pen::Dimension)
-            .next()
-            .and_then(|p| kurbo::Shape::as_line(&p.segments().next()?));
+        let line =
+            drawing.strokes(Pen::Dimension).next().and_then(|p| kurbo::Shape::as_line(&p.segments().next()?));
         let line = line.expect("the dimension line comes first");
         for (label, (low, high)) in drawing.labels().zip([(0.0, 4.1), (4.1, 7.1), (7.1, 11.1)]) {
             let centre = label.area().center().x - line.p0.x;
             let own = (low..=high).contains(&centre);
-            assert!(
-                own || !(0.0..=11.1).contains(&centre),
-                "{} at {centre}",
-                label.plain()
-            );
+            assert!(own || !(0.0..=11.1).contains(&centre), "{} at {centre}", label.plain());
         }
     }
 
@@ -179,12 +153,7 @@ mod tests {
         let mut board = Board::default();
         up(&mut board, (0.0, -40.0), -10.0, 0.0, mm(800.0));
         let empty = String::new;
-        let drawing = board.finish(Words {
-            name: empty(),
-            caption: empty(),
-            scale: empty(),
-            alt: empty(),
-        });
+        let drawing = board.finish(Words { name: empty(), caption: empty(), scale: empty(), alt: empty() });
         let label = drawing.labels().next().expect("one label");
         assert_eq!((label.plain().as_str(), label.rotate), ("800", -90.0));
     }

@@ -195,9 +195,7 @@ impl Serialize for Path {
                 PathEl::MoveTo(p) => segments.serialize_element(&("M", round(p.x), round(p.y)))?,
                 PathEl::LineTo(p) => segments.serialize_element(&("L", round(p.x), round(p.y)))?,
                 PathEl::QuadTo(..) => {
-                    return Err(serde::ser::Error::custom(
-                        "a sketch has no quadratic curves",
-                    ));
+                    return Err(serde::ser::Error::custom("a sketch has no quadratic curves"));
                 }
                 PathEl::CurveTo(a, b, p) => segments.serialize_element(&(
                     "C",
@@ -222,10 +220,7 @@ mod tests {
     #[test]
     fn items_serialise_in_the_form_the_page_reads() {
         let path = BezPath::from_svg("M0 0 L10.00049 0 C1 2 3 4 5 6 Z").expect("valid path");
-        let stroke = Item::Stroke {
-            pen: Pen::Cut,
-            path: Path(path),
-        };
+        let stroke = Item::Stroke { pen: Pen::Cut, path: Path(path) };
         assert_eq!(
             serde_json::to_string(&stroke).expect("serialises"),
             r#"{"kind":"stroke","pen":"cut","path":[["M",0.0,0.0],["L",10.0,0.0],["C",1.0,2.0,3.0,4.0,5.0,6.0],["Z"]]}"#
@@ -237,14 +232,8 @@ mod tests {
             size: 8.0,
             rotate: -90.0,
             runs: vec![
-                Run {
-                    text: "N".into(),
-                    style: Style::Italic,
-                },
-                Run {
-                    text: "Ed".into(),
-                    style: Style::Sub,
-                },
+                Run { text: "N".into(), style: Style::Italic },
+                Run { text: "Ed".into(), style: Style::Sub },
             ],
             width: 5.0,
             height: 2.0,
@@ -271,17 +260,8 @@ mod tests {
             ascent: 2.0,
             role: Role::Note,
         };
-        assert_eq!(
-            label(0.0, Anchor::End).area(),
-            Rect::new(4.0, 18.0, 10.0, 21.0)
-        );
-        assert_eq!(
-            label(-90.0, Anchor::Start).area(),
-            Rect::new(8.0, 14.0, 11.0, 20.0)
-        );
-        assert_eq!(
-            label(-90.0, Anchor::Middle).area(),
-            Rect::new(8.0, 17.0, 11.0, 23.0)
-        );
+        assert_eq!(label(0.0, Anchor::End).area(), Rect::new(4.0, 18.0, 10.0, 21.0));
+        assert_eq!(label(-90.0, Anchor::Start).area(), Rect::new(8.0, 14.0, 11.0, 20.0));
+        assert_eq!(label(-90.0, Anchor::Middle).area(), Rect::new(8.0, 17.0, 11.0, 23.0));
     }
 }

@@ -53,10 +53,7 @@ impl Ground {
 
     /// How many pieces of line a leader runs across.
     pub fn crossed_by(&self, leader: Line) -> usize {
-        self.bars
-            .iter()
-            .filter(|(line, _)| meet(leader, *line))
-            .count()
+        self.bars.iter().filter(|(line, _)| meet(leader, *line)).count()
     }
 }
 
@@ -97,11 +94,7 @@ pub fn meet(a: Line, b: Line) -> bool {
 pub fn shortened(line: Line, gap: f64) -> Line {
     let run = line.p1 - line.p0;
     let length = run.hypot();
-    if length <= gap {
-        line
-    } else {
-        Line::new(line.p0, line.p1 - run * (gap / length))
-    }
+    if length <= gap { line } else { Line::new(line.p0, line.p1 - run * (gap / length)) }
 }
 
 #[cfg(test)]
@@ -121,10 +114,7 @@ mod tests {
     fn a_label_keeps_off_a_stroke_and_its_width() {
         let mut ground = Ground::default();
         ground.bar(
-            &BezPath::from_vec(vec![
-                PathEl::MoveTo((0.0, 0.0).into()),
-                PathEl::LineTo((10.0, 0.0).into()),
-            ]),
+            &BezPath::from_vec(vec![PathEl::MoveTo((0.0, 0.0).into()), PathEl::LineTo((10.0, 0.0).into())]),
             0.25,
         );
         assert!(ground.blocks(Rect::new(2.0, 0.5, 4.0, 2.0)));

@@ -63,10 +63,7 @@ pub fn diagonals(ring: &[Point], spacing: f64, offset: f64, rising: bool) -> Vec
     (-count..=count)
         .flat_map(|step| {
             let through = bounds.center() + normal * (spacing * f64::from(step) + offset);
-            clip(
-                Line::new(through - along * 2.0 * reach, through + along * 2.0 * reach),
-                ring,
-            )
+            clip(Line::new(through - along * 2.0 * reach, through + along * 2.0 * reach), ring)
         })
         .collect()
 }
@@ -109,8 +106,7 @@ fn strewn(ring: &[Point]) -> Vec<Line> {
     let mut strokes = Vec::new();
     for row in 0..rows {
         for column in 0..columns {
-            let centre =
-                bounds.origin() + Vec2::new(column as f64 + next(), row as f64 + next()) * cell;
+            let centre = bounds.origin() + Vec2::new(column as f64 + next(), row as f64 + next()) * cell;
             let half = Vec2::from_angle(next() * std::f64::consts::PI) * (length / 2.0);
             let stroke = Line::new(centre - half, centre + half);
             strokes.push(stroke);
@@ -133,9 +129,7 @@ fn dots(bounds: Rect, cell: f64, next: &mut impl FnMut() -> f64) -> Vec<Line> {
 }
 
 fn sides(ring: &[Point]) -> impl Iterator<Item = (Point, Point)> + '_ {
-    ring.iter()
-        .zip(ring.iter().cycle().skip(1))
-        .map(|(a, b)| (*a, *b))
+    ring.iter().zip(ring.iter().cycle().skip(1)).map(|(a, b)| (*a, *b))
 }
 
 #[cfg(test)]
@@ -144,16 +138,7 @@ mod tests {
 
     fn shape() -> Vec<Point> {
         // An L, so that lines are cut in two.
-        [
-            (0.0, 0.0),
-            (30.0, 0.0),
-            (30.0, 8.0),
-            (8.0, 8.0),
-            (8.0, 25.0),
-            (0.0, 25.0),
-        ]
-        .map(Point::from)
-        .to_vec()
+        [(0.0, 0.0), (30.0, 0.0), (30.0, 8.0), (8.0, 8.0), (8.0, 25.0), (0.0, 25.0)].map(Point::from).to_vec()
     }
 
     #[test]
@@ -164,10 +149,7 @@ mod tests {
             assert!(lines.len() > 15, "{material:?} has {} strokes", lines.len());
             for line in &lines {
                 for share in [0.02, 0.5, 0.98] {
-                    assert!(
-                        outline.contains(line.p0.lerp(line.p1, share)),
-                        "{material:?} {line:?}"
-                    );
+                    assert!(outline.contains(line.p0.lerp(line.p1, share)), "{material:?} {line:?}");
                 }
             }
         }
@@ -179,11 +161,7 @@ mod tests {
             [Material::Brick, Material::Block, Material::Concrete].map(|m| masonry(m, &shape()));
         assert_ne!(brick.len(), block.len());
         assert_eq!(concrete, masonry(Material::Concrete, &shape()));
-        assert!(
-            brick
-                .iter()
-                .all(|l| ((l.p1 - l.p0).x + (l.p1 - l.p0).y).abs() < 1e-9)
-        );
+        assert!(brick.iter().all(|l| ((l.p1 - l.p0).x + (l.p1 - l.p0).y).abs() < 1e-9));
     }
 
     #[test]

@@ -92,42 +92,23 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
     }
     for mark in &view.marks {
         let (from, to) = (paper(scale, mark.from), paper(scale, mark.to));
-        let half = view
-            .walls
-            .iter()
-            .map(|wall| wall.thickness / 2.0)
-            .fold(0.0, f64::max);
+        let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
         board.note(stretch_note(from, to, scale.paper(half) + 1.2, Text::mark(&mark.mark)).rank(1));
     }
     for panel in &view.panels {
         stretch(&mut board, view, panel, scale);
     }
     let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
-    for wall in view
-        .walls
-        .iter()
-        .filter(|w| !w.name.is_empty() && !marked(&w.name))
-    {
+    for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name)) {
         let word = match wall.fate {
             Fate::Stays => "",
             Fate::Removed => " removed",
             Fate::Added => " new",
         };
         let text = Text::plain(&format!("{}{word}", wall.name));
-        board.note(wall_note(
-            wall,
-            scale,
-            Note::new(Role::Note, Point::ZERO, text),
-        ));
+        board.note(wall_note(wall, scale, Note::new(Role::Note, Point::ZERO, text)));
     }
-    surroundings(
-        &mut board,
-        &view.walls,
-        &view.winds,
-        Some(view.north),
-        scale,
-        true,
-    );
+    surroundings(&mut board, &view.walls, &view.winds, Some(view.north), scale, true);
     board.finish(Words {
         name: view.name.clone(),
         caption: format!("Key plan, {}{}", view.title, key(view)),
@@ -145,34 +126,18 @@ fn stretch(board: &mut Board, view: &KeyPlan, panel: &PlanMark, scale: Scale) {
     let along = (to - from).normalize();
     let side = along.turn_90();
     let centre = plan::extent(&view.walls, scale).center();
-    let out = if (from.midpoint(to) - centre).dot(side) < 0.0 {
-        -side
-    } else {
-        side
-    };
-    let half = view
-        .walls
-        .iter()
-        .map(|wall| wall.thickness / 2.0)
-        .fold(0.0, f64::max);
+    let out = if (from.midpoint(to) - centre).dot(side) < 0.0 { -side } else { side };
+    let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
     let shift = out * (scale.paper(half) + STRETCH);
     board.line(Pen::Leader, from + shift, to + shift);
     for end in [from, to] {
         board.line(Pen::Leader, end + shift - out, end + shift + out);
     }
-    let mut note = Note::new(
-        Role::Mark,
-        from.midpoint(to) + shift,
-        Text::mark(&panel.mark),
-    );
+    let mut note = Note::new(Role::Mark, from.midpoint(to) + shift, Text::mark(&panel.mark));
     for share in [0.5, 0.4, 0.6, 0.3, 0.7] {
         for sign in [1.0, -1.0] {
             let at = from.lerp(to, share) + shift + out * sign;
-            note = note.spot(Spot::new(
-                at,
-                (out.x * sign).round(),
-                (out.y * sign).round(),
-            ));
+            note = note.spot(Spot::new(at, (out.x * sign).round(), (out.y * sign).round()));
         }
     }
     board.note(note.rank(1));
@@ -207,20 +172,8 @@ pub(super) fn surroundings(
     let extent = plan::extent(walls, scale);
     if dimensions {
         let (w, h) = (extent.width() * scale.0, extent.height() * scale.0);
-        dimension::across(
-            board,
-            (extent.x0, extent.x1),
-            extent.y1 + 11.0,
-            extent.y1,
-            mm(w),
-        );
-        dimension::up(
-            board,
-            (extent.y1, extent.y0),
-            extent.x0 - 11.0,
-            extent.x0,
-            mm(h),
-        );
+        dimension::across(board, (extent.x0, extent.x1), extent.y1 + 11.0, extent.y1, mm(w));
+        dimension::up(board, (extent.y1, extent.y0), extent.x0 - 11.0, extent.x0, mm(h));
     }
     let (left, below) = if dimensions { (19.0, 18.0) } else { (5.0, 5.0) };
     let c = extent.center();
@@ -261,49 +214,28 @@ fn alt(view: &KeyPlan) -> String {
         mm(extent.width()),
         mm(extent.height())
     );
-    for (fate, word) in [
-        (Fate::Stays, "stay"),
-        (Fate::Removed, "removed"),
-        (Fate::Added, "new"),
-    ] {
+    for (fate, word) in [(Fate::Stays, "stay"), (Fate::Removed, "removed"), (Fate::Added, "new")] {
         let walls: Vec<String> = view
             .walls
             .iter()
             .filter(|wall| wall.fate == fate && !wall.name.is_empty())
             .map(|wall| {
-                format!(
-                    "{} ({} mm thick, {} mm long)",
-                    wall.name,
-                    mm(wall.thickness),
-                    mm(wall.length())
-                )
+                format!("{} ({} mm thick, {} mm long)", wall.name, mm(wall.thickness), mm(wall.length()))
             })
             .collect();
         if !walls.is_empty() {
             alt += &format!("Walls, {word}: {}. ", list(&walls));
         }
     }
-    let marks: Vec<String> = view
-        .marks
-        .iter()
-        .chain(&view.panels)
-        .chain(&view.beams)
-        .map(|mark| mark.mark.clone())
-        .collect();
+    let marks: Vec<String> =
+        view.marks.iter().chain(&view.panels).chain(&view.beams).map(|mark| mark.mark.clone()).collect();
     if !marks.is_empty() {
         alt += &format!("Marked: {}. ", list(&marks));
     }
-    let winds: Vec<String> = view
-        .winds
-        .iter()
-        .map(|wind| wind.words().to_owned())
-        .collect();
+    let winds: Vec<String> = view.winds.iter().map(|wind| wind.words().to_owned()).collect();
     if !winds.is_empty() {
         alt += &format!("Wind arrows {}. ", list(&winds));
     }
-    alt += &format!(
-        "North is {} degrees clockwise from the top of the sheet.",
-        mm(view.north)
-    );
+    alt += &format!("North is {} degrees clockwise from the top of the sheet.", mm(view.north));
     alt
 }

@@ -49,11 +49,7 @@ pub fn moment(board: &mut Board, centre: Point, radius: f64, clockwise: bool) {
     // Nothing is written inside the arc.
     board.reserve(Rect::from_center_size(centre, (2.0 * radius, 2.0 * radius)));
     let end = Vec2::from_angle(start + sweep);
-    head(
-        board,
-        centre + end * radius + end.turn_90() * turn * HEAD.0,
-        end.turn_90() * turn,
-    );
+    head(board, centre + end * radius + end.turn_90() * turn * HEAD.0, end.turn_90() * turn);
 }
 
 /// A direction shown by an open arrow, such as the wind's: it carries no value.

@@ -45,9 +45,7 @@ pub mod view;
 
 pub use drawing::{Drawing, Item};
 pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
-pub use panel_elevation::{
-    Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair,
-};
+pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
 pub use panel_section::{Floor, PanelSection, panel_section};
 pub use plan::{Fate, PlanWall};
 pub use return_actions::{Curve, ReturnActions, return_actions};

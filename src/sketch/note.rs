@@ -57,22 +57,12 @@ pub struct Block {
 impl Spot {
     /// A spot beside, above or below a point, in the direction given by signs.
     pub fn new(at: impl Into<Point>, across: f64, down: f64) -> Self {
-        Self {
-            at: at.into(),
-            across,
-            down,
-            rotate: false,
-            leader: false,
-            cost: 0.0,
-        }
+        Self { at: at.into(), across, down, rotate: false, leader: false, cost: 0.0 }
     }
 
     /// Text that reads upwards.
     pub fn upwards(at: impl Into<Point>, across: f64, down: f64) -> Self {
-        Self {
-            rotate: true,
-            ..Self::new(at, across, down)
-        }
+        Self { rotate: true, ..Self::new(at, across, down) }
     }
 
     /// The same spot, liked less.
@@ -82,10 +72,7 @@ impl Spot {
 
     /// The same spot with a leader to the target.
     pub fn led(self) -> Self {
-        Self {
-            leader: true,
-            ..self
-        }
+        Self { leader: true, ..self }
     }
 }
 
@@ -93,14 +80,7 @@ impl Note {
     /// Words at 8 pt that name `target`.
     pub fn new(role: Role, target: impl Into<Point>, text: Text) -> Self {
         let target = target.into();
-        Self {
-            lines: vec![text],
-            size: 8.0,
-            role,
-            target,
-            spots: Vec::new(),
-            rank: 2,
-        }
+        Self { lines: vec![text], size: 8.0, role, target, spots: Vec::new(), rank: 2 }
     }
 
     /// A further line below.
@@ -111,11 +91,7 @@ impl Note {
 
     /// A further line of words below, unless they are empty.
     pub fn words(self, text: &str) -> Self {
-        if text.is_empty() {
-            self
-        } else {
-            self.line(Text::plain(text))
-        }
+        if text.is_empty() { self } else { self.line(Text::plain(text)) }
     }
 
     /// A spot, each further one liked a little less.
@@ -147,10 +123,7 @@ impl Note {
 
     /// Width of the longest line, mm.
     pub(super) fn width(&self) -> f64 {
-        self.lines
-            .iter()
-            .map(|line| line.extent(self.size).width)
-            .fold(0.0, f64::max)
+        self.lines.iter().map(|line| line.extent(self.size).width).fold(0.0, f64::max)
     }
 
     /// Ink of the first line above its baseline, mm.
@@ -160,10 +133,7 @@ impl Note {
 
     /// Height of the block of lines, mm.
     pub(super) fn height(&self) -> f64 {
-        let last = self
-            .lines
-            .last()
-            .map_or(0.0, |line| line.extent(self.size).descent);
+        let last = self.lines.last().map_or(0.0, |line| line.extent(self.size).descent);
         self.first_ascent() + self.pitch() * (self.lines.len() - 1) as f64 + last
     }
 
@@ -173,17 +143,9 @@ impl Note {
         let x0 = spot.at.x + (spot.across - 1.0) / 2.0 * w;
         let y0 = spot.at.y + (spot.down - 1.0) / 2.0 * h;
         let area = Rect::new(x0, y0, x0 + w, y0 + h);
-        let leader = spot
-            .leader
-            .then(|| Line::new(nearest_handle(area, self.target), self.target));
+        let leader = spot.leader.then(|| Line::new(nearest_handle(area, self.target), self.target));
         let align = if spot.rotate { 0.0 } else { spot.across };
-        Block {
-            area,
-            align,
-            rotate: spot.rotate,
-            leader,
-            cost: spot.cost,
-        }
+        Block { area, align, rotate: spot.rotate, leader, cost: spot.cost }
     }
 }
 

@@ -114,9 +114,7 @@ pub fn panel_elevation(view: &PanelElevation, frame: Frame) -> Drawing {
 
 /// Draws the panel before and after, at one scale, each within the frame.
 pub fn panel_pair(before: &PanelElevation, after: &PanelElevation, frame: Frame) -> [Drawing; 2] {
-    fit_all(frame, 20.0, |scale| {
-        [draw(before, scale), draw(after, scale)]
-    })
+    fit_all(frame, 20.0, |scale| [draw(before, scale), draw(after, scale)])
 }
 
 fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
@@ -150,11 +148,7 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
         mm(view.height),
     );
     let (state, dash) = (&view.state, if view.state.is_empty() { "" } else { "-" });
-    let title = if state.is_empty() {
-        String::new()
-    } else {
-        format!(", {state}")
-    };
+    let title = if state.is_empty() { String::new() } else { format!(", {state}") };
     board.finish(Words {
         name: format!("{}-panel{dash}{state}", view.mark),
         caption: format!("{} elevation{title}. {}", view.mark, key(view)),
@@ -167,11 +161,7 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
 fn stations(view: &PanelElevation) -> Vec<f64> {
     let openings = view.openings.iter().flat_map(|o| [o.x, o.x + o.width]);
     let walls = view.walls.iter().map(|wall| wall.x);
-    let mut places: Vec<f64> = [0.0, view.length]
-        .into_iter()
-        .chain(openings)
-        .chain(walls)
-        .collect();
+    let mut places: Vec<f64> = [0.0, view.length].into_iter().chain(openings).chain(walls).collect();
     places.sort_by(f64::total_cmp);
     places.dedup_by(|a, b| (*a - *b).abs() < 0.5);
     places
@@ -179,10 +169,7 @@ fn stations(view: &PanelElevation) -> Vec<f64> {
 
 /// Distances between neighbours.
 fn steps(places: &[f64]) -> Vec<String> {
-    places
-        .windows(2)
-        .map(|pair| mm(pair[1] - pair[0]))
-        .collect()
+    places.windows(2).map(|pair| mm(pair[1] - pair[0])).collect()
 }
 
 /// Bands and outlines of the edges, and their reasons.
@@ -198,11 +185,7 @@ fn edges(board: &mut Board, view: &PanelElevation, panel: Rect) {
         let (from, to) = (Point::from(from), Point::from(to));
         let band = Rect::from_points(from, to + out * BAND);
         let ring = corners(band);
-        let pen = if edge.support == Support::Free {
-            Pen::Beyond
-        } else {
-            Pen::Outline
-        };
+        let pen = if edge.support == Support::Free { Pen::Beyond } else { Pen::Outline };
         board.line(pen, from, to);
         if edge.support != Support::Free {
             board.hatching(diagonals(&ring, BAND_HATCH, 0.0, true), &ring);
@@ -215,10 +198,7 @@ fn edges(board: &mut Board, view: &PanelElevation, panel: Rect) {
         let target = middle + out * (BAND / 2.0);
         let mut note = Note::new(Role::Note, target, Text::plain(&edge_words(edge)));
         if out.y == 0.0 && in_two_lines(edge, (to - from).hypot()) {
-            note.lines = vec![
-                Text::plain(&format!("{}:", edge.support.word())),
-                Text::plain(&edge.why),
-            ];
+            note.lines = vec![Text::plain(&format!("{}:", edge.support.word())), Text::plain(&edge.why)];
         }
         for share in [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8, 0.1, 0.9] {
             let beside = from.lerp(to, share) + out * (BAND + 1.2);
@@ -233,11 +213,7 @@ fn edges(board: &mut Board, view: &PanelElevation, panel: Rect) {
 
 fn edge_words(edge: &Edge) -> String {
     let support = edge.support.word();
-    if edge.why.is_empty() {
-        support.to_owned()
-    } else {
-        format!("{support}: {}", edge.why)
-    }
+    if edge.why.is_empty() { support.to_owned() } else { format!("{support}: {}", edge.why) }
 }
 
 /// Whether the words on an edge are longer than the edge, mm on paper.
@@ -247,11 +223,7 @@ fn in_two_lines(edge: &Edge, length: f64) -> bool {
 
 fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
     for wall in &view.walls {
-        let (pen, word) = if wall.removed {
-            (Pen::Removed, " removed")
-        } else {
-            (Pen::Beyond, "")
-        };
+        let (pen, word) = if wall.removed { (Pen::Removed, " removed") } else { (Pen::Beyond, "") };
         let half = wall.thickness / 2.0;
         for x in [wall.x - half, wall.x + half] {
             board.line(pen, ruler.at(x, 0.0), ruler.at(x, view.height));
@@ -262,9 +234,11 @@ fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
         let left = ruler.at(wall.x - half, 0.5 * view.height).x - 1.2;
         let mut note = Note::new(Role::Mark, at(0.7), Text::mark(&text));
         for share in [0.75, 0.25, 0.9, 0.12] {
-            note = note
-                .spot(Spot::upwards((right, at(share).y), 1.0, 0.0))
-                .spot(Spot::upwards((left, at(share).y), -1.0, 0.0));
+            note = note.spot(Spot::upwards((right, at(share).y), 1.0, 0.0)).spot(Spot::upwards(
+                (left, at(share).y),
+                -1.0,
+                0.0,
+            ));
         }
         board.note(note);
     }
@@ -330,11 +304,7 @@ fn key(view: &PanelElevation) -> String {
 }
 
 fn alt(view: &PanelElevation) -> String {
-    let state = if view.state.is_empty() {
-        String::new()
-    } else {
-        format!(" {} the removal", view.state)
-    };
+    let state = if view.state.is_empty() { String::new() } else { format!(" {} the removal", view.state) };
     let mut alt = format!(
         "Elevation of panel {}{state}, {} mm long and {} mm high. Left edge {}; right edge {}; top {}; base {}. ",
         view.mark,
@@ -356,16 +326,8 @@ fn alt(view: &PanelElevation) -> String {
         );
     }
     for wall in &view.walls {
-        let word = if wall.removed {
-            "removed, met"
-        } else {
-            "meets"
-        };
-        alt += &format!(
-            "{} {word} the panel {} mm from its left edge. ",
-            wall.words,
-            mm(wall.x)
-        );
+        let word = if wall.removed { "removed, met" } else { "meets" };
+        alt += &format!("{} {word} the panel {} mm from its left edge. ", wall.words, mm(wall.x));
     }
     let steps = steps(&stations(view));
     if steps.len() > 1 {

@@ -77,28 +77,14 @@ fn draw(view: &PanelSection, scale: Scale) -> Drawing {
         x += layer.thickness();
         xs.push(ruler.at(x, 0.0).x);
     }
-    let texts: Vec<Text> = view
-        .layers
-        .iter()
-        .map(|layer| mm(layer.thickness()).into())
-        .collect();
+    let texts: Vec<Text> = view.layers.iter().map(|layer| mm(layer.thickness()).into()).collect();
     dimension::chain_across(&mut board, &xs, foot + 8.0, foot + 1.5, &texts);
     let inside = ruler.at(thickness(&view.layers), 0.0).x;
     let ys = (ruler.at(0.0, 0.0).y, ruler.at(0.0, view.height).y);
-    dimension::up(
-        &mut board,
-        ys,
-        inside + reach + 8.0,
-        inside + reach,
-        mm(view.height),
-    );
+    dimension::up(&mut board, ys, inside + reach + 8.0, inside + reach, mm(view.height));
     board.finish(Words {
         name: format!("{}-wall-section", view.mark),
-        caption: format!(
-            "{} vertical section, outside on the left{}",
-            view.mark,
-            hatch_key(&view.layers)
-        ),
+        caption: format!("{} vertical section, outside on the left{}", view.mark, hatch_key(&view.layers)),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -122,12 +108,7 @@ fn leaves(board: &mut Board, view: &PanelSection, ruler: Ruler, (low, high): (f6
     }
     let over = Vec2::new(1.5, 0.0);
     for top in [true, false] {
-        load::break_line(
-            board,
-            Pen::Beyond,
-            corner(0.0, top) - over,
-            corner(x, top) + over,
-        );
+        load::break_line(board, Pen::Beyond, corner(0.0, top) - over, corner(x, top) + over);
     }
 }
 
@@ -138,11 +119,7 @@ fn floors(board: &mut Board, view: &PanelSection, ruler: Ruler) {
         let to = ruler.by(face, floor.level - floor.depth, floor_reach(view), 0.0);
         let area = Rect::from_points(from, to);
         let ring = corners(area);
-        let pen = if floor.concrete {
-            Pen::Cut
-        } else {
-            Pen::Outline
-        };
+        let pen = if floor.concrete { Pen::Cut } else { Pen::Outline };
         if floor.concrete {
             board.hatch(Material::Concrete, &ring);
         }
@@ -151,38 +128,23 @@ fn floors(board: &mut Board, view: &PanelSection, ruler: Ruler) {
         let over = Vec2::new(0.0, 1.2);
         load::break_line(board, Pen::Beyond, ring[1] - over, ring[2] + over);
         let below = floor.level <= 0.5 * view.height;
-        let (y, down) = if below {
-            (area.y0 - 1.0, -1.0)
-        } else {
-            (area.y1 + 1.0, 1.0)
-        };
+        let (y, down) = if below { (area.y0 - 1.0, -1.0) } else { (area.y1 + 1.0, 1.0) };
         let words = Text::plain(&floor.words);
         board.note(
-            Note::new(
-                Role::Note,
-                Point::new(area.x1 - 6.0, area.center().y),
-                words,
-            )
-            .spot(match floor.concrete {
-                true => Spot::new((area.x0 + 2.0, y), 1.0, down),
-                false => Spot::new((area.x0 + 2.0, area.center().y), 1.0, 0.0),
-            })
-            .spot(Spot::new((area.x0 + 2.0, y), 1.0, down))
-            .spot(Spot::new(
-                (area.x0 + 2.0, 2.0 * area.center().y - y),
-                1.0,
-                -down,
-            )),
+            Note::new(Role::Note, Point::new(area.x1 - 6.0, area.center().y), words)
+                .spot(match floor.concrete {
+                    true => Spot::new((area.x0 + 2.0, y), 1.0, down),
+                    false => Spot::new((area.x0 + 2.0, area.center().y), 1.0, 0.0),
+                })
+                .spot(Spot::new((area.x0 + 2.0, y), 1.0, down))
+                .spot(Spot::new((area.x0 + 2.0, 2.0 * area.center().y - y), 1.0, -down)),
         );
     }
 }
 
 /// Length of floor shown, mm on paper: room for the words on it.
 fn floor_reach(view: &PanelSection) -> f64 {
-    let words = view
-        .floors
-        .iter()
-        .map(|floor| Text::plain(&floor.words).extent(8.0).width + 6.0);
+    let words = view.floors.iter().map(|floor| Text::plain(&floor.words).extent(8.0).width + 6.0);
     words.fold(FLOOR, f64::max)
 }
 
@@ -198,27 +160,16 @@ fn ties(board: &mut Board, view: &PanelSection, ruler: Ruler) {
             let mut first = None;
             while y < view.height {
                 // A tie reaches 50 mm into each leaf.
-                board.line(
-                    Pen::Outline,
-                    ruler.at(x - 50.0, y),
-                    ruler.at(next + 50.0, y),
-                );
+                board.line(Pen::Outline, ruler.at(x - 50.0, y), ruler.at(next + 50.0, y));
                 first.get_or_insert(y);
                 y += spacing;
             }
             let Some(first) = first else { return };
-            let at = ruler.at(
-                next,
-                first + spacing * ((view.height * 0.6 / spacing).floor()),
-            );
+            let at = ruler.at(next, first + spacing * ((view.height * 0.6 / spacing).floor()));
             let inside = ruler.at(thickness(&view.layers), 0.0).x;
             board.note(
-                Note::new(
-                    Role::Note,
-                    at,
-                    Text::plain(&format!("ties at {}", mm(spacing))),
-                )
-                .spot(Spot::new((inside + 4.0, at.y), 1.0, 0.0).led()),
+                Note::new(Role::Note, at, Text::plain(&format!("ties at {}", mm(spacing))))
+                    .spot(Spot::new((inside + 4.0, at.y), 1.0, 0.0).led()),
             );
         }
         x = next;
@@ -231,11 +182,7 @@ fn dpc(board: &mut Board, view: &PanelSection, ruler: Ruler) {
     for layer in &view.layers {
         let next = x + layer.thickness();
         if matches!(layer, Layer::Leaf { .. }) {
-            board.line(
-                Pen::Support,
-                ruler.by(x, level, -0.8, 0.0),
-                ruler.by(next, level, 0.8, 0.0),
-            );
+            board.line(Pen::Support, ruler.by(x, level, -0.8, 0.0), ruler.by(next, level, 0.8, 0.0));
         }
         x = next;
     }
@@ -257,11 +204,11 @@ fn actions(board: &mut Board, view: &PanelSection, ruler: Ruler, high: f64) {
         let side = |y| ruler.by(0.0, y, -inset, 0.0);
         load::comb(board, side(0.0), side(view.height), push);
         let back = ruler.by(0.0, 0.55 * view.height, -(gap + depth), 0.0);
-        board.note(
-            Note::new(Role::Load, back, action.text())
-                .words(&action.words)
-                .spot(Spot::new(back - Vec2::new(1.5, 0.0), -1.0, 0.0)),
-        );
+        board.note(Note::new(Role::Load, back, action.text()).words(&action.words).spot(Spot::new(
+            back - Vec2::new(1.5, 0.0),
+            -1.0,
+            0.0,
+        )));
     }
     if let Some((index, action)) = &view.precompression
         && let Some(layer) = view.layers.get(*index)
@@ -271,11 +218,11 @@ fn actions(board: &mut Board, view: &PanelSection, ruler: Ruler, high: f64) {
         let tip = ruler.by(middle, high, 0.0, PAST + 2.0);
         let tail = tip - Vec2::new(0.0, 9.0);
         load::arrow(board, tail, tip);
-        board.note(
-            Note::new(Role::Load, tail, action.text())
-                .words(&action.words)
-                .spot(Spot::new(tail + Vec2::new(1.5, 0.0), 1.0, 1.0)),
-        );
+        board.note(Note::new(Role::Load, tail, action.text()).words(&action.words).spot(Spot::new(
+            tail + Vec2::new(1.5, 0.0),
+            1.0,
+            1.0,
+        )));
     }
 }
 
@@ -289,11 +236,8 @@ fn alt(view: &PanelSection) -> String {
     if let Some(spacing) = view.ties {
         alt += &format!("Wall ties every {} mm of height. ", mm(spacing));
     }
-    let floors: Vec<String> = view
-        .floors
-        .iter()
-        .map(|floor| format!("{} at {} mm", floor.words, mm(floor.level)))
-        .collect();
+    let floors: Vec<String> =
+        view.floors.iter().map(|floor| format!("{} at {} mm", floor.words, mm(floor.level))).collect();
     if !floors.is_empty() {
         alt += &format!("Floors: {}. ", list(&floors));
     }
@@ -301,11 +245,7 @@ fn alt(view: &PanelSection) -> String {
         alt += &format!("A dpc lies at {} mm. ", mm(level));
     }
     if let Some((wind, action)) = &view.wind {
-        let word = if *wind == Wind::Toward {
-            "presses on"
-        } else {
-            "draws at"
-        };
+        let word = if *wind == Wind::Toward { "presses on" } else { "draws at" };
         alt += &format!("The wind {word} the outer face: {}. ", action.spoken());
     }
     if let Some((_, action)) = &view.precompression {

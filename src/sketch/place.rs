@@ -14,9 +14,7 @@ use super::note::{Block, Note, Spot};
 /// Clear space between two labels, mm.
 const BETWEEN: f64 = 0.6;
 /// Distances tried for labels on leaders, mm.
-const RINGS: [f64; 12] = [
-    3.5, 5.0, 7.0, 10.0, 13.0, 17.0, 22.0, 28.0, 35.0, 45.0, 60.0, 80.0,
-];
+const RINGS: [f64; 12] = [3.5, 5.0, 7.0, 10.0, 13.0, 17.0, 22.0, 28.0, 35.0, 45.0, 60.0, 80.0];
 /// Directions tried on each ring.
 const DIRECTIONS: usize = 16;
 /// Cost of having a leader at all, and per millimetre of it.
@@ -30,10 +28,7 @@ const GROWTH_COST: f64 = 0.5;
 
 /// Decides the place of every note; the answer is in the order of the notes.
 pub fn place(notes: &[Note], ground: &Ground, bounds: Rect) -> Vec<Block> {
-    let mut choices: Vec<_> = notes
-        .iter()
-        .map(|note| candidates(note, ground, bounds, false))
-        .collect();
+    let mut choices: Vec<_> = notes.iter().map(|note| candidates(note, ground, bounds, false)).collect();
     let mut order: Vec<usize> = (0..notes.len()).collect();
     order.sort_by_key(|index| notes[*index].rank);
 
@@ -104,8 +99,8 @@ fn last_resort(note: &Note, ground: &Ground, blocks: &[Option<Block>], bounds: R
     let size = (note.width(), note.height());
     let foot = placed().fold(bounds.y1, |foot, block| foot.max(block.area.y1));
     let steps = (bounds.width() / 4.0).ceil() as usize;
-    let below = (0..=steps)
-        .map(|step| Spot::new((bounds.x0 + 4.0 * step as f64, foot + 2.0), 1.0, 1.0).led());
+    let below =
+        (0..=steps).map(|step| Spot::new((bounds.x0 + 4.0 * step as f64, foot + 2.0), 1.0, 1.0).led());
     let near = candidates(note, ground, bounds, true)
         .into_iter()
         .filter(|block| placed().all(|other| !apart(block.area).overlaps(apart(other.area))));
@@ -192,12 +187,7 @@ mod tests {
 
     #[test]
     fn a_note_alone_takes_its_first_spot_without_leader() {
-        let block = place(
-            &[note(0.0)],
-            &Ground::default(),
-            Rect::new(-30.0, -30.0, 30.0, 30.0),
-        )
-        .remove(0);
+        let block = place(&[note(0.0)], &Ground::default(), Rect::new(-30.0, -30.0, 30.0, 30.0)).remove(0);
         assert!((block.area.x0 - 1.0).abs() < 1e-9);
         assert_eq!(block.leader, None);
     }

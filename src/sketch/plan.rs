@@ -71,10 +71,7 @@ pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
 pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
     let rings = |wanted: &dyn Fn(Fate) -> bool| -> Vec<(Fate, [Point; 4])> {
         let chosen: Vec<&PlanWall> = walls.iter().filter(|w| wanted(w.fate)).collect();
-        chosen
-            .iter()
-            .map(|w| (w.fate, to_corners(w, &chosen).ring(scale)))
-            .collect()
+        chosen.iter().map(|w| (w.fate, to_corners(w, &chosen).ring(scale))).collect()
     };
     let standing = rings(&|fate| fate != Fate::Removed);
     let removed = rings(&|fate| fate == Fate::Removed);
@@ -89,10 +86,7 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
                 lines.extend(hatch::diagonals(ring, CROSSED, 0.0, false));
             }
             let earlier: Vec<_> = standing[..index].iter().map(|(_, ring)| *ring).collect();
-            let lines = lines
-                .into_iter()
-                .flat_map(|line| outside(line, &earlier))
-                .collect();
+            let lines = lines.into_iter().flat_map(|line| outside(line, &earlier)).collect();
             board.hatching(lines, ring);
         }
     }
@@ -110,11 +104,7 @@ fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
             let way = Vec2::new(other.to.0 - other.from.0, other.to.1 - other.from.1).normalize();
             (near(other.from) || near(other.to)) && way.cross(along).abs() > 0.99
         };
-        others
-            .iter()
-            .filter(meets)
-            .map(|other| other.thickness / 2.0)
-            .fold(0.0, f64::max)
+        others.iter().filter(meets).map(|other| other.thickness / 2.0).fold(0.0, f64::max)
     };
     let (back, ahead) = (along * run_on(wall.from), along * run_on(wall.to));
     PlanWall {
@@ -128,13 +118,7 @@ fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
 fn outlines(board: &mut Board, pen: Pen, rings: &[(Fate, [Point; 4])], solid: &[[Point; 4]]) {
     for (index, (_, ring)) in rings.iter().enumerate() {
         let mut others: Vec<[Point; 4]> = solid.to_vec();
-        others.extend(
-            rings
-                .iter()
-                .enumerate()
-                .filter(|(i, _)| *i != index)
-                .map(|(_, (_, r))| *r),
-        );
+        others.extend(rings.iter().enumerate().filter(|(i, _)| *i != index).map(|(_, (_, r))| *r));
         for side in 0..4 {
             let line = Line::new(ring[side], ring[(side + 1) % 4]);
             for piece in outside(line, &others) {
@@ -157,18 +141,13 @@ fn outside(line: Line, rings: &[[Point; 4]]) -> Vec<Line> {
             .filter(|(a, b)| (b - a) * line.p0.distance(line.p1) > 0.02)
             .collect();
     }
-    pieces
-        .into_iter()
-        .map(|(a, b)| Line::new(line.eval_at(a), line.eval_at(b)))
-        .collect()
+    pieces.into_iter().map(|(a, b)| Line::new(line.eval_at(a), line.eval_at(b))).collect()
 }
 
 /// The part of a line strictly inside a convex ring.
 fn within(line: Line, ring: &[Point; 4]) -> Option<(f64, f64)> {
-    let centre = Point::new(
-        ring.iter().map(|p| p.x).sum::<f64>() / 4.0,
-        ring.iter().map(|p| p.y).sum::<f64>() / 4.0,
-    );
+    let centre =
+        Point::new(ring.iter().map(|p| p.x).sum::<f64>() / 4.0, ring.iter().map(|p| p.y).sum::<f64>() / 4.0);
     let (mut enter, mut leave) = (0.0_f64, 1.0_f64);
     for side in 0..4 {
         let (a, b) = (ring[side], ring[(side + 1) % 4]);
@@ -177,21 +156,14 @@ fn within(line: Line, ring: &[Point; 4]) -> Option<(f64, f64)> {
             normal = -normal;
         }
         // A line along a face is not inside: both walls show it, one on the other.
-        let (from, step) = (
-            normal.dot(line.p0 - a) - 1e-6,
-            normal.dot(line.p1 - line.p0),
-        );
+        let (from, step) = (normal.dot(line.p0 - a) - 1e-6, normal.dot(line.p1 - line.p0));
         if step.abs() < 1e-12 {
             if from <= 0.0 {
                 return None;
             }
         } else {
             let at = -from / step;
-            if step > 0.0 {
-                enter = enter.max(at)
-            } else {
-                leave = leave.min(at)
-            }
+            if step > 0.0 { enter = enter.max(at) } else { leave = leave.min(at) }
         }
     }
     (enter < leave).then_some((enter, leave))
@@ -214,21 +186,12 @@ pub fn wall_note(wall: &PlanWall, scale: Scale, note: Note) -> Note {
     let (from, to) = (paper(scale, wall.from), paper(scale, wall.to));
     let half = scale.paper(wall.thickness / 2.0) + 1.0;
     let upright = (to - from).x.abs() < (to - from).y.abs();
-    let mut note = Note {
-        target: wall.middle(scale),
-        ..note
-    };
+    let mut note = Note { target: wall.middle(scale), ..note };
     for share in [0.5, 0.35, 0.65, 0.2, 0.8] {
         let at = from.lerp(to, share);
         let (a, b) = match upright {
-            true => (
-                Spot::new((at.x + half, at.y), 1.0, 0.0),
-                Spot::new((at.x - half, at.y), -1.0, 0.0),
-            ),
-            false => (
-                Spot::new((at.x, at.y - half), 0.0, -1.0),
-                Spot::new((at.x, at.y + half), 0.0, 1.0),
-            ),
+            true => (Spot::new((at.x + half, at.y), 1.0, 0.0), Spot::new((at.x - half, at.y), -1.0, 0.0)),
+            false => (Spot::new((at.x, at.y - half), 0.0, -1.0), Spot::new((at.x, at.y + half), 0.0, 1.0)),
         };
         note = note.spot(a).spot(b);
     }
@@ -242,20 +205,10 @@ pub fn north(board: &mut Board, centre: Point, degrees: f64) {
     let side = up.turn_90();
     load::circle(board, Pen::Beyond, centre, radius);
     let (tip, foot) = (centre + up * radius, centre - up * radius);
-    board.fill(
-        Ink::Arrow,
-        polygon(&[tip, centre + side * 1.1, centre - side * 1.1]),
-    );
-    board.stroke(
-        Pen::Beyond,
-        polygon(&[foot, centre + side * 1.1, centre - side * 1.1]),
-    );
+    board.fill(Ink::Arrow, polygon(&[tip, centre + side * 1.1, centre - side * 1.1]));
+    board.stroke(Pen::Beyond, polygon(&[foot, centre + side * 1.1, centre - side * 1.1]));
     let beyond = tip + up * 2.4;
-    board.note(
-        Note::new(Role::Note, beyond, Text::plain("N"))
-            .spot(Spot::new(beyond, 0.0, 0.0))
-            .rank(0),
-    );
+    board.note(Note::new(Role::Note, beyond, Text::plain("N")).spot(Spot::new(beyond, 0.0, 0.0)).rank(0));
 }
 
 /// A wind arrow that blows `along` at `tip`, with its words behind it.
@@ -265,11 +218,7 @@ pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
     let middle = tail.midpoint(tip);
     let (x, y) = (along.x.abs() * 2.0, along.y.abs() * 2.0);
     let note = Note::new(Role::Load, middle, Text::plain(words))
-        .spot(Spot::new(
-            tail - along * 1.5,
-            -along.x.round(),
-            -along.y.round(),
-        ))
+        .spot(Spot::new(tail - along * 1.5, -along.x.round(), -along.y.round()))
         .spot(Spot::new((middle.x, middle.y - 3.0 - y), 0.0, -1.0).cost(1.0))
         .spot(Spot::new((middle.x + 3.0 + x, middle.y), 1.0, 0.0).cost(1.0));
     board.note(note.rank(1));
@@ -278,8 +227,5 @@ pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
 /// Extent of walls on the paper.
 pub fn extent(walls: &[PlanWall], scale: Scale) -> kurbo::Rect {
     let points = walls.iter().flat_map(|wall| wall.ring(scale));
-    points
-        .map(|p| kurbo::Rect::from_points(p, p))
-        .reduce(|a, b| a.union(b))
-        .unwrap_or(kurbo::Rect::ZERO)
+    points.map(|p| kurbo::Rect::from_points(p, p)).reduce(|a, b| a.union(b)).unwrap_or(kurbo::Rect::ZERO)
 }

@@ -104,10 +104,7 @@ impl Outline {
     fn put(&mut self, command: &str, points: &[(f32, f32)]) {
         self.d += command;
         for (x, y) in points {
-            let (x, y) = (
-                self.x + self.unit * f64::from(*x),
-                self.y - self.unit * f64::from(*y),
-            );
+            let (x, y) = (self.x + self.unit * f64::from(*x), self.y - self.unit * f64::from(*y));
             self.d += &format!("{x:.3} {y:.3} ");
         }
     }

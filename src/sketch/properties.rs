@@ -11,60 +11,34 @@ use super::*;
 
 /// `n` of a drawing's scale `1:n`.
 fn scale_of(drawing: &Drawing) -> f64 {
-    drawing
-        .scale
-        .trim_start_matches("1:")
-        .parse()
-        .expect("a scale is 1:n")
+    drawing.scale.trim_start_matches("1:").parse().expect("a scale is 1:n")
 }
 
 /// Lengths of all straight pieces drawn with a pen.
 fn lengths(drawing: &Drawing, pen: Pen) -> Vec<f64> {
     drawing
         .strokes(pen)
-        .flat_map(|path| {
-            path.segments()
-                .map(|s| s.as_line().map_or(0.0, |l| l.length()))
-        })
+        .flat_map(|path| path.segments().map(|s| s.as_line().map_or(0.0, |l| l.length())))
         .collect()
 }
 
 /// Whether a pen drew a straight line of `full` mm at the drawing's scale.
 fn has_length(drawing: &Drawing, pen: Pen, full: f64) -> bool {
     let paper = full / scale_of(drawing);
-    lengths(drawing, pen)
-        .iter()
-        .any(|length| (length - paper).abs() < 1e-6)
+    lengths(drawing, pen).iter().any(|length| (length - paper).abs() < 1e-6)
 }
 
 /// Points of all strokes of a pen, sorted, mirrored on the drawing's centre where asked.
 fn points(drawing: &Drawing, pen: Pen, mirrored: bool) -> Vec<(i64, i64)> {
-    let bounds: Vec<&BezPath> = drawing
-        .strokes(Pen::Outline)
-        .chain(drawing.strokes(Pen::Cut))
-        .collect();
-    let extent = bounds
-        .iter()
-        .map(|p| p.bounding_box())
-        .reduce(|a, b| a.union(b))
-        .expect("something is drawn");
+    let bounds: Vec<&BezPath> = drawing.strokes(Pen::Outline).chain(drawing.strokes(Pen::Cut)).collect();
+    let extent =
+        bounds.iter().map(|p| p.bounding_box()).reduce(|a, b| a.union(b)).expect("something is drawn");
     let mut points: Vec<(i64, i64)> = drawing
         .strokes(pen)
-        .flat_map(|path| {
-            path.segments()
-                .flat_map(|s| s.as_line().map(|l| [l.p0, l.p1]))
-                .flatten()
-        })
+        .flat_map(|path| path.segments().flat_map(|s| s.as_line().map(|l| [l.p0, l.p1])).flatten())
         .map(|p| {
-            let x = if mirrored {
-                extent.x1 - p.x
-            } else {
-                p.x - extent.x0
-            };
-            (
-                (x * 100.0).round() as i64,
-                ((p.y - extent.y0) * 100.0).round() as i64,
-            )
+            let x = if mirrored { extent.x1 - p.x } else { p.x - extent.x0 };
+            ((x * 100.0).round() as i64, ((p.y - extent.y0) * 100.0).round() as i64)
         })
         .collect();
     points.sort_unstable();
@@ -72,19 +46,12 @@ fn points(drawing: &Drawing, pen: Pen, mirrored: bool) -> Vec<(i64, i64)> {
 }
 
 fn layers() -> impl Strategy<Value = Vec<Layer>> {
-    let leaf = |thickness, material| Layer::Leaf {
-        thickness,
-        material,
-    };
+    let leaf = |thickness, material| Layer::Leaf { thickness, material };
     prop_oneof![
         Just(cavity_wall()),
         Just(vec![leaf(100.0, Material::Block)]),
         Just(vec![leaf(215.0, Material::Brick)]),
-        Just(vec![
-            leaf(102.5, Material::Brick),
-            Layer::Cavity { width: 50.0 },
-            leaf(102.5, Material::Brick)
-        ]),
+        Just(vec![leaf(102.5, Material::Brick), Layer::Cavity { width: 50.0 }, leaf(102.5, Material::Brick)]),
     ]
 }
 

@@ -56,12 +56,7 @@ fn draw(view: &ReturnActions, scale: Scale) -> Drawing {
     let y = |z: f64| -scale.paper(z);
     let (foot, top) = (Point::new(0.0, 0.0), Point::new(0.0, y(view.height)));
     board.line(Pen::Outline, foot, top);
-    load::ground(
-        &mut board,
-        foot - Vec2::new(4.0, 0.0),
-        foot + Vec2::new(4.0, 0.0),
-        Vec2::new(0.0, 1.0),
-    );
+    load::ground(&mut board, foot - Vec2::new(4.0, 0.0), foot + Vec2::new(4.0, 0.0), Vec2::new(0.0, 1.0));
     if view.propped {
         load::restraint(&mut board, top, Vec2::new(-1.0, 0.0));
     }
@@ -71,44 +66,23 @@ fn draw(view: &ReturnActions, scale: Scale) -> Drawing {
     for curve in &view.curves {
         let values = || curve.samples.iter().map(|(_, v)| *v);
         let (low, high) = (values().fold(0.0, f64::min), values().fold(0.0, f64::max));
-        let unit = if high > low {
-            ORDINATE / (high - low)
-        } else {
-            0.0
-        };
-        let labels = curve
-            .values
-            .iter()
-            .map(|(_, text)| Text::plain(text).extent(8.0).width);
+        let unit = if high > low { ORDINATE / (high - low) } else { 0.0 };
+        let labels = curve.values.iter().map(|(_, text)| Text::plain(text).extent(8.0).width);
         let label = labels.fold(0.0, f64::max) + 2.0;
         let base = edge + APART + if low < 0.0 { label } else { 0.0 } - low * unit;
         draw_curve(&mut board, curve, base, unit, &y, top.y);
         edge = base + (high * unit + label).max(title(curve).extent(8.0).width);
     }
-    let case = if view.case.is_empty() {
-        String::new()
-    } else {
-        format!(", {}", view.case)
-    };
+    let case = if view.case.is_empty() { String::new() } else { format!(", {}", view.case) };
     board.finish(Words {
         name: format!("{}-actions", view.mark),
-        caption: format!(
-            "{} in its plane{case}; ordinates not to the scale of the height",
-            view.mark
-        ),
+        caption: format!("{} in its plane{case}; ordinates not to the scale of the height", view.mark),
         scale: scale.text(),
         alt: alt(view),
     })
 }
 
-fn draw_curve(
-    board: &mut Board,
-    curve: &Curve,
-    base: f64,
-    unit: f64,
-    y: &dyn Fn(f64) -> f64,
-    top: f64,
-) {
+fn draw_curve(board: &mut Board, curve: &Curve, base: f64, unit: f64, y: &dyn Fn(f64) -> f64, top: f64) {
     let at = |(z, v): (f64, f64)| Point::new(base + v * unit, y(z));
     let points: Vec<Point> = curve.samples.iter().copied().map(at).collect();
     let (Some(first), Some(last)) = (curve.samples.first(), curve.samples.last()) else {
@@ -128,11 +102,7 @@ fn draw_curve(
     board.line(Pen::Beyond, Point::new(base, 0.0), Point::new(base, top));
 
     let head = Point::new(base, top - 4.0);
-    board.note(
-        Note::new(Role::Note, head, title(curve))
-            .spot(Spot::new(head, 1.0, -1.0))
-            .rank(0),
-    );
+    board.note(Note::new(Role::Note, head, title(curve)).spot(Spot::new(head, 1.0, -1.0)).rank(0));
     for (z, text) in &curve.values {
         let value = value_at(&curve.samples, *z);
         let tip = at((*z, value));
@@ -156,9 +126,7 @@ fn title(curve: &Curve) -> Text {
 
 /// The value at a height, straight between samples.
 fn value_at(samples: &[(f64, f64)], z: f64) -> f64 {
-    let pair = samples
-        .windows(2)
-        .find(|pair| pair[0].0 <= z && z <= pair[1].0 && pair[0].0 < pair[1].0);
+    let pair = samples.windows(2).find(|pair| pair[0].0 <= z && z <= pair[1].0 && pair[0].0 < pair[1].0);
     match pair {
         Some(pair) => {
             let share = (z - pair[0].0) / (pair[1].0 - pair[0].0);
@@ -169,31 +137,15 @@ fn value_at(samples: &[(f64, f64)], z: f64) -> f64 {
 }
 
 fn alt(view: &ReturnActions) -> String {
-    let mut alt = format!(
-        "Diagrams along the {} mm height of return {}",
-        mm(view.height),
-        view.mark
-    );
+    let mut alt = format!("Diagrams along the {} mm height of return {}", mm(view.height), view.mark);
     if !view.case.is_empty() {
         alt += &format!(", {}", view.case);
     }
-    alt += if view.propped {
-        "; the head is held. "
-    } else {
-        "; the head is free. "
-    };
+    alt += if view.propped { "; the head is held. " } else { "; the head is free. " };
     for curve in &view.curves {
-        let values: Vec<String> = curve
-            .values
-            .iter()
-            .map(|(z, text)| format!("{text} at {} mm above the base", mm(*z)))
-            .collect();
-        alt += &format!(
-            "{} {}: {}. ",
-            curve.words,
-            curve.symbol.replace('_', ""),
-            list(&values)
-        );
+        let values: Vec<String> =
+            curve.values.iter().map(|(z, text)| format!("{text} at {} mm above the base", mm(*z))).collect();
+        alt += &format!("{} {}: {}. ", curve.words, curve.symbol.replace('_', ""), list(&values));
     }
     alt.trim_end().to_owned()
 }

@@ -81,11 +81,7 @@ fn draw(view: &ReturnElevation, scale: Scale) -> Drawing {
     dimensions(&mut board, view, ruler);
     board.finish(Words {
         name: format!("{}-elevation", view.mark),
-        caption: format!(
-            "{} elevation, looking at its face{}",
-            view.mark,
-            hatch_key(&view.wall_layers)
-        ),
+        caption: format!("{} elevation, looking at its face{}", view.mark, hatch_key(&view.wall_layers)),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -100,12 +96,7 @@ fn outer_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     for layer in &view.wall_layers {
         let next = x - layer.thickness();
         if let Layer::Leaf { material, .. } = layer {
-            let ring = [
-                corner(x, false),
-                corner(x, true),
-                corner(next, true),
-                corner(next, false),
-            ];
+            let ring = [corner(x, false), corner(x, true), corner(next, true), corner(next, false)];
             board.hatch(*material, &ring);
             board.line(Pen::Cut, corner(x, false), corner(x, true));
             board.line(Pen::Cut, corner(next, false), corner(next, true));
@@ -114,12 +105,7 @@ fn outer_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     }
     for top in [true, false] {
         let over = ruler.right() * 1.5;
-        load::break_line(
-            board,
-            Pen::Beyond,
-            corner(x, top) - over,
-            corner(0.0, top) + over,
-        );
+        load::break_line(board, Pen::Beyond, corner(x, top) - over, corner(0.0, top) + over);
     }
 }
 
@@ -128,10 +114,7 @@ fn removed_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     let shown = removed.min(ruler.scale.0 * REMOVED_SHOWN);
     let (near, far) = (view.length, view.length + shown);
     let corner = |x, y| ruler.at(x, y);
-    board.polyline(
-        Pen::Removed,
-        &[corner(near, view.height), corner(far, view.height)],
-    );
+    board.polyline(Pen::Removed, &[corner(near, view.height), corner(far, view.height)]);
     board.polyline(Pen::Removed, &[corner(near, 0.0), corner(far, 0.0)]);
     if shown < removed {
         let over = Vec2::new(0.0, 1.5);
@@ -151,12 +134,7 @@ fn removed_wall(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
 
 fn body(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     let (l, h) = (view.length, view.height);
-    let ring = [
-        ruler.at(0.0, 0.0),
-        ruler.at(l, 0.0),
-        ruler.at(l, h),
-        ruler.at(0.0, h),
-    ];
+    let ring = [ruler.at(0.0, 0.0), ruler.at(l, 0.0), ruler.at(l, h), ruler.at(0.0, h)];
     board.polyline(Pen::Outline, &[ring[0], ring[1], ring[2], ring[3]]);
     let middle = ruler.at(l / 2.0, 0.42 * h);
     let roomy = Text::plain(&view.words).extent(8.0).width + 2.0 < ruler.scale.paper(l);
@@ -169,20 +147,13 @@ fn body(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     }
     for share in [0.42, 0.35, 0.5, 0.25, 0.15, 0.6, 0.7] {
         let at = ruler.at(l / 2.0, share * h);
-        note = note.spot(if roomy {
-            Spot::new(at, 0.0, 0.0)
-        } else {
-            Spot::upwards(at, 0.0, 0.0)
-        });
+        note = note.spot(if roomy { Spot::new(at, 0.0, 0.0) } else { Spot::upwards(at, 0.0, 0.0) });
     }
     board.note(note.rank(1));
 
     // The joint is named on the face, or past the free end of a short return.
-    let mut note = Note::new(
-        Role::Note,
-        ruler.at(0.0, 0.2 * h),
-        Text::plain(&format!("junction {}", view.junction)),
-    );
+    let mut note =
+        Note::new(Role::Note, ruler.at(0.0, 0.2 * h), Text::plain(&format!("junction {}", view.junction)));
     for share in [0.2, 0.12, 0.28, 0.06] {
         note = note.spot(Spot::new(ruler.by(0.0, share * h, 4.0, 0.0), ruler.hand, 0.0).led());
     }
@@ -194,17 +165,8 @@ fn body(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
 
 fn base_and_head(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     let (l, h) = (view.length, view.height);
-    load::ground(
-        board,
-        ruler.at(0.0, 0.0),
-        ruler.at(l, 0.0),
-        Vec2::new(0.0, 1.0),
-    );
-    let words = if view.dpc {
-        "dpc at the base"
-    } else {
-        "base bonded, no dpc"
-    };
+    load::ground(board, ruler.at(0.0, 0.0), ruler.at(l, 0.0), Vec2::new(0.0, 1.0));
+    let words = if view.dpc { "dpc at the base" } else { "base bonded, no dpc" };
     let foot = ruler.by(l, 0.0, -0.5, 0.0);
     board.note(
         Note::new(Role::Note, foot, Text::plain(words))
@@ -233,13 +195,9 @@ fn base_and_head(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     load::restraint(board, corner, ruler.right());
     let beside = ruler.by(l, h, 7.0, -1.2);
     board.note(
-        Note::new(
-            Role::Note,
-            ruler.by(l, h, 5.0, -1.5),
-            Text::plain("head held by"),
-        )
-        .words(names)
-        .spot(Spot::new(beside, ruler.hand, 1.0)),
+        Note::new(Role::Note, ruler.by(l, h, 5.0, -1.5), Text::plain("head held by"))
+            .words(names)
+            .spot(Spot::new(beside, ruler.hand, 1.0)),
     );
 }
 
@@ -247,37 +205,16 @@ fn dimensions(board: &mut Board, view: &ReturnElevation, ruler: Ruler) {
     let (l, h) = (view.length, view.height);
     let outer = thickness(&view.wall_layers);
     let base = ruler.at(0.0, 0.0).y;
-    let xs: Vec<f64> = [-outer, 0.0, l]
-        .iter()
-        .map(|x| ruler.at(*x, 0.0).x)
-        .collect();
-    dimension::chain_across(
-        board,
-        &xs,
-        base + 12.0,
-        base + WALL_PAST,
-        &[mm(outer).into(), mm(l).into()],
-    );
-    let shown = view
-        .removed
-        .map_or(0.0, |r| r.min(ruler.scale.0 * REMOVED_SHOWN));
+    let xs: Vec<f64> = [-outer, 0.0, l].iter().map(|x| ruler.at(*x, 0.0).x).collect();
+    dimension::chain_across(board, &xs, base + 12.0, base + WALL_PAST, &[mm(outer).into(), mm(l).into()]);
+    let shown = view.removed.map_or(0.0, |r| r.min(ruler.scale.0 * REMOVED_SHOWN));
     let end = ruler.at(l + shown, 0.0).x;
     let at = end + ruler.hand * if view.removed.is_some() { 8.0 } else { 24.0 };
-    dimension::up(
-        board,
-        (ruler.at(0.0, 0.0).y, ruler.at(0.0, h).y),
-        at,
-        end,
-        mm(h),
-    );
+    dimension::up(board, (ruler.at(0.0, 0.0).y, ruler.at(0.0, h).y), at, end, mm(h));
 }
 
 fn alt(view: &ReturnElevation) -> String {
-    let side = if view.wall == Side::Left {
-        "left"
-    } else {
-        "right"
-    };
+    let side = if view.wall == Side::Left { "left" } else { "right" };
     let mut alt = format!(
         "Elevation of return {}, {}, {} mm long and {} mm high. The outer wall stands on the {side}, {} mm thick ({}); junction {}. ",
         view.mark,
@@ -304,11 +241,7 @@ fn alt(view: &ReturnElevation) -> String {
     let mut last = 0.0;
     for load in loads {
         let step = load.x - last;
-        alt += &format!(
-            "Vertical load {} at {} mm from the outer wall",
-            load.action.spoken(),
-            mm(load.x)
-        );
+        alt += &format!("Vertical load {} at {} mm from the outer wall", load.action.spoken(), mm(load.x));
         alt += &if step > 0.5 && last > 0.0 {
             format!(", {} mm from the one before. ", mm(step))
         } else {

@@ -28,10 +28,7 @@ pub(super) fn vertical_loads(board: &mut Board, view: &ReturnElevation, ruler: R
             places.push(load.x);
         }
     }
-    let texts: Vec<Text> = places
-        .windows(2)
-        .map(|pair| mm(pair[1] - pair[0]).into())
-        .collect();
+    let texts: Vec<Text> = places.windows(2).map(|pair| mm(pair[1] - pair[0]).into()).collect();
     let paper: Vec<f64> = places.iter().map(|x| ruler.at(*x, 0.0).x).collect();
     let chained = !texts.is_empty() && dimension::fits(&paper, &texts);
     if chained {
@@ -115,13 +112,11 @@ pub(super) fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) 
                 .rank(1),
         );
         if !action.words.is_empty() {
-            board.note(
-                Note::new(Role::Note, middle, Text::plain(&action.words)).spot(Spot::new(
-                    middle + Vec2::new(0.0, 1.3),
-                    0.0,
-                    1.0,
-                )),
-            );
+            board.note(Note::new(Role::Note, middle, Text::plain(&action.words)).spot(Spot::new(
+                middle + Vec2::new(0.0, 1.3),
+                0.0,
+                1.0,
+            )));
         }
         from = out - right * 2.0;
     }
@@ -132,13 +127,11 @@ pub(super) fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) 
     let (tail, tip) = if toward { (out, reach) } else { (reach, out) };
     load::open_arrow(board, tail, tip);
     let middle = tail.midpoint(tip);
-    board.note(
-        Note::new(Role::Note, middle, Text::plain("wind")).spot(Spot::new(
-            middle - Vec2::new(0.0, 3.0),
-            0.0,
-            -1.0,
-        )),
-    );
+    board.note(Note::new(Role::Note, middle, Text::plain("wind")).spot(Spot::new(
+        middle - Vec2::new(0.0, 3.0),
+        0.0,
+        -1.0,
+    )));
 }
 
 fn head_moment(board: &mut Board, view: &ReturnElevation, ruler: Ruler, toward: bool) {
@@ -150,12 +143,7 @@ fn head_moment(board: &mut Board, view: &ReturnElevation, ruler: Ruler, toward: 
     let inside = ruler.scale.paper(view.length) > 4.0 * radius;
     let centre: Point = match inside {
         true => ruler.by(view.length / 2.0, view.height, 0.0, -16.0),
-        false => ruler.by(
-            -thickness(&view.wall_layers),
-            view.height,
-            -4.0,
-            WALL_PAST + 8.0,
-        ),
+        false => ruler.by(-thickness(&view.wall_layers), view.height, -4.0, WALL_PAST + 8.0),
     };
     load::moment(board, centre, radius, toward == (ruler.hand > 0.0));
     let mut note = Note::new(Role::Load, centre, action.text()).words(&action.words);

@@ -103,11 +103,7 @@ fn draw(view: &ReturnSection, scale: Scale) -> Drawing {
     let all = [&view.layers[..], &view.wall_layers[..]].concat();
     board.finish(Words {
         name: format!("{}-section", view.mark),
-        caption: format!(
-            "{} section in plan at the base{}",
-            view.mark,
-            hatch_key(&all)
-        ),
+        caption: format!("{} section in plan at the base{}", view.mark, hatch_key(&all)),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -124,18 +120,10 @@ impl<'a> Section<'a> {
         let (low, high) = edges.get(view.loaded).copied().unwrap_or((0.0, y));
         let zero = (low + high) / 2.0;
         let bands: Vec<_> = edges.iter().map(|(a, b)| (a - zero, b - zero)).collect();
-        let body = bands
-            .iter()
-            .flat_map(|(a, b)| [a.abs(), b.abs()])
-            .fold(0.0, f64::max);
+        let body = bands.iter().flat_map(|(a, b)| [a.abs(), b.abs()]).fold(0.0, f64::max);
         let flange = view.flange.map_or(0.0, |flange| flange.width / 2.0);
         let reach = body.max(flange) + 6.0 * scale.0;
-        Self {
-            view,
-            ruler: Ruler::new(scale, view.wall),
-            bands,
-            reach,
-        }
+        Self { view, ruler: Ruler::new(scale, view.wall), bands, reach }
     }
 
     /// Where the counted section starts: outer face of the flange, or the junction.
@@ -194,11 +182,7 @@ impl<'a> Section<'a> {
                 y = *high;
             }
         }
-        board.line(
-            Pen::Cut,
-            self.ruler.at(0.0, y),
-            self.ruler.at(0.0, self.reach),
-        );
+        board.line(Pen::Cut, self.ruler.at(0.0, y), self.ruler.at(0.0, self.reach));
     }
 
     fn leaves(&self, board: &mut Board) {
@@ -207,10 +191,7 @@ impl<'a> Section<'a> {
             if let Layer::Leaf { material, .. } = layer {
                 board.hatch(*material, &corners(self.area((0.0, l), (*low, *high))));
                 let at = |x, y| self.ruler.at(x, y);
-                board.polyline(
-                    Pen::Cut,
-                    &[at(0.0, *low), at(l, *low), at(l, *high), at(0.0, *high)],
-                );
+                board.polyline(Pen::Cut, &[at(0.0, *low), at(l, *low), at(l, *high), at(0.0, *high)]);
             }
         }
     }
@@ -237,11 +218,7 @@ impl<'a> Section<'a> {
             .chain(self.bands.iter().map(|band| band.1))
             .map(|y| self.ruler.at(0.0, y).y)
             .collect();
-        let texts: Vec<Text> = view
-            .layers
-            .iter()
-            .map(|layer| mm(layer.thickness()).into())
-            .collect();
+        let texts: Vec<Text> = view.layers.iter().map(|layer| mm(layer.thickness()).into()).collect();
         let free = x(view.length);
         dimension::chain_up(board, &ys, free + self.ruler.hand * 8.0, free, &texts);
 
@@ -260,27 +237,12 @@ impl<'a> Section<'a> {
             let half = flange.width / 2.0;
             let y = |y| self.ruler.at(0.0, y).y;
             let level = x(-wall) - self.ruler.hand * 8.0;
-            dimension::up(
-                board,
-                (y(-half), y(half)),
-                level,
-                x(-wall),
-                mm(flange.width),
-            );
+            dimension::up(board, (y(-half), y(half)), level, x(-wall), mm(flange.width));
             let at = self.ruler.at(-flange.thickness / 2.0, half);
-            let text = Text::plain("counted flange ")
-                .and("b", Style::Italic)
-                .and("f", Style::Sub);
-            board.note(
-                Note::new(Role::Note, at, text).spot(
-                    Spot::new(
-                        self.ruler.at(0.0, half) + self.ruler.right() * 5.0,
-                        self.ruler.hand,
-                        0.0,
-                    )
-                    .led(),
-                ),
-            );
+            let text = Text::plain("counted flange ").and("b", Style::Italic).and("f", Style::Sub);
+            board.note(Note::new(Role::Note, at, text).spot(
+                Spot::new(self.ruler.at(0.0, half) + self.ruler.right() * 5.0, self.ruler.hand, 0.0).led(),
+            ));
         }
     }
 }
@@ -292,11 +254,7 @@ fn alt(view: &ReturnSection) -> String {
         mm(view.length),
         layer_words(&view.layers),
         layer_words(&view.wall_layers),
-        if view.bonded {
-            "bonded"
-        } else {
-            "a butt joint"
-        },
+        if view.bonded { "bonded" } else { "a butt joint" },
     );
     if let Some(flange) = view.flange {
         alt += &format!(
@@ -310,17 +268,9 @@ fn alt(view: &ReturnSection) -> String {
             "The resultant {} stands {} mm from the centroid, towards the {}. {} mm of the length are compressed, from the {}; stress there {}",
             stress.force.spoken(),
             mm((stress.resultant - stress.centroid).abs()),
-            if stress.resultant < stress.centroid {
-                "outer wall"
-            } else {
-                "free end"
-            },
+            if stress.resultant < stress.centroid { "outer wall" } else { "free end" },
             mm(stress.compressed),
-            if stress.toe == Toe::Wall {
-                "outer wall"
-            } else {
-                "free end"
-            },
+            if stress.toe == Toe::Wall { "outer wall" } else { "free end" },
             stress.at_toe.spoken(),
         );
         alt += &match &stress.at_heel {

@@ -5,15 +5,9 @@ use super::*;
 
 pub fn cavity_wall() -> Vec<Layer> {
     vec![
-        Layer::Leaf {
-            thickness: 100.0,
-            material: Material::Block,
-        },
+        Layer::Leaf { thickness: 100.0, material: Material::Block },
         Layer::Cavity { width: 75.0 },
-        Layer::Leaf {
-            thickness: 102.5,
-            material: Material::Brick,
-        },
+        Layer::Leaf { thickness: 102.5, material: Material::Brick },
     ]
 }
 
@@ -30,19 +24,10 @@ pub fn elevation() -> ReturnElevation {
         dpc: true,
         removed: Some(3600.0),
         loads: vec![
-            PlacedLoad {
-                x: 320.0,
-                action: Action::new("N_1", "8.4 kN", "floor over"),
-            },
-            PlacedLoad {
-                x: 590.0,
-                action: Action::new("N_2", "36.2 kN", "beam B1"),
-            },
+            PlacedLoad { x: 320.0, action: Action::new("N_1", "8.4 kN", "floor over") },
+            PlacedLoad { x: 590.0, action: Action::new("N_2", "36.2 kN", "beam B1") },
         ],
-        head_forces: vec![
-            Action::new("H_Ed", "2.95 kN", ""),
-            Action::new("H_nu", "0.29 kN", "tilt"),
-        ],
+        head_forces: vec![Action::new("H_Ed", "2.95 kN", ""), Action::new("H_nu", "0.29 kN", "tilt")],
         head_moment: Some(Action::new("M_head", "1.10 kNm", "")),
         line_load: Some(Action::new("w_Ed", "1.95 kN/m", "")),
         tributary: Some(2600.0),
@@ -54,18 +39,12 @@ pub fn section() -> ReturnSection {
     ReturnSection {
         mark: "R1".into(),
         length: 640.0,
-        layers: vec![Layer::Leaf {
-            thickness: 100.0,
-            material: Material::Block,
-        }],
+        layers: vec![Layer::Leaf { thickness: 100.0, material: Material::Block }],
         loaded: 0,
         wall: Side::Left,
         wall_layers: cavity_wall(),
         bonded: true,
-        flange: Some(Flange {
-            width: 600.0,
-            thickness: 100.0,
-        }),
+        flange: Some(Flange { width: 600.0, thickness: 100.0 }),
         stress: Some(Stress {
             toe: Toe::Free,
             compressed: 391.5,
@@ -83,22 +62,13 @@ pub fn solid_section() -> ReturnSection {
         mark: "R2".into(),
         length: 900.0,
         layers: vec![
-            Layer::Leaf {
-                thickness: 100.0,
-                material: Material::Block,
-            },
+            Layer::Leaf { thickness: 100.0, material: Material::Block },
             Layer::Cavity { width: 50.0 },
-            Layer::Leaf {
-                thickness: 102.5,
-                material: Material::Brick,
-            },
+            Layer::Leaf { thickness: 102.5, material: Material::Brick },
         ],
         loaded: 0,
         wall: Side::Right,
-        wall_layers: vec![Layer::Leaf {
-            thickness: 215.0,
-            material: Material::Brick,
-        }],
+        wall_layers: vec![Layer::Leaf { thickness: 215.0, material: Material::Brick }],
         bonded: false,
         flange: None,
         stress: Some(Stress {
@@ -130,10 +100,7 @@ pub fn actions(propped: bool) -> ReturnActions {
         false => w * (h - z) + head,
     };
     let (m_values, v_values) = if propped {
-        (
-            vec![(1200.0, "1.40 kNm".into())],
-            vec![(0.0, "2.34 kN".into()), (2400.0, "−2.34 kN".into())],
-        )
+        (vec![(1200.0, "1.40 kNm".into())], vec![(0.0, "2.34 kN".into()), (2400.0, "−2.34 kN".into())])
     } else {
         (
             vec![(0.0, "12.6 kNm".into()), (2400.0, "0".into())],
@@ -152,21 +119,13 @@ pub fn actions(propped: bool) -> ReturnActions {
                 samples: samples(&m),
                 values: m_values,
             },
-            Curve {
-                symbol: "V_Ed".into(),
-                words: "shear".into(),
-                samples: samples(&v),
-                values: v_values,
-            },
+            Curve { symbol: "V_Ed".into(), words: "shear".into(), samples: samples(&v), values: v_values },
         ],
     }
 }
 
 pub fn edge(support: Support, why: &str) -> Edge {
-    Edge {
-        support,
-        why: why.into(),
-    }
+    Edge { support, why: why.into() }
 }
 
 pub fn panels() -> [PanelElevation; 2] {
@@ -186,12 +145,7 @@ pub fn panels() -> [PanelElevation; 2] {
             height: 1050.0,
             words: "window".into(),
         }],
-        walls: vec![WallBehind {
-            x: 2600.0,
-            thickness: 100.0,
-            words: "W2".into(),
-            removed: false,
-        }],
+        walls: vec![WallBehind { x: 2600.0, thickness: 100.0, words: "W2".into(), removed: false }],
         yield_lines: vec![],
         values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
     };
@@ -199,23 +153,10 @@ pub fn panels() -> [PanelElevation; 2] {
     after.state = "after".into();
     after.top = edge(Support::Simple, "straps at 2 m");
     after.walls = vec![
-        WallBehind {
-            x: 2600.0,
-            thickness: 100.0,
-            words: "R1".into(),
-            removed: false,
-        },
-        WallBehind {
-            x: 900.0,
-            thickness: 100.0,
-            words: "W3".into(),
-            removed: true,
-        },
+        WallBehind { x: 2600.0, thickness: 100.0, words: "R1".into(), removed: false },
+        WallBehind { x: 900.0, thickness: 100.0, words: "W3".into(), removed: true },
     ];
-    after.yield_lines = vec![
-        [(0.0, 0.0), (1200.0, 1200.0)],
-        [(0.0, 2400.0), (1200.0, 1200.0)],
-    ];
+    after.yield_lines = vec![[(0.0, 0.0), (1200.0, 1200.0)], [(0.0, 2400.0), (1200.0, 1200.0)]];
     [before, after]
 }
 
@@ -227,37 +168,18 @@ pub fn wall_section() -> PanelSection {
         height: 2400.0,
         layers,
         floors: vec![
-            Floor {
-                level: 0.0,
-                depth: 150.0,
-                concrete: true,
-                words: "ground slab".into(),
-            },
-            Floor {
-                level: 2625.0,
-                depth: 225.0,
-                concrete: false,
-                words: "timber floor, strapped".into(),
-            },
+            Floor { level: 0.0, depth: 150.0, concrete: true, words: "ground slab".into() },
+            Floor { level: 2625.0, depth: 225.0, concrete: false, words: "timber floor, strapped".into() },
         ],
         dpc: Some(-75.0),
         ties: Some(450.0),
-        wind: Some((
-            Wind::Toward,
-            Action::new("W_Ed", "0.90 kN/m²", "corner zone"),
-        )),
+        wind: Some((Wind::Toward, Action::new("W_Ed", "0.90 kN/m²", "corner zone"))),
         precompression: Some((2, Action::new("N_G", "12.4 kN/m", "dead load, helping"))),
     }
 }
 
 pub fn wall(name: &str, from: (f64, f64), to: (f64, f64), thickness: f64, fate: Fate) -> PlanWall {
-    PlanWall {
-        name: name.into(),
-        from,
-        to,
-        thickness,
-        fate,
-    }
+    PlanWall { name: name.into(), from, to, thickness, fate }
 }
 
 pub fn plan() -> KeyPlan {
@@ -271,51 +193,19 @@ pub fn plan() -> KeyPlan {
             wall("W4", (0.0, 0.0), (0.0, 7000.0), 277.5, Fate::Stays),
             wall("R1", (4000.0, 0.0), (4000.0, 780.0), 100.0, Fate::Stays),
             wall("R2", (4000.0, 6300.0), (4000.0, 7000.0), 100.0, Fate::Stays),
-            wall(
-                "W5",
-                (4000.0, 780.0),
-                (4000.0, 6300.0),
-                100.0,
-                Fate::Removed,
-            ),
-            wall(
-                "W6",
-                (4000.0, 3500.0),
-                (8200.0, 3500.0),
-                100.0,
-                Fate::Removed,
-            ),
+            wall("W5", (4000.0, 780.0), (4000.0, 6300.0), 100.0, Fate::Removed),
+            wall("W6", (4000.0, 3500.0), (8200.0, 3500.0), 100.0, Fate::Removed),
             wall("W7", (0.0, 4200.0), (4000.0, 4200.0), 215.0, Fate::Added),
         ],
         marks: vec![
-            PlanMark {
-                mark: "R1".into(),
-                from: (4000.0, 140.0),
-                to: (4000.0, 780.0),
-            },
-            PlanMark {
-                mark: "R2".into(),
-                from: (4000.0, 6300.0),
-                to: (4000.0, 6860.0),
-            },
+            PlanMark { mark: "R1".into(), from: (4000.0, 140.0), to: (4000.0, 780.0) },
+            PlanMark { mark: "R2".into(), from: (4000.0, 6300.0), to: (4000.0, 6860.0) },
         ],
         panels: vec![
-            PlanMark {
-                mark: "P1".into(),
-                from: (0.0, 0.0),
-                to: (4000.0, 0.0),
-            },
-            PlanMark {
-                mark: "P2".into(),
-                from: (8200.0, 0.0),
-                to: (8200.0, 7000.0),
-            },
+            PlanMark { mark: "P1".into(), from: (0.0, 0.0), to: (4000.0, 0.0) },
+            PlanMark { mark: "P2".into(), from: (8200.0, 0.0), to: (8200.0, 7000.0) },
         ],
-        beams: vec![PlanMark {
-            mark: "B1".into(),
-            from: (4000.0, 600.0),
-            to: (4000.0, 6450.0),
-        }],
+        beams: vec![PlanMark { mark: "B1".into(), from: (4000.0, 600.0), to: (4000.0, 6450.0) }],
         north: 20.0,
         winds: vec![PlanWind::Upwards, PlanWind::Downwards],
     }

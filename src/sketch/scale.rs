@@ -105,17 +105,12 @@ mod tests {
 
     #[test]
     fn drawings_to_be_compared_share_the_scale_of_the_larger() {
-        let both = fit_all(Frame::new(100.0, 100.0), 5.0, |s| {
-            [square(400.0)(s), square(4000.0)(s)]
-        });
+        let both = fit_all(Frame::new(100.0, 100.0), 5.0, |s| [square(400.0)(s), square(4000.0)(s)]);
         assert_eq!(both.map(|drawing| drawing.scale), ["1:50", "1:50"]);
     }
 
     #[test]
     fn what_never_fits_is_drawn_as_small_as_it_goes() {
-        assert_eq!(
-            fit(Frame::new(10.0, 10.0), 5.0, square(90_000.0)).scale,
-            "1:500"
-        );
+        assert_eq!(fit(Frame::new(10.0, 10.0), 5.0, square(90_000.0)).scale, "1:500");
     }
 }

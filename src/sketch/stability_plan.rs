@@ -53,22 +53,11 @@ fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
     }
     surroundings(&mut board, &view.walls, &[view.wind], None, scale, false);
     let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
-    let dashed = if has(Fate::Removed) {
-        "; dashed: removed"
-    } else {
-        ""
-    };
-    let crossed = if has(Fate::Added) {
-        "; crossed hatching: new"
-    } else {
-        ""
-    };
+    let dashed = if has(Fate::Removed) { "; dashed: removed" } else { "" };
+    let crossed = if has(Fate::Added) { "; crossed hatching: new" } else { "" };
     board.finish(Words {
         name: view.name.clone(),
-        caption: format!(
-            "Shares of the storey's wind, {}, before and after{dashed}{crossed}",
-            view.title
-        ),
+        caption: format!("Shares of the storey's wind, {}, before and after{dashed}{crossed}", view.title),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -76,9 +65,7 @@ fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
 
 /// The shares with their walls.
 fn bracing(view: &StabilityPlan) -> impl Iterator<Item = (&PlanWall, &Share)> {
-    view.shares
-        .iter()
-        .filter_map(|share| Some((view.walls.get(share.wall)?, share)))
+    view.shares.iter().filter_map(|share| Some((view.walls.get(share.wall)?, share)))
 }
 
 /// `before 24 %` and `after 31 %`; empty where there is nothing to say.
@@ -95,17 +82,11 @@ fn lines(share: &Share, fate: Fate) -> [String; 2] {
 }
 
 fn alt(view: &StabilityPlan) -> String {
-    let mut alt = format!(
-        "Plan of the {} with each bracing wall's share of the storey's wind. ",
-        view.title
-    );
+    let mut alt = format!("Plan of the {} with each bracing wall's share of the storey's wind. ", view.title);
     for (wall, share) in bracing(view) {
         alt += &match (&share.before, &share.after) {
             (Some(before), Some(after)) => {
-                format!(
-                    "{} takes {before} before and {after} after the removal. ",
-                    wall.name
-                )
+                format!("{} takes {before} before and {after} after the removal. ", wall.name)
             }
             (Some(before), None) => format!("{} takes {before} before the removal. ", wall.name),
             (None, Some(after)) => format!("{} takes {after} after the removal. ", wall.name),

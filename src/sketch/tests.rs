@@ -16,16 +16,10 @@ pub fn sound(drawing: &Drawing) {
     let valid = |c: char| c.is_ascii_alphanumeric() || c == '-';
     assert!(drawing.name.chars().all(valid), "{}", drawing.name);
     assert!(drawing.labels().all(|label| label.size >= 7.5));
-    let areas: Vec<_> = drawing
-        .labels()
-        .map(|label| (label.plain(), label.area()))
-        .collect();
+    let areas: Vec<_> = drawing.labels().map(|label| (label.plain(), label.area())).collect();
     for (index, (text, area)) in areas.iter().enumerate() {
         assert!(
-            area.x0 >= 0.0
-                && area.y0 >= 0.0
-                && area.x1 <= drawing.width
-                && area.y1 <= drawing.height,
+            area.x0 >= 0.0 && area.y0 >= 0.0 && area.x1 <= drawing.width && area.y1 <= drawing.height,
             "{text:?} leaves the frame of {}",
             drawing.name
         );
@@ -38,11 +32,7 @@ pub fn sound(drawing: &Drawing) {
             );
         }
         for value in numbers(text) {
-            assert!(
-                drawing.alt.contains(&value),
-                "{value} of {text:?} is not spoken: {}",
-                drawing.alt
-            );
+            assert!(drawing.alt.contains(&value), "{value} of {text:?} is not spoken: {}", drawing.alt);
         }
     }
     let lines = crossings(drawing, |pen| pen.keeps_labels_off() && pen != Pen::Leader);
@@ -63,19 +53,10 @@ fn crossings(drawing: &Drawing, chosen: impl Fn(Pen) -> bool) -> Vec<String> {
         Item::Stroke { pen, path } if chosen(*pen) => Some(path),
         _ => None,
     });
-    let lines: Vec<_> = strokes
-        .flat_map(|path| path.0.segments().filter_map(|segment| segment.as_line()))
-        .collect();
-    let crossed = |label: &&drawing::Label| {
-        lines
-            .iter()
-            .any(|line| crosses(*line, label.area().inset(-0.1)))
-    };
-    drawing
-        .labels()
-        .filter(crossed)
-        .map(|label| label.plain())
-        .collect()
+    let lines: Vec<_> =
+        strokes.flat_map(|path| path.0.segments().filter_map(|segment| segment.as_line())).collect();
+    let crossed = |label: &&drawing::Label| lines.iter().any(|line| crosses(*line, label.area().inset(-0.1)));
+    drawing.labels().filter(crossed).map(|label| label.plain()).collect()
 }
 
 fn numbers(text: &str) -> Vec<String> {
@@ -96,10 +77,7 @@ fn elevation_of_a_return() {
     view.prop = Some("W3 and W4".into());
     view.dpc = false;
     view.head_moment = None;
-    view.wall_layers = vec![Layer::Leaf {
-        thickness: 215.0,
-        material: hatch::Material::Brick,
-    }];
+    view.wall_layers = vec![Layer::Leaf { thickness: 215.0, material: hatch::Material::Brick }];
     for (x, n) in [(100.0, 3), (150.0, 4), (200.0, 5)] {
         let action = Action::new(&format!("N_{n}"), "4.2 kN", "joists");
         view.loads.push(PlacedLoad { x, action });
@@ -160,14 +138,8 @@ fn awkward_cases_are_sound() {
     });
     let mut tall = section();
     tall.mark = "R4".into();
-    (tall.length, tall.flange, tall.wall) = (
-        2400.0,
-        Some(Flange {
-            width: 1200.0,
-            thickness: 100.0,
-        }),
-        Side::Right,
-    );
+    (tall.length, tall.flange, tall.wall) =
+        (2400.0, Some(Flange { width: 1200.0, thickness: 100.0 }), Side::Right);
     let [mut narrow, mut wide] = panels();
     (narrow.mark, narrow.length, narrow.height) = ("P2".into(), 800.0, 4000.0);
     narrow.openings.clear();
@@ -177,18 +149,8 @@ fn awkward_cases_are_sound() {
     crowded.name = "crowded-plan".into();
     for i in 0..6 {
         let y = 900.0 + 450.0 * f64::from(i);
-        let fate = if i % 2 == 0 {
-            Fate::Stays
-        } else {
-            Fate::Removed
-        };
-        crowded.walls.push(wall(
-            &format!("W{}", 8 + i),
-            (4000.0, y),
-            (8200.0, y),
-            100.0,
-            fate,
-        ));
+        let fate = if i % 2 == 0 { Fate::Stays } else { Fate::Removed };
+        crowded.walls.push(wall(&format!("W{}", 8 + i), (4000.0, y), (8200.0, y), 100.0, fate));
     }
     let drawings = [
         return_elevation(&short, FRAME),
@@ -222,11 +184,6 @@ fn small_frames_are_kept() {
     for drawing in &drawings {
         show(drawing, "-small");
         tidy(drawing);
-        assert!(
-            drawing.width <= column.width,
-            "{} is {} wide",
-            drawing.name,
-            drawing.width
-        );
+        assert!(drawing.width <= column.width, "{} is {} wide", drawing.name, drawing.width);
     }
 }

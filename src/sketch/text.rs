@@ -62,16 +62,9 @@ impl Text {
     /// A symbol by its name: `N_Ed` is an italic N with an upright subscript, `sigma_d` a sigma.
     pub fn symbol(name: &str) -> Self {
         let (base, sub) = name.split_once('_').unwrap_or((name, ""));
-        let base = GREEK
-            .iter()
-            .find(|(word, _)| *word == base)
-            .map_or(base, |(_, letter)| letter);
+        let base = GREEK.iter().find(|(word, _)| *word == base).map_or(base, |(_, letter)| letter);
         let text = Self::default().and(base, Style::Italic);
-        if sub.is_empty() {
-            text
-        } else {
-            text.and(sub, Style::Sub)
-        }
+        if sub.is_empty() { text } else { text.and(sub, Style::Sub) }
     }
 
     /// `symbol = value`; the value alone where there is no symbol.
@@ -84,21 +77,14 @@ impl Text {
 
     /// The same line with a further run.
     pub fn and(mut self, text: &str, style: Style) -> Self {
-        self.0.push(Run {
-            text: text.to_owned(),
-            style,
-        });
+        self.0.push(Run { text: text.to_owned(), style });
         self
     }
 
     /// The paper this line takes at `size` pt.
     pub fn extent(&self, size: f64) -> Extent {
         let em = size * POINT;
-        let mut extent = Extent {
-            width: 0.0,
-            ascent: cap_height() * em,
-            descent: 0.0,
-        };
+        let mut extent = Extent { width: 0.0, ascent: cap_height() * em, descent: 0.0 };
         for run in &self.0 {
             let (size, drop) = match run.style {
                 Style::Sub => (em * SUB_SIZE, em * SUB_DROP),
@@ -106,11 +92,7 @@ impl Text {
             };
             let face = face(run.style);
             let unit = size / f64::from(face.units_per_em());
-            for glyph in run
-                .text
-                .chars()
-                .map(|c| face.glyph_index(c).unwrap_or_default())
-            {
+            for glyph in run.text.chars().map(|c| face.glyph_index(c).unwrap_or_default()) {
                 extent.width += unit * f64::from(face.glyph_hor_advance(glyph).unwrap_or(0));
                 if let Some(ink) = face.glyph_bounding_box(glyph) {
                     extent.ascent = extent.ascent.max(unit * f64::from(ink.y_max) - drop);
@@ -156,10 +138,7 @@ mod tests {
         let needed = "0123456789.,:;()=+-−×·/%²³°–αβγηλμνρστψΦABCDEFGHIJKLMNOPQRSTUVWXYZ abcdefghijklmnopqrstuvwxyz\u{202f}\u{a0}";
         for c in needed.chars() {
             for style in [Style::Plain, Style::Bold] {
-                assert!(
-                    face(style).glyph_index(c).is_some(),
-                    "no glyph for {c:?} in {style:?}"
-                );
+                assert!(face(style).glyph_index(c).is_some(), "no glyph for {c:?} in {style:?}");
             }
         }
     }
@@ -167,20 +146,8 @@ mod tests {
     #[test]
     fn a_symbol_is_an_italic_base_and_an_upright_subscript() {
         let text = Text::symbol("sigma_d");
-        assert_eq!(
-            text.0[0],
-            Run {
-                text: "σ".into(),
-                style: Style::Italic
-            }
-        );
-        assert_eq!(
-            text.0[1],
-            Run {
-                text: "d".into(),
-                style: Style::Sub
-            }
-        );
+        assert_eq!(text.0[0], Run { text: "σ".into(), style: Style::Italic });
+        assert_eq!(text.0[1], Run { text: "d".into(), style: Style::Sub });
         assert_eq!(Text::symbol("H").0.len(), 1);
     }
 

@@ -72,15 +72,8 @@ pub fn layer_words(layers: &[Layer]) -> String {
     let words: Vec<String> = layers
         .iter()
         .map(|layer| match layer {
-            Layer::Leaf {
-                thickness,
-                material,
-            } => {
-                format!(
-                    "{} mm {}",
-                    super::dimension::mm(*thickness),
-                    material.word()
-                )
+            Layer::Leaf { thickness, material } => {
+                format!("{} mm {}", super::dimension::mm(*thickness), material.word())
             }
             Layer::Cavity { width } => format!("{} mm cavity", super::dimension::mm(*width)),
         })
@@ -90,31 +83,20 @@ pub fn layer_words(layers: &[Layer]) -> String {
 
 /// What the hatching stands for: `; single hatching: brick, paired: block`.
 pub(super) fn hatch_key(layers: &[Layer]) -> String {
-    let has = |wanted| {
-        layers
-            .iter()
-            .any(|l| matches!(l, Layer::Leaf { material, .. } if *material == wanted))
-    };
+    let has =
+        |wanted| layers.iter().any(|l| matches!(l, Layer::Leaf { material, .. } if *material == wanted));
     let kinds = [
         (Material::Brick, "single hatching: brick"),
         (Material::Block, "paired hatching: block"),
         (Material::Concrete, "strewn strokes: concrete"),
     ];
-    kinds
-        .iter()
-        .filter(|(kind, _)| has(*kind))
-        .map(|(_, words)| format!("; {words}"))
-        .collect()
+    kinds.iter().filter(|(kind, _)| has(*kind)).map(|(_, words)| format!("; {words}")).collect()
 }
 
 impl Action {
     /// An action of symbol, value and origin.
     pub fn new(symbol: &str, value: &str, words: &str) -> Self {
-        Self {
-            symbol: symbol.into(),
-            value: value.into(),
-            words: words.into(),
-        }
+        Self { symbol: symbol.into(), value: value.into(), words: words.into() }
     }
 
     /// `N_1 = 42.0 kN`.
@@ -128,11 +110,7 @@ impl Action {
             true => self.value.clone(),
             false => format!("{} = {}", self.symbol.replace('_', ""), self.value),
         };
-        if self.words.is_empty() {
-            value
-        } else {
-            format!("{value} ({})", self.words)
-        }
+        if self.words.is_empty() { value } else { format!("{value} ({})", self.words) }
     }
 }
 
@@ -146,10 +124,7 @@ pub(super) struct Ruler {
 
 impl Ruler {
     pub fn new(scale: Scale, wall: Side) -> Self {
-        Self {
-            scale,
-            hand: if wall == Side::Left { 1.0 } else { -1.0 },
-        }
+        Self { scale, hand: if wall == Side::Left { 1.0 } else { -1.0 } }
     }
 
     /// A full-size place on the paper.

@@ -1,5 +1,7 @@
 //! National values: everything a National Annex may choose, in one struct that is passed, never global.
 
+use super::tables::{compressive, gamma_m, wind};
+
 /// National values of EN 1990, EN 1991-1-4 and EN 1996-1-1.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Annex {
@@ -23,8 +25,16 @@ pub struct Annex {
     pub k_tef: f64,
     /// Material factor on wall ties, Table NA.1.
     pub gamma_M_ties: f64,
-    /// Factor on f_vk0 where perpends are not filled, 3.6.2(4).
-    pub unfilled_factor: f64,
+    /// Least mortar strength that no longer adds to f_k, N/mm², 3.6.1.2(2).
+    pub f_m_limit: f64,
+    /// Least unit strength that no longer adds to f_k, N/mm², 3.6.1.2(2).
+    pub f_b_limit: f64,
+    /// Limit of f_vk over f_b, perpends filled, 3.6.2(3).
+    pub shear_limit: f64,
+    /// Limit of f_vk over f_b, perpends not filled, 3.6.2(4).
+    pub shear_limit_unfilled: f64,
+    /// Modulus of elasticity over f_k, 3.7.2(2).
+    pub E_over_f_k: f64,
 }
 
 impl Annex {
@@ -36,10 +46,14 @@ impl Annex {
         gamma_Q: 1.5,
         psi_0_imposed: 0.7,
         psi_0_wind: 0.5,
-        rho_air: 1.226,
+        rho_air: wind::AIR_DENSITY_UK,
         slenderness_limit: 27.0,
         k_tef: 1.0,
-        gamma_M_ties: 3.0,
-        unfilled_factor: 0.5,
+        gamma_M_ties: gamma_m::WALL_TIES,
+        f_m_limit: compressive::F_M_LIMIT,
+        f_b_limit: compressive::F_B_LIMIT,
+        shear_limit: 0.065,
+        shear_limit_unfilled: 0.045,
+        E_over_f_k: 1000.0,
     };
 }

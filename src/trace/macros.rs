@@ -18,9 +18,14 @@ macro_rules! symbols {
     ($($f:tt)+) => { $crate::symbols!(@ [] $($f)+) };
 }
 
-/// `given!(s, "words", "where from", l = value)`: an input.
+/// `given!(s, "words", "where from", l = value)`: an input; without `= value` for what is bound already.
 #[macro_export]
 macro_rules! given {
+    ($s:expr, $words:expr, $source:expr, $name:ident) => {
+        if $s.recording() {
+            $s.given(stringify!($name), $words, $source, $crate::trace::Traced::traced(&$name));
+        }
+    };
     ($s:expr, $words:expr, $source:expr, $name:ident = $value:expr) => {
         let $name = $value;
         if $s.recording() {

@@ -116,7 +116,8 @@ impl Sheet {
     }
 
     /// Notes a check that left its range.
-    pub fn leave(&mut self, outside: Outside) {
+    pub fn leave(&mut self, mut outside: Outside) {
+        outside.id = self.unique(&outside.id);
         self.push(|| Entry::Outside(outside.clone()));
         self.outside.push(outside);
     }
@@ -230,7 +231,7 @@ impl Sheet {
             }
         }
         let verdict = Verdict {
-            id: id.to_owned(),
+            id: self.unique(id),
             words: words.to_owned(),
             clause: clause.to_owned(),
             demand: Value { name: demand.0.to_owned(), value: demand.1 },
@@ -242,6 +243,16 @@ impl Sheet {
         self.push(|| Entry::Verify(verdict.clone()));
         self.verdicts.push(verdict);
         ratio
+    }
+
+    /// An id that nothing on this sheet has yet.
+    fn unique(&self, id: &str) -> String {
+        let taken =
+            |id: &str| self.verdicts.iter().any(|v| v.id == id) || self.outside.iter().any(|o| o.id == id);
+        if !taken(id) {
+            return id.to_owned();
+        }
+        (2..).map(|n| format!("{id}-{n}")).find(|id| !taken(id)).unwrap_or_default()
     }
 
     /// Notes a broken lock.

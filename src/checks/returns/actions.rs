@@ -81,6 +81,8 @@ pub struct Actions {
     pub V_Ed: Force,
     /// Pressed edge.
     pub toe: Toe,
+    /// N acts between mid-length and the junction, or beyond it: M turns towards the junction.
+    pub back: bool,
     /// Flange that acts, with its thickness; foot only.
     pub flange: Option<Flange>,
     /// Factor on dead load in this case.
@@ -102,10 +104,10 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
     let (gamma_G, gamma_Q, gamma_W) = factors(s, case, annex, m.helping);
     let Vertical { G, Q, U, S_G, S_Q, S_U, .. } = m.vertical(at);
     let source = "load table of this sheet";
-    given!(s, "dead load at the section, own weight above included", source, G = G);
-    given!(s, "imposed load", source, Q = Q);
-    given!(s, "first moment of the dead load about mid-length", source, S_G = S_G);
-    given!(s, "first moment of the imposed load", source, S_Q = S_Q);
+    given!(s, "dead load at the section, own weight above included", source, G);
+    given!(s, "imposed load", source, Q);
+    given!(s, "first moment of the dead load about mid-length", source, S_G);
+    given!(s, "first moment of the imposed load", source, S_Q);
     let (N_Ed, M_N) = if U == Force::ZERO {
         calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
         calc!(s, "statics", "moment of the vertical loads", M_N = gamma_G * S_G + gamma_Q * S_Q);
@@ -113,8 +115,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
     } else {
         let f = case.combination.factors(annex, m.helping);
         given!(s, "factor on roof uplift", case.combination.clause(), gamma_U = Num::new(f.gamma_U));
-        given!(s, "roof uplift", source, U = U);
-        given!(s, "first moment of the uplift", source, S_U = S_U);
+        given!(s, "roof uplift", source, U);
+        given!(s, "first moment of the uplift", source, S_U);
         calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q - gamma_U * U);
         calc!(
             s,
@@ -135,7 +137,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         calc!(s, "statics", "moment in plane about mid-length", M_Ed = abs(M_N - M_W));
         M_Ed
     };
-    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), flange, gamma_G }
+    let back = signed < Moment::ZERO;
+    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), back, flange, gamma_G }
 }
 
 /// The edge on whose side of the section's centroid the resultant acts.
@@ -213,11 +216,21 @@ fn cantilever(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
             M_W
         }
         (_, true, false) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = H_Ed * h + w_Ed * sq(h) / 2.0);
+            calc!(
+                s,
+                "statics, head free",
+                "moment of the lateral loads",
+                M_W = H_Ed * h + w_Ed * sq(h) / 2.0
+            );
             M_W
         }
         (_, false, false) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0);
+            calc!(
+                s,
+                "statics, head free",
+                "moment of the lateral loads",
+                M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0
+            );
             M_W
         }
     }
@@ -269,9 +282,9 @@ fn shear(s: &mut Sheet, m: &Model, d: Design, at: At) -> Force {
 /// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.
 fn tilt(s: &mut Sheet, m: &Model) -> Force {
     let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
-    given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu = G_nu);
-    given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu = Q_nu);
-    given!(s, "height of the structure, in m in the next line", "job file", h_tot = h_tot);
+    given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
+    given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
+    given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
     calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (1.35 * G_nu + 1.5 * Q_nu));
     H_nu

@@ -10,7 +10,7 @@ use crate::standards::annex::Annex;
 use crate::standards::en1996::flange::{self, Side};
 use crate::standards::en1996::slenderness::Stiffened;
 use crate::trace::{Column, Outside, Sheet, Table};
-use crate::{calc, given};
+use crate::{calc, decide, given};
 
 /// What a return is checked with.
 #[derive(Clone, Copy)]
@@ -89,7 +89,7 @@ fn leaf(
     let masonry = strengths(s, i, build_up, k)?;
     given!(s, "weight of the masonry", "job file", g_m = masonry.density);
     calc!(s, "statics", "own weight of the leaf", G_w = g_m * l * t * h);
-    let flange = flange(s, i, h, l, t);
+    let flange = flange(s, i, h, t);
     let loads: Vec<&Load> = r.loads.iter().filter(|x| x.leaf == k).collect();
     let stretch = l / r.length;
     let mut at_head = Vertical::default();
@@ -104,7 +104,7 @@ fn leaf(
         at_head.T_Q = at_head.T_Q + x.imposed * x.eccentricity;
     }
     let at_head = at_head.with_dead(change.dead, Length::ZERO);
-    let bonded = r.junction.bonded;
+    let stiffened = if stiffened(s, i, h, t) { Stiffened::One } else { Stiffened::None };
     let m = Model {
         leaf: String::new(),
         l,
@@ -112,7 +112,7 @@ fn leaf(
         h,
         t_other: build_up.leaves.iter().enumerate().find(|(n, _)| *n != k).map(|(_, o)| o.thickness),
         rho_2: restraint(r, &at_head, t),
-        stiffened: if bonded { Stiffened::One } else { Stiffened::None },
+        stiffened,
         masonry,
         at_head,
         own: G_w,
@@ -134,7 +134,8 @@ fn strengths(s: &mut Sheet, i: &Inputs<'_>, build_up: &BuildUp, k: usize) -> Res
     let Some(material) = i.building.material(&this.material) else {
         return Err(Outside::new("material", "job file", "the material is not given"));
     };
-    let found = masonry::derive(&mut Sheet::silent(), i.building, material, build_up, this.thickness)?;
+    let found =
+        masonry::derive(&mut Sheet::silent(), i.building, i.annex, material, build_up, this.thickness)?;
     let source = format!("materials sheet, {}", found.name);
     given!(s, "normalised unit strength", &source, f_b = found.f_b);
     given!(s, "characteristic compressive strength", &source, f_k = found.f_k);
@@ -142,16 +143,28 @@ fn strengths(s: &mut Sheet, i: &Inputs<'_>, build_up: &BuildUp, k: usize) -> Res
     Ok(found)
 }
 
+/// Whether the wall met stiffens the edge of the return: bonded, and long and thick enough, 5.5.1.2(5).
+fn stiffened(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> bool {
+    let j = &i.ret.junction;
+    if !j.bonded {
+        return false;
+    }
+    given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
+    given!(s, "length of the wall met, both sides", "job file", L_w = j.left + j.right);
+    let long = decide!(s, "5.5.1.2(5)", "long enough to stiffen", "too short to stiffen", L_w >= h / 5.0);
+    let thick = decide!(s, "5.5.1.2(5)", "thick enough to stiffen", "too thin to stiffen", t_f >= 0.3 * t);
+    long && thick
+}
+
 /// The flange that may be counted, where the junction is bonded: 5.5.3.
-fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, l: Length, t: Length) -> Option<Flange> {
+fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> Option<Flange> {
     let j = &i.ret.junction;
     if !j.bonded {
         return None;
     }
     let h_tot = i.building.storey(&i.ret.storey).map_or(h, |x| x.total_height);
-    let _ = l;
     given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
-    given!(s, "height to the top of the structure", "job file", h_tot = h_tot);
+    given!(s, "height to the top of the structure", "job file", h_tot);
     let b_L = flange::left(s, Side { to_end: j.left, to_next: j.next_wall_left }, h_tot, h, t_f);
     let b_R = flange::right(s, Side { to_end: j.right, to_next: j.next_wall_right }, h_tot, h, t_f);
     calc!(s, "5.5.3", "width of the flange that counts", b_f = b_L + t + b_R);
@@ -254,6 +267,20 @@ fn lateral(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> L
     given!(s, "wind from the storeys above", "job file", F_a = r.from_above.force * wind);
     let H_k = head_force(s, r, part, q_net, b_t, F_a, wind);
     given!(s, "moment from the storeys above", "job file", M_k = r.from_above.moment * wind);
+    let received = received(i, wind);
+    let H_k = if received.force > Force::ZERO {
+        given!(s, "force at the head of its own", "above", H_o = H_k);
+        given!(
+            s,
+            "reaction of the heads that this wall holds",
+            received.words.as_str(),
+            R_k = received.force
+        );
+        calc!(s, "statics", "force at the head with these reactions", H_k = H_o + R_k);
+        H_k
+    } else {
+        H_k
+    };
     let (w_k, H_k, M_k) = if share < 1.0 {
         given!(
             s,
@@ -273,13 +300,84 @@ fn lateral(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> L
     };
     let h_nu = i.building.storey(&r.storey).map_or(m.h, |x| x.total_height);
     let (G_nu, Q_nu) = match part {
-        Some((st, p)) => (st.dead * p * share, st.imposed * p * share),
+        Some((st, p)) => ((st.dead * p + received.dead) * share, (st.imposed * p + received.imposed) * share),
         None => {
             let foot = m.vertical(super::model::At::Foot);
             (foot.G, foot.Q)
         }
     };
     Lateral { w_k, H_k, M_k, G_nu, Q_nu, h_nu }
+}
+
+/// What the heads of other returns, held by this one, add to it.
+#[derive(Default)]
+struct Received {
+    force: Force,
+    dead: Force,
+    imposed: Force,
+    words: String,
+}
+
+/// Reactions of the returns that name this one as what holds their head, at characteristic value. A
+/// head held by several walls leans on each of them alike.
+fn received(i: &Inputs<'_>, wind: f64) -> Received {
+    let mut out = Received::default();
+    if matches!(i.ret.head, Head::Propped(_)) {
+        // A head that is held passes its force on; it holds nobody.
+        return out;
+    }
+    for other in &i.building.returns {
+        let Head::Propped(walls) = &other.head else { continue };
+        if !walls.contains(&i.ret.mark) {
+            continue;
+        }
+        if let Some(r) = reaction(&Inputs { ret: other, ..*i }, wind) {
+            let part = 1.0 / walls.len() as f64;
+            out.force = out.force + r.force * part;
+            out.dead = out.dead + r.dead * part;
+            out.imposed = out.imposed + r.imposed * part;
+            out.words = if out.words.is_empty() {
+                other.mark.clone()
+            } else {
+                format!("{}, {}", out.words, other.mark)
+            };
+        }
+    }
+    out
+}
+
+/// The head reaction of a return whose head is held, at characteristic value, and what leans on it.
+fn reaction(i: &Inputs<'_>, wind: f64) -> Option<Received> {
+    let change = Change { wind, ..Change::NONE };
+    let all = models(&mut Sheet::silent(), i, change).ok()?;
+    let mut out = Received { words: i.ret.mark.clone(), ..Received::default() };
+    for m in all {
+        let l = m.lateral;
+        out.force = out.force + l.H_k + l.w_k * m.h / 2.0;
+        out.dead = out.dead + l.G_nu;
+        out.imposed = out.imposed + l.Q_nu;
+    }
+    Some(out)
+}
+
+/// The design reaction at a head that is held: wind and tilt, for the walls named.
+pub fn head_reaction(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
+    let h = m.h;
+    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
+    let d = super::actions::design(s, m, gamma_W);
+    let (H_Ed, w_Ed) = (d.H_Ed, d.w_Ed);
+    if w_Ed > LineLoad::ZERO {
+        calc!(
+            s,
+            "statics, head held",
+            "reaction at the head, on the walls that hold it",
+            R_Ed = H_Ed + w_Ed * h / 2.0
+        );
+        R_Ed
+    } else {
+        calc!(s, "statics, head held", "reaction at the head, on the walls that hold it", R_Ed = H_Ed);
+        R_Ed
+    }
 }
 
 fn head_force(

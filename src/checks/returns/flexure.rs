@@ -13,12 +13,21 @@ use crate::{calc, given, verify};
 fn resistance(s: &mut Sheet, m: &Model, a: &Actions, f_d: Stress) -> Moment {
     let (l, t) = (m.l, m.t);
     s.note("The in-plane use of f_xk1 has no clause of its own: 6.3.1 is applied by analogy.");
-    given!(s, "flexural strength, failure parallel to the bed joints", "materials sheet", f_xk1 = m.masonry.f_xk1);
+    given!(
+        s,
+        "flexural strength, failure parallel to the bed joints",
+        "materials sheet",
+        f_xk1 = m.masonry.f_xk1
+    );
     given!(s, "material factor, flexure", m.masonry.gamma_f_source.as_str(), gamma_Mf = m.masonry.gamma_f);
     given!(s, "dead load at the section", "load table", G = m.vertical(a.at).G);
     given!(s, "helping factor", "basis of this job", gamma_h = Num::new(m.helping));
-    calc!(s, "6.3.1(4), by analogy", "stress from dead load that helps, at most 0.2 f_d",
-        sigma_h = min(gamma_h * G / (t * l), 0.2 * f_d));
+    calc!(
+        s,
+        "6.3.1(4), by analogy",
+        "stress from dead load that helps, at most 0.2 f_d",
+        sigma_h = min(gamma_h * G / (t * l), 0.2 * f_d)
+    );
     calc!(s, "geometry", "section modulus", Z = t * sq(l) / 6.0);
     calc!(s, "6.3.1 eq. 6.16, by analogy", "resistance in flexure", M_Rd = (f_xk1 / gamma_Mf + sigma_h) * Z);
     M_Rd

@@ -46,6 +46,11 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         if !m.leaf.is_empty() {
             s.heading(1, format!("{}leaf", m.leaf.replace('-', " ")));
         }
+        if m.propped {
+            s.heading(1, "What the head leans on");
+            build::head_reaction(s, &m, i.annex);
+            held_by(s, i);
+        }
         s.heading(1, "Strength and slenderness");
         let matrix = run::prepare(s, &m, i.annex).map(|ready| {
             let matrix = run::Matrix::run(&m, i.annex, ready);
@@ -74,21 +79,37 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
 fn remarks(s: &mut Sheet, i: &Inputs<'_>) {
     let r = i.ret;
     if r.base == BaseJoint::Bonded {
-        s.note(format!("No damp-proof course crosses the foot: {}.", r.base_reason));
-    }
-    if let Head::Propped(walls) = &r.head {
-        s.note(format!(
-            "The head is held in plane by {}. The reaction there is added to the load of those walls.",
-            walls.join(", ")
-        ));
+        s.note(format!("No damp-proof course crosses the foot: {}.", r.base_reason.trim_end_matches('.')));
     }
     if r.junction.bonded {
         let word = if r.junction.proof == Proof::Assumed { "assumed to be bonded" } else { "bonded" };
-        s.note(format!("The junction with {} is {word}: {}.", r.junction.to, r.junction.words));
+        let words = r.junction.words.trim_end_matches('.');
+        s.note(format!("The junction with {} is {word}: {words}.", r.junction.to));
         s.note(
             "A flange on one side only bends the return across its plane as well; that is left out. The least \
              reduction across the wall found for the return is used for the flange too.",
         );
+    }
+}
+
+/// Who holds the head, and where that is checked.
+fn held_by(s: &mut Sheet, i: &Inputs<'_>) {
+    let Head::Propped(walls) = &i.ret.head else { return };
+    let (here, elsewhere): (Vec<&String>, Vec<&String>) =
+        walls.iter().partition(|w| i.building.returns.iter().any(|r| r.mark == **w));
+    let join = |v: &[&String]| v.iter().map(|w| w.as_str()).collect::<Vec<_>>().join(", ");
+    if !here.is_empty() {
+        s.note(format!(
+            "The head is held in plane by {}: the reaction is added to their load, in equal parts.",
+            join(&here)
+        ));
+    }
+    if !elsewhere.is_empty() {
+        s.note(format!(
+            "The head is held in plane by {}, which this pack does not check: the reaction is to be carried there as \
+             well, and the chain sheet says how that is known.",
+            join(&elsewhere)
+        ));
     }
 }
 

@@ -4,10 +4,10 @@ use super::actions::{self, Case, Direction};
 use super::model::{At, Model};
 use super::vertical::{Reductions, Slender};
 use super::{flexure, in_plane, sliding, vertical};
+use crate::given;
 use crate::quantity::{Num, Stress, print};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
-use crate::given;
 use crate::trace::{Column, Sheet, Table};
 
 /// One check of a return in one case. The order is the order on the sheet.
@@ -152,10 +152,8 @@ impl Matrix {
     /// Runs everything on silent sheets.
     pub fn run(m: &Model, annex: &Annex, ready: Ready) -> Self {
         let cases = Case::all();
-        let checks: Vec<Check> = Check::ALL
-            .into_iter()
-            .filter(|c| c.applies(m) && *c != Check::Flexure)
-            .collect();
+        let checks: Vec<Check> =
+            Check::ALL.into_iter().filter(|c| c.applies(m) && *c != Check::Flexure).collect();
         let ratio = |case: Case, check: Check| {
             let mut s = Sheet::silent();
             work(&mut s, m, annex, ready, case, &[check], "");
@@ -259,7 +257,12 @@ fn least(s: &mut Sheet, reductions: Option<Reductions>) -> Num {
     match reductions {
         Some(r) => r.least(s),
         None => {
-            given!(s, "reduction across the wall: slenderness is outside the method", "this sheet", Phi = Num::new(1.0));
+            given!(
+                s,
+                "reduction across the wall: slenderness is outside the method",
+                "this sheet",
+                Phi = Num::new(1.0)
+            );
             Phi
         }
     }
@@ -283,7 +286,9 @@ fn work(
         .collect();
     let reductions = ready
         .slender
-        .filter(|_| !vertical_checks.is_empty() || checks.iter().any(|c| matches!(c, Check::Toe | Check::Middle)))
+        .filter(|_| {
+            !vertical_checks.is_empty() || checks.iter().any(|c| matches!(c, Check::Toe | Check::Middle))
+        })
         .map(|sl| vertical::reductions(s, m, sl, annex, case));
     for at in [At::Foot, At::Middle, At::Head] {
         let here: Vec<Check> =
@@ -297,7 +302,9 @@ fn work(
         }
         let stressed = here
             .iter()
-            .any(|c| matches!(c, Check::Toe | Check::Shear | Check::ShearHead | Check::Junction | Check::Middle))
+            .any(|c| {
+                matches!(c, Check::Toe | Check::Shear | Check::ShearHead | Check::Junction | Check::Middle)
+            })
             .then(|| in_plane::stresses(s, m, &a));
         for check in here {
             let id = id(check);
@@ -306,7 +313,7 @@ fn work(
                     let phi = least(s, reductions);
                     in_plane::toe(s, &a, st, phi, ready.f_d, &id);
                 }
-                (Check::Shear | Check::ShearHead, Some(st)) => sliding::shear(s, m, &a, st, &id),
+                (Check::Shear | Check::ShearHead, Some(st)) => sliding::shear(s, m, annex, &a, st, &id),
                 (Check::Junction, Some(st)) => {
                     if let Some(f) = a.flange {
                         sliding::junction(s, m, f, &a, st, &id);

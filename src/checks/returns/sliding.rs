@@ -5,12 +5,13 @@ use super::in_plane::Stressed;
 use super::model::{At, Flange, Model};
 use crate::quantity::functions::abs;
 use crate::quantity::{Force, Length, Stress};
+use crate::standards::annex::Annex;
 use crate::standards::en1996::shear as clause;
 use crate::trace::Sheet;
 use crate::{calc, given, verify};
 
 /// Shear on the compressed length: 6.2 with 3.6.2. At a damp-proof course f_vk0 is nil unless tested.
-pub fn shear(s: &mut Sheet, m: &Model, a: &Actions, st: &Stressed, id: &str) {
+pub fn shear(s: &mut Sheet, m: &Model, annex: &Annex, a: &Actions, st: &Stressed, id: &str) {
     let (t, V_Ed, l_c) = (m.t, a.V_Ed, st.l_c);
     let f_b = m.masonry.f_b;
     let words = if a.at == At::Head { "shear in plane at the head" } else { "shear in plane at the foot" };
@@ -41,7 +42,7 @@ pub fn shear(s: &mut Sheet, m: &Model, a: &Actions, st: &Stressed, id: &str) {
         calc!(s, "3.6.2(3)", "compressive stress over the compressed length", sigma_d = N_Ed / (t * l_c));
         sigma_d
     };
-    let f_vd = clause::design_strength(s, m.masonry.perpends_filled, f_vk0, sigma_d, f_b, gamma_Mv);
+    let f_vd = clause::design_strength(s, annex, m.masonry.perpends_filled, f_vk0, sigma_d, f_b, gamma_Mv);
     calc!(s, "6.2(2) eq. 6.13", "shear resistance", V_Rd = f_vd * t * l_c);
     verify!(s, id, "6.2(1) eq. 6.12", words, V_Ed <= V_Rd);
 }

@@ -93,19 +93,28 @@ pub fn reductions(s: &mut Sheet, m: &Model, sl: Slender, annex: &Annex, case: Ca
     let v = m.vertical(At::Head);
     let central = v.T_G == Moment::ZERO && v.T_Q == Moment::ZERO;
     let e_h = if central || v.G + v.Q <= Force::ZERO {
-        given!(s, "eccentricity of the loads at the head", "load table: all loads central", e_h = Length::ZERO);
+        given!(
+            s,
+            "eccentricity of the loads at the head",
+            "load table: all loads central",
+            e_h = Length::ZERO
+        );
         e_h
     } else {
         given!(s, "dead load at the head", "load table", G_h = v.G);
         given!(s, "imposed load at the head", "load table", Q_h = v.Q);
         given!(s, "moment of the dead load across the wall", "load table", T_G = v.T_G);
         given!(s, "moment of the imposed load across the wall", "load table", T_Q = v.T_Q);
-        calc!(s, "6.1.2.2(1)", "eccentricity of the loads at the head",
-            e_h = abs(gamma_G * T_G + gamma_Q * T_Q) / (gamma_G * G_h + gamma_Q * Q_h));
+        calc!(
+            s,
+            "6.1.2.2(1)",
+            "eccentricity of the loads at the head",
+            e_h = abs(gamma_G * T_G + gamma_Q * T_Q) / (gamma_G * G_h + gamma_Q * Q_h)
+        );
         e_h
     };
     let head = reduction::at_head(s, t, e_init, e_h);
-    let middle = reduction::in_middle(s, t, sl.t_ef, sl.h_ef, e_init, e_h, f_k);
+    let middle = reduction::in_middle(s, annex, t, sl.t_ef, sl.h_ef, e_init, e_h, f_k);
     let foot = reduction::at_foot(s, t, e_init);
     Reductions { head, middle, foot }
 }

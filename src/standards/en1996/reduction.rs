@@ -2,8 +2,9 @@
 
 use crate::quantity::functions::{exp, max, sq, sqrt};
 use crate::quantity::{Length, Num, Stress};
+use crate::standards::annex::Annex;
 use crate::trace::Sheet;
-use crate::calc;
+use crate::{calc, given};
 
 /// Phi at the head, from the eccentricity `e_h = M_id/N_id` of the loads there.
 ///
@@ -29,6 +30,7 @@ pub fn at_foot(s: &mut Sheet, t: Length, e_init: Length) -> Num {
 /// is nil up to a slenderness of 27 (UK). From memory, check against the standard.
 pub fn in_middle(
     s: &mut Sheet,
+    annex: &Annex,
     t: Length,
     t_ef: Length,
     h_ef: Length,
@@ -36,9 +38,14 @@ pub fn in_middle(
     e_h: Length,
     f_k: Stress,
 ) -> Num {
-    calc!(s, "6.1.2.2(1) eq. 6.6", "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
-        e_mk = max(e_h / 2.0 + e_init, 0.05 * t));
-    calc!(s, "3.7.2(2)", "modulus of elasticity, UK", E = 1000.0 * f_k);
+    calc!(
+        s,
+        "6.1.2.2(1) eq. 6.6",
+        "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
+        e_mk = max(e_h / 2.0 + e_init, 0.05 * t)
+    );
+    given!(s, "modulus of elasticity over f_k", "3.7.2(2), UK NA", K_E = Num::new(annex.E_over_f_k));
+    calc!(s, "3.7.2(2)", "modulus of elasticity", E = K_E * f_k);
     calc!(s, "Annex G eq. G.4", "slenderness for Annex G", lambda = h_ef / t_ef * sqrt(f_k / E));
     calc!(s, "Annex G eq. G.3", "exponent", u = (lambda - 0.063) / (0.73 - 1.17 * e_mk / t));
     calc!(s, "Annex G eq. G.2", "factor for eccentricity", A_1 = 1.0 - 2.0 * e_mk / t);
@@ -55,6 +62,7 @@ mod tests {
         let e = Length::new(100.0 * e_over_t);
         in_middle(
             &mut Sheet::silent(),
+            &Annex::UK,
             t,
             t,
             Length::new(100.0 * slenderness),

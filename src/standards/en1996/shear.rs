@@ -2,8 +2,9 @@
 
 use crate::quantity::functions::{MM, min};
 use crate::quantity::{Num, Stress};
+use crate::standards::annex::Annex;
 use crate::trace::Sheet;
-use crate::{calc, decide};
+use crate::{calc, decide, given};
 
 /// Design shear strength f_vd from the initial strength `f_vk0` and the compressive stress `sigma_d`.
 ///
@@ -12,6 +13,7 @@ use crate::{calc, decide};
 /// `0.045 f_b`. From memory, check against the standard.
 pub fn design_strength(
     s: &mut Sheet,
+    annex: &Annex,
     perpends_filled: bool,
     f_vk0: Stress,
     sigma_d: Stress,
@@ -19,20 +21,22 @@ pub fn design_strength(
     gamma_Mv: Num,
 ) -> Stress {
     if perpends_filled {
+        given!(s, "limit of f_vk over f_b", "3.6.2(3), UK NA", k_v = Num::new(annex.shear_limit));
         calc!(
             s,
             "3.6.2(3) eq. 3.5",
             "characteristic shear strength",
-            f_vk = min(f_vk0 + 0.4 * sigma_d, 0.065 * f_b)
+            f_vk = min(f_vk0 + 0.4 * sigma_d, k_v * f_b)
         );
         calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_Mv);
         f_vd
     } else {
+        given!(s, "limit of f_vk over f_b", "3.6.2(4), UK NA", k_v = Num::new(annex.shear_limit_unfilled));
         calc!(
             s,
             "3.6.2(4) eq. 3.6",
             "characteristic shear strength, perpends not filled",
-            f_vk = min(0.5 * f_vk0 + 0.4 * sigma_d, 0.045 * f_b)
+            f_vk = min(0.5 * f_vk0 + 0.4 * sigma_d, k_v * f_b)
         );
         calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_Mv);
         f_vd

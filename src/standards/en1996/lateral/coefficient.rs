@@ -114,7 +114,7 @@ fn looked(found: Match, table: &Tabulated) -> Looked<f64> {
         );
     }
     value.row(
-        "pattern at this mu and h/l",
+        "pattern at this mu and h/l, the least that is taken",
         format!("{} ({})", four(table.pattern.alpha), table.pattern.name()),
     )
 }
