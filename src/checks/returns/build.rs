@@ -364,7 +364,7 @@ fn reaction(i: &Inputs<'_>, wind: f64) -> Option<Received> {
 pub fn head_reaction(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let h = m.h;
     given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
-    let d = super::actions::design(s, m, gamma_W);
+    let d = super::actions::design(s, m, annex, gamma_W);
     let (H_Ed, w_Ed) = (d.H_Ed, d.w_Ed);
     if w_Ed > LineLoad::ZERO {
         calc!(
