@@ -104,7 +104,15 @@ fn leaf(
         at_head.T_Q = at_head.T_Q + x.imposed * x.eccentricity;
     }
     let at_head = at_head.with_dead(change.dead, Length::ZERO);
-    let stiffened = if stiffened(s, i, h, t) { Stiffened::One } else { Stiffened::None };
+    let junction = stiffened(s, i, h, t);
+    if let Some(words) = &r.far_end {
+        s.note(format!("The other vertical edge is stiffened as well: {}.", words.trim_end_matches('.')));
+    }
+    let stiffened = match (junction, r.far_end.is_some()) {
+        (true, true) => Stiffened::Two,
+        (true, false) | (false, true) => Stiffened::One,
+        (false, false) => Stiffened::None,
+    };
     let m = Model {
         leaf: String::new(),
         l,
