@@ -86,8 +86,8 @@ fn remarks(s: &mut Sheet, i: &Inputs<'_>) {
         let words = r.junction.words.trim_end_matches('.');
         s.note(format!("The junction with {} is {word}: {words}.", r.junction.to));
         s.note(
-            "A flange on one side only bends the return across its plane as well; that is left out. The least \
-             reduction across the wall found for the return is used for the flange too.",
+            "Where the flange is longer on one side it bends the return across its plane as well; that is left out. \
+             The least reduction across the wall found for the return is used for the flange too.",
         );
     }
 }
