@@ -54,10 +54,23 @@ impl Dice {
     /// A title of `words` words.
     fn title(&mut self, words: u64) -> String {
         const WORDS: [&str; 14] = [
-            "rear", "opening", "between", "scullery", "and", "breakfast room", "with", "longer", "nibs", "below",
-            "landing", "chimney breast", "at", "Wetherington Crescent",
+            "rear",
+            "opening",
+            "between",
+            "scullery",
+            "and",
+            "breakfast room",
+            "with",
+            "longer",
+            "nibs",
+            "below",
+            "landing",
+            "chimney breast",
+            "at",
+            "Wetherington Crescent",
         ];
-        let all: Vec<&str> = (0..words).map(|_| WORDS[usize::try_from(self.below(14)).expect("below 14")]).collect();
+        let all: Vec<&str> =
+            (0..words).map(|_| WORDS[usize::try_from(self.below(14)).expect("below 14")]).collect();
         all.join(" ")
     }
 }

@@ -61,13 +61,14 @@ fn view(b: &Building) -> KeyPlan {
     }
 }
 
-fn thickness(b: &Building, build_up: &str) -> f64 {
+pub(super) fn thickness(b: &Building, build_up: &str) -> f64 {
     b.build_up(build_up).map_or(100.0, |u| {
         u.leaves.iter().map(|l| l.thickness.base()).sum::<f64>() + u.cavity.map_or(0.0, |c| c.base())
     })
 }
 
-fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
+/// A plan wall as drawings see it.
+pub(super) fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
     sketch::PlanWall {
         name: w.mark.clone(),
         from: (w.from.0.base(), w.from.1.base()),

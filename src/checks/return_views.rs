@@ -186,7 +186,7 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
 fn design(m: &Model, case: Case, annex: &Annex) -> actions::Design {
     let mut s = Sheet::silent();
     let (.., gamma_W) = actions::factors(&mut s, case, annex, m.helping);
-    actions::design(&mut s, m, gamma_W)
+    actions::design(&mut s, m, annex, gamma_W)
 }
 
 /// Moment and shear of wind and tilt along the height; the moment of the vertical loads is constant
