@@ -1,6 +1,6 @@
 //! The command line: flags in, files and lines out, an exit code back. The only file that knows clap.
 
-use std::io::{IsTerminal as _, Write as _};
+use std::io::Write as _;
 use std::path::{Path, PathBuf};
 use std::time::{Duration, Instant};
 
@@ -8,9 +8,9 @@ use anstyle::{Effects, Style};
 use clap::{CommandFactory as _, Parser, Subcommand};
 
 use crate::checks::outcome::Outcome;
-use crate::error::{Error, Trouble};
+use crate::error::Error;
 use crate::report::{lines, machine};
-use crate::{check, job, pack, sheet};
+use crate::{check, files, job, many, pack, sheet};
 
 /// Everything of every job is adequate.
 pub const ADEQUATE: u8 = 0;
@@ -40,14 +40,28 @@ Examples:
 Exit codes: 0 adequate; 1 not adequate, outside the method, or conditional on hold points; 2 error.
 A pack is worth nothing unsigned: read it, check it, sign it.";
 
+const CHECK_EXAMPLES: &str = "\
+Examples:
+  perpend check rear-opening.toml
+  perpend check --json rear-opening.toml    the results for other programs";
+
+const SHEET_EXAMPLES: &str = "\
+Examples:
+  perpend sheet rear-opening.toml           the pack beside the job file
+  perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
+
+A pack that is there already is replaced as soon as the new one is whole.";
+
 #[derive(Subcommand)]
 enum Command {
     /// Write a commented job file that is already a complete invented job
+    #[command(after_help = "Example:\n  perpend start rear-opening.toml")]
     Start {
         /// Where to write it; an existing file is left alone
         file: PathBuf,
     },
     /// Check jobs and print the results
+    #[command(after_help = CHECK_EXAMPLES)]
     Check {
         /// Job files
         #[arg(required = true)]
@@ -57,11 +71,12 @@ enum Command {
         json: bool,
     },
     /// Check jobs and write their packs as PDF
+    #[command(after_help = SHEET_EXAMPLES)]
     Sheet {
         /// Job files
         #[arg(required = true)]
         files: Vec<PathBuf>,
-        /// Folder for the packs; beside each job file without it
+        /// Folder for the packs, made where it is not there; beside each job file without it
         #[arg(long, value_name = "FOLDER")]
         into: Option<PathBuf>,
         /// Say where the time went
@@ -79,16 +94,24 @@ pub fn run() -> u8 {
             return if e.use_stderr() { FAILED } else { ADEQUATE };
         }
     };
+    many::hush();
     match flags.command {
-        Command::Start { file } => done(start(&file)),
+        Command::Start { file } => start(&file),
         Command::Check { files, json } => check_all(&files, json),
         Command::Sheet { files, into, times } => sheet_all(&files, into.as_deref(), times),
     }
 }
 
-fn done(result: Result<(), Error>) -> u8 {
-    match result {
-        Ok(()) => ADEQUATE,
+fn start(file: &Path) -> u8 {
+    match files::write_new(file, job::start::TEMPLATE.as_bytes()) {
+        Ok(()) => {
+            let _ = writeln!(
+                anstream::stdout(),
+                "{file} written: a complete invented job. Edit it, then run\n  perpend check {file}",
+                file = file.display()
+            );
+            ADEQUATE
+        }
         Err(e) => {
             complain(&e);
             FAILED
@@ -96,78 +119,57 @@ fn done(result: Result<(), Error>) -> u8 {
     }
 }
 
-fn start(file: &Path) -> Result<(), Error> {
-    if file.exists() {
-        return Err(Error::File {
-            path: file.display().to_string(),
-            trouble: Trouble::Content("a file of this name is there already; it was left alone".to_owned()),
-            help: "Give another name, or move the file away first.".to_owned(),
-        });
-    }
-    write_whole(file, job::start::TEMPLATE.as_bytes())?;
-    let _ = writeln!(
-        anstream::stdout(),
-        "{} written: a complete invented job. Edit it, then run",
-        file.display()
-    );
-    let _ = writeln!(anstream::stdout(), "  perpend check {}", file.display());
-    Ok(())
-}
-
-fn read(file: &Path) -> Result<String, Error> {
-    let trouble = |trouble, help: &str| Error::File {
-        path: file.display().to_string(),
-        trouble,
-        help: help.to_owned(),
-    };
-    let bytes = std::fs::read(file).map_err(|e| {
-        trouble(
-            Trouble::Read(e),
-            "Check the spelling of the path; 'perpend start' writes a job to begin from.",
-        )
-    })?;
-    String::from_utf8(bytes).map_err(|_| {
-        trouble(
-            Trouble::Content("it is not UTF-8 text".to_owned()),
-            "Save the job file as UTF-8 in a text editor.",
-        )
-    })
-}
-
-fn name(file: &Path) -> String {
-    file.display().to_string()
-}
-
 fn code(outcome: Outcome) -> u8 {
     if outcome == Outcome::Adequate { ADEQUATE } else { NOT_PLAINLY_ADEQUATE }
 }
 
-fn check_all(files: &[PathBuf], json: bool) -> u8 {
+fn internal<T>(result: Result<Result<T, Error>, String>) -> Result<T, Error> {
+    result.unwrap_or_else(|panic| Err(Error::Internal { step: panic }))
+}
+
+/// What `check` says of one job.
+enum Said {
+    Lines(Vec<lines::Line>),
+    Record(serde_json::Value),
+}
+
+fn check_all(paths: &[PathBuf], json: bool) -> u8 {
     let mut worst = ADEQUATE;
     let mut records = Vec::new();
-    for (n, file) in files.iter().enumerate() {
-        match read(file).and_then(|text| check(&name(file), &text)) {
-            Ok((building, results)) => {
-                worst = worst.max(code(results.outcome));
-                if json {
-                    records.push(machine::of_job(&name(file), &building, &results));
-                } else {
-                    if n > 0 {
+    let work = |file: &PathBuf| -> Result<(Outcome, Said), Error> {
+        let name = files::name(file);
+        let (building, results) = check(&name, &files::read(file)?)?;
+        let said = if json {
+            Said::Record(machine::of_job(&name, &building, &results))
+        } else {
+            Said::Lines(lines::of_job(&building, &results))
+        };
+        Ok((results.outcome, said))
+    };
+    let mut first = true;
+    let take = |file: &PathBuf, result| match internal(result) {
+        Ok((outcome, said)) => {
+            worst = worst.max(code(outcome));
+            match said {
+                Said::Record(record) => records.push(record),
+                Said::Lines(lines) => {
+                    if !std::mem::take(&mut first) {
                         let _ = writeln!(anstream::stdout());
                     }
-                    print_lines(&lines::of_job(&building, &results));
-                }
-            }
-            Err(e) => {
-                worst = FAILED;
-                match &e {
-                    Error::Job(report) if json => records.push(machine::of_report(&name(file), report)),
-                    other if json => records.push(machine::of_error(&name(file), other)),
-                    other => complain(other),
+                    print_lines(&lines);
                 }
             }
         }
-    }
+        Err(e) => {
+            worst = FAILED;
+            match &e {
+                Error::Job(report) if json => records.push(machine::of_report(&files::name(file), report)),
+                other if json => records.push(machine::of_error(&files::name(file), other)),
+                other => complain(other),
+            }
+        }
+    };
+    many::in_order(paths, work, take, || {});
     if json {
         let text = serde_json::to_string_pretty(&records).unwrap_or_default();
         let _ = writeln!(anstream::stdout(), "{text}");
@@ -188,94 +190,92 @@ fn print_lines(all: &[lines::Line]) {
     }
 }
 
-fn sheet_all(files: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
-    let bar = Progress::new(files.len());
+fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
+    if let Some(Err(e)) = into.map(files::folder) {
+        complain(&e);
+        return FAILED;
+    }
+    let progress = Progress::new(paths.len());
     let mut worst = ADEQUATE;
-    for file in files {
-        bar.on(file);
-        let result = one_sheet(file, into, times, &bar);
-        pack::evict(2);
-        worst = worst.max(match result {
-            Ok(outcome) => code(outcome),
+    let mut taken = files::Taken::default();
+    // Results of the jobs that other workers have in hand are not yet old.
+    let age = many::workers(paths.len()).max(2);
+    let work = |file: &PathBuf| {
+        let pack = set(file, into);
+        pack::evict(age);
+        pack
+    };
+    let take = |file: &PathBuf, result| {
+        let placed = internal(result).and_then(|pack: Pack| {
+            taken.take(&pack.staged.path, file)?;
+            Ok((pack.staged.place()?, pack.pages, pack.outcome, pack.times))
+        });
+        progress.aside(|| match placed {
+            Ok((path, pages, outcome, spent)) => {
+                worst = worst.max(code(outcome));
+                let mut out = anstream::stdout();
+                let _ = writeln!(out, "{}: {pages} sheets: {}", path.display(), outcome.words());
+                if times {
+                    let _ = writeln!(out, "  {spent}");
+                }
+            }
             Err(e) => {
-                bar.aside(|| complain(&e));
-                FAILED
+                worst = FAILED;
+                complain(&e);
             }
         });
-    }
-    bar.end();
+        progress.one_more();
+    };
+    many::in_order(paths, work, take, || progress.tick());
+    progress.end();
     worst
 }
 
-fn one_sheet(file: &Path, into: Option<&Path>, times: bool, bar: &Progress) -> Result<Outcome, Error> {
+/// A pack that only has to be put in its place.
+struct Pack {
+    staged: files::Staged,
+    pages: usize,
+    outcome: Outcome,
+    times: Spent,
+}
+
+fn set(file: &Path, into: Option<&Path>) -> Result<Pack, Error> {
     let begin = Instant::now();
-    let text = read(file)?;
+    let text = files::read(file)?;
     let beside = file.parent().unwrap_or(Path::new(""));
-    let made = sheet(&name(file), &text, beside)?;
-    let folder = into.unwrap_or(beside);
-    let path = folder.join(&made.file_name);
-    write_whole(&path, &made.typeset.pdf)?;
-    bar.aside(|| {
-        let t = &made.typeset;
-        let mut out = anstream::stdout();
-        let _ = writeln!(out, "{}: {} sheets: {}", path.display(), t.pages, made.results.outcome.words());
-        if times {
-            let all = begin.elapsed();
-            let rest = all.saturating_sub(t.times.fonts + t.times.compile + t.times.export);
-            let ms = |d: Duration| d.as_secs_f64() * 1e3;
-            let _ = writeln!(
-                out,
-                "  job, checks, drawings, writing {:.1} ms; fonts {:.1} ms; layout {:.1} ms; PDF {:.1} ms",
-                ms(rest),
-                ms(t.times.fonts),
-                ms(t.times.compile),
-                ms(t.times.export)
-            );
-        }
-    });
-    Ok(made.results.outcome)
+    let made = sheet(&files::name(file), &text, beside)?;
+    let path = into.unwrap_or(beside).join(&made.file_name);
+    let staged = files::Staged::new(path, &made.typeset.pdf)?;
+    let times = Spent { all: begin.elapsed(), setting: made.typeset.times };
+    Ok(Pack { staged, pages: made.typeset.pages, outcome: made.results.outcome, times })
 }
 
-/// Writes a file whole or not at all: beside its place first, then moved there.
-fn write_whole(path: &Path, bytes: &[u8]) -> Result<(), Error> {
-    let folder = path.parent().filter(|p| !p.as_os_str().is_empty()).unwrap_or(Path::new("."));
-    let write = || -> std::io::Result<()> {
-        let mut file = tempfile::NamedTempFile::new_in(folder)?;
-        file.write_all(bytes)?;
-        file.as_file().sync_all()?;
-        readable(&file)?;
-        file.persist(path).map_err(|e| e.error)?;
-        Ok(())
-    };
-    write().map_err(|e| Error::File {
-        path: path.display().to_string(),
-        trouble: Trouble::Write(e),
-        help: "Check that the folder is there and may be written to; nothing was changed.".to_owned(),
-    })
+/// Where the time of one pack went.
+struct Spent {
+    all: Duration,
+    setting: pack::Times,
 }
 
-/// A temporary file is for its owner alone; a pack is for everyone who may read the folder.
-#[cfg(unix)]
-fn readable(file: &tempfile::NamedTempFile) -> std::io::Result<()> {
-    use std::os::unix::fs::PermissionsExt as _;
-    file.as_file().set_permissions(std::fs::Permissions::from_mode(0o644))
+impl std::fmt::Display for Spent {
+    fn fmt(&self, f: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
+        let pack::Times { fonts, compile, export } = self.setting;
+        let ms = |d: Duration| d.as_secs_f64() * 1e3;
+        let rest = self.all.saturating_sub(fonts + compile + export);
+        write!(f, "job, checks, drawings, writing {:.1} ms; ", ms(rest))?;
+        write!(f, "fonts {:.1} ms; layout {:.1} ms; PDF {:.1} ms", ms(fonts), ms(compile), ms(export))
+    }
 }
 
-#[cfg(not(unix))]
-fn readable(_: &tempfile::NamedTempFile) -> std::io::Result<()> {
-    Ok(())
-}
-
+/// Colours are for a terminal; anstream takes them away elsewhere and under NO_COLOR.
 fn complain(error: &Error) {
-    let colour = std::io::stderr().is_terminal() && std::env::var_os("NO_COLOR").is_none();
     let text = match error {
-        Error::Job(report) => report.render(colour),
+        Error::Job(report) => report.render(true),
         other => other.to_string(),
     };
     let _ = writeln!(anstream::stderr(), "{}", text.trim_end());
 }
 
-/// A progress bar that shows only where the command lasts longer than half a second.
+/// A progress bar on a terminal, for several jobs that take longer than half a second.
 struct Progress {
     bar: indicatif::ProgressBar,
     begin: Instant,
@@ -285,25 +285,27 @@ impl Progress {
     fn new(jobs: usize) -> Self {
         let bar = indicatif::ProgressBar::with_draw_target(
             Some(jobs as u64),
-            if jobs > 1 {
-                indicatif::ProgressDrawTarget::stderr()
-            } else {
-                indicatif::ProgressDrawTarget::hidden()
-            },
+            indicatif::ProgressDrawTarget::hidden(),
         );
         bar.set_style(
-            indicatif::ProgressStyle::with_template("{pos} of {len} packs  {wide_bar}  {msg}")
+            indicatif::ProgressStyle::with_template("{pos} of {len} packs  {wide_bar}")
                 .unwrap_or_else(|_| indicatif::ProgressStyle::default_bar()),
         );
         Self { bar, begin: Instant::now() }
     }
 
-    fn on(&self, file: &Path) {
-        if self.begin.elapsed() > Duration::from_millis(500) {
-            self.bar.set_message(name(file));
-            self.bar.tick();
+    /// Called now and then: shows the bar once it has lasted long enough.
+    fn tick(&self) {
+        let several = self.bar.length().is_some_and(|jobs| jobs > 1);
+        if self.bar.is_hidden() && several && self.begin.elapsed() > Duration::from_millis(500) {
+            self.bar.set_draw_target(indicatif::ProgressDrawTarget::stderr());
         }
+        self.bar.tick();
+    }
+
+    fn one_more(&self) {
         self.bar.inc(1);
+        self.tick();
     }
 
     fn aside(&self, say: impl FnOnce()) {

@@ -8,7 +8,7 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity solve trace standards building job sketch checks pack report cli`.
+//! this order: `error quantity solve trace standards building job sketch checks pack report files many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
@@ -16,7 +16,9 @@ pub mod building;
 pub mod checks;
 pub mod cli;
 pub mod error;
+pub mod files;
 pub mod job;
+pub mod many;
 pub mod pack;
 pub mod quantity;
 pub mod report;

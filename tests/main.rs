@@ -6,6 +6,7 @@
 //! * `sheets`: every demo job as text
 //! * `pdf`: the packs, read back
 //! * `cli`: the command as a person runs it
+//! * `jobs`: job files for tests and benchmarks
 //! * `conventions`: arrows between modules, coverage files, the glossary
 
 #![allow(non_snake_case, missing_docs, reason = "symbols as the standards write them; tests need no docs")]
@@ -13,6 +14,7 @@
 mod cli;
 mod conventions;
 mod examples;
+mod jobs;
 mod pdf;
 mod properties;
 mod sheets;

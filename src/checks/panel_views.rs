@@ -11,8 +11,8 @@ use crate::sketch::{
 use crate::standards::masonry::Edge as Kind;
 
 /// Frames on the sheet, mm: before and after stand side by side at one scale.
-const ELEVATION: Frame = Frame::new(78.0, 80.0);
-const SECTION: Frame = Frame::new(110.0, 90.0);
+const ELEVATION: Frame = Frame::new(84.0, 80.0);
+const SECTION: Frame = Frame::new(92.0, 90.0);
 /// Depth at which floors are drawn, mm; the job file does not give it. For the picture only.
 const FLOOR_DEPTH: f64 = 220.0;
 
@@ -20,11 +20,19 @@ const FLOOR_DEPTH: f64 = 220.0;
 pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
     let Some(build_up) = b.build_up(&p.build_up) else { return Vec::new() };
     let thickness = b.build_up(&b.removed.build_up).map_or(100.0, |u| u.loaded().1.thickness.base());
-    let removed = |words: &str, gone: bool| {
-        p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words: words.to_owned(), removed: gone })
+    let wall = |words: String, removed: bool| {
+        p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words, removed })
     };
-    let before = elevation(p, &p.before, "before", m, None);
-    let after = elevation(p, &p.after, "after", m, removed("wall removed", true));
+    let stays: Vec<&str> = b
+        .returns
+        .iter()
+        .filter(|r| p.on.as_deref() == Some(&r.junction.to))
+        .map(|r| r.mark.as_str())
+        .collect();
+    let now =
+        if stays.is_empty() { "wall out".to_owned() } else { format!("wall out, {}", stays.join(", ")) };
+    let before = elevation(p, &p.before, "before", m, wall("wall".to_owned(), false));
+    let after = elevation(p, &p.after, "after", m, wall(now, true));
     let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);
     first.name = format!("{}-before", p.mark);
     second.name = format!("{}-after", p.mark);
@@ -50,7 +58,7 @@ fn elevation(
     m: &PanelModel,
     wall: Option<WallBehind>,
 ) -> PanelElevation {
-    let inside = wall.filter(|w| w.x > 0.0 && w.x < span.length.base());
+    let inside = wall.filter(|w| w.x >= 0.0 && w.x <= span.length.base());
     PanelElevation {
         mark: p.mark.clone(),
         state: state.to_owned(),

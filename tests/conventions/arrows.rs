@@ -3,8 +3,9 @@
 use super::sources;
 
 /// The modules, each of which may use those before it. [`perpend`]'s crate doc says the same.
-const ORDER: [&str; 12] = [
-    "error", "quantity", "solve", "trace", "standards", "building", "job", "sketch", "checks", "pack", "report", "cli",
+const ORDER: [&str; 14] = [
+    "error", "quantity", "solve", "trace", "standards", "building", "job", "sketch", "checks", "pack", "report", "files",
+    "many", "cli",
 ];
 
 /// Macros stand at the root of the crate and belong to `trace`.

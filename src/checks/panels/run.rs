@@ -10,7 +10,7 @@ use crate::quantity::{Length, Num, Stress};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::lateral::{arching, size};
 use crate::standards::tables::annex_e::Edge;
-use crate::trace::{Column, Entry, Outside, Sheet, Table};
+use crate::trace::{Column, Outside, Sheet, Table};
 use crate::{calc, given, verify};
 
 /// What a panel does in one state.
@@ -37,17 +37,21 @@ pub struct Outcome {
 pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     let W_Ed = wind(s, m, annex);
     let strengths: Vec<Strength> = (0..m.leaves.len()).map(|i| strength::of_leaf(s, m, i)).collect();
-    let before = if s.recording() {
-        s.heading(1, "Before the removal");
-        aside(s, |s| state(s, m, annex, &m.before, W_Ed, &strengths, "before"))
-    } else {
-        None
-    };
+    // Before is information: worked silently by the same code, printed in the table side by side.
+    let before = s.recording().then(|| {
+        let mut quiet = Sheet::silent();
+        let worked = state(&mut quiet, m, annex, &m.before, W_Ed, &strengths, "before");
+        (worked, quiet.outside)
+    });
     s.heading(1, "After the removal");
     let (v, o) = (s.verdicts.len(), s.outside.len());
     let after = state(s, m, annex, &m.after, W_Ed, &strengths, "after");
-    if s.recording() {
+    if let Some((before, left)) = before {
+        s.heading(1, "Before and after");
         s.table(|| side_by_side(m, before.as_ref(), after.as_ref()));
+        for o in left {
+            s.note(format!("Before the removal: outside the method, {} [{}].", o.words, o.clause));
+        }
         if s.verdicts[v..].iter().any(|v| !v.holds) && s.outside.len() == o {
             s.heading(1, "What would make it pass");
             for r in remedy::remedies(m, annex) {
@@ -72,7 +76,8 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
         out.push(format!(
             "Before the wall comes down, confirm that {} is built tight between supports that resist the arch \
              thrust ({}), and that a damp-proof course can pass it.",
-            m.mark, a.abutment
+            m.mark,
+            a.abutment.trim_end_matches('.')
         ));
         if !a.vertical {
             out.push(format!(
@@ -100,40 +105,6 @@ fn wind(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Stress {
     W_Ed
 }
 
-/// Runs `work` and turns what it judged into information: a verdict becomes a rule beside the
-/// calculation, a limit left becomes a remark.
-fn aside<T>(s: &mut Sheet, work: impl FnOnce(&mut Sheet) -> T) -> T {
-    let (entries, verdicts, outside) = (s.entries.len(), s.verdicts.len(), s.outside.len());
-    let result = work(s);
-    s.verdicts.truncate(verdicts);
-    s.outside.truncate(outside);
-    for entry in &mut s.entries[entries..] {
-        match entry {
-            Entry::Verify(v) => {
-                let shown = |x: &crate::trace::Value| show(&x.name, x.value);
-                let finding = format!(
-                    "{} against {}, use {}",
-                    shown(&v.demand),
-                    shown(&v.resistance),
-                    print::ratio(v.ratio)
-                );
-                *entry = Entry::Rule {
-                    id: v.id.clone(),
-                    words: format!("{}, before, for information", v.words),
-                    clause: v.clause.clone(),
-                    finding,
-                    met: v.holds,
-                };
-            }
-            Entry::Outside(o) => {
-                *entry = Entry::Note(format!("Before: outside the method, {} [{}].", o.words, o.clause));
-            }
-            _ => {}
-        }
-    }
-    result
-}
-
 /// One state of the panel. `W_Ed` stands on the sheet. `None` where it is outside the method.
 fn state(
     s: &mut Sheet,
@@ -144,7 +115,7 @@ fn state(
     strengths: &[Strength],
     phase: &'static str,
 ) -> Option<Outcome> {
-    s.table(|| held(span));
+    s.table(|| held(m));
     given!(s, "length between vertical supports", "job file", l = span.length);
     given!(s, "clear height", "job file", h = m.h);
     if m.route != PanelRoute::Arching {
@@ -248,7 +219,10 @@ fn arch(
     let i = m.loaded();
     let strength = &strengths[i];
     let above = format!("{}, above", m.leaf_name(i));
-    s.note(format!("Assumed, and a hold point: the arch thrust is resisted: {}.", a.abutment));
+    s.note(format!(
+        "Assumed, and a hold point: the arch thrust is resisted: {}.",
+        a.abutment.trim_end_matches('.')
+    ));
     given!(s, "actual thickness", &above, t = strength.t);
     given!(s, "design compressive strength", &above, f_d = strength.f_d);
     given!(s, "stress from dead load that helps", &above, sigma_v = strength.sigma_v);
@@ -275,18 +249,21 @@ fn arch(
     Ok(Outcome { l, leaves, W_Ed, w_Rd: q_lat_d, ratio })
 }
 
-/// How the edges are held, and why.
-fn held(span: &Span) -> Table {
-    let row =
-        |name: &str, e: &crate::building::Edge| vec![name.to_owned(), e.kind.to_string(), e.reason.clone()];
+/// How the edges are held before and after, and why.
+fn held(m: &PanelModel) -> Table {
+    let (b, a) = (&m.before, &m.after);
+    let row = |name: &str, b: &crate::building::Edge, a: &crate::building::Edge| {
+        let why = if b.reason == a.reason { "the same".to_owned() } else { a.reason.clone() };
+        vec![name.to_owned(), b.kind.to_string(), b.reason.clone(), a.kind.to_string(), why]
+    };
     Table {
         caption: "Edges, seen from outside".to_owned(),
-        columns: vec![Column::words("edge"), Column::words("held"), Column::words("why")],
+        columns: ["edge", "before", "why", "after", "why"].map(Column::words).to_vec(),
         rows: vec![
-            row("top", &span.top),
-            row("base", &span.base),
-            row("left", &span.left),
-            row("right", &span.right),
+            row("top", &b.top, &a.top),
+            row("base", &b.base, &a.base),
+            row("left", &b.left, &a.left),
+            row("right", &b.right, &a.right),
         ],
         strong: Vec::new(),
     }

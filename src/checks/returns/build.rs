@@ -10,7 +10,7 @@ use crate::standards::annex::Annex;
 use crate::standards::en1996::flange::{self, Side};
 use crate::standards::en1996::slenderness::Stiffened;
 use crate::trace::{Column, Outside, Sheet, Table};
-use crate::{calc, given};
+use crate::{calc, decide, given};
 
 /// What a return is checked with.
 #[derive(Clone, Copy)]
@@ -89,7 +89,7 @@ fn leaf(
     let masonry = strengths(s, i, build_up, k)?;
     given!(s, "weight of the masonry", "job file", g_m = masonry.density);
     calc!(s, "statics", "own weight of the leaf", G_w = g_m * l * t * h);
-    let flange = flange(s, i, h, l, t);
+    let flange = flange(s, i, h, t);
     let loads: Vec<&Load> = r.loads.iter().filter(|x| x.leaf == k).collect();
     let stretch = l / r.length;
     let mut at_head = Vertical::default();
@@ -104,7 +104,7 @@ fn leaf(
         at_head.T_Q = at_head.T_Q + x.imposed * x.eccentricity;
     }
     let at_head = at_head.with_dead(change.dead, Length::ZERO);
-    let bonded = r.junction.bonded;
+    let stiffened = if stiffened(s, i, h, t) { Stiffened::One } else { Stiffened::None };
     let m = Model {
         leaf: String::new(),
         l,
@@ -112,7 +112,7 @@ fn leaf(
         h,
         t_other: build_up.leaves.iter().enumerate().find(|(n, _)| *n != k).map(|(_, o)| o.thickness),
         rho_2: restraint(r, &at_head, t),
-        stiffened: if bonded { Stiffened::One } else { Stiffened::None },
+        stiffened,
         masonry,
         at_head,
         own: G_w,
@@ -143,14 +143,26 @@ fn strengths(s: &mut Sheet, i: &Inputs<'_>, build_up: &BuildUp, k: usize) -> Res
     Ok(found)
 }
 
+/// Whether the wall met stiffens the edge of the return: bonded, and long and thick enough, 5.5.1.2(5).
+fn stiffened(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> bool {
+    let j = &i.ret.junction;
+    if !j.bonded {
+        return false;
+    }
+    given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
+    given!(s, "length of the wall met, both sides", "job file", L_w = j.left + j.right);
+    let long = decide!(s, "5.5.1.2(5)", "long enough to stiffen", "too short to stiffen", L_w >= h / 5.0);
+    let thick = decide!(s, "5.5.1.2(5)", "thick enough to stiffen", "too thin to stiffen", t_f >= 0.3 * t);
+    long && thick
+}
+
 /// The flange that may be counted, where the junction is bonded: 5.5.3.
-fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, l: Length, t: Length) -> Option<Flange> {
+fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> Option<Flange> {
     let j = &i.ret.junction;
     if !j.bonded {
         return None;
     }
     let h_tot = i.building.storey(&i.ret.storey).map_or(h, |x| x.total_height);
-    let _ = l;
     given!(s, "thickness of the wall met", "job file", t_f = j.thickness);
     given!(s, "height to the top of the structure", "job file", h_tot);
     let b_L = flange::left(s, Side { to_end: j.left, to_next: j.next_wall_left }, h_tot, h, t_f);
@@ -352,7 +364,7 @@ fn reaction(i: &Inputs<'_>, wind: f64) -> Option<Received> {
 pub fn head_reaction(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let h = m.h;
     given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
-    let d = super::actions::design(s, m, gamma_W);
+    let d = super::actions::design(s, m, annex, gamma_W);
     let (H_Ed, w_Ed) = (d.H_Ed, d.w_Ed);
     if w_Ed > LineLoad::ZERO {
         calc!(

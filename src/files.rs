@@ -1,0 +1,157 @@
+//! Files in and out: job files read with words for what goes wrong, files written whole or not at all.
+
+use std::collections::HashMap;
+use std::io::{Read as _, Write as _};
+use std::path::{Path, PathBuf};
+
+use crate::error::{Error, Trouble};
+
+/// Largest job file, bytes: a thousand times a long one.
+const LARGEST: u64 = 16 << 20;
+
+/// A path as it is shown.
+pub fn name(file: &Path) -> String {
+    file.display().to_string()
+}
+
+fn trouble(file: &Path, trouble: Trouble, help: &str) -> Error {
+    Error::File { path: name(file), trouble, help: help.to_owned() }
+}
+
+fn content(file: &Path, what: &str, help: &str) -> Error {
+    trouble(file, Trouble::Content(what.to_owned()), help)
+}
+
+/// The text of a job file.
+///
+/// # Errors
+/// [`Error::File`] where it is not there, a folder, not UTF-8 or too large.
+pub fn read(file: &Path) -> Result<String, Error> {
+    const HELP: &str = "Check the spelling of the path; 'perpend start' writes a job to begin from.";
+    if file.is_dir() {
+        return Err(content(file, "it is a folder", "Name the job files in it: folder/*.toml."));
+    }
+    let mut bytes = Vec::new();
+    std::fs::File::open(file)
+        .and_then(|open| open.take(LARGEST + 1).read_to_end(&mut bytes))
+        .map_err(|why| trouble(file, Trouble::Read(why), HELP))?;
+    if bytes.len() as u64 > LARGEST {
+        return Err(content(file, "it is larger than any job file", HELP));
+    }
+    String::from_utf8(bytes)
+        .map_err(|_| content(file, "it is not UTF-8 text", "Save the job file as UTF-8 in a text editor."))
+}
+
+/// Makes the folder for packs where it is not there yet.
+///
+/// # Errors
+/// [`Error::File`] where it cannot be made, or is something else than a folder.
+pub fn folder(folder: &Path) -> Result<(), Error> {
+    const HELP: &str = "Name a folder that is there, or one that may be made there.";
+    if folder.exists() && !folder.is_dir() {
+        return Err(content(folder, "it is not a folder", HELP));
+    }
+    std::fs::create_dir_all(folder).map_err(|why| trouble(folder, Trouble::Write(why), HELP))
+}
+
+/// Writes a new file whole; one that is there already is left alone.
+///
+/// # Errors
+/// [`Error::File`] where there is one already, or it cannot be written.
+pub fn write_new(file: &Path, bytes: &[u8]) -> Result<(), Error> {
+    let there = "a file of this name is there already; it was left alone";
+    let help = "Give another name, or move the file away first.";
+    if file.exists() {
+        return Err(content(file, there, help));
+    }
+    Staged::new(file.to_owned(), bytes)?.file.persist_noclobber(file).map_err(|e| match e.error.kind() {
+        std::io::ErrorKind::AlreadyExists => content(file, there, help),
+        _ => unwritten(file, e.error),
+    })
+}
+
+fn unwritten(path: &Path, why: std::io::Error) -> Error {
+    trouble(
+        path,
+        Trouble::Write(why),
+        "Check that the folder is there and may be written to; nothing was changed.",
+    )
+}
+
+/// A file written whole beside its place. Dropped without being placed, it leaves nothing behind.
+pub struct Staged {
+    file: tempfile::TempPath,
+    /// Its place.
+    pub path: PathBuf,
+}
+
+impl Staged {
+    /// Writes the file beside `path`.
+    ///
+    /// # Errors
+    /// [`Error::File`] where the folder cannot be written to.
+    pub fn new(path: PathBuf, bytes: &[u8]) -> Result<Self, Error> {
+        let folder = path.parent().filter(|p| !p.as_os_str().is_empty()).unwrap_or(Path::new("."));
+        let write = || -> std::io::Result<tempfile::TempPath> {
+            let mut file = tempfile::NamedTempFile::new_in(folder)?;
+            file.write_all(bytes)?;
+            readable(&file)?;
+            file.as_file().sync_all()?;
+            Ok(file.into_temp_path())
+        };
+        match write() {
+            Ok(file) => Ok(Self { file, path }),
+            Err(why) => Err(unwritten(&path, why)),
+        }
+    }
+
+    /// Moves the file to its place, over what was there.
+    ///
+    /// # Errors
+    /// [`Error::File`] where that cannot be; what was there is unchanged.
+    pub fn place(self) -> Result<PathBuf, Error> {
+        match self.file.persist(&self.path) {
+            Ok(()) => Ok(self.path),
+            Err(e) => Err(unwritten(&self.path, e.error)),
+        }
+    }
+}
+
+/// A temporary file is for its owner alone; a pack is for everyone who may read the folder.
+#[cfg(unix)]
+fn readable(file: &tempfile::NamedTempFile) -> std::io::Result<()> {
+    use std::os::unix::fs::PermissionsExt as _;
+    file.as_file().set_permissions(std::fs::Permissions::from_mode(0o644))
+}
+
+#[cfg(not(unix))]
+fn readable(_: &tempfile::NamedTempFile) -> std::io::Result<()> {
+    Ok(())
+}
+
+/// The packs of one call: two jobs of the same number and revision must not replace each other.
+#[derive(Default)]
+pub struct Taken(HashMap<PathBuf, String>);
+
+impl Taken {
+    /// Takes the place of a pack for the job file `of`.
+    ///
+    /// # Errors
+    /// [`Error::File`] where another job file of this call has it already.
+    pub fn take(&mut self, path: &Path, of: &Path) -> Result<(), Error> {
+        let folder = path.parent().filter(|p| !p.as_os_str().is_empty()).unwrap_or(Path::new("."));
+        let folder = std::fs::canonicalize(folder).unwrap_or_else(|_| folder.to_owned());
+        let whole = folder.join(path.file_name().unwrap_or_default());
+        if let Some(first) = self.0.get(&whole) {
+            let what =
+                format!("{first} has just been written there: both jobs have this number and revision");
+            return Err(content(
+                path,
+                &what,
+                "Give the jobs different numbers, or write them into different folders.",
+            ));
+        }
+        self.0.insert(whole, name(of));
+        Ok(())
+    }
+}
