@@ -182,7 +182,11 @@ fn print_lines(all: &[lines::Line]) {
     let bold = Style::new().effects(Effects::BOLD);
     let mut out = anstream::stdout().lock();
     for line in all {
-        let _ = if line.stress { writeln!(out, "{bold}{}{bold:#}", line.text) } else { writeln!(out, "{}", line.text) };
+        let _ = if line.stress {
+            writeln!(out, "{bold}{}{bold:#}", line.text)
+        } else {
+            writeln!(out, "{}", line.text)
+        };
     }
 }
 
@@ -279,7 +283,10 @@ struct Progress {
 
 impl Progress {
     fn new(jobs: usize) -> Self {
-        let bar = indicatif::ProgressBar::with_draw_target(Some(jobs as u64), indicatif::ProgressDrawTarget::hidden());
+        let bar = indicatif::ProgressBar::with_draw_target(
+            Some(jobs as u64),
+            indicatif::ProgressDrawTarget::hidden(),
+        );
         bar.set_style(
             indicatif::ProgressStyle::with_template("{pos} of {len} packs  {wide_bar}")
                 .unwrap_or_else(|_| indicatif::ProgressStyle::default_bar()),

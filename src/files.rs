@@ -71,7 +71,11 @@ pub fn write_new(file: &Path, bytes: &[u8]) -> Result<(), Error> {
 }
 
 fn unwritten(path: &Path, why: std::io::Error) -> Error {
-    trouble(path, Trouble::Write(why), "Check that the folder is there and may be written to; nothing was changed.")
+    trouble(
+        path,
+        Trouble::Write(why),
+        "Check that the folder is there and may be written to; nothing was changed.",
+    )
 }
 
 /// A file written whole beside its place. Dropped without being placed, it leaves nothing behind.
@@ -139,8 +143,13 @@ impl Taken {
         let folder = std::fs::canonicalize(folder).unwrap_or_else(|_| folder.to_owned());
         let whole = folder.join(path.file_name().unwrap_or_default());
         if let Some(first) = self.0.get(&whole) {
-            let what = format!("{first} has just been written there: both jobs have this number and revision");
-            return Err(content(path, &what, "Give the jobs different numbers, or write them into different folders."));
+            let what =
+                format!("{first} has just been written there: both jobs have this number and revision");
+            return Err(content(
+                path,
+                &what,
+                "Give the jobs different numbers, or write them into different folders.",
+            ));
         }
         self.0.insert(whole, name(of));
         Ok(())

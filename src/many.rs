@@ -35,7 +35,8 @@ pub fn in_order<T: Sync, R: Send>(
     let (sender, results) = channel();
     let pull = |send: &dyn Fn(usize, Result<R, String>)| {
         // Without a pool of its own a worker would share out its pieces on all cores; that is right for one.
-        let own = (items.len() > 1).then(|| ThreadPoolBuilder::new().num_threads(1).stack_size(STACK).build().ok());
+        let own =
+            (items.len() > 1).then(|| ThreadPoolBuilder::new().num_threads(1).stack_size(STACK).build().ok());
         loop {
             let n = next.fetch_add(1, Ordering::Relaxed);
             let Some(item) = items.get(n) else { break };
@@ -56,7 +57,8 @@ pub fn in_order<T: Sync, R: Send>(
                     let _ = sender.send((n, result));
                 });
             };
-            running += usize::from(thread::Builder::new().stack_size(STACK).spawn_scoped(scope, worker).is_ok());
+            running +=
+                usize::from(thread::Builder::new().stack_size(STACK).spawn_scoped(scope, worker).is_ok());
         }
         if running == 0 {
             // No thread is to be had: this one does it.
@@ -105,7 +107,8 @@ pub fn guarded<R>(work: impl FnOnce() -> R) -> Result<R, String> {
 
 fn words(panic: &(dyn Any + Send)) -> String {
     let text = panic.downcast_ref::<&str>().map(|text| (*text).to_owned());
-    text.or_else(|| panic.downcast_ref::<String>().cloned()).unwrap_or_else(|| "it stopped without a word".to_owned())
+    text.or_else(|| panic.downcast_ref::<String>().cloned())
+        .unwrap_or_else(|| "it stopped without a word".to_owned())
 }
 
 #[cfg(test)]

@@ -23,9 +23,14 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
     let wall = |words: String, removed: bool| {
         p.wall_at.map(|x| WallBehind { x: x.base(), thickness, words, removed })
     };
-    let stays: Vec<&str> =
-        b.returns.iter().filter(|r| p.on.as_deref() == Some(&r.junction.to)).map(|r| r.mark.as_str()).collect();
-    let now = if stays.is_empty() { "wall out".to_owned() } else { format!("wall out, {}", stays.join(", ")) };
+    let stays: Vec<&str> = b
+        .returns
+        .iter()
+        .filter(|r| p.on.as_deref() == Some(&r.junction.to))
+        .map(|r| r.mark.as_str())
+        .collect();
+    let now =
+        if stays.is_empty() { "wall out".to_owned() } else { format!("wall out, {}", stays.join(", ")) };
     let before = elevation(p, &p.before, "before", m, wall("wall".to_owned(), false));
     let after = elevation(p, &p.after, "after", m, wall(now, true));
     let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);

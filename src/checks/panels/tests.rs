@@ -241,7 +241,9 @@ fn before_does_not_decide() {
     m.after = span(1500.0, [S, S, C, C]);
     let s = run(&m);
     assert!(s.holds() && s.verdicts.iter().all(|v| v.id.ends_with("after")));
-    assert!(s.entries.iter().any(|e| matches!(e, Entry::Note(n) if n.starts_with("Before the removal: outside"))));
+    assert!(
+        s.entries.iter().any(|e| matches!(e, Entry::Note(n) if n.starts_with("Before the removal: outside")))
+    );
     m.before = span(6000.0, [S, S, S, S]);
     let s = run(&m);
     assert!(s.holds());
