@@ -14,6 +14,7 @@ pub mod wind;
 
 mod panel_sheet;
 mod panel_views;
+mod place;
 mod return_sheet;
 mod return_views;
 mod shapes;

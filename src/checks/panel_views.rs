@@ -11,8 +11,8 @@ use crate::sketch::{
 use crate::standards::masonry::Edge as Kind;
 
 /// Frames on the sheet, mm: before and after stand side by side at one scale.
-const ELEVATION: Frame = Frame::new(78.0, 80.0);
-const SECTION: Frame = Frame::new(110.0, 90.0);
+const ELEVATION: Frame = Frame::new(84.0, 80.0);
+const SECTION: Frame = Frame::new(92.0, 90.0);
 /// Depth at which floors are drawn, mm; the job file does not give it. For the picture only.
 const FLOOR_DEPTH: f64 = 220.0;
 

@@ -1,8 +1,7 @@
 //! The key plan: walls, what comes out, and where every mark is.
 
-use super::{Job, Section};
+use super::{Job, Section, place};
 use crate::building::{Along, Building, PlanWall};
-use crate::quantity::Length;
 use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind};
 use crate::trace::Sheet;
 
@@ -24,21 +23,27 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
 }
 
 fn view(b: &Building) -> KeyPlan {
-    let walls = b.plan.iter().map(|w| wall(b, w)).collect();
+    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().map(|w| wall(b, w)).collect();
     let mut marks: Vec<PlanMark> = Vec::new();
-    let mut panels: Vec<PlanMark> = Vec::new();
     for r in &b.returns {
-        if let Some((x, y)) = r.position {
-            let at = (x.base(), y.base());
-            marks.push(PlanMark { mark: r.mark.clone(), from: at, to: at });
+        if let Some((from, to)) = place::of_return(b, r) {
+            marks.push(PlanMark { mark: r.mark.clone(), from, to });
+            if from != to {
+                walls.push(sketch::PlanWall {
+                    name: String::new(),
+                    from,
+                    to,
+                    thickness: thickness(b, &r.build_up),
+                    fate: Fate::Stays,
+                });
+            }
         }
     }
-    for p in &b.panels {
-        if let Some(w) = p.on.as_ref().and_then(|on| b.plan.iter().find(|w| w.mark == *on)) {
-            let pair = |(x, y): (Length, Length)| (x.base(), y.base());
-            panels.push(PlanMark { mark: p.mark.clone(), from: pair(w.from), to: pair(w.to) });
-        }
-    }
+    let panels = b
+        .panels
+        .iter()
+        .filter_map(|p| place::of_panel(b, p).map(|(from, to)| PlanMark { mark: p.mark.clone(), from, to }))
+        .collect();
     let winds = match b.stability.as_ref().map(|s| s.wind_along) {
         Some(Along::X) => vec![PlanWind::Rightwards, PlanWind::Leftwards],
         Some(Along::Y) => vec![PlanWind::Upwards, PlanWind::Downwards],
@@ -56,15 +61,19 @@ fn view(b: &Building) -> KeyPlan {
     }
 }
 
-fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
-    let thickness = b.build_up(&w.build_up).map_or(100.0, |u| {
+pub(super) fn thickness(b: &Building, build_up: &str) -> f64 {
+    b.build_up(build_up).map_or(100.0, |u| {
         u.leaves.iter().map(|l| l.thickness.base()).sum::<f64>() + u.cavity.map_or(0.0, |c| c.base())
-    });
+    })
+}
+
+/// A plan wall as drawings see it.
+pub(super) fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
     sketch::PlanWall {
         name: w.mark.clone(),
         from: (w.from.0.base(), w.from.1.base()),
         to: (w.to.0.base(), w.to.1.base()),
-        thickness,
+        thickness: thickness(b, &w.build_up),
         fate: if w.removed { Fate::Removed } else { Fate::Stays },
     }
 }

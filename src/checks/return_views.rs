@@ -15,10 +15,10 @@ use crate::sketch::{
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
 
-/// Frames on the sheet, mm: elevation and section stand side by side.
-const ELEVATION: Frame = Frame::new(82.0, 92.0);
-const SECTION: Frame = Frame::new(78.0, 92.0);
-const ACTIONS: Frame = Frame::new(160.0, 70.0);
+/// Frames on the sheet, mm: the tall elevation on the left, beside it the section over the diagram.
+const ELEVATION: Frame = Frame::new(90.0, 124.0);
+const SECTION: Frame = Frame::new(76.0, 64.0);
+const ACTIONS: Frame = Frame::new(76.0, 56.0);
 
 /// The three drawings of a return.
 pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> Vec<Drawing> {
@@ -30,6 +30,8 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
         return_section(&section(b, r, m, matrix.as_ref(), build_up, annex), SECTION),
         return_actions(&diagram(r, m, case, annex), ACTIONS),
     ];
+    // The case of the force is too long for a label beside it.
+    out[1].caption = format!("{}; {}", out[1].caption, worst(matrix.as_ref(), Check::Toe).name());
     for (drawing, kind) in out.iter_mut().zip(["elevation", "section", "actions"]) {
         drawing.name = format!("{}-{kind}", r.mark);
     }
@@ -183,7 +185,7 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
 fn design(m: &Model, case: Case, annex: &Annex) -> actions::Design {
     let mut s = Sheet::silent();
     let (.., gamma_W) = actions::factors(&mut s, case, annex, m.helping);
-    actions::design(&mut s, m, gamma_W)
+    actions::design(&mut s, m, annex, gamma_W)
 }
 
 /// Moment and shear of wind and tilt along the height; the moment of the vertical loads is constant

@@ -1,13 +1,18 @@
 //! The storey's wind, every bracing wall's share of it, before and after the removal.
 
 use super::wind::Pressures;
+use super::{place, plan};
 use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands};
 use crate::quantity::functions::{metres, sqrt};
 use crate::quantity::{Force, Length, print};
+use crate::sketch::{self, Drawing, Fate, Frame, PlanWind, StabilityPlan, stability_plan};
 use crate::solve::torsion::{self, Bracing, Push};
 use crate::standards::annex::Annex;
 use crate::trace::{Column, Outside, Sheet, Table};
 use crate::{calc, given};
+
+/// Frame on the sheet, mm.
+const FRAME: Frame = Frame::new(146.0, 110.0);
 
 /// What one wall takes.
 #[derive(Clone, Debug, PartialEq)]
@@ -62,17 +67,19 @@ pub fn share(
     given!(s, "height of wind face that this level collects", "job file", h_s = st.strip_height);
     given!(s, "characteristic wind on everything above", "job file", F_a = st.force_above);
     calc!(s, "EN 1991-1-4 5.3", "characteristic wind force of the storey", F_k = q_net * L_f * h_s + F_a);
-    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_Q = annex.gamma_Q);
-    calc!(s, "EN 1990 eq. 6.10", "design wind force of the storey", F_Ed = gamma_Q * F_k);
+    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = annex.gamma_Q);
+    calc!(s, "EN 1990 eq. 6.10", "design wind force of the storey", F_Ed = gamma_W * F_k);
     given!(s, "dead load of the level, for the tilt", "job file", G_s = st.dead);
     given!(s, "imposed load of the level", "job file", Q_s = st.imposed);
     given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
+    given!(s, "pressing factor on dead load", "EN 1990 Table NA.A1.2(B)", gamma_Gp = annex.gamma_G_sup);
+    given!(s, "pressing factor on imposed load", "EN 1990 Table NA.A1.2(B)", gamma_Qp = annex.gamma_Q);
     calc!(
         s,
         "5.3(2)",
         "tilt of the storey as a force, pressing factors",
-        H_s = nu * (1.35 * G_s + 1.5 * Q_s)
+        H_s = nu * (gamma_Gp * G_s + gamma_Qp * Q_s)
     );
     let before = shares(b, st, Stands::Before)?;
     let after = shares(b, st, Stands::After)?;
@@ -230,9 +237,50 @@ fn table(st: &Stability, list: &[Share], force: Force) -> Table {
 pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     let (Some(st), Ok(wind)) = (&job.building.stability, &job.wind) else { return Vec::new() };
     let mut s = Sheet::recorder();
-    if let Err(outside) = share(&mut s, job.building, st, *wind, &job.annex) {
-        s.leave(outside);
-    }
     s.note(format!("The wall removed braced: {}.", job.building.removed.braced.trim_end_matches('.')));
-    vec![super::Section::plain("stability", "The storey's wind and its walls", s)]
+    let mut drawings = Vec::new();
+    match share(&mut s, job.building, st, *wind, &job.annex) {
+        Ok(storey) => {
+            if let Some(drawing) = drawn(job.building, st, &storey) {
+                s.drawings(&[&drawing.name]);
+                drawings.push(drawing);
+            }
+        }
+        Err(outside) => s.leave(outside),
+    }
+    let section = super::Section::plain("stability", "The storey's wind and its walls", s);
+    vec![super::Section { drawings, ..section }]
+}
+
+/// The plan with each bracing wall's share; none where the plan shows no bracing wall.
+fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<Drawing> {
+    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().map(|w| plan::wall(b, w)).collect();
+    let marks: Vec<&str> = b.plan.iter().map(|w| w.mark.as_str()).collect();
+    let percent = |x: Option<f64>| x.map(|p| format!("{:.0} %", p * 100.0));
+    let mut shares = Vec::new();
+    for x in &storey.shares {
+        let place = marks.iter().position(|m| *m == x.mark).or_else(|| {
+            // A return is no line of the plan: it is drawn where its mark lies.
+            let r = b.returns.iter().find(|r| r.mark == x.mark)?;
+            let (from, to) = place::of_return(b, r).filter(|(a, b)| a != b)?;
+            let thickness = plan::thickness(b, &r.build_up);
+            walls.push(sketch::PlanWall { name: r.mark.clone(), from, to, thickness, fate: Fate::Stays });
+            Some(walls.len() - 1)
+        });
+        if let Some(wall) = place {
+            shares.push(sketch::Share { wall, before: percent(x.before), after: percent(x.after) });
+        }
+    }
+    if shares.is_empty() {
+        return None;
+    }
+    let wind = match st.wind_along {
+        Along::X => PlanWind::Rightwards,
+        Along::Y => PlanWind::Upwards,
+    };
+    let view =
+        StabilityPlan { name: "stability-plan".to_owned(), title: st.storey.clone(), walls, shares, wind };
+    let mut drawing = stability_plan(&view, FRAME);
+    drawing.name = "stability-plan".to_owned();
+    Some(drawing)
 }

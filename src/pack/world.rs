@@ -26,6 +26,7 @@ const TEMPLATES: &[(&str, &str)] = &[
     ("/templates/parts/schedule.typ", include_str!("../../templates/parts/schedule.typ")),
     ("/templates/parts/section.typ", include_str!("../../templates/parts/section.typ")),
     ("/templates/parts/style.typ", include_str!("../../templates/parts/style.typ")),
+    ("/templates/parts/table.typ", include_str!("../../templates/parts/table.typ")),
 ];
 
 /// The faces of `fonts/`: text upright, italic and semibold, mathematics, listing.

@@ -141,7 +141,7 @@ fn section(s: &Section, results: &Results) -> data::Section {
         outcome: (judged || plain_failure)
             .then(|| data::SectionOutcome { kind: kind(outcome), words: outcome.words() }),
         blocks: blocks::of_section(s),
-        new_page: judged || matches!(s.id.as_str(), "plan" | "wind"),
+        new_page: judged,
     }
 }
 

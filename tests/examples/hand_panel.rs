@@ -3,18 +3,63 @@
 //! Independent arithmetic: nothing here calls the code that it tests, save for the sheet's own values. The
 //! cells of Annex E, case F, are typed again from the table (from memory, check against the standard).
 
-use super::model::PanelModel;
-use super::run::check;
-use super::tests::single;
-use crate::standards::annex::Annex;
-use crate::standards::masonry::Edge::{Continuous, Simple};
-use crate::trace::Sheet;
+use perpend::building::{Edge as Held, PanelRoute, Sharing, Span};
+use perpend::checks::masonry::Masonry;
+use perpend::checks::panels::{PanelLeaf, PanelModel, check};
+use perpend::quantity::{Length, LineLoad, Num, Stress, Weight};
+use perpend::standards::annex::Annex;
+use perpend::standards::masonry::Edge::{Continuous, Simple};
+use perpend::trace::Sheet;
+
+/// A single leaf of 102.5 mm clay brick, 2.4 m high and 4.0 m long after the removal, all values stated.
+fn brick_leaf() -> PanelModel {
+    let factor = |x| (Num::new(x), "stated".to_owned());
+    let ((gamma_c, gamma_c_source), (gamma_f, gamma_f_source), (gamma_v, gamma_v_source)) =
+        (factor(3.0), factor(2.7), factor(2.5));
+    let masonry = Masonry {
+        name: "brick".to_owned(),
+        thickness: Length::new(102.5),
+        f_b: Stress::new(20.0),
+        f_k: Stress::new(5.0),
+        f_vk0: Stress::new(0.2),
+        f_xk1: Stress::new(0.4),
+        f_xk2: Some(Stress::new(1.1)),
+        gamma_c,
+        gamma_f,
+        gamma_v,
+        gamma_c_source,
+        gamma_f_source,
+        gamma_v_source,
+        density: Weight::new(20e-6),
+        perpends_filled: true,
+    };
+    let span = |length| {
+        let held = |kind| Held { kind, reason: "as the example says".to_owned() };
+        let (top, base, left, right) = (held(Simple), held(Simple), held(Continuous), held(Simple));
+        Span { length: Length::new(length), top, base, left, right }
+    };
+    PanelModel {
+        mark: "P1".to_owned(),
+        h: Length::new(2400.0),
+        leaves: vec![PanelLeaf { t: Length::new(102.5), masonry, G_above: LineLoad::new(8.5), loaded: true }],
+        q_net: Stress::new(0.45e-3),
+        q_source: "stated".to_owned(),
+        helping: 0.9,
+        route: PanelRoute::Flexure,
+        sharing: Sharing::Strength,
+        ties: None,
+        tie_strength: None,
+        arching: None,
+        before: span(2000.0),
+        after: span(4000.0),
+    }
+}
 
 /// A wall of 102.5 mm clay brick, 2.4 m high, 4.0 m between a bonded return (left, continuous) and a simple
 /// edge (right), top and base simple; 8.5 kN/m of dead load on top; net pressure 0.45 kN/m².
 #[test]
 fn a_panel_of_case_f_by_hand() {
-    let m: PanelModel = single(4000.0, [Simple, Simple, Continuous, Simple], 0.45, 8.5);
+    let m = brick_leaf();
     let mut s = Sheet::recorder();
     check(&mut s, &m, &Annex::UK);
     assert!(s.faults.is_empty(), "{:?}", s.faults);

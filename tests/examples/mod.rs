@@ -1,7 +1,12 @@
-//! Published examples, a file per source: each number with its page and tolerance.
+//! Published examples, a file per source: each number with its page and tolerance. Beside them hand
+//! calculations, step by step, and identities that only test the tool against itself, named as such.
 
 mod arya_design_of_structural_elements;
+mod hand_panel;
+mod hand_return;
+pub mod job;
 mod johansen;
 mod roberts_v3;
+mod self_consistency;
 mod ssb_part3;
 mod taly_reinforced_masonry;

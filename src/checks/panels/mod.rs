@@ -19,9 +19,6 @@ pub use remedy::{Remedy, remedies};
 pub use run::{check, hold_points};
 
 #[cfg(test)]
-#[path = "../../../tests/examples/hand_panel.rs"]
-mod hand_panel;
-#[cfg(test)]
 mod properties;
 #[cfg(test)]
 mod tests;

@@ -76,7 +76,8 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
         out.push(format!(
             "Before the wall comes down, confirm that {} is built tight between supports that resist the arch \
              thrust ({}), and that a damp-proof course can pass it.",
-            m.mark, a.abutment
+            m.mark,
+            a.abutment.trim_end_matches('.')
         ));
         if !a.vertical {
             out.push(format!(
@@ -218,7 +219,10 @@ fn arch(
     let i = m.loaded();
     let strength = &strengths[i];
     let above = format!("{}, above", m.leaf_name(i));
-    s.note(format!("Assumed, and a hold point: the arch thrust is resisted: {}.", a.abutment));
+    s.note(format!(
+        "Assumed, and a hold point: the arch thrust is resisted: {}.",
+        a.abutment.trim_end_matches('.')
+    ));
     given!(s, "actual thickness", &above, t = strength.t);
     given!(s, "design compressive strength", &above, f_d = strength.f_d);
     given!(s, "stress from dead load that helps", &above, sigma_v = strength.sigma_v);

@@ -81,6 +81,8 @@ pub struct Actions {
     pub V_Ed: Force,
     /// Pressed edge.
     pub toe: Toe,
+    /// N acts between mid-length and the junction, or beyond it: M turns towards the junction.
+    pub back: bool,
     /// Flange that acts, with its thickness; foot only.
     pub flange: Option<Flange>,
     /// Factor on dead load in this case.
@@ -124,7 +126,7 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         );
         (N_Ed, M_N)
     };
-    let (M_W, V_Ed) = lateral(s, m, gamma_W, at);
+    let (M_W, V_Ed) = lateral(s, m, annex, gamma_W, at);
     let flange = m.flange.filter(|_| at == At::Foot);
     // Positive presses the free end.
     let signed = if case.direction == Direction::ToFree { M_N + M_W } else { M_N - M_W };
@@ -135,7 +137,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         calc!(s, "statics", "moment in plane about mid-length", M_Ed = abs(M_N - M_W));
         M_Ed
     };
-    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), flange, gamma_G }
+    let back = signed < Moment::ZERO;
+    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), back, flange, gamma_G }
 }
 
 /// The edge on whose side of the section's centroid the resultant acts.
@@ -164,9 +167,9 @@ pub struct Design {
 }
 
 /// Wind and tilt at design value; `gamma_W` stands on the sheet. What is nought is not printed.
-pub fn design(s: &mut Sheet, m: &Model, gamma_W: Num) -> Design {
+pub fn design(s: &mut Sheet, m: &Model, annex: &Annex, gamma_W: Num) -> Design {
     let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
-    let H_nu = tilt(s, m);
+    let H_nu = tilt(s, m, annex);
     calc!(s, "EN 1990 6.4.3.2", "force at the head, tilt included", H_Ed = gamma_W * H_k + H_nu);
     let w_Ed = if w_k == LineLoad::ZERO {
         LineLoad::ZERO
@@ -184,8 +187,8 @@ pub fn design(s: &mut Sheet, m: &Model, gamma_W: Num) -> Design {
 }
 
 /// Moment and shear of wind and tilt at the section.
-fn lateral(s: &mut Sheet, m: &Model, gamma_W: Num, at: At) -> (Moment, Force) {
-    let d = design(s, m, gamma_W);
+fn lateral(s: &mut Sheet, m: &Model, annex: &Annex, gamma_W: Num, at: At) -> (Moment, Force) {
+    let d = design(s, m, annex, gamma_W);
     let M_W = if m.propped { held(s, m, d, at) } else { cantilever(s, m, d, at) };
     let V_Ed = shear(s, m, d, at);
     (M_W, V_Ed)
@@ -277,12 +280,24 @@ fn shear(s: &mut Sheet, m: &Model, d: Design, at: At) -> Force {
 }
 
 /// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.
-fn tilt(s: &mut Sheet, m: &Model) -> Force {
+fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
     given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
     given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
     given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
-    calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (1.35 * G_nu + 1.5 * Q_nu));
+    given!(
+        s,
+        "pressing factor on dead load",
+        "EN 1990 Table NA.A1.2(B)",
+        gamma_Gp = Num::new(annex.gamma_G_sup)
+    );
+    given!(
+        s,
+        "pressing factor on imposed load",
+        "EN 1990 Table NA.A1.2(B)",
+        gamma_Qp = Num::new(annex.gamma_Q)
+    );
+    calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (gamma_Gp * G_nu + gamma_Qp * Q_nu));
     H_nu
 }

@@ -26,11 +26,13 @@ pub struct Stressed {
     pub A_c: Area,
 }
 
-/// Overturning about the pressed edge: 0.9 G against 1.5 W, e < l/2. First principles.
+/// Overturning about the edge that M turns towards: 0.9 G against 1.5 W, e < l/2. First principles.
+///
+/// With a flange that need not be the pressed edge: N may stand between mid-length and the centroid.
 pub fn overturning(s: &mut Sheet, m: &Model, a: &Actions, id: &str) {
     let (l, N_Ed, M_Ed) = (m.l, a.N_Ed, a.M_Ed);
-    match (a.flange, a.toe) {
-        (Some(Flange { t_f, .. }), Toe::Junction) => {
+    match (a.flange, a.back) {
+        (Some(Flange { t_f, .. }), true) => {
             calc!(
                 s,
                 "EN 1990 6.4.2",
@@ -63,7 +65,7 @@ pub fn stresses(s: &mut Sheet, m: &Model, a: &Actions) -> Stressed {
     calc!(s, "statics", "eccentricity in plane", e = M_Ed / N_Ed);
     match a.flange {
         None => plain(s, l, t, N_Ed, e),
-        Some(Flange { b_f, t_f, .. }) => flanged(s, a.toe, (l, t, b_f, t_f), N_Ed, e),
+        Some(Flange { b_f, t_f, .. }) => flanged(s, a, (l, t, b_f, t_f), N_Ed, e),
     }
 }
 
@@ -94,12 +96,12 @@ fn plain(s: &mut Sheet, l: Length, t: Length, N_Ed: Force, e: Length) -> Stresse
 
 fn flanged(
     s: &mut Sheet,
-    toe: Toe,
+    acting: &Actions,
     (l, t, b_f, t_f): (Length, Length, Length, Length),
     N_Ed: Force,
     e: Length,
 ) -> Stressed {
-    let free = toe == Toe::Free;
+    let free = acting.toe == Toe::Free;
     let sec = if free {
         Section { b_1: t, d_1: l, b_2: b_f, L_s: l + t_f }
     } else {
@@ -115,7 +117,11 @@ fn flanged(
     given!(s, "width beyond", from, b_2 = sec.b_2);
     calc!(s, "geometry", "whole depth", L_s = l + t_f);
     let sec = Section { L_s, ..sec };
-    let x = if free {
+    let x = if free && acting.back {
+        // N stands beyond mid-length, seen from the free end, and still short of the centroid.
+        calc!(s, "geometry", "distance of N from the toe", a = l / 2.0 + e);
+        a
+    } else if free {
         calc!(s, "geometry", "distance of N from the toe", a = l / 2.0 - e);
         a
     } else {
