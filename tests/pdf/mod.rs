@@ -190,3 +190,24 @@ fn the_job_file_travels_inside() {
         assert!(bytes == demo.text.as_bytes(), "{}: the job file inside is another", demo.name);
     }
 }
+
+/// Lays out what the typesetter's own command line needs to set the start job from the same data: the yardstick for
+/// speed. `cargo test --test main yardstick -- --ignored`, then the commands in DEVELOPERS.md.
+#[test]
+#[ignore = "writes target/yardstick"]
+fn yardstick() {
+    let root = std::path::Path::new(env!("CARGO_MANIFEST_DIR"));
+    let demo = demos().iter().find(|demo| demo.text == jobs::START).expect("the start job is a demo job");
+    let folder = root.join("target/yardstick");
+    std::fs::create_dir_all(folder.join("templates/parts")).expect("a folder");
+    for part in ["templates", "templates/parts"] {
+        for entry in std::fs::read_dir(root.join(part)).expect("templates") {
+            let path = entry.expect("an entry").path();
+            if path.extension().is_some_and(|e| e == "typ") {
+                let name = path.file_name().expect("a name");
+                std::fs::copy(&path, folder.join(part).join(name)).expect("a copy");
+            }
+        }
+    }
+    std::fs::write(folder.join("data.json"), serde_json::to_vec(&data(demo)).expect("JSON")).expect("a file");
+}
