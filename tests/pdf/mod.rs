@@ -191,8 +191,16 @@ fn the_job_file_travels_inside() {
     }
 }
 
-/// Lays out what the typesetter's own command line needs to set the start job from the same data: the yardstick for
-/// speed. `cargo test --test main yardstick -- --ignored`, then the commands in DEVELOPERS.md.
+/// Lays out what the typesetter's own command line needs to set the start job from the same data, and a hundred
+/// different jobs: the yardsticks for speed.
+///
+/// ```text
+/// cargo test --test main yardstick -- --ignored
+/// typst compile --ignore-system-fonts --font-path fonts --root target/yardstick \
+///     --pdf-standard a-3a,ua-1 target/yardstick/templates/pack.typ target/yardstick/pack.pdf
+/// perpend sheet --into target/yardstick/packs target/yardstick/hundred/*.toml
+/// ls target/yardstick/hundred/*.toml | xargs -P2 -n1 perpend sheet --into target/yardstick/packs
+/// ```
 #[test]
 #[ignore = "writes target/yardstick"]
 fn yardstick() {
@@ -210,4 +218,10 @@ fn yardstick() {
         }
     }
     std::fs::write(folder.join("data.json"), serde_json::to_vec(&data(demo)).expect("JSON")).expect("a file");
+
+    let hundred = folder.join("hundred");
+    std::fs::create_dir_all(&hundred).expect("a folder");
+    for n in 0..100 {
+        std::fs::write(hundred.join(format!("{n:02}.toml")), jobs::varied(n)).expect("a file");
+    }
 }
