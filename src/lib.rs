@@ -8,7 +8,7 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity trace standards solve job building sketch checks pack report files many cli`.
+//! this order: `error quantity solve trace standards building job sketch checks pack report files many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
@@ -73,7 +73,7 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let data = report::pack(&building, &results, text, &digest);
     let files = photographs(&building, folder)?;
     let typeset =
-        pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+        pack::typeset(data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
 }

@@ -42,7 +42,8 @@ pub fn significant(x: f64) -> String {
     if x == 0.0 {
         return "0".to_owned();
     }
-    let magnitude = x.abs().log10().floor() as i32;
+    // The exponent after rounding: 9.996 is written as 10.0, not as 10.00.
+    let magnitude = format!("{x:.2e}").split_once('e').and_then(|(_, e)| e.parse::<i32>().ok()).unwrap_or(0);
     let decimals = (2 - magnitude).max(0);
     let text = format!("{x:.prec$}", prec = decimals as usize);
     let exact = text.parse::<f64>().is_ok_and(|back| (back - x).abs() <= 1e-9 * x.abs());

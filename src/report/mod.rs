@@ -8,7 +8,7 @@ mod blocks;
 mod front;
 pub mod lines;
 pub mod machine;
-mod notation;
+pub mod notation;
 
 use crate::building::Building;
 use crate::checks::outcome::{self, Outcome};

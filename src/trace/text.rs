@@ -121,11 +121,7 @@ pub fn node(n: &Node) -> String {
         Node::Num(digits) => digits.clone(),
         Node::Val(s) => s.to_string(),
         Node::Unit(u) => u.clone(),
-        Node::Times(items) => {
-            let symbols = items.iter().all(|i| !matches!(i, Node::Val(_)))
-                && items.iter().filter(|i| matches!(i, Node::Num(_))).count() <= 1;
-            items.iter().map(node_factor).collect::<Vec<_>>().join(if symbols { " " } else { " × " })
-        }
+        Node::Times(items) => product(items),
         Node::Plus(a, b) => format!("{} + {}", node(a), node(b)),
         Node::Minus(a, b) => format!("{} − {}", node(a), node(b)),
         Node::Neg(a) => format!("−{}", node(a)),
@@ -139,6 +135,28 @@ pub fn node(n: &Node) -> String {
         Node::Abs(a) => format!("|{}|", node(a)),
         Node::Paren(a) => format!("({})", node(a)),
         Node::Rel(op, a, b) => format!("{} {} {}", node(a), Op::sign(*op), node(b)),
+    }
+}
+
+/// A product. Symbols stand side by side; between two figures, and throughout a product of values, a sign
+/// stands.
+fn product(items: &[Node]) -> String {
+    let values = items.iter().any(|i| matches!(i, Node::Val(_)));
+    let mut out = String::new();
+    for (i, item) in items.iter().enumerate() {
+        if i > 0 {
+            out.push_str(if values || starts_with_figure(item) { " × " } else { " " });
+        }
+        out.push_str(&node_factor(item));
+    }
+    out
+}
+
+fn starts_with_figure(n: &Node) -> bool {
+    match n {
+        Node::Num(_) | Node::Val(_) => true,
+        Node::Power(base, _) => starts_with_figure(base),
+        _ => false,
     }
 }
 

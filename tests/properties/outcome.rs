@@ -1,0 +1,90 @@
+//! The four outcomes: what fails fails, what is outside is outside, what is open is a condition.
+
+use perpend::checks::Section;
+use perpend::checks::outcome::{Hold, Outcome, of_job, of_sheet};
+use perpend::quantity::Force;
+use perpend::trace::{Outside, Sheet};
+use perpend::verify;
+use proptest::prelude::*;
+
+fn sheet(fails: usize, holds: usize, outside: usize) -> Sheet {
+    let mut s = Sheet::silent();
+    for (count, demand) in [(holds, 1.0), (fails, 2.0)] {
+        for n in 0..count {
+            let (V_Ed, V_Rd) = (Force::new(demand), Force::new(1.0));
+            verify!(s, &format!("check-{n}"), "", "", V_Ed <= V_Rd);
+        }
+    }
+    (0..outside).for_each(|_| s.leave(Outside::new("x", "clause", "limit")));
+    s
+}
+
+fn hold(of: &[&str], closed: bool) -> Hold {
+    Hold {
+        mark: "H1".to_owned(),
+        text: "Before the wall comes down: look.".to_owned(),
+        of: of.iter().map(|&m| m.to_owned()).collect(),
+        closed: closed.then(|| "RH, 1 May 2026".to_owned()),
+    }
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(64))]
+
+    #[test]
+    fn precedence(
+        sheets in prop::collection::vec((0..2_usize, 0..3_usize, 0..2_usize), 1..4),
+        open in 0..3_usize,
+        closed in 0..3_usize,
+    ) {
+        let sections: Vec<Section> = sheets
+            .iter()
+            .enumerate()
+            .map(|(n, &(f, h, o))| Section::plain(&format!("s{n}"), "Title", sheet(f, h, o)))
+            .collect();
+        let holds: Vec<Hold> = (0..open).map(|_| hold(&["R1"], false)).chain((0..closed).map(|_| hold(&[], true))).collect();
+        let found = of_job(&sections, &holds);
+        let fails = sheets.iter().any(|s| s.0 > 0);
+        let outside = sheets.iter().any(|s| s.2 > 0);
+        let expected = if fails {
+            Outcome::NotAdequate
+        } else if outside {
+            Outcome::Outside
+        } else if open > 0 {
+            Outcome::Conditional(open)
+        } else {
+            Outcome::Adequate
+        };
+        prop_assert_eq!(found, expected);
+    }
+}
+
+/// A hold point concerns the marks that it names, or all where it names none; a closed one concerns nobody.
+#[test]
+fn hold_points_concern_whom_they_name() {
+    let good = sheet(0, 1, 0);
+    let of = |mark: &str, holds: &[Hold]| of_sheet(&good, mark, holds);
+    assert_eq!(of("R1", &[hold(&["R1"], false)]), Outcome::Conditional(1));
+    assert_eq!(of("R2", &[hold(&["R1"], false)]), Outcome::Adequate);
+    assert_eq!(of("R2", &[hold(&[], false), hold(&["R1", "R2"], false)]), Outcome::Conditional(2));
+    assert_eq!(of("R1", &[hold(&["R1"], true)]), Outcome::Adequate);
+    let bad = sheet(1, 3, 1);
+    assert_eq!(of_sheet(&bad, "R1", &[hold(&[], false)]), Outcome::NotAdequate);
+    assert_eq!(of_sheet(&sheet(0, 3, 1), "R1", &[hold(&[], false)]), Outcome::Outside);
+}
+
+/// The only words there are.
+#[test]
+fn words() {
+    let all = [
+        (Outcome::Adequate, "adequate", "adequate"),
+        (Outcome::Conditional(1), "adequate once 1 hold point is closed", "conditional"),
+        (Outcome::Conditional(4), "adequate once 4 hold points are closed", "conditional"),
+        (Outcome::NotAdequate, "not adequate", "not-adequate"),
+        (Outcome::Outside, "outside the method", "outside"),
+    ];
+    for (outcome, words, kind) in all {
+        assert_eq!(outcome.words(), words);
+        assert_eq!(outcome.kind(), kind);
+    }
+}
