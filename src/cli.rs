@@ -202,7 +202,9 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
     let age = many::workers(paths.len()).max(2);
     let work = |file: &PathBuf| {
         let pack = set(file, into);
-        pack::evict(age);
+        if paths.len() > 1 {
+            pack::evict(age);
+        }
         pack
     };
     let take = |file: &PathBuf, result| {

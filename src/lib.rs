@@ -73,7 +73,7 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let data = report::pack(&building, &results, text, &digest);
     let files = photographs(&building, folder)?;
     let typeset =
-        pack::typeset(&data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+        pack::typeset(data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
 }

@@ -87,7 +87,7 @@ struct Variation {
 impl Variation {
     fn new(seed: u64) -> Self {
         let mut dice = Dice(seed);
-        let (wind, panel) = (dice.between(0.5, 2.0), dice.between(0.6, 1.3));
+        let (wind, panel) = (dice.between(0.1, 1.5), dice.between(0.5, 1.0));
         Self { seed, dice, wind, panel, lengths_twice: false }
     }
 
@@ -105,7 +105,7 @@ impl Variation {
             out.push_str(&self.line(&section, line));
             out.push('\n');
         }
-        for _ in 0..self.dice.below(4) {
+        for _ in 0..self.dice.below(4).saturating_sub(1) {
             let text = self.dice.title(12);
             out.push_str(&format!("\n[[hold_points]]\ntext = \"Before the wall comes down: {text}.\"\n"));
         }

@@ -171,6 +171,8 @@ pub struct Return {
     pub supported_wall_height: Length,
     /// Distance to the nearest opening in that wall.
     pub nearest_opening: Option<Length>,
+    /// What stiffens the other vertical edge, and how that is known; none where that end is free.
+    pub far_end: Option<String>,
     /// Which leaves act.
     pub acts: Acts,
     /// Vertical loads; own weight is added by the check.

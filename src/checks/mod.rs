@@ -122,3 +122,6 @@ pub fn run(building: &Building) -> Results {
     let outcome = outcome::of_job(&sections, &job.holds);
     Results { sections, holds: job.holds, outcome }
 }
+
+#[cfg(test)]
+mod tests;

@@ -15,10 +15,10 @@ use crate::sketch::{
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
 
-/// Frames on the sheet, mm: the tall elevation on the left, beside it the section over the diagram.
-const ELEVATION: Frame = Frame::new(90.0, 124.0);
-const SECTION: Frame = Frame::new(76.0, 64.0);
-const ACTIONS: Frame = Frame::new(76.0, 56.0);
+/// Frames on the sheet, mm: elevation and section side by side, the diagram under the lower one.
+const ELEVATION: Frame = Frame::new(100.0, 90.0);
+const SECTION: Frame = Frame::new(62.0, 64.0);
+const ACTIONS: Frame = Frame::new(62.0, 44.0);
 
 /// The three drawings of a return.
 pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> Vec<Drawing> {
@@ -32,6 +32,7 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
     ];
     // The case of the force is too long for a label beside it.
     out[1].caption = format!("{}; {}", out[1].caption, worst(matrix.as_ref(), Check::Toe).name());
+    out[2].caption.push_str("; moment of wind and tilt");
     for (drawing, kind) in out.iter_mut().zip(["elevation", "section", "actions"]) {
         drawing.name = format!("{}-{kind}", r.mark);
     }
@@ -217,7 +218,7 @@ fn diagram(r: &Return, m: &Model, case: Case, annex: &Annex) -> ReturnActions {
         curves: vec![
             Curve {
                 symbol: "M_W".to_owned(),
-                words: "moment of wind and tilt".to_owned(),
+                words: "moment".to_owned(),
                 samples: places.iter().map(|&z| (z.base(), moment(z).base() / 1e6)).collect(),
                 values: printed.iter().map(|&z| (z.base(), value("M_W", moment(z).dynamic()))).collect(),
             },

@@ -68,6 +68,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     let restraint = t.need("restraint").choice(Restraint::WORDS, Restraint::from_word);
     let supported_wall_height: Option<Length> = t.need("supported_wall_height").quantity(&SUPPORTED);
     let nearest_opening = t.may("nearest_opening").quantity(&OPENING);
+    let far_end = t.may("far_end").text();
     let acts = t.may("acts");
     let acts =
         if acts.value.is_some() { acts.choice(Acts::WORDS, Acts::from_word) } else { Some(Acts::Loaded) };
@@ -133,6 +134,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         restraint: restraint?,
         supported_wall_height: supported_wall_height?,
         nearest_opening,
+        far_end,
         acts: acts?,
         loads: loads.into_iter().collect::<Option<_>>()?,
         junction: junction?,

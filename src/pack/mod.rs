@@ -83,12 +83,10 @@ impl std::error::Error for PackError {}
 ///
 /// # Errors
 /// [`PackError`] where the data does not serialise, a template stops, or a sign has no glyph.
-pub fn typeset(
-    data: &impl Serialize,
-    files: &[(String, Vec<u8>)],
-    ident: &str,
-) -> Result<Typeset, PackError> {
-    let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
+pub fn typeset(data: impl Serialize, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
+    let json = serde_json::to_vec(&data).map_err(|error| PackError::Data(error.to_string()))?;
+    // Its trees are as large as the sheets to come: while those are set, only the text is kept.
+    drop(data);
     pdf::typeset(json, files, ident)
 }
 

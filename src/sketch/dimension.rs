@@ -33,7 +33,8 @@ pub fn mm(length: f64) -> String {
     if (length - length.round()).abs() < 0.05 {
         format!("{}", length.round())
     } else {
-        format!("{length:.1}")
+        // A hair up, so that 6646.25 found in two ways prints the same.
+        format!("{:.1}", length + 1e-6)
     }
 }
 

@@ -39,7 +39,7 @@ mod samples;
 pub mod scale;
 pub mod stability_plan;
 #[cfg(test)]
-mod tests;
+pub(crate) mod tests;
 pub mod text;
 pub mod view;
 

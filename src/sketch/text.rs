@@ -92,11 +92,11 @@ impl Text {
             };
             let face = face(run.style);
             let unit = size / f64::from(face.units_per_em());
-            for glyph in run.text.chars().map(|c| face.glyph_index(c).unwrap_or_default()) {
-                extent.width += unit * f64::from(face.glyph_hor_advance(glyph).unwrap_or(0));
-                if let Some(ink) = face.glyph_bounding_box(glyph) {
-                    extent.ascent = extent.ascent.max(unit * f64::from(ink.y_max) - drop);
-                    extent.descent = extent.descent.max(drop - unit * f64::from(ink.y_min));
+            for sign in run.text.chars().map(|c| sign(run.style, c)) {
+                extent.width += unit * f64::from(sign.advance);
+                if let Some((foot, top)) = sign.ink {
+                    extent.ascent = extent.ascent.max(unit * f64::from(top) - drop);
+                    extent.descent = extent.descent.max(drop - unit * f64::from(foot));
                 }
             }
         }
@@ -110,17 +110,50 @@ impl From<String> for Text {
     }
 }
 
+/// A sign of a face, in units of the face.
+#[derive(Clone, Copy)]
+struct Sign {
+    advance: u16,
+    /// Foot and top of its ink; none for a blank.
+    ink: Option<(i16, i16)>,
+}
+
+/// How many signs are kept once measured: up to the end of Greek. A face gives the box of a sign only by running
+/// through its whole outline, and labels are measured over and over while they look for their place.
+const KEPT: usize = 0x400;
+
+fn sign(style: Style, c: char) -> Sign {
+    type Signs = [OnceLock<Sign>; KEPT];
+    static SIGNS: [Signs; 3] = [const { [const { OnceLock::new() }; KEPT] }; 3];
+    let measured = || {
+        let face = face(style);
+        let glyph = face.glyph_index(c).unwrap_or_default();
+        Sign {
+            advance: face.glyph_hor_advance(glyph).unwrap_or(0),
+            ink: face.glyph_bounding_box(glyph).map(|ink| (ink.y_min, ink.y_max)),
+        }
+    };
+    match SIGNS[index(style)].get(c as usize) {
+        Some(kept) => *kept.get_or_init(measured),
+        None => measured(),
+    }
+}
+
+const fn index(style: Style) -> usize {
+    match style {
+        Style::Plain | Style::Sub => 0,
+        Style::Italic => 1,
+        Style::Bold => 2,
+    }
+}
+
 /// The embedded face of a style.
 pub(super) fn face(style: Style) -> &'static Face<'static> {
     static FACES: OnceLock<[Face<'static>; 3]> = OnceLock::new();
     let faces = FACES.get_or_init(|| {
         [REGULAR, ITALIC, SEMIBOLD].map(|data| Face::parse(data, 0).expect("embedded fonts parse"))
     });
-    match style {
-        Style::Plain | Style::Sub => &faces[0],
-        Style::Italic => &faces[1],
-        Style::Bold => &faces[2],
-    }
+    &faces[index(style)]
 }
 
 /// Height of a capital, em.

@@ -1,1 +1,80 @@
-fn main() {}
+//! Reading, checking and drawing.
+
+use divan::{Bencher, black_box};
+use perpend::checks::returns::build::Inputs;
+use perpend::checks::returns::{self, remedy};
+use perpend::checks::{self, Job, LIST};
+use perpend::job;
+use perpend::trace::Sheet;
+
+use super::jobs;
+
+fn demo(name: &str) -> String {
+    jobs::demos().into_iter().find(|(n, _)| n == name).expect("a demo job").1
+}
+
+const NAMES: [&str; 5] = ["concrete-hall", "hold-points", "lime-terrace", "rear-opening", "short-nib"];
+
+/// Job file to building.
+#[divan::bench]
+fn read(bencher: Bencher<'_, '_>) {
+    let text = demo("rear-opening");
+    bencher.bench(|| job::read("job.toml", black_box(&text)));
+}
+
+/// Job file to results: what `perpend check` does.
+#[divan::bench(args = NAMES)]
+fn whole(bencher: Bencher<'_, '_>, name: &str) {
+    let text = demo(name);
+    bencher.bench(|| perpend::check("job.toml", black_box(&text)));
+}
+
+/// One kind of sheet: plan, loads, wind, materials, stability, returns, panels, chain; drawings included.
+#[divan::bench(args = 0..8)]
+fn kind(bencher: Bencher<'_, '_>, n: usize) {
+    let building = job::read("job.toml", &demo("rear-opening")).expect("a valid job");
+    let job = Job::new(&building);
+    bencher.bench(|| LIST[n](black_box(&job)));
+}
+
+fn with_inputs(name: &str, run: impl FnOnce(&Inputs<'_>)) {
+    let building = job::read("job.toml", &demo(name)).expect("a valid job");
+    let job = Job::new(&building);
+    let wind = *job.wind.as_ref().expect("wind within the method");
+    run(&Inputs {
+        building: &building,
+        ret: &building.returns[0],
+        wind,
+        storey: job.sharing(),
+        annex: &job.annex,
+    });
+}
+
+/// One return, every check in every case, nothing printed: what a search runs at each try.
+#[divan::bench]
+fn one_return_silent(bencher: Bencher<'_, '_>) {
+    with_inputs("rear-opening", |inputs| {
+        bencher.bench(|| returns::remedy::passes(black_box(inputs), returns::build::Change::NONE));
+    });
+}
+
+/// One return on a sheet.
+#[divan::bench]
+fn one_return_recorded(bencher: Bencher<'_, '_>) {
+    with_inputs("rear-opening", |inputs| {
+        bencher.bench(|| returns::check(&mut Sheet::recorder(), black_box(inputs)));
+    });
+}
+
+/// What would make a return pass.
+#[divan::bench]
+fn remedies(bencher: Bencher<'_, '_>) {
+    with_inputs("short-nib", |inputs| bencher.bench(|| remedy::table(black_box(inputs))));
+}
+
+/// All sections from a building.
+#[divan::bench]
+fn building_to_sections(bencher: Bencher<'_, '_>) {
+    let building = job::read("job.toml", &demo("rear-opening")).expect("a valid job");
+    bencher.bench(|| checks::run(black_box(&building)));
+}

@@ -6,15 +6,19 @@ use crate::jobs;
 #[test]
 fn one_bad_job_holds_up_no_other() {
     let (first, last) = (demo("short-nib"), demo("lime-terrace"));
-    let place = Place::with(&[("a.toml", &first), ("b.toml", "[job]\n"), ("c.toml", jobs::START), ("d.toml", &last)]);
-    let ran = place.run(&["sheet", "a.toml", "b.toml", "c.toml", "missing.toml", "d.toml", "--into", "packs"]);
+    let place =
+        Place::with(&[("a.toml", &first), ("b.toml", "[job]\n"), ("c.toml", jobs::START), ("d.toml", &last)]);
+    let ran =
+        place.run(&["sheet", "a.toml", "b.toml", "c.toml", "missing.toml", "d.toml", "--into", "packs"]);
     assert_eq!(ran.code, 2);
     assert!(ran.err.contains("b.toml") && ran.err.contains("missing.toml"), "{}", ran.err);
     let packs = names(&place.path().join("packs"));
     assert_eq!(packs.len(), 3, "{packs:?}");
     // In the order of the call.
     let numbers: Vec<&str> = ran.out.lines().map(|l| &l["packs/".len().."packs/".len() + 4]).collect();
-    let number = |text: &str| text.lines().find_map(|l| l.strip_prefix("number = \"")).expect("a number")[..4].to_owned();
+    let number = |text: &str| {
+        text.lines().find_map(|l| l.strip_prefix("number = \"")).expect("a number")[..4].to_owned()
+    };
     assert_eq!(numbers, [number(&first), number(jobs::START), number(&last)]);
 }
 
@@ -47,7 +51,11 @@ fn two_jobs_of_one_number_do_not_replace_each_other() {
     let place = Place::with(&[("one.toml", jobs::START), ("two.toml", &other)]);
     let ran = place.run(&["sheet", "one.toml", "two.toml"]);
     assert_eq!(ran.code, 2);
-    assert!(ran.err.contains("one.toml has just been written there") && ran.err.contains("help:"), "{}", ran.err);
+    assert!(
+        ran.err.contains("one.toml has just been written there") && ran.err.contains("help:"),
+        "{}",
+        ran.err
+    );
     assert_eq!(ran.out.lines().count(), 1, "{}", ran.out);
     assert_eq!(place.list().len(), 3);
 }

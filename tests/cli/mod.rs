@@ -68,7 +68,11 @@ impl Place {
 impl From<Output> for Ran {
     fn from(output: Output) -> Self {
         let text = |bytes: Vec<u8>| String::from_utf8(bytes).expect("UTF-8");
-        Self { code: output.status.code().expect("an exit code"), out: text(output.stdout), err: text(output.stderr) }
+        Self {
+            code: output.status.code().expect("an exit code"),
+            out: text(output.stdout),
+            err: text(output.stderr),
+        }
     }
 }
 
@@ -137,7 +141,11 @@ fn start_leaves_a_file_alone() {
     let place = Place::with(&[("house.toml", "mine")]);
     let ran = place.run(&["start", "house.toml"]);
     assert_eq!(ran.code, 2);
-    assert!(ran.err.contains("house.toml") && ran.err.contains("left alone") && ran.err.contains("help:"), "{}", ran.err);
+    assert!(
+        ran.err.contains("house.toml") && ran.err.contains("left alone") && ran.err.contains("help:"),
+        "{}",
+        ran.err
+    );
     assert_eq!(place.get("house.toml"), b"mine");
     assert_eq!(place.list(), ["house.toml"]);
 }
@@ -147,7 +155,13 @@ fn help_teaches_with_examples() {
     let place = Place::empty();
     let whole = place.run(&["--help"]);
     assert_eq!(whole.code, 0);
-    for part in ["perpend start rear-opening.toml", "perpend check", "perpend sheet", "Exit codes: 0 adequate", "unsigned"] {
+    for part in [
+        "perpend start rear-opening.toml",
+        "perpend check",
+        "perpend sheet",
+        "Exit codes: 0 adequate",
+        "unsigned",
+    ] {
         assert!(whole.out.contains(part), "{part} is not in {}", whole.out);
     }
     for command in ["start", "check", "sheet"] {

@@ -21,7 +21,11 @@ fn json_is_sound_for_good_and_bad_jobs() {
     assert_eq!(files, ["good.toml", "bad.toml", "short.toml", "missing.toml"]);
 
     assert_eq!(all[0]["job"], "2419");
-    let checks = all[0]["sheets"].as_array().expect("sheets").iter().flat_map(|s| s["checks"].as_array().expect("checks"));
+    let checks = all[0]["sheets"]
+        .as_array()
+        .expect("sheets")
+        .iter()
+        .flat_map(|s| s["checks"].as_array().expect("checks"));
     let mut count = 0;
     for check in checks {
         count += 1;
@@ -49,7 +53,8 @@ fn lines_and_json_agree() {
     assert!(lines.trim_end().ends_with(&format!("Outcome: {words}")), "{lines}");
     for sheet in record["sheets"].as_array().expect("sheets") {
         for check in sheet["checks"].as_array().expect("checks") {
-            let (what, ratio) = (check["check"].as_str().expect("words"), check["ratio_printed"].as_str().expect("a ratio"));
+            let (what, ratio) =
+                (check["check"].as_str().expect("words"), check["ratio_printed"].as_str().expect("a ratio"));
             assert!(lines.lines().any(|l| l.contains(what) && l.contains(ratio)), "{what} {ratio}: {lines}");
         }
     }
@@ -85,7 +90,9 @@ fn the_pack_stands_beside_its_job() {
 
 #[test]
 fn file_names_keep_to_plain_signs() {
-    let text = jobs::START.replace("number = \"2419\"", "number = \"24-19_b\"").replace("letter = \"A\"", "letter = \"C1\"");
+    let text = jobs::START
+        .replace("number = \"2419\"", "number = \"24-19_b\"")
+        .replace("letter = \"A\"", "letter = \"C1\"");
     let place = Place::with(&[("dëmo job.toml", &text)]);
     let ran = place.run(&["sheet", "dëmo job.toml", "--times"]);
     assert_ne!(ran.code, 2, "{}", ran.err);

@@ -70,7 +70,11 @@ fn a_place_that_cannot_be_written_to() {
 #[test]
 fn a_folder_that_takes_no_files() {
     let place = Place::with(&[("job.toml", jobs::START)]);
-    refuses(&place, &["sheet", "job.toml", "--into", "/proc/self"], &["/proc/self", "cannot be written", "nothing was changed"]);
+    refuses(
+        &place,
+        &["sheet", "job.toml", "--into", "/proc/self"],
+        &["/proc/self", "cannot be written", "nothing was changed"],
+    );
 }
 
 #[test]

@@ -25,7 +25,8 @@ fn demos() -> &'static [Demo] {
     static ALL: OnceLock<Vec<Demo>> = OnceLock::new();
     ALL.get_or_init(|| {
         let set = |(name, text): (String, String)| {
-            let made = perpend::sheet(&name, &text, &jobs::folder()).unwrap_or_else(|e| panic!("{name}: {e}"));
+            let made =
+                perpend::sheet(&name, &text, &jobs::folder()).unwrap_or_else(|e| panic!("{name}: {e}"));
             let read = Read::new(&made.typeset.pdf);
             Demo { name, text, made, read }
         };
@@ -77,9 +78,19 @@ fn every_sheet_says_what_it_is() {
         for (n, sheet) in texts.iter().enumerate() {
             let count = format!("sheet {} of {}", n + 1, texts.len());
             for words in [&pack.job.number, &pack.job.title, "not signed", &version, &pack.digest, &count] {
-                assert!(sheet.contains(&squeeze(words)), "{} sheet {}: no {words:?} in {sheet}", demo.name, n + 1);
+                assert!(
+                    sheet.contains(&squeeze(words)),
+                    "{} sheet {}: no {words:?} in {sheet}",
+                    demo.name,
+                    n + 1
+                );
             }
-            assert!(!sheet.contains('\u{fffd}'), "{} sheet {}: a sign without its meaning: {sheet}", demo.name, n + 1);
+            assert!(
+                !sheet.contains('\u{fffd}'),
+                "{} sheet {}: a sign without its meaning: {sheet}",
+                demo.name,
+                n + 1
+            );
         }
     }
 }
@@ -117,8 +128,10 @@ fn every_font_is_embedded_and_readable() {
 fn every_result_links_to_its_working() {
     for demo in demos() {
         let (texts, links) = (demo.read.texts(), demo.read.links());
-        let first = texts.iter().position(|t| t.contains("checkdemandresistance")).expect("a sheet of results");
-        let last = texts.iter().rposition(|t| t.contains("checkdemandresistance")).expect("a sheet of results");
+        let first =
+            texts.iter().position(|t| t.contains("checkdemandresistance")).expect("a sheet of results");
+        let last =
+            texts.iter().rposition(|t| t.contains("checkdemandresistance")).expect("a sheet of results");
         let rows: Vec<_> = data(demo).schedule.into_iter().filter(|row| !row.anchor.is_empty()).collect();
         let from_results: Vec<usize> =
             links.iter().filter(|l| (first..=last).contains(&l.from)).map(|l| l.to).collect();
@@ -143,7 +156,8 @@ fn every_section_has_a_bookmark() {
         for section in &demo.made.results.sections {
             let title = squeeze(&format!("{}{}", section.mark, section.title));
             let found = marks.iter().find(|(words, _)| squeeze(words) == title);
-            let (_, sheet) = found.unwrap_or_else(|| panic!("{}: {title} has no bookmark in {marks:?}", demo.name));
+            let (_, sheet) =
+                found.unwrap_or_else(|| panic!("{}: {title} has no bookmark in {marks:?}", demo.name));
             assert!(texts[*sheet].contains(&title), "{}: {title} leads to sheet {}", demo.name, sheet + 1);
         }
     }
@@ -171,7 +185,43 @@ fn the_job_file_travels_inside() {
     for demo in demos() {
         let all = demo.read.attachments();
         let job = all.iter().find(|(name, _)| name.ends_with("job.toml"));
-        let (_, bytes) = job.unwrap_or_else(|| panic!("{}: {:?}", demo.name, all.iter().map(|(n, _)| n).collect::<Vec<_>>()));
+        let (_, bytes) = job
+            .unwrap_or_else(|| panic!("{}: {:?}", demo.name, all.iter().map(|(n, _)| n).collect::<Vec<_>>()));
         assert!(bytes == demo.text.as_bytes(), "{}: the job file inside is another", demo.name);
+    }
+}
+
+/// Lays out what the typesetter's own command line needs to set the start job from the same data, and a hundred
+/// different jobs: the yardsticks for speed.
+///
+/// ```text
+/// cargo test --test main yardstick -- --ignored
+/// typst compile --ignore-system-fonts --font-path fonts --root target/yardstick \
+///     --pdf-standard a-3a,ua-1 target/yardstick/templates/pack.typ target/yardstick/pack.pdf
+/// perpend sheet --into target/yardstick/packs target/yardstick/hundred/*.toml
+/// ls target/yardstick/hundred/*.toml | xargs -P2 -n1 perpend sheet --into target/yardstick/packs
+/// ```
+#[test]
+#[ignore = "writes target/yardstick"]
+fn yardstick() {
+    let root = std::path::Path::new(env!("CARGO_MANIFEST_DIR"));
+    let demo = demos().iter().find(|demo| demo.text == jobs::START).expect("the start job is a demo job");
+    let folder = root.join("target/yardstick");
+    std::fs::create_dir_all(folder.join("templates/parts")).expect("a folder");
+    for part in ["templates", "templates/parts"] {
+        for entry in std::fs::read_dir(root.join(part)).expect("templates") {
+            let path = entry.expect("an entry").path();
+            if path.extension().is_some_and(|e| e == "typ") {
+                let name = path.file_name().expect("a name");
+                std::fs::copy(&path, folder.join(part).join(name)).expect("a copy");
+            }
+        }
+    }
+    std::fs::write(folder.join("data.json"), serde_json::to_vec(&data(demo)).expect("JSON")).expect("a file");
+
+    let hundred = folder.join("hundred");
+    std::fs::create_dir_all(&hundred).expect("a folder");
+    for n in 0..100 {
+        std::fs::write(hundred.join(format!("{n:02}.toml")), jobs::varied(n)).expect("a file");
     }
 }

@@ -9,7 +9,8 @@ const PLACE: &[u8] = b"51 deg 4 min N, 1 deg 18 min W";
 
 /// A JPEG as a telephone writes it: turned on its side, with the place where it was taken in an EXIF block.
 fn taken_outside() -> Vec<u8> {
-    let picture = image::RgbImage::from_fn(2400, 1200, |x, y| image::Rgb([(x % 251) as u8, (y % 241) as u8, 90]));
+    let picture =
+        image::RgbImage::from_fn(2400, 1200, |x, y| image::Rgb([(x % 251) as u8, (y % 241) as u8, 90]));
     let mut plain = Vec::new();
     JpegEncoder::new_with_quality(&mut plain, 90).encode_image(&picture).expect("encodes");
     // One directory of two entries: orientation 6, and the pointer to the GPS directory, which holds the place as
@@ -37,7 +38,10 @@ fn a_photograph_leaves_its_place_behind() {
     let taken = taken_outside();
     assert!(holds(&taken, PLACE) && holds(&taken, b"Exif"));
     std::fs::write(folder.path().join("nib.jpg"), &taken).expect("a photograph");
-    let text = format!("{}\n[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib from the kitchen\"\nmark = \"R1\"\n", jobs::START);
+    let text = format!(
+        "{}\n[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib from the kitchen\"\nmark = \"R1\"\n",
+        jobs::START
+    );
     let made = perpend::sheet("job.toml", &text, folder.path()).expect("a pack");
 
     assert!(!holds(&made.typeset.pdf, PLACE) && !holds(&made.typeset.pdf, b"Exif"));
@@ -54,7 +58,8 @@ fn a_photograph_leaves_its_place_behind() {
 fn a_photograph_that_cannot_be_used_is_named_and_nothing_is_made() {
     let folder = tempfile::tempdir().expect("a folder");
     let text = format!("{}\n[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib\"\n", jobs::START);
-    let missing = perpend::sheet("job.toml", &text, folder.path()).err().expect("it is not there").to_string();
+    let missing =
+        perpend::sheet("job.toml", &text, folder.path()).err().expect("it is not there").to_string();
     assert!(missing.contains("nib.jpg") && missing.contains("help:"), "{missing}");
     let taken = taken_outside();
     std::fs::write(folder.path().join("nib.jpg"), &taken[..taken.len() / 2]).expect("half a photograph");

@@ -52,11 +52,15 @@ impl Read {
             .filter(|d| d.get::<Name<'_>>("Type").is_some_and(|t| t.as_str() == "Font"))
             .filter(|d| d.get::<Name<'_>>("Subtype").is_some_and(|t| t.as_str() == "Type0"))
             .map(|font| {
-                let name = font.get::<Name<'_>>("BaseFont").map(|n| n.as_str().to_owned()).unwrap_or_default();
-                let inner = font.get::<Array<'_>>("DescendantFonts").and_then(|a| a.iter::<Dict<'_>>().next());
+                let name =
+                    font.get::<Name<'_>>("BaseFont").map(|n| n.as_str().to_owned()).unwrap_or_default();
+                let inner =
+                    font.get::<Array<'_>>("DescendantFonts").and_then(|a| a.iter::<Dict<'_>>().next());
                 let about = inner.and_then(|inner| inner.get::<Dict<'_>>("FontDescriptor"));
                 let file = about.is_some_and(|about| {
-                    ["FontFile", "FontFile2", "FontFile3"].iter().any(|key| about.get::<Stream<'_>>(key).is_some())
+                    ["FontFile", "FontFile2", "FontFile3"]
+                        .iter()
+                        .any(|key| about.get::<Stream<'_>>(key).is_some())
                 });
                 (name, file && font.get::<Stream<'_>>("ToUnicode").is_some())
             })
@@ -89,7 +93,8 @@ impl Read {
     pub fn tagged_and_titled(&self) -> (bool, bool) {
         let part = |key: &str, inner: &str| self.catalogue().get::<Dict<'_>>(key)?.get::<bool>(inner);
         (
-            part("MarkInfo", "Marked") == Some(true) && self.catalogue().get::<Dict<'_>>("StructTreeRoot").is_some(),
+            part("MarkInfo", "Marked") == Some(true)
+                && self.catalogue().get::<Dict<'_>>("StructTreeRoot").is_some(),
             part("ViewerPreferences", "DisplayDocTitle") == Some(true),
         )
     }
@@ -121,7 +126,9 @@ impl Read {
         for (from, page) in self.pdf.pages().iter().enumerate() {
             let Some(notes) = page.raw().get::<Array<'_>>("Annots") else { continue };
             for note in notes.iter::<Dict<'_>>() {
-                let to = self.target(&note).unwrap_or_else(|| panic!("a link on sheet {} leads nowhere", from + 1));
+                let to = self
+                    .target(&note)
+                    .unwrap_or_else(|| panic!("a link on sheet {} leads nowhere", from + 1));
                 out.push(Leads { from, to });
             }
         }
@@ -130,7 +137,8 @@ impl Read {
 
     /// The sheet that a link or a bookmark leads to.
     fn target(&self, of: &Dict<'_>) -> Option<usize> {
-        let place = of.get::<Object<'_>>("Dest").or_else(|| of.get::<Dict<'_>>("A")?.get::<Object<'_>>("D"))?;
+        let place =
+            of.get::<Object<'_>>("Dest").or_else(|| of.get::<Dict<'_>>("A")?.get::<Object<'_>>("D"))?;
         let place = match place {
             Object::String(name) => self.named(name.as_bytes())?,
             Object::Array(array) => array,
@@ -145,7 +153,9 @@ impl Read {
         fn search<'a>(node: &Dict<'a>, name: &[u8]) -> Option<Array<'a>> {
             if let Some(pairs) = node.get::<Array<'_>>("Names") {
                 let all: Vec<Object<'a>> = pairs.iter::<Object<'a>>().collect();
-                let hit = all.chunks(2).find(|pair| matches!(&pair[0], Object::String(s) if s.as_bytes() == name))?;
+                let hit = all
+                    .chunks(2)
+                    .find(|pair| matches!(&pair[0], Object::String(s) if s.as_bytes() == name))?;
                 return match &hit[1] {
                     Object::Array(array) => Some(array.clone()),
                     Object::Dict(dict) => dict.get("D"),
@@ -173,7 +183,8 @@ impl Read {
     /// The JPEG files inside, as they stand.
     pub fn photographs(&self) -> Vec<Vec<u8>> {
         let streams = self.pdf.objects().into_iter().filter_map(Object::into_stream);
-        let jpeg = |s: &Stream<'_>| s.dict().get::<Name<'_>>("Filter").is_some_and(|f| f.as_str() == "DCTDecode");
+        let jpeg =
+            |s: &Stream<'_>| s.dict().get::<Name<'_>>("Filter").is_some_and(|f| f.as_str() == "DCTDecode");
         streams.filter(jpeg).map(|s| s.raw_data().into_owned()).collect()
     }
 }
@@ -187,7 +198,8 @@ pub fn squeeze(text: &str) -> String {
 fn words(bytes: &[u8]) -> String {
     match bytes {
         [0xFE, 0xFF, rest @ ..] => {
-            let units: Vec<u16> = rest.chunks(2).map(|c| u16::from_be_bytes([c[0], *c.get(1).unwrap_or(&0)])).collect();
+            let units: Vec<u16> =
+                rest.chunks(2).map(|c| u16::from_be_bytes([c[0], *c.get(1).unwrap_or(&0)])).collect();
             String::from_utf16_lossy(&units)
         }
         other => other.iter().map(|b| char::from(*b)).collect(),
@@ -243,4 +255,3 @@ fn signs(codes: &[u8], map: Option<&Option<CMap>>, out: &mut String) {
         }
     }
 }
-

@@ -27,7 +27,10 @@ fn the_same_job_gives_the_same_bytes() {
     let second = pack(&place.path().join("one"), &[("TZ", "Europe/London"), ("LANG", "en_GB.UTF-8")]);
     assert!(first == second, "the same call twice");
     let elsewhere = place.path().join("another folder").join("ü");
-    let other = pack(&elsewhere, &[("TZ", "Pacific/Auckland"), ("LANG", "C"), ("LC_ALL", "C"), ("RAYON_NUM_THREADS", "1")]);
+    let other = pack(
+        &elsewhere,
+        &[("TZ", "Pacific/Auckland"), ("LANG", "C"), ("LC_ALL", "C"), ("RAYON_NUM_THREADS", "1")],
+    );
     assert!(first == other, "another folder, time zone, language and number of threads");
     let inside = perpend::sheet("job.toml", jobs::START, &elsewhere).expect("a pack").typeset.pdf;
     assert!(first == inside, "in a process that has set other packs");

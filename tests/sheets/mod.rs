@@ -28,7 +28,11 @@ fn pack(name: &str, job: &str) -> String {
         title(&mut out, &format!("{}{}{outcome}", marked(section), section.title));
         out.push_str(&text::sheet(&section.sheet));
         for drawing in &section.drawings {
-            let _ = writeln!(out, "\n[{}] {} {}\n  {}", drawing.name, drawing.caption, drawing.scale, drawing.alt);
+            let _ = writeln!(
+                out,
+                "\n[{}] {} {}\n  {}",
+                drawing.name, drawing.caption, drawing.scale, drawing.alt
+            );
         }
     }
     title(&mut out, "Cautions");
@@ -53,7 +57,8 @@ fn lines(out: &mut String, lines: &[String]) {
 fn front(out: &mut String, pack: &Pack) {
     let job = &pack.job;
     let _ = writeln!(out, "{} {}, revision {}", job.number, job.title, job.revision);
-    let _ = writeln!(out, "{}; for {}; to {}; {}", job.address.join(", "), job.client, job.authority, job.status);
+    let _ =
+        writeln!(out, "{}; for {}; to {}; {}", job.address.join(", "), job.client, job.authority, job.status);
     let _ = writeln!(out, "visited: {}; made by {}; {}", job.visited, pack.made.name, pack.unsigned_text);
     let _ = writeln!(out, "\nOUTCOME: {}\n{}", pack.outcome.words, pack.outcome.sentence);
     lines(out, &pack.warnings);
@@ -64,7 +69,10 @@ fn front(out: &mut String, pack: &Pack) {
     title(out, "Results");
     for row in &pack.schedule {
         let Scheduled { mark, check, demand, resistance, ratio, verdict, anchor, .. } = row;
-        let _ = writeln!(out, "  {mark:<4} {check:<44} {demand:>14} {resistance:>14} {ratio:>6}  {verdict}  ({anchor})");
+        let _ = writeln!(
+            out,
+            "  {mark:<4} {check:<44} {demand:>14} {resistance:>14} {ratio:>6}  {verdict}  ({anchor})"
+        );
     }
     title(out, "Hold points");
     for hold in &pack.holds {

@@ -1,6 +1,6 @@
 //! A return: a short length of wall that takes wind in its plane.
 //!
-//! * [`build`]: geometry, loads and wind of one return, on the sheet
+//! * [`build`]: geometry and loads of one return, on the sheet; [`lateral`]: how the wind reaches it
 //! * [`run`]: every check under every case, the worst recorded
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
@@ -10,6 +10,7 @@ pub mod actions;
 pub mod build;
 pub mod flexure;
 pub mod in_plane;
+pub mod lateral;
 pub mod model;
 pub mod remedy;
 pub mod rules;
@@ -48,7 +49,7 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         }
         if m.propped {
             s.heading(1, "What the head leans on");
-            build::head_reaction(s, &m, i.annex);
+            lateral::head_reaction(s, &m, i.annex);
             held_by(s, i);
         }
         s.heading(1, "Strength and slenderness");
@@ -86,8 +87,8 @@ fn remarks(s: &mut Sheet, i: &Inputs<'_>) {
         let words = r.junction.words.trim_end_matches('.');
         s.note(format!("The junction with {} is {word}: {words}.", r.junction.to));
         s.note(
-            "A flange on one side only bends the return across its plane as well; that is left out. The least \
-             reduction across the wall found for the return is used for the flange too.",
+            "Where the flange is longer on one side it bends the return across its plane as well; that is left out. \
+             The least reduction across the wall found for the return is used for the flange too.",
         );
     }
 }

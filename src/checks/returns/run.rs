@@ -152,26 +152,30 @@ impl Matrix {
     /// Runs everything on silent sheets.
     pub fn run(m: &Model, annex: &Annex, ready: Ready) -> Self {
         let cases = Case::all();
-        let checks: Vec<Check> =
-            Check::ALL.into_iter().filter(|c| c.applies(m) && *c != Check::Flexure).collect();
+        let checks = Self::checks(m);
         let ratio = |case: Case, check: Check| {
-            let mut s = Sheet::silent();
-            work(&mut s, m, annex, ready, case, &[check], "");
+            let s = silently(m, annex, ready, case, check);
             s.verdicts.iter().map(|v| v.ratio).fold(f64::NAN, f64::max)
         };
         let ratios = cases.iter().map(|&c| checks.iter().map(|&k| ratio(c, k)).collect()).collect();
         Self { cases, checks, ratios }
     }
 
+    /// Whether everything holds, on silent sheets; ends at the first that does not.
+    pub fn holds(m: &Model, annex: &Annex, ready: Ready) -> bool {
+        let checks = Self::checks(m);
+        let holds = |case: Case| checks.iter().all(|&check| silently(m, annex, ready, case, check).holds());
+        Case::all().into_iter().all(holds)
+    }
+
+    fn checks(m: &Model) -> Vec<Check> {
+        Check::ALL.into_iter().filter(|c| c.applies(m) && *c != Check::Flexure).collect()
+    }
+
     /// The case in which check number `k` is used most; the first of equals.
     pub fn worst(&self, k: usize) -> Option<usize> {
         let at = |i: usize| self.ratios[i][k];
         (0..self.cases.len()).filter(|&i| !at(i).is_nan()).reduce(|a, b| if at(b) > at(a) { b } else { a })
-    }
-
-    /// The largest ratio of all.
-    pub fn largest(&self) -> f64 {
-        self.ratios.iter().flatten().copied().filter(|r| !r.is_nan()).fold(0.0, f64::max)
     }
 
     /// The table of all ratios, the worst of each check marked: a row a check, a column a case.
@@ -205,6 +209,13 @@ impl Matrix {
             strong: Vec::new(),
         }
     }
+}
+
+/// One check in one case on a silent sheet.
+fn silently(m: &Model, annex: &Annex, ready: Ready, case: Case, check: Check) -> Sheet {
+    let mut s = Sheet::silent();
+    work(&mut s, m, annex, ready, case, &[check], "");
+    s
 }
 
 /// Two letters for a case: combination and direction.

@@ -1,0 +1,11 @@
+//! How long things take, inside one process. `cargo bench`; whole processes are measured from outside.
+
+mod check;
+#[path = "../jobs.rs"]
+mod jobs;
+mod many;
+mod sheet;
+
+fn main() {
+    divan::main();
+}
