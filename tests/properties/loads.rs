@@ -241,3 +241,50 @@ fn the_named_route_decides() {
     // And the checks take it.
     near(Job::new(&b).wind.expect("wind").overall.base(), terrain.overall.base());
 }
+
+/// A bonded wall stiffens the edge where it is at least h/5 = 500 mm long, both sides, and 0.3 t = 42 mm thick
+/// (5.5.1.2(5), from memory, check against the standard).
+#[test]
+fn a_wall_stiffens_where_it_is_long_and_thick_enough() {
+    use perpend::standards::en1996::slenderness::Stiffened;
+    let stiffened = |flange| {
+        let mut c = case();
+        (c.bonded, c.flange) = (true, flange);
+        all(&building(&c), Change::NONE).remove(0).stiffened
+    };
+    assert_eq!(stiffened((250.0, 250.0, 42.0)), Stiffened::One);
+    assert_eq!(stiffened((250.0, 249.0, 42.0)), Stiffened::None);
+    assert_eq!(stiffened((250.0, 250.0, 41.9)), Stiffened::None);
+}
+
+/// The reaction of a held head, design: 1.5 (H + w h/2) and the tilt: 1.5 (0.4 + 0.375) + 0.78 kN.
+#[test]
+fn the_reaction_of_a_held_head() {
+    let mut c = case();
+    c.propped = true;
+    let b = building(&c);
+    with_inputs(&b, |i| {
+        let mut s = Sheet::recorder();
+        perpend::checks::returns::check(&mut s, i);
+        assert!(s.faults.is_empty(), "{:?}", s.faults);
+        near(s.standing("R_Ed").expect("the reaction stands").value, 1.5 * (400.0 + 375.0) + 780.0);
+    });
+}
+
+/// Below a plan area of 0.04 m² a return is outside the method (8.1.3), at 0.04 m² it is within.
+#[test]
+fn a_plan_area_below_the_least_is_outside() {
+    let inside = |l: f64| {
+        let mut c = case();
+        c.l = l;
+        worked(&building(&c), Change::NONE).is_some()
+    };
+    assert!(inside(0.04e6 / 140.0 + 1e-6));
+    assert!(!inside(0.04e6 / 140.0 - 0.01));
+    let mut c = case();
+    c.l = 200.0;
+    let b = building(&c);
+    let results = perpend::checks::run(&b);
+    let sheet = &results.sections.iter().find(|s| s.id == "R1").expect("its sheet").sheet;
+    assert_eq!(sheet.outside.first().map(|o| o.clause.as_str()), Some("8.1.3"));
+}
