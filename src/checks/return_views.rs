@@ -156,13 +156,6 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     let sigma = st.sigma_toe?;
     let (l, t_f) = (m.l, a.flange.map_or(Length::ZERO, |f| f.t_f));
     let free = a.toe == Pressed::Free;
-    let centroid = match a.flange {
-        None => l / 2.0,
-        Some(f) => {
-            let (web, flange) = (l * m.t, f.b_f * f.t_f);
-            (web * (l / 2.0) - flange * (f.t_f / 2.0)) / (web + flange)
-        }
-    };
     let depth = l + t_f;
     let whole = if free || a.flange.is_none() { st.l_c } else { st.l_c + t_f };
     let compressed = if whole > depth { depth } else { whole };
@@ -174,9 +167,10 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     });
     Some(Stress {
         toe: if free { Toe::Free } else { Toe::Wall },
-        compressed: compressed.base(),
-        centroid: centroid.base(),
-        resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() },
+        // What was worked out is drawn to the millimetre, so that its label is exact.
+        compressed: compressed.base().round(),
+        middle: (l / 2.0).base(),
+        resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() }.round(),
         force: show("N_Ed", a.N_Ed.dynamic(), ""),
         at_toe: show("sigma", sigma.dynamic(), ""),
         at_heel: heel,

@@ -1,6 +1,6 @@
 //! The drawings of whole jobs: labels apart from each other and inside the frame, every value spoken.
 
-#[path = "../../tests/jobs.rs"]
+#[path = "../../tests/jobs/mod.rs"]
 mod jobs;
 
 use super::run;

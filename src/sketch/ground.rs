@@ -2,8 +2,6 @@
 
 use kurbo::{BezPath, Line, PathEl, Point, Rect};
 
-use super::board::polygon;
-
 /// Clear space between a label and the edge of a line, mm.
 const OFF_LINE: f64 = 0.3;
 
@@ -47,7 +45,13 @@ impl Ground {
         self.soft.iter().any(|ring| {
             let sides = ring.iter().zip(ring.iter().cycle().skip(1));
             let crossed = sides.clone().any(|(a, b)| crosses(Line::new(*a, *b), area));
-            crossed || kurbo::Shape::contains(&polygon(ring), area.center())
+            // Even-odd: a ring does not cross itself.
+            let centre = area.center();
+            let right_of = |(a, b): &(&Point, &Point)| {
+                (a.y > centre.y) != (b.y > centre.y)
+                    && centre.x < a.x + (b.x - a.x) * ((centre.y - a.y) / (b.y - a.y))
+            };
+            crossed || sides.filter(right_of).count() % 2 == 1
         })
     }
 

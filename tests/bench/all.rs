@@ -1,7 +1,7 @@
 //! How long things take, inside one process. `cargo bench`; whole processes are measured from outside.
 
 mod check;
-#[path = "../jobs.rs"]
+#[path = "../jobs/mod.rs"]
 mod jobs;
 mod many;
 mod sheet;

@@ -130,12 +130,15 @@ pub fn block_area(s: &mut Sheet, section: Section, a: Length) -> Area {
         );
         return A_c;
     }
+    // In three steps: as one formula its numbers are wider than a sheet.
+    calc!(s, "first principles", "step of the width over the second width", r_b = (b_1 - b_2) / b_2);
     calc!(
         s,
         "first principles",
-        "depth of the block centred on N",
-        y_c = min(a + sqrt(sq(a) + (b_1 - b_2) * d_1 * (2.0 * a - d_1) / b_2), L_s)
+        "reach of the block past N",
+        x_r = sqrt(sq(a) + r_b * d_1 * (2.0 * a - d_1))
     );
+    calc!(s, "first principles", "depth of the block centred on N", y_c = min(a + x_r, L_s));
     calc!(s, "first principles", "area of the uniform stress block", A_c = b_1 * d_1 + b_2 * (y_c - d_1));
     A_c
 }

@@ -21,7 +21,7 @@ pub fn demos() -> Vec<(String, String)> {
 }
 
 /// The job that `perpend start` writes.
-pub const START: &str = include_str!("../jobs/rear-opening.toml");
+pub const START: &str = include_str!("../../jobs/rear-opening.toml");
 
 /// A valid job that differs from a demo job in most of its figures, in its titles and in how many loads, hold points
 /// and assumptions it has. The same number gives the same job.
