@@ -125,7 +125,9 @@ fn each_leaf_takes_its_part_of_the_wind() {
     b.returns[0].loads[1].leaf = 0;
     let found = all(&b, Change::NONE);
     assert_eq!(found.len(), 2);
-    for (m, leaf, share, dead) in [(&found[0], "outer-", 100.0 / 240.0, 12e3), (&found[1], "inner-", 140.0 / 240.0, 30e3)] {
+    for (m, leaf, share, dead) in
+        [(&found[0], "outer-", 100.0 / 240.0, 12e3), (&found[1], "inner-", 140.0 / 240.0, 30e3)]
+    {
         assert_eq!(m.leaf, leaf);
         near(m.lateral.w_k.base(), 0.3 * share);
         near(m.lateral.H_k.base(), 400.0 * share);
@@ -164,11 +166,13 @@ fn restraint_by_floor_and_eccentricity() {
 fn strengths_by_hand() {
     let mut b = building(&case());
     b.materials[0].strength = UnitStrength::Normalised(Stress::new(1.5));
-    b.materials[0].f_xk1 = Some(perpend::building::Cause { value: Stress::new(0.1), reason: "test".to_owned() });
+    b.materials[0].f_xk1 =
+        Some(perpend::building::Cause { value: Stress::new(0.1), reason: "test".to_owned() });
     b.materials[0].f_xk2 = b.materials[0].f_xk1.clone();
     let f_k = |b: &perpend::building::Building| {
         let mut s = Sheet::recorder();
-        let found = derive(&mut s, b, &Annex::UK, &b.materials[0], &b.build_ups[0], Length::new(140.0)).expect("in the tables");
+        let found = derive(&mut s, b, &Annex::UK, &b.materials[0], &b.build_ups[0], Length::new(140.0))
+            .expect("in the tables");
         assert!(s.faults.is_empty(), "{:?}", s.faults);
         found.f_k.base()
     };
@@ -176,7 +180,8 @@ fn strengths_by_hand() {
     near(f_k(&b), hand);
     b.build_ups[0].collar_joint = true;
     near(f_k(&b), 0.8 * hand);
-    b.materials[0].f_k = Some(perpend::building::Cause { value: Stress::new(0.9), reason: "tested".to_owned() });
+    b.materials[0].f_k =
+        Some(perpend::building::Cause { value: Stress::new(0.9), reason: "tested".to_owned() });
     near(f_k(&b), 0.9);
 }
 
@@ -190,7 +195,13 @@ fn precompression_is_capped() {
     assert!(matrix.checks.contains(&Check::Middle));
     let mut s = Sheet::silent();
     let case = matrix.cases[0];
-    let a = perpend::checks::returns::actions::at(&mut s, &m, &Annex::UK, case, perpend::checks::returns::model::At::Middle);
+    let a = perpend::checks::returns::actions::at(
+        &mut s,
+        &m,
+        &Annex::UK,
+        case,
+        perpend::checks::returns::model::At::Middle,
+    );
     let st = perpend::checks::returns::in_plane::stresses(&mut s, &m, &a);
     flexure::at_mid_height(&mut s, &m, &a, &st, Num::new(0.1), ready.f_d, "middle");
     let v = s.verdicts.last().expect("a verdict");
