@@ -125,7 +125,9 @@ fn each_leaf_takes_its_part_of_the_wind() {
     b.returns[0].loads[1].leaf = 0;
     let found = all(&b, Change::NONE);
     assert_eq!(found.len(), 2);
-    for (m, leaf, share, dead) in [(&found[0], "outer-", 100.0 / 240.0, 12e3), (&found[1], "inner-", 140.0 / 240.0, 30e3)] {
+    for (m, leaf, share, dead) in
+        [(&found[0], "outer-", 100.0 / 240.0, 12e3), (&found[1], "inner-", 140.0 / 240.0, 30e3)]
+    {
         assert_eq!(m.leaf, leaf);
         near(m.lateral.w_k.base(), 0.3 * share);
         near(m.lateral.H_k.base(), 400.0 * share);
@@ -164,11 +166,13 @@ fn restraint_by_floor_and_eccentricity() {
 fn strengths_by_hand() {
     let mut b = building(&case());
     b.materials[0].strength = UnitStrength::Normalised(Stress::new(1.5));
-    b.materials[0].f_xk1 = Some(perpend::building::Cause { value: Stress::new(0.1), reason: "test".to_owned() });
+    b.materials[0].f_xk1 =
+        Some(perpend::building::Cause { value: Stress::new(0.1), reason: "test".to_owned() });
     b.materials[0].f_xk2 = b.materials[0].f_xk1.clone();
     let f_k = |b: &perpend::building::Building| {
         let mut s = Sheet::recorder();
-        let found = derive(&mut s, b, &Annex::UK, &b.materials[0], &b.build_ups[0], Length::new(140.0)).expect("in the tables");
+        let found = derive(&mut s, b, &Annex::UK, &b.materials[0], &b.build_ups[0], Length::new(140.0))
+            .expect("in the tables");
         assert!(s.faults.is_empty(), "{:?}", s.faults);
         found.f_k.base()
     };
@@ -176,7 +180,8 @@ fn strengths_by_hand() {
     near(f_k(&b), hand);
     b.build_ups[0].collar_joint = true;
     near(f_k(&b), 0.8 * hand);
-    b.materials[0].f_k = Some(perpend::building::Cause { value: Stress::new(0.9), reason: "tested".to_owned() });
+    b.materials[0].f_k =
+        Some(perpend::building::Cause { value: Stress::new(0.9), reason: "tested".to_owned() });
     near(f_k(&b), 0.9);
 }
 
@@ -190,7 +195,13 @@ fn precompression_is_capped() {
     assert!(matrix.checks.contains(&Check::Middle));
     let mut s = Sheet::silent();
     let case = matrix.cases[0];
-    let a = perpend::checks::returns::actions::at(&mut s, &m, &Annex::UK, case, perpend::checks::returns::model::At::Middle);
+    let a = perpend::checks::returns::actions::at(
+        &mut s,
+        &m,
+        &Annex::UK,
+        case,
+        perpend::checks::returns::model::At::Middle,
+    );
     let st = perpend::checks::returns::in_plane::stresses(&mut s, &m, &a);
     flexure::at_mid_height(&mut s, &m, &a, &st, Num::new(0.1), ready.f_d, "middle");
     let v = s.verdicts.last().expect("a verdict");
@@ -240,4 +251,51 @@ fn the_named_route_decides() {
     assert!((terrain.overall.base() - stated.overall.base()).abs() > 1e-5);
     // And the checks take it.
     near(Job::new(&b).wind.expect("wind").overall.base(), terrain.overall.base());
+}
+
+/// A bonded wall stiffens the edge where it is at least h/5 = 500 mm long, both sides, and 0.3 t = 42 mm thick
+/// (5.5.1.2(5), from memory, check against the standard).
+#[test]
+fn a_wall_stiffens_where_it_is_long_and_thick_enough() {
+    use perpend::standards::en1996::slenderness::Stiffened;
+    let stiffened = |flange| {
+        let mut c = case();
+        (c.bonded, c.flange) = (true, flange);
+        all(&building(&c), Change::NONE).remove(0).stiffened
+    };
+    assert_eq!(stiffened((250.0, 250.0, 42.0)), Stiffened::One);
+    assert_eq!(stiffened((250.0, 249.0, 42.0)), Stiffened::None);
+    assert_eq!(stiffened((250.0, 250.0, 41.9)), Stiffened::None);
+}
+
+/// The reaction of a held head, design: 1.5 (H + w h/2) and the tilt: 1.5 (0.4 + 0.375) + 0.78 kN.
+#[test]
+fn the_reaction_of_a_held_head() {
+    let mut c = case();
+    c.propped = true;
+    let b = building(&c);
+    with_inputs(&b, |i| {
+        let mut s = Sheet::recorder();
+        perpend::checks::returns::check(&mut s, i);
+        assert!(s.faults.is_empty(), "{:?}", s.faults);
+        near(s.standing("R_Ed").expect("the reaction stands").value, 1.5 * (400.0 + 375.0) + 780.0);
+    });
+}
+
+/// Below a plan area of 0.04 m² a return is outside the method (8.1.3), at 0.04 m² it is within.
+#[test]
+fn a_plan_area_below_the_least_is_outside() {
+    let inside = |l: f64| {
+        let mut c = case();
+        c.l = l;
+        worked(&building(&c), Change::NONE).is_some()
+    };
+    assert!(inside(0.04e6 / 140.0 + 1e-6));
+    assert!(!inside(0.04e6 / 140.0 - 0.01));
+    let mut c = case();
+    c.l = 200.0;
+    let b = building(&c);
+    let results = perpend::checks::run(&b);
+    let sheet = &results.sections.iter().find(|s| s.id == "R1").expect("its sheet").sheet;
+    assert_eq!(sheet.outside.first().map(|o| o.clause.as_str()), Some("8.1.3"));
 }
