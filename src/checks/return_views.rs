@@ -33,6 +33,10 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
     // The case of the force is too long for a label beside it.
     out[1].caption = format!("{}; {}", out[1].caption, worst(matrix.as_ref(), Check::Toe).name());
     out[2].caption.push_str("; moment of wind and tilt");
+    if !m.sheared() && m.lateral.M_k.base() == 0.0 {
+        // A held head passes its force on: there is nothing to draw along the height.
+        out.truncate(2);
+    }
     for (drawing, kind) in out.iter_mut().zip(["elevation", "section", "actions"]) {
         drawing.name = format!("{}-{kind}", r.mark);
     }
