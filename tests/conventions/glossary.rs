@@ -5,12 +5,13 @@ use std::collections::BTreeSet;
 use perpend::report::notation::names;
 use perpend::trace::glossary::GLOSSARY;
 
-use super::{demo_jobs, sources};
+use super::sources;
+use crate::jobs::demos;
 
 /// Symbols on the sheets of the demo jobs.
 fn shown() -> BTreeSet<String> {
     let mut out = BTreeSet::new();
-    for (name, text) in demo_jobs() {
+    for (name, text) in demos() {
         let (_, results) = perpend::check(&name, &text).unwrap_or_else(|e| panic!("{name}: {e}"));
         out.extend(names(&results.sections));
     }

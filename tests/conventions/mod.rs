@@ -35,18 +35,3 @@ fn walk(folder: &Path, out: &mut Vec<PathBuf>) {
         if path.is_dir() { walk(&path, out) } else { out.push(path) }
     }
 }
-
-/// Name and text of every job in `jobs/`, in order.
-pub fn demo_jobs() -> Vec<(String, String)> {
-    let mut files = Vec::new();
-    walk(&root().join("jobs"), &mut files);
-    files.sort();
-    files
-        .into_iter()
-        .filter(|p| p.extension().is_some_and(|e| e == "toml"))
-        .map(|p| {
-            let name = p.file_name().expect("a name").to_string_lossy().into_owned();
-            (name, std::fs::read_to_string(&p).expect("a job"))
-        })
-        .collect()
-}

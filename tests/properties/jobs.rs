@@ -3,7 +3,7 @@
 use perpend::error::Error;
 use proptest::prelude::*;
 
-use crate::conventions::demo_jobs;
+use crate::jobs::demos;
 
 /// Choices that a job may turn to another word.
 const CHOICES: [(&str, &[&str]); 10] = [
@@ -66,7 +66,7 @@ proptest! {
         scales in prop::collection::vec((any::<prop::sample::Index>(), 0.3..3.0_f64), 0..6),
         turns in prop::collection::vec((any::<prop::sample::Index>(), any::<prop::sample::Index>()), 0..3),
     ) {
-        let jobs = demo_jobs();
+        let jobs = demos();
         let (name, text) = job.get(&jobs);
         let text = varied(text, &scales, &turns);
         match perpend::check(name, &text) {
@@ -91,7 +91,7 @@ fn variations_are_mostly_read() {
     use proptest::strategy::ValueTree;
     use proptest::test_runner::TestRunner;
     let mut runner = TestRunner::deterministic();
-    let jobs = demo_jobs();
+    let jobs = demos();
     let strategy = (
         any::<prop::sample::Index>(),
         prop::collection::vec((any::<prop::sample::Index>(), 0.5..2.0_f64), 1..4),

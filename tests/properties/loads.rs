@@ -238,11 +238,8 @@ fn the_named_route_decides() {
     let stated = wind::pressures(&mut Sheet::silent(), &b, &Annex::UK).expect("wind");
     near(stated.overall.base(), 0.6e-3);
     near(stated.panel.base(), 0.7e-3);
-    let text = crate::conventions::demo_jobs()
-        .into_iter()
-        .find(|(name, _)| name == "lime-terrace.toml")
-        .expect("the demo job")
-        .1;
+    let text =
+        crate::jobs::demos().into_iter().find(|(name, _)| name == "lime-terrace").expect("the demo job").1;
     b.wind = perpend::job::read("x.toml", &text).unwrap_or_else(|e| panic!("{e:?}")).wind;
     let stated = wind::pressures(&mut Sheet::silent(), &b, &Annex::UK).expect("wind");
     b.wind.route = WindRoute::Terrain;

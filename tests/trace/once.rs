@@ -29,7 +29,7 @@ fn a_value_that_stands_is_not_given_again() {
 /// On the sheets of the demo jobs no value is given while it stands.
 #[test]
 fn no_demo_sheet_gives_the_same_twice() {
-    for (name, text) in super::super::conventions::demo_jobs() {
+    for (name, text) in crate::jobs::demos() {
         let (_, results) = perpend::check(&name, &text).unwrap_or_else(|e| panic!("{name}: {e}"));
         for section in &results.sections {
             let mut standing: HashMap<&str, Dyn> = HashMap::new();
