@@ -4,8 +4,20 @@ use super::sources;
 
 /// The modules, each of which may use those before it. [`perpend`]'s crate doc says the same.
 const ORDER: [&str; 14] = [
-    "error", "quantity", "solve", "trace", "standards", "building", "job", "sketch", "checks", "pack", "report", "files",
-    "many", "cli",
+    "error",
+    "quantity",
+    "solve",
+    "trace",
+    "standards",
+    "building",
+    "job",
+    "sketch",
+    "checks",
+    "pack",
+    "report",
+    "files",
+    "many",
+    "cli",
 ];
 
 /// Macros stand at the root of the crate and belong to `trace`.
@@ -64,7 +76,8 @@ fn named(code: &str) -> Vec<String> {
 
 #[test]
 fn groups_are_taken_apart() {
-    let text = "use crate::{calc, given};\nuse crate::quantity::{Num, print};\nuse crate::{\n  a::{b, c},\n  d,\n};";
+    let text =
+        "use crate::{calc, given};\nuse crate::quantity::{Num, print};\nuse crate::{\n  a::{b, c},\n  d,\n};";
     assert_eq!(named(text), ["calc", "given", "quantity", "a", "d"]);
     assert_eq!(module("checks/returns/run.rs"), Some("checks"));
     assert_eq!(module("cli.rs"), Some("cli"));
@@ -145,7 +158,10 @@ fn fences_hold() {
     let none: [&str; 0] = [];
     assert_eq!(outside_fence(&["typst::", "typst_", "use typst"], |f| f.starts_with("pack/")), none);
     assert_eq!(outside_fence(&["clap::", "use clap"], |f| f == "cli.rs"), none);
-    assert_eq!(outside_fence(&[" toml::", "(toml::", "<toml::", "use toml"], |f| f.starts_with("job/")), none);
+    assert_eq!(
+        outside_fence(&[" toml::", "(toml::", "<toml::", "use toml"], |f| f.starts_with("job/")),
+        none
+    );
     // Each fence has something inside it, or it guards nothing.
     assert!(!outside_fence(&["typst::"], |_| false).is_empty());
     assert!(!outside_fence(&["clap::"], |_| false).is_empty());

@@ -24,7 +24,8 @@ fn every_standard_has_its_coverage() {
         let folder = entry.expect("an entry").path();
         if folder.is_dir() {
             let file = folder.join("COVERAGE.md");
-            let text = std::fs::read_to_string(&file).unwrap_or_else(|_| panic!("{} is missing", file.display()));
+            let text =
+                std::fs::read_to_string(&file).unwrap_or_else(|_| panic!("{} is missing", file.display()));
             assert!(text.lines().count() > 5, "{} says nothing", file.display());
             seen += 1;
         }

@@ -38,7 +38,8 @@ fn written() -> BTreeSet<String> {
 /// The name that a macro call binds: the word before the first ` = ` outside quotes, or the last word of a
 /// call that has none.
 fn bound(call: &str) -> Option<String> {
-    let word = |t: &str| t.trim_end().rsplit(|c: char| !(c.is_alphanumeric() || c == '_')).next().map(str::to_owned);
+    let word =
+        |t: &str| t.trim_end().rsplit(|c: char| !(c.is_alphanumeric() || c == '_')).next().map(str::to_owned);
     let mut quoted = false;
     for (i, c) in call.char_indices() {
         match c {

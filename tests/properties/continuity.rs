@@ -82,7 +82,10 @@ fn a_bonded_return_jumps_only_where_the_clauses_do() {
     let named = [15.0 * t, h / 3.5];
     for (from, to) in [(600, 1000), (1900, 2300)] {
         for place in jumps(&case(true, false), from, to) {
-            assert!(named.iter().any(|n| (place - n).abs() < 1e-3), "a jump at {place} mm, none is named there");
+            assert!(
+                named.iter().any(|n| (place - n).abs() < 1e-3),
+                "a jump at {place} mm, none is named there"
+            );
         }
     }
     assert!(!jumps(&case(true, false), 2095, 2105).is_empty(), "the limit of 15 t is there and is seen");

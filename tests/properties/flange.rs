@@ -1,6 +1,6 @@
 //! A flange of the web's own width is a longer web; the general section is the plain clause there.
 
-use perpend::checks::returns::actions::{Actions, Direction, Case, Toe};
+use perpend::checks::returns::actions::{Actions, Case, Direction, Toe};
 use perpend::checks::returns::build::Change;
 use perpend::checks::returns::in_plane::{self, Stressed};
 use perpend::checks::returns::model::{At, Flange, Model};

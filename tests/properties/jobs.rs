@@ -20,7 +20,11 @@ const CHOICES: [(&str, &[&str]); 10] = [
 ];
 
 /// The text with quantities scaled and words exchanged, as the two lists of picks say.
-fn varied(text: &str, scales: &[(prop::sample::Index, f64)], turns: &[(prop::sample::Index, prop::sample::Index)]) -> String {
+fn varied(
+    text: &str,
+    scales: &[(prop::sample::Index, f64)],
+    turns: &[(prop::sample::Index, prop::sample::Index)],
+) -> String {
     let mut lines: Vec<String> = text.lines().map(str::to_owned).collect();
     for (pick, scale) in scales {
         let places: Vec<usize> = (0..lines.len()).filter(|&n| quantity(&lines[n]).is_some()).collect();
@@ -88,7 +92,10 @@ fn variations_are_mostly_read() {
     use proptest::test_runner::TestRunner;
     let mut runner = TestRunner::deterministic();
     let jobs = demo_jobs();
-    let strategy = (any::<prop::sample::Index>(), prop::collection::vec((any::<prop::sample::Index>(), 0.5..2.0_f64), 1..4));
+    let strategy = (
+        any::<prop::sample::Index>(),
+        prop::collection::vec((any::<prop::sample::Index>(), 0.5..2.0_f64), 1..4),
+    );
     let read = (0..40)
         .filter(|_| {
             let (job, scales) = strategy.new_tree(&mut runner).expect("a value").current();

@@ -85,7 +85,8 @@ fn building(c: &Case) -> Building {
     r.junction.right = Length::new(c.flange.1);
     r.junction.thickness = Length::new(c.flange.2);
     r.base = if c.dpc { BaseJoint::Dpc } else { BaseJoint::Bonded };
-    r.head = if c.propped { Head::Propped(vec!["left wall".into(), "right wall".into()]) } else { Head::Free };
+    r.head =
+        if c.propped { Head::Propped(vec!["left wall".into(), "right wall".into()]) } else { Head::Free };
     r.path = [Path::Sideways, Path::UpAndDown, Path::Both][usize::from(c.path)];
     r.tributary_width = Length::new(c.b_t);
     r.from_above = FromAbove { force: Force::new(c.above.0 * 1e3), moment: Moment::new(c.above.1 * 1e6) };

@@ -114,7 +114,9 @@ fn checks_follow_the_return() {
         above: (0.0, 0.0),
         flange: (1000.0, 1000.0, 100.0),
     };
-    let has = |c: &super::Case, check| worked(&building(c), Change::NONE).expect("inside").2.checks.contains(&check);
+    let has = |c: &super::Case, check| {
+        worked(&building(c), Change::NONE).expect("inside").2.checks.contains(&check)
+    };
     assert!(has(&c, Toe) && has(&c, Shear) && has(&c, ShearHead) && has(&c, Sliding));
     assert!(!has(&c, Junction) && !has(&c, Middle) && !has(&c, Flexure));
     c.dpc = false;

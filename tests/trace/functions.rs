@@ -1,7 +1,8 @@
 //! Every function and unit of `quantity::functions` has its twin in `trace::expr`, and both agree to the bit.
 
 use perpend::quantity::functions::{
-    KG_M3, KN, M_S, MM, MPA, abs, cbrt, cube, exp, ln, log10, max, metres, min, mpa, pow, sq, sqrt, square_metres,
+    KG_M3, KN, M_S, MM, MPA, abs, cbrt, cube, exp, ln, log10, max, metres, min, mpa, pow, sq, sqrt,
+    square_metres,
 };
 use perpend::quantity::{Area, Length, Num, Stress};
 use perpend::trace::Sheet;

@@ -129,7 +129,8 @@ fn the_last_value_stands() {
 #[test]
 fn a_relation_decided_otherwise_is_a_fault() {
     let (e, l) = (length(120.0), length(600.0));
-    for (tokens, holds) in [("e <= l / 6.0", false), ("e < l / 6.0", true), ("e > l", true), ("e >= l", true)] {
+    for (tokens, holds) in [("e <= l / 6.0", false), ("e < l / 6.0", true), ("e > l", true), ("e >= l", true)]
+    {
         for decide in [true, false] {
             let mut s = Sheet::recorder();
             s.given("e", "eccentricity", "above", e);

@@ -89,7 +89,9 @@ fn a_fraction() {
         )
     );
     assert!(speech.starts_with("r equals l over 2 minus e over l minus 2 times e, that is"), "{speech}");
-    let Some(Entry::Step(first)) = s.entries.iter().find(|e| matches!(e, Entry::Step(_))) else { panic!("e") };
+    let Some(Entry::Step(first)) = s.entries.iter().find(|e| matches!(e, Entry::Step(_))) else {
+        panic!("e")
+    };
     assert_eq!(text::step(first), "eccentricity: e = |M_Ed / N_Ed| = |−5 kNm / 40 kN| = 125 mm");
 }
 
@@ -104,7 +106,9 @@ fn powers_and_roots() {
     let (plain, page, speech) = three(&s);
     assert_eq!(plain, "f_k = K f_b^0.7 = 0.75 × 10^0.7 N/mm² = 3.76 N/mm²");
     assert_eq!(page, r#"["times",["sym","K",""],["power",["sym","f","b"],["num","0.7"]]]"#);
-    assert!(speech.starts_with("f sub k equals K times f sub b to the power 0.7, that is 0.75 times 10 to the power 0.7"));
+    assert!(speech.starts_with(
+        "f sub k equals K times f sub b to the power 0.7, that is 0.75 times 10 to the power 0.7"
+    ));
 
     given!(s, "", "", t_1 = Length::new(100.0));
     given!(s, "", "", t_2 = Length::new(100.0));

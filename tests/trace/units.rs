@@ -1,9 +1,9 @@
 //! Reading and printing units.
 
 use perpend::quantity::Dim;
-use perpend::quantity::unit::{Misread, UNITS, allowed, find, for_print, read};
-use perpend::quantity::print::show;
 use perpend::quantity::Dyn;
+use perpend::quantity::print::show;
+use perpend::quantity::unit::{Misread, UNITS, allowed, find, for_print, read};
 use proptest::prelude::*;
 
 const LENGTH: Dim = Dim { force: 0, length: 1, time: 0 };
