@@ -19,7 +19,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             let thickness = print::show("t", leaf.thickness.dynamic());
             s.heading(1, format!("{}, {thickness}, in {}", material.name, build_up.name));
             if let Some(source) = &material.source {
-                s.note(format!("How it is known: {source}."));
+                s.note(format!("How it is known: {}.", source.trim_end_matches('.')));
             }
             if let Err(outside) = masonry::derive(&mut s, b, &job.annex, material, build_up, leaf.thickness) {
                 s.leave(outside);

@@ -33,6 +33,10 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
     // The case of the force is too long for a label beside it.
     out[1].caption = format!("{}; {}", out[1].caption, worst(matrix.as_ref(), Check::Toe).name());
     out[2].caption.push_str("; moment of wind and tilt");
+    if !m.sheared() && m.lateral.M_k.base() == 0.0 {
+        // A held head passes its force on: there is nothing to draw along the height.
+        out.truncate(2);
+    }
     for (drawing, kind) in out.iter_mut().zip(["elevation", "section", "actions"]) {
         drawing.name = format!("{}-{kind}", r.mark);
     }
@@ -156,13 +160,6 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     let sigma = st.sigma_toe?;
     let (l, t_f) = (m.l, a.flange.map_or(Length::ZERO, |f| f.t_f));
     let free = a.toe == Pressed::Free;
-    let centroid = match a.flange {
-        None => l / 2.0,
-        Some(f) => {
-            let (web, flange) = (l * m.t, f.b_f * f.t_f);
-            (web * (l / 2.0) - flange * (f.t_f / 2.0)) / (web + flange)
-        }
-    };
     let depth = l + t_f;
     let whole = if free || a.flange.is_none() { st.l_c } else { st.l_c + t_f };
     let compressed = if whole > depth { depth } else { whole };
@@ -174,9 +171,10 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     });
     Some(Stress {
         toe: if free { Toe::Free } else { Toe::Wall },
-        compressed: compressed.base(),
-        centroid: centroid.base(),
-        resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() },
+        // What was worked out is drawn to the millimetre, so that its label is exact.
+        compressed: compressed.base().round(),
+        middle: (l / 2.0).base(),
+        resultant: if free { (l - st.a).base() } else { (st.a - t_f).base() }.round(),
         force: show("N_Ed", a.N_Ed.dynamic(), ""),
         at_toe: show("sigma", sigma.dynamic(), ""),
         at_heel: heel,

@@ -179,3 +179,80 @@ fn printed(data: &serde_json::Value) -> String {
     let world = world::World::new(serde_json::to_vec(data).unwrap(), &[]);
     audit::sheets(&pdf::compile(&world).unwrap().0).concat()
 }
+
+/// 420 lines of a job file, a fifth of them longer than a column, take three sheets at most.
+#[test]
+fn a_long_job_file_takes_three_sheets() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let pages = |data: &serde_json::Value| typeset(data, &[], "sample").unwrap().pages;
+    data["inputs"] = "".into();
+    let without = pages(&data);
+    let line = |n: usize| match n % 5 {
+        0 => String::new(),
+        1 => format!("reason = \"{}\"", "opened up on site, seen by the engineer ".repeat(2)),
+        _ => "tributary_width = \"2.60 m\"".to_owned(),
+    };
+    data["inputs"] = (1..=420).map(line).collect::<Vec<_>>().join("\n").into();
+    assert!(pages(&data) <= without + 3);
+    assert_eq!(inspect(&data, &[]).unwrap(), vec![]);
+}
+
+/// Words in a column of numbers, and a first column of words, have room in a table of many columns.
+#[test]
+fn words_in_a_table_have_room() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let number = |head: &str| serde_json::json!({"head": head, "align": "decimal"});
+    let columns: Vec<_> = std::iter::once(serde_json::json!({"head": "check", "align": "left"}))
+        .chain(["H f", "H j", "W f", "W j", "Q f", "Q j", "G f", "G j"].map(number))
+        .collect();
+    let row = |first: &str, rest: &str| {
+        std::iter::once(first).chain(std::iter::repeat_n(rest, 8)).map(str::to_owned).collect::<Vec<_>>()
+    };
+    let rows = [
+        row("vertical resistance in the middle", "0.14*"),
+        row("overturning", "12 345.60"),
+        row("toe", "none, outside"),
+    ];
+    data["sections"][0]["blocks"] = serde_json::json!([
+        {"kind": "table", "caption": "cases", "columns": columns, "rows": rows, "strong": [1]}]);
+    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    assert!(flaws.is_empty(), "{}", flaws.join("\n"));
+}
+
+/// Three drawings of which two stand side by side: the third finds room, and no captions meet.
+#[test]
+fn captions_of_neighbours_stay_apart() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let caption = "R1 elevation, looking at its face; single hatching: brick; paired hatching: block";
+    let drawing = |width: f64, height: f64| {
+        serde_json::json!({"name": "one", "caption": caption, "scale": "1:50", "alt": "a wall", "width": width, "height": height,
+            "items": [{"kind": "stroke", "pen": "outline", "path": [["M", 0.0, 0.0], ["L", width, height]]}]})
+    };
+    for (first, second, third) in
+        [(94.0, 58.0, 93.0), (90.0, 72.0, 70.0), (50.0, 50.0, 50.0), (120.0, 90.0, 165.0)]
+    {
+        data["sections"][0]["blocks"] = serde_json::json!([
+            {"kind": "drawings", "drawings": [drawing(first, 76.0), drawing(second, 58.0)]},
+            {"kind": "note", "text": "between"},
+            {"kind": "drawings", "drawings": [drawing(third, 35.0)]}]);
+        let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+        assert!(flaws.is_empty(), "{first} {second} {third}: {}", flaws.join("\n"));
+    }
+}
+
+/// A formula longer than the sheet is wide keeps to the sheet.
+#[test]
+fn a_long_formula_keeps_to_the_sheet() {
+    let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
+    let value = serde_json::json!(["val", "12 345.6", "kN/m\u{b2}"]);
+    let square = serde_json::json!(["power", ["paren", value], ["num", "2"]]);
+    for parts in [2, 4, 8, 16] {
+        let mut sum = vec![serde_json::json!("plus")];
+        sum.extend(std::iter::repeat_n(square.clone(), parts));
+        let step = serde_json::json!({"kind": "step", "clause": "6.1.2.1(2)", "words": "a long sum", "symbol": ["sym", "N", "Ed"],
+            "formula": ["sym", "x"], "substitution": sum, "spoken": "a long sum", "result": {"value": "1", "unit": "kN"}});
+        data["sections"][0]["blocks"] = serde_json::json!([step]);
+        let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+        assert!(flaws.is_empty(), "{parts}: {}", flaws.join("\n"));
+    }
+}

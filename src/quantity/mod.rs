@@ -5,11 +5,11 @@
 //! product of two quantities has the product's dimension.
 //!
 //! * [`Q`] and its names ([`Length`], [`Stress`], …) in this file
-//! * [`ops`]: `+ - * /` and the table of products
+//! * `ops`: `+ - * /` and the table of products
 //! * [`functions`]: `min max sqrt sq cube exp ln pow`, and the visible steps to bare numbers
 //! * [`Dyn`]: the same number with its dimension as data, for the trace
-//! * [`unit`]: units by name: reading `"900 mm"`, and the unit a value is printed in
-//! * [`print`]: digits: three significant, ratios rounded up
+//! * [`mod@unit`]: units by name: reading `"900 mm"`, and the unit a value is printed in
+//! * [`mod@print`]: digits: three significant, ratios rounded up
 
 mod dynamic;
 pub mod functions;

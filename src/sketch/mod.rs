@@ -10,7 +10,7 @@
 //! * [`note`], [`ground`], [`place`]: labels, what they keep off, and where they go
 //! * [`board`]: strokes, fills and wishes for labels, until the drawing is finished
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
-//! * the drawings: one file each; [`return_elevation`] and [`return_section`] have a second for their actions
+//! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
 pub mod board;
 pub mod dimension;

@@ -95,7 +95,7 @@ prop_compose! {
         let base = section();
         let stress = base.stress.map(|stress| Stress {
             toe: if at_wall { Toe::Wall } else { Toe::Free },
-            compressed, centroid: length / 2.0, resultant: start + sense * compressed / 3.0,
+            compressed, middle: length / 2.0, resultant: start + sense * compressed / 3.0,
             at_heel: (compressed == total).then(|| (0.3, Action::new("", "0.61 N/mm²", ""))),
             ..stress
         });

@@ -53,8 +53,8 @@ pub struct Stress {
     pub toe: Toe,
     /// Compressed length `l_c` from the toe, mm.
     pub compressed: f64,
-    /// Place of the centroid, mm.
-    pub centroid: f64,
+    /// Place from which the eccentricity is measured, mid-length, mm.
+    pub middle: f64,
     /// Place of the resultant, mm.
     pub resultant: f64,
     /// Resultant force and combination.
@@ -265,10 +265,10 @@ fn alt(view: &ReturnSection) -> String {
     }
     if let Some(stress) = &view.stress {
         alt += &format!(
-            "The resultant {} stands {} mm from the centroid, towards the {}. {} mm of the length are compressed, from the {}; stress there {}",
+            "The resultant {} stands {} mm from mid-length, towards the {}. {} mm of the length are compressed, from the {}; stress there {}",
             stress.force.spoken(),
-            mm((stress.resultant - stress.centroid).abs()),
-            if stress.resultant < stress.centroid { "outer wall" } else { "free end" },
+            mm((stress.resultant - stress.middle).abs()),
+            if stress.resultant < stress.middle { "outer wall" } else { "free end" },
             mm(stress.compressed),
             if stress.toe == Toe::Wall { "outer wall" } else { "free end" },
             stress.at_toe.spoken(),

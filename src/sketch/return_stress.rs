@@ -35,8 +35,8 @@ impl Section<'_> {
 
     pub fn resultant(&self, board: &mut Board, stress: &Stress) {
         let (top, bottom) = self.edges();
-        let (centroid, place) = (self.ruler.at(stress.centroid, 0.0), self.ruler.at(stress.resultant, 0.0));
-        let e = (stress.resultant - stress.centroid).abs();
+        let (centroid, place) = (self.ruler.at(stress.middle, 0.0), self.ruler.at(stress.resultant, 0.0));
+        let e = (stress.resultant - stress.middle).abs();
         let row = top - 9.0;
         board.line(Pen::Axis, Point::new(centroid.x, row - 1.5), Point::new(centroid.x, bottom + 1.2));
         board.line(Pen::Axis, Point::new(place.x, row - 1.5), Point::new(place.x, bottom + 1.2));

@@ -48,7 +48,7 @@ pub fn section() -> ReturnSection {
         stress: Some(Stress {
             toe: Toe::Free,
             compressed: 391.5,
-            centroid: 190.0,
+            middle: 190.0,
             resultant: 509.5,
             force: Action::new("N_Ed", "40.1 kN", "helping"),
             at_toe: Action::new("sigma", "2.05 N/mm²", "at the toe"),
@@ -74,7 +74,7 @@ pub fn solid_section() -> ReturnSection {
         stress: Some(Stress {
             toe: Toe::Wall,
             compressed: 900.0,
-            centroid: 450.0,
+            middle: 450.0,
             resultant: 380.0,
             force: Action::new("N_Ed", "61.0 kN", "pressing, wind leads"),
             at_toe: Action::new("sigma_toe", "0.99 N/mm²", ""),

@@ -132,7 +132,7 @@ fn awkward_cases_are_sound() {
     flanged.stress = flanged.stress.map(|stress| Stress {
         toe: Toe::Wall,
         compressed: 150.0,
-        centroid: 60.0,
+        middle: 60.0,
         resultant: -50.0,
         ..stress
     });

@@ -476,7 +476,7 @@ fn a_propped_return_by_hand() {
             }
         }
     }
-    let stated = BLOCK_140.replace("[build_ups.wall]", "[build_ups.wall]") + "\n";
+    let stated = format!("{BLOCK_140}\n");
     let text = with_return(&stated, PROPPED).replace(
         "density = \"20 kN/m3\"\n",
         "density = \"20 kN/m3\"\nf_xk1 = { value = \"0.2 N/mm2\", reason = \"Stated for the example.\" }\n",

@@ -4,6 +4,9 @@
 mod arya_design_of_structural_elements;
 mod hand_panel;
 mod hand_return;
+mod hand_slenderness;
+mod hand_stability;
+mod hand_wind;
 pub mod job;
 mod johansen;
 mod roberts_v3;

@@ -157,3 +157,16 @@ fn the_flange_may_hold_the_resultant_back() {
     assert!(a.back, "the flange's load turns towards the junction: {a:?}");
     assert_eq!(a.toe, Toe::Free, "and yet the resultant is on the free side of the centroid");
 }
+
+/// Overturning is about the edge that N moves towards: l/2 from mid-length at the free end, l/2 + t_f at the outer face of
+/// the flange.
+#[test]
+fn overturning_about_either_edge() {
+    let m = model();
+    let flange = Flange { b_f: Length::new(800.0), t_f: Length::new(140.0), G_f: Force::ZERO };
+    let ratio = |x: f64, toe| stressed(&m, Some(flange), 40e3, x, toe).1;
+    // l = 900 mm: 100/450 and 100/(450 + 140).
+    assert!((ratio(100.0, Toe::Free) - 100.0 / 450.0).abs() < 1e-12);
+    assert!((ratio(-100.0, Toe::Free) - 100.0 / 590.0).abs() < 1e-12);
+    assert!((ratio(-500.0, Toe::Junction) - 500.0 / 590.0).abs() < 1e-12);
+}

@@ -3,6 +3,7 @@
 mod continuity;
 mod flange;
 mod jobs;
+mod loads;
 mod outcome;
 mod remedy;
 mod returns;

@@ -34,7 +34,13 @@ proptest! {
         let b = building(&c);
         let wind = |wind| worked(&b, Change { wind, ..Change::NONE });
         let (Some((_, _, less)), Some((_, _, more))) = (wind(from), wind(from + more)) else { return Ok(()) };
+        let falls = worst(&more).iter().any(|&(check, ratio)| check == Check::Overturning && ratio > 1.0);
         for (check, before) in worst(&less) {
+            // Once N has left the section nothing stands: the junction then only carries what the flange brings,
+            // less than before; overturning and the toe have failed by then.
+            if check == Check::Junction && falls {
+                continue;
+            }
             // A check may begin with the wind: shear of a head that is held.
             let after = worst(&more).into_iter().find(|x| x.0 == check).map(|x| x.1);
             prop_assert!(after.is_some(), "{check:?} is gone");

@@ -1,6 +1,6 @@
 //! An outer wall across its plane, before and after the removal.
 //!
-//! * [`model`]: what the check needs, quantities only, and how a building yields it
+//! * [`mod@model`]: what the check needs, quantities only, and how a building yields it
 //! * [`strength`]: what each leaf resists per unit width
 //! * [`form`]: which way the panel spans, what pressure a leaf can take
 //! * [`sharing`]: two leaves and their ties

@@ -119,7 +119,7 @@ pub fn remedies(m: &PanelModel, annex: &Annex) -> Vec<Remedy> {
         Some(g) => {
             format!("It passes with a dead load of {} on the loaded leaf, if that load is there.", shown(g))
         }
-        None => "No dead load makes it pass: it counts up to 0.2 f_d alone.".to_owned(),
+        None => "No dead load makes it pass: it counts only up to a fifth of the design strength.".to_owned(),
     };
     out.push(Remedy { id: "dead-load", value: dead, sentence });
 

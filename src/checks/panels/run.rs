@@ -227,7 +227,7 @@ fn arch(
     given!(s, "design compressive strength", &above, f_d = strength.f_d);
     given!(s, "stress from dead load that helps", &above, sigma_v = strength.sigma_v);
     if !a.vertical {
-        s.note("The thrust runs along the wall: f_d is taken to be the same that way, a hold point.");
+        s.note("The thrust runs along the wall: the compressive strength is taken to be the same that way, a hold point.");
     }
     let distance = if a.vertical { m.h } else { l };
     given!(s, "distance between the abutments", "job file", l_a = distance);
@@ -282,25 +282,25 @@ fn side_by_side(m: &PanelModel, before: Option<&Outcome>, after: Option<&Outcome
             rows.push(vec![name, b, a]);
         }
     };
-    row("length l".to_owned(), &|o| Some(show("l", o.l.dynamic()).to_string()));
+    row("length".to_owned(), &|o| Some(show("l", o.l.dynamic()).to_string()));
     for i in 0..m.leaves.len() {
         let of = if m.leaves.len() == 1 { String::new() } else { format!(", {}", m.leaf_name(i)) };
         let force = |name: &'static str, x: crate::quantity::Force| show(name, x.dynamic()).to_string();
-        row(format!("case{of}"), &|o| o.leaves.get(i).map(|x| x.label.clone()));
-        row(format!("μ{of}"), &|o| o.leaves.get(i)?.mu.map(|x| print::significant(x.base())));
-        row(format!("α_2{of}"), &|o| o.leaves.get(i)?.alpha_2.map(|x| print::significant(x.base())));
-        row(format!("M_Ed1{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Ed1", x.0)));
-        row(format!("M_Rd1{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Rd1", x.1)));
-        row(format!("M_Ed2{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Ed2", x.0)));
-        row(format!("M_Rd2{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Rd2", x.1)));
+        row(format!("case of Annex E{of}"), &|o| o.leaves.get(i).map(|x| x.label.clone()));
+        row(format!("orthogonal ratio{of}"), &|o| o.leaves.get(i)?.mu.map(|x| print::significant(x.base())));
+        row(format!("coefficient{of}"), &|o| o.leaves.get(i)?.alpha_2.map(|x| print::significant(x.base())));
+        row(format!("moment, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Ed1", x.0)));
+        row(format!("resistance, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Rd1", x.1)));
+        row(format!("moment, across{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Ed2", x.0)));
+        row(format!("resistance, across{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Rd2", x.1)));
         if m.leaves.len() > 1 {
-            row(format!("w_Rd{of}"), &|o| {
+            row(format!("pressure it can take{of}"), &|o| {
                 o.leaves.get(i).map(|x| show("w_Rd", x.w_Rd.dynamic()).to_string())
             });
         }
     }
-    row("W_Ed".to_owned(), &|o| Some(show("W_Ed", o.W_Ed.dynamic()).to_string()));
-    row("w_Rd".to_owned(), &|o| Some(show("w_Rd", o.w_Rd.dynamic()).to_string()));
+    row("design pressure".to_owned(), &|o| Some(show("W_Ed", o.W_Ed.dynamic()).to_string()));
+    row("pressure the panel can take".to_owned(), &|o| Some(show("w_Rd", o.w_Rd.dynamic()).to_string()));
     row("use".to_owned(), &|o| Some(print::ratio(o.ratio)));
     let strong = vec![rows.len() - 1];
     Table {

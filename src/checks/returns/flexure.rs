@@ -12,7 +12,9 @@ use crate::{calc, given, verify};
 /// sheet says so. `f_d` stands on the sheet.
 fn resistance(s: &mut Sheet, m: &Model, a: &Actions, f_d: Stress) -> Moment {
     let (l, t) = (m.l, m.t);
-    s.note("The in-plane use of f_xk1 has no clause of its own: 6.3.1 is applied by analogy.");
+    s.note(
+        "The use of the flexural strength in plane has no clause of its own: 6.3.1 is applied by analogy.",
+    );
     given!(
         s,
         "flexural strength, failure parallel to the bed joints",
@@ -25,7 +27,7 @@ fn resistance(s: &mut Sheet, m: &Model, a: &Actions, f_d: Stress) -> Moment {
     calc!(
         s,
         "6.3.1(4), by analogy",
-        "stress from dead load that helps, at most 0.2 f_d",
+        "stress from dead load that helps, at most a fifth of the strength",
         sigma_h = min(gamma_h * G / (t * l), 0.2 * f_d)
     );
     calc!(s, "geometry", "section modulus", Z = t * sq(l) / 6.0);

@@ -19,6 +19,7 @@ pub mod sliding;
 pub mod vertical;
 
 use crate::building::{BaseJoint, Head, Proof};
+use crate::quantity::Moment;
 use crate::trace::Sheet;
 use build::{Change, Inputs};
 use model::Model;
@@ -72,7 +73,9 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         s.table(|| remedy::table(i));
         other_paths(s, i);
     }
-    s.drawings(&[&format!("{}-actions", r.mark)]);
+    if out.iter().any(|(m, _)| m.sheared() || m.lateral.M_k != Moment::ZERO) {
+        s.drawings(&[&format!("{}-actions", r.mark)]);
+    }
     Checked { models: out }
 }
 

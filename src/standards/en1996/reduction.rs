@@ -44,7 +44,12 @@ pub fn in_middle(
         "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
         e_mk = max(e_h / 2.0 + e_init, 0.05 * t)
     );
-    given!(s, "modulus of elasticity over f_k", "3.7.2(2), UK NA", K_E = Num::new(annex.E_over_f_k));
+    given!(
+        s,
+        "modulus of elasticity over compressive strength",
+        "3.7.2(2), UK NA",
+        K_E = Num::new(annex.E_over_f_k)
+    );
     calc!(s, "3.7.2(2)", "modulus of elasticity", E = K_E * f_k);
     calc!(s, "Annex G eq. G.4", "slenderness for Annex G", lambda = h_ef / t_ef * sqrt(f_k / E));
     calc!(s, "Annex G eq. G.3", "exponent", u = (lambda - 0.063) / (0.73 - 1.17 * e_mk / t));

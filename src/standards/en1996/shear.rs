@@ -21,7 +21,12 @@ pub fn design_strength(
     gamma_Mv: Num,
 ) -> Stress {
     if perpends_filled {
-        given!(s, "limit of f_vk over f_b", "3.6.2(3), UK NA", k_v = Num::new(annex.shear_limit));
+        given!(
+            s,
+            "limit of the shear strength over the unit strength",
+            "3.6.2(3), UK NA",
+            k_v = Num::new(annex.shear_limit)
+        );
         calc!(
             s,
             "3.6.2(3) eq. 3.5",
@@ -31,7 +36,12 @@ pub fn design_strength(
         calc!(s, "2.4.3(1)", "design shear strength", f_vd = f_vk / gamma_Mv);
         f_vd
     } else {
-        given!(s, "limit of f_vk over f_b", "3.6.2(4), UK NA", k_v = Num::new(annex.shear_limit_unfilled));
+        given!(
+            s,
+            "limit of the shear strength over the unit strength",
+            "3.6.2(4), UK NA",
+            k_v = Num::new(annex.shear_limit_unfilled)
+        );
         calc!(
             s,
             "3.6.2(4) eq. 3.6",

@@ -62,7 +62,7 @@ pub fn effective_height(
             calc!(s, "5.5.1.2(10)", "effective height", h_ef = rho_3 * h);
             h_ef
         } else {
-            given!(s, "least value of rho_3", "5.5.1.2(11) eq. 5.7", rho_min = Num::new(0.3));
+            given!(s, "least value of the factor", "5.5.1.2(11) eq. 5.7", rho_min = Num::new(0.3));
             calc!(s, "5.5.1.2(11) eq. 5.7", "one vertical edge stiffened", rho_3 = max(1.5 * l / h, rho_min));
             calc!(s, "5.5.1.2(10)", "effective height", h_ef = rho_3 * h);
             h_ef

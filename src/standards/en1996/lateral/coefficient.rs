@@ -133,7 +133,7 @@ fn work_equation(s: &mut Sheet, pattern: Pattern, edges: Edges, mu: Num, eta: Nu
     let Edges { top, base, left, right } = edges;
     let clause = "Annex E, yield lines";
     let source = "1 where the edge is simple, 2 where it is continuous";
-    let sought = "found so that alpha_2 is largest; any other length gives less";
+    let sought = "found so that the coefficient is largest; any other length gives less";
     let alpha = match pattern.shape {
         Shape::Slab { .. } => {
             given!(s, "top edge", source, k_T = strength_of(top));
@@ -270,7 +270,10 @@ fn check_again(s: &mut Sheet, pattern: Pattern, edges: Edges, mu: Num, eta: Num,
     }
     let again = evaluate(pattern.shape, edges, mu.base(), eta.base());
     if again.is_none_or(|a| (a - printed.base()).abs() > 1e-12 * a.abs()) {
-        s.fault("alpha_2 by the work equation".to_owned(), format!("{printed:?} printed, {again:?} found"));
+        s.fault(
+            "coefficient by the work equation".to_owned(),
+            format!("{printed:?} printed, {again:?} found"),
+        );
     }
 }
 

@@ -31,7 +31,13 @@ pub fn limits(
     if one_way || (free(edges.left) && free(edges.right) && !free(edges.top) && !free(edges.base)) {
         let k = Num::new(limits::ANNEX_F_TOP_AND_BASE);
         given!(s, "greatest height over effective thickness, top and base held", &source("H"), k_F = k);
-        require!(s, id, "Annex F", "height of at most 30 t_ef between floors", h <= k_F * t_ef);
+        require!(
+            s,
+            id,
+            "Annex F",
+            "height of at most 30 effective thicknesses between floors",
+            h <= k_F * t_ef
+        );
         return Ok(());
     }
     if let Some(support) = limits::support(edges) {
@@ -39,11 +45,11 @@ pub fn limits(
         lookup!(
             s,
             clause,
-            "greatest area over the square of t_ef",
+            "greatest area over the square of the effective thickness",
             k_A = limits::area_over_t_ef_squared(support),
             Num::new(1.0)
         );
-        given!(s, "greatest side over t_ef", clause, k_S = Num::new(limits::SIDE));
+        given!(s, "greatest side over effective thickness", clause, k_S = Num::new(limits::SIDE));
         calc!(s, "geometry", "area of the panel", A = h * l);
         require!(
             s,
@@ -52,24 +58,24 @@ pub fn limits(
             "area of the panel within the limit that stands in for the curves of Annex F",
             A <= k_A * t_ef * t_ef
         );
-        require!(s, id, clause, "height of at most 50 t_ef", h <= k_S * t_ef);
-        require!(s, id, clause, "length of at most 50 t_ef", l <= k_S * t_ef);
+        require!(s, id, clause, "height of at most 50 effective thicknesses", h <= k_S * t_ef);
+        require!(s, id, clause, "length of at most 50 effective thicknesses", l <= k_S * t_ef);
         return Ok(());
     }
     if free(edges.top) && !free(edges.base) {
         let k = Num::new(FREE_STANDING);
-        given!(s, "greatest height over t_ef, held at the base alone", &source("M"), k_F = k);
+        given!(s, "greatest height over effective thickness, held at the base alone", &source("M"), k_F = k);
         require!(
             s,
             id,
             "BS 5628-1 36.3",
-            "height of at most 12 t_ef of a wall held at its base alone",
+            "height of at most 12 effective thicknesses of a wall held at its base alone",
             h <= k_F * t_ef
         );
         return Ok(());
     }
-    given!(s, "greatest side over t_ef", "BS 5628-1 36.3", k_S = Num::new(limits::SIDE));
-    require!(s, id, "BS 5628-1 36.3", "length of at most 50 t_ef", l <= k_S * t_ef);
+    given!(s, "greatest side over effective thickness", "BS 5628-1 36.3", k_S = Num::new(limits::SIDE));
+    require!(s, id, "BS 5628-1 36.3", "length of at most 50 effective thicknesses", l <= k_S * t_ef);
     Ok(())
 }
 

@@ -34,7 +34,7 @@ pub fn precompression(
         G_m = G_a + rho_m * t * h / 2.0
     );
     calc!(s, "EN 1990 6.4.3.2", "stress from dead load that helps", sigma_v = gamma_h * G_m / t);
-    calc!(s, "6.3.1(4)", "the same, at most 0.2 f_d", sigma_d = min(sigma_v, 0.2 * f_d));
+    calc!(s, "6.3.1(4)", "the same, at most a fifth of the strength", sigma_d = min(sigma_v, 0.2 * f_d));
     Precompression { sigma_v, sigma_d }
 }
 
