@@ -198,8 +198,9 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
     let progress = Progress::new(paths.len());
     let mut worst = ADEQUATE;
     let mut taken = files::Taken::default();
-    // Results of the jobs that other workers have in hand are not yet old.
-    let age = many::workers(paths.len()).max(2);
+    // What the other workers have in hand must not go: while a job is set, each of them ends about one. Of two
+    // workers, 1 took less time and memory than 2.
+    let age = many::workers(paths.len()).div_ceil(2);
     let work = |file: &PathBuf| {
         let pack = set(file, into);
         if paths.len() > 1 {

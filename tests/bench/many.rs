@@ -12,7 +12,7 @@ fn hundred_different() {
     let texts: Vec<String> = (0..100).map(jobs::varied).collect();
     let work = |text: &String| {
         let made = perpend::sheet("job.toml", text, Path::new("")).expect("a pack");
-        pack::evict(2);
+        pack::evict(1);
         made.typeset.pdf.len()
     };
     let mut bytes = 0;

@@ -162,6 +162,9 @@ impl Variation {
     /// Two words to a line and a half.
     fn job_title(&mut self) -> String {
         let words = 2 + self.dice.below(10);
-        self.dice.title(words)
+        let mut title = self.dice.title(words);
+        // 120 letters are allowed; all of these are ASCII.
+        title.truncate(110);
+        title.trim_end().to_owned()
     }
 }
