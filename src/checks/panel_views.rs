@@ -11,8 +11,8 @@ use crate::sketch::{
 use crate::standards::masonry::Edge as Kind;
 
 /// Frames on the sheet, mm: before and after stand side by side at one scale.
-const ELEVATION: Frame = Frame::new(84.0, 80.0);
-const SECTION: Frame = Frame::new(92.0, 90.0);
+const ELEVATION: Frame = Frame::new(168.0, 80.0);
+const SECTION: Frame = Frame::new(64.0, 90.0);
 /// Depth at which floors are drawn, mm; the job file does not give it. For the picture only.
 const FLOOR_DEPTH: f64 = 220.0;
 
@@ -29,8 +29,8 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
         .filter(|r| p.on.as_deref() == Some(&r.junction.to))
         .map(|r| r.mark.as_str())
         .collect();
-    let now =
-        if stays.is_empty() { "wall out".to_owned() } else { format!("wall out, {}", stays.join(", ")) };
+    // The drawing adds that it is removed.
+    let now = if stays.is_empty() { "wall".to_owned() } else { format!("wall beyond {}", stays.join(", ")) };
     let before = elevation(p, &p.before, "before", m, wall("wall".to_owned(), false));
     let after = elevation(p, &p.after, "after", m, wall(now, true));
     let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);

@@ -12,7 +12,7 @@ use super::drawing::{Drawing, Role};
 use super::hatch::diagonals;
 use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
-use super::scale::{Frame, Scale, fit, fit_all};
+use super::scale::{Frame, Scale, fit, fit_row};
 use super::text::Text;
 use super::view::{Action, Ruler, Side, list};
 
@@ -107,6 +107,9 @@ pub struct WallBehind {
 const BAND: f64 = 2.8;
 const BAND_HATCH: f64 = 1.1;
 
+/// Between two drawings side by side, mm on paper.
+const APART: f64 = 8.0;
+
 /// Draws one panel.
 pub fn panel_elevation(view: &PanelElevation, frame: Frame) -> Drawing {
     fit(frame, 20.0, |scale| draw(view, scale))
@@ -114,7 +117,7 @@ pub fn panel_elevation(view: &PanelElevation, frame: Frame) -> Drawing {
 
 /// Draws the panel before and after, at one scale, each within the frame.
 pub fn panel_pair(before: &PanelElevation, after: &PanelElevation, frame: Frame) -> [Drawing; 2] {
-    fit_all(frame, 20.0, |scale| [draw(before, scale), draw(after, scale)])
+    fit_row(frame, APART, 20.0, |scale| [draw(before, scale), draw(after, scale)])
 }
 
 fn draw(view: &PanelElevation, scale: Scale) -> Drawing {

@@ -50,32 +50,52 @@ pub fn fit(frame: Frame, from: f64, draw: impl Fn(Scale) -> Drawing) -> Drawing 
 }
 
 /// Drawings to be compared, at one scale: the largest at which each of them fits the frame.
-///
-/// Labels do not shrink with the scale, so each candidate is drawn completely and then measured.
 pub fn fit_all<const N: usize>(
     frame: Frame,
     from: f64,
     draw: impl Fn(Scale) -> [Drawing; N],
 ) -> [Drawing; N] {
-    let mut best: Option<[Drawing; N]> = None;
+    let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
+    fit_by(from, draw, |drawings| drawings.iter().map(over).sum())
+}
+
+/// Drawings to be compared side by side, at one scale: the largest at which the row, with `gap`
+/// between them, fits the frame.
+pub fn fit_row<const N: usize>(
+    frame: Frame,
+    gap: f64,
+    from: f64,
+    draw: impl Fn(Scale) -> [Drawing; N],
+) -> [Drawing; N] {
+    fit_by(from, draw, |drawings| {
+        let width: f64 = drawings.iter().map(|d| d.width).sum::<f64>() + gap * (N as f64 - 1.0);
+        let height = drawings.iter().map(|d| d.height).fold(0.0, f64::max);
+        (width - frame.width).max(0.0) + (height - frame.height).max(0.0)
+    })
+}
+
+/// The drawings at the largest preferred scale at which nothing sticks out; else where least does.
+///
+/// Labels do not shrink with the scale, so each candidate is drawn completely and then measured.
+fn fit_by<const N: usize>(
+    from: f64,
+    draw: impl Fn(Scale) -> [Drawing; N],
+    excess: impl Fn(&[Drawing; N]) -> f64,
+) -> [Drawing; N] {
+    let mut best: Option<(f64, [Drawing; N])> = None;
     for n in PREFERRED.into_iter().filter(|n| *n >= from) {
         let drawings = draw(Scale(n));
-        if drawings.iter().all(|drawing| frame.holds(drawing)) {
+        let over = excess(&drawings);
+        if over <= 0.0 {
             return drawings;
         }
         best = Some(match best {
             // Past some scale only the labels are left and nothing is gained.
-            Some(last) if excess(&last, frame) <= excess(&drawings, frame) => last,
-            _ => drawings,
+            Some(last) if last.0 <= over => last,
+            _ => (over, drawings),
         });
     }
-    best.expect("there is a preferred scale from 1:5 to 1:500")
-}
-
-/// How far drawings stick out of the frame, mm.
-fn excess(drawings: &[Drawing], frame: Frame) -> f64 {
-    let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
-    drawings.iter().map(over).sum()
+    best.expect("there is a preferred scale from 1:5 to 1:500").1
 }
 
 #[cfg(test)]
