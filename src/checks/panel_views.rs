@@ -12,7 +12,7 @@ use crate::standards::masonry::Edge as Kind;
 
 /// Frames on the sheet, mm: before and after stand side by side at one scale.
 const ELEVATION: Frame = Frame::new(168.0, 80.0);
-const SECTION: Frame = Frame::new(64.0, 90.0);
+const SECTION: Frame = Frame::new(96.0, 84.0);
 /// Depth at which floors are drawn, mm; the job file does not give it. For the picture only.
 const FLOOR_DEPTH: f64 = 220.0;
 
