@@ -115,7 +115,7 @@ pub fn panel_elevation(view: &PanelElevation, frame: Frame) -> Drawing {
     fit(frame, 20.0, |scale| draw(view, scale))
 }
 
-/// Draws the panel before and after, at one scale, each within the frame.
+/// Draws the panel before and after, at one scale, side by side within the frame.
 pub fn panel_pair(before: &PanelElevation, after: &PanelElevation, frame: Frame) -> [Drawing; 2] {
     fit_row(frame, APART, 20.0, |scale| [draw(before, scale), draw(after, scale)])
 }

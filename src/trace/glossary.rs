@@ -37,7 +37,6 @@ pub const GLOSSARY: &[(&str, &str)] = &[
     ("d_1", "depth of the width at the toe"),
     ("d_a", "deflection of the arch"),
     ("delta", "shape factor of the unit"),
-    ("E", "modulus of elasticity"),
     ("e", "eccentricity in plane"),
     ("e_h", "eccentricity of the loads at the head, across the wall"),
     ("E_i", "modulus of elasticity, inner leaf"),

@@ -132,23 +132,31 @@ pub fn resistance(
 ) {
     let (l, t) = (m.l, m.t);
     let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
-    let v = m.at_head.with_dead(m.own * at.share(), Length::ZERO);
-    given!(s, "dead load at the section", "load table", G = v.G);
-    given!(s, "imposed load", "load table", Q = v.Q);
-    calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
+    given!(s, "dead load at the head", "load table", G_h = m.at_head.G);
+    given!(s, "imposed load at the head", "load table", Q_h = m.at_head.Q);
+    given!(s, "own weight of the leaf", "above", G_w = m.own);
+    let clause = "EN 1990 6.4.3.2";
     match at {
         At::Head => {
             let Phi_h = r.head;
+            calc!(s, clause, "vertical force at the head", N_Ed = gamma_G * G_h + gamma_Q * Q_h);
             calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_h * t * l * f_d);
             verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the head", N_Ed <= N_Rd);
         }
         At::Middle => {
             let Phi_m = r.middle;
+            calc!(
+                s,
+                clause,
+                "vertical force in the middle",
+                N_Ed = gamma_G * (G_h + G_w / 2.0) + gamma_Q * Q_h
+            );
             calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_m * t * l * f_d);
             verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance in the middle", N_Ed <= N_Rd);
         }
         At::Foot => {
             let Phi_f = r.foot;
+            calc!(s, clause, "vertical force at the foot", N_Ed = gamma_G * (G_h + G_w) + gamma_Q * Q_h);
             calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_f * t * l * f_d);
             verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the foot", N_Ed <= N_Rd);
         }

@@ -46,12 +46,11 @@ pub fn in_middle(
     );
     given!(
         s,
-        "modulus of elasticity over compressive strength",
+        "modulus of elasticity E over compressive strength",
         "3.7.2(2), UK NA",
         K_E = Num::new(annex.E_over_f_k)
     );
-    calc!(s, "3.7.2(2)", "modulus of elasticity", E = K_E * f_k);
-    calc!(s, "Annex G eq. G.4", "slenderness for Annex G", lambda = h_ef / t_ef * sqrt(f_k / E));
+    calc!(s, "Annex G eq. G.4", "slenderness for Annex G", lambda = h_ef / t_ef * sqrt(f_k / (K_E * f_k)));
     calc!(s, "Annex G eq. G.3", "exponent", u = (lambda - 0.063) / (0.73 - 1.17 * e_mk / t));
     calc!(s, "Annex G eq. G.2", "factor for eccentricity", A_1 = 1.0 - 2.0 * e_mk / t);
     calc!(s, "Annex G eq. G.1", "reduction in the middle", Phi_m = A_1 * exp(-(sq(u) / 2.0)));
