@@ -21,10 +21,11 @@ pub const GREEK: &[(&str, &str)] = &[
     ("Delta", "Δ"),
 ];
 
-/// Base and subscript of a name: the first underscore parts them, later ones become commas.
+/// Base and subscript of a name: the first underscore parts them, later ones become commas; Greek
+/// names in the subscript become letters.
 pub fn split(name: &str) -> (String, String) {
     match name.split_once('_') {
-        Some((base, sub)) => (base.to_owned(), sub.replace('_', ",")),
+        Some((base, sub)) => (base.to_owned(), sub.split('_').map(letter).collect::<Vec<_>>().join(",")),
         None => (name.to_owned(), String::new()),
     }
 }
