@@ -22,8 +22,11 @@ const ACTIONS: Frame = Frame::new(62.0, 44.0);
 
 /// The three drawings of a return.
 pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> Vec<Drawing> {
-    let Some((m, matrix)) = checked.models.first() else { return Vec::new() };
     let Some(build_up) = b.build_up(&r.build_up) else { return Vec::new() };
+    // Where each leaf acts the loaded one is drawn.
+    let loaded = if build_up.loaded().0 == 0 { "outer-" } else { "inner-" };
+    let drawn = |m: &Model| m.leaf.is_empty() || m.leaf == loaded;
+    let Some((m, matrix)) = checked.models.iter().find(|(m, _)| drawn(m)) else { return Vec::new() };
     let case = worst(matrix.as_ref(), Check::Overturning);
     let mut out = vec![
         return_elevation(&elevation(b, r, m, build_up, case, annex), ELEVATION),

@@ -23,8 +23,9 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
     for w in &b.warnings {
         out.push(plain(format!("  odd but possible: {w}")));
     }
-    for s in &results.sections {
-        let rows = schedule(s);
+    let rows_of: Vec<_> = results.sections.iter().map(schedule).collect();
+    let wide = rows_of.iter().flatten().map(|r| r.check.chars().count()).max().unwrap_or(0).clamp(24, 50);
+    for (s, rows) in results.sections.iter().zip(rows_of) {
         if rows.is_empty() {
             continue;
         }
@@ -36,10 +37,13 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
         for r in rows {
             let stress = r.verdict != "adequate";
             let text = if r.ratio.is_empty() {
-                format!("  {:<34} {}", r.check, r.verdict)
+                format!("  {:<wide$} {}", r.check, r.verdict)
             } else {
                 let (demand, resistance) = (r.demand, r.resistance);
-                format!("  {:<34} {demand:>12} of {resistance:>12}   {:>5}  {}", r.check, r.ratio, r.verdict)
+                format!(
+                    "  {:<wide$} {demand:>12} of {resistance:>12}   {:>5}  {}",
+                    r.check, r.ratio, r.verdict
+                )
             };
             out.push(Line { text, stress });
         }

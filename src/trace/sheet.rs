@@ -48,6 +48,8 @@ pub struct Sheet {
     pub faults: Vec<Fault>,
     /// The case printed with each verdict until it changes.
     pub case: String,
+    /// What the verdicts are of, where a sheet has several of a kind: `outer leaf`.
+    pub of: String,
     scope: HashMap<String, Dyn>,
     /// How each standing symbol was last printed, so that nothing is printed twice.
     printed: HashMap<String, String>,
@@ -232,7 +234,7 @@ impl Sheet {
         }
         let verdict = Verdict {
             id: self.unique(id),
-            words: words.to_owned(),
+            words: if self.of.is_empty() { words.to_owned() } else { format!("{words}, {}", self.of) },
             clause: clause.to_owned(),
             demand: Value { name: demand.0.to_owned(), value: demand.1 },
             resistance: Value { name: resistance.0.to_owned(), value: resistance.1 },

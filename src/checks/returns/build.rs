@@ -44,34 +44,56 @@ impl Change {
     pub const NONE: Self = Self { length: None, dead: Force::ZERO, wind: 1.0 };
 }
 
-/// The models of a return, one a leaf that acts.
+/// A leaf that acts in the plane of the return, with its share of the wind by thickness.
+#[derive(Clone, Copy, Debug)]
+pub struct Acting {
+    /// Its place in the build-up.
+    pub leaf: usize,
+    /// Its share; 1 where it acts alone.
+    pub share: f64,
+}
+
+/// The leaves that act, outer first.
+///
+/// # Errors
+/// [`Outside`] where the build-up is unknown, which no valid building has.
+pub fn acting(i: &Inputs<'_>) -> Result<Vec<Acting>, Outside> {
+    let build_up = build_up(i)?;
+    let leaves: Vec<usize> = match i.ret.acts {
+        Acts::Loaded => vec![build_up.loaded().0],
+        Acts::Each => (0..build_up.leaves.len()).collect(),
+    };
+    let total: Length = leaves.iter().map(|&k| build_up.leaves[k].thickness).sum();
+    Ok(leaves
+        .into_iter()
+        .map(|leaf| Acting { leaf, share: (build_up.leaves[leaf].thickness / total).base() })
+        .collect())
+}
+
+fn build_up<'a>(i: &Inputs<'a>) -> Result<&'a BuildUp, Outside> {
+    let missing = || Outside::new("build-up", "job file", "the build-up is not given");
+    i.building.build_up(&i.ret.build_up).ok_or_else(missing)
+}
+
+/// The models of a return, one a leaf that acts. For silent sheets: on a sheet that records each leaf
+/// is built and checked before the next, with [`one`], since their symbols are the same.
 ///
 /// # Errors
 /// [`Outside`] where a table of strengths does not reach.
 pub fn models(s: &mut Sheet, i: &Inputs<'_>, change: Change) -> Result<Vec<Model>, Outside> {
-    let r = i.ret;
-    let Some(build_up) = i.building.build_up(&r.build_up) else {
-        return Err(Outside::new("build-up", "job file", "the build-up is not given"));
-    };
-    let (loaded, _) = build_up.loaded();
-    let acting: Vec<usize> = match r.acts {
-        Acts::Loaded => vec![loaded],
-        Acts::Each => (0..build_up.leaves.len()).collect(),
-    };
-    let total: Length = acting.iter().map(|&k| build_up.leaves[k].thickness).sum();
-    let mut out = Vec::new();
-    for &k in &acting {
-        let share = (build_up.leaves[k].thickness / total).base();
-        if acting.len() > 1 {
-            s.heading(1, format!("{} leaf", if k == 0 { "Outer" } else { "Inner" }));
-        }
-        let mut m = leaf(s, i, build_up, k, share, change)?;
-        if acting.len() > 1 {
-            m.leaf = if k == 0 { "outer-".to_owned() } else { "inner-".to_owned() };
-        }
-        out.push(m);
+    acting(i)?.into_iter().map(|a| one(s, i, a, change)).collect()
+}
+
+/// The model of one leaf.
+///
+/// # Errors
+/// [`Outside`] where a table of strengths does not reach.
+pub fn one(s: &mut Sheet, i: &Inputs<'_>, a: Acting, change: Change) -> Result<Model, Outside> {
+    let mut m = leaf(s, i, build_up(i)?, a.leaf, a.share, change)?;
+    if a.share < 1.0 {
+        m.leaf = if a.leaf == 0 { "outer-".to_owned() } else { "inner-".to_owned() };
     }
-    Ok(out)
+    Ok(m)
 }
 
 fn leaf(
@@ -90,7 +112,8 @@ fn leaf(
     let masonry = strengths(s, i, build_up, k)?;
     given!(s, "weight of the masonry", "job file", g_m = masonry.density);
     calc!(s, "statics", "own weight of the leaf", G_w = g_m * l * t * h);
-    let flange = flange(s, i, h, t);
+    // The wall met presses the loaded leaf alone; counted with both it would be there twice.
+    let flange = if this.loaded { flange(s, i, h, t) } else { None };
     let loads: Vec<&Load> = r.loads.iter().filter(|x| x.leaf == k).collect();
     let stretch = l / r.length;
     let mut at_head = Vertical::default();

@@ -35,19 +35,29 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
     let r = i.ret;
     s.drawings(&[&format!("{}-elevation", r.mark), &format!("{}-section", r.mark)]);
     s.heading(1, "Geometry, loads and wind");
-    let models = match build::models(s, i, Change::NONE) {
-        Ok(models) => models,
+    let mut out = Vec::new();
+    let acting = match build::acting(i) {
+        Ok(acting) => acting,
         Err(outside) => {
             s.leave(outside);
-            return Checked { models: Vec::new() };
+            return Checked { models: out };
         }
     };
     remarks(s, i);
-    let mut out = Vec::new();
-    for m in models {
-        if !m.leaf.is_empty() {
-            s.heading(1, format!("{}leaf", m.leaf.replace('-', " ")));
+    let several = acting.len() > 1;
+    for a in acting {
+        if several {
+            let name = if a.leaf == 0 { "outer leaf" } else { "inner leaf" };
+            s.heading(1, format!("The {name}"));
+            s.of = name.to_owned();
         }
+        let m = match build::one(s, i, a, Change::NONE) {
+            Ok(m) => m,
+            Err(outside) => {
+                s.leave(outside);
+                continue;
+            }
+        };
         if m.propped {
             s.heading(1, "What the head leans on");
             lateral::head_reaction(s, &m, i.annex);
@@ -66,6 +76,7 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         });
         out.push((m, matrix));
     }
+    s.of.clear();
     s.heading(1, "By rule, for information");
     rules::by_rule(s, r.length, r.supported_wall_height, r.nearest_opening);
     if !s.holds() {
