@@ -1,5 +1,7 @@
 //! The command line: flags in, files and lines out, an exit code back. The only file that knows clap.
 
+mod child;
+
 use std::io::Write as _;
 use std::path::{Path, PathBuf};
 use std::time::{Duration, Instant};
@@ -83,6 +85,12 @@ enum Command {
         #[arg(long)]
         times: bool,
     },
+    /// Set one job and hand the pack back on standard output; `sheet` of several files starts these
+    #[command(hide = true)]
+    Set {
+        /// Job file
+        file: PathBuf,
+    },
 }
 
 /// Runs the tool with the process's arguments and yields its exit code.
@@ -99,6 +107,7 @@ pub fn run() -> u8 {
         Command::Start { file } => start(&file),
         Command::Check { files, json } => check_all(&files, json),
         Command::Sheet { files, into, times } => sheet_all(&files, into.as_deref(), times),
+        Command::Set { file } => child::hand_back(&file),
     }
 }
 
@@ -198,33 +207,30 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
     let progress = Progress::new(paths.len());
     let mut worst = ADEQUATE;
     let mut taken = files::Taken::default();
-    // What the other workers have in hand must not go: while a job is set, each of them ends about one. Of two
-    // workers, 1 took less time and memory than 2.
-    let age = many::workers(paths.len()).div_ceil(2);
     let work = |file: &PathBuf| {
-        let pack = set(file, into);
-        if paths.len() > 1 {
-            pack::evict(age);
-        }
-        pack
+        // Several packs in one process would share the typesetter's memory of work done, which makes
+        // each slower and all together larger: each of several has a process of its own.
+        let made = if paths.len() > 1 { child::ask(file)? } else { Made::here(file)? };
+        made.staged(file, into).map_err(Stopped::from)
     };
-    let take = |file: &PathBuf, result| {
-        let placed = internal(result).and_then(|pack: Pack| {
-            taken.take(&pack.staged.path, file)?;
-            Ok((pack.staged.place()?, pack.pages, pack.outcome, pack.times))
+    let take = |file: &PathBuf, result: Result<Result<(Made, files::Staged), Stopped>, String>| {
+        let ended = result.unwrap_or_else(|panic| Err(Error::Internal { step: panic }.into()));
+        let placed = ended.and_then(|(made, staged)| {
+            taken.take(&staged.path, file)?;
+            Ok((staged.place()?, made))
         });
         progress.aside(|| match placed {
-            Ok((path, pages, outcome, spent)) => {
-                worst = worst.max(code(outcome));
+            Ok((path, made)) => {
+                worst = worst.max(made.code);
                 let mut out = anstream::stdout();
-                let _ = writeln!(out, "{}: {pages} sheets: {}", path.display(), outcome.words());
+                let _ = writeln!(out, "{}: {} sheets: {}", path.display(), made.pages, made.outcome);
                 if times {
-                    let _ = writeln!(out, "  {spent}");
+                    let _ = writeln!(out, "  {}", made.times);
                 }
             }
-            Err(e) => {
+            Err(stopped) => {
                 worst = FAILED;
-                complain(&e);
+                stopped.complain();
             }
         });
         progress.one_more();
@@ -234,23 +240,69 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
     worst
 }
 
-/// A pack that only has to be put in its place.
-struct Pack {
-    staged: files::Staged,
+/// A pack that is set, and what is said of it.
+#[derive(serde::Serialize, serde::Deserialize)]
+struct Made {
+    file_name: String,
     pages: usize,
-    outcome: Outcome,
-    times: Spent,
+    /// The outcome in words.
+    outcome: String,
+    /// The exit code it asks for.
+    code: u8,
+    times: String,
+    #[serde(skip)]
+    pdf: Vec<u8>,
 }
 
-fn set(file: &Path, into: Option<&Path>) -> Result<Pack, Error> {
-    let begin = Instant::now();
-    let text = files::read(file)?;
-    let beside = file.parent().unwrap_or(Path::new(""));
-    let made = sheet(&files::name(file), &text, beside)?;
-    let path = into.unwrap_or(beside).join(&made.file_name);
-    let staged = files::Staged::new(path, &made.typeset.pdf)?;
-    let times = Spent { all: begin.elapsed(), setting: made.typeset.times };
-    Ok(Pack { staged, pages: made.typeset.pages, outcome: made.results.outcome, times })
+impl Made {
+    /// Sets a job in this process.
+    fn here(file: &Path) -> Result<Self, Error> {
+        let begin = Instant::now();
+        let text = files::read(file)?;
+        let made = sheet(&files::name(file), &text, file.parent().unwrap_or(Path::new("")))?;
+        let spent = Spent { all: begin.elapsed(), setting: made.typeset.times };
+        Ok(Self {
+            file_name: made.file_name,
+            pages: made.typeset.pages,
+            outcome: made.results.outcome.words(),
+            code: code(made.results.outcome),
+            times: spent.to_string(),
+            pdf: made.typeset.pdf,
+        })
+    }
+
+    /// Writes the pack beside its place, so that it only has to be moved there.
+    fn staged(mut self, file: &Path, into: Option<&Path>) -> Result<(Self, files::Staged), Error> {
+        let folder = into.or(file.parent()).unwrap_or(Path::new(""));
+        let pdf = std::mem::take(&mut self.pdf);
+        let staged = files::Staged::new(folder.join(&self.file_name), &pdf)?;
+        Ok((self, staged))
+    }
+}
+
+/// Why a pack was not set.
+enum Stopped {
+    /// An error of this process.
+    Here(Error),
+    /// What another process said, worded already.
+    There(String),
+}
+
+impl From<Error> for Stopped {
+    fn from(error: Error) -> Self {
+        Self::Here(error)
+    }
+}
+
+impl Stopped {
+    fn complain(&self) {
+        match self {
+            Self::Here(error) => complain(error),
+            Self::There(words) => {
+                let _ = writeln!(anstream::stderr(), "{}", words.trim_end());
+            }
+        }
+    }
 }
 
 /// Where the time of one pack went.
