@@ -6,14 +6,27 @@ use annotate_snippets::{AnnotationKind, Group, Level, Renderer, Snippet};
 
 use super::report::{Diagnostic, Report};
 
+/// Faults of the TOML itself that are shown where there is nothing else.
+const SYNTAX_SHOWN: usize = 10;
+
 impl Report {
     /// The report as text, with terminal colours where `colour` is set.
     pub fn render(&self, colour: bool) -> String {
         let renderer = if colour { Renderer::styled() } else { Renderer::plain() };
         let mut out = String::new();
-        for d in &self.diagnostics {
+        // A file that is no TOML at all has a fault on every line: the first of them say it.
+        let many = self.diagnostics.len() > SYNTAX_SHOWN
+            && self.diagnostics.iter().all(|d| d.kind == super::Kind::Syntax);
+        let shown = if many { SYNTAX_SHOWN } else { self.diagnostics.len() };
+        for d in &self.diagnostics[..shown] {
             out.push_str(&renderer.render(&[self.group(d)]));
             out.push_str("\n\n");
+        }
+        if many {
+            out.push_str(&format!(
+                "and {} more of the kind: is this a job file?\n",
+                self.diagnostics.len() - shown
+            ));
         }
         out.push_str(&match self.diagnostics.len() {
             1 => format!("{}: one thing to put right\n", self.name),
