@@ -121,20 +121,33 @@ pub fn one_of<S: AsRef<str>>(words: &[S]) -> String {
 }
 
 /// The spelling in `among` that is nearest to `word`, where one is near enough to be meant.
+/// Of several equally near none is named: M5 is no slip for M6, and a guess could be the stronger.
 pub fn nearest<'w>(word: &str, among: impl IntoIterator<Item = &'w str>) -> Option<&'w str> {
     let lower = word.to_lowercase();
     let reach = (word.chars().count() / 3).clamp(1, 4);
-    among
+    let mut near: Vec<(usize, &str)> = among
         .into_iter()
         .map(|w| (strsim::damerau_levenshtein(&lower, &w.to_lowercase()), w))
         .filter(|(distance, _)| *distance <= reach)
-        .min_by_key(|(distance, _)| *distance)
-        .map(|(_, w)| w)
+        .collect();
+    near.sort_by_key(|(distance, _)| *distance);
+    match near.as_slice() {
+        [first, second, ..] if first.0 == second.0 => None,
+        [first, ..] => Some(first.1),
+        [] => None,
+    }
 }
 
 #[cfg(test)]
 mod tests {
     use super::*;
+
+    #[test]
+    fn of_equally_near_words_none_is_named() {
+        let mortars = ["M12", "M6", "M4", "M2", "lime"];
+        assert_eq!(nearest("M5", mortars), None);
+        assert_eq!(nearest("lme", mortars), Some("lime"));
+    }
 
     const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[Odd::Below(200.0, "a short nib")]);
 
