@@ -82,7 +82,10 @@ pub const SLIPS: &[Slip] = &[
         "for = [\"R2\"]",
         "for = [\"R3\"]",
         "\"R3\"",
-        &["link junction: there is no return, panel or bracing wall \"R3\"", "add the return, panel or bracing wall"],
+        &[
+            "link junction: there is no return, panel or bracing wall \"R3\"",
+            "add the return, panel or bracing wall",
+        ],
     ),
     slip(
         "unknown link",
