@@ -152,6 +152,7 @@ pub const GLOSSARY: &[(&str, &str)] = &[
     ("n_min", "least number of wall ties per area"),
     ("N_Rd", "vertical resistance"),
     ("N_Rdt", "resistance of the compressed block"),
+    ("N_s", "vertical force without the load of the flange"),
     ("n_t", "number of wall ties per area"),
     ("N_web", "vertical force in the return itself"),
     ("nu", "tilt of the building, in radians"),

@@ -583,3 +583,21 @@ fn past_a_quarter_of_the_length_less_dead_load_presses_the_toe_harder() {
     assert!(m(100.0) / n(0.9) < 150.0);
     assert!(toe.case.starts_with("pressing"), "{}", toe.case);
 }
+
+/// Sliding of a bonded return counts what stands on the return itself: 0.9 (18 + 19 x 0.89 x 0.1 x 2.4) kN, times
+/// 0.4 over 2.5. The flange's 9 kN/m stays out.
+#[test]
+fn sliding_leaves_out_what_the_flange_brings() {
+    let (_, text) =
+        crate::jobs::demos().into_iter().find(|(n, _)| n.contains("rear-opening")).expect("the demo job");
+    let (_, results) = perpend::check("rear-opening", &text).unwrap_or_else(|e| panic!("{e}"));
+    let sheet = &results.sections.iter().find(|s| s.id == "R1").expect("R1").sheet;
+    let sliding = sheet.verdicts.iter().find(|v| v.id == "sliding").expect("sliding");
+    let own = 19e-6 * 890.0 * 100.0 * 2400.0;
+    let hand = 0.4 * 0.9 * (18e3 + own) / 2.5;
+    assert!(
+        (sliding.resistance.value.value - hand).abs() < 1e-6,
+        "{} {hand}",
+        sliding.resistance.value.value
+    );
+}

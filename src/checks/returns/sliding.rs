@@ -47,13 +47,21 @@ pub fn shear(s: &mut Sheet, m: &Model, annex: &Annex, a: &Actions, st: &Stressed
     verify!(s, id, "6.2(1) eq. 6.12", words, V_Ed <= V_Rd);
 }
 
-/// Sliding at the damp-proof course: V <= mu N / gamma_M.
+/// Sliding at the damp-proof course: V <= mu N / gamma_M. What a flange brings is left out of N: its
+/// friction would have to reach the return as tension across the junction.
 pub fn sliding(s: &mut Sheet, m: &Model, a: &Actions, mu_source: &str, id: &str) {
     let (N_Ed, V_Ed) = (a.N_Ed, a.V_Ed);
     given!(s, "material factor, shear", m.masonry.gamma_v_source.as_str(), gamma_Mv = m.masonry.gamma_v);
     given!(s, "coefficient of friction at the dpc", mu_source, mu = m.mu);
-    calc!(s, "first principles", "sliding resistance", V_Rds = mu * N_Ed / gamma_Mv);
-    verify!(s, id, "first principles", "sliding at the dpc", V_Ed <= V_Rds);
+    if let Some(f) = a.flange {
+        let (gamma_G, G_f) = (a.gamma_G, f.G_f);
+        calc!(s, "statics", "vertical force without the flange's load", N_s = N_Ed - gamma_G * G_f);
+        calc!(s, "first principles", "sliding resistance", V_Rds = mu * N_s / gamma_Mv);
+        verify!(s, id, "first principles", "sliding at the dpc", V_Ed <= V_Rds);
+    } else {
+        calc!(s, "first principles", "sliding resistance", V_Rds = mu * N_Ed / gamma_Mv);
+        verify!(s, id, "first principles", "sliding at the dpc", V_Ed <= V_Rds);
+    }
 }
 
 /// Vertical shear between return and flange: what the flange takes of N, less what it brings, over the
