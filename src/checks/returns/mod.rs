@@ -102,7 +102,8 @@ fn remarks(s: &mut Sheet, i: &Inputs<'_>) {
         s.note(format!("The junction with {} is {word}: {words}.", r.junction.to));
         s.note(
             "Where the flange is longer on one side it bends the return across its plane as well; that is left out. \
-             The least reduction across the wall found for the return is used for the flange too.",
+             The flange is taken to be of the same masonry, and the least reduction across the wall found for the \
+             return is used for it too.",
         );
     }
 }
