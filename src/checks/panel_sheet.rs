@@ -2,7 +2,7 @@
 
 use super::panels::{self, PanelModel};
 use super::{Job, Section, masonry, panel_views};
-use crate::building::Panel;
+use crate::building::{Building, Panel};
 use crate::trace::{Outside, Sheet};
 
 /// One section a panel.
@@ -53,5 +53,14 @@ fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
             leaf.thickness,
         )?);
     }
-    panels::model(b, p, &leaves, wind.panel, "wind sheet").ok_or_else(missing)
+    let m = panels::model(b, p, &leaves, wind.panel, "wind sheet").ok_or_else(missing)?;
+    Ok(PanelModel { strengths_on: same_leaves(b, p), ..m })
+}
+
+/// The first panel before this one with the same wall, height and load: its sheet has the strengths.
+fn same_leaves(b: &Building, p: &Panel) -> Option<String> {
+    let same = |o: &&Panel| {
+        o.build_up == p.build_up && o.height == p.height && o.dead_above == p.dead_above && o.route == p.route
+    };
+    b.panels.iter().take_while(|o| o.mark != p.mark).find(same).map(|o| o.mark.clone())
 }

@@ -52,6 +52,7 @@ fn brick_leaf() -> PanelModel {
         arching: None,
         before: span(2000.0),
         after: span(4000.0),
+        strengths_on: None,
     }
 }
 

@@ -169,7 +169,7 @@ fn plate(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Resu
     let State { m, edges, l, W_Ed, .. } = state;
     let h = m.h;
     let (resistance, ratio) = strength.across.ok_or_else(|| missing(state))?;
-    let above = format!("{}, above", m.leaf_name(i));
+    let above = m.leaf_from(i);
     // Before has the same thickness and ratio: its limits are tried without printing them twice.
     let mut quiet = Sheet::silent();
     let limits = if state.phase == "before" { &mut quiet } else { &mut *s };
@@ -207,7 +207,7 @@ fn horizontal(
 ) -> Result<LeafOutcome, Outside> {
     let State { m, l, W_Ed, .. } = state;
     let (resistance, _) = strength.across.ok_or_else(|| missing(state))?;
-    let above = format!("{}, above", m.leaf_name(i));
+    let above = m.leaf_from(i);
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
     let w_Rd = by_leaf!(s, m, i, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
     let mut out = LeafOutcome { label: state.form.words().to_owned(), w_Rd, ..Default::default() };
@@ -222,7 +222,7 @@ fn horizontal(
 fn upright(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Result<LeafOutcome, Outside> {
     let State { m, W_Ed, form, .. } = state;
     let h = m.h;
-    let above = format!("{}, above", m.leaf_name(i));
+    let above = m.leaf_from(i);
     given!(s, "resistance per unit length, parallel to the bed joints", &above, M_Rd1 = strength.M_Rd1);
     let w_Rd = if form == Form::Cantilever {
         by_leaf!(s, m, i, "statics, 6.3.1", 2.0 * M_Rd1 / sq(h))

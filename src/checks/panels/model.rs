@@ -47,6 +47,8 @@ pub struct PanelModel {
     pub before: Span,
     /// After the removal.
     pub after: Span,
+    /// The sheet on which the same leaves, of the same height and load, are worked already.
+    pub strengths_on: Option<String>,
 }
 
 impl PanelModel {
@@ -55,7 +57,15 @@ impl PanelModel {
         self.leaves.iter().position(|l| l.loaded).unwrap_or(0)
     }
 
-    /// What leaf `i` is called on the sheet.
+    /// Where the strengths of leaf `i` stand: above on this sheet, or on another.
+    pub fn leaf_from(&self, i: usize) -> String {
+        match &self.strengths_on {
+            Some(mark) => format!("{}, sheet {mark}", self.leaf_name(i)),
+            None => format!("{}, above", self.leaf_name(i)),
+        }
+    }
+
+    /// What leaf `i` is called.
     pub fn leaf_name(&self, i: usize) -> &'static str {
         match (self.leaves.len(), i) {
             (1, _) => "wall",
@@ -115,5 +125,6 @@ pub fn model(
         arching: p.arching.clone(),
         before: p.before.clone(),
         after: p.after.clone(),
+        strengths_on: None,
     })
 }

@@ -36,7 +36,7 @@ pub struct Outcome {
 /// limit that is left is noted as outside under `size` or the check's id.
 pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     let W_Ed = wind(s, m, annex);
-    let strengths: Vec<Strength> = (0..m.leaves.len()).map(|i| strength::of_leaf(s, m, i)).collect();
+    let strengths = strengths(s, m);
     // Before is information: worked silently by the same code, printed in the table side by side.
     let before = s.recording().then(|| {
         let mut quiet = Sheet::silent();
@@ -88,6 +88,21 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
         }
     }
     out
+}
+
+/// Strengths of the leaves: worked here, or quoted from the sheet where the same leaves stand already.
+fn strengths(s: &mut Sheet, m: &PanelModel) -> Vec<Strength> {
+    let of = |s: &mut Sheet| (0..m.leaves.len()).map(|i| strength::of_leaf(s, m, i)).collect();
+    match &m.strengths_on {
+        None => of(s),
+        Some(mark) => {
+            s.note(format!(
+                "The leaves resist what they resist in {mark}: the same wall, height and load. They are worked on its \
+                 sheet."
+            ));
+            of(&mut Sheet::silent())
+        }
+    }
 }
 
 /// Design pressure, with what is taken for granted.
@@ -218,7 +233,7 @@ fn arch(
     };
     let i = m.loaded();
     let strength = &strengths[i];
-    let above = format!("{}, above", m.leaf_name(i));
+    let above = m.leaf_from(i);
     s.note(format!(
         "Assumed, and a hold point: the arch thrust is resisted: {}.",
         a.abutment.trim_end_matches('.')
