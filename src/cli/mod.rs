@@ -23,7 +23,7 @@ pub const FAILED: u8 = 2;
 
 /// Calculation packs for masonry that stays when a load-bearing wall comes out.
 ///
-/// Reads job files (TOML), checks returns, panels and bearings of what stays, and typesets a
+/// Reads job files (TOML), checks the returns and panels that stay, and typesets a
 /// calculation pack as PDF.
 #[derive(Parser)]
 #[command(name = "perpend", version, arg_required_else_help = true, after_help = EXAMPLES)]

@@ -7,33 +7,7 @@ use perpend::quantity::{Length, Stress};
 use perpend::standards::annex::Annex;
 use perpend::trace::Sheet;
 
-use super::job::{BLOCK_140, with_return};
-
-const RETURN: &str = r#"
-[[returns]]
-mark = "R1"
-title = "Return"
-build_up = "wall"
-storey = "ground"
-length = "1200 mm"
-height = "2.5 m"
-base = "dpc"
-head = "free"
-path = "sideways"
-tributary_width = "0.1 m"
-restraint = "timber floor"
-supported_wall_height = "5 m"
-
-[returns.junction]
-to = "front wall"
-bonded = false
-proof = "seen"
-words = "Butted."
-thickness = "140 mm"
-left = "2 m"
-right = "2 m"
-dead = "9 kN/m"
-"#;
+use super::job::{BLOCK_140, PLAIN_RETURN, with_return};
 
 fn wall(mark: &str, at: f64, length: f64, stands: Stands, ends: Ends) -> BracingWall {
     BracingWall {
@@ -61,8 +35,8 @@ fn close(got: Option<f64>, hand: f64) {
 /// against the push at the near wall, with it at the far one. Relief is not counted: 7/9 and 2/9 + 5/18 = 1/2.
 #[test]
 fn two_walls_of_unequal_stiffness() {
-    let mut b =
-        perpend::job::read("hand.toml", &with_return(BLOCK_140, RETURN)).unwrap_or_else(|e| panic!("{e:?}"));
+    let mut b = perpend::job::read("hand.toml", &with_return(BLOCK_140, PLAIN_RETURN))
+        .unwrap_or_else(|e| panic!("{e:?}"));
     let mut st = b.stability.take().expect("a storey");
     st.share_by = ShareBy::Stiffness;
     st.walls = vec![

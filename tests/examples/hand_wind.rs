@@ -3,7 +3,7 @@
 //! Numbers of EN 1991-1-4 and its UK National Annex typed again (from memory, check against the standard):
 //! terrain III z_0 0.3 m, z_min 5 m; Table 7.1 at h/d between 0.25 and 1; air 1.226 kg/m³.
 
-use super::job::{BLOCK_140, with_return};
+use super::job::{BLOCK_140, PLAIN_RETURN, with_return};
 use perpend::trace::{Entry, Sheet};
 
 const TERRAIN: &str = r#"
@@ -16,32 +16,6 @@ breadth = "10 m"
 depth = "20.0 m"
 c_o = { value = 1.1, reason = "A long slope." }
 lack_of_correlation = true
-"#;
-
-const RETURN: &str = r#"
-[[returns]]
-mark = "R1"
-title = "Return"
-build_up = "wall"
-storey = "ground"
-length = "1200 mm"
-height = "2.5 m"
-base = "dpc"
-head = "free"
-path = "sideways"
-tributary_width = "0.1 m"
-restraint = "timber floor"
-supported_wall_height = "5 m"
-
-[returns.junction]
-to = "front wall"
-bonded = false
-proof = "seen"
-words = "Butted."
-thickness = "140 mm"
-left = "2 m"
-right = "2 m"
-dead = "9 kN/m"
 "#;
 
 /// The value printed under `name`, last.
@@ -61,7 +35,7 @@ fn printed(s: &Sheet, name: &str) -> f64 {
 /// is taken for the local coefficients, the safe side.
 #[test]
 fn wind_by_terrain_by_hand() {
-    let text = with_return(BLOCK_140, RETURN)
+    let text = with_return(BLOCK_140, PLAIN_RETURN)
         .replace("route = \"stated\"", "route = \"terrain\"")
         .replace("\n[materials.block]", &format!("{TERRAIN}\n[materials.block]"));
     let (_, results) = perpend::check("wind.toml", &text).unwrap_or_else(|e| panic!("{e}"));

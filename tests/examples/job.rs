@@ -19,6 +19,33 @@ material = "block"
 thickness = "140 mm"
 "#;
 
+/// A plain return that takes hardly any wind, for examples that are about something else.
+pub const PLAIN_RETURN: &str = r#"
+[[returns]]
+mark = "R1"
+title = "Return"
+build_up = "wall"
+storey = "ground"
+length = "1200 mm"
+height = "2.5 m"
+base = "dpc"
+head = "free"
+path = "sideways"
+tributary_width = "0.1 m"
+restraint = "timber floor"
+supported_wall_height = "5 m"
+
+[returns.junction]
+to = "front wall"
+bonded = false
+proof = "seen"
+words = "Butted."
+thickness = "140 mm"
+left = "2 m"
+right = "2 m"
+dead = "9 kN/m"
+"#;
+
 const HEAD: &str = r#"
 [job]
 number = "7001"
