@@ -85,7 +85,7 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> Panel
         FloorKind::Concrete => "concrete floor",
         FloorKind::Roof => "roof",
     };
-    let held = |e: &Edge| if e.kind == Kind::Free { "not held" } else { "holds the panel" };
+    let held = |e: &Edge| if e.kind == Kind::Free { "not held" } else { "held" };
     PanelSection {
         mark: p.mark.clone(),
         height: p.height.base(),

@@ -5,7 +5,7 @@ use crate::building::{Along, Building, PlanWall};
 use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind};
 use crate::trace::Sheet;
 
-const FRAME: Frame = Frame::new(160.0, 150.0);
+const FRAME: Frame = Frame::new(160.0, 108.0);
 
 /// The key plan, where the job gives walls as lines.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {

@@ -2,9 +2,10 @@
 
 use super::returns::Checked;
 use super::returns::actions::{self, Case, Direction, Toe as Pressed};
+use super::returns::check::Check;
 use super::returns::in_plane;
+use super::returns::matrix::Matrix;
 use super::returns::model::{At, Model};
-use super::returns::run::{Check, Matrix};
 use super::shapes::{layers, leaf_material};
 use crate::building::{BaseJoint, BuildUp, Building, Head, Return};
 use crate::quantity::{Dyn, Force, Length, print};

@@ -59,8 +59,10 @@ pub struct Pack {
     pub cautions: Vec<String>,
     /// Photographs; their files are handed to [`super::typeset`].
     pub photographs: Vec<Photograph>,
-    /// The whole job file.
+    /// The whole job file, to be attached.
     pub inputs: String,
+    /// The lines of the job file that say something, with their numbers.
+    pub listing: Vec<(usize, String)>,
     /// The symbols of the pack.
     pub notation: Vec<Notation>,
 }

@@ -15,6 +15,8 @@ use typst::{Library, LibraryExt};
 const TEMPLATES: &[(&str, &str)] = &[
     ("/templates/pack.typ", include_str!("../../templates/pack.typ")),
     ("/templates/parts/back.typ", include_str!("../../templates/parts/back.typ")),
+    ("/templates/parts/source.typ", include_str!("../../templates/parts/source.typ")),
+    ("/templates/parts/columns.typ", include_str!("../../templates/parts/columns.typ")),
     ("/templates/parts/blocks.typ", include_str!("../../templates/parts/blocks.typ")),
     ("/templates/parts/date.typ", include_str!("../../templates/parts/date.typ")),
     ("/templates/parts/drawing.typ", include_str!("../../templates/parts/drawing.typ")),

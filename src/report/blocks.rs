@@ -6,7 +6,7 @@ use super::{anchor, bar, verdict_words};
 use crate::checks::Section;
 use crate::quantity::print;
 use crate::trace::math::{self, Node};
-use crate::trace::{Column, Entry, Op, Step, Table, Value, Verdict, spoken};
+use crate::trace::{Column, Entry, Op, Row, Step, Table, Value, Verdict, spoken};
 
 /// The blocks of a section, in order.
 pub fn of_section(s: &Section) -> Vec<Json> {
@@ -53,6 +53,9 @@ fn block(s: &Section, entry: &Entry) -> Option<Json> {
         }),
         Entry::Note(text) => json!({"kind": "note", "text": text}),
         Entry::Table(t) => table(t),
+        Entry::Columns(c) => {
+            json!({"kind": "columns", "heads": c.heads, "rows": c.rows.iter().filter_map(|r| row(s, r)).collect::<Vec<_>>()})
+        }
         Entry::Drawings(names) => {
             let drawings: Vec<_> = s.drawings.iter().filter(|d| names.contains(&d.name)).collect();
             if drawings.is_empty() {
@@ -61,6 +64,36 @@ fn block(s: &Section, entry: &Entry) -> Option<Json> {
             json!({"kind": "drawings", "drawings": drawings})
         }
     })
+}
+
+/// A row of columns: the block of the first column that has it, with what each column finds.
+fn row(s: &Section, row: &Row) -> Option<Json> {
+    let (_, lead) = row.lead()?;
+    let mut out = block(s, lead)?;
+    let cell = |e: &Option<Entry>| match e {
+        Some(Entry::Verify(v)) => verdict(s, v),
+        Some(e) => match (e.value(), e.relation()) {
+            (Some(v), _) => result(v),
+            (_, Some(r)) => json!({"value": if r.holds { "yes" } else { "no" }, "unit": ""}),
+            _ => Json::Null,
+        },
+        None => Json::Null,
+    };
+    if matches!(lead, Entry::Verify(_)) || lead.value().is_some() || lead.relation().is_some() {
+        out["cells"] = row.cells.iter().map(cell).collect();
+        // The source of a row names every column's own; a branch says both ways it went.
+        let key = if matches!(lead, Entry::Given { .. }) { "source" } else { "clause" };
+        if !matches!(lead, Entry::Verify(_)) {
+            out[key] = json!(row.sources());
+        }
+        if lead.relation().is_some() || matches!(lead, Entry::Verify(_)) {
+            out["words"] = json!(row.words());
+        }
+        if matches!(lead, Entry::Lookup { .. }) {
+            out["entered"] = json!(row.entered());
+        }
+    }
+    Some(out)
 }
 
 /// The values of a relation under its own sign: the template sets a false one as a comparison.

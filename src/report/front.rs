@@ -177,11 +177,7 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
     let helping = &b.basis.helping_factor;
     all.push((
         format!("Only dead load helps, taken {} times; imposed load never helps.", helping.value),
-        if helping.reason.is_empty() {
-            "EN 1990 Table NA.A1.2(A)".to_owned()
-        } else {
-            helping.reason.clone()
-        },
+        if helping.reason.is_empty() { "EN 1990 NA.A1.2(A)".to_owned() } else { helping.reason.clone() },
     ));
     for (name, c) in [
         ("compression", &b.basis.gamma_m_compression),

@@ -7,6 +7,7 @@
 mod blocks;
 mod front;
 pub mod lines;
+mod listing;
 pub mod machine;
 pub mod notation;
 
@@ -108,6 +109,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
             })
             .collect(),
         inputs: text.to_owned(),
+        listing: listing::of(text),
         notation: notation::used(&results.sections),
     }
 }

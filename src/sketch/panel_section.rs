@@ -203,12 +203,13 @@ fn actions(board: &mut Board, view: &PanelSection, ruler: Ruler, high: f64) {
         let push = Vec2::new(if toward { depth } else { -depth }, 0.0);
         let side = |y| ruler.by(0.0, y, -inset, 0.0);
         load::comb(board, side(0.0), side(view.height), push);
-        let back = ruler.by(0.0, 0.55 * view.height, -(gap + depth), 0.0);
-        board.note(Note::new(Role::Load, back, action.text()).words(&action.words).spot(Spot::new(
-            back - Vec2::new(1.5, 0.0),
-            -1.0,
-            0.0,
-        )));
+        let back = ruler.by(0.0, 0.5 * view.height, -(gap + depth), 0.0);
+        let beside = back - Vec2::new(1.5, 0.0);
+        let note = Note::new(Role::Load, back, action.text()).words(&action.words);
+        let level = Spot::new(beside, -1.0, 0.0);
+        // Along the comb where it is long enough: beside it the label takes the width of the sheet.
+        let along = action.text().extent(8.0).width < ruler.at(0.0, 0.0).y - ruler.at(0.0, view.height).y;
+        board.note(if along { note.spot(Spot::upwards(beside, -1.0, 0.0)) } else { note.spot(level) });
     }
     if let Some((index, action)) = &view.precompression
         && let Some(layer) = view.layers.get(*index)

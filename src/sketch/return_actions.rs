@@ -41,8 +41,8 @@ pub struct Curve {
 }
 
 /// Width of a curve, and clear distance between two curves with their labels, mm on paper.
-const ORDINATE: f64 = 16.0;
-const APART: f64 = 6.0;
+const ORDINATE: f64 = 8.0;
+const APART: f64 = 3.0;
 /// Distance between the ordinates drawn inside a curve, mm on paper.
 const HATCH: f64 = 2.5;
 
@@ -60,7 +60,7 @@ fn draw(view: &ReturnActions, scale: Scale) -> Drawing {
     if view.propped {
         load::restraint(&mut board, top, Vec2::new(-1.0, 0.0));
     }
-    dimension::up(&mut board, (0.0, top.y), -10.0, -4.0, mm(view.height));
+    dimension::up(&mut board, (0.0, top.y), -7.5, -4.0, mm(view.height));
 
     let mut edge = 4.0;
     for curve in &view.curves {

@@ -1,5 +1,6 @@
 //! What can stand on a sheet.
 
+use super::columns::Columns;
 use super::expr::Expr;
 use super::parse::Op;
 use crate::quantity::Dyn;
@@ -195,6 +196,67 @@ pub enum Entry {
     Note(String),
     /// A table.
     Table(Table),
+    /// The same work on several things.
+    Columns(Columns),
     /// A place for the drawings of these names, side by side.
     Drawings(Vec<String>),
+}
+
+impl Entry {
+    /// Its symbol with the value, where it brings one.
+    pub const fn value(&self) -> Option<&Value> {
+        match self {
+            Self::Given { value, .. } | Self::Lookup { value, .. } | Self::Found { value, .. } => Some(value),
+            Self::Step(step) => Some(&step.result),
+            _ => None,
+        }
+    }
+
+    /// Its condition, where it is one.
+    pub const fn relation(&self) -> Option<&Relation> {
+        match self {
+            Self::Decide { relation, .. } | Self::Require { relation, .. } => Some(relation),
+            _ => None,
+        }
+    }
+
+    /// Its clause, or where an input comes from.
+    pub fn source(&self) -> Option<&str> {
+        match self {
+            Self::Given { source, .. } => Some(source),
+            Self::Lookup { clause, .. }
+            | Self::Found { clause, .. }
+            | Self::Decide { clause, .. }
+            | Self::Require { clause, .. }
+            | Self::Rule { clause, .. } => Some(clause),
+            Self::Step(step) => Some(&step.clause),
+            Self::Verify(v) => Some(&v.clause),
+            Self::Outside(o) => Some(&o.clause),
+            _ => None,
+        }
+    }
+
+    /// What it says of itself.
+    pub fn words(&self) -> Option<&str> {
+        match self {
+            Self::Given { words, .. }
+            | Self::Lookup { words, .. }
+            | Self::Found { words, .. }
+            | Self::Decide { words, .. }
+            | Self::Require { words, .. }
+            | Self::Rule { words, .. } => Some(words),
+            Self::Step(step) => Some(&step.words),
+            Self::Verify(v) => Some(&v.words),
+            Self::Outside(o) => Some(&o.words),
+            _ => None,
+        }
+    }
+
+    /// This entry, or those that stand in its columns.
+    pub fn flat(&self) -> Vec<&Self> {
+        match self {
+            Self::Columns(c) => c.rows.iter().flat_map(super::columns::Row::entries).collect(),
+            other => vec![other],
+        }
+    }
 }

@@ -10,12 +10,13 @@
 //!
 //! On a silent sheet nothing is kept but the verdicts, so a search can run the check itself.
 //!
-//! * [`Sheet`] and its [`Entry`]s
+//! * [`Sheet`] and its [`Entry`]s; [`Columns`] where the same work is done on several things
 //! * [`expr`]: a formula as a tree: parsed, evaluated
 //! * [`symbol`]: names to symbols, and what each means
 //! * [`math`], [`text`], [`spoken`]: the three renderings
 //! * the macros `given! lookup! found! calc! decide! require! verify!`
 
+mod columns;
 mod entry;
 pub mod expr;
 pub mod glossary;
@@ -27,6 +28,7 @@ pub mod spoken;
 pub mod symbol;
 pub mod text;
 
+pub use columns::{Columns, Row};
 pub use entry::{Column, Entry, Outside, Relation, Step, Table, Value, Verdict};
 pub use parse::Op;
 pub use sheet::{Fault, Sheet, Traced};

@@ -34,6 +34,9 @@ pub struct Fault {
     pub what: String,
 }
 
+/// What stands on a sheet, and how it was last printed.
+pub(super) type Memory = (HashMap<String, Dyn>, HashMap<String, String>);
+
 /// A sheet. `id` names it (`"R1"`), for anchors and cross-references.
 #[derive(Clone, Debug, Default)]
 pub struct Sheet {
@@ -271,6 +274,16 @@ impl Sheet {
         }
         self.printed.insert(key, now);
         false
+    }
+
+    /// What stands and how it was printed; see [`Sheet::columns`].
+    pub(super) fn memory(&self) -> Memory {
+        (self.scope.clone(), self.printed.clone())
+    }
+
+    /// Lets the same stand again.
+    pub(super) fn remember(&mut self, (scope, printed): Memory) {
+        (self.scope, self.printed) = (scope, printed);
     }
 
     fn push(&mut self, entry: impl FnOnce() -> Entry) {

@@ -3,7 +3,7 @@
 use super::entry::{Entry, Table, Value};
 use super::math::{self, Node};
 use super::parse::Op;
-use super::{Sheet, Step, Verdict, symbol};
+use super::{Columns, Row, Sheet, Step, Verdict, symbol};
 use crate::quantity::print;
 
 /// Width of the working, before the clause.
@@ -43,7 +43,62 @@ pub fn entry(entry: &Entry) -> String {
         }
         Entry::Note(text) => format!("  Note: {text}\n"),
         Entry::Table(t) => table(t),
+        Entry::Columns(c) => columns(c),
         Entry::Drawings(names) => format!("  [drawing {}]\n", names.join(", ")),
+    }
+}
+
+/// Columns: each row with the numbers of the first column that has it, then the results of all.
+fn columns(c: &Columns) -> String {
+    let mut out = format!("  Columns: {}\n", c.heads.join(" | "));
+    for row in &c.rows {
+        out.push_str(&self::row(c, row));
+    }
+    out.push_str("  End of columns\n");
+    out
+}
+
+fn row(c: &Columns, row: &Row) -> String {
+    let Some((_, lead)) = row.lead() else { return String::new() };
+    let show = |v: &Value| print::show(&v.name, v.value).to_string();
+    let cells = |of: &dyn Fn(&Entry) -> Option<String>| {
+        let cell = |e: &Option<Entry>| e.as_ref().and_then(of).unwrap_or_else(|| "–".to_owned());
+        row.cells.iter().map(cell).collect::<Vec<_>>().join(" | ")
+    };
+    let values = || cells(&|e| e.value().map(show));
+    match lead {
+        Entry::Given { value, words, .. } | Entry::Found { value, words, .. } => {
+            line(&format!("{} = {}   {words}", node(&math::symbol(&value.name)), values()), &row.sources())
+        }
+        Entry::Lookup { value, words, .. } => {
+            let mut out = line(
+                &format!("{} = {}   {words}", node(&math::symbol(&value.name)), values()),
+                &row.sources(),
+            );
+            for (i, entered) in row.entered().into_iter().enumerate().filter(|(_, e)| !e.is_empty()) {
+                out.push_str(&format!("      {}: {entered}\n", c.heads[i]));
+            }
+            out
+        }
+        Entry::Step(s) => {
+            let whole = step(s);
+            let (before, _) = whole.rsplit_once(" = ").unwrap_or((&whole, ""));
+            line(&format!("{before} = {}", values()), &row.sources())
+        }
+        Entry::Decide { relation, .. } | Entry::Require { relation, .. } => {
+            let (symbols, numbers) = (math::relation(relation), math::relation_values(relation));
+            let says = cells(&|e| e.relation().map(|r| if r.holds { "yes" } else { "no" }.to_owned()));
+            let left = format!("{}: {}: {says}; {}", node(&symbols), node(&numbers), row.words());
+            line(&left, &row.sources())
+        }
+        Entry::Verify(_) => {
+            let of = |(i, e): (usize, &Option<Entry>)| match e {
+                Some(Entry::Verify(v)) => Some(line(&format!("{}: {}", c.heads[i], verdict(v)), &v.clause)),
+                _ => None,
+            };
+            row.cells.iter().enumerate().filter_map(of).collect()
+        }
+        other => entry(other),
     }
 }
 

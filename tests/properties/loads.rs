@@ -3,10 +3,10 @@
 use perpend::building::{Acts, Head, Leaf, Path, Restraint, ShareBy, Stands, UnitStrength, WindRoute};
 use perpend::checks::masonry::derive;
 use perpend::checks::returns::build::{Change, models};
+use perpend::checks::returns::check::Check;
 use perpend::checks::returns::flexure;
 use perpend::checks::returns::model::Model;
 use perpend::checks::returns::rules::by_rule;
-use perpend::checks::returns::run::Check;
 use perpend::checks::{Job, wind};
 use perpend::quantity::{Force, Length, Num, Stress};
 use perpend::standards::annex::Annex;

@@ -2,8 +2,8 @@
 
 use perpend::checks::returns::actions::{self, Direction};
 use perpend::checks::returns::build::Change;
+use perpend::checks::returns::check::Check;
 use perpend::checks::returns::model::{At, Model};
-use perpend::checks::returns::run::Check;
 use perpend::checks::returns::{in_plane, sliding};
 use perpend::quantity::Force;
 use perpend::standards::annex::Annex;

@@ -33,17 +33,34 @@ fn no_demo_sheet_gives_the_same_twice() {
         let (_, results) = perpend::check(&name, &text).unwrap_or_else(|e| panic!("{name}: {e}"));
         for section in &results.sections {
             let mut standing: HashMap<&str, Dyn> = HashMap::new();
+            let at = format!("{name}, sheet {}", section.id);
             for entry in &section.sheet.entries {
-                let (value, given) = match entry {
-                    Entry::Given { value, .. } => (value, true),
-                    Entry::Lookup { value, .. } | Entry::Found { value, .. } => (value, false),
-                    Entry::Step(step) => (&step.result, false),
-                    _ => continue,
+                let Entry::Columns(columns) = entry else {
+                    follow(&at, &mut standing, entry);
+                    continue;
                 };
-                let before = standing.insert(&value.name, value.value);
-                let again = given && before.is_some_and(|b| b.same(value.value));
-                assert!(!again, "{name}, sheet {}: {} is given while it stands", section.id, value.name);
+                // Each column goes on from what stood before the first.
+                for i in 0..columns.heads.len() {
+                    let mut standing = standing.clone();
+                    for row in &columns.rows {
+                        if let Some(entry) = &row.cells[i] {
+                            follow(&at, &mut standing, entry);
+                        }
+                    }
+                }
             }
         }
     }
+}
+
+/// Notes what an entry lets stand; a given value must not stand already.
+fn follow<'a>(at: &str, standing: &mut HashMap<&'a str, Dyn>, entry: &'a Entry) {
+    let Some(value) = entry.value() else { return };
+    let before = standing.insert(&value.name, value.value);
+    let given = matches!(entry, Entry::Given { .. });
+    assert!(
+        !given || !before.is_some_and(|b| b.same(value.value)),
+        "{at}: {} is given while it stands",
+        value.name
+    );
 }

@@ -117,39 +117,28 @@ pub struct State<'a> {
     pub phase: &'static str,
 }
 
-/// `w_Rd`, `w_Rd_o` or `w_Rd_i` by the leaf's place, from one formula.
+/// `w_Rd`, or `w_leaf` where there are several, from one formula.
 macro_rules! by_leaf {
-    ($s:expr, $m:expr, $i:expr, $clause:expr, $($f:tt)+) => {
-        match ($m.leaves.len(), $i) {
-            (1, _) => {
-                calc!($s, $clause, "pressure that the wall can take", w_Rd = $($f)+);
-                w_Rd
-            }
-            (_, 0) => {
-                calc!($s, $clause, "pressure that the outer leaf can take", w_Rd_o = $($f)+);
-                w_Rd_o
-            }
-            _ => {
-                calc!($s, $clause, "pressure that the inner leaf can take", w_Rd_i = $($f)+);
-                w_Rd_i
-            }
+    ($s:expr, $m:expr, $clause:expr, $($f:tt)+) => {
+        if $m.leaves.len() == 1 {
+            calc!($s, $clause, "pressure that the wall can take", w_Rd = $($f)+);
+            w_Rd
+        } else {
+            calc!($s, $clause, "pressure that the leaf can take", w_leaf = $($f)+);
+            w_leaf
         }
     };
 }
 
-/// Works leaf `i`: the pressure it can take, and for a single leaf the moments against their resistances.
+/// Works one leaf: the pressure it can take, and for a single leaf the moments against their resistances.
 ///
 /// # Errors
 /// [`Outside`] where the strength or the coefficient that this way of spanning needs does not exist.
-pub fn leaf(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Result<LeafOutcome, Outside> {
-    let State { m, form, .. } = state;
-    if m.leaves.len() > 1 {
-        s.note(format!("{}{}:", m.leaf_name(i)[..1].to_uppercase(), &m.leaf_name(i)[1..]));
-    }
-    match form {
-        Form::Plate => plate(s, state, i, strength),
-        Form::Horizontal => horizontal(s, state, i, strength),
-        Form::Vertical | Form::Cantilever => upright(s, state, i, strength),
+pub fn leaf(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOutcome, Outside> {
+    match state.form {
+        Form::Plate => plate(s, state, strength),
+        Form::Horizontal => horizontal(s, state, strength),
+        Form::Vertical | Form::Cantilever => upright(s, state, strength),
     }
 }
 
@@ -165,11 +154,11 @@ fn missing(state: State<'_>) -> Outside {
     )
 }
 
-fn plate(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Result<LeafOutcome, Outside> {
+fn plate(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOutcome, Outside> {
     let State { m, edges, l, W_Ed, .. } = state;
     let h = m.h;
     let (resistance, ratio) = strength.across.ok_or_else(|| missing(state))?;
-    let above = m.leaf_from(i);
+    let above = m.strength_from();
     // Before has the same thickness and ratio: its limits are tried without printing them twice.
     let mut quiet = Sheet::silent();
     let limits = if state.phase == "before" { &mut quiet } else { &mut *s };
@@ -182,7 +171,7 @@ fn plate(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Resu
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
     let found = coefficient::alpha_2(s, &id(state), edges, h, l, mu)?;
     let alpha_2 = found.alpha_2;
-    let w_Rd = by_leaf!(s, m, i, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
+    let w_Rd = by_leaf!(s, m, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
     let mut out =
         LeafOutcome { label: found.label, mu: Some(mu), alpha_2: Some(alpha_2), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 {
@@ -199,17 +188,12 @@ fn plate(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Resu
     Ok(out)
 }
 
-fn horizontal(
-    s: &mut Sheet,
-    state: State<'_>,
-    i: usize,
-    strength: &Strength,
-) -> Result<LeafOutcome, Outside> {
+fn horizontal(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOutcome, Outside> {
     let State { m, l, W_Ed, .. } = state;
     let (resistance, _) = strength.across.ok_or_else(|| missing(state))?;
-    let above = m.leaf_from(i);
+    let above = m.strength_from();
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
-    let w_Rd = by_leaf!(s, m, i, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
+    let w_Rd = by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
     let mut out = LeafOutcome { label: state.form.words().to_owned(), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 {
         let M_Ed2 = span::horizontal(s, W_Ed, l);
@@ -219,15 +203,15 @@ fn horizontal(
     Ok(out)
 }
 
-fn upright(s: &mut Sheet, state: State<'_>, i: usize, strength: &Strength) -> Result<LeafOutcome, Outside> {
+fn upright(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOutcome, Outside> {
     let State { m, W_Ed, form, .. } = state;
     let h = m.h;
-    let above = m.leaf_from(i);
+    let above = m.strength_from();
     given!(s, "resistance per unit length, parallel to the bed joints", &above, M_Rd1 = strength.M_Rd1);
     let w_Rd = if form == Form::Cantilever {
-        by_leaf!(s, m, i, "statics, 6.3.1", 2.0 * M_Rd1 / sq(h))
+        by_leaf!(s, m, "statics, 6.3.1", 2.0 * M_Rd1 / sq(h))
     } else {
-        by_leaf!(s, m, i, "statics, 6.3.1", 8.0 * M_Rd1 / sq(h))
+        by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd1 / sq(h))
     };
     let mut out = LeafOutcome { label: form.words().to_owned(), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 {

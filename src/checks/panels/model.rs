@@ -65,6 +65,19 @@ impl PanelModel {
         }
     }
 
+    /// The same where the leaf is named by its column.
+    pub fn strength_from(&self) -> String {
+        match &self.strengths_on {
+            Some(mark) => format!("strength, sheet {mark}"),
+            None => "strength, above".to_owned(),
+        }
+    }
+
+    /// What the leaves are called, in order.
+    pub fn leaf_names(&self) -> Vec<String> {
+        (0..self.leaves.len()).map(|i| self.leaf_name(i).to_owned()).collect()
+    }
+
     /// What leaf `i` is called.
     pub fn leaf_name(&self, i: usize) -> &'static str {
         match (self.leaves.len(), i) {

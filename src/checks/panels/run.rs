@@ -35,6 +35,7 @@ pub struct Outcome {
 /// `flexure-parallel-after` (or `vertical-`, `horizontal-`, `cantilever-`, `arching-after`), `ties`. A
 /// limit that is left is noted as outside under `size` or the check's id.
 pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
+    s.table(|| held(m));
     let W_Ed = wind(s, m, annex);
     let strengths = strengths(s, m);
     // Before is information: worked silently by the same code, printed in the table side by side.
@@ -92,9 +93,12 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
 
 /// Strengths of the leaves: worked here, or quoted from the sheet where the same leaves stand already.
 fn strengths(s: &mut Sheet, m: &PanelModel) -> Vec<Strength> {
-    let of = |s: &mut Sheet| (0..m.leaves.len()).map(|i| strength::of_leaf(s, m, i)).collect();
+    let of = |s: &mut Sheet| s.columns(&m.leaf_names(), |s, i| strength::of_leaf(s, m, i));
     match &m.strengths_on {
-        None => of(s),
+        None => {
+            s.heading(2, if m.leaves.len() == 1 { "Strength of the leaf" } else { "Strength of the leaves" });
+            of(s)
+        }
         Some(mark) => {
             s.note(format!(
                 "The leaves resist what they resist in {mark}: the same wall, height and load. They are worked on its \
@@ -109,14 +113,12 @@ fn strengths(s: &mut Sheet, m: &PanelModel) -> Vec<Strength> {
 fn wind(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Stress {
     s.heading(1, "Wind on the panel");
     given!(s, "net pressure on the panel, characteristic", &m.q_source, q_net = m.q_net);
-    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
+    given!(s, "factor on wind", "EN 1990 NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
     calc!(s, "EN 1990 6.4.3.2", "design pressure", W_Ed = gamma_W * q_net);
     s.note(
-        "The wind is taken both ways: the section is the same both ways, so one direction covers the other. The \
-         helping combination decides: imposed load is absent and dead load is reduced, so precompression is \
-         least. Where a light roof may lift, its uplift must already be off the dead load given.",
+        "The section is the same both ways, so one direction of the wind covers the other. Helping decides: it \
+         presses least. A roof's uplift must already be off the dead load given. No openings are taken.",
     );
-    s.note("The panel is taken without openings.");
     W_Ed
 }
 
@@ -130,8 +132,7 @@ fn state(
     strengths: &[Strength],
     phase: &'static str,
 ) -> Option<Outcome> {
-    s.table(|| held(m));
-    given!(s, "length between vertical supports", "job file", l = span.length);
+    given!(s, "length between supports", "job file", l = span.length);
     given!(s, "clear height", "job file", h = m.h);
     if m.route != PanelRoute::Arching {
         sizes(s, m, annex, span, phase);
@@ -177,9 +178,8 @@ fn bend(
     }
     let state = State { m, edges, form, l, W_Ed, phase };
     let first = s.verdicts.len();
-    let leaves: Result<Vec<LeafOutcome>, Outside> =
-        strengths.iter().enumerate().map(|(i, strength)| leaf(s, state, i, strength)).collect();
-    let leaves = leaves?;
+    let leaves = s.columns(&m.leaf_names(), |s, i| leaf(s, state, &strengths[i]));
+    let leaves = leaves.into_iter().collect::<Result<Vec<LeafOutcome>, Outside>>()?;
     if leaves.len() == 1 {
         let ratio = s.verdicts[first..].iter().map(|v| v.ratio).fold(0.0, f64::max);
         return Ok(Outcome { l, w_Rd: leaves[0].w_Rd, leaves, W_Ed, ratio });
@@ -301,8 +301,10 @@ fn side_by_side(m: &PanelModel, before: Option<&Outcome>, after: Option<&Outcome
     for i in 0..m.leaves.len() {
         let of = if m.leaves.len() == 1 { String::new() } else { format!(", {}", m.leaf_name(i)) };
         let force = |name: &'static str, x: crate::quantity::Force| show(name, x.dynamic()).to_string();
-        row(format!("case of Annex E{of}"), &|o| o.leaves.get(i).map(|x| x.label.clone()));
-        row(format!("orthogonal ratio{of}"), &|o| o.leaves.get(i)?.mu.map(|x| print::significant(x.base())));
+        // Both leaves have the same edges, so the same case.
+        if i == 0 {
+            row("case of Annex E".to_owned(), &|o| o.leaves.get(i).map(|x| x.label.clone()));
+        }
         row(format!("coefficient{of}"), &|o| o.leaves.get(i)?.alpha_2.map(|x| print::significant(x.base())));
         row(format!("moment, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Ed1", x.0)));
         row(format!("resistance, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Rd1", x.1)));

@@ -10,7 +10,7 @@ use crate::standards::en1996::lateral::ties as clause;
 use crate::trace::Sheet;
 use crate::{calc, decide, given, verify};
 
-/// The wall's resistance and the verdicts of a cavity wall. `W_Ed`, `w_Rd_o` and `w_Rd_i` stand on the sheet.
+/// The wall's resistance and the verdicts of a cavity wall. `W_Ed` stands on the sheet.
 ///
 /// 6.3.1(6): in proportion to strength, so that the wall resists the sum of its leaves; or to stiffness, each
 /// leaf then judged for its part. Where ties are too few to count, each leaf must take the whole wind alone.
@@ -23,8 +23,9 @@ pub fn cavity(
     leaves: &[LeafOutcome],
 ) -> (Stress, f64) {
     let State { m, W_Ed, form, phase, .. } = state;
-    let (w_Rd_o, w_Rd_i) = (leaves[0].w_Rd, leaves[1].w_Rd);
     let id = format!("{}-{phase}", form.id());
+    given!(s, "what the outer leaf takes", "above", w_Rd_o = leaves[0].w_Rd);
+    given!(s, "what the inner leaf takes", "above", w_Rd_i = leaves[1].w_Rd);
     let tied = counted(s, m.ties, phase);
     if !tied {
         s.note(
@@ -36,8 +37,8 @@ pub fn cavity(
         return (w_Rd, ratio);
     }
     let (w_Rd, ratio, W_o, W_i) = if m.sharing == Sharing::Strength {
-        calc!(s, "6.3.1(6)", "pressure that both leaves can take together", w_Rd = w_Rd_o + w_Rd_i);
-        calc!(s, "6.3.1(6)", "part of the outer leaf, by strength", W_o = W_Ed * (w_Rd_o / w_Rd));
+        calc!(s, "6.3.1(6)", "what both take together", w_Rd = w_Rd_o + w_Rd_i);
+        calc!(s, "6.3.1(6)", "part of the outer leaf", W_o = W_Ed * (w_Rd_o / w_Rd));
         calc!(s, "6.3.1(6)", "part of the inner leaf", W_i = W_Ed - W_o);
         let ratio = verify!(s, &id, "6.3.1(6)", "wind on both leaves together", W_Ed <= w_Rd);
         (w_Rd, ratio, W_o, W_i)
@@ -73,7 +74,7 @@ pub fn cavity(
     if phase == "before" {
         return (w_Rd, ratio);
     }
-    calc!(s, "6.5", "pressure that the ties pass: the wind may meet either leaf first", W_t = max(W_o, W_i));
+    calc!(s, "6.5", "what the ties pass, either leaf first", W_t = max(W_o, W_i));
     ties(s, annex, m.ties, m.tie_strength.as_ref(), W_t);
     (w_Rd, ratio)
 }

@@ -31,10 +31,8 @@ pub struct Strength {
 /// Strengths of leaf `i`, written on the sheet.
 pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
     let leaf = &m.leaves[i];
-    let name = m.leaf_name(i);
-    s.heading(2, format!("Strength of the {name}"));
     let materials = "materials sheet";
-    given!(s, &format!("actual thickness of the {name}"), "job file", t = leaf.t);
+    given!(s, "actual thickness", "job file", t = leaf.t);
     given!(s, "clear height", "job file", h = m.h);
     given!(s, "characteristic compressive strength", materials, f_k = leaf.masonry.f_k);
     let sources = (leaf.masonry.gamma_c_source.as_str(), leaf.masonry.gamma_f_source.as_str());
@@ -43,7 +41,7 @@ pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
     calc!(s, "2.4.1", "design compressive strength", f_d = f_k / gamma_Mc);
     given!(s, "helping factor", "basis of this job", gamma_h = Num::new(m.helping));
     let from = if leaf.loaded { "job file" } else { "this leaf carries no floor" };
-    given!(s, "dead load on top of this leaf", from, G_a = leaf.G_above);
+    given!(s, "dead load on top of the leaf", from, G_a = leaf.G_above);
     given!(s, "weight of the masonry", "materials", rho_m = leaf.masonry.density);
     let pre = clause::precompression(s, gamma_h, G_a, rho_m, t, h, f_d);
     let sigma_d = pre.sigma_d;
@@ -69,13 +67,13 @@ pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
 pub fn effective_thickness(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Length {
     if m.leaves.len() == 1 {
         given!(s, "actual thickness", "job file", t = m.leaves[0].t);
-        calc!(s, "5.5.1.3(1)", "effective thickness, for the size limits alone", t_ef = t);
+        calc!(s, "5.5.1.3(1)", "effective thickness", t_ef = t);
         return t_ef;
     }
     let i = m.loaded();
     let (loaded, other) = (m.leaves[i].t, m.leaves[1 - i].t);
     let other = if other > loaded { loaded } else { other };
-    given!(s, "other leaf, taken no thicker than the loaded one", "job file", t_1 = other);
+    given!(s, "other leaf, no thicker", "job file", t_1 = other);
     given!(s, "loaded leaf", "job file", t_2 = loaded);
     given!(s, "relative stiffness factor, UK", "UK NA to 5.5.1.3(3)", k_tef = Num::new(annex.k_tef));
     slenderness::effective_thickness_cavity(s, k_tef, t_1, t_2)

@@ -104,9 +104,9 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
     let (gamma_G, gamma_Q, gamma_W) = factors(s, case, annex, m.helping);
     let Vertical { G, Q, U, S_G, S_Q, S_U, .. } = m.vertical(at);
     let source = "load table of this sheet";
-    given!(s, "dead load at the section, own weight above included", source, G);
+    given!(s, "dead load, own weight included", source, G);
     given!(s, "imposed load", source, Q);
-    given!(s, "first moment of the dead load about mid-length", source, S_G);
+    given!(s, "first moment of the dead load", source, S_G);
     given!(s, "first moment of the imposed load", source, S_Q);
     let (N_Ed, M_N) = if U == Force::ZERO {
         calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * G + gamma_Q * Q);
@@ -200,11 +200,11 @@ fn cantilever(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
     let Design { H_Ed, w_Ed, M_h } = d;
     match (at, M_h == Moment::ZERO, w_Ed == LineLoad::ZERO) {
         (At::Head, true, _) => {
-            given!(s, "moment of the lateral loads at the head", "none from above", M_W = Moment::ZERO);
+            given!(s, "lateral moment at the head", "none from above", M_W = Moment::ZERO);
             M_W
         }
         (At::Head, false, _) => {
-            calc!(s, "statics", "moment of the lateral loads at the head", M_W = M_h);
+            calc!(s, "statics", "lateral moment at the head", M_W = M_h);
             M_W
         }
         (_, true, true) => {
@@ -280,24 +280,14 @@ fn shear(s: &mut Sheet, m: &Model, d: Design, at: At) -> Force {
 }
 
 /// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.
-fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
+pub fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
     given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
     given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
     given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
-    given!(
-        s,
-        "pressing factor on dead load",
-        "EN 1990 Table NA.A1.2(B)",
-        gamma_Gp = Num::new(annex.gamma_G_sup)
-    );
-    given!(
-        s,
-        "pressing factor on imposed load",
-        "EN 1990 Table NA.A1.2(B)",
-        gamma_Qp = Num::new(annex.gamma_Q)
-    );
+    given!(s, "pressing factor on dead load", "EN 1990 NA.A1.2(B)", gamma_Gp = Num::new(annex.gamma_G_sup));
+    given!(s, "pressing factor on imposed load", "EN 1990 NA.A1.2(B)", gamma_Qp = Num::new(annex.gamma_Q));
     calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (gamma_Gp * G_nu + gamma_Qp * Q_nu));
     H_nu
 }

@@ -126,7 +126,7 @@ fn reaction(i: &Inputs<'_>, wind: f64) -> Option<Received> {
 /// The design reaction at a head that is held: wind and tilt, for the walls named.
 pub fn head_reaction(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     let h = m.h;
-    given!(s, "factor on wind", "EN 1990 Table NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
+    given!(s, "factor on wind", "EN 1990 NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
     let d = super::actions::design(s, m, annex, gamma_W);
     let (H_Ed, w_Ed) = (d.H_Ed, d.w_Ed);
     if w_Ed > LineLoad::ZERO {

@@ -1,16 +1,18 @@
 //! A return: a short length of wall that takes wind in its plane.
 //!
 //! * [`build`]: geometry and loads of one return, on the sheet; [`lateral`]: how the wind reaches it
-//! * [`run`]: every check under every case, the worst recorded
+//! * [`check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
 //! * [`remedy`]: what would make it pass
 
 pub mod actions;
 pub mod build;
+pub mod check;
 pub mod flexure;
 pub mod in_plane;
 pub mod lateral;
+pub mod matrix;
 pub mod model;
 pub mod remedy;
 pub mod rules;
@@ -27,7 +29,7 @@ use model::Model;
 /// A checked return: its models and the ratios of every case, for sketches and margins.
 pub struct Checked {
     /// One a leaf that acts.
-    pub models: Vec<(Model, Option<run::Matrix>)>,
+    pub models: Vec<(Model, Option<matrix::Matrix>)>,
 }
 
 /// Checks a return on a sheet.
@@ -65,13 +67,18 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         }
         s.heading(1, "Strength and slenderness");
         let matrix = run::prepare(s, &m, i.annex).map(|ready| {
-            let matrix = run::Matrix::run(&m, i.annex, ready);
+            let matrix = matrix::Matrix::run(&m, i.annex, ready);
             let mu_source = if r.mu.reason.is_empty() {
                 "default, common practice, no published source".to_owned()
             } else {
                 format!("stated: {}", r.mu.reason)
             };
-            run::record(s, &m, i.annex, ready, &matrix, &mu_source);
+            // The actions along the height, once, for the leaf that is drawn.
+            let along = format!("{}-actions", r.mark);
+            let acts = m.sheared() || m.lateral.M_k != Moment::ZERO;
+            let first = out.iter().all(|(m, _): &(Model, _)| !m.sheared() && m.lateral.M_k == Moment::ZERO);
+            let drawing = (acts && first).then_some(along.as_str());
+            run::record(s, &m, i.annex, ready, &matrix, &mu_source, drawing);
             matrix
         });
         out.push((m, matrix));
@@ -83,9 +90,6 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         s.heading(1, "What would make it pass");
         s.table(|| remedy::table(i));
         other_paths(s, i);
-    }
-    if out.iter().any(|(m, _)| m.sheared() || m.lateral.M_k != Moment::ZERO) {
-        s.drawings(&[&format!("{}-actions", r.mark)]);
     }
     Checked { models: out }
 }

@@ -1,7 +1,8 @@
 //! What would make a return pass, by search on the same check on silent sheets.
 
 use super::build::{Change, Inputs, models};
-use super::run::{Matrix, prepare};
+use super::matrix::Matrix;
+use super::run::prepare;
 use crate::quantity::{Force, Length, Stress, print};
 use crate::solve::root;
 use crate::trace::{Column, Sheet, Table};

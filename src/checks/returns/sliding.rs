@@ -17,7 +17,7 @@ pub fn shear(s: &mut Sheet, m: &Model, annex: &Annex, a: &Actions, st: &Stressed
     let words = if a.at == At::Head { "shear in plane at the head" } else { "shear in plane at the foot" };
     given!(s, "material factor, shear", m.masonry.gamma_v_source.as_str(), gamma_Mv = m.masonry.gamma_v);
     if l_c <= Length::ZERO {
-        given!(s, "shear resistance, no length being compressed", "6.2(1)", V_Rd = Force::ZERO);
+        given!(s, "shear resistance, nothing compressed", "6.2(1)", V_Rd = Force::ZERO);
         verify!(s, id, "6.2(1) eq. 6.12", words, V_Ed <= V_Rd);
         return;
     }

@@ -41,12 +41,7 @@ pub fn slenderness(s: &mut Sheet, m: &Model, annex: &Annex, id: &str) -> Result<
             t_ef
         }
         Some(other) => {
-            given!(
-                s,
-                "other leaf, taken no thicker than this one",
-                "job file",
-                t_1 = if other > t { t } else { other }
-            );
+            given!(s, "other leaf, no thicker", "job file", t_1 = if other > t { t } else { other });
             given!(s, "this leaf", "job file", t_2 = t);
             given!(
                 s,
@@ -76,7 +71,18 @@ pub struct Reductions {
     pub foot: Num,
 }
 
+/// Whether all loads at the head stand in the middle of the thickness.
+pub fn central(m: &Model) -> bool {
+    let v = m.vertical(At::Head);
+    v.T_G == Moment::ZERO && v.T_Q == Moment::ZERO || v.G + v.Q <= Force::ZERO
+}
+
 impl Reductions {
+    /// The least of the three.
+    pub fn least_of(self) -> Num {
+        self.least(&mut Sheet::silent())
+    }
+
     /// The least of the three, on the sheet.
     pub fn least(self, s: &mut Sheet) -> Num {
         let (Phi_h, Phi_m, Phi_f) = (self.head, self.middle, self.foot);
@@ -89,10 +95,8 @@ impl Reductions {
 /// nil at the foot; half of it is taken in the middle.
 pub fn reductions(s: &mut Sheet, m: &Model, sl: Slender, annex: &Annex, case: Case) -> Reductions {
     let (t, e_init, f_k) = (m.t, sl.e_init, m.masonry.f_k);
-    let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
     let v = m.vertical(At::Head);
-    let central = v.T_G == Moment::ZERO && v.T_Q == Moment::ZERO;
-    let e_h = if central || v.G + v.Q <= Force::ZERO {
+    let e_h = if central(m) {
         given!(
             s,
             "eccentricity of the loads at the head",
@@ -101,6 +105,7 @@ pub fn reductions(s: &mut Sheet, m: &Model, sl: Slender, annex: &Annex, case: Ca
         );
         e_h
     } else {
+        let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
         given!(s, "dead load at the head", "load table", G_h = v.G);
         given!(s, "imposed load at the head", "load table", Q_h = v.Q);
         given!(s, "moment of the dead load across the wall", "load table", T_G = v.T_G);
@@ -132,33 +137,17 @@ pub fn resistance(
 ) {
     let (l, t) = (m.l, m.t);
     let (gamma_G, gamma_Q, ..) = factors(s, case, annex, m.helping);
+    let (part, phi, words) = match at {
+        At::Head => (0.0, r.head, "vertical resistance at the head"),
+        At::Middle => (0.5, r.middle, "vertical resistance in the middle"),
+        At::Foot => (1.0, r.foot, "vertical resistance at the foot"),
+    };
     given!(s, "dead load at the head", "load table", G_h = m.at_head.G);
     given!(s, "imposed load at the head", "load table", Q_h = m.at_head.Q);
     given!(s, "own weight of the leaf", "above", G_w = m.own);
-    let clause = "EN 1990 6.4.3.2";
-    match at {
-        At::Head => {
-            let Phi_h = r.head;
-            calc!(s, clause, "vertical force at the head", N_Ed = gamma_G * G_h + gamma_Q * Q_h);
-            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_h * t * l * f_d);
-            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the head", N_Ed <= N_Rd);
-        }
-        At::Middle => {
-            let Phi_m = r.middle;
-            calc!(
-                s,
-                clause,
-                "vertical force in the middle",
-                N_Ed = gamma_G * (G_h + G_w / 2.0) + gamma_Q * Q_h
-            );
-            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_m * t * l * f_d);
-            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance in the middle", N_Ed <= N_Rd);
-        }
-        At::Foot => {
-            let Phi_f = r.foot;
-            calc!(s, clause, "vertical force at the foot", N_Ed = gamma_G * (G_h + G_w) + gamma_Q * Q_h);
-            calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_f * t * l * f_d);
-            verify!(s, id, "6.1.2.1(1) eq. 6.1", "vertical resistance at the foot", N_Ed <= N_Rd);
-        }
-    }
+    given!(s, "part of the own weight that stands above", "geometry", k_G = Num::new(part));
+    given!(s, "reduction across the wall at this height", "above", Phi_i = phi);
+    calc!(s, "EN 1990 6.4.3.2", "vertical force", N_Ed = gamma_G * (G_h + k_G * G_w) + gamma_Q * Q_h);
+    calc!(s, "6.1.2.1(2) eq. 6.2", "vertical resistance", N_Rd = Phi_i * t * l * f_d);
+    verify!(s, id, "6.1.2.1(1) eq. 6.1", words, N_Ed <= N_Rd);
 }

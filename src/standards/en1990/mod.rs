@@ -45,8 +45,8 @@ impl Combination {
     /// Where its factors come from.
     pub const fn clause(self) -> &'static str {
         match self {
-            Self::Helping => "EN 1990 6.4.3.2, Table NA.A1.2(A)",
-            _ => "EN 1990 eq. 6.10, Table NA.A1.2(B)",
+            Self::Helping => "EN 1990 NA.A1.2(A)",
+            _ => "EN 1990 NA.A1.2(B)",
         }
     }
 

@@ -91,12 +91,7 @@ pub fn effective_height(
 ///
 /// 5.5.1.3(3) eq. 5.11, k_tef of the UK National Annex; from memory, check against the standard.
 pub fn effective_thickness_cavity(s: &mut Sheet, k_tef: Num, t_1: Length, t_2: Length) -> Length {
-    calc!(
-        s,
-        "5.5.1.3(3) eq. 5.11",
-        "effective thickness, for slenderness only",
-        t_ef = cbrt(k_tef * cube(t_1) + cube(t_2))
-    );
+    calc!(s, "5.5.1.3(3) eq. 5.11", "effective thickness", t_ef = cbrt(k_tef * cube(t_1) + cube(t_2)));
     t_ef
 }
 

@@ -33,9 +33,7 @@ pub fn applies(s: &mut Sheet, id: &str, t: Length, mu: Num) -> Result<(), Outsid
     let clause = CLAUSE;
     given!(s, "thickest leaf that the coefficients serve", clause, t_max = Length::new(THICKEST));
     require!(s, id, clause, "a leaf of at most 250 mm", t <= t_max);
-    let nil = Num::new(0.0);
-    given!(s, "least orthogonal ratio, not included", clause, mu_min = nil);
-    require!(s, id, clause, "some strength across a bed joint: an orthogonal ratio above nil", mu > mu_min);
+    require!(s, id, clause, "some strength across a bed joint", mu > 0.0);
     Ok(())
 }
 
@@ -98,23 +96,27 @@ fn looked(found: Match, table: &Tabulated) -> Looked<f64> {
     let mut value = Looked::new(table.value, "Annex E", table.source)
         .row("case", found.case)
         .row("edges lie", lies)
-        .row("mu", four(table.mu))
-        .row("h/l", four(table.h_over_l));
-    for cell in &table.cells {
-        let taken = if cell.formula > cell.printed { "raised" } else { "as printed" };
+        .row("at mu", format!("{}, h/l {}", four(table.mu), four(table.h_over_l)));
+    for (n, cell) in table.cells.iter().enumerate() {
+        // The first cell says what the figures are; the others follow it.
+        let (at, printed, taken, share) = match n {
+            0 => ("cells: mu", "printed ", "taken ", "share "),
+            _ => ("mu", "", "", ""),
+        };
         value = value.row(
-            &format!("cell mu {}, h/l {}", cell.mu, cell.h_over_l),
+            at,
             format!(
-                "printed {}, pattern {}, taken {} ({taken}), share {}",
+                "{}, h/l {}: {printed}{}, {taken}{}, {share}{}",
+                cell.mu,
+                cell.h_over_l,
                 three(cell.printed),
-                four(cell.formula),
                 four(cell.used()),
                 three(cell.share)
             ),
         );
     }
     value.row(
-        "pattern at this mu and h/l, the least that is taken",
+        "pattern here, the least taken",
         format!("{} ({})", four(table.pattern.alpha), table.pattern.name()),
     )
 }

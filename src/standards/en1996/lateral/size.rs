@@ -51,15 +51,9 @@ pub fn limits(
         );
         given!(s, "greatest side over effective thickness", clause, k_S = Num::new(limits::SIDE));
         calc!(s, "geometry", "area of the panel", A = h * l);
-        require!(
-            s,
-            id,
-            clause,
-            "area of the panel within the limit that stands in for the curves of Annex F",
-            A <= k_A * t_ef * t_ef
-        );
-        require!(s, id, clause, "height of at most 50 effective thicknesses", h <= k_S * t_ef);
-        require!(s, id, clause, "length of at most 50 effective thicknesses", l <= k_S * t_ef);
+        require!(s, id, clause, "area, in place of Annex F", A <= k_A * t_ef * t_ef);
+        require!(s, id, clause, "height within the limit", h <= k_S * t_ef);
+        require!(s, id, clause, "length within the limit", l <= k_S * t_ef);
         return Ok(());
     }
     if free(edges.top) && !free(edges.base) {
@@ -75,7 +69,7 @@ pub fn limits(
         return Ok(());
     }
     given!(s, "greatest side over effective thickness", "BS 5628-1 36.3", k_S = Num::new(limits::SIDE));
-    require!(s, id, "BS 5628-1 36.3", "length of at most 50 effective thicknesses", l <= k_S * t_ef);
+    require!(s, id, "BS 5628-1 36.3", "length within the limit", l <= k_S * t_ef);
     Ok(())
 }
 

@@ -33,8 +33,8 @@ pub fn precompression(
         "dead load at mid-height, half the own weight added",
         G_m = G_a + rho_m * t * h / 2.0
     );
-    calc!(s, "EN 1990 6.4.3.2", "stress from dead load that helps", sigma_v = gamma_h * G_m / t);
-    calc!(s, "6.3.1(4)", "the same, at most a fifth of the strength", sigma_d = min(sigma_v, 0.2 * f_d));
+    calc!(s, "EN 1990 6.4.3.2", "helping stress of dead load", sigma_v = gamma_h * G_m / t);
+    calc!(s, "6.3.1(4)", "the same, capped", sigma_d = min(sigma_v, 0.2 * f_d));
     Precompression { sigma_v, sigma_d }
 }
 
@@ -54,10 +54,10 @@ pub struct Parallel {
 /// 6.3.1(3) eq. 6.15 and 6.3.1(4) eq. 6.16: `f_xd1,app = f_xk1/gamma_M + sigma_d`. `t`, `f_xk1`,
 /// `gamma_Mf` and `sigma_d` stand on the sheet.
 pub fn parallel(s: &mut Sheet, t: Length, f_xk1: Stress, gamma_Mf: Num, sigma_d: Stress) -> Parallel {
-    calc!(s, "geometry", "section modulus per unit length, actual thickness", Z = sq(t) / 6.0);
-    calc!(s, "2.4.1", "design strength, failure parallel to the bed joints", f_xd1 = f_xk1 / gamma_Mf);
-    calc!(s, "6.3.1(4) eq. 6.16", "the same with precompression", f_xd1_app = f_xd1 + sigma_d);
-    calc!(s, "6.3.1(3) eq. 6.15", "resistance per unit length, parallel", M_Rd1 = f_xd1_app * Z);
+    calc!(s, "geometry", "section modulus per length", Z = sq(t) / 6.0);
+    calc!(s, "2.4.1", "design strength, parallel", f_xd1 = f_xk1 / gamma_Mf);
+    calc!(s, "6.3.1(4) eq. 6.16", "with precompression", f_xd1_app = f_xd1 + sigma_d);
+    calc!(s, "6.3.1(3) eq. 6.15", "resistance, parallel", M_Rd1 = f_xd1_app * Z);
     Parallel { f_xd1_app, Z, M_Rd1 }
 }
 
@@ -73,8 +73,8 @@ pub struct Across {
 /// Resistance per unit height, failure across the bed joints: 6.3.1(3) eq. 6.15. `f_xk2`, `gamma_Mf`
 /// and `Z` stand on the sheet.
 pub fn across(s: &mut Sheet, f_xk2: Stress, gamma_Mf: Num, Z: Area) -> Across {
-    calc!(s, "2.4.1", "design strength, failure across the bed joints", f_xd2 = f_xk2 / gamma_Mf);
-    calc!(s, "6.3.1(3) eq. 6.15", "resistance per unit height, across", M_Rd2 = f_xd2 * Z);
+    calc!(s, "2.4.1", "design strength, across", f_xd2 = f_xk2 / gamma_Mf);
+    calc!(s, "6.3.1(3) eq. 6.15", "resistance, across", M_Rd2 = f_xd2 * Z);
     Across { f_xd2, M_Rd2 }
 }
 
