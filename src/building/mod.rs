@@ -3,14 +3,20 @@
 //! Reading and judging the job file happens in `job`; nothing here can be half given. Lengths,
 //! forces and stresses are typed quantities; a value that departs from a rule carries its reason.
 
+mod descent;
 mod parts;
+mod plan;
 mod things;
 mod words;
 
-pub use parts::{
-    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, PlanWall, Revision, Signatures, StatedWind,
-    Storey, Strength, TerrainWind, UnitStrength, Wind,
+pub use descent::{
+    LED, Stack, State, TakeDown, Trouble, line_of, stands_in, storey_height, take_down, take_loads,
 };
+pub use parts::{
+    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, StatedWind, Storey,
+    Strength, TerrainWind, UnitStrength, Wind,
+};
+pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
 pub use things::{
     Arching, Assumption, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Panel,
     Photograph, Removed, Return, Span, Stability,
@@ -41,6 +47,12 @@ pub struct Building {
     pub storeys: Vec<Storey>,
     /// Walls as lines, for the key plan; may be empty.
     pub plan: Vec<PlanWall>,
+    /// What floors and roofs weigh, by name.
+    pub area_loads: Vec<AreaLoad>,
+    /// Floors and roofs on the plan; where there are none nothing is led down.
+    pub floors: Vec<PlanFloor>,
+    /// Beams on the plan.
+    pub beams: Vec<PlanBeam>,
     /// Where north is, degrees clockwise from the top of the page.
     pub north: f64,
     /// The wall that comes out.

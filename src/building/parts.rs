@@ -238,18 +238,3 @@ pub struct Storey {
     /// Height from this storey's base to the top of the structure.
     pub total_height: Length,
 }
-
-/// A wall as a line on the plan; metres of the plan in mm.
-#[derive(Clone, Debug)]
-pub struct PlanWall {
-    /// Mark.
-    pub mark: String,
-    /// Build-up by name.
-    pub build_up: String,
-    /// Start (x, y).
-    pub from: (Length, Length),
-    /// End (x, y).
-    pub to: (Length, Length),
-    /// Comes out.
-    pub removed: bool,
-}

@@ -10,6 +10,7 @@ pub mod panels;
 pub mod plan;
 pub mod returns;
 pub mod stability;
+pub mod takedown;
 pub mod wind;
 
 mod panel_sheet;
@@ -89,6 +90,7 @@ type Check = fn(&Job<'_>) -> Vec<Section>;
 /// Every check, in sheet order.
 pub const LIST: &[Check] = &[
     plan::sections,
+    takedown::sections,
     loads::sections,
     wind::sections,
     materials::sections,

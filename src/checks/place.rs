@@ -24,6 +24,9 @@ fn removed(b: &Building) -> Option<&PlanWall> {
 /// A return, centred on its position and along the line of the removed wall; a point where that line
 /// is not known; nothing where it has no position.
 pub fn of_return(b: &Building, r: &Return) -> Option<Stretch> {
+    if let Some(wall) = b.plan.iter().find(|w| w.mark == r.mark) {
+        return Some(stretch(point(wall.from), point(wall.to)));
+    }
     let middle = point(r.position?);
     let Some(wall) = removed(b) else { return Some(stretch(middle, middle)) };
     let along = (point(wall.to) - point(wall.from)).normalize();

@@ -1,8 +1,8 @@
 //! The key plan: walls, what comes out, and where every mark is.
 
 use super::{Job, Section, place};
-use crate::building::{Along, Building, PlanWall};
-use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind};
+use crate::building::{Along, At, Building, PlanWall, stands_in};
+use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanSpan, PlanWind};
 use crate::trace::Sheet;
 
 const FRAME: Frame = Frame::new(160.0, 108.0);
@@ -23,12 +23,14 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
 }
 
 fn view(b: &Building) -> KeyPlan {
-    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().map(|w| wall(b, w)).collect();
+    let here = |w: &&PlanWall| stands_in(b, w, &b.removed.storey);
+    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().filter(here).map(|w| wall(b, w)).collect();
     let mut marks: Vec<PlanMark> = Vec::new();
     for r in &b.returns {
         if let Some((from, to)) = place::of_return(b, r) {
             marks.push(PlanMark { mark: r.mark.clone(), from, to });
-            if from != to {
+            // A return that is a wall of the plan is drawn already.
+            if from != to && !b.plan.iter().any(|w| w.mark == r.mark) {
                 walls.push(sketch::PlanWall {
                     name: String::new(),
                     from,
@@ -55,10 +57,35 @@ fn view(b: &Building) -> KeyPlan {
         walls,
         marks,
         panels,
-        beams: Vec::new(),
+        beams: beams(b),
+        spans: spans(b),
         north: b.north,
         winds,
     }
+}
+
+fn point(at: At) -> (f64, f64) {
+    (at.0.base(), at.1.base())
+}
+
+fn beams(b: &Building) -> Vec<PlanMark> {
+    let here = b.beams.iter().filter(|beam| beam.storey == b.removed.storey);
+    here.map(|beam| PlanMark { mark: beam.mark.clone(), from: point(beam.from), to: point(beam.to) })
+        .collect()
+}
+
+fn spans(b: &Building) -> Vec<PlanSpan> {
+    let here = b.floors.iter().filter(|f| f.storey == b.removed.storey);
+    here.map(|f| {
+        let (a, z) = (point(f.from), point(f.to));
+        PlanSpan {
+            mark: f.mark.clone(),
+            from: (a.0.min(z.0), a.1.min(z.1)),
+            to: (a.0.max(z.0), a.1.max(z.1)),
+            along_x: f.spans == Along::X,
+        }
+    })
+    .collect()
 }
 
 pub(super) fn thickness(b: &Building, build_up: &str) -> f64 {

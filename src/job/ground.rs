@@ -1,11 +1,9 @@
-//! `[[storeys]]`, `[plan]`, `[removed]`, `[[bracing]]` and `[stability]`: the house around the returns.
-
-use toml::de::DeValue;
+//! `[[storeys]]`, `[removed]`, `[[bracing]]` and `[stability]`: the house around the returns.
 
 use super::limits::{Limits, Odd};
 use super::names::{Names, Seen, known};
+use super::plan::plan_length;
 use super::reader::Table;
-use super::words::{NORTH, TURN};
 use crate::building::{
     Along, BracingWall, BuildUp, Ends, FloorKind, PlanWall, Removed, ShareBy, Stability, Stands, Storey,
 };
@@ -16,7 +14,8 @@ use crate::quantity::{Force, Length};
 pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m")
     .odd(&[Odd::Below(2.0, "low for a storey"), Odd::Above(3.6, "high for a storey of a house")]);
 const TOTAL_HEIGHT: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
-const ON_PLAN: Limits = Limits::new(-100.0, 100.0, "m");
+/// A place on the plan.
+pub const ON_PLAN: Limits = Limits::new(-100.0, 100.0, "m");
 const REMOVED_LENGTH: Limits =
     Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
 const WALL_LENGTH: Limits =
@@ -83,37 +82,6 @@ pub fn stacked(storeys: &Names<'_, Storey>) {
                 .help("write \"timber\" or \"concrete\", or put the storeys in order, lowest first");
         }
     }
-}
-
-/// Reads the direction of north, degrees clockwise from the top of the page.
-pub fn north(t: &Table<'_>) -> Option<f64> {
-    let entry = t.need("north");
-    match &entry.value {
-        Some((DeValue::Integer(_) | DeValue::Float(_), _)) => entry.number(&TURN),
-        _ => entry.pick(NORTH),
-    }
-}
-
-/// Reads one wall of the plan.
-pub fn plan_wall<'a>(t: &Table<'a>, build_ups: &Names<'a, BuildUp>) -> Option<PlanWall> {
-    let mark = t.need("mark").line();
-    let build_up = build_ups.refer(&t.need("build_up"));
-    let from: Option<(Length, Length)> = t.need("from").pair(&ON_PLAN);
-    let to = t.need("to").pair(&ON_PLAN);
-    let removed = t.may("removed").flag().unwrap_or(false);
-    if from.is_some() && from == to {
-        t.clash("the wall begins and ends in one point", "to", "from")
-            .allowed("two different points")
-            .help("correct one of the two points");
-        return None;
-    }
-    Some(PlanWall { mark: mark?, build_up: build_up?, from: from?, to: to?, removed })
-}
-
-/// Length of a wall on the plan.
-pub fn plan_length(wall: &PlanWall) -> Length {
-    let (dx, dy) = (wall.to.0 - wall.from.0, wall.to.1 - wall.from.1);
-    Length::new(dx.base().hypot(dy.base()))
 }
 
 /// Reads `[removed]`.

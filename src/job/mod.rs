@@ -22,6 +22,7 @@ mod limits;
 mod materials;
 mod names;
 mod panels;
+mod plan;
 mod reader;
 mod returns;
 pub mod start;
@@ -84,19 +85,34 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     ground::stacked(&storeys);
 
     let plan_table = root.may("plan").table("plan");
-    let north = plan_table.as_ref().map_or(Some(0.0), ground::north);
-    let plan: Names<'_, PlanWall> = match &plan_table {
+    let north = plan_table.as_ref().map_or(Some(0.0), plan::north);
+    let area_loads =
+        materials::by_name("area load", root.may("area_loads").named("area load"), plan::area_load);
+    let walls: Names<'_, PlanWall> = match &plan_table {
         Some(t) => Names::marked("wall", t.need("walls").tables("plan wall", "mark"), |w| {
-            ground::plan_wall(w, &build_ups)
+            plan::wall(w, &build_ups, &storeys)
         }),
         None => Names::new("wall"),
     };
+    let (floors, beams) = match &plan_table {
+        Some(t) => (
+            Names::marked("floor", t.may("floors").tables("plan floor", "mark"), |f| {
+                plan::floor(f, &area_loads, &storeys)
+            }),
+            Names::marked("beam", t.may("beams").tables("plan beam", "mark"), |b| plan::beam(b, &storeys)),
+        ),
+        None => (Names::new("floor"), Names::new("beam")),
+    };
+    if !floors.is_empty() {
+        plan::along(&walls);
+    }
+    let marks_of_plan = plan::Marks::new(&walls, &floors, &beams);
     if let Some(t) = &plan_table {
         t.finish();
     }
 
     let removed_table = root.need("removed").table("removed wall");
-    let removed = removed_table.as_ref().and_then(|t| ground::removed(t, &plan, &build_ups, &storeys));
+    let removed = removed_table.as_ref().and_then(|t| ground::removed(t, &walls, &build_ups, &storeys));
     let bracing = Names::marked("bracing wall", root.may("bracing").tables("bracing wall", "mark"), |t| {
         ground::bracing_wall(t, &build_ups)
     });
@@ -109,7 +125,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         let around = Around {
             build_ups: &build_ups,
             storeys: &storeys,
-            plan: &plan,
+            plan: &walls,
+            led: !floors.is_empty(),
             bracing: &bracing,
             stability: stability_table.as_ref().zip(stability.as_ref()),
         };
@@ -155,8 +172,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         identity::dates((job, identity), (signed, signatures), (issued, revision));
     }
 
+    let led_panels: Vec<String> =
+        panels.iter().filter(|p| !p.table.has("dead_above")).map(|p| p.name.clone()).collect();
     let bracing = bracing.into_items()?;
-    Some(Building {
+    let mut building = Building {
         identity: identity?,
         signatures: signatures?,
         revisions: revisions?,
@@ -165,7 +184,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         materials: materials.into_items()?,
         build_ups: build_ups.into_items()?,
         storeys: storeys.into_items()?,
-        plan: plan.into_items()?,
+        plan: walls.into_items()?,
+        area_loads: area_loads.into_items()?,
+        floors: floors.into_items()?,
+        beams: beams.into_items()?,
         north: north?,
         removed: removed?,
         stability: stability.map(|s| crate::building::Stability { walls: bracing, ..s }),
@@ -177,7 +199,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         photographs: photographs?,
         responsible: responsible?,
         warnings: Vec::new(),
-    })
+    };
+    plan::to_the_ground(reader, &building, &marks_of_plan);
+    crate::building::take_loads(&mut building, &led_panels);
+    Some(building)
 }
 
 /// Reads every table; nothing where one of them has faults, but all of them are read.

@@ -1,12 +1,14 @@
 //! `[[panels]]`: outer walls across their plane, before and after the removal.
 
-use super::ground::{DRAWN, HEIGHT, plan_length};
+use super::ground::{DRAWN, HEIGHT};
 use super::limits::{Limits, Odd};
+use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
 use super::words::EDGES;
 use crate::building::{Arching, Edge, Panel, PanelRoute, Sharing, Span};
 use crate::error::Kind;
+use crate::quantity::LineLoad;
 use crate::standards::masonry;
 
 const LENGTH: Limits = Limits::new(0.3, 20.0, "m")
@@ -24,7 +26,9 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     let storey = around.storeys.refer(&t.need("storey"));
     let height = t.need("height").quantity(&HEIGHT);
     let on = if t.has("on") { around.plan.refer(&t.need("on")) } else { None };
-    let dead_above = t.need("dead_above").quantity(&DEAD);
+    // With floors on the plan the load on a panel of a plan wall is led down to it.
+    let led = around.led && t.has("on") && !t.has("dead_above");
+    let dead_above = if led { Some(LineLoad::ZERO) } else { t.need("dead_above").quantity(&DEAD) };
     let wind = t.may("wind").cause(|e| e.quantity(&PRESSURE));
     let route = t.may("route");
     let route = match &route.value {

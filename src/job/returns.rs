@@ -1,9 +1,10 @@
 //! `[[returns]]`: what stays and braces.
 
 use super::bearing;
-use super::ground::{self, HEIGHT, STRIP};
+use super::ground::{self, DRAWN, HEIGHT, STRIP};
 use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
+use super::plan::plan_length;
 use super::reader::Table;
 use crate::building::{
     Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
@@ -46,8 +47,23 @@ pub struct Around<'r, 'a> {
     pub plan: &'r Names<'a, PlanWall>,
     /// Bracing walls.
     pub bracing: &'r Names<'a, BracingWall>,
+    /// Whether floors stand on the plan, so that its loads are led down.
+    pub led: bool,
     /// The storey's stability, with its table.
     pub stability: Option<(&'r Table<'a>, &'r Stability)>,
+}
+
+/// Holds a return against the plan wall of the same mark, whose loads it takes.
+fn against_plan(t: &Table<'_>, seen: &Seen<'_, PlanWall>, length: Length) {
+    let Some(wall) = &seen.item else { return };
+    let drawn = plan_length(wall);
+    if (drawn - length).abs() > DRAWN {
+        t.fault(Kind::Contradiction, "the return is not as long as its wall on the plan")
+            .at(t.place("length"), "here")
+            .and(seen.table.place("to"), format!("{:.0} mm long on the plan", drawn.base()))
+            .allowed("the same length in both places")
+            .help("correct one of the two");
+    }
 }
 
 /// Reads one return.
@@ -112,7 +128,11 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     if tributary_width == Some(Length::ZERO) {
         t.warn("tributary width is 0: no wind at all comes to it");
     }
-    if !t.has("loads") {
+    let on_plan = mark.as_ref().and_then(|m| around.plan.get(m)).filter(|_| around.led);
+    if let (Some(seen), Some(length)) = (on_plan, length) {
+        against_plan(t, seen, length);
+    }
+    if !t.has("loads") && on_plan.is_none() {
         t.warn("no load from above is given; its own weight alone holds it down");
     }
     Some(Return {

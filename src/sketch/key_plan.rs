@@ -27,6 +27,8 @@ pub struct KeyPlan {
     pub panels: Vec<PlanMark>,
     /// Beams and padstones, as centre lines with their mark.
     pub beams: Vec<PlanMark>,
+    /// Floors with the way they span; may be empty.
+    pub spans: Vec<PlanSpan>,
     /// Where north is, degrees clockwise from the top of the sheet.
     pub north: f64,
     /// Wind directions considered.
@@ -42,6 +44,19 @@ pub struct PlanMark {
     pub from: (f64, f64),
     /// End of the stretch, mm.
     pub to: (f64, f64),
+}
+
+/// A floor on the plan: an arrow with two heads shows the way it spans.
+#[derive(Clone, Debug)]
+pub struct PlanSpan {
+    /// `F1`.
+    pub mark: String,
+    /// Least x and y, mm.
+    pub from: (f64, f64),
+    /// Greatest x and y, mm.
+    pub to: (f64, f64),
+    /// Spans along x; along y otherwise.
+    pub along_x: bool,
 }
 
 /// A wind arrow at an edge of the plan.
@@ -90,6 +105,9 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
         board.line(Pen::Axis, from, to);
         board.note(stretch_note(from, to, 1.2, Text::mark(&beam.mark)));
     }
+    for span in &view.spans {
+        spans(&mut board, span, scale);
+    }
     for mark in &view.marks {
         let (from, to) = (paper(scale, mark.from), paper(scale, mark.to));
         let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
@@ -115,6 +133,31 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
         scale: scale.text(),
         alt: alt(view),
     })
+}
+
+/// The arrow of a floor, clear of the walls it spans between, off the middle where marks stand.
+fn spans(board: &mut Board, span: &PlanSpan, scale: Scale) {
+    let (a, z) = (paper(scale, span.from), paper(scale, span.to));
+    let area = kurbo::Rect::from_points(a, z);
+    let (from, to) = match span.along_x {
+        true => {
+            let y = area.y0 + 0.62 * area.height();
+            (Point::new(area.x0 + 0.12 * area.width(), y), Point::new(area.x0 + 0.42 * area.width(), y))
+        }
+        false => {
+            let x = area.x0 + 0.24 * area.width();
+            (Point::new(x, area.y0 + 0.25 * area.height()), Point::new(x, area.y0 + 0.75 * area.height()))
+        }
+    };
+    board.line(Pen::Leader, from, to);
+    let along = (to - from).normalize() * 1.6;
+    for (tip, back) in [(from, along), (to, -along)] {
+        for turn in [0.4, -0.4] {
+            let (s, c) = f64::sin_cos(turn);
+            board.line(Pen::Leader, tip, tip + Vec2::new(back.x * c - back.y * s, back.x * s + back.y * c));
+        }
+    }
+    board.note(stretch_note(from, to, 1.0, Text::mark(&span.mark)).rank(2));
 }
 
 /// Distance of a panel's line from the thickest wall's face, mm on paper.
@@ -203,6 +246,9 @@ fn key(view: &KeyPlan) -> String {
     if !view.beams.is_empty() {
         key += "; chain line: beam over";
     }
+    if !view.spans.is_empty() {
+        key += "; arrows with two heads: the way floors over it span";
+    }
     key
 }
 
@@ -229,6 +275,9 @@ fn alt(view: &KeyPlan) -> String {
     }
     let marks: Vec<String> =
         view.marks.iter().chain(&view.panels).chain(&view.beams).map(|mark| mark.mark.clone()).collect();
+    for span in &view.spans {
+        alt += &format!("Floor {} spans along {}. ", span.mark, if span.along_x { "x" } else { "y" });
+    }
     if !marks.is_empty() {
         alt += &format!("Marked: {}. ", list(&marks));
     }

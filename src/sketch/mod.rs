@@ -19,6 +19,7 @@ pub mod ground;
 pub mod hatch;
 pub mod key_plan;
 pub mod load;
+pub mod load_stack;
 pub mod note;
 pub mod panel_elevation;
 pub mod panel_section;
@@ -44,7 +45,8 @@ pub mod text;
 pub mod view;
 
 pub use drawing::{Drawing, Item};
-pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
+pub use key_plan::{KeyPlan, PlanMark, PlanSpan, PlanWind, key_plan};
+pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
 pub use panel_section::{Floor, PanelSection, panel_section};
 pub use plan::{Fate, PlanWall};

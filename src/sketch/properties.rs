@@ -157,7 +157,7 @@ prop_compose! {
             }
         }
         KeyPlan {
-            name: "key-plan".into(), title: "ground floor".into(), walls, marks, panels, beams: vec![],
+            name: "key-plan".into(), title: "ground floor".into(), walls, marks, panels, beams: vec![], spans: vec![],
             north: north.round(), winds: vec![PlanWind::Upwards, PlanWind::Leftwards],
         }
     }

@@ -182,6 +182,44 @@ pub fn wall(name: &str, from: (f64, f64), to: (f64, f64), thickness: f64, fate: 
     PlanWall { name: name.into(), from, to, thickness, fate }
 }
 
+/// Two storeys over a beam on two lengths of wall.
+pub fn stack() -> LoadStack {
+    let wall = |from, to, mark: &str, foot: &str| StackWall {
+        from,
+        to,
+        material: Material::Brick,
+        mark: mark.into(),
+        foot: foot.into(),
+    };
+    LoadStack {
+        title: "cross wall".into(),
+        storeys: vec![
+            StackStorey {
+                name: "ground".into(),
+                height: 2700.0,
+                walls: vec![
+                    wall(0.0, 900.0, "R1", "41.5 + 19.7 kN"),
+                    wall(3800.0, 5000.0, "R2", "48.8 + 22.3 kN"),
+                ],
+                removed: vec![(900.0, 3800.0)],
+                beams: vec![(800.0, 3900.0, "B1".into())],
+                loads: vec![
+                    (0.0, 5000.0, "F1 1.36 + 2.55 kN/m".into()),
+                    (0.0, 5000.0, "F2 1.84 + 3.45 kN/m".into()),
+                ],
+            },
+            StackStorey {
+                name: "first".into(),
+                height: 2400.0,
+                walls: vec![wall(0.0, 5000.0, "W2", "")],
+                removed: vec![],
+                beams: vec![],
+                loads: vec![(0.0, 5000.0, "RF 4.6 + 2.4 kN/m".into())],
+            },
+        ],
+    }
+}
+
 pub fn plan() -> KeyPlan {
     KeyPlan {
         name: "key-plan".into(),
@@ -206,6 +244,10 @@ pub fn plan() -> KeyPlan {
             PlanMark { mark: "P2".into(), from: (8200.0, 0.0), to: (8200.0, 7000.0) },
         ],
         beams: vec![PlanMark { mark: "B1".into(), from: (4000.0, 600.0), to: (4000.0, 6450.0) }],
+        spans: vec![
+            PlanSpan { mark: "F1".into(), from: (0.0, 0.0), to: (8200.0, 3500.0), along_x: true },
+            PlanSpan { mark: "F2".into(), from: (0.0, 3500.0), to: (8200.0, 7000.0), along_x: false },
+        ],
         north: 20.0,
         winds: vec![PlanWind::Upwards, PlanWind::Downwards],
     }

@@ -96,6 +96,7 @@ fn hand_cases_are_sound() {
         return_actions(&actions(true), FRAME),
         panel_section(&wall_section(), FRAME),
         key_plan(&plan(), FRAME),
+        load_stack(&stack(), FRAME),
         stability_plan(&stability(), FRAME),
     ];
     let [before, after] = panels();
@@ -181,6 +182,7 @@ fn small_frames_are_kept() {
     drawings.push(return_actions(&actions(true), column));
     drawings.push(panel_section(&wall_section(), column));
     drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
+    drawings.push(load_stack(&stack(), column));
     for drawing in &drawings {
         show(drawing, "-small");
         tidy(drawing);

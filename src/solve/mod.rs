@@ -1,4 +1,5 @@
 //! Searches that print nothing.
 
+pub mod descent;
 pub mod root;
 pub mod torsion;

@@ -13,7 +13,8 @@ fn demo(name: &str) -> String {
     jobs::demos().into_iter().find(|(n, _)| n == name).expect("a demo job").1
 }
 
-const NAMES: [&str; 5] = ["concrete-hall", "hold-points", "lime-terrace", "rear-opening", "short-nib"];
+const NAMES: [&str; 6] =
+    ["concrete-hall", "end-terrace", "hold-points", "lime-terrace", "rear-opening", "short-nib"];
 
 /// Job file to building.
 #[divan::bench]
@@ -77,4 +78,24 @@ fn remedies(bencher: Bencher<'_, '_>) {
 fn building_to_sections(bencher: Bencher<'_, '_>) {
     let building = job::read("job.toml", &demo("rear-opening")).expect("a valid job");
     bencher.bench(|| checks::run(black_box(&building)));
+}
+
+/// A row of rooms led down to the ground, by the number of its walls.
+#[divan::bench(args = [10, 100, 1000])]
+fn lead_down(bencher: Bencher<'_, '_>, walls: usize) {
+    use perpend::solve::descent::{self, Axis, Floor, Model, Place, Wall};
+    let storeys = 2;
+    let rooms = (walls / storeys).saturating_sub(1).max(1);
+    let mut model = Model { storeys, reach: 150.0, ..Model::default() };
+    for storey in 0..storeys {
+        for i in 0..=rooms {
+            let place = Place { along: Axis::Y, at: 3000.0 * i as f64, from: 0.0, to: 6000.0 };
+            model.walls.push(Wall { storey, place, thickness: 100.0, weight: 5.0, openings: Vec::new() });
+        }
+        for i in 0..rooms {
+            let x = (3000.0 * i as f64, 3000.0 * (i + 1) as f64);
+            model.floors.push(Floor { storey, x, y: (0.0, 6000.0), spans: Axis::X, load: [1e-3, 2e-3, 0.0] });
+        }
+    }
+    bencher.bench(|| descent::lead_down(black_box(&model)).expect("a path"));
 }

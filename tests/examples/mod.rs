@@ -6,6 +6,7 @@ mod hand_panel;
 mod hand_return;
 mod hand_slenderness;
 mod hand_stability;
+mod hand_takedown;
 mod hand_wind;
 pub mod job;
 mod johansen;

@@ -53,6 +53,9 @@ fn house() -> Building {
             collar_joint: false,
         }],
         storeys: Vec::new(),
+        area_loads: Vec::new(),
+        floors: Vec::new(),
+        beams: Vec::new(),
         plan: Vec::new(),
         north: 0.0,
         removed: Removed {
