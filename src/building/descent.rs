@@ -37,7 +37,9 @@ pub struct TakeDown {
     pub before: State,
     /// With the beams in its place.
     pub after: State,
-    /// The same with no more of each wall's weight than its loaded leaf's: what that leaf carries.
+    /// Before, with no more of each wall's weight than its loaded leaf's: what that leaf carries.
+    pub on_leaf_before: State,
+    /// The same after.
     pub on_leaf: State,
 }
 
@@ -70,7 +72,12 @@ pub fn take_down(b: &Building) -> Option<Result<TakeDown, Trouble>> {
         }
     };
     let all = || {
-        Ok(TakeDown { before: state(false, false)?, after: state(true, false)?, on_leaf: state(true, true)? })
+        Ok(TakeDown {
+            before: state(false, false)?,
+            after: state(true, false)?,
+            on_leaf_before: state(false, true)?,
+            on_leaf: state(true, true)?,
+        })
     };
     Some(all())
 }
@@ -254,8 +261,7 @@ fn led(b: &Building, wall: &PlanWall, k: usize, leaf: bool) -> Option<Wall> {
     let leaves = build_up.leaves.iter().filter(|l| l.loaded || !leaf);
     let per_area: f64 =
         leaves.filter_map(|l| Some(b.material(&l.material)?.density.base() * l.thickness.base())).sum();
-    let thickness: f64 = build_up.leaves.iter().map(|l| l.thickness.base()).sum::<f64>()
-        + build_up.cavity.map_or(0.0, |c| c.base());
+    let thickness = build_up.thickness().base();
     let height = storey_height(b, k).base();
     let backwards = start(wall.from, wall.to) != place.from;
     let mut openings: Vec<Opening> = wall

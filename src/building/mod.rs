@@ -22,8 +22,8 @@ pub use things::{
     Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
-    Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
-    Status, WindRoute,
+    Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Side,
+    Stands, Status, WindRoute,
 };
 
 /// Everything a pack is made from.
@@ -53,6 +53,8 @@ pub struct Building {
     pub floors: Vec<PlanFloor>,
     /// Beams on the plan.
     pub beams: Vec<PlanBeam>,
+    /// Sides of the plan on which a neighbour adjoins.
+    pub neighbours: Vec<Side>,
     /// Where north is, degrees clockwise from the top of the page.
     pub north: f64,
     /// The wall that comes out.

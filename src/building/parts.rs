@@ -220,6 +220,11 @@ pub struct BuildUp {
 }
 
 impl BuildUp {
+    /// All leaves and the cavity.
+    pub fn thickness(&self) -> Length {
+        self.leaves.iter().map(|l| l.thickness).sum::<Length>() + self.cavity.unwrap_or(Length::ZERO)
+    }
+
     /// The loaded leaf and its place in `leaves`.
     pub fn loaded(&self) -> (usize, &Leaf) {
         self.leaves.iter().enumerate().find(|(_, l)| l.loaded).unwrap_or((0, &self.leaves[0]))

@@ -155,3 +155,15 @@ Proof {
     /// Not known: a hold point.
     Assumed = "assumed",
 });
+
+choice!(/// A side of the plan.
+Side {
+    /// Towards less x.
+    Left = "left",
+    /// Towards more x.
+    Right = "right",
+    /// Towards less y.
+    Down = "down",
+    /// Towards more y.
+    Up = "up",
+});

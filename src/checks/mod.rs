@@ -11,6 +11,7 @@ pub mod plan;
 pub mod returns;
 pub mod stability;
 pub mod takedown;
+pub mod whole;
 pub mod wind;
 
 mod panel_sheet;
@@ -59,6 +60,8 @@ pub struct Job<'a> {
     pub wind: Result<Pressures, Outside>,
     /// The storey's sharing, where it is given.
     pub storey: Option<Result<Storey, Outside>>,
+    /// The whole building against wind, where its plan has floors.
+    pub whole: Vec<whole::Direction>,
     /// Hold points, given and found.
     pub holds: Vec<Hold>,
 }
@@ -72,7 +75,11 @@ impl<'a> Job<'a> {
             let pressures = wind.clone()?;
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
-        let mut job = Self { building, annex, wind, storey, holds: outcome::holds(building) };
+        let holds = outcome::holds(building);
+        let mut job = Self { building, annex, wind, storey, whole: Vec::new(), holds };
+        job.whole = whole::of(&job);
+        let found = whole::holds(&job);
+        outcome::add(&mut job.holds, found);
         let found = panel_sheet::holds(&job);
         outcome::add(&mut job.holds, found);
         job
@@ -95,6 +102,7 @@ pub const LIST: &[Check] = &[
     wind::sections,
     materials::sections,
     stability::sections,
+    whole::sections,
     return_sheet::sections,
     panel_sheet::sections,
     chain::sections,

@@ -94,7 +94,7 @@ fn proven(b: &Building, link: &Link) -> Link {
     });
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
-        "bracing wall" => !b.returns.is_empty() && !held_elsewhere,
+        "bracing wall" => !b.floors.is_empty() || !b.returns.is_empty() && !held_elsewhere,
         "junction" | "dpc" => !b.returns.is_empty(),
         // Floors and footings are not calculated in this pack.
         _ => false,
@@ -155,7 +155,9 @@ pub fn holds(b: &Building) -> Vec<Hold> {
 /// Adds hold points found by the checks, each with the mark it concerns, numbered on.
 pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>) {
     for (mark, text) in found {
-        holds.push(Hold { mark: format!("H{}", holds.len() + 1), text, of: vec![mark], closed: None });
+        // Without a mark it concerns the whole job.
+        let of = if mark.is_empty() { Vec::new() } else { vec![mark] };
+        holds.push(Hold { mark: format!("H{}", holds.len() + 1), text, of, closed: None });
     }
 }
 

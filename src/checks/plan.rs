@@ -89,9 +89,7 @@ fn spans(b: &Building) -> Vec<PlanSpan> {
 }
 
 pub(super) fn thickness(b: &Building, build_up: &str) -> f64 {
-    b.build_up(build_up).map_or(100.0, |u| {
-        u.leaves.iter().map(|l| l.thickness.base()).sum::<f64>() + u.cavity.map_or(0.0, |c| c.base())
-    })
+    b.build_up(build_up).map_or(100.0, |u| u.thickness().base())
 }
 
 /// A plan wall as drawings see it.

@@ -2,7 +2,7 @@
 
 use super::wind::Pressures;
 use super::{place, plan};
-use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands};
+use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands, stands_in};
 use crate::quantity::functions::{metres, sqrt};
 use crate::quantity::{Force, Length, print};
 use crate::sketch::{self, Drawing, Fate, Frame, PlanWind, StabilityPlan, stability_plan};
@@ -254,8 +254,10 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
 
 /// The plan with each bracing wall's share; none where the plan shows no bracing wall.
 fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<Drawing> {
-    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().map(|w| plan::wall(b, w)).collect();
-    let marks: Vec<&str> = b.plan.iter().map(|w| w.mark.as_str()).collect();
+    let here: Vec<&crate::building::PlanWall> =
+        b.plan.iter().filter(|w| stands_in(b, w, &st.storey)).collect();
+    let mut walls: Vec<sketch::PlanWall> = here.iter().map(|w| plan::wall(b, w)).collect();
+    let marks: Vec<&str> = here.iter().map(|w| w.mark.as_str()).collect();
     let percent = |x: Option<f64>| x.map(|p| format!("{:.0} %", p * 100.0));
     let mut shares = Vec::new();
     for x in &storey.shares {

@@ -86,6 +86,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
 
     let plan_table = root.may("plan").table("plan");
     let north = plan_table.as_ref().map_or(Some(0.0), plan::north);
+    let neighbours = plan_table.as_ref().map_or(Some(Vec::new()), plan::neighbours);
     let area_loads =
         materials::by_name("area load", root.may("area_loads").named("area load"), plan::area_load);
     let walls: Names<'_, PlanWall> = match &plan_table {
@@ -188,6 +189,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         area_loads: area_loads.into_items()?,
         floors: floors.into_items()?,
         beams: beams.into_items()?,
+        neighbours: neighbours?,
         north: north?,
         removed: removed?,
         stability: stability.map(|s| crate::building::Stability { walls: bracing, ..s }),

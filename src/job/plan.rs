@@ -9,7 +9,7 @@ use super::names::Names;
 use super::reader::{Reader, Span, Table};
 use super::words::{NORTH, TURN};
 use crate::building::{
-    Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Storey, take_down,
+    Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey, take_down,
 };
 use crate::error::Kind;
 use crate::quantity::{Length, LineLoad, Stress};
@@ -32,6 +32,17 @@ pub fn north(t: &Table<'_>) -> Option<f64> {
         Some((DeValue::Integer(_) | DeValue::Float(_), _)) => entry.number(&TURN),
         _ => entry.pick(NORTH),
     }
+}
+
+/// Reads the sides on which neighbours adjoin: asked for where floors stand on the plan.
+pub fn neighbours(t: &Table<'_>) -> Option<Vec<Side>> {
+    let entry = if t.has("floors") { t.need("neighbours") } else { t.may("neighbours") };
+    if !t.has("floors") && !t.has("neighbours") {
+        return Some(Vec::new());
+    }
+    let items =
+        entry.list("the sides of the plan on which a neighbour adjoins, in square brackets; [] for none")?;
+    items.iter().map(|e| e.choice(Side::WORDS, Side::from_word)).collect()
 }
 
 /// Reads one wall of the plan.

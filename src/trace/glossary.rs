@@ -46,6 +46,8 @@ pub const GLOSSARY: &[(&str, &str)] = &[
     ("e_mk", "eccentricity in the middle of the height"),
     ("E_o", "modulus of elasticity, outer leaf"),
     ("eta", "height over length of a panel"),
+    ("eta_1", "limit of a use"),
+    ("eta_w", "largest use of a bracing wall"),
     ("F_a", "wind force from the storeys above, characteristic"),
     ("f_b", "normalised strength of the unit"),
     ("f_bl", "strength of the unit that counts"),

@@ -9,6 +9,7 @@ mod outcome;
 mod remedy;
 mod returns;
 mod sharing;
+mod whole;
 
 use perpend::building::{BaseJoint, Building, FromAbove, Head, Load, Path, Return};
 use perpend::checks::Job;

@@ -54,6 +54,7 @@ fn house() -> Building {
         }],
         storeys: Vec::new(),
         area_loads: Vec::new(),
+        neighbours: Vec::new(),
         floors: Vec::new(),
         beams: Vec::new(),
         plan: Vec::new(),

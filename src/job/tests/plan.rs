@@ -119,6 +119,20 @@ const SLIPS: &[Slip] = &[
         &["not as long as its wall on the plan", "950 mm long on the plan"],
     ),
     (
+        "neighbours not said",
+        "neighbours = [\"left\"]                 # sides of the plan on which a neighbour adjoins; [] for none\n",
+        "",
+        "[plan]",
+        &["`neighbours` is missing"],
+    ),
+    (
+        "neighbour on no side",
+        "neighbours = [\"left\"]",
+        "neighbours = [\"west\"]",
+        "\"west\"",
+        &["\"left\", \"right\", \"down\" or \"up\""],
+    ),
+    (
         "storey that is not there",
         "storeys = [\"first\"]",
         "storeys = [\"second\"]",

@@ -1,0 +1,97 @@
+//! Wind and tilt of every level of the building in one direction.
+
+use crate::building::{Along, Building, TakeDown, line_of, storey_height};
+use crate::quantity::{Force, Length, Moment, Stress};
+use crate::solve::descent::Axis;
+
+/// The head of a storey.
+#[derive(Clone, Debug)]
+pub struct Level {
+    /// Place of the storey under it in the building.
+    pub storey: usize,
+    /// Extent of the wind face across the wind: where it begins and how long it is.
+    pub begin: Length,
+    /// Its length.
+    pub front: Length,
+    /// Height of wind face collected.
+    pub strip: Length,
+    /// Characteristic wind of the level.
+    pub F_k: Force,
+    /// Characteristic wind of this level and all above it.
+    pub F_above: Force,
+    /// Moment of the levels above about this one, characteristic.
+    pub M_above: Moment,
+    /// Dead load that passes the head of the storey.
+    pub dead: Force,
+    /// Imposed load that passes it.
+    pub imposed: Force,
+}
+
+/// The direction of a plan's lengths that lie along the wind.
+pub const fn axis(along: Along) -> Axis {
+    match along {
+        Along::X => Axis::X,
+        Along::Y => Axis::Y,
+    }
+}
+
+/// Levels of the building for wind along `along`, lowest first.
+pub fn of(b: &Building, down: &TakeDown, along: Along, q: Stress) -> Vec<Level> {
+    let (begin, end) = front(b, along);
+    let n = b.storeys.len();
+    let strip = |k: usize| {
+        let over = b.storeys.get(k + 1).map_or_else(
+            // Up to the ridge, as an upright face: on the safe side.
+            || b.storeys[k].total_height - b.storeys[k].clear_height,
+            |_| storey_height(b, k + 1) / 2.0,
+        );
+        storey_height(b, k) / 2.0 + over
+    };
+    let mut out: Vec<Level> = Vec::new();
+    let (mut F_above, mut M_above) = (Force::ZERO, Moment::ZERO);
+    for k in (0..n).rev() {
+        // What is above turns about this level by the height of the storey between.
+        M_above =
+            out.last().map_or(Moment::ZERO, |up: &Level| M_above + up.F_above * storey_height(b, k + 1));
+        let F_k = q * (end - begin) * strip(k);
+        F_above = F_above + F_k;
+        let load = passing(down, k);
+        out.push(Level {
+            storey: k,
+            begin,
+            front: end - begin,
+            strip: strip(k),
+            F_k,
+            F_above,
+            M_above,
+            dead: Force::new(load[0]),
+            imposed: Force::new(load[1]),
+        });
+    }
+    out.reverse();
+    out
+}
+
+/// Dead and imposed load that passes the heads of all walls of storey `k`, after the removal.
+fn passing(down: &TakeDown, k: usize) -> [f64; 2] {
+    let state = &down.after;
+    let here = state.walls.iter().zip(&state.down.walls).filter(|(s, _)| s.storey == k);
+    here.fold([0.0; 2], |sum, (_, on)| {
+        let load = on.head.total();
+        [sum[0] + load[0], sum[1] + load[1]]
+    })
+}
+
+/// Extent of the building across the wind, faces of its walls included.
+pub fn front(b: &Building, along: Along) -> (Length, Length) {
+    let across = axis(along).across();
+    let mut ends = (f64::INFINITY, f64::NEG_INFINITY);
+    for wall in &b.plan {
+        let Some(place) = line_of(wall) else { continue };
+        let half = b.build_up(&wall.build_up).map_or(0.0, |u| u.thickness().base() / 2.0);
+        let (low, high) =
+            if place.along == across { (place.from, place.to) } else { (place.at - half, place.at + half) };
+        ends = (ends.0.min(low), ends.1.max(high));
+    }
+    (Length::new(ends.0), Length::new(ends.1))
+}

@@ -1,0 +1,221 @@
+//! The whole building against wind in both directions, storey by storey, before the removal and after it.
+//!
+//! * [`levels`]: wind and tilt of every level; [`lines`]: the walls that brace, in lines
+//! * [`piers`]: every length of wall between openings, checked as a cantilever of its storey by the very
+//!   checks of a return
+
+pub mod levels;
+pub mod lines;
+pub mod piers;
+
+use super::{Job, Section};
+use crate::building::{Along, Building, Proof, Side, take_down};
+use crate::quantity::{Force, print};
+use crate::trace::{Column, Sheet, Table};
+use levels::Level;
+use piers::Used;
+
+/// One direction of the wind, with what it finds.
+pub struct Direction {
+    /// The wind blows along this.
+    pub along: Along,
+    /// Levels, lowest first.
+    pub levels: Vec<Level>,
+    /// Every pier of every line.
+    pub piers: Vec<Used>,
+}
+
+/// Directions in which wind reaches the building: none along a row with neighbours at both ends.
+pub fn directions(b: &Building) -> Vec<Along> {
+    let both = |a: Side, z: Side| b.neighbours.contains(&a) && b.neighbours.contains(&z);
+    let mut out = Vec::new();
+    if !both(Side::Left, Side::Right) {
+        out.push(Along::X);
+    }
+    if !both(Side::Down, Side::Up) {
+        out.push(Along::Y);
+    }
+    out
+}
+
+/// The whole building, where the plan has floors and the wind is known.
+pub fn of(job: &Job<'_>) -> Vec<Direction> {
+    let (Some(Ok(down)), Ok(wind)) = (take_down(job.building), &job.wind) else { return Vec::new() };
+    directions(job.building)
+        .into_iter()
+        .map(|along| {
+            let levels = levels::of(job.building, &down, along, wind.overall);
+            let piers = piers::of(job, &down, along, &levels, *wind);
+            Direction { along, levels, piers }
+        })
+        .collect()
+}
+
+/// Whether the job rests its bracing walls on these sheets.
+fn counts(b: &Building) -> bool {
+    b.links.iter().any(|l| l.link == "bracing wall" && l.proof == Proof::Calculated)
+}
+
+/// A hold point for every direction in which walls alone do not carry their share after the removal, where
+/// the job does not rest on these figures anyhow.
+pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
+    if counts(job.building) {
+        return Vec::new();
+    }
+    let over = |d: &Direction| {
+        let mut walls: Vec<&str> = Vec::new();
+        for p in d.piers.iter().filter(|p| p.after.as_ref().is_some_and(|(r, _)| *r > 1.0)) {
+            if !walls.contains(&p.wall.as_str()) {
+                walls.push(&p.wall);
+            }
+        }
+        walls.join(", ")
+    };
+    let text = |d: &Direction| {
+        let walls = over(d);
+        (!walls.is_empty()).then(|| {
+            let text = format!(
+                "Before the wall comes down, show how the house stands against wind along {}: on the sheet of the whole \
+                 building the lengths of {walls} do not carry their share after the removal, each taken alone.",
+                d.along.word()
+            );
+            (String::new(), text)
+        })
+    };
+    job.whole.iter().filter_map(text).collect()
+}
+
+/// The sheet of the whole building.
+pub fn sections(job: &Job<'_>) -> Vec<Section> {
+    let b = job.building;
+    if job.whole.is_empty() {
+        return Vec::new();
+    }
+    let mut s = Sheet::recorder();
+    neighbours(&mut s, b);
+    s.note(
+        "Wind on each level: the net overall pressure on half the storey under it and half the storey over it; at the \
+         roof the height up to the ridge is taken as an upright face. A timber floor shares by tributary width, a \
+         concrete one by stiffness with torsion; in one line the lengths between openings share by length. The lengths \
+         that stay of the wall that comes out are not counted after it: they have sheets of their own. Each length \
+         stands as a cantilever of its storey, its head free, under the load of the take-down on its loaded leaf and \
+         its share of wind and tilt, the moment of the levels above included. Walls across it and the wall over and under \
+         openings, which tie lengths together and help much, are left out: a use of infinity says that a length alone \
+         overturns.",
+    );
+    let counts = counts(b);
+    for d in &job.whole {
+        s.heading(1, format!("Wind along {}", d.along.word()));
+        s.table(|| wind(b, d));
+        s.table(|| uses(b, d));
+        if counts {
+            verdict(&mut s, d);
+        }
+    }
+    s.note(if counts {
+        "The bracing walls are calculated here: the link of that name rests on these uses."
+    } else {
+        "The link \"bracing wall\" of this job rests on what the chain sheet says of it; where a use after the removal is \
+         above 1 a hold point asks for more. A use above 1 before the removal says that the house stands by more than is \
+         counted here."
+    });
+    vec![Section::plain("whole", "The whole building against wind", s)]
+}
+
+fn neighbours(s: &mut Sheet, b: &Building) {
+    let names: Vec<&str> = b.neighbours.iter().map(|n| n.word()).collect();
+    s.note(match names.as_slice() {
+        [] => "No neighbour adjoins: wind is taken along both directions.".to_owned(),
+        names => format!(
+            "Neighbours adjoin on the side of the plan named: {}. Where both ends of a direction have neighbours the row \
+             stands together and the wind along it is not worked here; one neighbour is not counted on.",
+            names.join(", ")
+        ),
+    });
+}
+
+fn kn(f: Force) -> String {
+    print::show("F", f.dynamic()).value
+}
+
+fn wind(b: &Building, d: &Direction) -> Table {
+    let rows = d.levels.iter().map(|l| {
+        vec![
+            format!("head of {}", b.storeys[l.storey].mark),
+            print::show("h", l.strip.dynamic()).value,
+            print::show("L", l.front.dynamic()).value,
+            kn(l.F_k),
+            kn(l.F_above),
+            kn(l.dead),
+            kn(l.imposed),
+        ]
+    });
+    Table {
+        caption: "Levels: strip and front, the wind of the level, all wind from there up (characteristic), and the \
+                  vertical load that leans there, unfactored"
+            .to_owned(),
+        columns: vec![
+            Column::words("level"),
+            Column::numbers("strip, mm"),
+            Column::numbers("front, mm"),
+            Column::numbers("wind, kN"),
+            Column::numbers("from there up, kN"),
+            Column::numbers("dead, kN"),
+            Column::numbers("imposed, kN"),
+        ],
+        rows: rows.collect(),
+        strong: Vec::new(),
+    }
+}
+
+fn uses(b: &Building, d: &Direction) -> Table {
+    let percent = |x: Option<f64>| x.map_or("–".to_owned(), |p| format!("{:.0} %", 100.0 * p));
+    let ratio = |x: &Option<(f64, String)>| x.as_ref().map_or("–".to_owned(), |(r, _)| print::ratio(*r));
+    let mut strong = Vec::new();
+    let rows = d.piers.iter().enumerate().map(|(i, p)| {
+        if p.after.as_ref().is_some_and(|(r, _)| *r > 1.0) {
+            strong.push(i);
+        }
+        vec![
+            p.wall.clone(),
+            b.storeys[p.storey].mark.clone(),
+            format!("{:.2} to {:.2}", p.from / 1e3, p.to / 1e3),
+            percent(p.share_before),
+            percent(p.share_after),
+            ratio(&p.before),
+            ratio(&p.after),
+            p.after.as_ref().or(p.before.as_ref()).map_or_else(String::new, |(_, what)| what.clone()),
+        ]
+    });
+    let rows: Vec<Vec<String>> = rows.collect();
+    Table {
+        caption: "Every length of wall along the wind: its share of the storey, and its largest use of all checks of a \
+                  return under all combinations and both senses of the wind"
+            .to_owned(),
+        columns: vec![
+            Column::words("wall"),
+            Column::words("storey"),
+            Column::words("from, to, m"),
+            Column::numbers("before"),
+            Column::numbers("after"),
+            Column::numbers("use before"),
+            Column::numbers("use after"),
+            Column::words("governed by"),
+        ],
+        rows,
+        strong,
+    }
+}
+
+/// The largest use after the removal, as a verdict.
+fn verdict(s: &mut Sheet, d: &Direction) {
+    let after = d.piers.iter().filter_map(|p| Some((p.after.as_ref()?.0, p)));
+    let Some((ratio, pier)) = after.max_by(|a, b| a.0.total_cmp(&b.0)) else { return };
+    s.case = format!("{}, {:.2} to {:.2} m", pier.wall, pier.from / 1e3, pier.to / 1e3);
+    let source = "table above, worked silently by the checks of a return";
+    crate::given!(s, "largest use of a bracing wall", source, eta_w = crate::quantity::Num::new(ratio));
+    crate::given!(s, "limit of a use", "EN 1990 6.4.2", eta_1 = crate::quantity::Num::new(1.0));
+    let id = format!("bracing-{}", d.along.word());
+    crate::verify!(s, &id, "6.2, first principles", "bracing walls of the building", eta_w <= eta_1);
+    s.case.clear();
+}
