@@ -104,6 +104,13 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
          overturns.",
     );
     let counts = counts(b);
+    s.note(if counts {
+        "The bracing walls are calculated here: the link of that name rests on these uses."
+    } else {
+        "The link \"bracing wall\" of this job rests on what the chain sheet says of it; where a use after the removal is \
+         above 1 a hold point asks for more. A use above 1 before the removal says that the house stands by more than is \
+         counted here."
+    });
     for d in &job.whole {
         s.heading(1, format!("Wind along {}", d.along.word()));
         s.table(|| wind(b, d));
@@ -112,13 +119,6 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             verdict(&mut s, d);
         }
     }
-    s.note(if counts {
-        "The bracing walls are calculated here: the link of that name rests on these uses."
-    } else {
-        "The link \"bracing wall\" of this job rests on what the chain sheet says of it; where a use after the removal is \
-         above 1 a hold point asks for more. A use above 1 before the removal says that the house stands by more than is \
-         counted here."
-    });
     vec![Section::plain("whole", "The whole building against wind", s)]
 }
 
