@@ -42,7 +42,7 @@ use pack::{Typeset, photograph};
 /// [`Error::Job`] with every diagnostic of the file; [`Error::Internal`] where a sheet would print
 /// something that it did not compute.
 pub fn check(name: &str, text: &str) -> Result<(Building, Results), Error> {
-    let building = job::read(name, text)?;
+    let building = checks::whole::complete(job::read(name, text)?);
     let results = checks::run(&building);
     if let Some((sheet, fault)) = results.faults().next() {
         return Err(Error::Internal { step: format!("sheet {sheet}: {}: {}", fault.step, fault.what) });

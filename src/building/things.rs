@@ -66,6 +66,8 @@ pub struct Stability {
     pub imposed: Force,
     /// The walls.
     pub walls: Vec<BracingWall>,
+    /// All of it comes from the plan, not from the job file.
+    pub from_plan: bool,
 }
 
 /// A vertical load on a return.

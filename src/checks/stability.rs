@@ -61,16 +61,17 @@ pub fn share(
     annex: &Annex,
 ) -> Result<Storey, Outside> {
     let h_tot = b.storey(&st.storey).map_or(st.strip_height, |x| x.total_height);
-    let (from, to) = st.front;
+    let (begin, end) = st.front;
+    let from = if st.from_plan { "plan of this job" } else { "job file" };
     given!(s, "net overall pressure", "wind sheet", q_net = wind.overall);
-    given!(s, "length of the wind face", "job file", L_f = to - from);
-    given!(s, "height of wind face that this level collects", "job file", h_s = st.strip_height);
-    given!(s, "characteristic wind on everything above", "job file", F_a = st.force_above);
+    given!(s, "length of the wind face", from, L_f = end - begin);
+    given!(s, "height of wind face that this level collects", from, h_s = st.strip_height);
+    given!(s, "characteristic wind on everything above", from, F_a = st.force_above);
     calc!(s, "EN 1991-1-4 5.3", "characteristic wind force of the storey", F_k = q_net * L_f * h_s + F_a);
     given!(s, "factor on wind", "EN 1990 NA.A1.2", gamma_W = annex.gamma_Q);
     calc!(s, "EN 1990 eq. 6.10", "design wind force of the storey", F_Ed = gamma_W * F_k);
-    given!(s, "dead load of the level, for the tilt", "job file", G_s = st.dead);
-    given!(s, "imposed load of the level", "job file", Q_s = st.imposed);
+    given!(s, "dead load of the level, for the tilt", from, G_s = st.dead);
+    given!(s, "imposed load of the level", from, Q_s = st.imposed);
     given!(s, "height of the structure, in m in the next line", "job file", h_tot);
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
     given!(s, "pressing factor on dead load", "EN 1990 NA.A1.2(B)", gamma_Gp = annex.gamma_G_sup);

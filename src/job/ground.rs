@@ -240,6 +240,7 @@ pub fn stability<'a>(
         dead: dead?,
         imposed: imposed?,
         walls: Vec::new(),
+        from_plan: false,
     })
 }
 

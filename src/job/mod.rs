@@ -142,7 +142,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         returns::together(&returns, &around);
         (returns, panels)
     };
-    something_to_check(root);
+    something_to_check(root, !floors.is_empty());
 
     let marks: Vec<&str> = returns.list().into_iter().chain(panels.list()).chain(bracing.list()).collect();
     let link_tables = root.need("links").tables("link", "link");
@@ -213,7 +213,7 @@ fn all<'a, T>(tables: &[Table<'a>], read: impl Fn(&Table<'a>) -> Option<T>) -> O
 }
 
 /// A job without returns and panels checks nothing; a return is never judged alone.
-fn something_to_check(root: &Table<'_>) {
+fn something_to_check(root: &Table<'_>, led: bool) {
     let returns = root.has("returns");
     if !returns && !root.has("panels") {
         root.fault(Kind::Missing, "there is nothing to check")
@@ -223,6 +223,10 @@ fn something_to_check(root: &Table<'_>) {
     }
     let stability = root.has("stability");
     let bracing = root.has("bracing");
+    // With floors on the plan the storey comes from it.
+    if led && !stability && !bracing {
+        return;
+    }
     if returns && !(stability && bracing) {
         let lacking = if stability { "[[bracing]]" } else { "[stability]" };
         root.fault(Kind::Missing, format_args!("there are returns, but no {lacking}"))

@@ -1,6 +1,7 @@
 //! `[[returns]]`: what stays and braces.
 
 use super::bearing;
+use super::entry::Entry;
 use super::ground::{self, DRAWN, HEIGHT, STRIP};
 use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
@@ -70,10 +71,24 @@ fn against_plan(t: &Table<'_>, seen: &Seen<'_, PlanWall>, length: Length) {
 pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     let mark = t.need("mark").mark(MARK);
     let title = t.need("title").line();
-    let build_up = around.build_ups.refer(&t.need("build_up"));
-    let storey = around.storeys.refer(&t.need("storey"));
-    let length: Option<Length> = t.need("length").quantity(&LENGTH);
-    let height: Option<Length> = t.need("height").quantity(&HEIGHT);
+    let drawn = mark.as_ref().filter(|_| around.led).and_then(|m| around.plan.item(m));
+    let build_up = match drawn {
+        Some(wall) if !t.has("build_up") => Some(wall.build_up.clone()),
+        _ => around.build_ups.refer(&t.need("build_up")),
+    };
+    let storey = match drawn {
+        Some(wall) if !t.has("storey") && !wall.storeys.is_empty() => Some(wall.storeys[0].clone()),
+        _ => around.storeys.refer(&t.need("storey")),
+    };
+    let length: Option<Length> = match drawn {
+        Some(wall) if !t.has("length") => Some(plan_length(wall)),
+        _ => t.need("length").quantity(&LENGTH),
+    };
+    let of_storey = storey.as_ref().and_then(|s| around.storeys.item(s)).map(|s| s.clear_height);
+    let height: Option<Length> = match (drawn, of_storey) {
+        (Some(_), Some(clear)) if !t.has("height") => Some(clear),
+        _ => t.need("height").quantity(&HEIGHT),
+    };
     let position = t.may("position").pair(&POSITION);
     let (base, base_reason) = base(t);
     let mu = t.may("mu").factor(MU_USUAL, &MU);
@@ -186,7 +201,13 @@ fn head<'a>(t: &Table<'a>, around: &Around<'_, 'a>, mark: Option<&str>) -> Optio
     let word = t.need("head").pick(&[("free", false), ("propped", true)]);
     let given = t.has("propped_by");
     let along = around.stability.map(|(_, s)| s.wind_along);
-    let by = if given { ground::props(&t.need("propped_by"), around.bracing, along, mark) } else { None };
+    let entry = t.need("propped_by");
+    let by = match given {
+        false => None,
+        // Without bracing walls of its own the job names walls of its plan.
+        true if around.led && around.bracing.is_empty() => props_on_plan(&entry, around, mark),
+        true => ground::props(&entry, around.bracing, along, mark),
+    };
     match (word?, given) {
         (true, false) => {
             t.fault(Kind::Contradiction, "the head is propped, but `propped_by` is missing")
@@ -205,6 +226,25 @@ fn head<'a>(t: &Table<'a>, around: &Around<'_, 'a>, mark: Option<&str>) -> Optio
         (true, true) => by.map(Head::Propped),
         (false, false) => Some(Head::Free),
     }
+}
+
+/// Walls of the plan that take the reaction at a head: they stay, and they are not the return.
+fn props_on_plan<'a>(entry: &Entry<'a>, around: &Around<'_, 'a>, own: Option<&str>) -> Option<Vec<String>> {
+    let items = entry.list("a list of marks of plan walls: [\"party wall\", \"flank wall\"]")?;
+    let mut marks = Vec::new();
+    for item in &items {
+        let mark = around.plan.refer(item)?;
+        let removed = around.plan.item(&mark).is_some_and(|w| w.removed);
+        if removed || own == Some(mark.as_str()) || marks.contains(&mark) {
+            item.fault(Kind::NotAllowed, format_args!("\"{mark}\" cannot prop it"))
+                .at(item.place(), if removed { "comes out" } else { "itself, or named twice" })
+                .allowed("other walls of the plan that stay, each once")
+                .help("name the walls that take the reaction, or write head = \"free\"");
+            return None;
+        }
+        marks.push(mark);
+    }
+    Some(marks)
 }
 
 fn path(t: &Table<'_>) -> (Option<Path>, Option<Length>) {

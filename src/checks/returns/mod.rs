@@ -124,7 +124,13 @@ fn held_by(s: &mut Sheet, i: &Inputs<'_>) {
             join(&here)
         ));
     }
-    if !elsewhere.is_empty() {
+    if !elsewhere.is_empty() && !i.building.floors.is_empty() {
+        s.note(format!(
+            "The head is held in plane by {}: the reaction is part of the storey's wind, which the sheet of the whole \
+             building gives to these walls.",
+            join(&elsewhere)
+        ));
+    } else if !elsewhere.is_empty() {
         s.note(format!(
             "The head is held in plane by {}, which this pack does not check: the reaction is to be carried there as \
              well, and the chain sheet says how that is known.",

@@ -9,7 +9,7 @@ use crate::standards::annex::Annex;
 use crate::trace::Sheet;
 
 /// How far walls of one line may miss each other, mm.
-const LINE: f64 = 150.0;
+pub const LINE: f64 = 150.0;
 
 /// A line of walls in one storey.
 #[derive(Clone, Debug)]
@@ -58,6 +58,7 @@ pub fn of(
         dead: Force::ZERO,
         imposed: Force::ZERO,
         walls,
+        from_plan: true,
     };
     let Ok(shared) = stability::share(&mut Sheet::silent(), b, &storey, wind, annex) else {
         return Vec::new();
@@ -69,7 +70,7 @@ pub fn of(
 }
 
 /// Walls of a storey along a direction, those in one line together.
-fn gather(state: &State, along: Along, storey: usize, counted: &dyn Fn(usize) -> bool) -> Vec<Line> {
+pub fn gather(state: &State, along: Along, storey: usize, counted: &dyn Fn(usize) -> bool) -> Vec<Line> {
     let mut lines: Vec<Line> = Vec::new();
     for (i, (stack, wall)) in state.walls.iter().zip(&state.model.walls).enumerate() {
         if stack.storey != storey || wall.place.along != axis(along) || !counted(stack.wall) {
@@ -88,7 +89,7 @@ fn gather(state: &State, along: Along, storey: usize, counted: &dyn Fn(usize) ->
 }
 
 /// A line as the sharing of a storey sees it; its mark is its number.
-fn bracing(b: &Building, state: &State, line: &Line, number: usize, along: Along) -> BracingWall {
+pub fn bracing(b: &Building, state: &State, line: &Line, number: usize, along: Along) -> BracingWall {
     let ends = line.walls.iter().map(|&i| state.model.walls[i].place);
     let (from, to) = ends.fold((f64::INFINITY, f64::NEG_INFINITY), |(a, z), p| (a.min(p.from), z.max(p.to)));
     let stack = &state.walls[line.walls[0]];

@@ -7,6 +7,9 @@
 pub mod levels;
 pub mod lines;
 pub mod piers;
+mod storey;
+
+pub use storey::complete;
 
 use super::{Job, Section};
 use crate::building::{Along, Building, Proof, Side, take_down};

@@ -113,10 +113,17 @@ const SLIPS: &[Slip] = &[
     ),
     (
         "return longer than its wall",
-        "length = \"950 mm\"",
-        "length = \"1150 mm\"",
+        "title = \"Length at the party wall\"",
+        "title = \"Length at the party wall\"\nlength = \"1150 mm\"",
         "\"1150 mm\"",
         &["not as long as its wall on the plan", "950 mm long on the plan"],
+    ),
+    (
+        "head held by the wall that comes out",
+        "propped_by = [\"rear wall\", \"front wall\"]",
+        "propped_by = [\"rear wall\", \"cross wall\"]",
+        "\"cross wall\"",
+        &["\"cross wall\" cannot prop it", "comes out"],
     ),
     (
         "neighbours not said",
