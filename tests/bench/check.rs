@@ -99,3 +99,40 @@ fn lead_down(bencher: Bencher<'_, '_>, walls: usize) {
     }
     bencher.bench(|| descent::lead_down(black_box(&model)).expect("a path"));
 }
+
+/// The end terrace with more and more houses beside it, by the number of plan walls: read, led down, checked.
+#[divan::bench(args = [10, 20, 100, 1000], max_time = 20)]
+fn plan_walls(bencher: Bencher<'_, '_>, walls: usize) {
+    let text = row(walls);
+    bencher.bench(|| perpend::check("row.toml", black_box(&text)).expect("a valid job"));
+}
+
+/// The end terrace's job with houses added to its right until the plan has so many walls.
+fn row(walls: usize) -> String {
+    use std::fmt::Write;
+    let text = demo("end-terrace");
+    let (plan, rest) = text.split_once("[[plan.beams]]").expect("the job has a beam");
+    let mut more = String::new();
+    let there = text.matches("[[plan.walls]]").count();
+    for n in 0..walls.saturating_sub(there) / 3 {
+        let (x, z) = (5.0 + 5.0 * n as f64, 10.0 + 5.0 * n as f64);
+        for (mark, from, to) in
+            [("rear", (x, 0.0), (z, 0.0)), ("front", (x, 8.0), (z, 8.0)), ("side", (z, 0.0), (z, 8.0))]
+        {
+            let _ = write!(
+                more,
+                "[[plan.walls]]\nmark = \"{mark} {n}\"\nbuild_up = \"one brick wall\"\nfrom = [\"{} m\", \"{} m\"]\nto = \
+                 [\"{} m\", \"{} m\"]\n\n",
+                from.0, from.1, to.0, to.1
+            );
+        }
+        for (mark, load, storey) in [("F", "first floor", "ground"), ("R", "roof", "first")] {
+            let _ = write!(
+                more,
+                "[[plan.floors]]\nmark = \"{mark} {n}\"\nload = \"{load}\"\nstorey = \"{storey}\"\nfrom = [\"{x} m\", \"0 \
+                 m\"]\nto = [\"{z} m\", \"8 m\"]\nspans = \"y\"\n\n"
+            );
+        }
+    }
+    format!("{plan}{more}[[plan.beams]]{rest}")
+}
