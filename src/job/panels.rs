@@ -1,14 +1,15 @@
 //! `[[panels]]`: outer walls across their plane, before and after the removal.
 
+use super::entry::Entry;
 use super::ground::{DRAWN, HEIGHT};
 use super::limits::{Limits, Odd};
 use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
 use super::words::EDGES;
-use crate::building::{Arching, Edge, Panel, PanelRoute, Sharing, Span};
+use crate::building::{Arching, Edge, Panel, PanelRoute, PlanWall, Sharing, Span, line_of};
 use crate::error::Kind;
-use crate::quantity::LineLoad;
+use crate::quantity::{Length, LineLoad};
 use crate::standards::masonry;
 
 const LENGTH: Limits = Limits::new(0.3, 20.0, "m")
@@ -41,10 +42,11 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
         None => Some(Sharing::Strength),
     };
     let before_table = t.need("before").table(&format!("{}, before", t.name));
-    let before = before_table.as_ref().and_then(span);
+    let wall_on = on.as_ref().and_then(|w| around.plan.item(w));
+    let before = before_table.as_ref().and_then(|b| span(b, around, wall_on));
     let after_table = t.need("after").table(&format!("{}, after", t.name));
     let wall_at = after_table.as_ref().and_then(|a| a.may("wall_at").quantity(&WALL_AT));
-    let after = after_table.as_ref().and_then(span);
+    let after = after_table.as_ref().and_then(|a| span(a, around, wall_on));
     let arching = arching(t, route);
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
@@ -98,11 +100,56 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     })
 }
 
-fn span(t: &Table<'_>) -> Option<Span> {
-    let length = t.need("length").quantity(&LENGTH);
+fn span<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: Option<&PlanWall>) -> Option<Span> {
+    let length = match on {
+        Some(wall) if around.led && t.has("between") => {
+            if t.has("length") {
+                t.clash("its length is given twice", "length", "between")
+                    .allowed("`length`, or `between` with the two walls of the plan that hold its ends")
+                    .help("take one of the two out");
+            }
+            between(t, around, wall)
+        }
+        _ => t.need("length").quantity(&LENGTH),
+    };
     let [top, base, left, right] = ["top", "base", "left", "right"].map(|key| edge(t, key));
     t.finish();
     Some(Span { length: length?, top: top?, base: base?, left: left?, right: right? })
+}
+
+/// Length between the lines of two plan walls that meet the wall of the panel.
+fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<Length> {
+    let entry = t.need("between");
+    let wanted = "the two walls of the plan that hold its ends: [\"party wall\", \"R1\"]";
+    let items = entry.list(wanted)?;
+    let [a, z] = items.as_slice() else {
+        entry.wrong_type(wanted, "name two walls");
+        return None;
+    };
+    let along = line_of(on)?;
+    let place = |e: &Entry<'a>| {
+        let mark = around.plan.refer(e)?;
+        let line = around.plan.item(&mark).and_then(line_of)?;
+        if line.along == along.along {
+            e.fault(Kind::Contradiction, format_args!("\"{mark}\" runs along the panel, not across it"))
+                .at(e.place(), "no end of it")
+                .allowed("walls across the panel")
+                .help("name the walls that hold its left and right end");
+            return None;
+        }
+        Some(line.at)
+    };
+    let (a, z) = (place(a), place(z));
+    let length = Length::new((a? - z?).abs());
+    if !LENGTH.allow(length.base()) {
+        entry
+            .fault(Kind::Contradiction, format_args!("the panel would be {:.0} mm long", length.base()))
+            .at(entry.place(), "between these")
+            .allowed(LENGTH.words())
+            .help("name two walls apart from each other");
+        return None;
+    }
+    Some(length)
 }
 
 fn edge(t: &Table<'_>, key: &'static str) -> Option<Edge> {

@@ -126,6 +126,20 @@ const SLIPS: &[Slip] = &[
         &["\"cross wall\" cannot prop it", "comes out"],
     ),
     (
+        "panel between a wall along it",
+        "between = [\"R2\", \"front wall\"]",
+        "between = [\"R2\", \"party wall\"]",
+        "\"party wall\"",
+        &["runs along the panel"],
+    ),
+    (
+        "panel between one wall and itself",
+        "between = [\"R2\", \"front wall\"]",
+        "between = [\"R2\", \"R2\"]",
+        "[\"R2\", \"R2\"]",
+        &["the panel would be 0 mm long"],
+    ),
+    (
         "neighbours not said",
         "neighbours = [\"left\"]                 # sides of the plan on which a neighbour adjoins; [] for none\n",
         "",
