@@ -13,6 +13,7 @@
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
 pub mod board;
+pub mod chain;
 pub mod dimension;
 pub mod drawing;
 pub mod ground;
@@ -43,6 +44,7 @@ pub(crate) mod tests;
 pub mod text;
 pub mod view;
 
+pub use chain::{Branch, Chain, ChainLink, Known, chain};
 pub use drawing::{Drawing, Item};
 pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};

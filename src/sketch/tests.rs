@@ -97,6 +97,7 @@ fn hand_cases_are_sound() {
         panel_section(&wall_section(), FRAME),
         key_plan(&plan(), FRAME),
         stability_plan(&stability(), FRAME),
+        chain(&links()),
     ];
     let [before, after] = panels();
     drawings.extend(panel_pair(&before, &after, Frame::new(165.0, 110.0)));
