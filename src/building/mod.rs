@@ -3,10 +3,12 @@
 //! Reading and judging the job file happens in `job`; nothing here can be half given. Lengths,
 //! forces and stresses are typed quantities; a value that departs from a rule carries its reason.
 
+mod floors;
 mod parts;
 mod things;
 mod words;
 
+pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
 pub use parts::{
     Basis, BuildUp, Cause, Identity, Leaf, Material, Person, PlanWall, Revision, Signatures, StatedWind,
     Storey, Strength, TerrainWind, UnitStrength, Wind,
@@ -16,8 +18,8 @@ pub use things::{
     Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
-    Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
-    Status, WindRoute,
+    Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Joists, PanelRoute, Path, Proof,
+    Restraint, ShareBy, Sharing, Stands, Status, StrapsKnown, WindRoute,
 };
 
 /// Everything a pack is made from.
@@ -51,6 +53,12 @@ pub struct Building {
     pub returns: Vec<Return>,
     /// Outer walls between supports.
     pub panels: Vec<Panel>,
+    /// Edges of floors along the panels.
+    pub floor_edges: Vec<FloorEdge>,
+    /// The floor in its plane, where it is given.
+    pub diaphragm: Option<Diaphragm>,
+    /// Class for disproportionate collapse, where it is stated.
+    pub collapse: Option<Collapse>,
     /// The chain from the wind face to the ground.
     pub links: Vec<Link>,
     /// What was taken to be so.
@@ -74,6 +82,11 @@ impl Building {
     /// The material named `name`.
     pub fn material(&self, name: &str) -> Option<&Material> {
         self.materials.iter().find(|m| m.name == name)
+    }
+
+    /// The panel marked `mark`.
+    pub fn panel(&self, mark: &str) -> Option<&Panel> {
+        self.panels.iter().find(|p| p.mark == mark)
     }
 
     /// The storey marked `mark`.
