@@ -2,6 +2,9 @@
 //! calculations, step by step, and identities that only test the tool against itself, named as such.
 
 mod arya_design_of_structural_elements;
+pub mod hand_diaphragm;
+pub mod hand_floor_edge;
+mod hand_frame;
 mod hand_panel;
 mod hand_return;
 mod hand_slenderness;
