@@ -61,9 +61,20 @@ fn class(b: &Building) -> String {
 }
 
 fn view(job: &Job<'_>, all: &[Link]) -> Chain {
+    let b = job.building;
+    let marks: Vec<&String> = b
+        .floor_edges
+        .iter()
+        .map(|e| &e.mark)
+        .chain(b.returns.iter().map(|r| &r.mark))
+        .chain(b.panels.iter().map(|p| &p.mark))
+        .collect();
+    // Branches stand in the order of the job's things, so that one thing stays in one line.
+    let place = |l: &Link| marks.iter().position(|m| l.of.first() == Some(*m)).unwrap_or(marks.len());
     let of = |name: &str| {
-        let links = all.iter().filter(|l| l.link == name);
-        links.map(|l| branch(job, l)).collect::<Vec<_>>()
+        let mut links: Vec<&Link> = all.iter().filter(|l| l.link == name).collect();
+        links.sort_by_key(|l| place(l));
+        links.into_iter().map(|l| branch(job, l)).collect::<Vec<_>>()
     };
     Chain {
         links: links::LINKS

@@ -6,8 +6,8 @@ use super::names::Names;
 use super::reader::Table;
 use super::returns::MARK;
 use crate::building::{
-    BracingWall, Collapse, CollapseClass, Diaphragm, DiaphragmProof, FloorEdge, Joists, Panel, Stability,
-    Stands, Storey, Strap, StrapsKnown,
+    BracingWall, Collapse, CollapseClass, Diaphragm, DiaphragmProof, FloorEdge, Joists, Link, Panel, Proof,
+    Stability, Stands, Storey, Strap, StrapsKnown,
 };
 use crate::error::Kind;
 use crate::quantity::Length;
@@ -101,6 +101,28 @@ pub fn one_each(edges: &Names<'_, FloorEdge>) {
                 .and(first.table.place("panel"), "the first")
                 .allowed("one floor edge at each panel")
                 .help("take one out, or name the panel that it is about");
+        }
+    }
+}
+
+/// Holds floor edges against the links: straps that are not there were not seen.
+pub fn against_links(edges: &Names<'_, FloorEdge>, tables: &[Table<'_>], links: &[Option<Link>]) {
+    let given = tables.iter().zip(links).filter_map(|(t, l)| Some((t, l.as_ref()?)));
+    let seen = given.filter(|(_, l)| l.link == "floor edge" && l.proof == Proof::Seen);
+    for (t, link) in seen {
+        let about = |e: &FloorEdge| {
+            link.of.is_empty() || link.of.iter().any(|mark| *mark == e.mark || *mark == e.panel)
+        };
+        let bare = edges
+            .iter()
+            .find(|e| e.item.as_ref().is_some_and(|item| item.known != StrapsKnown::Seen && about(item)));
+        if let Some(edge) = bare {
+            edge.table
+                .fault(Kind::Contradiction, "the link is seen, but its straps are not")
+                .at(edge.table.place("straps"), "straps")
+                .and(t.place("proof"), "the link's proof")
+                .allowed("proof = \"seen\" where every floor edge that it is about has straps = \"seen\"")
+                .help("write proof = \"calculated\", which follows the floor edges, or correct what is known of the straps");
         }
     }
 }

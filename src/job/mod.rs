@@ -152,6 +152,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let link_tables = root.need("links").tables("link", "link");
     let links: Vec<_> = link_tables.iter().map(|t| closing::link(t, &marks)).collect();
     closing::chain(reader, &link_tables, &links, (!floor_edges.is_empty(), diaphragm_table.is_some()));
+    floors::against_links(&floor_edges, &link_tables, &links);
     let assumptions = all(&root.may("assumptions").tables("assumption", ""), closing::assumption);
     let hold_points =
         all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));

@@ -89,20 +89,20 @@ pub fn chain(view: &Chain) -> Drawing {
         1.0,
         0.0,
     )));
-    // Where the branches of the row above end.
-    let mut above: Vec<f64> = vec![centre];
+    let rows = rows(view, centre);
+    // Where the branches of the row above end, and what they are of.
+    let mut above = vec![(centre, String::new())];
     let mut y = 0.0;
-    for link in &view.links {
-        let nodes = row(link, centre);
-        join(&mut board, &above, &nodes, y);
+    for (link, nodes) in view.links.iter().zip(&rows) {
+        join(&mut board, &above, nodes, y);
         y += ROW;
         let height = nodes.iter().map(|n| n.height).fold(0.0, f64::max);
-        for node in &nodes {
+        for node in nodes {
             draw(&mut board, node, y, height);
         }
         let middle = Point::new(0.0, y + height / 2.0);
         board.note(Note::new(Role::Mark, middle, Text::mark(&link.name)).spot(Spot::new(middle, 1.0, 0.0)));
-        above = nodes.iter().map(|n| n.x).collect();
+        above = nodes.iter().map(|n| (n.x, n.of.clone())).collect();
         y += height;
     }
     close(&mut board, &above, centre, y);
@@ -117,6 +117,7 @@ pub fn chain(view: &Chain) -> Drawing {
 
 /// A node ready to draw.
 struct Node {
+    of: String,
     x: f64,
     width: f64,
     height: f64,
@@ -124,27 +125,35 @@ struct Node {
     lines: Vec<String>,
 }
 
-/// The nodes of a link, side by side about the middle.
-fn row(link: &ChainLink, centre: f64) -> Vec<Node> {
+/// The nodes of every link, side by side about the middle; rows of as many branches stand in line.
+fn rows(view: &Chain, centre: f64) -> Vec<Vec<Node>> {
+    let mut rows: Vec<Vec<Node>> = view.links.iter().map(row).collect();
+    let widest = |rows: &[Vec<Node>], n: usize| {
+        let alike = rows.iter().filter(|r| r.len() == n).flatten();
+        alike.map(|node| node.width).fold(0.0, f64::max)
+    };
+    for i in 0..rows.len() {
+        let n = rows[i].len();
+        let pitch = widest(&rows, n) + APART;
+        for (k, node) in rows[i].iter_mut().enumerate() {
+            node.x = centre + (k as f64 - (n as f64 - 1.0) / 2.0) * pitch;
+        }
+    }
+    rows
+}
+
+/// The nodes of a link, not yet in their places.
+fn row(link: &ChainLink) -> Vec<Node> {
     let branches = together(&link.branches);
     let several = branches.len() > 1;
     let share = (NODES + APART) / branches.len().max(1) as f64 - APART;
-    let mut nodes: Vec<Node> = branches
-        .iter()
-        .map(|b| {
-            let lines = lines(b, several, share - 2.0 * PAD.x);
-            let width = lines.iter().map(|l| width(l)).fold(0.0, f64::max) + 2.0 * PAD.x;
-            let height = PITCH * lines.len() as f64 + 2.0 * PAD.y - 0.4;
-            Node { x: 0.0, width: width.max(18.0), height, known: b.known, lines }
-        })
-        .collect();
-    let all: f64 = nodes.iter().map(|n| n.width).sum::<f64>() + APART * (nodes.len() as f64 - 1.0);
-    let mut x = centre - all / 2.0;
-    for node in &mut nodes {
-        node.x = x + node.width / 2.0;
-        x += node.width + APART;
-    }
-    nodes
+    let node = |b: &Branch| {
+        let lines = lines(b, several, share - 2.0 * PAD.x);
+        let width = lines.iter().map(|l| width(l)).fold(0.0, f64::max) + 2.0 * PAD.x;
+        let height = PITCH * lines.len() as f64 + 2.0 * PAD.y - 0.4;
+        Node { of: b.of.clone(), x: 0.0, width: width.max(18.0), height, known: b.known, lines }
+    };
+    branches.iter().map(node).collect()
 }
 
 /// Few branches as they are; many drawn together by how they are known.
@@ -204,19 +213,29 @@ fn width(text: &str) -> f64 {
     Text::plain(text).extent(SIZE).width
 }
 
-/// Joins the row above, which ends at `y`, with the nodes below: each link in the manner of its proof.
-fn join(board: &mut Board, above: &[f64], nodes: &[Node], y: f64) {
+/// Joins the row above, which ends at `y`, with the nodes below: each link in the manner of its proof. Branches
+/// of the same things run straight on; others meet on the way.
+fn join(board: &mut Board, above: &[(f64, String)], nodes: &[Node], y: f64) {
     let bus = y + BUS;
-    let xs = || above.iter().copied().chain(nodes.iter().map(|n| n.x));
-    let (low, high) = (xs().fold(f64::INFINITY, f64::min), xs().fold(f64::NEG_INFINITY, f64::max));
-    for &x in above {
-        board.line(Pen::Outline, Point::new(x, y), Point::new(x, bus));
+    let alike = above.len() == nodes.len() && above.iter().zip(nodes).all(|(a, n)| a.1 == n.of);
+    for (x, _) in above {
+        board.line(Pen::Outline, Point::new(*x, y), Point::new(*x, bus));
     }
-    if high - low > 0.01 {
-        board.line(Pen::Outline, Point::new(low, bus), Point::new(high, bus));
+    if !alike {
+        let xs: Vec<f64> = above.iter().map(|a| a.0).chain(nodes.iter().map(|n| n.x)).collect();
+        across(board, &xs, bus);
     }
     for node in nodes {
         limb(board, node.known, Point::new(node.x, bus), Point::new(node.x, y + ROW));
+    }
+}
+
+/// The line on which branches meet.
+fn across(board: &mut Board, xs: &[f64], y: f64) {
+    let low = xs.iter().copied().fold(f64::INFINITY, f64::min);
+    let high = xs.iter().copied().fold(f64::NEG_INFINITY, f64::max);
+    if high - low > 0.01 {
+        board.line(Pen::Outline, Point::new(low, y), Point::new(high, y));
     }
 }
 
@@ -270,16 +289,14 @@ fn frame(board: &mut Board, known: Known, area: Rect) {
 }
 
 /// From the last row to the ground.
-fn close(board: &mut Board, above: &[f64], centre: f64, y: f64) {
+fn close(board: &mut Board, above: &[(f64, String)], centre: f64, y: f64) {
     let bus = y + BUS;
-    let xs = || above.iter().copied().chain([centre]);
-    for &x in above {
-        board.line(Pen::Outline, Point::new(x, y), Point::new(x, bus));
+    let mut xs = vec![centre];
+    for (x, _) in above {
+        board.line(Pen::Outline, Point::new(*x, y), Point::new(*x, bus));
+        xs.push(*x);
     }
-    let (low, high) = (xs().fold(f64::INFINITY, f64::min), xs().fold(f64::NEG_INFINITY, f64::max));
-    if high - low > 0.01 {
-        board.line(Pen::Outline, Point::new(low, bus), Point::new(high, bus));
-    }
+    across(board, &xs, bus);
     let foot = Point::new(centre, y + ROW);
     board.line(Pen::Outline, Point::new(centre, bus), foot);
     let half = Vec2::new(9.0, 0.0);

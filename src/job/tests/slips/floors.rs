@@ -53,9 +53,21 @@ pub const SLIPS: &[Slip] = &[
     slip(
         "two floor edges at one panel",
         "[diaphragm]",
-        "[[floor_edges]]\nmark = \"E2\"\npanel = \"P1\"\nstrip_height = \"2.65 m\"\njoists = \"into the wall\"\n\n[diaphragm]",
+        "[[floor_edges]]\nmark = \"E2\"\npanel = \"P1\"\nstrip_height = \"2.65 m\"\njoists = \"into the wall\"\nstraps = \"seen\"\nwords = \"RH.\"\nspacing = \"1 m\"\nstrength = { value = \"8 kN\", reason = \"Declared.\" }\n\n[diaphragm]",
         "\"P1\"",
         &["floor edge E2: P1 has a floor edge already", "the first", "one floor edge at each panel"],
+    ),
+    slip(
+        "a floor edge seen before its straps are",
+        "straps = \"seen\"",
+        "straps = \"to be fitted\"",
+        "\"to be fitted\"",
+        &[
+            "floor edge E1: the link is seen, but its straps are not",
+            "straps",
+            "the link's proof",
+            "correct what is known of the straps",
+        ],
     ),
     slip(
         "strap without its spacing",
