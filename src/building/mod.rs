@@ -4,6 +4,7 @@
 //! forces and stresses are typed quantities; a value that departs from a rule carries its reason.
 
 mod descent;
+mod floors;
 mod parts;
 mod plan;
 mod things;
@@ -12,6 +13,7 @@ mod words;
 pub use descent::{
     LED, Stack, State, TakeDown, Trouble, line_of, stands_in, storey_height, take_down, take_loads,
 };
+pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
 pub use parts::{
     Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, StatedWind, Storey,
     Strength, TerrainWind, UnitStrength, Wind,
@@ -22,8 +24,8 @@ pub use things::{
     Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
-    Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Side,
-    Stands, Status, WindRoute,
+    Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Joists, PanelRoute, Path, Proof,
+    Restraint, ShareBy, Sharing, Side, Stands, Status, StrapsKnown, WindRoute,
 };
 
 /// Everything a pack is made from.
@@ -65,6 +67,12 @@ pub struct Building {
     pub returns: Vec<Return>,
     /// Outer walls between supports.
     pub panels: Vec<Panel>,
+    /// Edges of floors along the panels.
+    pub floor_edges: Vec<FloorEdge>,
+    /// The floor in its plane, where it is given.
+    pub diaphragm: Option<Diaphragm>,
+    /// Class for disproportionate collapse, where it is stated.
+    pub collapse: Option<Collapse>,
     /// The chain from the wind face to the ground.
     pub links: Vec<Link>,
     /// What was taken to be so.
@@ -88,6 +96,11 @@ impl Building {
     /// The material named `name`.
     pub fn material(&self, name: &str) -> Option<&Material> {
         self.materials.iter().find(|m| m.name == name)
+    }
+
+    /// The panel marked `mark`.
+    pub fn panel(&self, mark: &str) -> Option<&Panel> {
+        self.panels.iter().find(|p| p.mark == mark)
     }
 
     /// The storey marked `mark`.

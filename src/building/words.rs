@@ -167,3 +167,37 @@ Side {
     /// Towards more y.
     Up = "up",
 });
+
+choice!(/// How the joists run against an outer wall.
+Joists {
+    /// They bear on it.
+    Into = "into the wall",
+    /// Parallel to it.
+    Along = "along the wall",
+});
+
+choice!(/// What is known of the straps along a floor edge.
+StrapsKnown {
+    /// None is known to be there.
+    None = "none",
+    /// By a named person.
+    Seen = "seen",
+    /// They are part of the work.
+    ToBeFitted = "to be fitted",
+});
+
+choice!(/// How a floor is shown to carry wind in its plane.
+DiaphragmProof {
+    /// By its proportions.
+    Rule = "by rule",
+    /// By its shear flow.
+    ShearFlow = "shear flow",
+});
+
+choice!(/// Consequence class for disproportionate collapse.
+CollapseClass {
+    /// Houses up to four storeys, and the like.
+    One = "1",
+    /// Flats up to four storeys, and the like.
+    TwoA = "2A",
+});

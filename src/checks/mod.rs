@@ -2,6 +2,9 @@
 //! in the list is its place in the pack.
 
 pub mod chain;
+pub mod diaphragm;
+pub mod floor_edge;
+pub mod links;
 pub mod loads;
 pub mod masonry;
 pub mod materials;
@@ -105,6 +108,8 @@ pub const LIST: &[Check] = &[
     whole::sections,
     return_sheet::sections,
     panel_sheet::sections,
+    floor_edge::sections,
+    diaphragm::sections,
     chain::sections,
 ];
 

@@ -1,7 +1,7 @@
 //! Outcomes in the only words there are, and the hold points that make one conditional.
 
-use super::Section;
-use crate::building::{Building, Head, Link, Proof};
+use super::{Section, links};
+use crate::building::{Building, Proof};
 use crate::trace::Sheet;
 
 /// The outcome of a sheet or of the job.
@@ -53,78 +53,16 @@ pub struct Hold {
     pub closed: Option<String>,
 }
 
-/// The links of the load path, in order, each with what is to be seen where nothing is said of it.
-pub const LINKS: [(&str, &str); 8] = [
-    ("wind face", "the outer walls be shown to carry the wind between their supports"),
-    ("panel", "the outer wall panels be shown to be sound and held as drawn"),
-    (
-        "floor edge",
-        "the fixing of floor or roof to the walls be opened up and shown to carry the wind, straps included",
-    ),
-    ("diaphragm", "the floor or roof be shown to carry the wind in its plane to the bracing walls"),
-    ("bracing wall", "the walls that take the wind now be shown to carry it"),
-    ("junction", "the junction between return and outer wall be opened up and seen"),
-    ("dpc", "the joint at the foot be seen"),
-    ("footing", "the footing below the return be exposed and its width and depth be recorded"),
-];
-
-/// The links of the job with those that nothing is said of, which are assumed.
-pub fn links(b: &Building) -> Vec<Link> {
-    let mut out = Vec::new();
-    for (name, words) in LINKS {
-        let given: Vec<&Link> = b.links.iter().filter(|l| l.link == name).collect();
-        if given.is_empty() {
-            out.push(Link {
-                link: name.to_owned(),
-                proof: Proof::Assumed,
-                words: format!("{words} (nothing is said of this link in the job file)"),
-                of: Vec::new(),
-            });
-        }
-        out.extend(given.into_iter().map(|l| proven(b, l)));
-    }
-    out
-}
-
-/// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
-fn proven(b: &Building, link: &Link) -> Link {
-    let held_elsewhere = b.returns.iter().any(|r| match &r.head {
-        Head::Free => false,
-        Head::Propped(walls) => walls.iter().any(|w| !b.returns.iter().any(|o| o.mark == *w)),
-    });
-    let here = match link.link.as_str() {
-        "wind face" | "panel" => !b.panels.is_empty(),
-        "bracing wall" => !b.floors.is_empty() || !b.returns.is_empty() && !held_elsewhere,
-        "junction" | "dpc" => !b.returns.is_empty(),
-        // Floors and footings are not calculated in this pack.
-        _ => false,
-    };
-    if link.proof != Proof::Calculated || here || !link.words.trim().is_empty() {
-        return link.clone();
-    }
-    Link {
-        proof: Proof::Assumed,
-        words: format!(
-            "show the calculation of the {}: it is said to be calculated, but not in this pack",
-            link.link
-        ),
-        ..link.clone()
-    }
-}
-
 /// Hold points: those given, one for every link that is assumed, one for every junction that is
-/// counted on but not seen.
+/// counted on but not seen, one for every floor edge without straps that were seen, one for the class.
 pub fn holds(b: &Building) -> Vec<Hold> {
+    let floors = links::floors(b);
     let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
-    let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
-        let words = l.words.trim_end_matches('.');
-        let begins = words.to_lowercase().starts_with("before the wall comes down");
-        let text = if begins {
-            format!("{words}.")
-        } else {
-            format!("Before the wall comes down ({}): {words}.", l.link)
-        };
-        (text, l.of, None)
+    let assumed = links::links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
+        let text = links::hold_text(&l);
+        // A floor edge stands in the way of everything behind it, not of its panel alone.
+        let of = floors.iter().find(|f| f.0 == text).map_or(l.of, |f| f.1.clone());
+        (text, of, None)
     });
     let told = |mark: &str| {
         b.links.iter().any(|l| {
@@ -144,9 +82,16 @@ pub fn holds(b: &Building) -> Vec<Hold> {
         );
         (text, vec![r.mark.clone()], None)
     });
-    given
-        .chain(assumed)
-        .chain(junctions)
+    let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None));
+    let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None));
+    let mut all: Vec<(String, Vec<String>, Option<String>)> = Vec::new();
+    for hold in given.chain(assumed).chain(junctions).chain(floor).chain(class) {
+        // A link and the floor edge that it is about may ask for the same.
+        if !all.contains(&hold) {
+            all.push(hold);
+        }
+    }
+    all.into_iter()
         .enumerate()
         .map(|(n, (text, of, closed))| Hold { mark: format!("H{}", n + 1), text, of, closed })
         .collect()
@@ -161,12 +106,11 @@ pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>) {
     }
 }
 
-/// The outcome of one sheet; hold points that concern `mark` or the whole job make it conditional.
+/// The outcome of one sheet; hold points that concern `mark` or the whole job make it conditional. A sheet of
+/// several things has their marks with commas between.
 pub fn of_sheet(sheet: &Sheet, mark: &str, holds: &[Hold]) -> Outcome {
-    let open = holds
-        .iter()
-        .filter(|h| h.closed.is_none() && (h.of.is_empty() || h.of.iter().any(|m| m == mark)))
-        .count();
+    let concerns = |h: &Hold| h.of.is_empty() || h.of.iter().any(|m| mark.split(", ").any(|own| own == m));
+    let open = holds.iter().filter(|h| h.closed.is_none() && concerns(h)).count();
     judge(sheet.verdicts.iter().all(|v| v.holds), sheet.outside.is_empty(), open)
 }
 

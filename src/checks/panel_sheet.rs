@@ -36,7 +36,7 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
 }
 
 /// The model of a panel, strengths derived silently: they stand on the materials sheet.
-fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
+pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
     let b = job.building;
     let wind = job.wind.clone()?;
     let missing = || Outside::new("build-up", "job file", "the build-up is not given");

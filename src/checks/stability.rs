@@ -34,6 +34,10 @@ pub struct Share {
 pub struct Storey {
     /// Characteristic wind force at the head of the storey.
     pub F_k: Force,
+    /// Tilt of the storey as a design force.
+    pub H_s: Force,
+    /// Length of the wind face.
+    pub L_f: Length,
     /// Shares, in the order of the job.
     pub shares: Vec<Share>,
     /// Dead load of the level, for the tilt.
@@ -102,7 +106,7 @@ pub fn share(
         .collect();
     s.table(|| table(st, &list, F_Ed + H_s));
     note(s, st);
-    Ok(Storey { F_k, shares: list, dead: st.dead, imposed: st.imposed })
+    Ok(Storey { F_k, H_s, L_f, shares: list, dead: st.dead, imposed: st.imposed })
 }
 
 fn note(s: &mut Sheet, st: &Stability) {

@@ -24,8 +24,9 @@ pub fn link(t: &Table<'_>, names: &[&str]) -> Option<Link> {
     Some(Link { link: link?, proof: proof?, words: words?, of: of? })
 }
 
-/// Holds the links against each other: one proof for one thing, and no link without a word.
-pub fn chain(reader: &Reader, tables: &[Table<'_>], links: &[Option<Link>]) {
+/// Holds the links against each other: one proof for one thing, and no link without a word. Floor edge and
+/// diaphragm speak for themselves where `told` says that they have tables of their own.
+pub fn chain(reader: &Reader, tables: &[Table<'_>], links: &[Option<Link>], told: (bool, bool)) {
     let given: Vec<_> = tables.iter().zip(links).filter_map(|(t, l)| Some((t, l.as_ref()?))).collect();
     for (i, (t, link)) in given.iter().enumerate() {
         let same = |other: &Link| {
@@ -40,8 +41,12 @@ pub fn chain(reader: &Reader, tables: &[Table<'_>], links: &[Option<Link>]) {
                 .help("take one out, or say with `for` which marks each is about");
         }
     }
-    let silent: Vec<&str> =
-        LINKS.iter().copied().filter(|word| !given.iter().any(|(_, link)| link.link == *word)).collect();
+    let told = |word: &str| (word == "floor edge" && told.0) || (word == "diaphragm" && told.1);
+    let silent: Vec<&str> = LINKS
+        .iter()
+        .copied()
+        .filter(|word| !told(word) && !given.iter().any(|(_, link)| link.link == *word))
+        .collect();
     if !silent.is_empty() && given.len() == tables.len() {
         reader.warn(format!("links: nothing is said about {}", silent.join(", ")));
     }
@@ -69,7 +74,8 @@ pub fn photograph(t: &Table<'_>, names: &[&str]) -> Option<Photograph> {
     let file = t.need("file").line().filter(|path| beside(t, path));
     let caption = t.need("caption").line();
     let entry = t.may("mark");
-    let mark = entry.line().filter(|mark| known(&entry, mark, "return, panel or bracing wall", names));
+    let mark =
+        entry.line().filter(|mark| known(&entry, mark, "return, panel, floor edge or bracing wall", names));
     t.finish();
     Some(Photograph { file: file?, caption: caption?, mark })
 }

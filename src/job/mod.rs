@@ -7,7 +7,7 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis materials ground returns bearing panels closing`: the parts, in the file's order
+//! * `identity basis materials ground returns bearing panels floors closing`: the parts, in the file's order
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -16,6 +16,7 @@ mod closing;
 mod date;
 mod entry;
 mod figure;
+mod floors;
 mod ground;
 mod identity;
 mod limits;
@@ -144,10 +145,32 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     };
     something_to_check(root, !floors.is_empty());
 
-    let marks: Vec<&str> = returns.list().into_iter().chain(panels.list()).chain(bracing.list()).collect();
+    let floor_edges =
+        Names::marked("floor edge", root.may("floor_edges").tables("floor edge", "mark"), |t| {
+            floors::edge(t, &panels, &storeys, stability_table.as_ref().zip(stability.as_ref()))
+        });
+    for edge in floor_edges.iter() {
+        returns.refuse_twice(reader, &edge.name, &edge.place);
+        panels.refuse_twice(reader, &edge.name, &edge.place);
+    }
+    floors::one_each(&floor_edges);
+    let diaphragm_table = root.may("diaphragm").table("diaphragm");
+    let diaphragm = diaphragm_table
+        .as_ref()
+        .and_then(|t| floors::diaphragm(t, &storeys, stability_table.as_ref(), stability.as_ref(), &bracing));
+    let collapse = root.may("collapse").table("collapse").and_then(|t| floors::collapse(&t));
+
+    let marks: Vec<&str> = returns
+        .list()
+        .into_iter()
+        .chain(panels.list())
+        .chain(floor_edges.list())
+        .chain(bracing.list())
+        .collect();
     let link_tables = root.need("links").tables("link", "link");
     let links: Vec<_> = link_tables.iter().map(|t| closing::link(t, &marks)).collect();
-    closing::chain(reader, &link_tables, &links);
+    closing::chain(reader, &link_tables, &links, (!floor_edges.is_empty(), diaphragm_table.is_some()));
+    floors::against_links(&floor_edges, &link_tables, &links);
     let assumptions = all(&root.may("assumptions").tables("assumption", ""), closing::assumption);
     let hold_points =
         all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
@@ -195,6 +218,9 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         stability: stability.map(|s| crate::building::Stability { walls: bracing, ..s }),
         returns: returns.into_items()?,
         panels: panels.into_items()?,
+        floor_edges: floor_edges.into_items()?,
+        diaphragm,
+        collapse,
         links: links.into_iter().collect::<Option<_>>()?,
         assumptions: assumptions?,
         hold_points: hold_points?,

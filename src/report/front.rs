@@ -133,6 +133,7 @@ fn stability(b: &Building) -> Vec<String> {
             }
         });
     }
+    out.push(collapse(b));
     for r in &b.returns {
         let path = match r.path {
             Path::Sideways => "the wall spans sideways onto it",
@@ -149,6 +150,18 @@ fn stability(b: &Building) -> Vec<String> {
         out.push(format!("{}: {path}; {head}", r.mark));
     }
     out
+}
+
+/// The class for disproportionate collapse, as stated or not.
+fn collapse(b: &Building) -> String {
+    match &b.collapse {
+        Some(c) => format!(
+            "Disproportionate collapse (Approved Document A, A3): class {}, {}",
+            c.class.word(),
+            lower(&c.reason)
+        ),
+        None => "Disproportionate collapse (Approved Document A, A3): class not stated".to_owned(),
+    }
 }
 
 fn responsible(b: &Building) -> Vec<String> {

@@ -143,7 +143,8 @@ fn section(s: &Section, results: &Results) -> data::Section {
         outcome: (judged || plain_failure)
             .then(|| data::SectionOutcome { kind: kind(outcome), words: outcome.words() }),
         blocks: blocks::of_section(s),
-        new_page: judged,
+        // Returns and panels begin a sheet of their own; floors go on below.
+        new_page: judged && s.id == s.mark,
     }
 }
 

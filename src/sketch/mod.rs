@@ -13,6 +13,7 @@
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
 pub mod board;
+pub mod chain;
 pub mod dimension;
 pub mod drawing;
 pub mod ground;
@@ -44,6 +45,7 @@ pub(crate) mod tests;
 pub mod text;
 pub mod view;
 
+pub use chain::{Branch, Chain, ChainLink, Known, chain};
 pub use drawing::{Drawing, Item};
 pub use key_plan::{KeyPlan, PlanMark, PlanSpan, PlanWind, key_plan};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};

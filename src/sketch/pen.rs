@@ -14,6 +14,8 @@ pub enum Pen {
     Removed,
     /// Dimension and extension lines, 0.18 mm.
     Dimension,
+    /// A link that is not known to be there, 0.7 mm dashed: heavier than what is.
+    Open,
     /// Hatching of cut material and of supported edges, 0.13 mm.
     Hatch,
     /// Shafts of actions, 0.35 mm.
@@ -32,6 +34,7 @@ impl Pen {
     /// Line width, mm (ISO 128-2 series; which width for which line is common practice).
     pub const fn width(self) -> f64 {
         match self {
+            Pen::Open => 0.7,
             Pen::Cut | Pen::Support => 0.5,
             Pen::Outline | Pen::Removed | Pen::Load | Pen::Diagram => 0.35,
             Pen::Beyond | Pen::Dimension | Pen::Axis | Pen::Leader => 0.18,

@@ -163,6 +163,26 @@ prop_compose! {
     }
 }
 
+prop_compose! {
+    fn any_chain()(
+        rows in proptest::collection::vec(proptest::collection::vec((0..4_usize, any::<bool>(), 0..4_usize), 1..7), 1..9),
+    ) -> Chain {
+        const NAMES: [&str; 8] = ["wind face", "panel", "floor edge", "diaphragm", "bracing wall", "junction", "dpc", "footing"];
+        const KNOWN: [Known; 4] = [Known::Calculated, Known::Rule, Known::Seen, Known::Assumed];
+        const OF: [&str; 4] = ["", "R1", "NIB-NORTH-12, R2", "R1, R2, R3, party wall, flank wall of the house"];
+        let branch = |(known, beside, of): (usize, bool, usize)| Branch {
+            of: OF[of].into(),
+            known: KNOWN[known],
+            beside: if beside { "sheets R1, R2, NIB-NORTH-12".into() } else { String::new() },
+        };
+        Chain {
+            links: rows.into_iter().zip(NAMES).map(|(row, name)| ChainLink {
+                name: name.into(), branches: row.into_iter().map(branch).collect(),
+            }).collect(),
+        }
+    }
+}
+
 proptest! {
     #![proptest_config(ProptestConfig { cases: 48, failure_persistence: None, ..ProptestConfig::default() })]
 
@@ -252,6 +272,19 @@ proptest! {
         let drawing = panel_section(&view, FRAME);
         sound(&drawing);
         prop_assert!(has_length(&drawing, Pen::Dimension, height));
+    }
+
+    #[test]
+    fn any_chain_is_sound(view in any_chain()) {
+        let drawing = chain(&view);
+        sound(&drawing);
+        // Every link is named, every branch is told by its proof, and none in the key alone.
+        let texts: Vec<String> = drawing.labels().map(|l| l.plain()).collect();
+        prop_assert!(view.links.iter().all(|l| texts.contains(&l.name)));
+        let assumed = view.links.iter().flat_map(|l| &l.branches).any(|b| b.known == Known::Assumed);
+        let heavy = drawing.strokes(Pen::Open).count();
+        prop_assert_eq!(heavy > 2, assumed);
+        prop_assert!(drawing.width <= 160.0, "{}", drawing.width);
     }
 
     #[test]

@@ -273,3 +273,23 @@ pub fn stability() -> StabilityPlan {
         wind: PlanWind::Upwards,
     }
 }
+
+pub fn links() -> Chain {
+    let branch = |of: &str, known, beside: &str| Branch { of: of.into(), known, beside: beside.into() };
+    let link = |name: &str, branches| ChainLink { name: name.into(), branches };
+    Chain {
+        links: vec![
+            link("wind face", vec![branch("", Known::Calculated, "wind sheet")]),
+            link("panel", vec![branch("", Known::Calculated, "sheets P1, P2")]),
+            link("floor edge", vec![branch("E1, P1, P2", Known::Assumed, "hold point H3")]),
+            link("diaphragm", vec![branch("", Known::Rule, "")]),
+            link("bracing wall", vec![branch("", Known::Rule, "")]),
+            link(
+                "junction",
+                vec![branch("R1", Known::Assumed, "hold point H4"), branch("R2", Known::Seen, "")],
+            ),
+            link("dpc", vec![branch("R1", Known::Calculated, "sheet R1"), branch("R2", Known::Seen, "")]),
+            link("footing", vec![branch("", Known::Assumed, "hold point H5")]),
+        ],
+    }
+}

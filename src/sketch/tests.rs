@@ -98,6 +98,7 @@ fn hand_cases_are_sound() {
         key_plan(&plan(), FRAME),
         load_stack(&stack(), FRAME),
         stability_plan(&stability(), FRAME),
+        chain(&links()),
     ];
     let [before, after] = panels();
     drawings.extend(panel_pair(&before, &after, Frame::new(165.0, 110.0)));

@@ -3,6 +3,9 @@
 
 mod arya_design_of_structural_elements;
 mod flanged_sections;
+pub mod hand_diaphragm;
+pub mod hand_floor_edge;
+mod hand_frame;
 mod hand_panel;
 mod hand_return;
 mod hand_slenderness;

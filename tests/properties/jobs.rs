@@ -6,7 +6,7 @@ use proptest::prelude::*;
 use crate::jobs::demos;
 
 /// Choices that a job may turn to another word.
-const CHOICES: [(&str, &[&str]); 10] = [
+const CHOICES: [(&str, &[&str]); 14] = [
     ("path = ", &["sideways", "up and down", "both"]),
     ("base = \"", &["dpc"]),
     ("mortar = ", &["M12", "M6", "M4", "M2", "lime"]),
@@ -16,6 +16,10 @@ const CHOICES: [(&str, &[&str]); 10] = [
     ("stands = ", &["before and after", "before", "after"]),
     ("sharing = ", &["strength", "stiffness"]),
     ("proof = \"seen", &["seen", "assumed"]),
+    ("joists = ", &["into the wall", "along the wall"]),
+    ("straps = ", &["none", "seen", "to be fitted"]),
+    ("proof = \"shear", &["by rule", "shear flow"]),
+    ("class = \"", &["1", "2A"]),
     ("unit = ", &["clay brick", "concrete brick", "aggregate block", "aac block"]),
 ];
 

@@ -3,6 +3,7 @@
 mod choices;
 mod continuity;
 mod flange;
+mod floors;
 mod jobs;
 mod loads;
 mod outcome;

@@ -285,9 +285,15 @@ pub fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
     given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
     given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
     given!(s, "height of the structure, in m in the next line", "job file", h_tot);
-    calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
+    let nu = radians(s, h_tot);
     given!(s, "pressing factor on dead load", "EN 1990 NA.A1.2(B)", gamma_Gp = Num::new(annex.gamma_G_sup));
     given!(s, "pressing factor on imposed load", "EN 1990 NA.A1.2(B)", gamma_Qp = Num::new(annex.gamma_Q));
     calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (gamma_Gp * G_nu + gamma_Qp * Q_nu));
     H_nu
+}
+
+/// The tilt of a structure of height `h_tot`, which stands on the sheet: 5.3(2).
+pub fn radians(s: &mut Sheet, h_tot: Length) -> Num {
+    calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
+    nu
 }

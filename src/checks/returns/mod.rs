@@ -1,15 +1,16 @@
 //! A return: a short length of wall that takes wind in its plane.
 //!
 //! * [`build`]: geometry and loads of one return, on the sheet; [`lateral`]: how the wind reaches it
-//! * [`check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
+//! * [`mod@check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
-//! * [`remedy`]: what would make it pass
+//! * [`remedy`]: what would make it pass; [`frame`]: what a steel frame in its place would have to do
 
 pub mod actions;
 pub mod build;
 pub mod check;
 pub mod flexure;
+pub mod frame;
 pub mod in_plane;
 pub mod lateral;
 pub mod matrix;
@@ -90,6 +91,8 @@ pub fn check(s: &mut Sheet, i: &Inputs<'_>) -> Checked {
         s.heading(1, "What would make it pass");
         s.table(|| remedy::table(i));
         other_paths(s, i);
+        let models: Vec<&Model> = out.iter().map(|(m, _)| m).collect();
+        frame::demands(s, i, &models);
     }
     Checked { models: out }
 }
@@ -143,9 +146,8 @@ fn held_by(s: &mut Sheet, i: &Inputs<'_>) {
 fn other_paths(s: &mut Sheet, i: &Inputs<'_>) {
     let r = i.ret;
     s.note(
-        "Another load path may carry what this return cannot: the floor as a diaphragm, strapped to the wall at \
-         2 m or closer, bringing the wind to longer walls; a flange, where the junction is shown to be bonded; \
-         or a frame.",
+        "Another load path may carry what this return cannot: the floor as a diaphragm, its edge strapped to the wall, \
+         bringing the wind to longer walls; a flange, where the junction is shown to be bonded; or a frame.",
     );
     if matches!(r.head, Head::Free) {
         s.note("A short nib alone seldom works as a cantilever: its head held by named walls changes the answer.");

@@ -10,7 +10,7 @@ use crate::checks::Job;
 use crate::checks::returns::{self, build::Inputs, check::Check};
 use crate::checks::stability::{Share, Storey};
 use crate::checks::wind::Pressures;
-use crate::quantity::{Length, LineLoad, Num};
+use crate::quantity::{Force, Length, LineLoad, Num};
 use crate::solve::descent::Pier;
 use crate::trace::Sheet;
 
@@ -111,6 +111,8 @@ fn worked(
     let r = as_return(alone, leaf, i, pier, level, share);
     let storey = Storey {
         F_k: level.F_above,
+        H_s: Force::ZERO,
+        L_f: level.front,
         shares: vec![Share {
             mark: r.mark.clone(),
             before: None,
@@ -144,7 +146,7 @@ fn as_return(b: &Building, leaf: &State, i: usize, pier: &Pier, level: &Level, s
     };
     let leaf_number = b.build_up(&wall.build_up).map_or(0, |u| u.loaded().0);
     let load = |k: usize, what: &str| {
-        let of = |j: usize| crate::quantity::Force::new(if j == k { pier.head[j] } else { 0.0 });
+        let of = |j: usize| Force::new(if j == k { pier.head[j] } else { 0.0 });
         Load {
             what: what.to_owned(),
             dead: of(0),

@@ -178,6 +178,26 @@ fn odd_values_are_warnings() {
             "thickness = \"200 mm\"\nleft = \"1.8 m\"",
             "return R1, junction: thickness is 200.0 mm, but the loaded leaf of \"outer cavity wall\" is 100.0 mm",
         ),
+        (
+            "spacing = \"1.0 m\"",
+            "spacing = \"2.4 m\"",
+            "floor edge E1: spacing is 2.4 m, over 2 m: more than Approved Document A, 2C, has for straps",
+        ),
+        (
+            "strip_height = \"2.65 m\"\njoists",
+            "strip_height = \"2.4 m\"\njoists",
+            "floor edge E1: the floor collects a strip of 2.40 m here, but 2.65 m under [stability]",
+        ),
+        (
+            "span = \"6.2 m\"",
+            "span = \"3.2 m\"",
+            "diaphragm: the span is 3.20 m, but two neighbouring bracing walls stand 6.40 m apart after the removal",
+        ),
+        (
+            "value = \"5.0 kN/m\"",
+            "value = \"50 kN/m\"",
+            "diaphragm, `resistance`: value is 50 kN/m, over 8 kN/m: ",
+        ),
         ("[[links]]\nlink = \"dpc\"\nproof = \"calculated\"\n", "", "links: nothing is said about dpc"),
         (
             "right = { edge = \"simple\", reason = \"Nib R1",

@@ -76,8 +76,24 @@ pub fn gamma_m(action: Action, category: Category, class: ExecutionClass) -> Loo
 
 /// Wall ties in existing and new walls; 3.5 has also been seen in print. From memory (L).
 pub const WALL_TIES: f64 = 3.0;
-/// Straps that carry little stress. From memory (M).
+/// Straps in masonry that is pressed by less than [`STRAP_STRESS`]. From memory (L).
 pub const STRAPS_LOW_STRESS: f64 = 3.0;
+/// Design compressive stress in the masonry, N/mm2, from which the factor of straps is that of the table;
+/// below it the note to the table asks for [`STRAPS_LOW_STRESS`]. From memory (L).
+pub const STRAP_STRESS: f64 = 0.4;
+
+/// Partial factor of a horizontal restraint strap, no unit, by the design compressive stress in the masonry
+/// that holds it, N/mm2.
+///
+/// UK National Annex, Table NA.1 with its note on restraint straps. From memory (L): the higher factor
+/// counts wherever the stress is not shown.
+pub fn strap(stress: f64) -> Looked<f64> {
+    let pressed = stress >= STRAP_STRESS;
+    let value = if pressed { 1.5 } else { STRAPS_LOW_STRESS };
+    Looked::new(value, TABLE, Source::memory(Confidence::Low))
+        .row("for", Action::Straps)
+        .row("masonry pressed", if pressed { "by 0.4 N/mm² or more" } else { "by less than 0.4 N/mm²" })
+}
 
 #[cfg(test)]
 mod tests {
@@ -90,6 +106,16 @@ mod tests {
         assert_eq!(of(Action::Compression), 3.0);
         assert_eq!(of(Action::Flexure), 2.7);
         assert_eq!(of(Action::Shear), 2.5);
+    }
+
+    /// The factor of the table counts from the stress on; below it, and where the stress is unknown, the higher.
+    #[test]
+    fn straps_need_pressed_masonry() {
+        let table = gamma_m(Action::Straps, Category::Two, ExecutionClass::Two).value;
+        assert_eq!(strap(STRAP_STRESS).value, table);
+        assert_eq!(strap(STRAP_STRESS.next_down()).value, STRAPS_LOW_STRESS);
+        assert_eq!(strap(f64::NAN).value, STRAPS_LOW_STRESS);
+        assert!(STRAPS_LOW_STRESS > table);
     }
 
     #[test]
