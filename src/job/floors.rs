@@ -159,6 +159,7 @@ pub fn diaphragm<'a>(
     stability_table: Option<&Table<'a>>,
     stability: Option<&Stability>,
     bracing: &Names<'a, BracingWall>,
+    led: bool,
 ) -> Option<Diaphragm> {
     let storey = storeys.refer(&t.need("storey"));
     let span: Option<Length> = t.need("span").quantity(&SPAN);
@@ -179,14 +180,15 @@ pub fn diaphragm<'a>(
     };
     t.finish();
 
-    let Some(table) = stability_table else {
+    // With floors on the plan the storey's wind comes from it.
+    if stability_table.is_none() && !led {
         t.fault(Kind::Missing, "the wind on the floor comes from [stability], which is not there")
             .at(t.head(), "has no storey's wind")
-            .allowed("[diaphragm] with [stability] and [[bracing]]")
+            .allowed("[diaphragm] with [stability] and [[bracing]], or with floors on the plan")
             .help("add [stability] and [[bracing]], or take [diaphragm] out");
         return None;
-    };
-    if let (Some(name), Some(st)) = (&storey, stability) {
+    }
+    if let (Some(name), Some(st), Some(table)) = (&storey, stability, stability_table) {
         if *name != st.storey {
             t.fault(Kind::Contradiction, "the floor is that of another storey than the one judged")
                 .at(t.place("storey"), "the floor's storey")

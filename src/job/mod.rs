@@ -155,9 +155,16 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     }
     floors::one_each(&floor_edges);
     let diaphragm_table = root.may("diaphragm").table("diaphragm");
-    let diaphragm = diaphragm_table
-        .as_ref()
-        .and_then(|t| floors::diaphragm(t, &storeys, stability_table.as_ref(), stability.as_ref(), &bracing));
+    let diaphragm = diaphragm_table.as_ref().and_then(|t| {
+        floors::diaphragm(
+            t,
+            &storeys,
+            stability_table.as_ref(),
+            stability.as_ref(),
+            &bracing,
+            !floors.is_empty(),
+        )
+    });
     let collapse = root.may("collapse").table("collapse").and_then(|t| floors::collapse(&t));
 
     let marks: Vec<&str> = returns
