@@ -12,8 +12,8 @@ pub use parts::{
     Storey, Strength, TerrainWind, UnitStrength, Wind,
 };
 pub use things::{
-    Arching, Assumption, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Panel,
-    Photograph, Removed, Return, Span, Stability,
+    Arching, Assumption, Bearing, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Padstone,
+    Panel, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
@@ -49,6 +49,10 @@ pub struct Building {
     pub stability: Option<Stability>,
     /// What stays and braces.
     pub returns: Vec<Return>,
+    /// Where beams bear on returns.
+    pub bearings: Vec<Bearing>,
+    /// Padstones to choose from.
+    pub padstones: Vec<Padstone>,
     /// Outer walls between supports.
     pub panels: Vec<Panel>,
     /// The chain from the wind face to the ground.

@@ -1,6 +1,7 @@
 //! What is verified, in sheet order. A new check is one new file and one line in [`LIST`]; its place
 //! in the list is its place in the pack.
 
+pub mod bearings;
 pub mod chain;
 pub mod loads;
 pub mod masonry;
@@ -12,6 +13,8 @@ pub mod returns;
 pub mod stability;
 pub mod wind;
 
+mod bearing_sheet;
+mod bearing_views;
 mod panel_sheet;
 mod panel_views;
 mod place;
@@ -94,6 +97,7 @@ pub const LIST: &[Check] = &[
     materials::sections,
     stability::sections,
     return_sheet::sections,
+    bearing_sheet::sections,
     panel_sheet::sections,
     chain::sections,
 ];

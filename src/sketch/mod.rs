@@ -12,6 +12,8 @@
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
+pub mod bearing_elevation;
+pub mod bearing_section;
 pub mod board;
 pub mod dimension;
 pub mod drawing;
@@ -43,6 +45,8 @@ pub(crate) mod tests;
 pub mod text;
 pub mod view;
 
+pub use bearing_elevation::{BearingElevation, Stone, bearing_elevation};
+pub use bearing_section::{BearingSection, bearing_section};
 pub use drawing::{Drawing, Item};
 pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
