@@ -12,8 +12,8 @@ pub use parts::{
     Storey, Strength, TerrainWind, UnitStrength, Wind,
 };
 pub use things::{
-    Arching, Assumption, Bearing, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Padstone,
-    Panel, Photograph, Removed, Return, Span, Stability,
+    Arching, Assumption, Bearing, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load,
+    Padstone, Panel, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,

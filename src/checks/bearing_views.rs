@@ -58,8 +58,7 @@ pub fn drawings(b: &Building, c: &Checked<'_>) -> Vec<Drawing> {
         eccentricity: e.base(),
         force,
     };
-    let mut out =
-        vec![bearing_elevation(&elevation, ELEVATION), bearing_section(&section, SECTION)];
+    let mut out = vec![bearing_elevation(&elevation, ELEVATION), bearing_section(&section, SECTION)];
     for (drawing, kind) in out.iter_mut().zip(["elevation", "section"]) {
         drawing.name = format!("{}-{kind}", bearing.mark);
     }

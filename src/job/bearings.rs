@@ -121,7 +121,8 @@ fn find<'r>(t: &Table<'_>, r: &'r Return, called: &str) -> Option<&'r Load> {
 
 /// The bearing is centred on the load and must not hang over an end of the return.
 fn on_the_wall(t: &Table<'_>, seen: &Seen<'_, Return>, r: &Return, load: &Load, length: Option<Length>) {
-    let Some(length) = length else { return };
+    // A load beyond the end has its own diagnostic.
+    let Some(length) = length.filter(|_| load.at <= r.length) else { return };
     let (from, to) = (load.at - length / 2.0, load.at + length / 2.0);
     let end = if from < -HAIR {
         "the junction end"
@@ -142,7 +143,9 @@ fn on_the_wall(t: &Table<'_>, seen: &Seen<'_, Return>, r: &Return, load: &Load, 
         )
         .and(seen.table.place("length"), "length of the return")
         .allowed("a bearing that stays between 0 mm at the junction end and the length of the return")
-        .help("correct the bearing length, or the place `at` of the load: its middle is the bearing's middle");
+        .help(
+            "correct the bearing length, or the place `at` of the load: its middle is the bearing's middle",
+        );
 }
 
 fn in_the_leaf(
@@ -157,10 +160,7 @@ fn in_the_leaf(
     if width > leaf.thickness + HAIR {
         t.fault(Kind::Contradiction, "the bearing is wider than the leaf that it stands on")
             .at(t.place("bearing_width"), "across the wall")
-            .and(
-                seen.table.place("build_up"),
-                format!("that leaf is {:.1} mm thick", leaf.thickness.base()),
-            )
+            .and(seen.table.place("build_up"), format!("that leaf is {:.1} mm thick", leaf.thickness.base()))
             .allowed("at most the thickness of the leaf")
             .help("give what bears on this leaf; a beam on two leaves is two bearings");
     }

@@ -99,13 +99,17 @@ fn draw(view: &BearingElevation, scale: Scale) -> Drawing {
     beam(&mut board, view, ruler);
     // Mid-height, along which the spread is measured.
     board.line(Pen::Axis, ruler.by(0.0, low, -3.0, 0.0), ruler.by(view.length, low, 3.0, 0.0));
-    let at = ruler.at((x0 + x1) / 2.0, h_c * 0.62);
-    let note = Note::new(Role::Note, at, Text::plain("60°"));
-    let note = [0.66, 0.74, 0.82, 0.9].iter().fold(note, |note, share| {
-        let run = (1.0 - share) * h_c / drop;
-        note.spot(Spot::new(ruler.at((x0 - run).max(0.0) + 40.0, share * h_c), 1.0, 0.0))
-            .spot(Spot::new(ruler.at((x1 + run).min(view.length) - 40.0, share * h_c), -1.0, 0.0))
-    });
+    let at = ruler.at(view.place, h_c * 0.8);
+    let mut note = Note::new(Role::Note, at, Text::plain("60°"));
+    // Beside the longer of the two slopes, or in the middle of the grey.
+    for share in [0.5, 0.7, 0.3] {
+        let beside = |x: f64, room: f64, sign: f64| {
+            let run = room.min(low / drop) * share;
+            Spot::new(ruler.by(x - sign * run, h_c - run * drop, sign * 2.0, -1.0), sign, 1.0)
+        };
+        let (left, right) = (beside(x0, x0, 1.0), beside(x1, view.length - x1, -1.0));
+        note = if x0 >= view.length - x1 { note.spot(left).spot(right) } else { note.spot(right).spot(left) };
+    }
     board.note(note.spot(Spot::new(at, 0.0, 0.0).cost(0.5)));
     let middle = ruler.at(view.length / 2.0, low);
     let mut note = Note::new(Role::Mark, middle, Text::mark(&view.on));
@@ -172,7 +176,8 @@ fn beam(board: &mut Board, view: &BearingElevation, ruler: Ruler) {
         Point::new(area.x1, area.y0 - 1.2),
         Point::new(area.x1, area.y1 + 1.2),
     );
-    let seat = Rect::from_points(ruler.at(start, view.level), ruler.by(view.place + half, view.level, 0.0, lift));
+    let seat =
+        Rect::from_points(ruler.at(start, view.level), ruler.by(view.place + half, view.level, 0.0, lift));
     board.fill(Ink::Arrow, polygon(&corners(seat)));
     board.note(
         Note::new(Role::Mark, Point::new(area.x1 - 4.0, area.center().y), Text::mark(&view.beam))
@@ -198,7 +203,7 @@ fn dimensions(board: &mut Board, view: &BearingElevation, ruler: Ruler, foot: f6
     let row = |n: f64| foot + 4.0 + n * (ROW + 1.0);
     let start = foot + 1.5;
     let length = |symbol: &str, full: f64| Text::value(symbol, &mm(full));
-    dimension::across(board, (x(from), x(to)), row(1.0), start, length("l_efm", to - from));
+    dimension::across(board, (x(from), x(to)), row(2.2), start, length("l_efm", to - from));
     // The nearer end with a_1, the bearing or padstone, and the rest.
     let (a, b) = match &view.stone {
         Some(s) => (s.place - s.length / 2.0, s.place + s.length / 2.0),
@@ -208,12 +213,16 @@ fn dimensions(board: &mut Board, view: &BearingElevation, ruler: Ruler, foot: f6
     let name = |nearer: bool, full: f64| {
         if nearer { length("a_1", full) } else { Text::plain(&mm(full)) }
     };
-    let all = [(0.0, a, name(!at_free, a)), (a, b, Text::plain(&mm(b - a))), (b, view.length, name(at_free, view.length - b))];
+    let all = [
+        (0.0, a, name(!at_free, a)),
+        (a, b, Text::plain(&mm(b - a))),
+        (b, view.length, name(at_free, view.length - b)),
+    ];
     let pieces: Vec<&(f64, f64, Text)> = all.iter().filter(|(from, to, _)| to - from > 0.05).collect();
     let mut xs = vec![x(pieces[0].0)];
     xs.extend(pieces.iter().map(|p| x(p.1)));
     let texts: Vec<Text> = pieces.iter().map(|p| p.2.clone()).collect();
-    dimension::chain_across(board, &xs, row(2.2), start, &texts);
+    dimension::chain_across(board, &xs, row(1.0), start, &texts);
     let right = x(view.length);
     let end = x(view.length + BEAM.1);
     let ys = (ruler.at(0.0, low).y, ruler.at(0.0, view.seat()).y);
@@ -255,7 +264,7 @@ fn alt(view: &BearingElevation) -> String {
     };
     alt + &format!(
         "From the junction end to it {} mm, it is {} mm long, to the free end {} mm; a1 = {} mm. The masonry below is \
-         {} mm high; at half of that, {} mm down, the load spread at 60° stands on lefm = {} mm. Design load {}.",
+         {} mm high; hc/2 = {} mm down the load spread at 60° stands on lefm = {} mm. Design load {}.",
         mm(a),
         mm(b - a),
         mm(view.length - b),

@@ -68,11 +68,15 @@ fn draw(view: &BearingSection, scale: Scale) -> Drawing {
         );
     }
     let e = view.eccentricity;
-    let beam = Rect::from_points(ruler.at(e - view.bearing / 2.0, 0.0), ruler.at(e + view.bearing / 2.0, BEAM));
+    let beam =
+        Rect::from_points(ruler.at(e - view.bearing / 2.0, 0.0), ruler.at(e + view.bearing / 2.0, BEAM));
     board.rect(Pen::Outline, beam);
     board.note(
-        Note::new(Role::Mark, Point::new(beam.x0, beam.center().y), Text::mark(&view.beam))
-            .spot(Spot::new((beam.x0 - 2.0, beam.center().y), -1.0, 0.0)),
+        Note::new(Role::Mark, Point::new(beam.x0, beam.center().y), Text::mark(&view.beam)).spot(Spot::new(
+            (beam.x0 - 2.0, beam.center().y),
+            -1.0,
+            0.0,
+        )),
     );
     let axis = ruler.at(0.0, 0.0).x;
     board.line(Pen::Axis, Point::new(axis, wall.y1 + 2.0), Point::new(axis, beam.y0 - 2.0));

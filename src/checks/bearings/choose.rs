@@ -44,12 +44,7 @@ pub fn uses(site: &Site<'_>, seat: &Seat) -> Uses {
     let mut s = Sheet::silent();
     let left = work::all(&mut s, site, seat).is_err();
     let of = |id: &str| s.verdicts.iter().find(|v| v.id == id).map(|v| v.ratio);
-    Uses {
-        bearing: of("bearing"),
-        padstone: of("padstone"),
-        middle: of("middle"),
-        holds: !left && s.holds(),
-    }
+    Uses { bearing: of("bearing"), padstone: of("padstone"), middle: of("middle"), holds: !left && s.holds() }
 }
 
 /// A padstone that was tried.
@@ -104,8 +99,14 @@ pub fn table(alone: &Uses, tried: &[Tried<'_>], chosen: Option<&Tried<'_>>) -> T
         cell(alone.bearing),
         "–".to_owned(),
         cell(alone.middle),
-        if alone.works() { "enough" } else if alone.bearing.is_none() { "outside the method" } else { "not adequate" }
-            .to_owned(),
+        if alone.works() {
+            "enough"
+        } else if alone.bearing.is_none() {
+            "outside the method"
+        } else {
+            "not adequate"
+        }
+        .to_owned(),
     ];
     let mm = |l: crate::quantity::Length| print::show("l", l.dynamic()).value;
     let row = |t: &Tried<'_>| {

@@ -33,7 +33,12 @@ pub struct Checked<'a> {
 }
 
 /// Checks a bearing on a sheet. The load that presses most decides: imposed load leading.
-pub fn check<'a>(s: &mut Sheet, b: &'a Building, bearing: &'a Bearing, annex: &'a Annex) -> Option<Checked<'a>> {
+pub fn check<'a>(
+    s: &mut Sheet,
+    b: &'a Building,
+    bearing: &'a Bearing,
+    annex: &'a Annex,
+) -> Option<Checked<'a>> {
     s.heading(1, "The load and the wall");
     s.case = Combination::PressingImposed.name().to_owned();
     let site = match site::of(s, b, bearing, annex) {
@@ -85,7 +90,7 @@ fn remarks(s: &mut Sheet, site: &Site<'_>) {
          The moment of the wind in the plane of the return is on its own sheet.",
     );
     s.note(format!(
-        "f_d is the wall's, as on the sheet of {mark}: the reduction for a small plan area (6.1.2.1(3)) goes with the \
+        "The design strength is the wall's, as on the sheet of {mark}: the reduction for a small plan area (6.1.2.1(3)) goes with the \
          plan area of the wall, not with the area loaded, and 6.1.3 does not take it back. It is kept here."
     ));
     s.note(format!(
@@ -115,7 +120,9 @@ fn decision(bearing: &Bearing, b: &Building, alone: &choose::Uses, first: Option
             format!("The job has no list of padstones: {beam} bears directly on the masonry ({alone_words}).")
         }
         (None, false, _) => {
-            format!("By the job file {beam} bears directly on the masonry, without a padstone ({alone_words}).")
+            format!(
+                "By the job file {beam} bears directly on the masonry, without a padstone ({alone_words})."
+            )
         }
     }
 }

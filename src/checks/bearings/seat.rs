@@ -3,7 +3,7 @@
 
 use super::site::Site;
 use crate::building::Padstone;
-use crate::quantity::functions::{MM, abs, max, min};
+use crate::quantity::functions::{abs, max, min};
 use crate::quantity::{Area, Length, Stress};
 use crate::trace::Sheet;
 use crate::{calc, given};
@@ -96,52 +96,32 @@ impl Seat {
     pub fn pressed(&self, s: &mut Sheet, site: &Site<'_>, c_60: crate::quantity::Num) -> Pressed {
         let Beam { x_c, l_b, w_b } = self.beam;
         let (l, t, e_c) = (site.model.l, site.model.t, site.e_c);
-        given!(s, "length of the bearing, along the wall", "job file", l_b);
-        given!(s, "width of the bearing, across", "job file", w_b);
-        given!(s, "level of the bearing above the foot", "job file", h_b = site.bearing.level);
+        given!(s, "bearing, along the wall", "job file", l_b);
+        given!(s, "bearing, across", "job file", w_b);
+        given!(s, "bearing above the foot", "job file", h_b = site.bearing.level);
         let Some(Stone { l_p, w_p, h_p, .. }) = self.stone else {
             calc!(s, "geometry", "length pressed", l_A = l_b);
-            calc!(s, "geometry", "width pressed, centred on the load", w_A = min(w_b, t - 2.0 * e_c));
+            calc!(s, "geometry", "width pressed", w_A = min(w_b, t - 2.0 * e_c));
             calc!(s, "6.1.3(2)", "height of wall below", h_c = h_b);
             calc!(
                 s,
                 "6.1.3(2)",
-                "from the nearer end to the bearing",
-                a_1 = max(min(x_c - l_b / 2.0, l - x_c - l_b / 2.0), 0.0 * MM)
+                "nearer end to bearing",
+                a_1 = max(min(x_c, l - x_c), l_b / 2.0) - l_b / 2.0
             );
             return Pressed { l_A, w_A, a_1, h_c, x_p: None, A_0: None };
         };
-        given!(s, "padstone, length along the wall", "list of padstones", l_p);
-        given!(s, "padstone, width across", "list of padstones", w_p);
+        given!(s, "padstone, along the wall", "list of padstones", l_p);
+        given!(s, "padstone, across", "list of padstones", w_p);
         given!(s, "padstone, height", "list of padstones", h_p);
-        calc!(
-            s,
-            "geometry",
-            "its middle: at the load, or as near as the ends allow",
-            x_p = max(min(x_c, l - l_p / 2.0), l_p / 2.0)
-        );
+        calc!(s, "geometry", "middle of the padstone", x_p = max(min(x_c, l - l_p / 2.0), l_p / 2.0));
         calc!(s, "geometry", "load to its nearer end", s_p = l_p / 2.0 - abs(x_c - x_p));
-        calc!(
-            s,
-            "6.1.3(6)",
-            "length that counts: spread at 60°, centred on the load",
-            l_A = min(l_b + 2.0 * c_60 * h_p, 2.0 * s_p)
-        );
-        calc!(s, "geometry", "load off its middle, across", e_p = max(e_c - (t - w_p) / 2.0, 0.0 * MM));
-        calc!(
-            s,
-            "6.1.3(6)",
-            "width that counts, in the same way",
-            w_A = min(w_b + 2.0 * c_60 * h_p, w_p - 2.0 * e_p)
-        );
-        calc!(s, "geometry", "area of it under the beam", A_0 = l_b * min(w_b, w_p - 2.0 * e_p));
+        calc!(s, "6.1.3(6)", "length that counts", l_A = min(l_b + 2.0 * c_60 * h_p, 2.0 * s_p));
+        calc!(s, "geometry", "load off its middle", e_p = e_c - min(e_c, (t - w_p) / 2.0));
+        calc!(s, "6.1.3(6)", "width that counts", w_A = min(w_b + 2.0 * c_60 * h_p, w_p - 2.0 * e_p));
+        calc!(s, "geometry", "area under the beam", A_0 = l_b * min(w_b, w_p - 2.0 * e_p));
         calc!(s, "6.1.3(2)", "height of wall below", h_c = h_b - h_p);
-        calc!(
-            s,
-            "6.1.3(2)",
-            "from the nearer end to the padstone",
-            a_1 = max(min(x_p - l_p / 2.0, l - x_p - l_p / 2.0), 0.0 * MM)
-        );
+        calc!(s, "6.1.3(2)", "nearer end to padstone", a_1 = max(min(x_p, l - x_p), l_p / 2.0) - l_p / 2.0);
         Pressed { l_A, w_A, a_1, h_c, x_p: Some(x_p), A_0: Some(A_0) }
     }
 }

@@ -60,7 +60,12 @@ pub struct Other {
 ///
 /// # Errors
 /// [`Outside`] where a strength is out of its table or the plan area is too small.
-pub fn of<'a>(s: &mut Sheet, b: &'a Building, bearing: &'a Bearing, annex: &'a Annex) -> Result<Site<'a>, Outside> {
+pub fn of<'a>(
+    s: &mut Sheet,
+    b: &'a Building,
+    bearing: &'a Bearing,
+    annex: &'a Annex,
+) -> Result<Site<'a>, Outside> {
     let missing = || Outside::new("bearing", "job file", "the return or its load is not given");
     let ret = b.returns.iter().find(|r| r.mark == bearing.on).ok_or_else(missing)?;
     let load = ret.loads.iter().find(|l| l.what == bearing.load).ok_or_else(missing)?;
@@ -78,13 +83,13 @@ pub fn of<'a>(s: &mut Sheet, b: &'a Building, bearing: &'a Bearing, annex: &'a A
     given!(s, "factor on dead load", clause, gamma_G = Num::new(factors.gamma_G));
     given!(s, "factor on imposed load", clause, gamma_Q = Num::new(factors.gamma_Q));
     calc!(s, "EN 1990 6.4.3.2 eq. 6.10", "design load", N_Edc = gamma_G * G_c + gamma_Q * Q_c);
-    given!(s, "place from the junction end", &on, x_c = load.at);
+    given!(s, "from the junction end", &on, x_c = load.at);
     given!(s, "eccentricity across the wall", &on, e_c = abs(load.eccentricity));
 
     let from = format!("sheet of {}", ret.mark);
     let (l, t, h) = (m.l, m.t, m.h);
     given!(s, "length of the return", &from, l);
-    given!(s, "actual thickness of the leaf", &from, t);
+    given!(s, "actual thickness", &from, t);
     given!(s, "clear height", &from, h);
     let f_k = m.masonry.f_k;
     given!(s, "characteristic compressive strength", &from, f_k);
@@ -104,5 +109,19 @@ pub fn of<'a>(s: &mut Sheet, b: &'a Building, bearing: &'a Bearing, annex: &'a A
     let material = b.build_up(&ret.build_up).map(|u| &u.leaves[load.leaf].material);
     let group_1 = material.and_then(|name| b.material(name)).is_some_and(|x| x.group == 1);
     let slender = vertical::slenderness(&mut Sheet::silent(), &m, annex, "middle");
-    Ok(Site { bearing, ret, load, model: m, group_1, f_d, N_Edc, e_c, gamma_G, others, slender, stones: &b.padstones, annex })
+    Ok(Site {
+        bearing,
+        ret,
+        load,
+        model: m,
+        group_1,
+        f_d,
+        N_Edc,
+        e_c,
+        gamma_G,
+        others,
+        slender,
+        stones: &b.padstones,
+        annex,
+    })
 }

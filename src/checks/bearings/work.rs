@@ -2,7 +2,7 @@
 
 use super::seat::{Pressed, Seat};
 use super::site::{Other, Site};
-use crate::quantity::functions::{abs, min, max, MM};
+use crate::quantity::functions::{MM, abs, max, min};
 use crate::quantity::{Force, Length, LineLoad, Num, print};
 use crate::standards::en1992;
 use crate::standards::en1996::{concentrated, reduction};
@@ -33,19 +33,21 @@ pub fn all(s: &mut Sheet, site: &Site<'_>, seat: &Seat) -> Result<Found, Outside
     s.heading(1, if stone { "Masonry under the padstone" } else { "Masonry under the beam" });
     if stone {
         s.note(
-            "Rule for the padstone: the load spreads in it at 60° to the horizontal, so the bearing length and twice \
+            "Rule for the padstone: it lies with its middle under the load, or as near as the ends of the return and the \
+             faces of the leaf allow. The load spreads in it at 60° to the horizontal, so the bearing length and twice \
              its height over tan 60° count, at most its own length; of a padstone that cannot be centred under the \
              load only the part centred on the load counts, twice the distance to its nearer end. It is not taken as a \
              spreader beam (6.1.3(7)). It lies on a full bed of mortar; its bending and splitting are not calculated.",
         );
     }
     let given_x = seat.beam.x_c;
-    given!(s, "place from the junction end", "as above", x_c = given_x);
+    given!(s, "from the junction end", "as above", x_c = given_x);
     let c_60 = concentrated::spread(s);
     let p = seat.pressed(s, site, c_60);
     let Pressed { l_A, w_A, a_1, h_c, .. } = p;
     calc!(s, "6.1.3(2)", "area pressed", A_b = l_A * w_A);
-    let (x_J, x_F, l_efm) = concentrated::effective_length(s, l, x_c, l_A, h_c, c_60);
+    let (r_J, r_F, l_efm) = concentrated::effective_length(s, l, x_c, l_A, h_c, c_60);
+    let (x_J, x_F) = (x_c - r_J, x_c + r_F);
     calc!(s, "6.1.3(2)", "effective area", A_ef = l_efm * t);
     let beta = concentrated::enhancement(s, site.group_1, a_1, h_c, A_b, A_ef);
     let N_Rdc = concentrated::resistance(s, beta, A_b, f_d);
@@ -79,6 +81,10 @@ fn middle(
     let slender = site.slender.clone()?;
     let (t, h, f_k, f_d, e_c) = (m.t, m.h, m.masonry.f_k, site.f_d, site.e_c);
     let (N_Edc, gamma_G) = (site.N_Edc, site.gamma_G);
+    s.note(
+        "A length cut at an end of the wall is taken as evenly pressed, as the clause takes it; the load off the \
+         middle of the return is on the sheet of the return.",
+    );
     let others = others(site, h_c, x_J, x_F, c_60);
     let source = if site.others.is_empty() {
         "no other load on this leaf".to_owned()
@@ -90,7 +96,7 @@ fn middle(
     given!(s, "other loads there, per length", &source, n_o = counted().map(|o| o.n).sum::<LineLoad>());
     given!(
         s,
-        "their moment across the wall, per length",
+        "their moment across, per length",
         &source,
         m_o = counted().map(|o| o.n * o.load.e).sum::<Force>()
     );
@@ -104,7 +110,7 @@ fn middle(
     calc!(
         s,
         "6.1.2.2(1)",
-        "eccentricity at the head of this part",
+        "eccentricity of these loads",
         e_h = (N_Edc * e_c + m_o * l_efm) / (N_Edc + n_o * l_efm)
     );
     let Phi_m = reduction::in_middle(s, site.annex, t, slender.t_ef, h_ef, e_init, e_h, f_k);
@@ -138,9 +144,10 @@ fn others<'a>(site: &'a Site<'_>, h_c: Length, x_J: Length, x_F: Length, c_60: N
 fn table(others: &[Spread<'_>]) -> Table {
     let shown = |name: &str, v: crate::quantity::Dyn| print::show(name, v).value;
     Table {
-        caption: "Other loads at mid-height below, design values, each spread at 60° from its place; those whose \
+        caption:
+            "Other loads at mid-height below, design values, each spread at 60° from its place; those whose \
                   spread meets that of the beam count over its whole length"
-            .to_owned(),
+                .to_owned(),
         columns: vec![
             Column::words("load"),
             Column::numbers("N, kN"),

@@ -1,7 +1,7 @@
 //! Concentrated loads: 6.1.3. The clause, its figures and the numbers of its paragraphs are from
 //! memory, check against the standard.
 
-use crate::quantity::functions::{MM, max, min};
+use crate::quantity::functions::{max, min};
 use crate::quantity::{Area, Force, Length, Num, Stress};
 use crate::trace::Sheet;
 use crate::{calc, given};
@@ -25,7 +25,7 @@ pub fn spread(s: &mut Sheet) -> Num {
 /// Length over which a load at `x_c`, spread from a length `l_A`, stands at half the height `h_c`: cut at
 /// both ends of a wall of length `l`. 6.1.3(2), Figure 6.2.
 ///
-/// Yields where it begins, where it ends, and `l_efm`.
+/// Yields its reach from the load to either side, and `l_efm`.
 pub fn effective_length(
     s: &mut Sheet,
     l: Length,
@@ -35,10 +35,10 @@ pub fn effective_length(
     c_60: Num,
 ) -> (Length, Length, Length) {
     let clause = "6.1.3(2) Figure 6.2";
-    calc!(s, clause, "spread at mid-height, from", x_J = max(x_c - l_A / 2.0 - c_60 * h_c / 2.0, 0.0 * MM));
-    calc!(s, clause, "to", x_F = min(x_c + l_A / 2.0 + c_60 * h_c / 2.0, l));
-    calc!(s, clause, "effective length there", l_efm = x_F - x_J);
-    (x_J, x_F, l_efm)
+    calc!(s, clause, "reach to the junction end", r_J = min(l_A / 2.0 + c_60 * h_c / 2.0, x_c));
+    calc!(s, clause, "reach to the free end", r_F = min(l_A / 2.0 + c_60 * h_c / 2.0, l - x_c));
+    calc!(s, clause, "effective length", l_efm = r_J + r_F);
+    (r_J, r_F, l_efm)
 }
 
 /// Enhancement under the load: 6.1.3(2) eq. 6.11; 1.0 for units that are not of Group 1, 6.1.3(3).
@@ -93,7 +93,10 @@ mod tests {
         // Far from the end the limit is 1.5.
         assert!((beta(4000.0, 2000.0, 0.01) - 1.5).abs() < 1e-12);
         let mut s = Sheet::silent();
-        assert_eq!(enhancement(&mut s, false, mm(500.0), mm(2200.0), Area::new(1.0), Area::new(9.0)).base(), 1.0);
+        assert_eq!(
+            enhancement(&mut s, false, mm(500.0), mm(2200.0), Area::new(1.0), Area::new(9.0)).base(),
+            1.0
+        );
     }
 
     #[test]
@@ -105,7 +108,10 @@ mod tests {
                 for i in 0..=60 {
                     let a_1 = f64::from(i) * 50.0;
                     let b = beta(a_1, h_c, ratio);
-                    assert!((1.0..=1.5).contains(&b) && b <= 1.25 + a_1 / (2.0 * h_c) + 1e-12, "{a_1} {h_c} {ratio}");
+                    assert!(
+                        (1.0..=1.5).contains(&b) && b <= 1.25 + a_1 / (2.0 * h_c) + 1e-12,
+                        "{a_1} {h_c} {ratio}"
+                    );
                     assert!(b >= last, "{a_1} {h_c} {ratio}: {b} after {last}");
                     last = b;
                 }
@@ -122,7 +128,7 @@ mod tests {
         let (.., free) = effective_length(&mut s, mm(4000.0), mm(2000.0), mm(100.0), mm(2000.0), c);
         assert!((free.base() - 1254.700_538).abs() < 1e-6);
         let (from, to, cut) = effective_length(&mut s, mm(800.0), mm(400.0), mm(100.0), mm(2000.0), c);
-        assert_eq!((from.base(), to.base(), cut.base()), (0.0, 800.0, 800.0));
+        assert_eq!((from.base(), to.base(), cut.base()), (400.0, 400.0, 800.0));
         let (.., end) = effective_length(&mut s, mm(2000.0), mm(1950.0), mm(100.0), mm(2000.0), c);
         assert!((end.base() - (100.0 + 577.350_269)).abs() < 1e-6);
     }

@@ -1,5 +1,6 @@
 //! Slips of the hand, by sort.
 
+mod bearings;
 mod contradictions;
 mod figures;
 mod form;
@@ -29,5 +30,5 @@ const fn slip(
 
 /// Every slip.
 pub fn all() -> impl Iterator<Item = &'static Slip> {
-    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS].into_iter().flatten()
+    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS, bearings::SLIPS].into_iter().flatten()
 }
