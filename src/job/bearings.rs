@@ -166,17 +166,34 @@ fn in_the_leaf(
     }
 }
 
-/// Holds bearings against each other: a load bears once.
-pub fn together(bearings: &Names<'_, Bearing>) {
+/// Holds bearings against each other: a load bears once, and no two bearings lie on the same masonry.
+pub fn together(bearings: &Names<'_, Bearing>, returns: &Names<'_, Return>) {
     let all: Vec<_> = bearings.iter().filter_map(|s| Some((s, s.item.as_ref()?))).collect();
+    let load = |b: &Bearing| returns.item(&b.on)?.loads.iter().find(|l| l.what == b.load);
     for (i, (seen, b)) in all.iter().enumerate() {
-        if let Some((first, _)) = all[..i].iter().find(|(_, o)| o.on == b.on && o.load == b.load) {
+        let here = || all[..i].iter().filter(|(_, o)| o.on == b.on);
+        if let Some((first, _)) = here().find(|(_, o)| o.load == b.load) {
             seen.table
                 .fault(Kind::Contradiction, format_args!("{} of {} bears already", quoted(&b.load), b.on))
                 .at(seen.table.place("load"), "again")
                 .and(first.table.place("load"), "first")
                 .allowed("one bearing for each load")
                 .help("take one out, or give the return a load for each");
+            continue;
+        }
+        let meets = |o: &Bearing| match (load(b), load(o)) {
+            (Some(x), Some(y)) => {
+                x.leaf == y.leaf && (x.at - y.at).abs() + HAIR < (b.length + o.length) / 2.0
+            }
+            _ => false,
+        };
+        if let Some((first, other)) = here().find(|(_, o)| meets(o)) {
+            seen.table
+                .fault(Kind::Contradiction, format_args!("it lies where {} bears already", other.mark))
+                .at(seen.table.place("bearing_length"), "centred on its load")
+                .and(first.table.place("bearing_length"), "centred on the other")
+                .allowed("bearings beside each other, on one leaf")
+                .help("correct a length or the place of a load");
         }
     }
 }

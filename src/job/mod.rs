@@ -134,7 +134,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         returns.refuse_twice(reader, &bearing.name, &bearing.place);
         panels.refuse_twice(reader, &bearing.name, &bearing.place);
     }
-    bearings::together(&bearings);
+    bearings::together(&bearings, &returns);
     let stone_tables = root.may("padstones").tables("padstone", "name");
     let padstones = all(&stone_tables, bearings::padstone);
     bearings::named_once(&stone_tables);

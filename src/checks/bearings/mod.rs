@@ -49,6 +49,7 @@ pub fn check<'a>(
         }
     };
     remarks(s, &site);
+    neighbours(s, b, bearing);
     let bare = Seat::bare(Beam::of(&site));
     let tried = choose::try_all(&site, site.stones);
     let first = tried.iter().find(|t| t.works()).filter(|_| bearing.padstone);
@@ -97,6 +98,23 @@ fn remarks(s: &mut Sheet, site: &Site<'_>) {
         "Both ends of {mark} count as ends of the wall, the junction too, bonded or not: nothing spreads into the wall \
          met."
     ));
+}
+
+/// Other bearings of the same return: whether padstones fit beside each other is not worked out.
+fn neighbours(s: &mut Sheet, b: &Building, bearing: &Bearing) {
+    let others: Vec<&str> = b
+        .bearings
+        .iter()
+        .filter(|o| o.on == bearing.on && o.mark != bearing.mark)
+        .map(|o| o.mark.as_str())
+        .collect();
+    if !others.is_empty() {
+        s.note(format!(
+            "On the same return: {}. Its load counts at mid-height; whether padstones fit beside each other is to be \
+             seen on the sketches.",
+            others.join(", ")
+        ));
+    }
 }
 
 /// What was decided, and why.

@@ -126,7 +126,7 @@ mod tests {
         assert!((c.base() - 0.577_350_269_19).abs() < 1e-11);
         // 0.2887 x 2000 = 577.35 each side of 100 mm; then cut at 0 and at 800.
         let (.., free) = effective_length(&mut s, mm(4000.0), mm(2000.0), mm(100.0), mm(2000.0), c);
-        assert!((free.base() - 1254.700_538).abs() < 1e-6);
+        assert!((free.base() - 1_254.700_538).abs() < 1e-6);
         let (from, to, cut) = effective_length(&mut s, mm(800.0), mm(400.0), mm(100.0), mm(2000.0), c);
         assert_eq!((from.base(), to.base(), cut.base()), (400.0, 400.0, 800.0));
         let (.., end) = effective_length(&mut s, mm(2000.0), mm(1950.0), mm(100.0), mm(2000.0), c);
