@@ -223,6 +223,17 @@ fn dimensions(board: &mut Board, view: &BearingElevation, ruler: Ruler, foot: f6
     xs.extend(pieces.iter().map(|p| x(p.1)));
     let texts: Vec<Text> = pieces.iter().map(|p| p.2.clone()).collect();
     dimension::chain_across(board, &xs, row(1.0), start, &texts);
+    if view.a_1 < 0.05 {
+        // Nothing to measure, which is said beside the end.
+        let (end, out) = if at_free { (x(view.length), 1.0) } else { (x(0.0), -1.0) };
+        let at = Point::new(end + out * 2.5, row(1.0));
+        board.note(
+            Note::new(Role::Dimension, at, length("a_1", 0.0))
+                .spot(Spot::new(at, out, 0.0))
+                .spot(Spot::new(at, out, -1.0))
+                .spot(Spot::new((at.x, row(1.6)), out, 0.0)),
+        );
+    }
     let right = x(view.length);
     let end = x(view.length + BEAM.1);
     let ys = (ruler.at(0.0, low).y, ruler.at(0.0, view.seat()).y);

@@ -3,6 +3,7 @@
 use super::choose::{try_all, uses};
 use super::seat::{Beam, Seat};
 use super::site::Site;
+use crate::quantity::functions::min;
 use crate::quantity::{Force, Length, print};
 use crate::solve::root;
 use crate::trace::{Column, Table};
@@ -53,8 +54,8 @@ pub fn load_taken(site: &Site<'_>) -> Option<Force> {
 pub fn table(site: &Site<'_>) -> Table {
     let mm = |l: Length| print::show("l", l.dynamic()).value;
     let size = |b: Beam| {
-        let area = print::show("A", (b.l_b * b.w_b).dynamic());
-        format!("{} × {} mm, {area}", mm(b.l_b), mm(b.w_b))
+        let pressed = b.l_b * min(b.w_b, site.model.t - 2.0 * site.e_c);
+        format!("{} × {} mm, {} pressed", mm(b.l_b), mm(b.w_b), print::show("A", pressed.dynamic()))
     };
     let now = Beam::of(site);
     let none = || "none that stays on the return".to_owned();
