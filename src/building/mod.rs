@@ -20,8 +20,8 @@ pub use parts::{
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
 pub use things::{
-    Arching, Assumption, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Panel,
-    Photograph, Removed, Return, Span, Stability,
+    Arching, Assumption, Bearing, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load,
+    Padstone, Panel, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Joists, PanelRoute, Path, Proof,
@@ -65,6 +65,10 @@ pub struct Building {
     pub stability: Option<Stability>,
     /// What stays and braces.
     pub returns: Vec<Return>,
+    /// Where beams bear on returns.
+    pub bearings: Vec<Bearing>,
+    /// Padstones to choose from.
+    pub padstones: Vec<Padstone>,
     /// Outer walls between supports.
     pub panels: Vec<Panel>,
     /// Edges of floors along the panels.

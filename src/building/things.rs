@@ -183,6 +183,42 @@ pub struct Return {
     pub junction: Flange,
 }
 
+/// Where a beam bears on a return. Dead load, imposed load, place and eccentricity are those of the load.
+#[derive(Clone, Debug)]
+pub struct Bearing {
+    /// Mark.
+    pub mark: String,
+    /// The beam, by mark.
+    pub beam: String,
+    /// The return, by mark.
+    pub on: String,
+    /// The load of that return, by what brings it; no other load of the return is called so.
+    pub load: String,
+    /// Length of the bearing along the wall, centred on the load; it stays on the wall.
+    pub length: Length,
+    /// Width of the bearing across the wall, at most the leaf's thickness.
+    pub width: Length,
+    /// Height of the underside of the beam above the foot of the return.
+    pub level: Length,
+    /// Whether a padstone of the list is put under the beam.
+    pub padstone: bool,
+}
+
+/// A padstone of the practice's list.
+#[derive(Clone, Debug)]
+pub struct Padstone {
+    /// Name.
+    pub name: String,
+    /// Length along the wall.
+    pub length: Length,
+    /// Width across the wall.
+    pub width: Length,
+    /// Height.
+    pub height: Length,
+    /// Characteristic cylinder strength of its concrete, f_ck.
+    pub strength: Stress,
+}
+
 /// One edge of a panel.
 #[derive(Clone, Debug)]
 pub struct Edge {

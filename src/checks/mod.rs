@@ -1,6 +1,7 @@
 //! What is verified, in sheet order. A new check is one new file and one line in [`LIST`]; its place
 //! in the list is its place in the pack.
 
+pub mod bearings;
 pub mod chain;
 pub mod diaphragm;
 pub mod floor_edge;
@@ -17,6 +18,8 @@ pub mod takedown;
 pub mod whole;
 pub mod wind;
 
+mod bearing_sheet;
+mod bearing_views;
 mod panel_sheet;
 mod panel_views;
 mod place;
@@ -107,6 +110,7 @@ pub const LIST: &[Check] = &[
     stability::sections,
     whole::sections,
     return_sheet::sections,
+    bearing_sheet::sections,
     panel_sheet::sections,
     floor_edge::sections,
     diaphragm::sections,

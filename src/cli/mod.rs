@@ -23,8 +23,8 @@ pub const FAILED: u8 = 2;
 
 /// Calculation packs for masonry that stays when a load-bearing wall comes out.
 ///
-/// Reads job files (TOML), checks the returns and panels that stay, and typesets a
-/// calculation pack as PDF.
+/// Reads job files (TOML), checks the returns and panels that stay and the beams' bearings that
+/// the job gives, and typesets a calculation pack as PDF.
 #[derive(Parser)]
 #[command(name = "perpend", version, arg_required_else_help = true, after_help = EXAMPLES)]
 struct Flags {

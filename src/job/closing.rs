@@ -74,8 +74,9 @@ pub fn photograph(t: &Table<'_>, names: &[&str]) -> Option<Photograph> {
     let file = t.need("file").line().filter(|path| beside(t, path));
     let caption = t.need("caption").line();
     let entry = t.may("mark");
-    let mark =
-        entry.line().filter(|mark| known(&entry, mark, "return, panel, floor edge or bracing wall", names));
+    let mark = entry
+        .line()
+        .filter(|mark| known(&entry, mark, "return, bearing, panel, floor edge or bracing wall", names));
     t.finish();
     Some(Photograph { file: file?, caption: caption?, mark })
 }

@@ -365,7 +365,8 @@ pub fn marks(entry: &super::entry::Entry<'_>, names: &[&str]) -> Option<Vec<Stri
     }
     let items = entry.list("a list of marks: [\"R1\", \"P1\"]")?;
     let read = |item: &super::entry::Entry<'_>| {
-        item.line().filter(|mark| known(item, mark, "return, panel, floor edge or bracing wall", names))
+        item.line()
+            .filter(|mark| known(item, mark, "return, bearing, panel, floor edge or bracing wall", names))
     };
     items.iter().map(read).collect::<Vec<_>>().into_iter().collect()
 }

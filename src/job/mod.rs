@@ -7,11 +7,13 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis materials ground returns bearing panels floors closing`: the parts, in the file's order
+//! * `identity basis materials plan ground returns bearing bearings panels floors closing`: the parts, in the
+//!   file's order
 //! * [`start`]: the job to start from
 
 mod basis;
 mod bearing;
+mod bearings;
 mod closing;
 mod date;
 mod entry;
@@ -167,9 +169,23 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     });
     let collapse = root.may("collapse").table("collapse").and_then(|t| floors::collapse(&t));
 
-    let marks: Vec<&str> = returns
-        .list()
-        .into_iter()
+    let bearings = Names::marked("bearing", root.may("bearings").tables("bearing", "mark"), |t| {
+        bearings::bearing(t, &returns, &build_ups)
+    });
+    for bearing in bearings.iter() {
+        returns.refuse_twice(reader, &bearing.name, &bearing.place);
+        panels.refuse_twice(reader, &bearing.name, &bearing.place);
+    }
+    bearings::together(&bearings, &returns);
+    let stone_tables = root.may("padstones").tables("padstone", "name");
+    let padstones = all(&stone_tables, bearings::padstone);
+    bearings::named_once(&stone_tables);
+    if bearings.is_empty() && !stone_tables.is_empty() && !root.has("bearings") {
+        reader.warn("padstones: there are no [[bearings]] that could use them");
+    }
+
+    let marks: Vec<&str> = (returns.list().into_iter())
+        .chain(bearings.list())
         .chain(panels.list())
         .chain(floor_edges.list())
         .chain(bracing.list())
@@ -224,6 +240,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         removed: removed?,
         stability: stability.map(|s| crate::building::Stability { walls: bracing, ..s }),
         returns: returns.into_items()?,
+        bearings: bearings.into_items()?,
+        padstones: padstones?,
         panels: panels.into_items()?,
         floor_edges: floor_edges.into_items()?,
         diaphragm,

@@ -4,7 +4,7 @@ use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
 use crate::checks::Results;
 use crate::checks::outcome::Outcome;
 use crate::pack::data::{Assumption, Summary};
-use crate::standards::{en1991_1_4, en1996};
+use crate::standards::{en1991_1_4, en1992, en1996};
 
 /// One plain sentence on the outcome.
 pub fn sentence(results: &Results) -> String {
@@ -77,8 +77,8 @@ fn job(b: &Building) -> Vec<String> {
     ]
 }
 
-fn codes(_b: &Building) -> Vec<String> {
-    vec![
+fn codes(b: &Building) -> Vec<String> {
+    let mut out = vec![
         "BS EN 1990:2002+A1:2005 with UK National Annex".to_owned(),
         en1991_1_4::EDITION.to_owned(),
         en1996::EDITION.to_owned(),
@@ -86,7 +86,11 @@ fn codes(_b: &Building) -> Vec<String> {
         "Figures of the standards were entered from memory and recalculated where possible; each carries its \
          confidence (H, M, L). Check them against the purchased standard."
             .to_owned(),
-    ]
+    ];
+    if b.bearings.iter().any(|x| x.padstone) && !b.padstones.is_empty() {
+        out.insert(2, en1992::EDITION.to_owned());
+    }
+    out
 }
 
 fn basis(b: &Building) -> Vec<String> {
@@ -221,6 +225,13 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
             ));
         }
     }
+    if b.bearings.iter().any(|x| x.padstone) && !b.padstones.is_empty() {
+        all.push((
+            "Padstones lie where the sketches show them, on a full bed of mortar no weaker than the wall's."
+                .to_owned(),
+            "method of this pack".to_owned(),
+        ));
+    }
     all.push((
         "Plaster and render carry nothing; chases are taken off the thickness; wall ties carry no shear in the plane \
          of a return."
@@ -256,11 +267,18 @@ pub fn cautions(b: &Building) -> Vec<String> {
         ));
     }
     out.push(seen);
-    out.push(
+    let bearings: Vec<&str> = b.bearings.iter().map(|x| x.mark.as_str()).collect();
+    out.push(if bearings.is_empty() {
         "Not covered: the steel or concrete beam, its bearing and padstone, the wall and footing below, and movement \
          and fire. They need calculations of their own."
-            .to_owned(),
-    );
+            .to_owned()
+    } else {
+        format!(
+            "Not covered: the steel or concrete beam itself, bearings other than {}, bending and splitting of padstones, \
+             the wall and footing below, and movement and fire. They need calculations of their own.",
+            list(&bearings)
+        )
+    });
     out.push(
         "The resistance of a compressed end by a uniform block, friction at the foot, and flexure in plane are first \
          principles, not formulas of the code. The sheets say so where they stand."

@@ -12,6 +12,8 @@
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
+pub mod bearing_elevation;
+pub mod bearing_section;
 pub mod board;
 pub mod chain;
 pub mod dimension;
@@ -45,6 +47,8 @@ pub(crate) mod tests;
 pub mod text;
 pub mod view;
 
+pub use bearing_elevation::{BearingElevation, Stone, bearing_elevation};
+pub use bearing_section::{BearingSection, bearing_section};
 pub use chain::{Branch, Chain, ChainLink, Known, chain};
 pub use drawing::{Drawing, Item};
 pub use key_plan::{KeyPlan, PlanMark, PlanSpan, PlanWind, key_plan};

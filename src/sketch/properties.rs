@@ -183,6 +183,30 @@ prop_compose! {
     }
 }
 
+prop_compose! {
+    fn any_bearing()(
+        length in 300..2600_i32, height in 1800..3200_i32, sunk in 0..300_i32, b in 0.1..0.6_f64, at in 0.0..=1.0_f64,
+        stone in proptest::option::of((0.0..=1.0_f64, 65..300_i32)), wide in 0.0..=1.0_f64,
+    ) -> BearingElevation {
+        let (length, height) = (f64::from(length), f64::from(height));
+        let level = height - f64::from(sunk);
+        let bearing = (b * length).clamp(60.0, 300.0).round();
+        let place = (bearing / 2.0 + at * (length - bearing)).round().clamp(bearing / 2.0, length - bearing / 2.0);
+        let stone = stone.map(|(grow, high)| {
+            let long = (bearing + grow * (length - bearing)).floor();
+            let middle = place.clamp(long / 2.0, length - long / 2.0);
+            Stone { name: "PS 300".into(), place: middle, length: long, height: f64::from(high) }
+        });
+        let off = |x: f64, long: f64| (x - long / 2.0).min(length - x - long / 2.0).max(0.0);
+        let a_1 = stone.as_ref().map_or(off(place, bearing), |s| off(s.place, s.length));
+        let room = stone.as_ref().map_or(bearing, |s| s.length - 2.0 * (place - s.place).abs());
+        let pressed = bearing + wide * (room - bearing).max(0.0);
+        let run = pressed / 2.0 + (level - stone.as_ref().map_or(0.0, |s| s.height)) / 2.0 / 3.0_f64.sqrt();
+        let spread = ((place - run).max(0.0).round(), (place + run).min(length).round());
+        BearingElevation { length, height, level, place, bearing, a_1, pressed, spread, stone, ..super::samples::bearing(false) }
+    }
+}
+
 proptest! {
     #![proptest_config(ProptestConfig { cases: 48, failure_persistence: None, ..ProptestConfig::default() })]
 
@@ -296,5 +320,16 @@ proptest! {
             }
         }
         sound(&return_actions(&view, Frame::new(120.0, 120.0)));
+    }
+
+    #[test]
+    fn any_bearing_is_sound_and_true(view in any_bearing(), e in -30..=30_i32, width in 40..=140_i32) {
+        let drawing = bearing_elevation(&view, FRAME);
+        sound(&drawing);
+        prop_assert!(FRAME.holds(&drawing), "{} x {}", drawing.width, drawing.height);
+        prop_assert!(has_length(&drawing, Pen::Dimension, view.spread.1 - view.spread.0));
+        prop_assert!(has_length(&drawing, Pen::Outline, view.length));
+        let across = BearingSection { eccentricity: f64::from(e), bearing: f64::from(width), ..across(view.stone.is_some()) };
+        sound(&bearing_section(&across, FRAME));
     }
 }

@@ -293,3 +293,34 @@ pub fn links() -> Chain {
         ],
     }
 }
+
+pub fn bearing(stone: bool) -> BearingElevation {
+    BearingElevation {
+        mark: "B1-R1".into(),
+        on: "R1".into(),
+        beam: "B1".into(),
+        length: 890.0,
+        height: 2400.0,
+        level: 2400.0,
+        place: 790.0,
+        bearing: 150.0,
+        stone: stone.then(|| Stone { name: "PS 300".into(), place: 740.0, length: 300.0, height: 140.0 }),
+        a_1: if stone { 0.0 } else { 25.0 },
+        pressed: if stone { 200.0 } else { 150.0 },
+        spread: if stone { (38.0, 890.0) } else { (22.0, 890.0) },
+        force: Action::new("N_Edc", "37.8 kN", ""),
+    }
+}
+
+pub fn across(stone: bool) -> BearingSection {
+    BearingSection {
+        mark: "B1-R1".into(),
+        beam: "B1".into(),
+        thickness: 140.0,
+        material: Material::Block,
+        bearing: 90.0,
+        stone: stone.then_some((120.0, 140.0, 10.0)),
+        eccentricity: 12.0,
+        force: Action::new("N_Edc", "37.8 kN", ""),
+    }
+}

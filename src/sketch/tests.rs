@@ -99,6 +99,10 @@ fn hand_cases_are_sound() {
         load_stack(&stack(), FRAME),
         stability_plan(&stability(), FRAME),
         chain(&links()),
+        bearing_elevation(&bearing(true), FRAME),
+        bearing_elevation(&bearing(false), FRAME),
+        bearing_section(&across(true), FRAME),
+        bearing_section(&across(false), FRAME),
     ];
     let [before, after] = panels();
     drawings.extend(panel_pair(&before, &after, Frame::new(165.0, 110.0)));
@@ -182,6 +186,8 @@ fn small_frames_are_kept() {
     drawings.push(return_section(&section(), column));
     drawings.push(return_actions(&actions(true), column));
     drawings.push(panel_section(&wall_section(), column));
+    drawings.push(bearing_elevation(&bearing(true), column));
+    drawings.push(bearing_section(&across(true), column));
     drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
     drawings.push(load_stack(&stack(), column));
     for drawing in &drawings {

@@ -2,7 +2,7 @@
 
 use super::tables::{compressive, gamma_m, wind};
 
-/// National values of EN 1990, EN 1991-1-4 and EN 1996-1-1.
+/// National values of EN 1990, EN 1991-1-4, EN 1992-1-1 and EN 1996-1-1.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Annex {
     /// Country, as printed.
@@ -35,6 +35,10 @@ pub struct Annex {
     pub shear_limit_unfilled: f64,
     /// Modulus of elasticity over f_k, 3.7.2(2).
     pub E_over_f_k: f64,
+    /// Coefficient of the strength of plain concrete, EN 1992-1-1 12.3.1(1).
+    pub alpha_cc_plain: f64,
+    /// Material factor on concrete, EN 1992-1-1 2.4.2.4.
+    pub gamma_C: f64,
 }
 
 impl Annex {
@@ -55,5 +59,7 @@ impl Annex {
         shear_limit: 0.065,
         shear_limit_unfilled: 0.045,
         E_over_f_k: 1000.0,
+        alpha_cc_plain: 0.6,
+        gamma_C: 1.5,
     };
 }

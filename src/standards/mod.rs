@@ -2,6 +2,7 @@
 pub mod annex;
 pub mod en1990;
 pub mod en1991_1_4;
+pub mod en1992;
 pub mod en1996;
 pub mod masonry;
 pub mod source;

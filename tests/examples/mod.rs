@@ -3,6 +3,7 @@
 
 mod arya_design_of_structural_elements;
 mod flanged_sections;
+mod hand_bearing;
 pub mod hand_diaphragm;
 pub mod hand_floor_edge;
 mod hand_frame;

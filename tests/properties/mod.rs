@@ -1,5 +1,6 @@
 //! What must hold for any valid job: monotone, mirrored, continuous, adding up, without faults.
 
+mod bearings;
 mod choices;
 mod continuity;
 mod flange;

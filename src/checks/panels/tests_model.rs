@@ -77,6 +77,8 @@ fn house() -> Building {
         assumptions: Vec::new(),
         hold_points: Vec::new(),
         photographs: Vec::new(),
+        bearings: Vec::new(),
+        padstones: Vec::new(),
         responsible: Vec::new(),
         warnings: Vec::new(),
     }

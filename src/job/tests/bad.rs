@@ -209,9 +209,22 @@ fn odd_values_are_warnings() {
             "tributary_width = \"6.30 m\"",
             "stability: the returns' tributary widths add up to 6.50 m on a front of 6.40 m",
         ),
+        (
+            "bearing_length = \"150 mm\"",
+            "bearing_length = \"60 mm\"",
+            "bearing B1-R2: bearing length is 60 mm, under 75 mm: short for the end of a beam",
+        ),
+        (
+            "height = \"145 mm\"",
+            "height = \"50 mm\"",
+            "padstone PS 300: height is 50 mm, under 65 mm: flat for a padstone",
+        ),
     ];
-    // The load stands where it stays on the shortest return of the list.
-    let good = GOOD.replacen("at = \"540 mm\"", "at = \"150 mm\"", 1);
+    // The load and its bearing stand where they stay on the shortest and lowest return of the list.
+    let good = GOOD
+        .replacen("at = \"540 mm\"", "at = \"100 mm\"", 1)
+        .replacen("bearing_length = \"190 mm\"", "bearing_length = \"160 mm\"", 1)
+        .replacen("level = \"2.35 m\"\n", "", 1);
     let mut wrong = String::new();
     for (from, to, says) in odd {
         assert!(good.contains(from), "the good job lacks {from:?}");

@@ -87,3 +87,35 @@ fn blanks_in_names_count_once() {
     let building = read("blanks.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
     assert_eq!(building.plan[0].mark, "rear wall");
 }
+
+/// Two bearings of different loads whose lengths meet; beside each other they are read.
+#[test]
+fn bearings_do_not_lie_on_each_other() {
+    let with = |at: &str| {
+        let load = format!(
+            "[[returns.loads]]\nwhat = \"beam B2\"\ndead = \"1 kN\"\nimposed = \"0 kN\"\nat = \"{at}\"\n\n[returns.junction]\nto = \"rear wall\""
+        );
+        let bearing = "[[bearings]]\nmark = \"B2-R1\"\nbeam = \"B2\"\non = \"R1\"\nload = \"beam B2\"\n\
+                       bearing_length = \"100 mm\"\nbearing_width = \"100 mm\"\n\n[[padstones]]";
+        GOOD.replacen("[returns.junction]\nto = \"rear wall\"", &load, 1).replacen(
+            "[[padstones]]",
+            bearing,
+            1,
+        )
+    };
+    // B1-R1 is 190 mm long about 540 mm: it begins at 445 mm.
+    assert!(read("beside.toml", &with("395 mm")).is_ok());
+    let report = read("meets.toml", &with("396 mm")).expect_err("a millimetre of overlap");
+    let shown = report.render(false);
+    assert_eq!(report.diagnostics().len(), 1, "{shown}");
+    assert!(shown.contains("bearing B2-R1: it lies where B1-R1 bears already"), "{shown}");
+}
+
+#[test]
+fn padstones_that_no_bearing_uses_are_a_warning() {
+    let (before, rest) = GOOD.split_once("[[bearings]]").expect("the fixture has bearings");
+    let stones = &rest[rest.find("[[padstones]]").expect("and padstones")..];
+    let building =
+        read("idle.toml", &format!("{before}{stones}")).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    assert_eq!(building.warnings, ["padstones: there are no [[bearings]] that could use them"]);
+}

@@ -2,6 +2,7 @@
 //!
 //! A function's parameters carry the symbols' names and must already stand on the sheet.
 
+pub mod concentrated;
 pub mod flange;
 pub mod lateral;
 pub mod reduction;

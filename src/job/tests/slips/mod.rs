@@ -1,5 +1,6 @@
 //! Slips of the hand, by sort.
 
+mod bearings;
 mod contradictions;
 mod figures;
 mod floors;
@@ -30,5 +31,7 @@ const fn slip(
 
 /// Every slip.
 pub fn all() -> impl Iterator<Item = &'static Slip> {
-    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS, floors::SLIPS].into_iter().flatten()
+    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS, floors::SLIPS, bearings::SLIPS]
+        .into_iter()
+        .flatten()
 }

@@ -83,8 +83,8 @@ pub const SLIPS: &[Slip] = &[
         "for = [\"R3\"]",
         "\"R3\"",
         &[
-            "link junction: there is no return, panel, floor edge or bracing wall \"R3\"",
-            "add the return, panel, floor edge or bracing wall",
+            "link junction: there is no return, bearing, panel, floor edge or bracing wall \"R3\"",
+            "add the return, bearing, panel, floor edge or bracing wall",
         ],
     ),
     slip(
@@ -127,6 +127,6 @@ pub const SLIPS: &[Slip] = &[
         "[[assumptions]]",
         "[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib\"\nmark = \"R7\"\n\n[[assumptions]]",
         "\"R7\"",
-        &["there is no return, panel, floor edge or bracing wall \"R7\""],
+        &["there is no return, bearing, panel, floor edge or bracing wall \"R7\""],
     ),
 ];
