@@ -3,9 +3,9 @@
 use super::entry::{one_line, quoted};
 use super::limits::{Limits, Odd, nearest, one_of};
 use super::names::{Names, Seen};
-use super::reader::Table;
+use super::reader::{Reader, Span, Table};
 use super::returns::MARK;
-use crate::building::{Bearing, BuildUp, Load, Padstone, Return};
+use crate::building::{Bearing, BuildUp, Building, Load, Padstone, Return};
 use crate::error::Kind;
 use crate::quantity::{Force, Length, Stress};
 
@@ -31,6 +31,7 @@ pub fn bearing(
     t: &Table<'_>,
     returns: &Names<'_, Return>,
     build_ups: &Names<'_, BuildUp>,
+    led: bool,
 ) -> Option<Bearing> {
     let mark = t.need("mark").mark(MARK);
     let beam = t.need("beam").line();
@@ -49,7 +50,9 @@ pub fn bearing(
     // A return with faults has its own diagnostics; the bearing cannot be held against it.
     let seen = on.as_ref().and_then(|on| returns.get(on));
     let ret = seen.and_then(|s| s.item.as_ref().map(|item| (s, item)));
-    let load = ret.zip(called.as_ref()).and_then(|((_, r), called)| find(t, r, called));
+    // Loads that come from the plan are held against it once they are led down.
+    let waits = led && ret.is_some_and(|(_, r)| r.loads.is_empty());
+    let load = ret.filter(|_| !waits).zip(called.as_ref()).and_then(|((_, r), called)| find(t, r, called));
     if let (Some((seen, r)), Some(load)) = (ret, load) {
         on_the_wall(t, seen, r, load, length);
         in_the_leaf(t, seen, load, width, build_ups.item(&r.build_up));
@@ -73,17 +76,50 @@ pub fn bearing(
             .allowed("at most the height of the return")
             .help("correct one of the two, or take `level` out: it then bears at the head");
     }
-    let ((_, r), load) = (ret?, load?);
+    let (_, r) = ret?;
+    let load = if waits { called? } else { load?.what.clone() };
     Some(Bearing {
         mark: mark?,
         beam: beam?,
         on: on?,
-        load: load.what.clone(),
+        load,
         length: length?,
         width: width?,
         level: if t.has("level") { level? } else { r.height },
         padstone: padstone?,
     })
+}
+
+/// Holds bearings of loads that were led down against them; `places` are those of `load` by mark.
+pub fn of_led_loads(reader: &Reader, b: &Building, places: &[(String, Span)]) {
+    for bearing in &b.bearings {
+        let Some(r) = b.returns.iter().find(|r| r.mark == bearing.on) else { continue };
+        let place =
+            places.iter().find(|(mark, _)| *mark == bearing.mark).map_or(0..0, |(_, place)| place.clone());
+        let names: Vec<String> = r.loads.iter().map(|l| quoted(&l.what)).collect();
+        let Some(load) = r.loads.iter().find(|l| l.what == bearing.load) else {
+            reader
+                .fault(
+                    Kind::UnknownName,
+                    format!("bearing {}: {} has no load {}", bearing.mark, r.mark, quoted(&bearing.load)),
+                )
+                .at(place, "not led down to that return")
+                .allowed(format!("a load that the take-down brings to {}: {}", r.mark, one_of(&names)))
+                .help("name one of these, or give the loads of the return by hand");
+            continue;
+        };
+        let half = bearing.length / 2.0;
+        if load.at - half < -HAIR || load.at + half > r.length + HAIR {
+            reader
+                .fault(
+                    Kind::Contradiction,
+                    format!("bearing {}: it hangs over an end of {}", bearing.mark, r.mark),
+                )
+                .at(place, format!("led down to {:.0} mm from the junction end", load.at.base()))
+                .allowed(format!("a bearing between the ends of the return, {:.0} mm long", r.length.base()))
+                .help("correct the bearing length here, or the beam on the plan");
+        }
+    }
 }
 
 /// The load of the return that is called so; one that is not there is an error with those that are.

@@ -170,7 +170,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let collapse = root.may("collapse").table("collapse").and_then(|t| floors::collapse(&t));
 
     let bearings = Names::marked("bearing", root.may("bearings").tables("bearing", "mark"), |t| {
-        bearings::bearing(t, &returns, &build_ups)
+        bearings::bearing(t, &returns, &build_ups, !floors.is_empty())
     });
     for bearing in bearings.iter() {
         returns.refuse_twice(reader, &bearing.name, &bearing.place);
@@ -219,6 +219,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         identity::dates((job, identity), (signed, signatures), (issued, revision));
     }
 
+    let of_loads: Vec<_> = bearings.iter().map(|b| (b.name.clone(), b.table.place("load"))).collect();
     let led_panels: Vec<String> =
         panels.iter().filter(|p| !p.table.has("dead_above")).map(|p| p.name.clone()).collect();
     let bracing = bracing.into_items()?;
@@ -255,6 +256,9 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     };
     plan::to_the_ground(reader, &building, &marks_of_plan);
     crate::building::take_loads(&mut building, &led_panels);
+    if !building.floors.is_empty() {
+        bearings::of_led_loads(reader, &building, &of_loads);
+    }
     Some(building)
 }
 
