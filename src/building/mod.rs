@@ -12,8 +12,8 @@ pub use parts::{
     Storey, Strength, TerrainWind, UnitStrength, Wind,
 };
 pub use things::{
-    Arching, Assumption, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load, Panel,
-    Photograph, Removed, Return, Span, Stability,
+    Arching, Assumption, Before, BracingWall, Edge, Flange, Footing, FromAbove, Head, HoldPoint, Link, Load,
+    Panel, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, Ends, FloorKind, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
@@ -74,6 +74,11 @@ impl Building {
     /// The material named `name`.
     pub fn material(&self, name: &str) -> Option<&Material> {
         self.materials.iter().find(|m| m.name == name)
+    }
+
+    /// Every footing, with the return that stands on it.
+    pub fn footings(&self) -> impl Iterator<Item = (&Return, &Footing)> {
+        self.returns.iter().filter_map(|r| Some((r, r.footing.as_ref()?)))
     }
 
     /// The storey marked `mark`.

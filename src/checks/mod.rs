@@ -2,6 +2,7 @@
 //! in the list is its place in the pack.
 
 pub mod chain;
+pub mod footings;
 pub mod loads;
 pub mod masonry;
 pub mod materials;

@@ -81,27 +81,40 @@ pub fn links(b: &Building) -> Vec<Link> {
                 of: Vec::new(),
             });
         }
-        out.extend(given.into_iter().map(|l| proven(b, l)));
+        out.extend(given.into_iter().flat_map(|l| if name == "footing" { under(b, l) } else { vec![proven(b, l)] }));
+    }
+    out
+}
+
+/// Marks of the walls outside this pack that hold the heads of returns.
+fn held_elsewhere(b: &Building) -> Vec<String> {
+    let mut out: Vec<String> = Vec::new();
+    for r in &b.returns {
+        let Head::Propped(walls) = &r.head else { continue };
+        let elsewhere = walls.iter().filter(|w| !b.returns.iter().any(|o| o.mark == **w));
+        out.extend(elsewhere.filter(|w| !out.contains(w)).cloned().collect::<Vec<_>>());
     }
     out
 }
 
 /// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
 fn proven(b: &Building, link: &Link) -> Link {
-    let held_elsewhere = b.returns.iter().any(|r| match &r.head {
-        Head::Free => false,
-        Head::Propped(walls) => walls.iter().any(|w| !b.returns.iter().any(|o| o.mark == *w)),
-    });
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
-        "bracing wall" => !b.returns.is_empty() && !held_elsewhere,
+        "bracing wall" => !b.returns.is_empty() && held_elsewhere(b).is_empty(),
         "junction" | "dpc" => !b.returns.is_empty(),
-        // Floors and footings are not calculated in this pack.
+        // Floors are not calculated in this pack.
         _ => false,
     };
-    if link.proof != Proof::Calculated || here || !link.words.trim().is_empty() {
-        return link.clone();
-    }
+    if claims_nothing(link) || here { link.clone() } else { unshown(link) }
+}
+
+/// Whether a link does without a calculation of this pack: another proof, or one named elsewhere.
+fn claims_nothing(link: &Link) -> bool {
+    link.proof != Proof::Calculated || !link.words.trim().is_empty()
+}
+
+fn unshown(link: &Link) -> Link {
     Link {
         proof: Proof::Assumed,
         words: format!(
@@ -112,8 +125,44 @@ fn proven(b: &Building, link: &Link) -> Link {
     }
 }
 
+/// The footings that a link is about: those that this pack calculates, and the rest, which is assumed
+/// where the link claims a calculation.
+fn under(b: &Building, link: &Link) -> Vec<Link> {
+    if claims_nothing(link) {
+        return vec![link.clone()];
+    }
+    let about: Vec<String> = if link.of.is_empty() {
+        b.returns.iter().map(|r| r.mark.clone()).chain(held_elsewhere(b)).collect()
+    } else {
+        link.of.clone()
+    };
+    let (here, rest): (Vec<String>, Vec<String>) =
+        about.into_iter().partition(|m| b.footings().any(|(r, f)| r.mark == *m || f.mark == *m));
+    let mut out = Vec::new();
+    if !here.is_empty() {
+        out.push(Link { of: here, ..link.clone() });
+    }
+    if !rest.is_empty() || out.is_empty() {
+        out.push(Link { of: rest, ..unshown(link) });
+    }
+    out
+}
+
+/// Marks with those of the footings under them, and those of the returns above them.
+fn with_footings(b: &Building, mut of: Vec<String>) -> Vec<String> {
+    for (r, f) in b.footings() {
+        let (above, below) = (of.contains(&r.mark), of.contains(&f.mark));
+        if above && !below {
+            of.push(f.mark.clone());
+        } else if below && !above {
+            of.push(r.mark.clone());
+        }
+    }
+    of
+}
+
 /// Hold points: those given, one for every link that is assumed, one for every junction that is
-/// counted on but not seen.
+/// counted on but not seen, one for every footing that nobody saw.
 pub fn holds(b: &Building) -> Vec<Hold> {
     let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
     let assumed = links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
@@ -124,19 +173,19 @@ pub fn holds(b: &Building) -> Vec<Hold> {
         } else {
             format!("Before the wall comes down ({}): {words}.", l.link)
         };
-        (text, l.of, None)
+        let of = if l.link == "footing" { with_footings(b, l.of) } else { l.of };
+        (text, of, None)
     });
-    let told = |mark: &str| {
+    let told = |link: &str, marks: [&str; 2]| {
         b.links.iter().any(|l| {
-            l.link == "junction"
+            l.link == link
                 && l.proof == Proof::Assumed
-                && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
+                && (l.of.is_empty() || l.of.iter().any(|m| marks.contains(&m.as_str())))
         })
     };
-    let unseen = b
-        .returns
-        .iter()
-        .filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
+    let unseen = b.returns.iter().filter(|r| {
+        r.junction.bonded && r.junction.proof == Proof::Assumed && !told("junction", [&r.mark, &r.mark])
+    });
     let junctions = unseen.map(|r| {
         let text = format!(
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",
@@ -144,9 +193,20 @@ pub fn holds(b: &Building) -> Vec<Hold> {
         );
         (text, vec![r.mark.clone()], None)
     });
+    let buried =
+        b.footings().filter(|(r, f)| f.proof == Proof::Assumed && !told("footing", [&r.mark, &f.mark]));
+    let footings = buried.map(|(r, f)| {
+        let text = format!(
+            "Before the wall comes down: dig down to the footing under {}, measure its width, its thickness and how \
+             far it runs, and see the ground. {}",
+            r.mark, f.words
+        );
+        (text, vec![r.mark.clone(), f.mark.clone()], None)
+    });
     given
         .chain(assumed)
         .chain(junctions)
+        .chain(footings)
         .enumerate()
         .map(|(n, (text, of, closed))| Hold { mark: format!("H{}", n + 1), text, of, closed })
         .collect()

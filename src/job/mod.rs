@@ -7,7 +7,7 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis materials ground returns bearing panels closing`: the parts, in the file's order
+//! * `identity basis materials ground returns bearing footing panels closing`: the parts, in the file's order
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -16,6 +16,7 @@ mod closing;
 mod date;
 mod entry;
 mod figure;
+mod footing;
 mod ground;
 mod identity;
 mod limits;
@@ -124,9 +125,22 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         returns::together(&returns, &around);
         (returns, panels)
     };
+    let footings = returns::footings(&returns);
+    for (i, (mark, place)) in footings.iter().enumerate() {
+        returns.refuse_twice(reader, mark, place);
+        panels.refuse_twice(reader, mark, place);
+        bracing.refuse_twice(reader, mark, place);
+        returns::footing_twice(reader, &footings[..i], mark, place);
+    }
     something_to_check(root);
 
-    let marks: Vec<&str> = returns.list().into_iter().chain(panels.list()).chain(bracing.list()).collect();
+    let marks: Vec<&str> = returns
+        .list()
+        .into_iter()
+        .chain(footings.iter().map(|(mark, _)| mark.as_str()))
+        .chain(panels.list())
+        .chain(bracing.list())
+        .collect();
     let link_tables = root.need("links").tables("link", "link");
     let links: Vec<_> = link_tables.iter().map(|t| closing::link(t, &marks)).collect();
     closing::chain(reader, &link_tables, &links);

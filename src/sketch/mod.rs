@@ -15,6 +15,7 @@
 pub mod board;
 pub mod dimension;
 pub mod drawing;
+pub mod footing;
 pub mod ground;
 pub mod hatch;
 pub mod key_plan;
@@ -44,6 +45,7 @@ pub mod text;
 pub mod view;
 
 pub use drawing::{Drawing, Item};
+pub use footing::{FootingSketch, Pressure, footing_sketch};
 pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plan};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
 pub use panel_section::{Floor, PanelSection, panel_section};

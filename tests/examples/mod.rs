@@ -2,6 +2,7 @@
 //! calculations, step by step, and identities that only test the tool against itself, named as such.
 
 mod arya_design_of_structural_elements;
+mod hand_footing;
 mod hand_panel;
 mod hand_return;
 mod hand_slenderness;

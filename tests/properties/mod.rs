@@ -3,6 +3,7 @@
 mod choices;
 mod continuity;
 mod flange;
+mod footing;
 mod jobs;
 mod loads;
 mod outcome;

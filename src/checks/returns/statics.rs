@@ -30,8 +30,19 @@ macro_rules! statics {
 
             /// Wind and tilt; the factor and the tilt stand on the sheet. What is nought is not printed.
             pub fn along(s: &mut Sheet, m: &Model, $k: Num, $H_nu: Force) -> Along {
-                let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
+                let $H = at_head(s, m, $k, $H_nu);
+                let ($w, $M_h) = below(s, m, $k);
+                Along { $H, $w, $M_h }
+            }
+
+            fn at_head(s: &mut Sheet, m: &Model, $k: Num, $H_nu: Force) -> Force {
+                let H_k = m.lateral.H_k;
                 calc!(s, $clause, "force at the head, tilt included", $H = $k * H_k + $H_nu);
+                $H
+            }
+
+            fn below(s: &mut Sheet, m: &Model, $k: Num) -> (LineLoad, Moment) {
+                let (w_k, M_k) = (m.lateral.w_k, m.lateral.M_k);
                 let $w = if w_k == LineLoad::ZERO {
                     LineLoad::ZERO
                 } else {
@@ -44,12 +55,14 @@ macro_rules! statics {
                     calc!(s, $clause, "moment at the head", $M_h = $k * M_k);
                     $M_h
                 };
-                Along { $H, $w, $M_h }
+                ($w, $M_h)
             }
 
-            /// Moment and shear of wind and tilt at the section.
+            /// Moment and shear of wind and tilt at the section. The force at a head that is held stays there.
             pub fn at(s: &mut Sheet, m: &Model, $k: Num, $H_nu: Force, at: At) -> (Moment, Force) {
-                let d = along(s, m, $k, $H_nu);
+                let $H = if m.propped { Force::ZERO } else { at_head(s, m, $k, $H_nu) };
+                let ($w, $M_h) = below(s, m, $k);
+                let d = Along { $H, $w, $M_h };
                 let $M = if m.propped { held(s, m, d, at) } else { cantilever(s, m, d, at) };
                 let $V = shear(s, m, d, at);
                 ($M, $V)
@@ -59,7 +72,7 @@ macro_rules! statics {
             fn cantilever(s: &mut Sheet, m: &Model, d: Along, at: At) -> Moment {
                 let h = m.h;
                 let Along { $H, $w, $M_h } = d;
-                match (at, $M_h == Moment::ZERO, $w == LineLoad::ZERO) {
+                match (at, m.lateral.M_k == Moment::ZERO, m.lateral.w_k == LineLoad::ZERO) {
                     (At::Head, true, _) => {
                         given!(s, "lateral moment at the head", "none from above", $M = Moment::ZERO);
                         $M
@@ -101,7 +114,7 @@ macro_rules! statics {
             fn held(s: &mut Sheet, m: &Model, d: Along, at: At) -> Moment {
                 let h = m.h;
                 let Along { $w, $M_h, .. } = d;
-                match (at == At::Middle && $w > LineLoad::ZERO, $M_h == Moment::ZERO) {
+                match (at == At::Middle && m.lateral.w_k > LineLoad::ZERO, m.lateral.M_k == Moment::ZERO) {
                     (false, true) => {
                         given!(s, "moment of the lateral loads", "head held: none here", $M = Moment::ZERO);
                         $M
@@ -147,7 +160,7 @@ macro_rules! statics {
                     );
                     return $V;
                 }
-                if at == At::Head || $w == LineLoad::ZERO {
+                if at == At::Head || m.lateral.w_k == LineLoad::ZERO {
                     calc!(s, "statics, head free", "shear", $V = $H);
                     return $V;
                 }

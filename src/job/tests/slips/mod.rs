@@ -2,6 +2,7 @@
 
 mod contradictions;
 mod figures;
+mod footings;
 mod form;
 mod names;
 
@@ -29,5 +30,5 @@ const fn slip(
 
 /// Every slip.
 pub fn all() -> impl Iterator<Item = &'static Slip> {
-    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS].into_iter().flatten()
+    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS, footings::SLIPS].into_iter().flatten()
 }
