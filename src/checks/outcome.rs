@@ -81,7 +81,9 @@ pub fn links(b: &Building) -> Vec<Link> {
                 of: Vec::new(),
             });
         }
-        out.extend(given.into_iter().flat_map(|l| if name == "footing" { under(b, l) } else { vec![proven(b, l)] }));
+        out.extend(
+            given.into_iter().flat_map(|l| if name == "footing" { under(b, l) } else { vec![proven(b, l)] }),
+        );
     }
     out
 }

@@ -20,8 +20,7 @@ const ALLOWABLE: Limits = Limits::new(20.0, 1000.0, "kN/m2").odd(&[
     Odd::Above(200.0, "much without a report on the ground"),
 ]);
 const OFFSET: Limits = Limits::new(-1000.0, 1000.0, "mm");
-const LINE: Limits =
-    Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
+const LINE: Limits = Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
 
 /// Weight of plain concrete (EN 1991-1-1 Table A.1; from memory, check against the standard).
 const CONCRETE: Weight = Weight::new(24e-6);

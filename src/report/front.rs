@@ -243,11 +243,16 @@ pub fn cautions(b: &Building) -> Vec<String> {
         ));
     }
     out.push(seen);
-    out.push(
-        "Not covered: the steel or concrete beam, its bearing and padstone, the wall and footing below, and movement \
-         and fire. They need calculations of their own."
-            .to_owned(),
-    );
+    // Every return's footing, or none is promised.
+    let ground = if !returns.is_empty() && b.footings().count() == returns.len() {
+        "the wall below, settlement of the ground"
+    } else {
+        "the wall and footing below"
+    };
+    out.push(format!(
+        "Not covered: the steel or concrete beam, its bearing and padstone, {ground}, movement and fire. They \
+         need calculations of their own."
+    ));
     out.push(
         "The resistance of a compressed end by a uniform block, friction at the foot, and flexure in plane are first \
          principles, not formulas of the code. The sheets say so where they stand."

@@ -161,11 +161,11 @@ impl Places<'_> {
         if view.after.is_none() {
             let at = Point::new(middle, self.top - 3.0);
             let words = Text::plain("the resultant leaves the footing: nothing bears");
-            board.note(
-                Note::new(Role::Note, at, words)
-                    .spot(Spot::new(at, 0.0, -1.0))
-                    .spot(Spot::new(at - Vec2::new(0.0, 4.0), 0.0, -1.0)),
-            );
+            board.note(Note::new(Role::Note, at, words).spot(Spot::new(at, 0.0, -1.0)).spot(Spot::new(
+                at - Vec2::new(0.0, 4.0),
+                0.0,
+                -1.0,
+            )));
             return;
         }
         let place = middle + self.ruler.scale.paper(view.resultant);
@@ -249,11 +249,9 @@ impl Places<'_> {
         let v = self.view;
         let mut xs = vec![self.ends.0];
         let mut texts: Vec<Text> = Vec::new();
-        for (part, to) in [
-            (v.beyond_junction, self.wall.0),
-            (v.length, self.wall.1),
-            (v.beyond_free_end, self.ends.1),
-        ] {
+        for (part, to) in
+            [(v.beyond_junction, self.wall.0), (v.length, self.wall.1), (v.beyond_free_end, self.ends.1)]
+        {
             if part > 0.05 {
                 xs.push(to);
                 texts.push(mm(part).into());

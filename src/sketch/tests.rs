@@ -145,7 +145,8 @@ fn awkward_cases_are_sound() {
     (lifting.mark, lifting.length, lifting.beyond_free_end) = ("F3".into(), 500.0, 0.0);
     (lifting.thickness, lifting.resultant) = (600.0, -190.0);
     lifting.before = Some((1.7, Action::new("", "88 kN/m²", "before")));
-    lifting.after = lifting.after.map(|a| Pressure { pressed: 180.0, free: false, rest: 0.0, at_rest: None, ..a });
+    lifting.after =
+        lifting.after.map(|a| Pressure { pressed: 180.0, free: false, rest: 0.0, at_rest: None, ..a });
     let mut gone = footing();
     (gone.mark, gone.after, gone.beyond_junction) = ("F4".into(), None, 75.0);
     let [mut narrow, mut wide] = panels();

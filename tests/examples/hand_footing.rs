@@ -112,9 +112,9 @@ fn a_footing_pressed_over_its_whole_length() {
     };
     let both = (dead + imposed, dead_moment + imposed_moment);
     let hand = [
-        pressed(both.0, both.1, still), // e = 3.997 / 37.18 = 0.1075: 95.3 kN/m²
+        pressed(both.0, both.1, still),    // e = 3.997 / 37.18 = 0.1075: 95.3 kN/m²
         pressed(dead, dead_moment, windy), // e = 5.372 / 29.18 = 0.184: 93.4 kN/m²
-        pressed(both.0, both.1, windy), // e = 6.172 / 37.18 = 0.166: 113.4 kN/m²
+        pressed(both.0, both.1, windy),    // e = 6.172 / 37.18 = 0.166: 113.4 kN/m²
     ];
     assert!((hand[0] - 95.27).abs() < 0.01 && (hand[2] - 113.4).abs() < 0.1, "{hand:?}");
     let text = job("1.0 m", FREE, "0 mm", "");
@@ -145,7 +145,7 @@ fn a_footing_that_lifts() {
     let tilt = 0.56;
     let line = 0.6 * 2.0;
     let still = tilt * 2.5 + tilt * 0.2;
-    let windy = (tilt * 2.5 + line * 2.5 * 2.5 / 2.0) + (tilt + line * 2.5) * 0.2; // 5.15 + 0.712 = 5.862 kNm
+    let windy: f64 = (tilt * 2.5 + line * 2.5 * 2.5 / 2.0) + (tilt + line * 2.5) * 0.2; // 5.15 + 0.712 = 5.862 kNm
     // G + Q: as above.
     let n = 34.3 + 2.88;
     let e = (4.2 - 34.3 * 0.05 + still) / n;
@@ -186,9 +186,9 @@ fn a_held_head_passes_shear_and_no_moment() {
     against(
         &job("2.0 m", held, "0 mm", ""),
         [
-            (of(34.3, 4.2, 0.0), "G + Q, tilt towards the free end"),
-            (of(26.3, 3.0, push), "G + W, wind and tilt towards the free end"),
-            (of(34.3, 4.2, push), "G + Q + W, wind and tilt towards the free end"),
+            (of(34.3, 4.2, 0.0), "G + Q"),
+            (of(26.3, 3.0, push), "G + W, wind towards the free end"),
+            (of(34.3, 4.2, push), "G + Q + W, wind towards the free end"),
         ],
     );
 }
@@ -225,7 +225,7 @@ fn a_wall_off_the_middle_presses_the_far_edge_more() {
 
 #[test]
 fn a_footing_that_turns_over_is_not_adequate() {
-    let section = footing(&job("6.0 m", FREE, "0 mm", ""));
+    let section = footing(&job("8.0 m", FREE, "0 mm", ""));
     let over = &section.sheet.verdicts[1];
     assert!(!over.holds && over.ratio.is_infinite() && over.demand.value.value.is_infinite());
 }

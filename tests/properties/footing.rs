@@ -150,10 +150,7 @@ proptest! {
             let before = worst(&st, GRAVITY);
             let v = &mut st.loads;
             (v.G, v.Q, v.S_G, v.S_Q) = (v.G * times, v.Q * times, v.S_G * times, v.S_Q * times);
-            prop_assert!(worst(&st, GRAVITY) >= before * (1.0 - 1e-9) || times < 1.0 + 1e-9 || before.is_infinite() || {
-                // The footing's own weight does not grow with the loads: it holds a lifting strip down less and less.
-                worst(&st, GRAVITY).is_infinite()
-            });
+            prop_assert!(worst(&st, GRAVITY) >= before * (1.0 - 1e-9), "{} falls", before);
             Ok(())
         })?;
     }

@@ -31,9 +31,8 @@ impl Combination {
     pub fn all(st: &Stands) -> Vec<Self> {
         let of = |imposed, wind, uplift| Self { imposed, wind, uplift };
         let l = st.whole.lateral;
-        let pushed = l.w_k > LineLoad::ZERO
-            || !st.whole.propped && l.H_k > Force::ZERO
-            || l.M_k > Moment::ZERO;
+        let pushed =
+            l.w_k > LineLoad::ZERO || !st.whole.propped && l.H_k > Force::ZERO || l.M_k > Moment::ZERO;
         let mut out = if pushed {
             vec![of(true, false, false), of(false, true, false), of(true, true, false)]
         } else {
@@ -66,11 +65,19 @@ impl Combination {
 impl Case {
     /// Its name, as printed beside a result.
     pub fn name(self, st: &Stands) -> String {
-        if st.pushed() {
-            let push = if self.combination.wind { "wind and tilt" } else { "tilt" };
-            format!("{}, {push} {}", self.combination.name(), self.direction.words())
-        } else {
-            self.combination.name()
+        match self.push(st) {
+            Some(push) => format!("{}, {push} {}", self.combination.name(), self.direction.words()),
+            None => self.combination.name(),
+        }
+    }
+
+    /// What pushes; a head that is held passes the tilt on.
+    pub fn push(self, st: &Stands<'_>) -> Option<&'static str> {
+        match (self.combination.wind, st.whole.propped) {
+            (true, true) => Some("wind"),
+            (true, false) => Some("wind and tilt"),
+            (false, false) => Some("tilt"),
+            (false, true) => None,
         }
     }
 

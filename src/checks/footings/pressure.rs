@@ -121,6 +121,9 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
             actions::tilt_characteristic(s, &st.whole);
         }
     }
+    let source = format!("stated: {}", f.allowable.reason);
+    given!(s, "pressure that the ground is allowed", source.as_str(), p_all = f.allowable.value);
+    let _ = p_all;
     if let Some(before) = f.before {
         given!(s, "dead load per length before", "job file", g_0 = before.dead);
         given!(s, "imposed load per length before", "job file", q_0 = before.imposed);
@@ -172,9 +175,10 @@ pub fn of(s: &mut Sheet, st: &Stands<'_>, case: Case, id: &str) -> Pressed {
         }
     };
     let (p_max, shape) = bears(s, st, (B, L), N_F, M_F, c);
-    let source = format!("stated: {}", st.footing.allowable.reason);
-    given!(s, "pressure that the ground is allowed", source.as_str(), p_all = st.footing.allowable.value);
-    verify!(s, id, "first principles; allowable stated", "pressure on the ground", p_max <= p_all);
+    let p_all = st.footing.allowable.value;
+    // The name of the combination is one word, so that columns are named by it whole.
+    let words = format!("pressure under {}", c.name().replace(' ', "\u{a0}"));
+    verify!(s, id, "first principles; allowable stated", &words, p_max <= p_all);
     let p_0 = before(s, st, k_Q);
     if let Some(p_0) = p_0.filter(|_| p_max.is_finite()) {
         calc!(s, "after less before", "growth by the removal", p_Delta = p_max - p_0);

@@ -76,7 +76,9 @@ fn remarks(s: &mut Sheet, st: &Stands<'_>) {
     let f = st.footing;
     let words = f.words.trim_end_matches('.');
     s.note(match f.proof {
-        Proof::Assumed => format!("The footing was not seen; it is assumed: {words}. A hold point goes with it."),
+        Proof::Assumed => {
+            format!("The footing was not seen; it is assumed: {words}. A hold point goes with it.")
+        }
         _ => format!("The footing was seen: {words}."),
     });
     s.note(
@@ -122,15 +124,11 @@ fn table(st: &Stands<'_>, all: &[(Case, Pressed)]) -> Table {
     if given {
         columns.push(Column::numbers("growth, kN/m²"));
     }
-    columns.extend([
-        Column::numbers("allowed, kN/m²"),
-        Column::numbers("use"),
-        Column::words("pressed"),
-    ]);
+    columns.extend([Column::numbers("allowed, kN/m²"), Column::numbers("use"), Column::words("pressed")]);
     let rows = all
         .iter()
         .map(|(case, x)| {
-            let way = if st.pushed() { case.direction.words() } else { "either" };
+            let way = case.push(st).map_or("either", |_| case.direction.words());
             let mut row = vec![case.combination.name(), way.to_owned()];
             if let Some(p_0) = x.p_0 {
                 row.push(kn_m2(p_0));

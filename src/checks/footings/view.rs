@@ -14,9 +14,8 @@ const FRAME: Frame = Frame::new(120.0, 82.0);
 pub fn drawing(ret: &Return, st: &Stands<'_>, all: &[(Case, Pressed)]) -> Option<Drawing> {
     let (case, x) = worst(all).map(|i| all[i])?;
     let f = st.footing;
-    let pressure = |p: Stress, words: &str| {
-        Action::new("", &print::show("p", p.dynamic()).to_string(), words)
-    };
+    let pressure =
+        |p: Stress, words: &str| Action::new("", &print::show("p", p.dynamic()).to_string(), words);
     let length = pressure::length(st).base();
     let at = x.at.base();
     let free = at >= 0.0;

@@ -22,7 +22,7 @@ pub const SLIPS: &[Slip] = &[
         "allowable = { value = \"100 kN/m2\", reason = \"Stiff clay.\" }",
         "allowable = \"100 kN/m2\"",
         "\"100 kN/m2\"",
-        &["`allowable` is \"100 kN/m2\", which departs from the rule without a reason"],
+        &["`allowable` is the text \"100 kN/m2\", which departs from the rule without a reason"],
     ),
     slip(
         "allowable pressure per metre",
@@ -36,7 +36,7 @@ pub const SLIPS: &[Slip] = &[
         "beyond_free_end = { value = \"120 mm\", reason = \"The old strip runs on.\" }",
         "beyond_free_end = \"120 mm\"",
         "\"120 mm\"",
-        &["`beyond_free_end` is \"120 mm\"", "without a reason"],
+        &["`beyond_free_end` is the text \"120 mm\"", "without a reason"],
     ),
     slip(
         "footing narrower than its wall",
@@ -92,7 +92,7 @@ pub const SLIPS: &[Slip] = &[
         "thickness = \"150 mm\"\nbeyond",
         "thickness = \"150 mm\"\ndensity = { value = \"40 kN/m3\", reason = \"Old iron in it.\" }\nbeyond",
         "\"40 kN/m3\"",
-        &["`value` is \"40 kN/m3\"", "15 kN/m3 to 27 kN/m3"],
+        &["return R1, footing, `density`: `value` is 40 kN/m3", "15 kN/m3 to 27 kN/m3"],
     ),
     slip(
         "entry of a footing misspelt",
