@@ -147,8 +147,8 @@ impl Places<'_> {
         for across in [0.5, 0.3, 0.7] {
             note = note.spot(Spot::new((a + across * (b - a), area.center().y), 0.0, 0.0));
         }
-        let target = Point::new(b - 1.0, area.center().y);
-        note.target = target;
+        note.target = Point::new(b, area.center().y);
+        note = note.spot(Spot::new((b + 1.5, area.center().y), 1.0, 0.0));
         for y in [area.center().y, self.head - 1.0, self.head + 2.0, self.head - 4.5, -0.5] {
             note = note.spot(Spot::new((b + 4.0, y), 1.0, 0.0).led());
         }
@@ -174,7 +174,7 @@ impl Places<'_> {
         let e = view.resultant.abs();
         if e > 0.5 {
             board.line(Pen::Axis, Point::new(place, row - 1.5), Point::new(place, 1.2));
-            dimension::across(board, (middle, place), row, row, Text::value("e", &mm(e)));
+            dimension::across(board, (middle, place), row, row, Text::value("e_F", &mm(e)));
         }
         let tip = Point::new(place, row - 6.0);
         let tail = tip - Vec2::new(0.0, 9.0);
@@ -205,6 +205,12 @@ impl Places<'_> {
         ];
         board.fill(Ink::Stress, polygon(&ring));
         board.stroke(Pen::Diagram, polygon(&ring));
+        // Nothing is written on the diagram.
+        let cells = ((b - a) / deep).ceil().max(1.0);
+        for n in 0..cells as usize {
+            let from = a + (b - a) * n as f64 / cells;
+            board.reserve(Rect::new(from, GAP, from + (b - a) / cells, GAP + deep));
+        }
         board.line(Pen::Beyond, Point::new(a, GAP), Point::new(b, GAP));
         let mut note = Note::new(Role::Load, ring[1], after.at_edge.text()).rank(1);
         for down in [0.75, 0.95, 0.5, 0.3] {

@@ -60,7 +60,7 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
     } else {
         given!(s, "counts beyond the free end", why(&f.beyond_free_end.reason).as_str(), L_e);
         given!(s, "counts beyond the junction", why(&f.beyond_junction.reason).as_str(), L_j);
-        calc!(s, "geometry", "length of the footing that counts", L = L_j + l + L_e);
+        calc!(s, "geometry", "length that counts", L = L_j + l + L_e);
         let _ = L;
         if L_e == L_j {
             Length::ZERO
@@ -77,9 +77,10 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
     };
     given!(s, "weight of the footing per volume", source.as_str(), g_c = f.density.value);
     calc!(s, "statics", "weight of the footing", G_F = g_c * B * t_F * L);
-    let source = format!("load table of {}, flange left out", st.mark);
+    let left = if st.flanged { ", flange left out" } else { "" };
+    let source = format!("load table of {}{left}", st.mark);
     let source = source.as_str();
-    given!(s, "dead load at the foot of the return", source, G = v.G);
+    given!(s, "dead load at the foot", source, G = v.G);
     given!(s, "imposed load", source, Q = v.Q);
     given!(s, "first moment of the dead load", source, S_G = v.S_G);
     given!(s, "first moment of the imposed load", source, S_Q = v.S_Q);
@@ -125,8 +126,8 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
     given!(s, "pressure that the ground is allowed", source.as_str(), p_all = f.allowable.value);
     let _ = p_all;
     if let Some(before) = f.before {
-        given!(s, "dead load per length before", "job file", g_0 = before.dead);
-        given!(s, "imposed load per length before", "job file", q_0 = before.imposed);
+        given!(s, "dead load before", "job file", g_0 = before.dead);
+        given!(s, "imposed load before", "job file", q_0 = before.imposed);
         let _ = (g_0, q_0);
     }
     (L, x_F, G_F)

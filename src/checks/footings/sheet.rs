@@ -95,6 +95,9 @@ fn remarks(s: &mut Sheet, st: &Stands<'_>) {
              on the return passes no moment to its foot.",
         );
     }
+    if !Combination::all(st).iter().any(|c| c.wind) {
+        s.note("No wind comes down to this footing: with W the combinations would be the same as without.");
+    }
     if st.flanged {
         s.note(
             "The flange is left out: what it brings goes down to the footing of the wall met, which is not this \

@@ -46,7 +46,8 @@ pub fn drawing(ret: &Return, st: &Stands<'_>, all: &[(Case, Pressed)]) -> Option
         beyond_free_end: f.beyond_free_end.value.base(),
         thickness: f.thickness.base(),
         words: format!("{} mm wide, {word}", print::show("L", f.width.dynamic()).value),
-        resultant: at.round(),
+        // As many digits as the sheet prints.
+        resultant: if at.abs() < 10.0 { (at * 10.0).round() / 10.0 } else { at.round() },
         force: Action::new("N_F", &print::show("N_F", x.N_F.dynamic()).to_string(), ""),
         after,
         before,
