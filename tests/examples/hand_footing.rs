@@ -229,3 +229,36 @@ fn a_footing_that_turns_over_is_not_adequate() {
     let over = &section.sheet.verdicts[1];
     assert!(!over.holds && over.ratio.is_infinite() && over.demand.value.value.is_infinite());
 }
+
+/// Both leaves of a cavity wall stand on the footing, each at its own place, though one alone takes wind.
+#[test]
+fn a_cavity_wall_presses_with_both_leaves() {
+    let cavity = r#"
+[build_ups.wall]
+cavity = "60 mm"
+[[build_ups.wall.leaves]]
+material = "block"
+thickness = "100 mm"
+[[build_ups.wall.leaves]]
+material = "block"
+thickness = "140 mm"
+loaded = true
+"#;
+    let plain = job("1.0 m", FREE, "0 mm", "");
+    let start = plain.find("[build_ups.wall]").expect("the wall");
+    let end = plain.find("[[storeys]]").expect("the house");
+    let section = footing(&format!("{}{cavity}{}", &plain[..start], &plain[end..]));
+    // Own weights of 20 x 0.9 x 2.5 = 45 kN per metre of thickness; beam on the inner leaf.
+    let (outer, inner) = (4.5, 6.3 + 20.0);
+    close(values(&section, "G")[0], (outer + inner) * 1e3);
+    // The wall is 300 mm thick: leaves 100 and 80 mm from its middle, outwards and inwards.
+    let across = inner * 0.080 - outer * 0.100;
+    close(values(&section, "T_G")[0], across * 1e6);
+    // G + Q: the tilt as for one leaf.
+    let n = outer + inner + 8.0 + 2.88;
+    let e = (4.2 - (n - 2.88) * 0.05 + 1.512) / n;
+    let e_y = (across + 8.0 * 0.080) / n;
+    assert!(e < 0.2 && e_y < 0.5 / 6.0, "{e} {e_y}");
+    let hand = n / 0.6 * (1.0 + 6.0 * e / 1.2) * (1.0 + 6.0 * e_y / 0.5);
+    close(section.sheet.verdicts[0].demand.value.value, hand * 1e-3);
+}

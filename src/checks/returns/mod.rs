@@ -1,7 +1,7 @@
 //! A return: a short length of wall that takes wind in its plane.
 //!
 //! * [`build`]: geometry and loads of one return, on the sheet; [`lateral`]: how the wind reaches it
-//! * [`check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
+//! * [`mod@check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
 //! * [`statics`]: moment and shear of wind and tilt, once for design and once for characteristic values
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
