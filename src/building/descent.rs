@@ -1,6 +1,6 @@
 //! The plan led down to the ground: what every wall carries, before the removal and after it.
 
-use super::{Along, Building, Load, PlanWall};
+use super::{Along, Before, Building, Load, PlanWall};
 use crate::quantity::{Force, Length, LineLoad};
 use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 
@@ -185,6 +185,19 @@ pub fn take_loads(b: &mut Building, panels: &[String]) {
         let Some(storey) = number(b, &r.storey).filter(|_| r.loads.is_empty()) else { continue };
         let loads = down.on_return(b, &r.mark.clone(), storey);
         b.returns[i].loads = loads;
+    }
+    for i in 0..b.returns.len() {
+        let r = &b.returns[i];
+        // A footing lies under the lowest storey.
+        if number(b, &r.storey) != Some(0) || r.footing.as_ref().is_none_or(|f| f.before.is_some()) {
+            continue;
+        }
+        let Some((wall, on)) = down.before.wall(b, &r.mark, 0) else { continue };
+        let (length, foot) = (wall.place.to - wall.place.from, on.foot.total());
+        let per = |x: f64| LineLoad::new(x / length);
+        if let Some(f) = &mut b.returns[i].footing {
+            f.before = Some(Before { led: true, dead: per(foot[0]), imposed: per(foot[1]) });
+        }
     }
     for i in 0..b.panels.len() {
         let p = &b.panels[i];

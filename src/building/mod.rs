@@ -20,8 +20,8 @@ pub use parts::{
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
 pub use things::{
-    Arching, Assumption, Bearing, BracingWall, Edge, Flange, FromAbove, Head, HoldPoint, Link, Load,
-    Padstone, Panel, Photograph, Removed, Return, Span, Stability,
+    Arching, Assumption, Bearing, Before, BracingWall, Edge, Flange, Footing, FromAbove, Head, HoldPoint,
+    Link, Load, Padstone, Panel, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Joists, PanelRoute, Path, Proof,
@@ -105,6 +105,11 @@ impl Building {
     /// The panel marked `mark`.
     pub fn panel(&self, mark: &str) -> Option<&Panel> {
         self.panels.iter().find(|p| p.mark == mark)
+    }
+
+    /// Every footing, with the return that stands on it.
+    pub fn footings(&self) -> impl Iterator<Item = (&Return, &Footing)> {
+        self.returns.iter().filter_map(|r| Some((r, r.footing.as_ref()?)))
     }
 
     /// The storey marked `mark`.

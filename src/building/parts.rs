@@ -229,6 +229,18 @@ impl BuildUp {
     pub fn loaded(&self) -> (usize, &Leaf) {
         self.leaves.iter().enumerate().find(|(_, l)| l.loaded).unwrap_or((0, &self.leaves[0]))
     }
+
+    /// Thickness of the whole wall: leaves and cavity.
+    pub fn whole(&self) -> Length {
+        self.leaves.iter().map(|l| l.thickness).sum::<Length>() + self.cavity.unwrap_or(Length::ZERO)
+    }
+
+    /// Middle of leaf `k` from the middle of the wall, positive towards the inner leaf.
+    pub fn place_of(&self, k: usize) -> Length {
+        let before: Length = self.leaves[..k].iter().map(|l| l.thickness).sum();
+        let cavity = if k > 0 { self.cavity.unwrap_or(Length::ZERO) } else { Length::ZERO };
+        before + cavity + self.leaves[k].thickness / 2.0 - self.whole() / 2.0
+    }
 }
 
 /// One storey.

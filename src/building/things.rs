@@ -3,7 +3,7 @@
 use super::{
     Acts, Along, BaseJoint, Cause, Ends, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
 };
-use crate::quantity::{Force, Length, LineLoad, Moment, Num, Stress};
+use crate::quantity::{Force, Length, LineLoad, Moment, Num, Stress, Weight};
 
 /// The wall that comes out.
 #[derive(Clone, Debug)]
@@ -181,6 +181,46 @@ pub struct Return {
     pub loads: Vec<Load>,
     /// Junction with the supported wall.
     pub junction: Flange,
+    /// What it stands on in the ground, where that is to be checked.
+    pub footing: Option<Footing>,
+}
+
+/// The strip footing under a return.
+#[derive(Clone, Debug)]
+pub struct Footing {
+    /// Mark.
+    pub mark: String,
+    /// Width, across the wall.
+    pub width: Length,
+    /// Thickness of the concrete.
+    pub thickness: Length,
+    /// How far it counts beyond the free end of the return; 0 has an empty reason.
+    pub beyond_free_end: Cause<Length>,
+    /// How far it counts beyond the junction end; 0 has an empty reason.
+    pub beyond_junction: Cause<Length>,
+    /// Weight of the footing; the usual one has an empty reason.
+    pub density: Cause<Weight>,
+    /// Pressure that the ground is allowed.
+    pub allowable: Cause<Stress>,
+    /// Seen or assumed.
+    pub proof: Proof,
+    /// Who saw it and when, or what is assumed.
+    pub words: String,
+    /// Middle of the wall from the middle of the footing, positive towards the inner leaf.
+    pub offset: Length,
+    /// What pressed it before the removal.
+    pub before: Option<Before>,
+}
+
+/// Characteristic loads per length on a footing before the removal, without the footing itself.
+#[derive(Clone, Copy, Debug)]
+pub struct Before {
+    /// It comes from the plan, not from the job file.
+    pub led: bool,
+    /// Dead.
+    pub dead: LineLoad,
+    /// Imposed.
+    pub imposed: LineLoad,
 }
 
 /// Where a beam bears on a return. Dead load, imposed load, place and eccentricity are those of the load.

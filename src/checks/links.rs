@@ -39,17 +39,50 @@ pub fn links(b: &Building) -> Vec<Link> {
     out
 }
 
+/// Marks of the walls outside this pack that hold the heads of returns.
+fn held_elsewhere(b: &Building) -> Vec<String> {
+    let mut out: Vec<String> = Vec::new();
+    for r in &b.returns {
+        let Head::Propped(walls) = &r.head else { continue };
+        let elsewhere = walls.iter().filter(|w| !b.returns.iter().any(|o| o.mark == **w));
+        out.extend(elsewhere.filter(|w| !out.contains(w)).cloned().collect::<Vec<_>>());
+    }
+    out
+}
+
+/// The footings that a link is about: those that this pack calculates, and the rest, which is assumed
+/// where the link claims a calculation.
+fn under(b: &Building, link: &Link) -> Vec<Link> {
+    if link.proof != Proof::Calculated || !link.words.trim().is_empty() {
+        return vec![link.clone()];
+    }
+    let about: Vec<String> = if link.of.is_empty() {
+        b.returns.iter().map(|r| r.mark.clone()).chain(held_elsewhere(b)).collect()
+    } else {
+        link.of.clone()
+    };
+    let (here, rest): (Vec<String>, Vec<String>) =
+        about.into_iter().partition(|m| b.footings().any(|(r, f)| r.mark == *m || f.mark == *m));
+    let mut out = Vec::new();
+    if !here.is_empty() {
+        out.push(Link { of: here, ..link.clone() });
+    }
+    if !rest.is_empty() || out.is_empty() {
+        out.push(unnamed(link, rest));
+    }
+    out
+}
+
 /// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
 fn proven(b: &Building, link: &Link) -> Vec<Link> {
-    let held_elsewhere = b.returns.iter().any(|r| match &r.head {
-        Head::Free => false,
-        Head::Propped(walls) => walls.iter().any(|w| !b.returns.iter().any(|o| o.mark == *w)),
-    });
+    if link.link == "footing" {
+        return under(b, link);
+    }
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
-        "bracing wall" => !b.floors.is_empty() || !b.returns.is_empty() && !held_elsewhere,
+        "bracing wall" => !b.floors.is_empty() || !b.returns.is_empty() && held_elsewhere(b).is_empty(),
         "junction" | "dpc" => !b.returns.is_empty(),
-        // Floors say below how far they are calculated; footings are not calculated in this pack.
+        // Floors say below how far they are calculated.
         _ => false,
     };
     if link.proof != Proof::Calculated || here || !link.words.trim().is_empty() {

@@ -5,6 +5,7 @@ pub mod bearings;
 pub mod chain;
 pub mod diaphragm;
 pub mod floor_edge;
+pub mod footings;
 pub mod links;
 pub mod loads;
 pub mod masonry;

@@ -53,28 +53,42 @@ pub struct Hold {
     pub closed: Option<String>,
 }
 
+/// Marks with those of the footings under them, and those of the returns above them.
+fn with_footings(b: &Building, mut of: Vec<String>) -> Vec<String> {
+    for (r, f) in b.footings() {
+        let (above, below) = (of.contains(&r.mark), of.contains(&f.mark));
+        if above && !below {
+            of.push(f.mark.clone());
+        } else if below && !above {
+            of.push(r.mark.clone());
+        }
+    }
+    of
+}
+
 /// Hold points: those given, one for every link that is assumed, one for every junction that is
-/// counted on but not seen, one for every floor edge without straps that were seen, one for the class.
+/// counted on but not seen, one for every footing that nobody saw, one for every floor edge without
+/// straps that were seen, one for the class.
 pub fn holds(b: &Building) -> Vec<Hold> {
     let floors = links::floors(b);
     let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
     let assumed = links::links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
         let text = links::hold_text(&l);
+        let of = if l.link == "footing" { with_footings(b, l.of) } else { l.of };
         // A floor edge stands in the way of everything behind it, not of its panel alone.
-        let of = floors.iter().find(|f| f.0 == text).map_or(l.of, |f| f.1.clone());
+        let of = floors.iter().find(|f| f.0 == text).map_or(of, |f| f.1.clone());
         (text, of, None)
     });
-    let told = |mark: &str| {
+    let told = |link: &str, marks: [&str; 2]| {
         b.links.iter().any(|l| {
-            l.link == "junction"
+            l.link == link
                 && l.proof == Proof::Assumed
-                && (l.of.is_empty() || l.of.iter().any(|m| m == mark))
+                && (l.of.is_empty() || l.of.iter().any(|m| marks.contains(&m.as_str())))
         })
     };
-    let unseen = b
-        .returns
-        .iter()
-        .filter(|r| r.junction.bonded && r.junction.proof == Proof::Assumed && !told(&r.mark));
+    let unseen = b.returns.iter().filter(|r| {
+        r.junction.bonded && r.junction.proof == Proof::Assumed && !told("junction", [&r.mark, &r.mark])
+    });
     let junctions = unseen.map(|r| {
         let text = format!(
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",
@@ -82,10 +96,20 @@ pub fn holds(b: &Building) -> Vec<Hold> {
         );
         (text, vec![r.mark.clone()], None)
     });
+    let buried =
+        b.footings().filter(|(r, f)| f.proof == Proof::Assumed && !told("footing", [&r.mark, &f.mark]));
+    let footings = buried.map(|(r, f)| {
+        let text = format!(
+            "Before the wall comes down: dig down to the footing under {}, measure its width, its thickness and how \
+             far it runs, and see the ground. {}",
+            r.mark, f.words
+        );
+        (text, vec![r.mark.clone(), f.mark.clone()], None)
+    });
     let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None));
     let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None));
     let mut all: Vec<(String, Vec<String>, Option<String>)> = Vec::new();
-    for hold in given.chain(assumed).chain(junctions).chain(floor).chain(class) {
+    for hold in given.chain(assumed).chain(junctions).chain(footings).chain(floor).chain(class) {
         // A link and the floor edge that it is about may ask for the same.
         if !all.contains(&hold) {
             all.push(hold);

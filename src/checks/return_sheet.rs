@@ -2,15 +2,15 @@
 
 use super::returns::build::Inputs;
 use super::returns::check;
-use super::{Job, Section, return_views};
+use super::{Job, Section, footings, return_views};
 use crate::trace::Sheet;
 
-/// One section a return.
+/// One section a return, and behind it one for its footing.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
     job.building
         .returns
         .iter()
-        .map(|ret| {
+        .flat_map(|ret| {
             let mut sheet = Sheet::recorder();
             let mut drawings = Vec::new();
             match &job.wind {
@@ -27,13 +27,14 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                 }
                 Err(outside) => sheet.leave(outside.clone()),
             }
-            Section {
+            let section = Section {
                 id: ret.mark.clone(),
                 mark: ret.mark.clone(),
                 title: ret.title.clone(),
                 sheet,
                 drawings,
-            }
+            };
+            std::iter::once(section).chain(footings::section(job, ret))
         })
         .collect()
 }

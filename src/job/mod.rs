@@ -7,8 +7,8 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis materials plan ground returns bearing bearings panels floors closing`: the parts, in the
-//!   file's order
+//! * `identity basis materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
+//!   the file's order
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -19,6 +19,7 @@ mod date;
 mod entry;
 mod figure;
 mod floors;
+mod footing;
 mod ground;
 mod identity;
 mod limits;
@@ -145,6 +146,13 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         returns::together(&returns, &around);
         (returns, panels)
     };
+    let footings = returns::footings(&returns);
+    for (i, (mark, place)) in footings.iter().enumerate() {
+        returns.refuse_twice(reader, mark, place);
+        panels.refuse_twice(reader, mark, place);
+        bracing.refuse_twice(reader, mark, place);
+        returns::footing_twice(reader, &footings[..i], mark, place);
+    }
     something_to_check(root, !floors.is_empty());
 
     let floor_edges =
@@ -185,6 +193,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     }
 
     let marks: Vec<&str> = (returns.list().into_iter())
+        .chain(footings.iter().map(|(mark, _)| mark.as_str()))
         .chain(bearings.list())
         .chain(panels.list())
         .chain(floor_edges.list())

@@ -205,6 +205,12 @@ impl<'a> Table<'a> {
         self.map.get(key).and_then(|v| v.get_ref().as_str())
     }
 
+    /// The text of `inner` in the table `key`, with its place; nothing is recorded.
+    pub fn peek_under(&self, key: &str, inner: &str) -> Option<(String, Span)> {
+        let value = self.map.get(key)?.get_ref().get(inner)?;
+        Some((value.get_ref().as_str()?.to_owned(), value.span()))
+    }
+
     /// The flag `key` where it is one; nothing is recorded.
     pub fn peek_flag(&self, key: &str) -> Option<bool> {
         self.map.get(key).and_then(|v| v.get_ref().as_bool())

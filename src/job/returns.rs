@@ -1,12 +1,13 @@
 //! `[[returns]]`: what stays and braces.
 
 use super::bearing;
-use super::entry::Entry;
+use super::entry::{Entry, quoted};
+use super::footing;
 use super::ground::{self, DRAWN, HEIGHT, STRIP};
 use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
 use super::plan::plan_length;
-use super::reader::Table;
+use super::reader::{Reader, Span, Table};
 use crate::building::{
     Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
     Restraint, Return, Stability, Stands, Storey,
@@ -114,6 +115,14 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         .need("junction")
         .table(&format!("{}, junction", t.name))
         .and_then(|j| bearing::junction(&j, around));
+    let footing = if t.has("footing") {
+        t.need("footing")
+            .table(&format!("{}, footing", t.name))
+            .and_then(|f| footing::read(&f, t, wall))
+            .map(Some)
+    } else {
+        Some(None)
+    };
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
         against_storey(t, height, seen.item.as_ref(), &seen.table);
@@ -173,7 +182,26 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         acts: acts?,
         loads: loads.into_iter().collect::<Option<_>>()?,
         junction: junction?,
+        footing: footing?,
     })
+}
+
+/// Marks of the footings with their places, whether the rest of them could be read or not.
+pub fn footings(returns: &Names<'_, Return>) -> Vec<(String, Span)> {
+    returns.iter().filter_map(|seen| seen.table.peek_under("footing", "mark")).collect()
+}
+
+/// Records the mark of a footing that an earlier one has.
+pub fn footing_twice(reader: &Reader, earlier: &[(String, Span)], mark: &str, place: &Span) {
+    let Some((_, first)) = earlier.iter().find(|(m, _)| m.to_lowercase() == mark.to_lowercase()) else {
+        return;
+    };
+    reader
+        .fault(Kind::Contradiction, format!("two footings have the mark {}", quoted(mark)))
+        .at(place.clone(), "here again")
+        .and(first.clone(), "first")
+        .allowed("each mark once; case does not tell marks apart")
+        .help("give one of them another mark");
 }
 
 fn base(t: &Table<'_>) -> (Option<BaseJoint>, Option<String>) {

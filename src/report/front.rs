@@ -268,17 +268,23 @@ pub fn cautions(b: &Building) -> Vec<String> {
     }
     out.push(seen);
     let bearings: Vec<&str> = b.bearings.iter().map(|x| x.mark.as_str()).collect();
-    out.push(if bearings.is_empty() {
-        "Not covered: the steel or concrete beam, its bearing and padstone, the wall and footing below, and movement \
-         and fire. They need calculations of their own."
-            .to_owned()
+    let beam = if bearings.is_empty() {
+        "the steel or concrete beam, its bearing and padstone".to_owned()
     } else {
         format!(
-            "Not covered: the steel or concrete beam itself, bearings other than {}, bending and splitting of padstones, \
-             the wall and footing below, and movement and fire. They need calculations of their own.",
+            "the steel or concrete beam itself, bearings other than {}, bending and splitting of padstones",
             list(&bearings)
         )
-    });
+    };
+    // Every return's footing, or none is promised.
+    let ground = if !returns.is_empty() && b.footings().count() == returns.len() {
+        "the wall below, settlement of the ground"
+    } else {
+        "the wall and footing below"
+    };
+    out.push(format!(
+        "Not covered: {beam}, {ground}, movement and fire. They need calculations of their own."
+    ));
     out.push(
         "The resistance of a compressed end by a uniform block, friction at the foot, and flexure in plane are first \
          principles, not formulas of the code. The sheets say so where they stand."

@@ -106,6 +106,29 @@ prop_compose! {
     }
 }
 
+prop_compose! {
+    fn any_footing()(
+        length in 200..2500_i32, thickness in 60..900_i32, beyond in (0..300_i32, 0..300_i32), place in -0.49..0.49_f64,
+        before in proptest::option::of(0.1..3.0_f64), gone: bool, long: bool,
+    ) -> FootingSketch {
+        let (length, thickness) = (f64::from(length), f64::from(thickness));
+        let (junction, free) = (f64::from(beyond.0), f64::from(beyond.1));
+        let whole = length + junction + free;
+        let e = place.abs();
+        let lifts = e > 1.0 / 6.0;
+        let base = footing();
+        let after = base.after.filter(|_| !gone).map(|a| Pressure {
+            pressed: if lifts { (3.0 * (0.5 - e) * whole).round() } else { whole }, free: place >= 0.0,
+            rest: if lifts { 0.0 } else { (1.0 - 6.0 * e) / (1.0 + 6.0 * e) }, at_rest: a.at_rest.clone().filter(|_| !lifts), ..a
+        });
+        FootingSketch {
+            length, thickness, beyond_junction: junction, beyond_free_end: free, resultant: (place * whole).round(), after,
+            before: before.map(|b| (b, Action::new("", "62.1 kN/m²", "before"))),
+            words: if long { "1200 mm wide, assumed" } else { "450 mm wide, seen" }.into(), ..base
+        }
+    }
+}
+
 fn any_edge() -> impl Strategy<Value = Edge> {
     prop_oneof![
         Just(edge(Support::Free, "")),
@@ -209,6 +232,14 @@ prop_compose! {
 
 proptest! {
     #![proptest_config(ProptestConfig { cases: 48, failure_persistence: None, ..ProptestConfig::default() })]
+
+    #[test]
+    fn any_footing_is_sound_and_true(view in any_footing()) {
+        let drawing = footing_sketch(&view, FRAME);
+        sound(&drawing);
+        prop_assert!(has_length(&drawing, Pen::Outline, view.length + view.beyond_junction + view.beyond_free_end));
+        prop_assert!(has_length(&drawing, Pen::Outline, view.thickness));
+    }
 
     #[test]
     fn any_return_elevation_is_sound_and_true(view in any_elevation()) {

@@ -124,6 +124,29 @@ pub fn actions(propped: bool) -> ReturnActions {
     }
 }
 
+pub fn footing() -> FootingSketch {
+    FootingSketch {
+        mark: "F1".into(),
+        of: "R1".into(),
+        length: 890.0,
+        beyond_junction: 0.0,
+        beyond_free_end: 150.0,
+        thickness: 150.0,
+        words: "450 mm wide, seen".into(),
+        resultant: 74.0,
+        force: Action::new("N_F", "44.2 kN", ""),
+        after: Some(Pressure {
+            pressed: 1040.0,
+            free: true,
+            at_edge: Action::new("", "134.7 kN/m²", ""),
+            rest: 0.402,
+            at_rest: Some(Action::new("", "54.2 kN/m²", "")),
+        }),
+        before: Some((0.46, Action::new("", "62.1 kN/m²", "before"))),
+        case: "G + Q".into(),
+    }
+}
+
 pub fn edge(support: Support, why: &str) -> Edge {
     Edge { support, why: why.into() }
 }

@@ -95,6 +95,7 @@ fn hand_cases_are_sound() {
         return_actions(&actions(false), FRAME),
         return_actions(&actions(true), FRAME),
         panel_section(&wall_section(), FRAME),
+        footing_sketch(&footing(), FRAME),
         key_plan(&plan(), FRAME),
         load_stack(&stack(), FRAME),
         stability_plan(&stability(), FRAME),
@@ -146,6 +147,14 @@ fn awkward_cases_are_sound() {
     tall.mark = "R4".into();
     (tall.length, tall.flange, tall.wall) =
         (2400.0, Some(Flange { width: 1200.0, thickness: 100.0 }), Side::Right);
+    let mut lifting = footing();
+    (lifting.mark, lifting.length, lifting.beyond_free_end) = ("F3".into(), 500.0, 0.0);
+    (lifting.thickness, lifting.resultant) = (600.0, -190.0);
+    lifting.before = Some((1.7, Action::new("", "88 kN/m²", "before")));
+    lifting.after =
+        lifting.after.map(|a| Pressure { pressed: 180.0, free: false, rest: 0.0, at_rest: None, ..a });
+    let mut gone = footing();
+    (gone.mark, gone.after, gone.beyond_junction) = ("F4".into(), None, 75.0);
     let [mut narrow, mut wide] = panels();
     (narrow.mark, narrow.length, narrow.height) = ("P2".into(), 800.0, 4000.0);
     narrow.openings.clear();
@@ -163,6 +172,8 @@ fn awkward_cases_are_sound() {
         return_elevation(&long, FRAME),
         return_section(&flanged, FRAME),
         return_section(&tall, FRAME),
+        footing_sketch(&lifting, FRAME),
+        footing_sketch(&gone, FRAME),
         panel_elevation(&narrow, Frame::new(80.0, 110.0)),
         panel_elevation(&wide, FRAME),
         key_plan(&crowded, FRAME),
@@ -188,6 +199,7 @@ fn small_frames_are_kept() {
     drawings.push(panel_section(&wall_section(), column));
     drawings.push(bearing_elevation(&bearing(true), column));
     drawings.push(bearing_section(&across(true), column));
+    drawings.push(footing_sketch(&footing(), column));
     drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
     drawings.push(load_stack(&stack(), column));
     for drawing in &drawings {

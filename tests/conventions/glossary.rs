@@ -32,15 +32,27 @@ fn written() -> BTreeSet<String> {
                 out.extend(bound(&code[at + opening.len()..]));
             }
         }
+        out.extend(given_names(code));
     }
     out
+}
+
+/// Names that a macro of statics is given for what it binds, after the `=>` of its call.
+fn given_names(code: &str) -> Vec<String> {
+    let calls = code.match_indices("\nstatics! {").filter_map(|(at, _)| code[at..].split('}').next());
+    let lists = calls.filter_map(|call| call.split_once("=>")).map(|(_, names)| names);
+    let names = lists.flat_map(|list| list.split(|c: char| !(c.is_alphanumeric() || c == '_')));
+    names.filter(|n| !n.is_empty()).map(str::to_owned).collect()
 }
 
 /// The name that a macro call binds: the word before the first ` = ` outside quotes, or the last word of a
 /// call that has none.
 fn bound(call: &str) -> Option<String> {
-    let word =
-        |t: &str| t.trim_end().rsplit(|c: char| !(c.is_alphanumeric() || c == '_')).next().map(str::to_owned);
+    // A name with a `$` is that of a macro's own call.
+    let word = |t: &str| {
+        let last = t.trim_end().rsplit(|c: char| !(c.is_alphanumeric() || c == '_' || c == '$')).next();
+        last.filter(|n| !n.starts_with('$')).map(str::to_owned)
+    };
     let mut quoted = false;
     for (i, c) in call.char_indices() {
         match c {

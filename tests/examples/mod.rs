@@ -6,6 +6,7 @@ mod flanged_sections;
 mod hand_bearing;
 pub mod hand_diaphragm;
 pub mod hand_floor_edge;
+mod hand_footing;
 mod hand_frame;
 mod hand_panel;
 mod hand_return;

@@ -5,6 +5,7 @@ mod choices;
 mod continuity;
 mod flange;
 mod floors;
+mod footing;
 mod jobs;
 mod loads;
 mod outcome;

@@ -88,3 +88,56 @@ fn words() {
         assert_eq!(outcome.kind(), kind);
     }
 }
+
+/// A link "footing" is calculated for the returns whose footing this pack has, and assumed for the rest.
+#[test]
+fn a_footing_is_calculated_only_where_it_is_here() {
+    let (_, text) =
+        crate::jobs::demos().into_iter().find(|(n, _)| n.contains("rear-opening")).expect("the demo job");
+    let links = |text: &str| {
+        let b = perpend::job::read("links.toml", text).unwrap_or_else(|e| panic!("{}", e.render(false)));
+        perpend::checks::links::links(&b)
+            .into_iter()
+            .filter(|l| l.link == "footing")
+            .map(|l| (l.of.join(" "), l.proof.word()))
+            .collect::<Vec<_>>()
+    };
+    let own = |of: &str, proof| (of.to_owned(), proof);
+    assert_eq!(links(&text), [own("R1 R2", "calculated")]);
+    // About all: the walls that hold the heads stand on footings too.
+    let all = text.replace("for = [\"R1\", \"R2\"]", "");
+    assert_eq!(links(&all), [own("R1 R2", "calculated"), own("party wall flank wall", "assumed")]);
+    // By the mark of the footing, and a return without one.
+    let start = text.find("[returns.footing]\nmark = \"F2\"").expect("F2");
+    let end = start + text[start..].find("\n\n").expect("an empty line");
+    let less = format!("{}{}", &text[..start], &text[end..]);
+    assert_eq!(links(&less), [own("R1", "calculated"), own("R2", "assumed")]);
+    assert_eq!(links(&less.replace("for = [\"R1\", \"R2\"]", "for = [\"F1\"]")), [own("F1", "calculated")]);
+    // Elsewhere, by name.
+    let words = less.replace("for = [\"R1\", \"R2\"]", "words = \"Sheet 12 of the builder's engineer.\"");
+    assert_eq!(links(&words), [own("", "calculated")]);
+}
+
+/// A footing that nobody saw is a hold point of the return and of the footing, unless a link tells of it.
+#[test]
+fn a_footing_not_seen_is_held() {
+    let (_, text) =
+        crate::jobs::demos().into_iter().find(|(n, _)| n.contains("hold-points")).expect("the demo job");
+    let holds = |text: &str| {
+        let (_, results) = perpend::check("holds.toml", text).unwrap_or_else(|e| panic!("{e}"));
+        let mut of: Vec<String> = results
+            .holds
+            .iter()
+            .filter(|h| h.of.iter().any(|m| m.starts_with('F')))
+            .map(|h| h.of.join(" "))
+            .collect();
+        of.sort();
+        (of, results.outcome)
+    };
+    // The link tells of R1, the footing of R2 for itself.
+    assert_eq!(holds(&text), (vec!["R1 F1".to_owned(), "R2 F2".to_owned()], Outcome::Conditional(5)));
+    let told = text
+        .replace("measure the footing.\"\nfor = [\"R1\"]", "measure the footing.\"\nfor = [\"F1\", \"R2\"]");
+    let (of, outcome) = holds(&told);
+    assert_eq!((of, outcome), (vec!["F1 R2 R1 F2".to_owned()], Outcome::Conditional(4)));
+}

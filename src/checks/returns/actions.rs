@@ -1,8 +1,10 @@
 //! Design actions on a section of a return, for one combination and one direction of the wind.
 
 use super::model::{At, Flange, Model, Vertical};
-use crate::quantity::functions::{abs, metres, sq, sqrt};
-use crate::quantity::{Force, Length, LineLoad, Moment, Num};
+use super::statics;
+pub use super::statics::design::Along as Design;
+use crate::quantity::functions::{abs, metres, sqrt};
+use crate::quantity::{Force, Length, Moment, Num};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
 use crate::trace::Sheet;
@@ -126,7 +128,8 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         );
         (N_Ed, M_N)
     };
-    let (M_W, V_Ed) = lateral(s, m, annex, gamma_W, at);
+    let H_nu = tilt(s, m, annex);
+    let (M_W, V_Ed) = statics::design::at(s, m, gamma_W, H_nu, at);
     let flange = m.flange.filter(|_| at == At::Foot);
     // Positive presses the free end.
     let signed = if case.direction == Direction::ToFree { M_N + M_W } else { M_N - M_W };
@@ -155,137 +158,15 @@ fn toe(m: &Model, flange: Option<Flange>, N_Ed: Force, signed: Moment) -> Toe {
     }
 }
 
-/// Lateral actions at the head and along the height, at design value.
-#[derive(Clone, Copy, Debug)]
-pub struct Design {
-    /// Force at the head, tilt included.
-    pub H_Ed: Force,
-    /// Line load.
-    pub w_Ed: LineLoad,
-    /// Moment at the head.
-    pub M_h: Moment,
-}
-
-/// Wind and tilt at design value; `gamma_W` stands on the sheet. What is nought is not printed.
+/// Wind and tilt at design value; `gamma_W` stands on the sheet.
 pub fn design(s: &mut Sheet, m: &Model, annex: &Annex, gamma_W: Num) -> Design {
-    let (w_k, H_k, M_k) = (m.lateral.w_k, m.lateral.H_k, m.lateral.M_k);
     let H_nu = tilt(s, m, annex);
-    calc!(s, "EN 1990 6.4.3.2", "force at the head, tilt included", H_Ed = gamma_W * H_k + H_nu);
-    let w_Ed = if w_k == LineLoad::ZERO {
-        LineLoad::ZERO
-    } else {
-        calc!(s, "EN 1990 6.4.3.2", "line load", w_Ed = gamma_W * w_k);
-        w_Ed
-    };
-    let M_h = if M_k == Moment::ZERO {
-        Moment::ZERO
-    } else {
-        calc!(s, "EN 1990 6.4.3.2", "moment at the head", M_h = gamma_W * M_k);
-        M_h
-    };
-    Design { H_Ed, w_Ed, M_h }
-}
-
-/// Moment and shear of wind and tilt at the section.
-fn lateral(s: &mut Sheet, m: &Model, annex: &Annex, gamma_W: Num, at: At) -> (Moment, Force) {
-    let d = design(s, m, annex, gamma_W);
-    let M_W = if m.propped { held(s, m, d, at) } else { cantilever(s, m, d, at) };
-    let V_Ed = shear(s, m, d, at);
-    (M_W, V_Ed)
-}
-
-/// Moment of the lateral loads in a cantilever.
-fn cantilever(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
-    let h = m.h;
-    let Design { H_Ed, w_Ed, M_h } = d;
-    match (at, M_h == Moment::ZERO, w_Ed == LineLoad::ZERO) {
-        (At::Head, true, _) => {
-            given!(s, "lateral moment at the head", "none from above", M_W = Moment::ZERO);
-            M_W
-        }
-        (At::Head, false, _) => {
-            calc!(s, "statics", "lateral moment at the head", M_W = M_h);
-            M_W
-        }
-        (_, true, true) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = H_Ed * h);
-            M_W
-        }
-        (_, false, true) => {
-            calc!(s, "statics, head free", "moment of the lateral loads", M_W = M_h + H_Ed * h);
-            M_W
-        }
-        (_, true, false) => {
-            calc!(
-                s,
-                "statics, head free",
-                "moment of the lateral loads",
-                M_W = H_Ed * h + w_Ed * sq(h) / 2.0
-            );
-            M_W
-        }
-        (_, false, false) => {
-            calc!(
-                s,
-                "statics, head free",
-                "moment of the lateral loads",
-                M_W = M_h + H_Ed * h + w_Ed * sq(h) / 2.0
-            );
-            M_W
-        }
-    }
-}
-
-/// Moment of the lateral loads where the head is held.
-fn held(s: &mut Sheet, m: &Model, d: Design, at: At) -> Moment {
-    let h = m.h;
-    let Design { w_Ed, M_h, .. } = d;
-    match (at == At::Middle && w_Ed > LineLoad::ZERO, M_h == Moment::ZERO) {
-        (false, true) => {
-            given!(s, "moment of the lateral loads", "head held: none here", M_W = Moment::ZERO);
-            M_W
-        }
-        (false, false) => {
-            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h);
-            M_W
-        }
-        (true, true) => {
-            calc!(s, "statics, head held", "moment of the lateral loads", M_W = w_Ed * sq(h) / 8.0);
-            M_W
-        }
-        (true, false) => {
-            calc!(s, "statics, head held", "moment of the lateral loads", M_W = M_h + w_Ed * sq(h) / 8.0);
-            M_W
-        }
-    }
-}
-
-/// Shear at the section; a held head passes its force to the named walls.
-fn shear(s: &mut Sheet, m: &Model, d: Design, at: At) -> Force {
-    let h = m.h;
-    let Design { H_Ed, w_Ed, .. } = d;
-    if m.propped {
-        if !m.sheared() || at == At::Middle {
-            return Force::ZERO;
-        }
-        calc!(s, "statics, head held", "shear; the named walls take the head force", V_Ed = w_Ed * h / 2.0);
-        return V_Ed;
-    }
-    if at == At::Head || w_Ed == LineLoad::ZERO {
-        calc!(s, "statics, head free", "shear", V_Ed = H_Ed);
-        return V_Ed;
-    }
-    calc!(s, "statics, head free", "shear", V_Ed = H_Ed + w_Ed * h);
-    V_Ed
+    statics::design::along(s, m, gamma_W, H_nu)
 }
 
 /// The tilt of the building as a force at the head: 5.3(2), always with the pressing factors.
 pub fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
-    let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
-    given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
-    given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
-    given!(s, "height of the structure, in m in the next line", "job file", h_tot);
-    let nu = radians(s, h_tot);
+    let (G_nu, Q_nu, nu) = leaning(s, m);
     given!(s, "pressing factor on dead load", "EN 1990 NA.A1.2(B)", gamma_Gp = Num::new(annex.gamma_G_sup));
     given!(s, "pressing factor on imposed load", "EN 1990 NA.A1.2(B)", gamma_Qp = Num::new(annex.gamma_Q));
     calc!(s, "5.3(2)", "tilt as a force, pressing factors", H_nu = nu * (gamma_Gp * G_nu + gamma_Qp * Q_nu));
@@ -296,4 +177,21 @@ pub fn tilt(s: &mut Sheet, m: &Model, annex: &Annex) -> Force {
 pub fn radians(s: &mut Sheet, h_tot: Length) -> Num {
     calc!(s, "5.3(2)", "tilt, in radians", nu = 1.0 / (100.0 * sqrt(metres(h_tot))));
     nu
+}
+
+/// The same under characteristic loads, as the ground feels it.
+pub fn tilt_characteristic(s: &mut Sheet, m: &Model) -> Force {
+    let (G_nu, Q_nu, nu) = leaning(s, m);
+    calc!(s, "5.3(2)", "tilt as a force, no factors", H_t = nu * (G_nu + Q_nu));
+    H_t
+}
+
+/// What leans on the return, dead and imposed, and the tilt of the building in radians.
+fn leaning(s: &mut Sheet, m: &Model) -> (Force, Force, Num) {
+    let (G_nu, Q_nu, h_tot) = (m.lateral.G_nu, m.lateral.Q_nu, m.lateral.h_nu);
+    given!(s, "dead load that leans on this return", "loads and stability of the storey", G_nu);
+    given!(s, "imposed load that leans on it", "loads and stability of the storey", Q_nu);
+    given!(s, "height of the structure, in m in the next line", "job file", h_tot);
+    let nu = radians(s, h_tot);
+    (G_nu, Q_nu, nu)
 }

@@ -2,6 +2,7 @@
 //!
 //! * [`build`]: geometry and loads of one return, on the sheet; [`lateral`]: how the wind reaches it
 //! * [`mod@check`]: the checks in order; [`matrix`]: every check under every case; [`run`]: the worst, recorded
+//! * [`statics`]: moment and shear of wind and tilt, once for design and once for characteristic values
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
 //! * [`remedy`]: what would make it pass; [`frame`]: what a steel frame in its place would have to do
@@ -19,6 +20,7 @@ pub mod remedy;
 pub mod rules;
 pub mod run;
 pub mod sliding;
+pub mod statics;
 pub mod vertical;
 
 use crate::building::{BaseJoint, Head, Proof};

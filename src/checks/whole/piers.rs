@@ -183,6 +183,7 @@ fn as_return(b: &Building, leaf: &State, i: usize, pier: &Pier, level: &Level, s
         supported_wall_height: storey.total_height,
         nearest_opening: None,
         far_end: None,
+        footing: None,
         acts: Acts::Loaded,
         loads: vec![load(0, "dead load"), load(1, "imposed load"), load(2, "uplift")],
         junction: Flange {

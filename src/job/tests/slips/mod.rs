@@ -4,6 +4,7 @@ mod bearings;
 mod contradictions;
 mod figures;
 mod floors;
+mod footings;
 mod form;
 mod names;
 
@@ -31,7 +32,15 @@ const fn slip(
 
 /// Every slip.
 pub fn all() -> impl Iterator<Item = &'static Slip> {
-    [form::SLIPS, figures::SLIPS, names::SLIPS, contradictions::SLIPS, floors::SLIPS, bearings::SLIPS]
-        .into_iter()
-        .flatten()
+    [
+        form::SLIPS,
+        figures::SLIPS,
+        names::SLIPS,
+        contradictions::SLIPS,
+        floors::SLIPS,
+        bearings::SLIPS,
+        footings::SLIPS,
+    ]
+    .into_iter()
+    .flatten()
 }
