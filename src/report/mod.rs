@@ -96,7 +96,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
         warnings: b.warnings.clone(),
         // The chain has its own section with the same links.
         chain: Vec::new(),
-        sections: results.sections.iter().map(|s| section(s, results)).collect(),
+        sections: results.sections.iter().map(|s| section(b, s, results)).collect(),
         cautions: front::cautions(b),
         photographs: b
             .photographs
@@ -132,7 +132,7 @@ fn kind(outcome: Outcome) -> OutcomeKind {
     }
 }
 
-fn section(s: &Section, results: &Results) -> data::Section {
+fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
     let judged = !s.mark.is_empty();
     let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
     let plain_failure = !judged && (!s.sheet.verdicts.is_empty() || !s.sheet.outside.is_empty());
@@ -143,8 +143,8 @@ fn section(s: &Section, results: &Results) -> data::Section {
         outcome: (judged || plain_failure)
             .then(|| data::SectionOutcome { kind: kind(outcome), words: outcome.words() }),
         blocks: blocks::of_section(s),
-        // Returns and panels begin a sheet of their own; floors go on below.
-        new_page: judged && s.id == s.mark,
+        // Returns and panels open a sheet; what belongs to them follows where there is room.
+        new_page: b.returns.iter().any(|r| r.mark == s.mark) || b.panels.iter().any(|p| p.mark == s.mark),
     }
 }
 

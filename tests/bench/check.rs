@@ -13,8 +13,16 @@ fn demo(name: &str) -> String {
     jobs::demos().into_iter().find(|(n, _)| n == name).expect("a demo job").1
 }
 
-const NAMES: [&str; 7] =
-    ["bungalow", "concrete-hall", "end-terrace", "hold-points", "lime-terrace", "rear-opening", "short-nib"];
+const NAMES: [&str; 8] = [
+    "bungalow",
+    "concrete-hall",
+    "end-terrace",
+    "hold-points",
+    "lime-terrace",
+    "rear-opening",
+    "semi",
+    "short-nib",
+];
 
 /// Job file to building.
 #[divan::bench]

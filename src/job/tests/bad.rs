@@ -210,7 +210,7 @@ fn odd_values_are_warnings() {
             "stability: the returns' tributary widths add up to 6.50 m on a front of 6.40 m",
         ),
         (
-            "bearing_length = \"150 mm\"",
+            "bearing_length = \"156 mm\"",
             "bearing_length = \"60 mm\"",
             "bearing B1-R2: bearing length is 60 mm, under 75 mm: short for the end of a beam",
         ),

@@ -16,6 +16,7 @@ const DEMOS: &[(&str, &str)] = &[
     ("short-nib.toml", include_str!("../../../jobs/short-nib.toml")),
     ("lime-terrace.toml", include_str!("../../../jobs/lime-terrace.toml")),
     ("concrete-hall.toml", include_str!("../../../jobs/concrete-hall.toml")),
+    ("semi.toml", include_str!("../../../jobs/semi.toml")),
     ("bungalow.toml", include_str!("../../../jobs/bungalow.toml")),
     ("end-terrace.toml", include_str!("../../../jobs/end-terrace.toml")),
     ("hold-points.toml", include_str!("../../../jobs/hold-points.toml")),
