@@ -38,12 +38,19 @@ fn whole(bencher: Bencher<'_, '_>, name: &str) {
     bencher.bench(|| perpend::check("job.toml", black_box(&text)));
 }
 
-/// One kind of sheet: plan, loads, wind, materials, stability, returns, panels, chain; drawings included.
-#[divan::bench(args = 0..8)]
+/// One kind of sheet, by its place in the list of checks; drawings included.
+#[divan::bench(args = 0..LIST.len())]
 fn kind(bencher: Bencher<'_, '_>, n: usize) {
-    let building = job::read("job.toml", &demo("rear-opening")).expect("a valid job");
+    let building = job::read("job.toml", &demo("end-terrace")).expect("a valid job");
     let job = Job::new(&building);
     bencher.bench(|| LIST[n](black_box(&job)));
+}
+
+/// What stands before the sheets: wind, storey, the whole building, hold points.
+#[divan::bench]
+fn before_the_sheets(bencher: Bencher<'_, '_>) {
+    let building = job::read("job.toml", &demo("end-terrace")).expect("a valid job");
+    bencher.bench(|| Job::new(black_box(&building)).holds.len());
 }
 
 fn with_inputs(name: &str, run: impl FnOnce(&Inputs<'_>)) {
@@ -122,10 +129,12 @@ fn row(walls: usize) -> String {
     let (plan, rest) = text.split_once("[[plan.beams]]").expect("the job has a beam");
     let mut more = String::new();
     let there = text.matches("[[plan.walls]]").count();
+    // Narrow houses in rows: the plan has room for 100 m each way.
     for n in 0..walls.saturating_sub(there) / 3 {
-        let (x, z) = (5.0 + 5.0 * n as f64, 10.0 + 5.0 * n as f64);
+        let (x, y) = (5.0 + 2.0 * (n % 45) as f64, 9.0 * (n / 45) as f64);
+        let (z, top) = (x + 2.0, y + 8.0);
         for (mark, from, to) in
-            [("rear", (x, 0.0), (z, 0.0)), ("front", (x, 8.0), (z, 8.0)), ("side", (z, 0.0), (z, 8.0))]
+            [("rear", (x, y), (z, y)), ("front", (x, top), (z, top)), ("side", (z, y), (z, top))]
         {
             let _ = write!(
                 more,
@@ -137,8 +146,8 @@ fn row(walls: usize) -> String {
         for (mark, load, storey) in [("F", "first floor", "ground"), ("R", "roof", "first")] {
             let _ = write!(
                 more,
-                "[[plan.floors]]\nmark = \"{mark} {n}\"\nload = \"{load}\"\nstorey = \"{storey}\"\nfrom = [\"{x} m\", \"0 \
-                 m\"]\nto = [\"{z} m\", \"8 m\"]\nspans = \"y\"\n\n"
+                "[[plan.floors]]\nmark = \"{mark} {n}\"\nload = \"{load}\"\nstorey = \"{storey}\"\nfrom = [\"{x} m\", \"{y} \
+                 m\"]\nto = [\"{z} m\", \"{top} m\"]\nspans = \"y\"\n\n"
             );
         }
     }

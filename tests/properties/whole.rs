@@ -102,3 +102,14 @@ fn more_wind_never_lowers_a_use() {
         }
     }
 }
+
+/// Before the removal the wall that is drawn in three pieces stands as one.
+#[test]
+fn a_wall_in_pieces_is_one_wall_before() {
+    let all = directions(&house());
+    let x = all.iter().find(|d| d.along == Along::X).expect("wind along x");
+    let line: Vec<_> = x.piers.iter().filter(|p| p.storey == 0 && p.wall.contains("cross wall")).collect();
+    assert_eq!(line.len(), 1);
+    assert_eq!((line[0].wall.as_str(), line[0].from, line[0].to), ("R1, cross wall, R2", 0.0, 5000.0));
+    assert!(line[0].before.is_some() && line[0].after.is_none());
+}

@@ -47,12 +47,11 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
                 if after { (&down.after, &down.on_leaf) } else { (&down.before, &down.on_leaf_before) };
             let counted = |wall: usize| !after || lines::counts_after(b, wall);
             for line in lines::of(b, state, along, level, &counted, (wind, &job.annex)) {
-                for &i in &line.walls {
-                    for pier in &leaf.down.walls[i].piers {
-                        let share = line.share * (pier.to - pier.from) / line.length;
-                        let used = worked(job, &alone, leaf, i, pier, level, share, wind);
-                        note(&mut out, b, state, i, level, pier, (after, share, used));
-                    }
+                for whole in together(b, leaf, &line.walls) {
+                    let Whole { i, name, pier } = whole;
+                    let share = line.share * (pier.to - pier.from) / line.length;
+                    let used = worked(job, &alone, leaf, i, &pier, level, share, wind);
+                    note(&mut out, name, level, &pier, (after, share, used));
                 }
             }
         }
@@ -60,17 +59,60 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
     out
 }
 
+/// A length of wall that nothing interrupts: one plan wall or several that go on in each other.
+struct Whole {
+    /// The first of its walls, in the state.
+    i: usize,
+    /// Their marks.
+    name: String,
+    /// All of it.
+    pier: Pier,
+}
+
+/// Piers of a line in order, those of one build-up that touch as one: a wall that is drawn in pieces,
+/// one of which comes out, stands as a whole before.
+fn together(b: &Building, state: &State, walls: &[usize]) -> Vec<Whole> {
+    let mut all: Vec<(usize, Pier)> =
+        walls.iter().flat_map(|&i| state.down.walls[i].piers.iter().map(move |p| (i, *p))).collect();
+    all.sort_by(|a, b| a.1.from.total_cmp(&b.1.from));
+    let wall = |i: usize| &b.plan[state.walls[i].wall];
+    let mut out: Vec<Whole> = Vec::new();
+    for (i, pier) in all {
+        match out.last_mut() {
+            Some(last)
+                if (pier.from - last.pier.to).abs() < 1.0 && wall(last.i).build_up == wall(i).build_up =>
+            {
+                last.pier = joined(last.pier, pier);
+                last.name = format!("{}, {}", last.name, wall(i).mark);
+            }
+            _ => out.push(Whole { i, name: wall(i).mark.clone(), pier }),
+        }
+    }
+    out
+}
+
+/// Two lengths of wall as one.
+fn joined(a: Pier, z: Pier) -> Pier {
+    let middle = |p: Pier| (p.from + p.to) / 2.0;
+    let mut out = Pier { to: z.to, ..a };
+    let centre = middle(out);
+    for k in 0..3 {
+        out.head[k] = a.head[k] + z.head[k];
+        out.foot[k] = a.foot[k] + z.foot[k];
+        out.moment[k] =
+            a.moment[k] + a.head[k] * (middle(a) - centre) + z.moment[k] + z.head[k] * (middle(z) - centre);
+    }
+    out
+}
+
 /// Notes what one state finds of a pier beside what the other found of the same.
 fn note(
     out: &mut Vec<Used>,
-    b: &Building,
-    state: &State,
-    i: usize,
+    wall: String,
     level: &Level,
     pier: &Pier,
     (after, share, used): (bool, f64, (f64, String)),
 ) {
-    let wall = b.plan[state.walls[i].wall].mark.clone();
     let (from, to) = (pier.from, pier.to);
     let same = |u: &&mut Used| u.wall == wall && u.storey == level.storey && u.from == from && u.to == to;
     let at = match out.iter_mut().find(same) {
