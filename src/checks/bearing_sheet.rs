@@ -1,27 +1,47 @@
-//! The sheet of each bearing.
+//! The sheet of the bearings of each beam.
 
-use super::bearings::check;
+use super::bearings::{check, remarks};
 use super::{Job, Section, bearing_views};
+use crate::building::Bearing;
 use crate::trace::Sheet;
 
-/// One section a bearing.
+/// As many bearings as stand side by side.
+const ABREAST: usize = 3;
+
+/// One section a beam, its bearings in the order of the job; further ones of many on a section of their own.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
-    job.building
-        .bearings
+    let all = &job.building.bearings;
+    let mut beams: Vec<&str> = Vec::new();
+    for bearing in all {
+        if !beams.contains(&bearing.beam.as_str()) {
+            beams.push(&bearing.beam);
+        }
+    }
+    let of = |beam: &str| all.iter().filter(|x| x.beam == beam).collect::<Vec<_>>();
+    beams
         .iter()
-        .map(|bearing| {
-            let mut sheet = Sheet::recorder();
-            let name = |kind: &str| format!("{}-{kind}", bearing.mark);
-            sheet.drawings(&[&name("elevation"), &name("section")]);
-            let checked = check(&mut sheet, job.building, bearing, &job.annex);
-            let drawings = checked.map(|c| bearing_views::drawings(job.building, &c)).unwrap_or_default();
-            Section {
-                id: bearing.mark.clone(),
-                mark: bearing.mark.clone(),
-                title: format!("Bearing of {} on {}", bearing.beam, bearing.on),
-                sheet,
-                drawings,
-            }
-        })
+        .flat_map(|beam| of(beam).chunks(ABREAST).map(|few| section(job, few)).collect::<Vec<_>>())
         .collect()
+}
+
+fn section<'a>(job: &'a Job<'_>, bearings: &[&'a Bearing]) -> Section {
+    let mut sheet = Sheet::recorder();
+    let names = |kind: &str| bearings.iter().map(|x| format!("{}-{kind}", x.mark)).collect::<Vec<_>>();
+    for kind in ["elevation", "section"] {
+        let names = names(kind);
+        sheet.drawings(&names.iter().map(String::as_str).collect::<Vec<_>>());
+    }
+    remarks(&mut sheet, bearings);
+    let checked = check(&mut sheet, job.building, bearings, &job.annex);
+    let drawings = checked.iter().flatten().flat_map(|c| bearing_views::drawings(job.building, c)).collect();
+    let list = |of: &dyn Fn(&Bearing) -> &str, between: &str| {
+        bearings.iter().map(|x| of(x)).collect::<Vec<_>>().join(between)
+    };
+    Section {
+        id: list(&|x| &x.mark, "-"),
+        mark: list(&|x| &x.mark, ", "),
+        title: format!("Bearing of {} on {}", bearings[0].beam, list(&|x| &x.on, " and ")),
+        sheet,
+        drawings,
+    }
 }

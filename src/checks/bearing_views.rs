@@ -10,7 +10,7 @@ use crate::sketch::{
 
 /// Frames on the sheet, mm: side by side.
 const ELEVATION: Frame = Frame::new(106.0, 108.0);
-const SECTION: Frame = Frame::new(60.0, 80.0);
+const SECTION: Frame = Frame::new(60.0, 52.0);
 
 /// Elevation and section; none where a limit was left before the geometry was known.
 pub fn drawings(b: &Building, c: &Checked<'_>) -> Vec<Drawing> {

@@ -35,15 +35,13 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
         let stress = outcome != outcome::Outcome::Adequate;
         out.push(Line { text: format!("{name}: {}", outcome.words()), stress });
         for r in rows {
+            let check = if s.mark.contains(", ") { format!("{}: {}", r.mark, r.check) } else { r.check };
             let stress = r.verdict != "adequate";
             let text = if r.ratio.is_empty() {
-                format!("  {:<wide$} {}", r.check, r.verdict)
+                format!("  {:<wide$} {}", check, r.verdict)
             } else {
                 let (demand, resistance) = (r.demand, r.resistance);
-                format!(
-                    "  {:<wide$} {demand:>12} of {resistance:>12}   {:>5}  {}",
-                    r.check, r.ratio, r.verdict
-                )
+                format!("  {:<wide$} {demand:>12} of {resistance:>12}   {:>5}  {}", check, r.ratio, r.verdict)
             };
             out.push(Line { text, stress });
         }

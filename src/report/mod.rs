@@ -152,9 +152,17 @@ fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
 pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
     let amount = |v: &Value| print::show(&v.name, v.value).to_string();
     let mark = if s.mark.is_empty() { s.title.clone() } else { s.mark.clone() };
+    // Of a sheet of several things each result goes under the mark that ends its words.
+    let own = |words: &str| {
+        let ends = |m: &&str| words.ends_with(&format!(", {m}"));
+        match s.mark.split(", ").find(ends) {
+            Some(m) if s.mark.contains(", ") => (m.to_owned(), words[..words.len() - m.len() - 2].to_owned()),
+            _ => (mark.clone(), words.to_owned()),
+        }
+    };
     let verdict = |v: &Verdict| data::Scheduled {
-        mark: mark.clone(),
-        check: v.words.clone(),
+        mark: own(&v.words).0,
+        check: own(&v.words).1,
         demand: amount(&v.demand),
         resistance: amount(&v.resistance),
         ratio: print::ratio(v.ratio),

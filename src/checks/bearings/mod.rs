@@ -32,29 +32,73 @@ pub struct Checked<'a> {
     pub found: Option<work::Found>,
 }
 
-/// Checks a bearing on a sheet. The load that presses most decides: imposed load leading.
+/// Checks the bearings of one beam on a sheet, a column each; one alone without columns. The load that
+/// presses most decides: imposed load leading.
+///
+/// Yields what each found; none where a limit was left before its seat was known.
 pub fn check<'a>(
+    s: &mut Sheet,
+    b: &'a Building,
+    bearings: &[&'a Bearing],
+    annex: &'a Annex,
+) -> Vec<Option<Checked<'a>>> {
+    let mut chosen: Vec<Option<Checked<'a>>> =
+        bearings.iter().map(|x| choose(s, b, x, annex, bearings.len() > 1)).collect();
+    if chosen.iter().flatten().any(|c| c.stone.is_some()) {
+        s.note(work::RULE);
+    }
+    s.heading(1, "Load, masonry, padstone, and the wall below");
+    let marks: Vec<String> = bearings.iter().map(|x| x.mark.clone()).collect();
+    let found = s.columns(&marks, |s, i| {
+        s.case = Combination::PressingImposed.name().to_owned();
+        if marks.len() > 1 {
+            s.of.clone_from(&marks[i]);
+        }
+        let worked = site::of(s, b, bearings[i], annex).and_then(|site| match &chosen[i] {
+            Some(c) => work::all(s, &site, &c.seat).map(Some),
+            None => Ok(None),
+        });
+        s.of.clear();
+        s.case.clear();
+        worked.map_err(|outside| s.leave(outside)).ok().flatten()
+    });
+    for (c, found) in chosen.iter_mut().zip(found) {
+        let Some(c) = c else { continue };
+        c.found = found;
+        if found.is_some() && !choose::uses(&c.site, &c.seat).works() {
+            s.heading(1, format!("What would make {} pass", c.site.bearing.mark));
+            s.table(|| remedy::table(&c.site));
+            s.note(
+                "A bearing that grows keeps the edge that is nearer to an end of the return; the load then moves to its \
+                 middle, and the sheet of the return has to be worked again with that place.",
+            );
+        }
+    }
+    chosen
+}
+
+/// What lies under one end: the padstones tried, and what was decided. None where a limit is left.
+fn choose<'a>(
     s: &mut Sheet,
     b: &'a Building,
     bearing: &'a Bearing,
     annex: &'a Annex,
+    several: bool,
 ) -> Option<Checked<'a>> {
-    s.heading(1, "The load and the wall");
-    s.case = Combination::PressingImposed.name().to_owned();
-    let site = match site::of(s, b, bearing, annex) {
-        Ok(site) => site,
-        Err(outside) => {
-            s.leave(outside);
-            return None;
-        }
-    };
-    remarks(s, &site);
-    neighbours(s, b, bearing);
+    let site = site::of(&mut Sheet::silent(), b, bearing, annex).ok()?;
     let bare = Seat::bare(Beam::of(&site));
     let tried = choose::try_all(&site, site.stones);
     let first = tried.iter().find(|t| t.works()).filter(|_| bearing.padstone);
     let alone = choose::uses(&site, &bare);
-    s.heading(1, "What lies under the beam");
+    s.heading(
+        1,
+        if several {
+            format!("What lies under {}", bearing.mark)
+        } else {
+            "What lies under the beam".to_owned()
+        },
+    );
+    neighbours(s, b, bearing);
     if !b.padstones.is_empty() && (bearing.padstone || !alone.works()) {
         s.table(|| choose::table(&alone, &tried, first));
     }
@@ -63,40 +107,21 @@ pub fn check<'a>(
         Some(Tried { stone, seat: Ok(seat), .. }) => (seat.clone(), Some(*stone)),
         _ => (bare, None),
     };
-    let found = match work::all(s, &site, &seat) {
-        Ok(found) => Some(found),
-        Err(outside) => {
-            s.leave(outside);
-            None
-        }
-    };
-    if s.verdicts.iter().any(|v| !v.holds) {
-        s.heading(1, "What would make it pass");
-        s.table(|| remedy::table(&site));
-        s.note(
-            "A bearing that grows keeps the edge that is nearer to an end of the return; the load then moves to its \
-             middle, and the sheet of the return has to be worked again with that place.",
-        );
-    }
-    s.case.clear();
-    Some(Checked { site, seat, stone, found })
+    Some(Checked { site, seat, stone, found: None })
 }
 
 /// What the reader must know before the numbers.
-fn remarks(s: &mut Sheet, site: &Site<'_>) {
-    let mark = &site.ret.mark;
-    s.note("Clause 6.1.3, its figures and paragraph numbers are from memory, check against the standard.");
-    s.note(
-        "Pressing with imposed load leading (1.35 G + 1.5 Q) decides: no other combination brings more vertical load. \
-         The moment of the wind in the plane of the return is on its own sheet.",
-    );
+pub fn remarks(s: &mut Sheet, bearings: &[&Bearing]) {
+    let mut returns: Vec<&str> = bearings.iter().map(|x| x.on.as_str()).collect();
+    returns.dedup();
+    let returns = returns.join(", ");
     s.note(format!(
-        "The design strength is the wall's, as on the sheet of {mark}: the reduction for a small plan area (6.1.2.1(3)) goes with the \
-         plan area of the wall, not with the area loaded, and 6.1.3 does not take it back. It is kept here."
-    ));
-    s.note(format!(
-        "Both ends of {mark} count as ends of the wall, the junction too, bonded or not: nothing spreads into the wall \
-         met."
+        "Clause 6.1.3, its figures and paragraph numbers are from memory, check against the standard. Pressing with \
+         imposed load leading (1.35 G + 1.5 Q) decides: no other combination brings more vertical load; the moment of the \
+         wind in plane is on the sheet of each return. The design strength is the wall's, as there: the reduction for a \
+         small plan area (6.1.2.1(3)) goes with the plan area of the wall, not with the area loaded, and 6.1.3 does not \
+         take it back. Both ends of {returns} count as ends of the wall, the junction too, bonded or not: nothing spreads \
+         into the wall met."
     ));
 }
 

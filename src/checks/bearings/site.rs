@@ -1,6 +1,6 @@
 //! The wall under a bearing, the load on it, and what else stands at mid-height there.
 
-use crate::building::{Bearing, Building, Load, Padstone, Return};
+use crate::building::{Bearing, Building, LED, Load, Padstone, Return};
 use crate::checks::returns::build::{self, Acting, Change, Inputs};
 use crate::checks::returns::in_plane::compressive_strength;
 use crate::checks::returns::model::Model;
@@ -76,7 +76,8 @@ pub fn of<'a>(
     let m = build::one(&mut Sheet::silent(), &inputs, acting, Change::NONE)?;
     let factors = Combination::PressingImposed.factors(annex, m.helping);
 
-    let on = format!("{}, job file", load.what);
+    let from = if load.source == LED { LED } else { "job file" };
+    let on = format!("{}, {from}", load.what);
     given!(s, "dead load of the beam's end", &on, G_c = load.dead);
     given!(s, "imposed load", &on, Q_c = load.imposed);
     let clause = Combination::PressingImposed.clause();

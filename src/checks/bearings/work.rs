@@ -9,6 +9,13 @@ use crate::standards::en1996::{concentrated, reduction};
 use crate::trace::{Column, Outside, Sheet, Table};
 use crate::{calc, given, require, verify};
 
+/// How a padstone is taken.
+pub const RULE: &str = "A padstone lies with its middle under the load, or as near as the ends of the return and the faces of the leaf \
+    allow. The load spreads in it at 60° to the horizontal, so the bearing length and twice its height over tan 60° count, at most \
+    its own length; of one that cannot be centred under the load only the part centred on the load counts, twice the distance to its \
+    nearer end. It is not taken as a spreader beam (6.1.3(7)). It lies on a full bed of mortar; its bending and splitting are not \
+    calculated.";
+
 /// What was found on the way, for the sketches.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Found {
@@ -30,16 +37,6 @@ pub fn all(s: &mut Sheet, site: &Site<'_>, seat: &Seat) -> Result<Found, Outside
     let (l, t, e_c, N_Edc, f_d) = (site.model.l, site.model.t, site.e_c, site.N_Edc, site.f_d);
     require!(s, "bearing", "6.1.3(4)", "the load at most t/4 off the middle of the wall", e_c <= t / 4.0);
     let stone = seat.stone.is_some();
-    s.heading(1, if stone { "Masonry under the padstone" } else { "Masonry under the beam" });
-    if stone {
-        s.note(
-            "Rule for the padstone: it lies with its middle under the load, or as near as the ends of the return and the \
-             faces of the leaf allow. The load spreads in it at 60° to the horizontal, so the bearing length and twice \
-             its height over tan 60° count, at most its own length; of a padstone that cannot be centred under the \
-             load only the part centred on the load counts, twice the distance to its nearer end. It is not taken as a \
-             spreader beam (6.1.3(7)). It lies on a full bed of mortar; its bending and splitting are not calculated.",
-        );
-    }
     let given_x = seat.beam.x_c;
     given!(s, "from the junction end", "as above", x_c = given_x);
     let c_60 = concentrated::spread(s);
@@ -54,13 +51,11 @@ pub fn all(s: &mut Sheet, site: &Site<'_>, seat: &Seat) -> Result<Found, Outside
     let words = if stone { "masonry under the padstone" } else { "masonry under the beam" };
     verify!(s, "bearing", "6.1.3(1) eq. 6.9", words, N_Edc <= N_Rdc);
     if let (Some(stone), Some(A_0)) = (seat.stone, p.A_0) {
-        s.heading(1, "Concrete of the padstone under the beam");
         given!(s, "cylinder strength of the concrete", "list of padstones", f_ck = stone.f_ck);
         let f_cd = en1992::plain_strength(s, site.annex, f_ck);
         calc!(s, "EN 1992-1-1 12.6.1", "resistance, without enhancement", N_Rdp = f_cd * A_0);
         verify!(s, "padstone", "EN 1992-1-1 12.6.1", "concrete of the padstone", N_Edc <= N_Rdp);
     }
-    s.heading(1, "The wall at mid-height below");
     if let Err(outside) = middle(s, site, h_c, x_J, x_F, l_efm, c_60) {
         s.leave(outside);
     }
@@ -89,7 +84,7 @@ fn middle(
     let source = if site.others.is_empty() {
         "no other load on this leaf".to_owned()
     } else {
-        s.table(|| table(&others));
+        s.table(|| table(&site.bearing.mark, &others));
         "table above: those whose spread meets this one".to_owned()
     };
     let counted = || others.iter().filter(|o| o.counted);
@@ -141,13 +136,13 @@ fn others<'a>(site: &'a Site<'_>, h_c: Length, x_J: Length, x_F: Length, c_60: N
         .collect()
 }
 
-fn table(others: &[Spread<'_>]) -> Table {
+fn table(mark: &str, others: &[Spread<'_>]) -> Table {
     let shown = |name: &str, v: crate::quantity::Dyn| print::show(name, v).value;
     Table {
-        caption:
-            "Other loads at mid-height below, design values, each spread at 60° from its place; those whose \
-                  spread meets that of the beam count over its whole length"
-                .to_owned(),
+        caption: format!(
+            "Other loads at mid-height below {mark}, design values, each spread at 60° from its place; those whose spread \
+             meets that of the beam count over its whole length"
+        ),
         columns: vec![
             Column::words("load"),
             Column::numbers("N, kN"),
