@@ -35,7 +35,7 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
         let stress = outcome != outcome::Outcome::Adequate;
         out.push(Line { text: format!("{name}: {}", outcome.words()), stress });
         for r in rows {
-            let check = if s.mark.contains(", ") { format!("{}: {}", r.mark, r.check) } else { r.check };
+            let check = if s.mark.contains(", ") { format!("{}, {}", r.check, r.mark) } else { r.check };
             let stress = r.verdict != "adequate";
             let text = if r.ratio.is_empty() {
                 format!("  {:<wide$} {}", check, r.verdict)
