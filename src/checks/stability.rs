@@ -11,6 +11,8 @@ use crate::standards::annex::Annex;
 use crate::trace::{Column, Outside, Sheet, Table};
 use crate::{calc, given};
 
+/// As many shares as can be read on a plan.
+const MANY: usize = 40;
 /// Frame on the sheet, mm.
 const FRAME: Frame = Frame::new(146.0, 110.0);
 
@@ -265,7 +267,10 @@ fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<Drawing> {
     let marks: Vec<&str> = here.iter().map(|w| w.mark.as_str()).collect();
     let percent = |x: Option<f64>| x.map(|p| format!("{:.0} %", p * 100.0));
     let mut shares = Vec::new();
-    for x in &storey.shares {
+    // Of very many walls those are drawn whose share changes: the table has them all.
+    let many = storey.shares.len() > MANY;
+    let changed = |x: &Share| x.before.zip(x.after).is_none_or(|(b, a)| (b - a).abs() > 0.005);
+    for x in storey.shares.iter().filter(|x| !many || changed(x)) {
         let place = marks.iter().position(|m| *m == x.mark).or_else(|| {
             // A return is no line of the plan: it is drawn where its mark lies.
             let r = b.returns.iter().find(|r| r.mark == x.mark)?;

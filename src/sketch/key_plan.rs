@@ -117,7 +117,8 @@ fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
         stretch(&mut board, view, panel, scale);
     }
     let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
-    for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name)) {
+    let told = |w: &PlanWall| view.walls.len() <= NAMED || w.fate != Fate::Stays;
+    for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name) && told(w)) {
         let word = match wall.fate {
             Fate::Stays => "",
             Fate::Removed => " removed",
@@ -159,6 +160,9 @@ fn spans(board: &mut Board, span: &PlanSpan, scale: Scale) {
     }
     board.note(stretch_note(from, to, 1.0, Text::mark(&span.mark)).rank(2));
 }
+
+/// More walls than these are not all named: nobody could read it.
+const NAMED: usize = 60;
 
 /// Distance of a panel's line from the thickest wall's face, mm on paper.
 const STRETCH: f64 = 2.2;
@@ -242,6 +246,9 @@ fn key(view: &KeyPlan) -> String {
     }
     if has(Fate::Added) {
         key += "; crossed hatching: new";
+    }
+    if view.walls.len() > NAMED {
+        key += "; walls that stay are not named";
     }
     if !view.beams.is_empty() {
         key += "; chain line: beam over";
