@@ -56,6 +56,8 @@ pub fn silently(m: &Model, annex: &Annex, ready: Ready, case: Case, check: Check
 
 /// As many places as stand side by side on a sheet.
 const ABREAST: usize = 3;
+/// With a flange its longer formulas need the room.
+const FLANGED: usize = 2;
 
 /// Records the worst case of each check, `drawing` beside the table of cases: a column for every section and case in which one governs.
 pub fn record(
@@ -91,8 +93,12 @@ pub fn record(
         }
         s.heading(2, title);
         // Even shares read better than full tables and a rest.
-        let tables = places.len().div_ceil(ABREAST);
+        let abreast = if m.flange.is_some() && title.starts_with("In the plane") { FLANGED } else { ABREAST };
+        let tables = places.len().div_ceil(abreast);
         for few in places.chunks(places.len().div_ceil(tables)) {
+            if let [one] = few {
+                s.heading(2, format!("At the {}: {}", one.at.words(), one.case.name()));
+            }
             s.columns(&few.iter().map(Place::head).collect::<Vec<_>>(), |s, i| {
                 let place = &few[i];
                 s.case = place.case.name();

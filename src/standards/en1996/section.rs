@@ -87,11 +87,15 @@ pub fn triangle(s: &mut Sheet, section: Section, N_Ed: Force, a: Length) -> Opti
     calc!(
         s,
         "first principles",
-        "its first moment about the toe",
+        "first moments about the toe",
         S_1 = b_1 * (sq(p_1) / 2.0 - cube(p_1) / (3.0 * c))
-            + b_2 * ((sq(p_2) - sq(d_1)) / 2.0 - (cube(p_2) - cube(d_1)) / (3.0 * c))
     );
-    calc!(s, "first principles", "place of the stress block, to compare with a", a_c = S_1 / (A_1 + A_2));
+    calc!(
+        s,
+        "first principles",
+        S_2 = b_2 * ((sq(p_2) - sq(d_1)) / 2.0 - (cube(p_2) - cube(d_1)) / (3.0 * c))
+    );
+    calc!(s, "first principles", "place of the block, to compare with a", a_c = (S_1 + S_2) / (A_1 + A_2));
     calc!(s, "first principles", "triangular edge stress at the toe", sigma_toe = N_Ed / (A_1 + A_2));
     calc!(s, "first principles", "part of N in the first rectangle", N_1 = sigma_toe * A_1);
     calc!(s, "first principles", "part of N in the second", N_2 = sigma_toe * A_2);
