@@ -1,14 +1,12 @@
 //! The plan led down to the ground: what every wall carries, before the removal and after it.
 
-use super::{Along, Before, Building, Load, PlanWall};
+use super::found::{REACH, stands};
+use super::{Along, Before, Building, Load, PlanWall, heights};
 use crate::quantity::{Force, Length, LineLoad};
 use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 
 /// Source of a load that comes from the plan.
 pub const LED: &str = "load take-down of this pack";
-
-/// How far floors may stand out beyond their last support, and lines on the plan miss each other.
-const REACH: f64 = 150.0;
 
 /// Walls of the plan storey by storey, in the order of the model's walls.
 #[derive(Clone, Debug, PartialEq)]
@@ -105,6 +103,33 @@ impl TakeDown {
         let met = met.and_then(|to| b.plan.iter().find(|w| w.mark == to));
         let first = met.is_none_or(|m| away(m, end(from)) <= away(m, end(to)));
         let place = |s: f64| if first { s - from } else { to - s };
+        let leaf = b
+            .plan
+            .iter()
+            .find(|w| w.mark == mark)
+            .and_then(|w| b.build_up(&w.build_up))
+            .map_or(0, |u| u.loaded().0);
+        // Of a wall with openings the return is the length at the junction, and carries what that carries.
+        if let [lowest, .., highest] = on.piers.as_slice() {
+            let pier = if first { lowest } else { highest };
+            let middle = (pier.from + pier.to) / 2.0;
+            // Dead, imposed and uplift may stand in different places.
+            let one = |i: usize, what: &str| {
+                let only = |k: usize| Force::new(if i == k { pier.head[k] } else { 0.0 });
+                Load {
+                    what: format!("{what} of all above"),
+                    dead: only(0),
+                    imposed: only(1),
+                    uplift: only(2),
+                    at: Length::new(place(middle + pier.moment[i] / pier.head[i])),
+                    eccentricity: Length::ZERO,
+                    leaf,
+                    source: LED.to_owned(),
+                }
+            };
+            let parts = [(0, "dead load"), (1, "imposed load"), (2, "uplift")];
+            return parts.into_iter().filter(|p| pier.head[p.0] > 0.0).map(|(i, what)| one(i, what)).collect();
+        }
         let mut by: Vec<From> = Vec::new();
         let all = on.head.lines.iter().map(|l| l.by).chain(on.head.points.iter().map(|p| p.by));
         for one in all {
@@ -112,12 +137,6 @@ impl TakeDown {
                 by.push(one);
             }
         }
-        let leaf = b
-            .plan
-            .iter()
-            .find(|w| w.mark == mark)
-            .and_then(|w| b.build_up(&w.build_up))
-            .map_or(0, |u| u.loaded().0);
         let mut out = Vec::new();
         for one in by {
             let part = descent::Loads {
@@ -168,16 +187,22 @@ impl State {
 
 /// Whether a plan wall stands in the storey marked `storey`.
 pub fn stands_in(b: &Building, wall: &PlanWall, storey: &str) -> bool {
-    if wall.storeys.is_empty() {
-        !wall.removed || storey == b.removed.storey
-    } else {
-        wall.storeys.iter().any(|s| s == storey)
-    }
+    stands(wall, storey, &b.removed.storey)
+}
+
+/// What the job file leaves to the take-down, by mark; what the plan added is left to it as well.
+#[derive(Clone, Debug, Default)]
+pub struct Led {
+    /// Panels without a dead load above them.
+    pub panels: Vec<String>,
+    /// Returns without the dead load of the wall that they meet.
+    pub junctions: Vec<String>,
 }
 
 /// Takes the loads that the job does not give from the plan: on returns without loads that are walls of
-/// the plan, and on the panels marked `panels`, each the least dead load over the length of its wall.
-pub fn take_loads(b: &mut Building, panels: &[String]) {
+/// the plan, on panels the least dead load over the length of their wall, and at junctions the least over
+/// the wall met with its own weight.
+pub fn take_loads(b: &mut Building, led: &Led) {
     let Some(Ok(down)) = take_down(b) else { return };
     let number = |b: &Building, mark: &str| b.storeys.iter().position(|s| s.mark == mark);
     for i in 0..b.returns.len() {
@@ -199,10 +224,18 @@ pub fn take_loads(b: &mut Building, panels: &[String]) {
             f.before = Some(Before { led: true, dead: per(foot[0]), imposed: per(foot[1]) });
         }
     }
+    let left_out = |b: &Building, mark: &String, list: &[String]| list.contains(mark) || b.found.added.contains(mark);
+    for i in 0..b.returns.len() {
+        let r = &b.returns[i];
+        let Some(storey) = number(b, &r.storey).filter(|_| left_out(b, &r.mark, &led.junctions)) else { continue };
+        if let Some((wall, on)) = down.on_leaf.wall(b, &r.junction.to, storey) {
+            b.returns[i].junction.dead = LineLoad::new(least_dead(wall, on) + wall.weight);
+        }
+    }
     for i in 0..b.panels.len() {
         let p = &b.panels[i];
         let (Some(on), Some(storey)) = (&p.on, number(b, &p.storey)) else { continue };
-        if panels.contains(&p.mark)
+        if left_out(b, &p.mark, &led.panels)
             && let Some((wall, on)) = down.on_leaf.wall(b, on, storey)
         {
             b.panels[i].dead_above = LineLoad::new(least_dead(wall, on));
@@ -295,8 +328,7 @@ fn led(b: &Building, wall: &PlanWall, k: usize, leaf: bool) -> Option<Wall> {
 
 /// Height of wall from one floor to the next; the clear height under the roof.
 pub fn storey_height(b: &Building, k: usize) -> Length {
-    let here = &b.storeys[k];
-    b.storeys.get(k + 1).map_or(here.clear_height, |above| here.total_height - above.total_height)
+    heights::storey_height(&b.storeys, k)
 }
 
 const fn axis(along: Along) -> Axis {

@@ -5,14 +5,18 @@
 
 mod descent;
 mod floors;
+pub mod found;
+mod heights;
 mod parts;
 mod plan;
 mod things;
 mod words;
 
 pub use descent::{
-    LED, Stack, State, TakeDown, Trouble, line_of, stands_in, storey_height, take_down, take_loads,
+    LED, Led, Stack, State, TakeDown, Trouble, line_of, stands_in, storey_height, take_down, take_loads,
 };
+pub use heights::strip_height;
+pub use found::Found;
 pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
 pub use parts::{
     Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, StatedWind, Storey,
@@ -87,6 +91,8 @@ pub struct Building {
     pub photographs: Vec<Photograph>,
     /// Who is responsible for what, in the order given.
     pub responsible: Vec<(String, String)>,
+    /// What the plan shows of the removal, where it has floors.
+    pub found: Found,
     /// Possible but odd values, as sentences.
     pub warnings: Vec<String>,
 }

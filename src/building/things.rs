@@ -307,6 +307,8 @@ pub struct Panel {
     pub height: Length,
     /// Plan wall it belongs to.
     pub on: Option<String>,
+    /// Where it lies after the removal, in x or y of the plan, as far as that is known.
+    pub range: Option<(Length, Length)>,
     /// Dead load per length on the loaded leaf at the top of the panel.
     pub dead_above: LineLoad,
     /// Own net pressure instead of the site's.
@@ -319,6 +321,8 @@ pub struct Panel {
     pub before: Span,
     /// After the removal.
     pub after: Span,
+    /// Whether an edge was taken from the plan, because the job does not say how it is held.
+    pub edges_taken: bool,
     /// Where the removed wall met it, from the left end of the panel after removal.
     pub wall_at: Option<Length>,
     /// Abutments, for the arching route.

@@ -6,6 +6,7 @@ pub mod chain;
 pub mod diaphragm;
 pub mod floor_edge;
 pub mod footings;
+pub mod found;
 pub mod links;
 pub mod loads;
 pub mod masonry;
@@ -89,6 +90,7 @@ impl<'a> Job<'a> {
         outcome::add(&mut job.holds, found);
         let found = panel_sheet::holds(&job);
         outcome::add(&mut job.holds, found);
+        outcome::add(&mut job.holds, found::holds(building));
         job
     }
 
@@ -104,6 +106,7 @@ type Check = fn(&Job<'_>) -> Vec<Section>;
 /// Every check, in sheet order.
 pub const LIST: &[Check] = &[
     plan::sections,
+    found::sections,
     takedown::sections,
     loads::sections,
     wind::sections,

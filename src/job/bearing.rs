@@ -3,9 +3,10 @@
 use super::limits::{Limits, Odd};
 use super::reader::Table;
 use super::returns::{Around, FORCE};
+use crate::building::found::FoundReturn;
 use crate::building::{BuildUp, Flange, Load, Proof};
 use crate::error::Kind;
-use crate::quantity::{Force, Length};
+use crate::quantity::{Force, Length, LineLoad};
 
 const ALONG: Limits = Limits::new(0.0, 6.0, "m");
 const ECCENTRICITY: Limits = Limits::new(-300.0, 300.0, "mm");
@@ -82,19 +83,35 @@ pub fn load(
     })
 }
 
-/// Reads the junction with the wall that the return buttresses.
-pub fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Flange> {
-    let entry = t.need("to");
-    let to = if around.plan.is_empty() { entry.line() } else { around.plan.refer(&entry) };
+/// Reads the junction with the wall that the return buttresses; what it does not give comes from the plan.
+pub fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>, found: Option<&FoundReturn>) -> Option<Flange> {
+    // A junction with another wall than the one found is all by hand.
+    let found = found.filter(|f| !t.has("to") || t.peek("to").is_some_and(|to| to.trim() == f.meets));
+    let to = match found {
+        Some(f) if !t.has("to") => Some(f.meets.clone()),
+        _ if around.plan.is_empty() => t.need("to").line(),
+        _ => around.plan.refer(&t.need("to")),
+    };
     let bonded = t.need("bonded").flag();
     let proof = t.may("proof").pick(&[("seen", Proof::Seen), ("assumed", Proof::Assumed)]);
     let words = t.may("words").text();
-    let thickness: Option<Length> = t.need("thickness").quantity(&THICKNESS);
-    let left = t.need("left").quantity(&TO_END);
-    let right = t.need("right").quantity(&TO_END);
-    let next_wall_left = t.may("next_wall_left").quantity(&TO_END);
-    let next_wall_right = t.may("next_wall_right").quantity(&TO_END);
-    let dead = t.need("dead").quantity(&WALL_LOAD);
+    let length = |key: &'static str, limits: &Limits, drawn: Option<Length>| match drawn {
+        Some(drawn) if !t.has(key) => Some(drawn),
+        _ => t.need(key).quantity(limits),
+    };
+    let thickness = length("thickness", &THICKNESS, found.map(|f| f.thickness));
+    let left = length("left", &TO_END, found.map(|f| f.to_end[0]));
+    let right = length("right", &TO_END, found.map(|f| f.to_end[1]));
+    let next = |key: &'static str, drawn: Option<Length>| {
+        if t.has(key) { t.may(key).quantity(&TO_END) } else { drawn }
+    };
+    let next_wall_left = next("next_wall_left", found.and_then(|f| f.to_next[0]));
+    let next_wall_right = next("next_wall_right", found.and_then(|f| f.to_next[1]));
+    // What the take-down brings is put in once the building is whole.
+    let dead = match found {
+        Some(_) if !t.has("dead") => Some(LineLoad::ZERO),
+        _ => t.need("dead").quantity(&WALL_LOAD),
+    };
     t.finish();
 
     if bonded == Some(true) {

@@ -93,9 +93,19 @@ pub fn removed<'a>(
 ) -> Option<Removed> {
     let entry = t.need("wall");
     let wall = if plan.is_empty() { entry.line() } else { plan.refer(&entry) };
-    let build_up = build_ups.refer(&t.need("build_up"));
-    let length: Option<Length> = t.need("length").quantity(&REMOVED_LENGTH);
-    let storey = storeys.refer(&t.need("storey"));
+    let drawn = wall.as_ref().and_then(|w| plan.item(w));
+    let build_up = match drawn {
+        Some(line) if !t.has("build_up") => Some(line.build_up.clone()),
+        _ => build_ups.refer(&t.need("build_up")),
+    };
+    let length: Option<Length> = match drawn {
+        Some(line) if !t.has("length") => Some(plan_length(line)),
+        _ => t.need("length").quantity(&REMOVED_LENGTH),
+    };
+    let storey = match drawn.map(|line| line.storeys.as_slice()) {
+        Some([only]) if !t.has("storey") => Some(only.clone()),
+        _ => storeys.refer(&t.need("storey")),
+    };
     let carried = t.need("carried").text();
     let braced = t.need("braced").text();
     t.finish();

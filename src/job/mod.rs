@@ -40,7 +40,8 @@ use toml::de::DeTable;
 
 pub use date::in_words as date_in_words;
 
-use crate::building::{Building, PlanWall};
+use crate::building::found::{self, Found};
+use crate::building::{Building, Led, PlanWall};
 use crate::error::{Kind, Report};
 use names::Names;
 use reader::{Reader, Table};
@@ -126,12 +127,26 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         .as_ref()
         .and_then(|t| ground::stability(t, &storeys, &bracing, removed_table.as_ref()));
 
+    let led = !floors.is_empty();
+    let found = match &removed {
+        Some(removed) if led => found::find(&found::Around {
+            walls: walls.iter().filter_map(|s| s.item.as_ref()).collect(),
+            storeys: storeys.iter().filter_map(|s| s.item.as_ref()).collect(),
+            floors: floors.iter().filter_map(|s| s.item.as_ref()).collect(),
+            build_ups: build_ups.iter().filter_map(|s| s.item.as_ref()).collect(),
+            neighbours: neighbours.as_deref().unwrap_or_default(),
+            storey: &removed.storey,
+        }),
+        _ => Found::default(),
+    };
     let (returns, panels) = {
         let around = Around {
+            found: &found,
+            found_in: removed.as_ref().map_or("", |r| r.storey.as_str()),
             build_ups: &build_ups,
             storeys: &storeys,
             plan: &walls,
-            led: !floors.is_empty(),
+            led,
             bracing: &bracing,
             stability: stability_table.as_ref().zip(stability.as_ref()),
         };
@@ -231,6 +246,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let of_loads: Vec<_> = bearings.iter().map(|b| (b.name.clone(), b.table.place("load"))).collect();
     let led_panels: Vec<String> =
         panels.iter().filter(|p| !p.table.has("dead_above")).map(|p| p.name.clone()).collect();
+    let led_junctions = returns.iter().filter(|r| r.table.peek_under("junction", "dead").is_none());
+    let led_junctions: Vec<String> = led_junctions.map(|r| r.name.clone()).collect();
     let bracing = bracing.into_items()?;
     let mut building = Building {
         identity: identity?,
@@ -261,10 +278,13 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         hold_points: hold_points?,
         photographs: photographs?,
         responsible: responsible?,
+        found: Found::default(),
         warnings: Vec::new(),
     };
+    found::complete(&mut building, found);
     plan::to_the_ground(reader, &building, &marks_of_plan);
-    crate::building::take_loads(&mut building, &led_panels);
+    let led = Led { panels: led_panels, junctions: led_junctions };
+    crate::building::take_loads(&mut building, &led);
     if !building.floors.is_empty() {
         bearings::of_led_loads(reader, &building, &of_loads);
     }
@@ -279,7 +299,7 @@ fn all<'a, T>(tables: &[Table<'a>], read: impl Fn(&Table<'a>) -> Option<T>) -> O
 /// A job without returns and panels checks nothing; a return is never judged alone.
 fn something_to_check(root: &Table<'_>, led: bool) {
     let returns = root.has("returns");
-    if !returns && !root.has("panels") {
+    if !led && !returns && !root.has("panels") {
         root.fault(Kind::Missing, "there is nothing to check")
             .at(root.head(), "has no [[returns]] and no [[panels]]")
             .allowed("at least one return or panel")

@@ -1,13 +1,14 @@
 //! `[[panels]]`: outer walls across their plane, before and after the removal.
 
-use super::entry::Entry;
+use super::entry::{Entry, quoted};
 use super::ground::{DRAWN, HEIGHT};
 use super::limits::{Limits, Odd};
 use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
 use super::words::EDGES;
-use crate::building::{Arching, Edge, Panel, PanelRoute, PlanWall, Sharing, Span, line_of};
+use crate::building::found::{self, FoundPanel, FoundSpan};
+use crate::building::{Arching, Edge, Panel, PanelRoute, PlanWall, Sharing, Span, Storey, line_of};
 use crate::error::Kind;
 use crate::quantity::{Length, LineLoad};
 use crate::standards::masonry;
@@ -22,11 +23,26 @@ const WALL_AT: Limits = Limits::new(0.0, 20.0, "m");
 /// Reads one panel.
 pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     let mark = t.need("mark").mark(MARK);
-    let title = t.need("title").line();
-    let build_up = around.build_ups.refer(&t.need("build_up"));
-    let storey = around.storeys.refer(&t.need("storey"));
-    let height = t.need("height").quantity(&HEIGHT);
     let on = if t.has("on") { around.plan.refer(&t.need("on")) } else { None };
+    let found = on.as_ref().and_then(|on| shown(t, around, on));
+    let wall_on = on.as_ref().and_then(|w| around.plan.item(w));
+    let title = match found {
+        Some(f) if !t.has("title") => Some(found::title_of_panel(f)),
+        _ => t.need("title").line(),
+    };
+    let build_up = match (found, wall_on) {
+        (Some(_), Some(wall)) if !t.has("build_up") => Some(wall.build_up.clone()),
+        _ => around.build_ups.refer(&t.need("build_up")),
+    };
+    let storey = match found {
+        Some(_) if !t.has("storey") => Some(around.found_in.to_owned()),
+        _ => around.storeys.refer(&t.need("storey")),
+    };
+    let of_storey = storey.as_ref().and_then(|s| around.storeys.item(s));
+    let height = match (found, of_storey) {
+        (Some(_), Some(seen)) if !t.has("height") => Some(seen.clear_height),
+        _ => t.need("height").quantity(&HEIGHT),
+    };
     // With floors on the plan the load on a panel of a plan wall is led down to it.
     let led = around.led && t.has("on") && !t.has("dead_above");
     let dead_above = if led { Some(LineLoad::ZERO) } else { t.need("dead_above").quantity(&DEAD) };
@@ -41,12 +57,16 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
         Some(_) => sharing.choice(Sharing::WORDS, Sharing::from_word),
         None => Some(Sharing::Strength),
     };
-    let before_table = t.need("before").table(&format!("{}, before", t.name));
-    let wall_on = on.as_ref().and_then(|w| around.plan.item(w));
-    let before = before_table.as_ref().and_then(|b| span(b, around, wall_on));
-    let after_table = t.need("after").table(&format!("{}, after", t.name));
+    let drawn = found.zip(of_storey);
+    let before_table = side(t, "before", found.is_some());
+    let before = read_side(before_table.as_ref(), around, wall_on, drawn.map(|(f, s)| (&f.before, s)));
+    let after_table = side(t, "after", found.is_some());
     let wall_at = after_table.as_ref().and_then(|a| a.may("wall_at").quantity(&WALL_AT));
-    let after = after_table.as_ref().and_then(|a| span(a, around, wall_on));
+    let wall_at = wall_at.or(found.map(|f| f.wall_at));
+    let after = read_side(after_table.as_ref(), around, wall_on, drawn.map(|(f, s)| (&f.after, s)));
+    let before = before.map(|r| r.span);
+    let (range, edges_taken) = after.as_ref().map_or((None, false), |r| (r.range, r.taken));
+    let after = after.map(|r| r.span);
     let arching = arching(t, route);
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
@@ -58,13 +78,15 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
             .allowed("`sharing` with two leaves")
             .help("take `sharing` out, or correct the build-up");
     }
-    for (table, span) in [(&before_table, &before), (&after_table, &after)] {
-        if let (Some(table), Some(span), Some(route)) = (table, span, route) {
+    // Edges that come from the plan are told in the table of the panel itself.
+    let (bt, at) = (before_table.as_ref().unwrap_or(t), after_table.as_ref().unwrap_or(t));
+    for (table, span) in [(bt, &before), (at, &after)] {
+        if let (Some(span), Some(route)) = (span, route) {
             stands(table, span, route, t);
         }
     }
-    if let (Some(bt), Some(at), Some(before), Some(after)) = (&before_table, &after_table, &before, &after) {
-        compare(t, (bt, before), (at, after));
+    if let (Some(before), Some(after)) = (&before, &after) {
+        compare(t, (bt, before), (at, after), edges_taken);
         if after.length >= before.length && wall_at.is_some_and(|place| place > after.length) {
             at.clash("the removed wall met it beyond its end", "wall_at", "length")
                 .allowed("0 m at the left end to the length after the removal")
@@ -89,36 +111,134 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
         storey: storey?,
         height: height?,
         on,
+        range,
         dead_above: dead_above?,
         wind,
         route: route?,
         sharing: sharing?,
         before: before?,
         after: after?,
+        edges_taken,
         wall_at,
         arching,
     })
 }
 
-fn span<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: Option<&PlanWall>) -> Option<Span> {
-    let length = match on {
-        Some(wall) if around.led && t.has("between") => {
-            if t.has("length") {
-                t.clash("its length is given twice", "length", "between")
+/// `before` or `after`; it may be left out where the plan shows the panel.
+fn side<'a>(t: &Table<'a>, key: &'static str, shown: bool) -> Option<Table<'a>> {
+    let entry = if shown { t.may(key) } else { t.need(key) };
+    if shown && entry.value.is_none() { None } else { entry.table(&format!("{}, {key}", t.name)) }
+}
+
+/// A side of the panel as read.
+struct ReadSide {
+    span: Span,
+    /// Where it lies on the plan.
+    range: Option<(Length, Length)>,
+    /// Whether an edge comes from the plan.
+    taken: bool,
+}
+
+fn read_side<'a>(
+    own: Option<&Table<'a>>,
+    around: &Around<'_, 'a>,
+    on: Option<&PlanWall>,
+    shown: Option<(&FoundSpan, &Storey)>,
+) -> Option<ReadSide> {
+    let Some(own) = own else {
+        let (span, storey) = shown?;
+        return Some(ReadSide { span: found::span(span, storey), range: Some(span.range), taken: true });
+    };
+    let mut range = None;
+    let length = match (on, shown) {
+        (Some(wall), _) if around.led && own.has("between") => {
+            if own.has("length") {
+                own.clash("its length is given twice", "length", "between")
                     .allowed("`length`, or `between` with the two walls of the plan that hold its ends")
                     .help("take one of the two out");
             }
-            between(t, around, wall)
+            range = between(own, around, wall);
+            range.map(|(a, z)| z - a)
         }
-        _ => t.need("length").quantity(&LENGTH),
+        (_, Some((span, _))) if !own.has("length") => {
+            range = Some(span.range);
+            Some(span.length())
+        }
+        _ => own.need("length").quantity(&LENGTH),
     };
-    let [top, base, left, right] = ["top", "base", "left", "right"].map(|key| edge(t, key));
-    t.finish();
-    Some(Span { length: length?, top: top?, base: base?, left: left?, right: right? })
+    let drawn = shown.map(|(span, storey)| found::span(span, storey));
+    let mut taken = false;
+    let mut edge = |key: &'static str, drawn: Option<Edge>| match drawn {
+        Some(drawn) if !own.has(key) => {
+            taken = true;
+            Some(drawn)
+        }
+        _ => edge(own, key),
+    };
+    let top = edge("top", drawn.as_ref().map(|d| d.top.clone()));
+    let base = edge("base", drawn.as_ref().map(|d| d.base.clone()));
+    let left = edge("left", drawn.as_ref().map(|d| d.left.clone()));
+    let right = edge("right", drawn.as_ref().map(|d| d.right.clone()));
+    own.finish();
+    let span = Span { length: length?, top: top?, base: base?, left: left?, right: right? };
+    Some(ReadSide { span, range, taken })
 }
 
-/// Length between the lines of two plan walls that meet the wall of the panel.
-fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<Length> {
+/// The panel of the plan that this one is: the one between the walls named, or the only one of its wall.
+fn shown<'r, 'a>(t: &Table<'a>, around: &Around<'r, 'a>, on: &str) -> Option<&'r FoundPanel> {
+    let all: Vec<&'r FoundPanel> = around.found.panels.iter().filter(|p| p.on == on).collect();
+    let by_hand = t.has("before") && t.has("after");
+    if !t.has("between") {
+        return match all.as_slice() {
+            [only] => Some(only),
+            [] => None,
+            _ if by_hand => None,
+            _ => {
+                t.fault(Kind::Missing, "the plan shows several panels on its wall")
+                    .at(t.place("on"), "which of them?")
+                    .allowed(pairs(&all))
+                    .help("add `between` with the two walls that hold the ends of this one");
+                // Read on as one of them: what it leaves out is no other slip.
+                all.first().copied()
+            }
+        };
+    }
+    let entry = t.need("between");
+    let items = entry.list("the two walls that hold its ends")?;
+    let marks: Vec<String> = items.iter().filter_map(|e| around.plan.refer(e)).collect();
+    if marks.len() != items.len() {
+        return all.first().copied();
+    }
+    let is_it = |p: &&&FoundPanel| {
+        let held: Vec<&String> = p.after.held.iter().flatten().collect();
+        held.len() == marks.len() && held.iter().all(|m| marks.contains(m))
+    };
+    let hit = all.iter().find(is_it).copied();
+    if hit.is_none() {
+        entry
+            .fault(Kind::Contradiction, format_args!("the plan shows no such panel on {}", quoted(on)))
+            .at(entry.place(), "between these")
+            .allowed(if all.is_empty() {
+                "an outer wall that the wall that comes out held".to_owned()
+            } else {
+                pairs(&all)
+            })
+            .help("name one of these, or give the panel by hand in [panels.before] and [panels.after]");
+    }
+    hit.or_else(|| all.first().copied())
+}
+
+/// What holds the ends of each, as it is written.
+fn pairs(all: &[&FoundPanel]) -> String {
+    let pair = |p: &&FoundPanel| {
+        let held: Vec<String> = p.after.held.iter().flatten().map(|m| quoted(m)).collect();
+        format!("[{}]", held.join(", "))
+    };
+    all.iter().map(pair).collect::<Vec<_>>().join(" or ")
+}
+
+/// From line to line of two plan walls that meet the wall of the panel.
+fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<(Length, Length)> {
     let entry = t.need("between");
     let wanted = "the two walls of the plan that hold its ends: [\"party wall\", \"R1\"]";
     let items = entry.list(wanted)?;
@@ -140,7 +260,8 @@ fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<
         Some(line.at)
     };
     let (a, z) = (place(a), place(z));
-    let length = Length::new((a? - z?).abs());
+    let (a, z) = (a?, z?);
+    let length = Length::new((a - z).abs());
     if !LENGTH.allow(length.base()) {
         entry
             .fault(Kind::Contradiction, format_args!("the panel would be {:.0} mm long", length.base()))
@@ -149,7 +270,7 @@ fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<
             .help("name two walls apart from each other");
         return None;
     }
-    Some(length)
+    Some((Length::new(a.min(z)), Length::new(a.max(z))))
 }
 
 fn edge(t: &Table<'_>, key: &'static str) -> Option<Edge> {
@@ -225,7 +346,12 @@ fn stands(t: &Table<'_>, span: &Span, route: PanelRoute, panel: &Table<'_>) {
     }
 }
 
-fn compare(t: &Table<'_>, (bt, before): (&Table<'_>, &Span), (at, after): (&Table<'_>, &Span)) {
+fn compare(
+    t: &Table<'_>,
+    (bt, before): (&Table<'_>, &Span),
+    (at, after): (&Table<'_>, &Span),
+    taken: bool,
+) {
     if after.length < before.length {
         t.fault(Kind::Contradiction, "it is shorter after a support came out")
             .at(at.place("length"), "after")
@@ -234,7 +360,7 @@ fn compare(t: &Table<'_>, (bt, before): (&Table<'_>, &Span), (at, after): (&Tabl
             .help("correct one of the two");
     }
     let kinds = |s: &Span| [s.top.kind, s.base.kind, s.left.kind, s.right.kind];
-    if after.length == before.length && kinds(before) == kinds(after) {
+    if !taken && after.length == before.length && kinds(before) == kinds(after) {
         t.warn("length and edges are the same before and after, so the removed wall did not hold it");
     }
 }

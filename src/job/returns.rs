@@ -8,6 +8,7 @@ use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
 use super::plan::plan_length;
 use super::reader::{Reader, Span, Table};
+use crate::building::found::{self, Found, FoundReturn};
 use crate::building::{
     Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
     Restraint, Return, Stability, Stands, Storey,
@@ -34,8 +35,6 @@ pub const FORCE: Limits =
     Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
 const MOMENT: Limits = Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
 
-/// Coefficient of friction at a dpc: common practice, no published source.
-const MU_USUAL: f64 = 0.4;
 /// Difference of a wall's height from its storey's that passes without a word.
 const HEIGHT_DIFFERS: Length = Length::new(300.0);
 
@@ -49,6 +48,10 @@ pub struct Around<'r, 'a> {
     pub plan: &'r Names<'a, PlanWall>,
     /// Bracing walls.
     pub bracing: &'r Names<'a, BracingWall>,
+    /// What the plan shows of the removal.
+    pub found: &'r Found,
+    /// The storey of the wall that comes out, by mark.
+    pub found_in: &'r str,
     /// Whether floors stand on the plan, so that its loads are led down.
     pub led: bool,
     /// The storey's stability, with its table.
@@ -56,9 +59,9 @@ pub struct Around<'r, 'a> {
 }
 
 /// Holds a return against the plan wall of the same mark, whose loads it takes.
-fn against_plan(t: &Table<'_>, seen: &Seen<'_, PlanWall>, length: Length) {
+fn against_plan(t: &Table<'_>, seen: &Seen<'_, PlanWall>, length: Length, found: Option<&FoundReturn>) {
     let Some(wall) = &seen.item else { return };
-    let drawn = plan_length(wall);
+    let drawn = found.map_or(plan_length(wall), |f| f.length);
     if (drawn - length).abs() > DRAWN {
         t.fault(Kind::Contradiction, "the return is not as long as its wall on the plan")
             .at(t.place("length"), "here")
@@ -71,8 +74,12 @@ fn against_plan(t: &Table<'_>, seen: &Seen<'_, PlanWall>, length: Length) {
 /// Reads one return.
 pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     let mark = t.need("mark").mark(MARK);
-    let title = t.need("title").line();
     let drawn = mark.as_ref().filter(|_| around.led).and_then(|m| around.plan.item(m));
+    let found = mark.as_ref().and_then(|m| around.found.of_return(m));
+    let title = match found {
+        Some(f) if !t.has("title") => Some(found::title_of_return(f)),
+        _ => t.need("title").line(),
+    };
     let build_up = match drawn {
         Some(wall) if !t.has("build_up") => Some(wall.build_up.clone()),
         _ => around.build_ups.refer(&t.need("build_up")),
@@ -82,7 +89,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         _ => around.storeys.refer(&t.need("storey")),
     };
     let length: Option<Length> = match drawn {
-        Some(wall) if !t.has("length") => Some(plan_length(wall)),
+        Some(wall) if !t.has("length") => Some(found.map_or(plan_length(wall), |f| f.length)),
         _ => t.need("length").quantity(&LENGTH),
     };
     let of_storey = storey.as_ref().and_then(|s| around.storeys.item(s)).map(|s| s.clear_height);
@@ -91,15 +98,28 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         _ => t.need("height").quantity(&HEIGHT),
     };
     let position = t.may("position").pair(&POSITION);
-    let (base, base_reason) = base(t);
-    let mu = t.may("mu").factor(MU_USUAL, &MU);
+    let (base, base_reason) = base(t, found.is_some());
+    let mu = t.may("mu").factor(found::MU_USUAL, &MU);
     let head = head(t, around, mark.as_deref());
-    let (path, strip_height) = path(t);
-    let tributary_width: Option<Length> = t.need("tributary_width").quantity(&TRIBUTARY);
+    let (path, strip_height) = path(t, found.map(|f| f.strip));
+    let tributary_width = match found {
+        Some(f) if !t.has("tributary_width") => Some(f.tributary),
+        _ => t.need("tributary_width").quantity(&TRIBUTARY),
+    };
     let from_above = from_above(t);
-    let restraint = t.need("restraint").choice(Restraint::WORDS, Restraint::from_word);
-    let supported_wall_height: Option<Length> = t.need("supported_wall_height").quantity(&SUPPORTED);
-    let nearest_opening = t.may("nearest_opening").quantity(&OPENING);
+    let floor = storey.as_ref().and_then(|s| around.storeys.item(s)).and_then(found::restraint);
+    let restraint = match (found, floor) {
+        (Some(_), Some(held)) if !t.has("restraint") => Some(held),
+        _ => t.need("restraint").choice(Restraint::WORDS, Restraint::from_word),
+    };
+    let supported_wall_height = match found {
+        Some(f) if !t.has("supported_wall_height") => Some(f.supported),
+        _ => t.need("supported_wall_height").quantity(&SUPPORTED),
+    };
+    let nearest_opening = match found {
+        Some(f) if !t.has("nearest_opening") => f.nearest_opening,
+        _ => t.may("nearest_opening").quantity(&OPENING),
+    };
     let far_end = t.may("far_end").text();
     let acts = t.may("acts");
     let acts =
@@ -111,10 +131,13 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         .iter()
         .map(|lt| bearing::load(lt, t, length, wall))
         .collect();
-    let junction = t
-        .need("junction")
-        .table(&format!("{}, junction", t.name))
-        .and_then(|j| bearing::junction(&j, around));
+    let junction = match found {
+        Some(f) if !t.has("junction") => Some(found::junction(f)),
+        _ => t
+            .need("junction")
+            .table(&format!("{}, junction", t.name))
+            .and_then(|j| bearing::junction(&j, around, found)),
+    };
     let footing = if t.has("footing") {
         t.need("footing")
             .table(&format!("{}, footing", t.name))
@@ -154,7 +177,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
     }
     let on_plan = mark.as_ref().and_then(|m| around.plan.get(m)).filter(|_| around.led);
     if let (Some(seen), Some(length)) = (on_plan, length) {
-        against_plan(t, seen, length);
+        against_plan(t, seen, length, found);
     }
     if !t.has("loads") && on_plan.is_none() {
         t.warn("no load from above is given; its own weight alone holds it down");
@@ -204,8 +227,12 @@ pub fn footing_twice(reader: &Reader, earlier: &[(String, Span)], mark: &str, pl
         .help("give one of them another mark");
 }
 
-fn base(t: &Table<'_>) -> (Option<BaseJoint>, Option<String>) {
-    let base = t.need("base").choice(BaseJoint::WORDS, BaseJoint::from_word);
+/// A base that is not spoken of is a dpc where the plan shows the return.
+fn base(t: &Table<'_>, found: bool) -> (Option<BaseJoint>, Option<String>) {
+    let base = match found && !t.has("base") {
+        true => Some(BaseJoint::Dpc),
+        false => t.need("base").choice(BaseJoint::WORDS, BaseJoint::from_word),
+    };
     match (base, t.has("base_reason")) {
         (Some(BaseJoint::Bonded), false) => {
             t.fault(Kind::Missing, "the base is bonded, but `base_reason` is missing")
@@ -275,9 +302,14 @@ fn props_on_plan<'a>(entry: &Entry<'a>, around: &Around<'_, 'a>, own: Option<&st
     Some(marks)
 }
 
-fn path(t: &Table<'_>) -> (Option<Path>, Option<Length>) {
+/// The path and the height that a floor collects; `drawn` where the plan shows it.
+fn path(t: &Table<'_>, drawn: Option<Length>) -> (Option<Path>, Option<Length>) {
     let path = t.need("path").choice(Path::WORDS, Path::from_word);
     let strip = t.may("strip_height").quantity(&STRIP);
+    let by_floor = matches!(path, Some(Path::UpAndDown | Path::Both));
+    if by_floor && drawn.is_some() && !t.has("strip_height") {
+        return (path, drawn);
+    }
     match path {
         Some(Path::UpAndDown | Path::Both) if !t.has("strip_height") => {
             t.fault(Kind::Contradiction, "the floor brings wind to its head, but `strip_height` is missing")

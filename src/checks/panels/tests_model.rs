@@ -80,6 +80,7 @@ fn house() -> Building {
         bearings: Vec::new(),
         padstones: Vec::new(),
         responsible: Vec::new(),
+        found: Found::default(),
         warnings: Vec::new(),
     }
 }
@@ -92,12 +93,14 @@ fn panel() -> Panel {
         storey: String::new(),
         height: Length::new(2400.0),
         on: None,
+        range: None,
         dead_above: LineLoad::new(8.5),
         wind: None,
         route: PanelRoute::Flexure,
         sharing: Sharing::Strength,
         before: span(2400.0, [S, S, C, C]),
         after: span(3600.0, [S, S, C, S]),
+        edges_taken: false,
         wall_at: None,
         arching: None,
     }

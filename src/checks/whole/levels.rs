@@ -1,6 +1,6 @@
 //! Wind and tilt of every level of the building in one direction.
 
-use crate::building::{Along, Building, TakeDown, line_of, storey_height};
+use crate::building::{Along, Building, TakeDown, line_of, storey_height, strip_height};
 use crate::quantity::{Force, Length, Moment, Stress};
 use crate::solve::descent::Axis;
 
@@ -39,14 +39,7 @@ pub const fn axis(along: Along) -> Axis {
 pub fn of(b: &Building, down: &TakeDown, along: Along, q: Stress) -> Vec<Level> {
     let (begin, end) = front(b, along);
     let n = b.storeys.len();
-    let strip = |k: usize| {
-        let over = b.storeys.get(k + 1).map_or_else(
-            // Up to the ridge, as an upright face: on the safe side.
-            || b.storeys[k].total_height - b.storeys[k].clear_height,
-            |_| storey_height(b, k + 1) / 2.0,
-        );
-        storey_height(b, k) / 2.0 + over
-    };
+    let strip = |k: usize| strip_height(&b.storeys, k);
     let mut out: Vec<Level> = Vec::new();
     let (mut F_above, mut M_above) = (Force::ZERO, Moment::ZERO);
     for k in (0..n).rev() {

@@ -59,15 +59,23 @@ fn counts(b: &Building) -> bool {
     b.links.iter().any(|l| l.link == "bracing wall" && l.proof == Proof::Calculated)
 }
 
-/// A hold point for every direction in which walls alone do not carry their share after the removal, where
-/// the job does not rest on these figures anyhow.
+/// Whether the removal asks more of a length: a greater share or a greater use.
+fn grows(p: &Used) -> bool {
+    let more = |after: f64, before: f64| after > before * (1.0 + 1e-6);
+    let uses = p.before.as_ref().zip(p.after.as_ref());
+    let shares = p.share_before.zip(p.share_after);
+    uses.is_none_or(|(b, a)| more(a.0, b.0)) || shares.is_none_or(|(b, a)| more(a, b))
+}
+
+/// A hold point for every direction in which walls that get more by the removal do not carry their share
+/// alone after it, where the job does not rest on these figures anyhow.
 pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
     if counts(job.building) {
         return Vec::new();
     }
     let over = |d: &Direction| {
         let mut walls: Vec<&str> = Vec::new();
-        for p in d.piers.iter().filter(|p| p.after.as_ref().is_some_and(|(r, _)| *r > 1.0)) {
+        for p in d.piers.iter().filter(|p| grows(p) && p.after.as_ref().is_some_and(|(r, _)| *r > 1.0)) {
             if !walls.contains(&p.wall.as_str()) {
                 walls.push(&p.wall);
             }
@@ -79,7 +87,7 @@ pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
         (!walls.is_empty()).then(|| {
             let text = format!(
                 "Before the wall comes down, show how the house stands against wind along {}: on the sheet of the whole \
-                 building the lengths of {walls} do not carry their share after the removal, each taken alone.",
+                 building the lengths of {walls} get more by the removal and do not carry it, each taken alone.",
                 d.along.word()
             );
             (String::new(), text)
@@ -110,9 +118,9 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     s.note(if counts {
         "The bracing walls are calculated here: the link of that name rests on these uses."
     } else {
-        "The link \"bracing wall\" of this job rests on what the chain sheet says of it; where a use after the removal is \
-         above 1 a hold point asks for more. A use above 1 before the removal says that the house stands by more than is \
-         counted here."
+        "The link \"bracing wall\" of this job rests on what the chain sheet says of it; where a length gets \
+         more by the removal and its use is above 1 after it, a hold point asks for more. A use above 1 that does not grow \
+         is the house as it stands, by more than is counted here: the removal changes nothing there."
     });
     for d in &job.whole {
         s.heading(1, format!("Wind along {}", d.along.word()));

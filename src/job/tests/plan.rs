@@ -113,8 +113,8 @@ const SLIPS: &[Slip] = &[
     ),
     (
         "return longer than its wall",
-        "title = \"Length at the party wall\"",
-        "title = \"Length at the party wall\"\nlength = \"1150 mm\"",
+        "mark = \"R1\"\nhead",
+        "mark = \"R1\"\nlength = \"1150 mm\"\nhead",
         "\"1150 mm\"",
         &["not as long as its wall on the plan", "950 mm long on the plan"],
     ),
@@ -127,17 +127,35 @@ const SLIPS: &[Slip] = &[
     ),
     (
         "panel between a wall along it",
-        "between = [\"R2\", \"front wall\"]",
-        "between = [\"R2\", \"party wall\"]",
+        "[panels.after]\n",
+        "[panels.after]\nbetween = [\"R2\", \"party wall\"]\n",
         "\"party wall\"",
         &["runs along the panel"],
     ),
     (
         "panel between one wall and itself",
-        "between = [\"R2\", \"front wall\"]",
-        "between = [\"R2\", \"R2\"]",
+        "[panels.after]\n",
+        "[panels.after]\nbetween = [\"R2\", \"R2\"]\n",
         "[\"R2\", \"R2\"]",
         &["the panel would be 0 mm long"],
+    ),
+    (
+        "panel that the plan does not show",
+        "between = [\"R2\", \"front wall\"]",
+        "between = [\"R1\", \"front wall\"]",
+        "[\"R1\", \"front wall\"]",
+        &[
+            "the plan shows no such panel on \"flank wall\"",
+            "[\"rear wall\", \"R2\"] or [\"R2\", \"front wall\"]",
+            "give the panel by hand",
+        ],
+    ),
+    (
+        "one of two panels, not said which",
+        "between = [\"R2\", \"front wall\"]\n\n[panels.before]\n",
+        "\n[panels.before_]\n",
+        "\"flank wall\"",
+        &["the plan shows several panels on its wall", "[\"R2\", \"front wall\"]", "add `between`"],
     ),
     (
         "neighbours not said",
@@ -181,12 +199,39 @@ fn each_slip_in_a_plan_is_said_where_it_stands() {
 #[test]
 fn loads_given_by_hand_stay_as_they_are() {
     let text = PLAN.replacen(
-        "[returns.junction]\nto = \"party wall\"",
-        "[[returns.loads]]\nwhat = \"beam B1\"\ndead = \"20 kN\"\nimposed = \"13 kN\"\nat = \"875 mm\"\n\n[returns.junction]\nto = \"party wall\"",
+        "[returns.junction]\nbonded = false\nproof = \"seen\"\nwords = \"Straight joint",
+        "[[returns.loads]]\nwhat = \"beam B1\"\ndead = \"20 kN\"\nimposed = \"13 kN\"\nat = \"875 mm\"\n\n[returns.junction]\nbonded = false\nproof = \"seen\"\nwords = \"Straight joint",
         1,
     );
     let b = read("plan.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
     assert_eq!(b.returns[0].loads.len(), 1);
     assert_eq!(b.returns[0].loads[0].dead.base(), 20e3);
     assert!(b.returns[1].loads.iter().all(|l| l.source == crate::building::LED));
+}
+
+#[test]
+fn what_the_job_leaves_out_comes_from_the_plan() {
+    let b = read("plan.toml", PLAN).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    let r = &b.returns[1];
+    assert_eq!((r.length.base(), r.tributary_width.base(), r.height.base()), (1250.0, 4000.0, 2450.0));
+    assert_eq!((r.junction.to.as_str(), r.junction.thickness.base()), ("flank wall", 102.5));
+    // Two storeys of wall are met, 2.70 and 2.40 m.
+    assert_eq!((r.supported_wall_height.base(), r.nearest_opening), (5100.0, None));
+    // The flank wall carries no floor: 12.5 kN/m would be the two leaves, the loaded one has its own weight.
+    assert!(r.junction.dead.base() > 5.0 && r.junction.dead.base() < 14.0, "{}", r.junction.dead.base());
+    let of = |p: &crate::building::Panel| (p.mark.clone(), p.before.length.base(), p.after.length.base());
+    let panels: Vec<_> = b.panels.iter().map(of).collect();
+    assert_eq!(panels, [("P1".to_owned(), 4600.0, 4600.0), ("P2".to_owned(), 3400.0, 3400.0)]);
+    assert_eq!(b.found.added, ["P2"]);
+    assert!(b.panels[1].edges_taken && !b.panels[0].edges_taken);
+}
+
+#[test]
+fn a_plan_alone_is_a_job() {
+    let (a, z) = (PLAN.find("[[returns]]").unwrap_or(0), PLAN.find("[collapse]").unwrap_or(0));
+    let text = format!("{}{}", &PLAN[..a], &PLAN[z..]).replace("for = [\"R1\", \"R2\"]", "");
+    let b = read("plan.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    assert_eq!(b.found.added, ["R1", "R2", "P1", "P2"]);
+    assert!(b.returns.iter().all(|r| !r.loads.is_empty() && r.head == crate::building::Head::Free));
+    assert!(b.panels.iter().all(|p| p.edges_taken));
 }
