@@ -21,6 +21,8 @@ pub struct PlanWall {
     pub removed: bool,
     /// Storeys in which it stands, by mark; empty for all, or for the one of the removed wall.
     pub storeys: Vec<String>,
+    /// Ends free on purpose, at an opening that reaches a corner for instance.
+    pub free_end: bool,
     /// Doors and windows.
     pub openings: Vec<PlanOpening>,
 }

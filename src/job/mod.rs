@@ -129,14 +129,21 @@ fn whole(root: &Table<'_>) -> Option<Building> {
 
     let led = !floors.is_empty();
     let found = match &removed {
-        Some(removed) if led => found::find(&found::Around {
-            walls: walls.iter().filter_map(|s| s.item.as_ref()).collect(),
-            storeys: storeys.iter().filter_map(|s| s.item.as_ref()).collect(),
-            floors: floors.iter().filter_map(|s| s.item.as_ref()).collect(),
-            build_ups: build_ups.iter().filter_map(|s| s.item.as_ref()).collect(),
-            neighbours: neighbours.as_deref().unwrap_or_default(),
-            storey: &removed.storey,
-        }),
+        Some(removed) if led => {
+            let around = found::Around {
+                walls: walls.iter().filter_map(|s| s.item.as_ref()).collect(),
+                storeys: storeys.iter().filter_map(|s| s.item.as_ref()).collect(),
+                floors: floors.iter().filter_map(|s| s.item.as_ref()).collect(),
+                build_ups: build_ups.iter().filter_map(|s| s.item.as_ref()).collect(),
+                neighbours: neighbours.as_deref().unwrap_or_default(),
+                storey: &removed.storey,
+            };
+            // Half a plan is no plan that does not close.
+            if walls.iter().all(|s| s.item.is_some()) {
+                plan::closes(&walls, &around);
+            }
+            found::find(&around)
+        }
         _ => Found::default(),
     };
     let (returns, panels) = {

@@ -8,6 +8,7 @@ use super::limits::{Limits, Odd, nearest, one_of};
 use super::names::Names;
 use super::reader::{Reader, Span, Table};
 use super::words::{NORTH, TURN};
+use crate::building::found;
 use crate::building::{
     Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey, take_down,
 };
@@ -57,6 +58,7 @@ pub fn wall<'a>(
     let to = t.need("to").pair(&ON_PLAN);
     let removed = t.may("removed").flag().unwrap_or(false);
     let storeys = marks(t, "storeys", around);
+    let free_end = t.may("free_end").flag().unwrap_or(false);
     let openings: Vec<_> = t
         .may("openings")
         .tables(&format!("{}, opening", t.name), "")
@@ -77,6 +79,7 @@ pub fn wall<'a>(
         to: to?,
         removed,
         storeys: storeys?,
+        free_end,
         openings,
     };
     in_order(t, &wall).then_some(wall)
@@ -274,6 +277,25 @@ pub fn along(walls: &Names<'_, PlanWall>) {
                 .allowed("with [[plan.floors]]: walls along x or y, for loads are led down along them")
                 .help("correct one of the two ends, or draw the wall as steps");
         }
+    }
+}
+
+/// Records ends of outer walls that meet no other wall.
+pub fn closes(walls: &Names<'_, PlanWall>, around: &found::Around<'_>) {
+    for end in found::open_ends(around) {
+        let Some(seen) = walls.get(&end.mark) else { continue };
+        let point = |(x, y): (f64, f64)| format!("({:.2} m, {:.2} m)", x / 1e3, y / 1e3);
+        let near = end.nearest.as_ref().map_or_else(String::new, |(mark, gap)| {
+            format!(": it ends at {}, {:.0} mm from {}", point(end.at), gap, quoted(mark))
+        });
+        seen.table
+            .fault(
+                Kind::Contradiction,
+                format_args!("the outside of storey {} does not close{near}", quoted(&end.storey)),
+            )
+            .at(seen.place.clone(), "an end of it meets no wall")
+            .allowed("outer walls whose ends meet another wall, within 150 mm and half their thickness")
+            .help("correct its end, add the wall that is missing, or write free_end = true where it ends at an opening");
     }
 }
 

@@ -66,6 +66,7 @@ fn another_wall_raises_no_share() {
             to: (Length::new(5000.0), Length::new(y)),
             removed: false,
             storeys: Vec::new(),
+            free_end: false,
             openings: Vec::new(),
         });
         for (old, new) in before.iter().zip(directions(&more)).filter(|(d, _)| d.along == Along::X) {
@@ -84,7 +85,9 @@ fn another_wall_raises_no_share() {
 /// A row with neighbours at both ends takes no wind along it.
 #[test]
 fn neighbours_at_both_ends_shelter_the_row() {
-    let text = JOB.replacen("neighbours = [\"left\"]", "neighbours = [\"left\", \"right\"]", 1);
+    // A semi, whose panels do not lie at the end of the row.
+    let semi = include_str!("../../jobs/semi.toml");
+    let text = semi.replacen("neighbours = [\"left\"]", "neighbours = [\"left\", \"right\"]", 1);
     let b = perpend::job::read("row.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
     let along: Vec<Along> = directions(&b).iter().map(|d| d.along).collect();
     assert_eq!(along, [Along::Y]);

@@ -3,6 +3,7 @@
 //! Geometry alone, in the storey of the wall that comes out. Lines may miss each other by [`REACH`];
 //! spans run between the lines of the plan, distances along the wall met from the faces of the return.
 
+mod closes;
 mod complete;
 mod panels;
 mod returns;
@@ -13,6 +14,7 @@ mod tests;
 
 use super::{Along, BuildUp, PlanFloor, PlanWall, Side, Storey};
 use crate::quantity::Length;
+pub use closes::{OpenEnd, open_ends};
 pub use complete::{MU_USUAL, complete, junction, restraint, span, title_of_panel, title_of_return, treated};
 use storey::Floor;
 

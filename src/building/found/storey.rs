@@ -49,8 +49,7 @@ impl<'a> Floor<'a> {
     /// The storey, where a wall comes out of it along x or y.
     pub fn of(around: &'a Around<'a>) -> Option<Self> {
         let number = around.storeys.iter().position(|s| s.mark == around.storey)?;
-        let here = around.walls.iter().filter(|w| stands(w, around.storey, around.storey));
-        let lines: Vec<Line<'a>> = here.filter_map(|w| line(around, w)).collect();
+        let lines = lines(around, around.storey);
         let gone = lines.iter().position(|l| l.wall.removed)?;
         Some(Self { around, number, lines, gone })
     }
@@ -128,13 +127,9 @@ impl<'a> Floor<'a> {
     /// The side of `line` on which the outside lies at `s`, as the sign of the direction across: nothing
     /// for a wall with rooms on both sides, or with a neighbour beyond.
     pub fn outside(&self, line: &Line<'_>, s: f64) -> Option<f64> {
-        let covered = |across: f64| {
-            self.around.floors.iter().filter(|f| f.storey == self.around.storey).any(|f| {
-                let range = |a: Length, z: Length| (a.base().min(z.base()), a.base().max(z.base()));
-                let (x, y) = (range(f.from.0, f.to.0), range(f.from.1, f.to.1));
-                let (p, q) = if line.along == Along::X { (s, across) } else { (across, s) };
-                x.0 < p && p < x.1 && y.0 < q && q < y.1
-            })
+        let covered = |at: f64| {
+            let point = if line.along == Along::X { (s, at) } else { (at, s) };
+            covered(self.around, self.around.storey, point)
         };
         let step = line.thickness / 2.0 + REACH;
         let side = match (covered(line.at - step), covered(line.at + step)) {
@@ -164,6 +159,21 @@ impl<'a> Floor<'a> {
     }
 }
 
+/// Walls of the storey marked `storey` before the removal that lie along x or y.
+pub fn lines<'a>(around: &Around<'a>, storey: &str) -> Vec<Line<'a>> {
+    let here = around.walls.iter().filter(|w| stands(w, storey, around.storey));
+    here.filter_map(|w| line(around, w, storey)).collect()
+}
+
+/// Whether a floor or roof over the storey marked `storey` lies over a point, mm.
+pub fn covered(around: &Around<'_>, storey: &str, (p, q): (f64, f64)) -> bool {
+    around.floors.iter().filter(|f| f.storey == storey).any(|f| {
+        let range = |a: Length, z: Length| (a.base().min(z.base()), a.base().max(z.base()));
+        let (x, y) = (range(f.from.0, f.to.0), range(f.from.1, f.to.1));
+        x.0 < p && p < x.1 && y.0 < q && q < y.1
+    })
+}
+
 /// Walls in one line that touch.
 pub struct Row {
     /// Where it begins.
@@ -185,7 +195,7 @@ fn solid(l: &Line<'_>, at: f64) -> f64 {
     (at - low).max(high - at)
 }
 
-fn line<'a>(around: &Around<'_>, wall: &'a PlanWall) -> Option<Line<'a>> {
+fn line<'a>(around: &Around<'_>, wall: &'a PlanWall, storey: &str) -> Option<Line<'a>> {
     let (a, z) = ((wall.from.0.base(), wall.from.1.base()), (wall.to.0.base(), wall.to.1.base()));
     let (along, at, start, end) = if a.1 == z.1 {
         (Along::X, a.1, a.0, z.0)
@@ -198,7 +208,7 @@ fn line<'a>(around: &Around<'_>, wall: &'a PlanWall) -> Option<Line<'a>> {
     let mut openings: Vec<(f64, f64)> = wall
         .openings
         .iter()
-        .filter(|o| o.storey == around.storey)
+        .filter(|o| o.storey == storey)
         .map(|o| {
             let (p, q) = (start + ahead * o.from.base(), start + ahead * (o.from + o.width).base());
             (p.min(q), p.max(q))

@@ -31,6 +31,7 @@ fn wall(turn: Turn, mark: &str, from: (f64, f64), to: (f64, f64)) -> PlanWall {
         to: at(turn, to.0, to.1),
         removed: mark == "gone",
         storeys: Vec::new(),
+        free_end: false,
         openings: Vec::new(),
     }
 }
@@ -85,15 +86,19 @@ fn house(turn: Turn) -> House {
 }
 
 impl House {
-    fn find(&self) -> Found {
-        find(&Around {
+    fn around(&self) -> Around<'_> {
+        Around {
             walls: self.walls.iter().collect(),
             storeys: self.storeys.iter().collect(),
             floors: self.floors.iter().collect(),
             build_ups: self.build_ups.iter().collect(),
             neighbours: &self.neighbours,
             storey: "ground",
-        })
+        }
+    }
+
+    fn find(&self) -> Found {
+        find(&self.around())
     }
 
     fn wall(&mut self, mark: &str) -> &mut PlanWall {
@@ -258,4 +263,23 @@ fn nothing_is_found_where_nothing_comes_out() {
     let mut h = house(AS_IS);
     h.walls.retain(|w| w.mark != "gone");
     assert_eq!(h.find(), Found::default());
+}
+
+#[test]
+fn an_outer_wall_that_meets_nothing_is_named() {
+    let mut h = house(AS_IS);
+    assert_eq!(open_ends(&h.around()), []);
+    h.wall("rear").to = at(AS_IS, 5.6, 0.0);
+    let open = open_ends(&h.around());
+    // Its own end, and the corner that it no longer reaches.
+    let marks: Vec<_> = open.iter().map(|o| (o.mark.as_str(), o.at)).collect();
+    assert_eq!(marks, [("rear", (5600.0, 0.0)), ("east", (6000.0, 0.0))]);
+    assert_eq!(open[0].nearest, Some(("east".to_owned(), 400.0)));
+    h.wall("rear").free_end = true;
+    h.wall("east").free_end = true;
+    assert_eq!(open_ends(&h.around()), []);
+    // A nib inside ends free and is no fault; within reach is met.
+    let mut h = house(AS_IS);
+    h.wall("rear").to = at(AS_IS, 5.8, 0.0);
+    assert_eq!(open_ends(&h.around()), [], "200 mm: reach and half a wall");
 }

@@ -14,7 +14,10 @@ pub fn of(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> La
     let r = i.ret;
     let part = i.storey.and_then(|st| st.after(&r.mark).map(|p| (st, p)));
     given!(s, "net overall pressure, characteristic", "wind sheet", q_net = i.wind.overall * wind);
-    given!(s, "tributary width of the wind face", "job file", b_t = r.tributary_width);
+    let shown = i.building.found.of_return(&r.mark);
+    let from = |as_drawn: bool| if as_drawn { "plan" } else { "job file" };
+    let source = from(shown.is_some_and(|f| f.tributary == r.tributary_width));
+    given!(s, "tributary width of the wind face", source, b_t = r.tributary_width);
     let w_k = if r.path == Path::UpAndDown {
         given!(
             s,
@@ -28,7 +31,8 @@ pub fn of(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> La
         w_k
     };
     given!(s, "wind from the storeys above", "job file", F_a = r.from_above.force * wind);
-    let H_k = head_force(s, r, part, q_net, b_t, F_a, wind);
+    let strip = from(shown.is_some_and(|f| Some(f.strip) == r.strip_height));
+    let H_k = head_force(s, r, part, (q_net, b_t, strip), F_a, wind);
     given!(s, "moment from the storeys above", "job file", M_k = r.from_above.moment * wind);
     let received = received(i, wind);
     let H_k = if received.force > Force::ZERO {
@@ -147,8 +151,7 @@ fn head_force(
     s: &mut Sheet,
     r: &Return,
     part: Option<(&Storey, f64)>,
-    q_net: Stress,
-    b_t: Length,
+    (q_net, b_t, source): (Stress, Length, &str),
     F_a: Force,
     wind: f64,
 ) -> Force {
@@ -165,7 +168,7 @@ fn head_force(
     given!(
         s,
         "height of wind face that the floor collects",
-        "job file",
+        source,
         h_s = r.strip_height.unwrap_or(r.height)
     );
     calc!(s, "statics", "force at the head, brought by the floor", H_k = q_net * b_t * h_s + F_a);

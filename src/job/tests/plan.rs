@@ -21,6 +21,16 @@ const SLIPS: &[Slip] = &[
         ],
     ),
     (
+        "outer wall that stops short of a corner",
+        "from = [\"0 m\", \"0 m\"]\nto = [\"5.0 m\", \"0 m\"]",
+        "from = [\"0 m\", \"0 m\"]\nto = [\"4.4 m\", \"0 m\"]",
+        "\"rear wall\"",
+        &[
+            "the outside of storey \"ground\" does not close: it ends at (4.40 m, 0.00 m), 600 mm from \"flank wall\"",
+            "free_end = true",
+        ],
+    ),
+    (
         "floor that spans past everything",
         "to = [\"5.0 m\", \"3.4 m\"]\nspans = \"y\"",
         "to = [\"6.4 m\", \"3.4 m\"]\nspans = \"y\"",
