@@ -42,6 +42,11 @@ Examples:
 Exit codes: 0 adequate; 1 not adequate, outside the method, or conditional on hold points; 2 error.
 A pack is worth nothing unsigned: read it, check it, sign it.";
 
+const START_EXAMPLES: &str = "\
+Examples:
+  perpend start rear-opening.toml      every entry, each with a remark
+  perpend start --plan kitchen.toml    walls, floors and beams as a plan; loads and spans found on it";
+
 const CHECK_EXAMPLES: &str = "\
 Examples:
   perpend check rear-opening.toml
@@ -57,10 +62,13 @@ A pack that is there already is replaced as soon as the new one is whole.";
 #[derive(Subcommand)]
 enum Command {
     /// Write a commented job file that is already a complete invented job
-    #[command(after_help = "Example:\n  perpend start rear-opening.toml")]
+    #[command(after_help = START_EXAMPLES)]
     Start {
         /// Where to write it; an existing file is left alone
         file: PathBuf,
+        /// A shorter job, worked from a plan of its walls, floors and beams, in place of one with every entry by hand
+        #[arg(long)]
+        plan: bool,
     },
     /// Check jobs and print the results
     #[command(after_help = CHECK_EXAMPLES)]
@@ -104,15 +112,16 @@ pub fn run() -> u8 {
     };
     many::hush();
     match flags.command {
-        Command::Start { file } => start(&file),
+        Command::Start { file, plan } => start(&file, plan),
         Command::Check { files, json } => check_all(&files, json),
         Command::Sheet { files, into, times } => sheet_all(&files, into.as_deref(), times),
         Command::Set { file } => child::hand_back(&file),
     }
 }
 
-fn start(file: &Path) -> u8 {
-    match files::write_new(file, job::start::TEMPLATE.as_bytes()) {
+fn start(file: &Path, plan: bool) -> u8 {
+    let text = if plan { job::start::FROM_PLAN } else { job::start::TEMPLATE };
+    match files::write_new(file, text.as_bytes()) {
         Ok(()) => {
             let _ = writeln!(
                 anstream::stdout(),

@@ -136,6 +136,17 @@ fn exit_codes_say_the_outcome() {
     assert_eq!(place.run(&["check", "--no-such-flag", "bad.toml"]).code, 2);
 }
 
+/// The job from a plan reads and checks as it is written; its code says that it is conditional.
+#[test]
+fn the_job_from_a_plan_is_complete() {
+    let place = Place::empty();
+    let start = place.run(&["start", "--plan", "kitchen.toml"]);
+    assert_eq!((start.code, start.err.as_str()), (0, ""));
+    let check = place.run(&["check", "kitchen.toml"]);
+    assert_eq!((check.code, check.err.as_str()), (1, ""));
+    assert!(check.out.contains("Outcome: adequate once"), "{}", check.out);
+}
+
 #[test]
 fn start_leaves_a_file_alone() {
     let place = Place::with(&[("house.toml", "mine")]);
