@@ -128,7 +128,11 @@ impl TakeDown {
                 }
             };
             let parts = [(0, "dead load"), (1, "imposed load"), (2, "uplift")];
-            return parts.into_iter().filter(|p| pier.head[p.0] > 0.0).map(|(i, what)| one(i, what)).collect();
+            return parts
+                .into_iter()
+                .filter(|p| pier.head[p.0] > 0.0)
+                .map(|(i, what)| one(i, what))
+                .collect();
         }
         let mut by: Vec<From> = Vec::new();
         let all = on.head.lines.iter().map(|l| l.by).chain(on.head.points.iter().map(|p| p.by));
@@ -224,10 +228,13 @@ pub fn take_loads(b: &mut Building, led: &Led) {
             f.before = Some(Before { led: true, dead: per(foot[0]), imposed: per(foot[1]) });
         }
     }
-    let left_out = |b: &Building, mark: &String, list: &[String]| list.contains(mark) || b.found.added.contains(mark);
+    let left_out =
+        |b: &Building, mark: &String, list: &[String]| list.contains(mark) || b.found.added.contains(mark);
     for i in 0..b.returns.len() {
         let r = &b.returns[i];
-        let Some(storey) = number(b, &r.storey).filter(|_| left_out(b, &r.mark, &led.junctions)) else { continue };
+        let Some(storey) = number(b, &r.storey).filter(|_| left_out(b, &r.mark, &led.junctions)) else {
+            continue;
+        };
         if let Some((wall, on)) = down.on_leaf.wall(b, &r.junction.to, storey) {
             b.returns[i].junction.dead = LineLoad::new(least_dead(wall, on) + wall.weight);
         }

@@ -15,9 +15,9 @@ mod words;
 pub use descent::{
     LED, Led, Stack, State, TakeDown, Trouble, line_of, stands_in, storey_height, take_down, take_loads,
 };
-pub use heights::strip_height;
-pub use found::Found;
 pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
+pub use found::Found;
+pub use heights::strip_height;
 pub use parts::{
     Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, StatedWind, Storey,
     Strength, TerrainWind, UnitStrength, Wind,

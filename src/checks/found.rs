@@ -189,7 +189,11 @@ fn of_return(r: &Return, f: &FoundReturn) -> Vec<Vec<String>> {
         ("tributary width", r.tributary_width, Some(f.tributary)),
         ("height of wind face that the floor collects", r.strip_height.unwrap_or(f.strip), Some(f.strip)),
         ("height of the wall met", r.supported_wall_height, Some(f.supported)),
-        ("nearest opening", r.nearest_opening.unwrap_or(f.to_end[0]), r.nearest_opening.and(f.nearest_opening)),
+        (
+            "nearest opening",
+            r.nearest_opening.unwrap_or(f.to_end[0]),
+            r.nearest_opening.and(f.nearest_opening),
+        ),
         ("wall met, to one side", less(j.left, j.right), same.then(|| less(f.to_end[0], f.to_end[1]))),
         ("wall met, to the other", more(j.left, j.right), same.then(|| more(f.to_end[0], f.to_end[1]))),
     ];

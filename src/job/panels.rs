@@ -346,12 +346,7 @@ fn stands(t: &Table<'_>, span: &Span, route: PanelRoute, panel: &Table<'_>) {
     }
 }
 
-fn compare(
-    t: &Table<'_>,
-    (bt, before): (&Table<'_>, &Span),
-    (at, after): (&Table<'_>, &Span),
-    taken: bool,
-) {
+fn compare(t: &Table<'_>, (bt, before): (&Table<'_>, &Span), (at, after): (&Table<'_>, &Span), taken: bool) {
     if after.length < before.length {
         t.fault(Kind::Contradiction, "it is shorter after a support came out")
             .at(at.place("length"), "after")

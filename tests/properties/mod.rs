@@ -6,6 +6,7 @@ mod continuity;
 mod flange;
 mod floors;
 mod footing;
+mod found;
 mod jobs;
 mod loads;
 mod outcome;

@@ -36,9 +36,8 @@ pub fn open_ends(around: &Around<'_>) -> Vec<OpenEnd> {
                     continue;
                 }
                 let others = all.iter().filter(|o| o.wall.mark != line.wall.mark);
-                let nearest = others
-                    .map(|o| (o.wall.mark.clone(), distance(o, at)))
-                    .min_by(|a, b| a.1.total_cmp(&b.1));
+                let nearest =
+                    others.map(|o| (o.wall.mark.clone(), distance(o, at))).min_by(|a, b| a.1.total_cmp(&b.1));
                 out.push(OpenEnd { mark: line.wall.mark.clone(), storey: storey.mark.clone(), at, nearest });
             }
         }

@@ -2,8 +2,8 @@
 
 use super::{Found, FoundPanel, FoundReturn, FoundSpan};
 use crate::building::{
-    Acts, BaseJoint, Building, Cause, Edge, Flange, FloorKind, FromAbove, Head, Panel, PanelRoute, Path, Proof,
-    Restraint, Return, Sharing, Span, Storey,
+    Acts, BaseJoint, Building, Cause, Edge, Flange, FloorKind, FromAbove, Head, Panel, PanelRoute, Path,
+    Proof, Restraint, Return, Sharing, Span, Storey,
 };
 use crate::quantity::functions::max;
 use crate::quantity::{LineLoad, Num};
@@ -91,10 +91,7 @@ pub fn span(of: &FoundSpan, storey: &Storey) -> Span {
     let simple = |reason: String| Edge { kind: masonry::Edge::Simple, reason };
     let side = |held: &Option<String>| match held {
         Some(mark) => simple(format!("Taken from the plan: {mark} holds it against moving.")),
-        None => Edge {
-            kind: masonry::Edge::Free,
-            reason: "Nothing on the plan holds this end.".to_owned(),
-        },
+        None => Edge { kind: masonry::Edge::Free, reason: "Nothing on the plan holds this end.".to_owned() },
     };
     let over = if storey.floor_above == FloorKind::Roof { "roof" } else { "floor" };
     Span {

@@ -35,13 +35,9 @@ fn one(floor: &Floor<'_>, piece: &Line<'_>) -> Option<FoundReturn> {
     let high = supports.iter().find(|x| x.at > s);
     let (low_edge, high_edge) = free_length(&row.openings, (row.from, row.to), s);
     let edges = [s - half - low_edge, high_edge - s - half];
-    let clear = |x: Option<&Support>| {
-        x.map(|x| Length::new(((x.at - s).abs() - half - x.half).max(0.0)))
-    };
-    let spans = [
-        low.map_or(s - row.from, |x| (s - x.at) / 2.0),
-        high.map_or(row.to - s, |x| (x.at - s) / 2.0),
-    ];
+    let clear = |x: Option<&Support>| x.map(|x| Length::new(((x.at - s).abs() - half - x.half).max(0.0)));
+    let spans =
+        [low.map_or(s - row.from, |x| (s - x.at) / 2.0), high.map_or(row.to - s, |x| (x.at - s) / 2.0)];
     let opening = row
         .openings
         .iter()

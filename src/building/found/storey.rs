@@ -116,8 +116,7 @@ impl<'a> Floor<'a> {
                 && line.at <= l.to + REACH
                 && solid(l, line.at) >= least
         };
-        let support =
-            |l: &Line<'_>| Support { at: l.at, half: l.thickness / 2.0, mark: l.wall.mark.clone() };
+        let support = |l: &Line<'_>| Support { at: l.at, half: l.thickness / 2.0, mark: l.wall.mark.clone() };
         let mut all: Vec<Support> = self.lines.iter().filter(holds).map(support).collect();
         all.sort_by(|a, b| a.at.total_cmp(&b.at));
         all.dedup_by(|b, a| (b.at - a.at).abs() <= REACH);
@@ -153,7 +152,8 @@ impl<'a> Floor<'a> {
 
     /// The middle of all walls in the direction `along`.
     fn middle(&self, along: Along) -> f64 {
-        let ends = self.lines.iter().flat_map(|l| if l.along == along { [l.from, l.to] } else { [l.at, l.at] });
+        let ends =
+            self.lines.iter().flat_map(|l| if l.along == along { [l.from, l.to] } else { [l.at, l.at] });
         let (low, high) = ends.fold((f64::INFINITY, f64::NEG_INFINITY), |(a, z), e| (a.min(e), z.max(e)));
         (low + high) / 2.0
     }
@@ -215,10 +215,7 @@ fn line<'a>(around: &Around<'_>, wall: &'a PlanWall, storey: &str) -> Option<Lin
         })
         .collect();
     openings.sort_by(|a, b| a.0.total_cmp(&b.0));
-    let thickness = around
-        .build_ups
-        .iter()
-        .find(|b| b.name == wall.build_up)
-        .map_or(100.0, |b| b.thickness().base());
+    let thickness =
+        around.build_ups.iter().find(|b| b.name == wall.build_up).map_or(100.0, |b| b.thickness().base());
     Some(Line { wall, along, at, from: start.min(end), to: start.max(end), openings, thickness })
 }

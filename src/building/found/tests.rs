@@ -46,12 +46,8 @@ fn storey(mark: &str, total: f64, floor_above: FloorKind) -> Storey {
 }
 
 fn house(turn: Turn) -> House {
-    let leaf = Leaf {
-        material: "any".to_owned(),
-        thickness: Length::new(100.0),
-        chase: Length::ZERO,
-        loaded: true,
-    };
+    let leaf =
+        Leaf { material: "any".to_owned(), thickness: Length::new(100.0), chase: Length::ZERO, loaded: true };
     let floor = PlanFloor {
         mark: "F1".to_owned(),
         load: "any".to_owned(),
@@ -140,7 +136,10 @@ fn mirrored_and_turned_houses_have_the_same_lengths() {
         let there = house(turn).find();
         assert_eq!(here.returns.len(), there.returns.len());
         for (a, z) in here.returns.iter().zip(&there.returns) {
-            assert_eq!((&a.mark, a.length, a.tributary, a.supported), (&z.mark, z.length, z.tributary, z.supported));
+            assert_eq!(
+                (&a.mark, a.length, a.tributary, a.supported),
+                (&z.mark, z.length, z.tributary, z.supported)
+            );
             let sorted = |r: &FoundReturn| {
                 let mut ends = r.to_end.map(|l| l.base());
                 ends.sort_by(f64::total_cmp);
