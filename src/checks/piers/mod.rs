@@ -1,0 +1,176 @@
+//! Vertical resistance of every length of wall between openings, before the removal and after it.
+//!
+//! * [`mod@outer`]: which walls the wind presses across
+//! * [`model`]: from the take-down to what the check needs
+//! * [`work`]: head and foot, 6.1.2; [`middle`]: mid-height, Annex G or flexure with precompression
+//! * [`matrix`]: every section under every combination
+
+pub mod matrix;
+pub mod middle;
+pub mod model;
+pub mod outer;
+mod sheet;
+#[cfg(test)]
+mod tests;
+pub mod work;
+
+pub use sheet::sections;
+
+use super::Job;
+use crate::building::{Building, State, TakeDown, take_down};
+use crate::quantity::{Force, Stress};
+use crate::solve::descent::{From, Triple};
+use crate::standards::en1990::Combination;
+use crate::trace::Outside;
+use model::PierModel;
+
+/// By how much a load has to grow for its pier to be judged: less is the dust of the sums.
+const GROWTH: f64 = 1.001;
+
+/// What one pier is used in one state.
+#[derive(Clone, Debug)]
+pub struct InState {
+    /// Design load at the foot, pressing with imposed load leading.
+    pub N_Ed: Force,
+    /// Largest use, and what governs.
+    pub used: (f64, String),
+    /// What was worked, the pier first, with the limit that was left where one was.
+    pub worked: Vec<(PierModel, Option<Outside>)>,
+    /// Which of them is used most.
+    pub worst: usize,
+}
+
+/// A length of wall with what it is used, before the removal and after it.
+#[derive(Clone, Debug)]
+pub struct Used {
+    /// Mark of the plan wall.
+    pub wall: String,
+    /// Place of the storey.
+    pub storey: usize,
+    /// Where it begins along the wall, mm.
+    pub from: f64,
+    /// Where it ends.
+    pub to: f64,
+    /// Wind presses across it.
+    pub windy: bool,
+    /// Ends of beams on it after the removal, by the mark of the beam.
+    pub beams: Vec<String>,
+    /// Before the removal.
+    pub before: InState,
+    /// After it.
+    pub after: InState,
+}
+
+impl Used {
+    /// Whether its load grows by the removal.
+    pub fn grows(&self) -> bool {
+        self.after.N_Ed > self.before.N_Ed * GROWTH
+    }
+
+    /// Whether it is judged: its load grows, or a beam ends on it.
+    pub fn counts(&self) -> bool {
+        self.grows() || !self.beams.is_empty()
+    }
+}
+
+/// Every pier of every wall that stays, lowest storey first; none where the plan has no floors or the wind is
+/// not known.
+pub fn of(job: &Job<'_>) -> Vec<Used> {
+    let b = job.building;
+    let (Some(Ok(down)), Ok(wind)) = (take_down(b), &job.wind) else { return Vec::new() };
+    let mut out = Vec::new();
+    for k in 0..b.storeys.len() {
+        for (i, stack) in down.on_leaf.walls.iter().enumerate().filter(|(_, s)| s.storey == k) {
+            if has_a_sheet(b, stack.wall, k) {
+                continue;
+            }
+            let before = down.on_leaf_before.walls.iter().position(|s| s == stack);
+            let Some(before) = before else { continue };
+            for n in 0..down.on_leaf.down.walls[i].piers.len() {
+                out.push(used(job, &down, (before, i), n, wind.panel));
+            }
+        }
+    }
+    out
+}
+
+/// Whether a plan wall is a return of that storey, which has a sheet of its own.
+fn has_a_sheet(b: &Building, wall: usize, storey: usize) -> bool {
+    b.returns.iter().any(|r| r.mark == b.plan[wall].mark && r.storey == b.storeys[storey].mark)
+}
+
+fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_panel: Stress) -> Used {
+    let b = job.building;
+    let (stack, on) = (&down.on_leaf.walls[j], &down.on_leaf.down.walls[j]);
+    let pier = on.piers[n];
+    let ends = on.head.points.iter().filter(|p| pier.from <= p.at && p.at <= pier.to);
+    let beams = ends.filter_map(|p| match p.by {
+        From::Beam(beam, _) => Some(b.beams[beam].mark.clone()),
+        _ => None,
+    });
+    let after = state(job, &down.on_leaf, j, n, q_panel);
+    Used {
+        wall: b.plan[stack.wall].mark.clone(),
+        storey: stack.storey,
+        from: pier.from,
+        to: pier.to,
+        windy: after.worked.first().is_some_and(|(p, _)| p.wind.is_some()),
+        beams: beams.collect(),
+        before: state(job, &down.on_leaf_before, i, n, q_panel),
+        after,
+    }
+}
+
+/// Design load of three.
+fn design(job: &Job<'_>, t: Triple) -> Force {
+    let f = Combination::PressingImposed.factors(&job.annex, job.building.basis.helping_factor.value);
+    Force::new(f.gamma_G * t[0] + f.gamma_Q * t[1])
+}
+
+/// One pier in one state; what is outside the method is used without end.
+fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, q_panel: Stress) -> InState {
+    let N_Ed = design(job, leaf.down.walls[i].piers[n].foot);
+    let mut out = InState { N_Ed, used: (0.0, String::new()), worked: Vec::new(), worst: 0 };
+    let models = match model::of(job, leaf, i, n, q_panel) {
+        Ok(models) => models,
+        Err(outside) => {
+            out.used = (f64::INFINITY, format!("outside: {}", outside.words));
+            return out;
+        }
+    };
+    for p in models {
+        let (used, outside) = match matrix::run(&p, &job.annex) {
+            Ok(worst) => (worst.largest(), None),
+            Err(o) => ((f64::INFINITY, format!("outside: {}", o.words)), Some(o)),
+        };
+        if out.worked.is_empty() || used.0 > out.used.0 {
+            out.worst = out.worked.len();
+            out.used = match &p.under {
+                Some(under) => (used.0, format!("under {}, {}", under.beam, used.1)),
+                None => used,
+            };
+        }
+        out.worked.push((p, outside));
+    }
+    out
+}
+
+/// A hold point for lengths that are used above 1 although the removal adds nothing to them.
+pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
+    let over: Vec<&Used> = job.piers.iter().filter(|u| !u.counts() && u.after.used.0 > 1.0).collect();
+    if over.is_empty() {
+        return Vec::new();
+    }
+    let names: Vec<String> = over.iter().map(|u| place(job.building, u)).collect();
+    let text = format!(
+        "Before the wall comes down, judge these lengths of wall as they stand, for by calculation they are used above \
+         1 although the removal adds nothing to their load: {}.",
+        names.join("; ")
+    );
+    vec![(String::new(), text)]
+}
+
+/// Where a pier is, in words.
+pub fn place(b: &Building, u: &Used) -> String {
+    format!("{}, {}, from {:.2} to {:.2} m", u.wall, b.storeys[u.storey].mark, u.from / 1e3, u.to / 1e3)
+}
