@@ -5,6 +5,8 @@
 //! * [`work`]: head and foot, 6.1.2; [`middle`]: mid-height, Annex G or flexure with precompression
 //! * [`matrix`]: every section under every combination
 
+pub mod across;
+pub mod bays;
 pub mod matrix;
 pub mod middle;
 pub mod model;

@@ -1,9 +1,11 @@
 //! Lengths of wall between openings, from the take-down to what the check needs.
 
+use super::bays::{self, Bay};
 use super::outer;
 use crate::building::{FloorKind, Restraint, State, Storey};
 use crate::checks::Job;
 use crate::checks::masonry::{self, Masonry};
+use crate::checks::panels::PanelModel;
 use crate::checks::returns::build::restraint;
 use crate::checks::returns::model::{Lateral, Model, Vertical};
 use crate::quantity::{Force, Length, Moment, Num, PerArea, Q, Stress};
@@ -34,12 +36,14 @@ impl FromSide {
 }
 
 /// Wind across.
-#[derive(Clone, Copy, Debug)]
+#[derive(Clone, Debug)]
 pub struct Wind {
     /// Net characteristic pressure on panels.
     pub q_panel: Stress,
-    /// Length of wind face: the pier and half of the openings beside it.
-    pub l_w: Length,
+    /// The bay that carries it, the worst of the pier.
+    pub bay: Bay,
+    /// The leaves as a panel has them.
+    pub panel: PanelModel,
 }
 
 /// The leaf that carries no floors.
@@ -212,31 +216,21 @@ fn one(
         helping: b.basis.helping_factor.value,
     };
     let place = Place { from: pier.from, to: pier.to, ..wall.place };
-    let wind = outer::in_the_wind(b, stack.storey, place, wall.thickness).then(|| Wind {
-        q_panel,
-        l_w: Length::new(l.base() + beside(wall, n) * (pier.to - pier.from) / whole_length(leaf, i, n)),
-    });
-    Ok(PierModel {
+    let mut p = PierModel {
         over: clean(low.G - at_head.G - own, low.G),
         m,
         low,
         sides,
-        wind,
+        wind: None,
         other,
         ties: build_up.ties,
         under: None,
-    })
-}
-
-fn whole_length(leaf: &State, i: usize, n: usize) -> f64 {
-    let pier = &leaf.down.walls[i].piers[n];
-    pier.to - pier.from
-}
-
-/// Half of the openings on either side of pier `n`.
-fn beside(wall: &Wall, n: usize) -> f64 {
-    let width = |k: usize| wall.openings.get(k).map_or(0.0, |o| o.to - o.from);
-    (n.checked_sub(1).map_or(0.0, width) + width(n)) / 2.0
+    };
+    if outer::in_the_wind(b, stack.storey, place, wall.thickness) {
+        let bays = bays::of(leaf, i, n, storey.clear_height);
+        p.wind = bays::worst(&p, bays, q_panel, build_up, &job.annex);
+    }
+    Ok(p)
 }
 
 /// What is left of sums and differences, without the dust of their last bits.

@@ -6,6 +6,8 @@ fn show() {
         let s = r.sections.iter().find(|s| s.id == "piers").unwrap();
         println!("{name}: {:?}\n{}", r.outcome, crate::trace::text::sheet(&s.sheet));
         println!("{:?}", s.sheet.faults);
-        for h in &r.holds { println!("{} {}", h.mark, h.text); }
+        for h in &r.holds {
+            println!("{} {}", h.mark, h.text);
+        }
     }
 }
