@@ -39,12 +39,12 @@ pub fn wind(s: &mut Sheet, p: &PierModel, annex: &Annex, ready: Ready, c: Combin
     if factor <= 0.0 {
         return None;
     }
-    let (Bay { l: l_b, l_w, edges }, h) = (w.bay, p.m.h);
+    let (Bay { l: l_bay, l_w, edges }, h) = (w.bay, p.m.h);
     given!(s, "net pressure on a panel", "wind sheet", q_panel = w.q_panel);
-    given!(s, "length of the bay", "plan", l_b);
+    given!(s, "length of the bay", "plan", l_bay);
     given!(s, "length of wind face, half of an opening beside it", "plan", l_w);
     given!(s, "factor on wind", c.clause(), gamma_W = Num::new(factor));
-    calc!(s, "EN 1990 6.4.3.2", "wind on the bay, design", W_Ed = gamma_W * q_panel * l_w / l_b);
+    calc!(s, "EN 1990 6.4.3.2", "wind on the bay, design", W_Ed = gamma_W * q_panel * l_w / l_bay);
     s.note(format!("The bay is held at floor and ceiling; its vertical edges are {}.", edge_words(edges)));
     let leaves = s.columns(&w.panel.leaf_names(), |s, k| one(s, p, w, annex, ready, W_Ed, k));
     let W_l = share(s, p, &leaves, W_Ed);
@@ -56,7 +56,7 @@ pub fn wind(s: &mut Sheet, p: &PierModel, annex: &Annex, ready: Ready, c: Combin
         (Some(ratio), Some(coefficient), Some((across, _))) => {
             given!(s, "orthogonal ratio of the loaded leaf", "above", mu = ratio);
             given!(s, "its bending moment coefficient", "above", alpha_2 = coefficient);
-            given!(s, "length of the bay", "above", l = l_b);
+            given!(s, "length of the bay", "above", l = l_bay);
             let M_Ed1 = span::plate(s, mu, alpha_2, W_Ed, l).M_Ed1;
             given!(s, "resistance per height of the loaded leaf", "above", M_Rd2 = across);
             calc!(s, "5.5.5", "resistance per length that goes with the ratio", M_r = min(M_Rd1, M_Rd2));

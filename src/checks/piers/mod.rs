@@ -29,17 +29,49 @@ use model::PierModel;
 /// By how much a load has to grow for its pier to be judged: less is the dust of the sums.
 const GROWTH: f64 = 1.001;
 
+/// What was worked of a pier: the whole of it, or what stands under the end of a beam.
+#[derive(Clone, Debug)]
+pub struct Worked {
+    /// What is checked.
+    pub model: PierModel,
+    /// Largest use and what governs it, or the limit that was left.
+    pub used: Result<(f64, String), Outside>,
+}
+
 /// What one pier is used in one state.
 #[derive(Clone, Debug)]
 pub struct InState {
     /// Design load at the foot, pressing with imposed load leading.
     pub N_Ed: Force,
-    /// Largest use, and what governs.
-    pub used: (f64, String),
-    /// What was worked, the pier first, with the limit that was left where one was.
-    pub worked: Vec<(PierModel, Option<Outside>)>,
-    /// Which of them is used most.
-    pub worst: usize,
+    /// All that was worked, or why nothing could be.
+    pub worked: Result<Vec<Worked>, Outside>,
+}
+
+impl InState {
+    /// The largest use and what governs it; outside the method it has no end.
+    pub fn used(&self) -> (f64, String) {
+        let left = |o: &Outside| (f64::INFINITY, format!("outside the method, {}", o.clause));
+        let all = match &self.worked {
+            Ok(all) => all,
+            Err(outside) => return left(outside),
+        };
+        let of = |w: &Worked| {
+            let (ratio, words) = w.used.clone().unwrap_or_else(|o| left(&o));
+            match &w.model.under {
+                Some(under) => (ratio, format!("under {}, {words}", under.beam)),
+                None => (ratio, words),
+            }
+        };
+        all.iter().map(of).fold((0.0, String::new()), |most, x| if x.0 > most.0 { x } else { most })
+    }
+
+    /// Every limit that was left.
+    pub fn outside(&self) -> Vec<&Outside> {
+        match &self.worked {
+            Ok(all) => all.iter().filter_map(|w| w.used.as_ref().err()).collect(),
+            Err(outside) => vec![outside],
+        }
+    }
 }
 
 /// A length of wall with what it is used, before the removal and after it.
@@ -116,7 +148,7 @@ fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_pane
         storey: stack.storey,
         from: pier.from,
         to: pier.to,
-        windy: after.worked.first().is_some_and(|(p, _)| p.wind.is_some()),
+        windy: after.worked.as_ref().is_ok_and(|all| all.iter().any(|w| w.model.wind.is_some())),
         beams: beams.collect(),
         before: state(job, &down.on_leaf_before, i, n, q_panel),
         after,
@@ -129,47 +161,48 @@ fn design(job: &Job<'_>, t: Triple) -> Force {
     Force::new(f.gamma_G * t[0] + f.gamma_Q * t[1])
 }
 
-/// One pier in one state; what is outside the method is used without end.
+/// One pier in one state.
 fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, q_panel: Stress) -> InState {
     let N_Ed = design(job, leaf.down.walls[i].piers[n].foot);
-    let mut out = InState { N_Ed, used: (0.0, String::new()), worked: Vec::new(), worst: 0 };
-    let models = match model::of(job, leaf, i, n, q_panel) {
-        Ok(models) => models,
-        Err(outside) => {
-            out.used = (f64::INFINITY, format!("outside: {}", outside.words));
-            return out;
-        }
-    };
-    for p in models {
-        let (used, outside) = match matrix::run(&p, &job.annex) {
-            Ok(worst) => (worst.largest(), None),
-            Err(o) => ((f64::INFINITY, format!("outside: {}", o.words)), Some(o)),
+    let worked = model::of(job, leaf, i, n, q_panel).map(|models| {
+        let work = |model: PierModel| {
+            let used = matrix::run(&model, &job.annex).map(|worst| worst.largest());
+            Worked { model, used }
         };
-        if out.worked.is_empty() || used.0 > out.used.0 {
-            out.worst = out.worked.len();
-            out.used = match &p.under {
-                Some(under) => (used.0, format!("under {}, {}", under.beam, used.1)),
-                None => used,
-            };
-        }
-        out.worked.push((p, outside));
-    }
-    out
+        models.into_iter().map(work).collect()
+    });
+    InState { N_Ed, worked }
 }
 
-/// A hold point for lengths that are used above 1 although the removal adds nothing to them.
+/// Hold points: the bearings of beams that end on these lengths, and lengths that are used above 1 although the
+/// removal adds nothing to them.
 pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
-    let over: Vec<&Used> = job.piers.iter().filter(|u| !u.counts() && u.after.used.0 > 1.0).collect();
-    if over.is_empty() {
-        return Vec::new();
+    let mut out = Vec::new();
+    let ends: Vec<String> = job
+        .piers
+        .iter()
+        .filter(|u| !u.beams.is_empty())
+        .map(|u| format!("{} on {}", u.beams.join(", "), place(job.building, u)))
+        .collect();
+    if !ends.is_empty() {
+        let text = format!(
+            "Before the wall comes down, size the bearings and padstones of the ends of {} by 6.1.3: this pack works \
+             bearings on returns alone.",
+            ends.join("; ")
+        );
+        out.push((String::new(), text));
     }
-    let names: Vec<String> = over.iter().map(|u| place(job.building, u)).collect();
-    let text = format!(
-        "Before the wall comes down, judge these lengths of wall as they stand, for by calculation they are used above \
-         1 although the removal adds nothing to their load: {}.",
-        names.join("; ")
-    );
-    vec![(String::new(), text)]
+    let over = job.piers.iter().filter(|u| !u.counts() && u.after.used().0 > 1.0);
+    let over: Vec<String> = over.map(|u| place(job.building, u)).collect();
+    if !over.is_empty() {
+        let text = format!(
+            "Before the wall comes down, judge these lengths of wall as they stand, for by calculation they are used \
+             above 1 although the removal adds nothing to their load: {}.",
+            over.join("; ")
+        );
+        out.push((String::new(), text));
+    }
+    out
 }
 
 /// Where a pier is, in words.

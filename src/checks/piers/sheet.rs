@@ -1,19 +1,20 @@
 //! The sheet: every pier in a table, and the one of highest use among those that count worked in full.
 
 use super::model::PierModel;
-use super::{InState, Used, matrix, place, work};
+use super::{Used, matrix, place, work};
 use crate::checks::returns::model::At;
 use crate::checks::{Job, Section};
 use crate::given;
 use crate::quantity::print;
 use crate::standards::en1996::concentrated;
-use crate::trace::{Column, Sheet, Table};
+use crate::trace::{Column, Outside, Sheet, Table};
 
 /// The sheet of the lengths of wall between openings, where the plan has floors.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
     if job.piers.is_empty() {
         return Vec::new();
     }
+    let b = job.building;
     let mut s = Sheet::recorder();
     words(&mut s, job);
     s.heading(1, "Every length of wall");
@@ -25,11 +26,20 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
              are information, and there is no verdict.",
         );
     }
-    // Of equals the first.
-    let worst = judged.into_iter().reduce(|a, b| if b.after.used.0 > a.after.used.0 { b } else { a });
-    if let Some(u) = worst {
-        s.heading(1, format!("The one of highest use that is judged: {}", place(job.building, u)));
-        record(&mut s, job, &u.after);
+    for u in &judged {
+        for outside in u.after.outside() {
+            let words = format!("{}: {}", place(b, u), outside.words);
+            s.leave(Outside::new(&outside.id, &outside.clause, words));
+        }
+    }
+    // A limit that one leaves hides no failure of another. Of equals the first.
+    let inside = judged.iter().flat_map(|u| u.after.worked.iter().flatten().map(move |w| (*u, w)));
+    let inside = inside.filter_map(|(u, w)| Some((u, w, w.used.as_ref().ok()?.0)));
+    if let Some((u, w, _)) = inside.reduce(|a, b| if b.2 > a.2 { b } else { a }) {
+        s.heading(1, format!("The one of highest use that is judged: {}", place(b, u)));
+        if let Err(outside) = record(&mut s, job, &w.model) {
+            s.leave(outside);
+        }
     }
     vec![Section::plain("piers", "Lengths of wall between openings", s)]
 }
@@ -51,11 +61,13 @@ fn words(s: &mut Sheet, job: &Job<'_>) {
     );
     s.note(
         "Wind presses across lengths that have on one side neither floor nor roof over it, nor a neighbour: the net \
-         pressure on panels, on the length and half of the openings beside it, between floor and ceiling. Two leaves \
+         pressure on panels, and half of that on an opening beside it. It is carried in bays: floor and ceiling hold them, and walls \
+         that meet the length and are a fifth of its height long there (5.5.1.2(5)), tied or bonded; openings leave them free. \
+         Both ways where Annex E and its limits of size allow it, else between floor and ceiling. Two leaves \
          with ties enough share it by strength as panels do (6.3.1(6)), the other leaf up to what it resists; without, \
          the loaded leaf takes all. Either of two routes is enough: the wind as an eccentricity in Annex G; or \
          flexure with precompression (6.3.1(4)), with Annex G for the vertical load alone and the pressed edge within \
-         f_d beside it. The outer leaf and the ties are on the sheets of panels.",
+         the design strength beside it. The outer leaf and the ties are on the sheets of panels.",
     );
     let returns: Vec<&str> = b
         .returns
@@ -86,7 +98,8 @@ fn table(job: &Job<'_>) -> Table {
             ([], false) => "information".to_owned(),
             (beams, _) => format!("judged: end of {}", beams.join(", ")),
         };
-        if u.counts() || u.after.used.0 > 1.0 {
+        let (before, after) = (u.before.used(), u.after.used());
+        if u.counts() || after.0 > 1.0 {
             strong.push(i);
         }
         rows.push(vec![
@@ -97,9 +110,9 @@ fn table(job: &Job<'_>) -> Table {
             if u.windy { "yes" } else { "no" }.to_owned(),
             kn(u.before.N_Ed),
             kn(u.after.N_Ed),
-            print::ratio(u.before.used.0),
-            print::ratio(u.after.used.0),
-            u.after.used.1.clone(),
+            print::ratio(before.0),
+            print::ratio(after.0),
+            after.1,
             judged,
         ]);
     }
@@ -125,24 +138,14 @@ fn table(job: &Job<'_>) -> Table {
     }
 }
 
-/// The worst of what was worked of a pier, with all its verdicts.
-fn record(s: &mut Sheet, job: &Job<'_>, state: &InState) {
-    let Some((p, _)) = state.worked.get(state.worst) else {
-        s.leave(crate::trace::Outside::new("pier", "3.6", &state.used.1));
-        return;
-    };
+/// A pier with all its verdicts.
+pub(super) fn record(s: &mut Sheet, job: &Job<'_>, p: &PierModel) -> Result<(), Outside> {
     let annex = &job.annex;
     if let Some(under) = &p.under {
         stretch(s, p, under);
     }
-    let ready = match work::prepare(s, p, annex) {
-        Ok(ready) => ready,
-        Err(outside) => {
-            s.leave(outside);
-            return;
-        }
-    };
-    let Ok(worst) = matrix::run(p, annex) else { return };
+    let ready = work::prepare(s, p, annex)?;
+    let worst = matrix::run(p, annex)?;
     let (middle, ends): (Vec<_>, Vec<_>) = worst.sections.into_iter().partition(|x| x.0 == At::Middle);
     if !ends.is_empty() {
         s.heading(2, "Head and foot");
@@ -160,12 +163,14 @@ fn record(s: &mut Sheet, job: &Job<'_>, state: &InState) {
         matrix::section(s, p, annex, ready, c, at);
     }
     s.case.clear();
+    Ok(())
 }
 
 /// Over which stretch the end of a beam is spread.
 fn stretch(s: &mut Sheet, p: &PierModel, under: &super::model::Under) {
     s.note(format!(
-        "Governed at mid-height under the end of {}: the loads below are those of the stretch over which it has spread.",
+        "Governed at mid-height under the end of {}: the loads below are those of the stretch over which it has spread. The \
+         junction end is where the length begins.",
         under.beam
     ));
     given!(s, "length of the pier", "plan", l = under.l);
