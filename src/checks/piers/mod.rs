@@ -1,6 +1,7 @@
 //! Vertical resistance of every length of wall between openings, before the removal and after it.
 //!
 //! * [`mod@outer`]: which walls the wind presses across
+//! * [`bays`]: between what a length carries it sideways; [`across`]: what the loaded leaf has of it, as a panel
 //! * [`model`]: from the take-down to what the check needs
 //! * [`work`]: head and foot, 6.1.2; [`middle`]: mid-height, Annex G or flexure with precompression
 //! * [`matrix`]: every section under every combination

@@ -9,7 +9,7 @@ use crate::checks::panels::PanelModel;
 use crate::checks::returns::build::restraint;
 use crate::checks::returns::model::{Lateral, Model, Vertical};
 use crate::quantity::{Force, Length, Moment, Num, PerArea, Q, Stress};
-use crate::solve::descent::{From, OnWall, Pier, Place, Triple, Wall};
+use crate::solve::descent::{From, OnWall, Pier, Place, Triple, Wall, add, times};
 use crate::standards::en1996::concentrated;
 use crate::standards::en1996::slenderness::Stiffened;
 use crate::trace::{Outside, Sheet};
@@ -75,8 +75,8 @@ pub struct PierModel {
     pub m: Model,
     /// Wall over the openings beside it.
     pub over: Force,
-    /// First moments along at mid-height and foot.
-    pub low: Vertical,
+    /// Load at the foot, with its first moments along, which are those at mid-height too.
+    pub at_foot: Vertical,
     /// What comes to the head from the lower and the upper side across.
     pub sides: [FromSide; 2],
     /// Wind across; none on inner walls.
@@ -140,19 +140,17 @@ fn beneath(storey: &Storey, wall: &Wall, on: &OnWall, pier: &Pier, at: f64, beam
     let reach = (c_60 * h / 2.0).base();
     let mut out = Pier { from: at - r_J.base(), to: at + r_F.base(), ..Pier::default() };
     let mut put = |load: Triple, low: Option<f64>, at_head: bool| {
-        for k in 0..3 {
-            out.foot[k] += load[k];
-            if at_head {
-                out.head[k] += load[k];
-                let low = low.map_or([0.0; 2], |x| [x, 1.0 - x]);
-                out.sides[0][k] += load[k] * low[0];
-                out.sides[1][k] += load[k] * low[1];
-            }
+        out.foot = add(out.foot, load);
+        if at_head {
+            out.head = add(out.head, load);
+        }
+        if let (true, Some(low)) = (at_head, low) {
+            out.sides = [add(out.sides[0], times(load, low)), add(out.sides[1], times(load, 1.0 - low))];
         }
     };
     let (from, to) = (at - r_J.base(), at + r_F.base());
     for line in on.head.lines_within(from, to) {
-        put(line.load.map(|x| x * (line.to - line.from)), line.low, true);
+        put(times(line.load, line.to - line.from), line.low, true);
     }
     // At the foot the jambs are among the points: those of the head, and the wall over openings.
     let meets = |x: f64| pier.from <= x && x <= pier.to && x + reach > from && x - reach < to;
@@ -189,7 +187,7 @@ fn one(
     let (t, l) = (this.thickness, Length::new(pier.to - pier.from));
     let own = Force::new(wall.weight * (pier.to - pier.from));
     let at_head = vertical(pier.head, pier.moment, l);
-    let low = vertical(pier.foot, pier.foot_moment, l);
+    let at_foot = vertical(pier.foot, pier.foot_moment, l);
     let sides = pier.sides.map(FromSide::of);
     // The lever does not matter here, only whether the load lies far off the middle.
     let lever = t / 3.0;
@@ -217,9 +215,9 @@ fn one(
     };
     let place = Place { from: pier.from, to: pier.to, ..wall.place };
     let mut p = PierModel {
-        over: clean(low.G - at_head.G - own, low.G),
+        over: clean(at_foot.G - at_head.G - own, at_foot.G),
         m,
-        low,
+        at_foot,
         sides,
         wind: None,
         other,

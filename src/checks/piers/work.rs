@@ -144,7 +144,7 @@ pub fn pressed(
     given!(s, "part of the own weight that stands above", "geometry", k_G = Num::new(at.share()));
     let below = if at == At::Head { 0.0 } else { 1.0 };
     given!(s, "1 below the openings' heads", "geometry", k_H = Num::new(below));
-    let along = if at == At::Head { v } else { p.low };
+    let along = if at == At::Head { v } else { p.at_foot };
     let moments = "take-down, about mid-length";
     given!(s, "first moment of the dead load along", moments, S_G = along.S_G);
     given!(s, "first moment of the imposed load along", moments, S_Q = along.S_Q);

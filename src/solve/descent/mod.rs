@@ -16,7 +16,7 @@ mod spread;
 mod tests;
 
 pub use down::lead_down;
-pub use load::{Line, Loads, Point, Triple};
+pub use load::{Line, Loads, Point, Triple, add, times};
 
 /// Direction of a length.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
