@@ -88,7 +88,7 @@ pub struct Used {
     pub to: f64,
     /// Wind presses across it.
     pub windy: bool,
-    /// Ends of beams on it after the removal, by the mark of the beam.
+    /// Ends of beams on it, or over an opening beside it, after the removal, by the mark of the beam.
     pub beams: Vec<String>,
     /// Before the removal.
     pub before: InState,
@@ -138,9 +138,16 @@ fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_pane
     let b = job.building;
     let (stack, on) = (&down.on_leaf.walls[j], &down.on_leaf.down.walls[j]);
     let pier = on.piers[n];
-    let ends = on.head.points.iter().filter(|p| pier.from <= p.at && p.at <= pier.to);
+    // A beam that ends over an opening stands on its sides.
+    let openings = &down.on_leaf.model.walls[j].openings;
+    let from = n.checked_sub(1).and_then(|k| openings.get(k)).map_or(pier.from, |o| o.from);
+    let to = openings.get(n).map_or(pier.to, |o| o.to);
+    let ends = on.head.points.iter().filter(|p| from <= p.at && p.at <= to);
     let beams = ends.filter_map(|p| match p.by {
-        From::Beam(beam, _) => Some(b.beams[beam].mark.clone()),
+        From::Beam(beam, _) if pier.from <= p.at && p.at <= pier.to => Some(b.beams[beam].mark.clone()),
+        From::Beam(beam, _) if from < p.at && p.at < to => {
+            Some(format!("{} over the opening beside it", b.beams[beam].mark))
+        }
         _ => None,
     });
     let after = state(job, &down.on_leaf, j, n, q_panel);
@@ -187,8 +194,8 @@ pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
         .collect();
     if !ends.is_empty() {
         let text = format!(
-            "Before the wall comes down, size the bearings and padstones of the ends of {} by 6.1.3: this pack works \
-             bearings on returns alone.",
+            "Before the wall comes down, size the bearings and padstones of the ends of {} by 6.1.3, and a lintel \
+             that one stands on: this pack works bearings on returns alone.",
             ends.join("; ")
         );
         out.push((String::new(), text));

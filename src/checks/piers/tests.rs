@@ -260,3 +260,56 @@ fn uplift_is_taken_off() {
     assert!(lifted(2.0) > 1.0, "more lifts than stands there");
     assert!(p.m.at_head.G > Force::ZERO && p.wind.as_ref().is_some_and(|w| w.q_panel > Stress::ZERO));
 }
+
+/// A beam that ends over a window stands on both its sides, and both are judged.
+#[test]
+fn a_beam_over_an_opening_is_for_its_sides() {
+    let text =
+        HOUSES[0].replacen("from = \"3.4 m\", width = \"1.2 m\"", "from = \"2.0 m\", width = \"1.2 m\"", 1);
+    let all = piers(&read(&text));
+    for from in [0.0, 3200.0] {
+        let u = find(&all, "rear wall", 0, from);
+        assert!(
+            u.counts() && u.grows() && u.beams == ["B1 over the opening beside it"],
+            "{from}: {:?}",
+            u.beams
+        );
+    }
+}
+
+/// The house seen in a mirror is used alike, length by length.
+#[test]
+fn a_mirrored_house_is_used_alike() {
+    for text in HOUSES {
+        let b = read(text);
+        let flip = |(x, y): (Length, Length)| (Length::new(9000.0) - x, y);
+        let mut m = b.clone();
+        for w in &mut m.plan {
+            (w.from, w.to) = (flip(w.from), flip(w.to));
+        }
+        for f in &mut m.floors {
+            (f.from, f.to) = (flip(f.from), flip(f.to));
+        }
+        for beam in &mut m.beams {
+            (beam.from, beam.to) = (flip(beam.from), flip(beam.to));
+        }
+        for side in &mut m.neighbours {
+            *side = match *side {
+                Side::Left => Side::Right,
+                Side::Right => Side::Left,
+                other => other,
+            };
+        }
+        let sorted = |b: &Building| {
+            let mut out: Vec<(String, usize, f64, f64)> = piers(b)
+                .iter()
+                .map(|u| (u.wall.clone(), u.storey, u.to - u.from, u.after.used().0))
+                .collect();
+            out.sort_by(|a, b| a.partial_cmp(b).expect("numbers"));
+            out
+        };
+        for (a, z) in sorted(&b).iter().zip(sorted(&m)) {
+            assert!((a.2 - z.2).abs() < 1e-6 && (a.3 - z.3).abs() < 1e-9 * a.3, "{a:?} {z:?}");
+        }
+    }
+}
