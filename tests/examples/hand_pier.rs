@@ -87,7 +87,7 @@ fn the_back_wall_between_window_and_door() {
     let job = Job::new(&b);
     let pier = job.piers.iter().find(|u| u.wall == "back wall" && u.from == 3200.0).expect("it is there");
     let (ratio, words) = pier.after.used();
-    assert_eq!(words, "flexure, helping");
+    assert_eq!(words, "flexure, H");
     close(ratio, used);
     assert!(!pier.counts(), "the removal adds nothing to it");
     let hold = job.holds.iter().any(|h| h.text.contains("back wall, ground, from 3.20 to 6.00 m"));

@@ -24,13 +24,13 @@ impl Worst {
     }
 }
 
-/// A combination in a few letters, as in the tables.
+/// A combination in a letter, as in the tables of returns.
 pub const fn short(c: Combination) -> &'static str {
     match c {
-        Combination::Helping => "helping",
-        Combination::PressingWind => "wind leads",
-        Combination::PressingImposed => "imposed leads",
-        Combination::Gravity => "gravity",
+        Combination::Helping => "H",
+        Combination::PressingWind => "W",
+        Combination::PressingImposed => "Q",
+        Combination::Gravity => "G",
     }
 }
 

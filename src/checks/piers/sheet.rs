@@ -118,7 +118,8 @@ fn table(job: &Job<'_>) -> Table {
     }
     Table {
         caption: "Design load at the foot of each length, pressing with imposed load leading, and its largest use, before \
-                  the removal (b) and after it (a); heavy: judged, or used above 1"
+                  the removal (b) and after it (a); heavy: judged, or used above 1. H helping; W pressing, wind leads; Q pressing, \
+                  imposed leads; G gravity alone"
             .to_owned(),
         columns: vec![
             Column::words("wall"),

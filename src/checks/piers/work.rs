@@ -144,21 +144,15 @@ pub fn pressed(
     given!(s, "part of the own weight that stands above", "geometry", k_G = Num::new(at.share()));
     let below = if at == At::Head { 0.0 } else { 1.0 };
     given!(s, "1 below the openings' heads", "geometry", k_H = Num::new(below));
-    let along = if at == At::Head { v } else { p.at_foot };
-    let moments = "take-down, about mid-length";
-    given!(s, "first moment of the dead load along", moments, S_G = along.S_G);
-    given!(s, "first moment of the imposed load along", moments, S_Q = along.S_Q);
-    let (N_Ed, M_N) = if lifted(p) {
+    let N_Ed = if lifted(p) {
         given!(s, "roof uplift at the head", LED, U_h = v.U);
-        given!(s, "first moment of the uplift along", moments, S_U = along.S_U);
         calc!(
             s,
             "EN 1990 6.4.3.2",
             "vertical force",
             N_Ed = gamma_G * (G_h + k_H * G_o + k_G * G_w) + gamma_Q * Q_h - gamma_U * U_h
         );
-        calc!(s, "statics", "moment along", M_N = gamma_G * S_G + gamma_Q * S_Q - gamma_U * S_U);
-        (N_Ed, M_N)
+        N_Ed
     } else {
         calc!(
             s,
@@ -166,13 +160,40 @@ pub fn pressed(
             "vertical force",
             N_Ed = gamma_G * (G_h + k_H * G_o + k_G * G_w) + gamma_Q * Q_h
         );
-        calc!(s, "statics", "moment along", M_N = gamma_G * S_G + gamma_Q * S_Q);
-        (N_Ed, M_N)
+        N_Ed
     };
     if N_Ed <= Force::ZERO {
         s.note("Nothing presses the section: the roof lifts more than stands there.");
         return Pressed { N_Ed, l_c: Length::ZERO };
     }
+    if p.under.is_some() {
+        calc!(s, "6.1.3(5)", "the stretch, evenly pressed as the clause takes it", l_c = 1.0 * l);
+        return Pressed { N_Ed, l_c };
+    }
+    Pressed { N_Ed, l_c: block(s, p, (gamma_G, gamma_Q, gamma_U), at, N_Ed) }
+}
+
+/// Length of the block centred on N along the wall. `l`, `N_Ed` and the factors stand on the sheet.
+fn block(
+    s: &mut Sheet,
+    p: &PierModel,
+    (gamma_G, gamma_Q, gamma_U): (Num, Num, Num),
+    at: At,
+    N_Ed: Force,
+) -> Length {
+    let l = p.m.l;
+    let along = if at == At::Head { p.m.at_head } else { p.at_foot };
+    let moments = "take-down, about mid-length";
+    given!(s, "first moment of the dead load along", moments, S_G = along.S_G);
+    given!(s, "first moment of the imposed load along", moments, S_Q = along.S_Q);
+    let M_N = if lifted(p) {
+        given!(s, "first moment of the uplift along", moments, S_U = along.S_U);
+        calc!(s, "statics", "moment along", M_N = gamma_G * S_G + gamma_Q * S_Q - gamma_U * S_U);
+        M_N
+    } else {
+        calc!(s, "statics", "moment along", M_N = gamma_G * S_G + gamma_Q * S_Q);
+        M_N
+    };
     given!(s, "least length pressed", "geometry", l_0 = Length::ZERO);
     calc!(
         s,
@@ -180,7 +201,7 @@ pub fn pressed(
         "length of the block centred on N",
         l_c = max(l - 2.0 * abs(M_N) / N_Ed, l_0)
     );
-    Pressed { N_Ed, l_c }
+    l_c
 }
 
 /// Head or foot: N against Phi t l_c f_d.
