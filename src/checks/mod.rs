@@ -13,6 +13,7 @@ pub mod masonry;
 pub mod materials;
 pub mod outcome;
 pub mod panels;
+pub mod piers;
 pub mod plan;
 pub mod returns;
 pub mod stability;
@@ -70,6 +71,8 @@ pub struct Job<'a> {
     pub storey: Option<Result<Storey, Outside>>,
     /// The whole building against wind, where its plan has floors.
     pub whole: Vec<whole::Direction>,
+    /// Every length of wall between openings, where the plan has floors.
+    pub piers: Vec<piers::Used>,
     /// Hold points, given and found.
     pub holds: Vec<Hold>,
 }
@@ -84,9 +87,12 @@ impl<'a> Job<'a> {
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
         let holds = outcome::holds(building);
-        let mut job = Self { building, annex, wind, storey, whole: Vec::new(), holds };
+        let mut job = Self { building, annex, wind, storey, whole: Vec::new(), piers: Vec::new(), holds };
         job.whole = whole::of(&job);
         let found = whole::holds(&job);
+        outcome::add(&mut job.holds, found);
+        job.piers = piers::of(&job);
+        let found = piers::holds(&job);
         outcome::add(&mut job.holds, found);
         let found = panel_sheet::holds(&job);
         outcome::add(&mut job.holds, found);
@@ -113,6 +119,7 @@ pub const LIST: &[Check] = &[
     materials::sections,
     stability::sections,
     whole::sections,
+    piers::sections,
     return_sheet::sections,
     bearing_sheet::sections,
     panel_sheet::sections,

@@ -300,7 +300,7 @@ fn piers(b: &Building, state: &State) -> Vec<Vec<String>> {
         }
         let (wall, storey) = (&b.plan[stack.wall], &b.storeys[stack.storey]);
         for pier in &on.piers {
-            let Pier { from, to, head, moment, foot } = *pier;
+            let Pier { from, to, head, moment, foot, .. } = *pier;
             rows.push(vec![
                 wall.mark.clone(),
                 storey.mark.clone(),

@@ -232,6 +232,14 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
             "method of this pack".to_owned(),
         ));
     }
+    if !b.floors.is_empty() {
+        all.push((
+            "Lengths of wall between openings are held across at head and foot by floors and roof, and outer walls \
+             sideways by the walls that meet them on the plan."
+                .to_owned(),
+            "sheet of lengths of wall between openings".to_owned(),
+        ));
+    }
     all.push((
         "Plaster and render carry nothing; chases are taken off the thickness; wall ties carry no shear in the plane \
          of a return."

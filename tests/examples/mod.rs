@@ -9,6 +9,7 @@ pub mod hand_floor_edge;
 mod hand_footing;
 mod hand_frame;
 mod hand_panel;
+mod hand_pier;
 mod hand_return;
 mod hand_slenderness;
 mod hand_stability;

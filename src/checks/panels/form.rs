@@ -115,6 +115,8 @@ pub struct State<'a> {
     pub W_Ed: Stress,
     /// `before` or `after`.
     pub phase: &'static str,
+    /// Whether the moments of a single leaf are judged here; else only the pressure it takes is found.
+    pub judged: bool,
 }
 
 /// `w_Rd`, or `w_leaf` where there are several, from one formula.
@@ -174,7 +176,7 @@ fn plate(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOut
     let w_Rd = by_leaf!(s, m, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
     let mut out =
         LeafOutcome { label: found.label, mu: Some(mu), alpha_2: Some(alpha_2), w_Rd, ..Default::default() };
-    if m.leaves.len() == 1 {
+    if m.leaves.len() == 1 && state.judged {
         given!(s, "resistance per unit length, parallel to the bed joints", &above, M_Rd1 = strength.M_Rd1);
         let moments = span::plate(s, mu, alpha_2, W_Ed, l);
         let (M_Ed1, M_Ed2) = (moments.M_Ed1, moments.M_Ed2);
@@ -195,7 +197,7 @@ fn horizontal(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<Le
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
     let w_Rd = by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
     let mut out = LeafOutcome { label: state.form.words().to_owned(), w_Rd, ..Default::default() };
-    if m.leaves.len() == 1 {
+    if m.leaves.len() == 1 && state.judged {
         let M_Ed2 = span::horizontal(s, W_Ed, l);
         verify!(s, &id(state), "6.3.1(2) eq. 6.14", "bending across the bed joints", M_Ed2 <= M_Rd2);
         out.across = Some((M_Ed2, M_Rd2));
@@ -214,7 +216,7 @@ fn upright(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafO
         by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd1 / sq(h))
     };
     let mut out = LeafOutcome { label: form.words().to_owned(), w_Rd, ..Default::default() };
-    if m.leaves.len() == 1 {
+    if m.leaves.len() == 1 && state.judged {
         let M_Ed1 =
             if form == Form::Cantilever { span::cantilever(s, W_Ed, h) } else { span::vertical(s, W_Ed, h) };
         verify!(s, &id(state), "6.3.1(2) eq. 6.14", "bending parallel to the bed joints", M_Ed1 <= M_Rd1);

@@ -176,7 +176,7 @@ fn bend(
     if phase == "after" {
         remarks(s, span, form);
     }
-    let state = State { m, edges, form, l, W_Ed, phase };
+    let state = State { m, edges, form, l, W_Ed, phase, judged: true };
     let first = s.verdicts.len();
     let leaves = s.columns(&m.leaf_names(), |s, i| leaf(s, state, &strengths[i]));
     let leaves = leaves.into_iter().collect::<Result<Vec<LeafOutcome>, Outside>>()?;

@@ -37,9 +37,7 @@ pub fn cavity(
         return (w_Rd, ratio);
     }
     let (w_Rd, ratio, W_o, W_i) = if m.sharing == Sharing::Strength {
-        calc!(s, "6.3.1(6)", "what both take together", w_Rd = w_Rd_o + w_Rd_i);
-        calc!(s, "6.3.1(6)", "part of the outer leaf", W_o = W_Ed * (w_Rd_o / w_Rd));
-        calc!(s, "6.3.1(6)", "part of the inner leaf", W_i = W_Ed - W_o);
+        let (w_Rd, W_o, W_i) = by_strength(s, W_Ed, w_Rd_o, w_Rd_i);
         let ratio = verify!(s, &id, "6.3.1(6)", "wind on both leaves together", W_Ed <= w_Rd);
         (w_Rd, ratio, W_o, W_i)
     } else {
@@ -77,6 +75,15 @@ pub fn cavity(
     calc!(s, "6.5", "what the ties pass, either leaf first", W_t = max(W_o, W_i));
     ties(s, annex, m.ties, m.tie_strength.as_ref(), W_t);
     (w_Rd, ratio)
+}
+
+/// Both leaves in proportion to their strength: what they take together, and the part of each, outer first.
+/// 6.3.1(6). The arguments stand on the sheet; at least one leaf takes something.
+pub fn by_strength(s: &mut Sheet, W_Ed: Stress, w_Rd_o: Stress, w_Rd_i: Stress) -> (Stress, Stress, Stress) {
+    calc!(s, "6.3.1(6)", "what both take together", w_Rd = w_Rd_o + w_Rd_i);
+    calc!(s, "6.3.1(6)", "part of the outer leaf", W_o = W_Ed * (w_Rd_o / w_Rd));
+    calc!(s, "6.3.1(6)", "part of the inner leaf", W_i = W_Ed - W_o);
+    (w_Rd, W_o, W_i)
 }
 
 /// Least number of ties.

@@ -143,7 +143,7 @@ fn leaf(
         t,
         h,
         t_other: build_up.leaves.iter().enumerate().find(|(n, _)| *n != k).map(|(_, o)| o.thickness),
-        rho_2: restraint(r, &at_head, t),
+        rho_2: restraint(r.restraint, &at_head, t),
         stiffened,
         masonry,
         at_head,
@@ -206,8 +206,8 @@ fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> Option<Flange>
 }
 
 /// rho_2: 1.0 under timber floors, 0.75 under concrete unless the load is far off centre.
-fn restraint(r: &Return, v: &Vertical, t: Length) -> Option<Num> {
-    match r.restraint {
+pub fn restraint(held_by: Restraint, v: &Vertical, t: Length) -> Option<Num> {
+    match held_by {
         Restraint::None => None,
         Restraint::Timber => Some(Num::new(1.0)),
         Restraint::Concrete => {

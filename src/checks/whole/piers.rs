@@ -101,6 +101,12 @@ fn joined(a: Pier, z: Pier) -> Pier {
         out.foot[k] = a.foot[k] + z.foot[k];
         out.moment[k] =
             a.moment[k] + a.head[k] * (middle(a) - centre) + z.moment[k] + z.head[k] * (middle(z) - centre);
+        out.foot_moment[k] = a.foot_moment[k]
+            + a.foot[k] * (middle(a) - centre)
+            + z.foot_moment[k]
+            + z.foot[k] * (middle(z) - centre);
+        out.sides[0][k] = a.sides[0][k] + z.sides[0][k];
+        out.sides[1][k] = a.sides[1][k] + z.sides[1][k];
     }
     out
 }

@@ -91,7 +91,7 @@ fn stand(model: &Model, under: &Under, d: &mut Descent, w: usize) -> Result<(), 
         let loads = on(d, support);
         for line in foot.lines_within(begin, end) {
             let by = From::Wall(w);
-            let inside = Line { from: line.from.clamp(a, b), to: line.to.clamp(a, b), by, ..line };
+            let inside = Line { from: line.from.clamp(a, b), to: line.to.clamp(a, b), by, low: None, ..line };
             if inside.to > inside.from {
                 loads.lines.push(inside);
             }
@@ -99,13 +99,14 @@ fn stand(model: &Model, under: &Under, d: &mut Descent, w: usize) -> Result<(), 
                 [((a.min(line.to) - line.from).max(0.0), a), ((line.to - b.max(line.from)).max(0.0), b)]
             {
                 if length > 0.0 {
-                    loads.points.push(Point { at, load: times(line.load, length), by });
+                    loads.points.push(Point { at, load: times(line.load, length), by, low: None });
                 }
             }
         }
         let last = i + 1 == parts.len();
         for p in foot.points.iter().filter(|p| begin <= p.at && (p.at < end || last)) {
-            loads.points.push(Point { at: p.at.clamp(a, b), load: p.load, by: From::Wall(w) });
+            let by = From::Wall(w);
+            loads.points.push(Point { at: p.at.clamp(a, b), load: p.load, by, low: None });
         }
     }
     d.walls[w].foot = foot;
@@ -157,7 +158,7 @@ fn beam_down(model: &Model, d: &mut Descent, n: usize) {
     let (from, to) = (beam.place.from, beam.place.to);
     let own: Triple = [beam.weight, 0.0, 0.0];
     d.applied = add(d.applied, times(own, to - from));
-    d.beams[n].loads.lines.push(Line { from, to, load: own, by: From::Own });
+    d.beams[n].loads.lines.push(Line { from, to, load: own, by: From::Own, low: None });
     let [first, second] = bearings(model, n);
     let (total, moment) = (d.beams[n].loads.total(), d.beams[n].loads.moment(first));
     let at_second = times(moment, 1.0 / (second - first));
@@ -169,7 +170,10 @@ fn beam_down(model: &Model, d: &mut Descent, n: usize) {
         let along = if place.along == beam.place.along { at } else { beam.place.at };
         let at = along.clamp(place.from, place.to);
         let load = d.beams[n].reactions[end];
-        on(d, support).points.push(Point { at, load, by: From::Beam(n, end) });
+        // A beam across comes from the side on which it lies.
+        let across = place.along != beam.place.along;
+        let low = across.then(|| if f64::midpoint(from, to) < place.at { 1.0 } else { 0.0 });
+        on(d, support).points.push(Point { at, load, by: From::Beam(n, end), low });
     }
 }
 
@@ -219,15 +223,25 @@ fn through(model: &Model, d: &mut Descent, w: usize) -> Result<(), Trouble> {
         if a <= begin {
             return Err(Trouble::NoJamb { wall: w, opening: n.min(wall.openings.len().saturating_sub(1)) });
         }
-        piers.push(Pier { from: begin, to: a, head: [0.0; 3], moment: [0.0; 3], foot: [0.0; 3] });
+        piers.push(Pier { from: begin, to: a, ..Pier::default() });
         begin = b;
     }
-    let own = |weight: f64, from: f64, to: f64| Line { from, to, load: [weight, 0.0, 0.0], by: From::Own };
+    let own = |weight: f64, from: f64, to: f64| {
+        let load = [weight, 0.0, 0.0];
+        Line { from, to, load, by: From::Own, low: None }
+    };
     for pier in &mut piers {
         let mut here = Loads { lines: head.lines_within(pier.from, pier.to).collect(), points: Vec::new() };
         here.points.extend(head.points.iter().filter(|p| pier.from <= p.at && p.at <= pier.to));
         let middle = (pier.from + pier.to) / 2.0;
         (pier.head, pier.moment) = (here.total(), here.moment(middle));
+        pier.foot_moment = pier.moment;
+        for line in &here.lines {
+            from_sides(pier, times(line.load, line.to - line.from), line.low);
+        }
+        for point in &here.points {
+            from_sides(pier, point.load, point.low);
+        }
         foot.lines.extend(here.lines);
         foot.points.extend(here.points);
         let weight = own(wall.weight, pier.from, pier.to);
@@ -238,18 +252,18 @@ fn through(model: &Model, d: &mut Descent, w: usize) -> Result<(), Trouble> {
     for (n, o) in wall.openings.iter().enumerate() {
         let lever = |s: f64| (s - o.from) / (o.to - o.from);
         let mut sides: Vec<[Point; 2]> = Vec::new();
-        let mut share = |load: Triple, s: f64, by: From| {
+        let mut share = |load: Triple, s: f64, by: From, low: Option<f64>| {
             let k = lever(s);
             sides.push([
-                Point { at: o.from, load: times(load, 1.0 - k), by },
-                Point { at: o.to, load: times(load, k), by },
+                Point { at: o.from, load: times(load, 1.0 - k), by, low },
+                Point { at: o.to, load: times(load, k), by, low },
             ]);
         };
         for line in head.lines_within(o.from, o.to) {
-            share(times(line.load, line.to - line.from), (line.from + line.to) / 2.0, line.by);
+            share(times(line.load, line.to - line.from), (line.from + line.to) / 2.0, line.by, line.low);
         }
         for p in head.points.iter().filter(|p| o.from < p.at && p.at < o.to) {
-            share(p.load, p.at, p.by);
+            share(p.load, p.at, p.by, p.low);
         }
         for [left, right] in sides {
             at_jamb(&mut piers[n], left, true);
@@ -259,7 +273,7 @@ fn through(model: &Model, d: &mut Descent, w: usize) -> Result<(), Trouble> {
         // The wall over the opening weighs on its sides at the foot, not at the head.
         let over: Triple = [o.over * (o.to - o.from), 0.0, 0.0];
         for (pier, at) in [(n, o.from), (n + 1, o.to)] {
-            let point = Point { at, load: times(over, 0.5), by: From::Own };
+            let point = Point { at, load: times(over, 0.5), by: From::Own, low: None };
             at_jamb(&mut piers[pier], point, false);
             foot.points.push(point);
         }
@@ -275,9 +289,20 @@ fn through(model: &Model, d: &mut Descent, w: usize) -> Result<(), Trouble> {
 
 /// Adds what an opening brings to the pier beside it.
 fn at_jamb(pier: &mut Pier, point: Point, at_head: bool) {
+    let moment = times(point.load, point.at - (pier.from + pier.to) / 2.0);
     if at_head {
         pier.head = add(pier.head, point.load);
-        pier.moment = add(pier.moment, times(point.load, point.at - (pier.from + pier.to) / 2.0));
+        pier.moment = add(pier.moment, moment);
+        from_sides(pier, point.load, point.low);
     }
     pier.foot = add(pier.foot, point.load);
+    pier.foot_moment = add(pier.foot_moment, moment);
+}
+
+/// Notes from which sides across a load comes.
+fn from_sides(pier: &mut Pier, load: Triple, low: Option<f64>) {
+    if let Some(low) = low {
+        pier.sides[0] = add(pier.sides[0], times(load, low));
+        pier.sides[1] = add(pier.sides[1], times(load, 1.0 - low));
+    }
 }

@@ -26,6 +26,8 @@ pub struct Line {
     pub load: Triple,
     /// What brings it.
     pub by: From,
+    /// The part of it that comes from the lower side across; none where it stands in the middle.
+    pub low: Option<f64>,
 }
 
 /// A load at a point.
@@ -37,6 +39,8 @@ pub struct Point {
     pub load: Triple,
     /// What brings it.
     pub by: From,
+    /// The part of it that comes from the lower side across; none where it stands in the middle.
+    pub low: Option<f64>,
 }
 
 /// Loads along a line.

@@ -16,7 +16,7 @@ mod spread;
 mod tests;
 
 pub use down::lead_down;
-pub use load::{Line, Loads, Point, Triple};
+pub use load::{Line, Loads, Point, Triple, add, times};
 
 /// Direction of a length.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -144,7 +144,7 @@ pub enum From {
 }
 
 /// The part of a wall between two openings, or an opening and an end.
-#[derive(Clone, Copy, Debug, PartialEq)]
+#[derive(Clone, Copy, Debug, Default, PartialEq)]
 pub struct Pier {
     /// Where it begins.
     pub from: f64,
@@ -156,6 +156,10 @@ pub struct Pier {
     pub moment: Triple,
     /// Load at its foot: its own weight and that over the openings beside it added.
     pub foot: Triple,
+    /// First moment of the load at the foot about the middle of the pier.
+    pub foot_moment: Triple,
+    /// Of the load at its head what floors and beams bring from the lower and from the upper side across.
+    pub sides: [Triple; 2],
 }
 
 /// What a wall carries.

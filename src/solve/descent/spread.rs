@@ -82,11 +82,20 @@ pub fn floor(model: &Model, under: &Under, n: usize) -> Result<Vec<(Support, Lin
             let left = if i == 0 { at - span.0 } else { (at - here[i - 1].0) / 2.0 };
             let right = here.get(i + 1).map_or(span.1 - at, |next| (next.0 - at) / 2.0);
             let load = times(floor.load, left + right);
+            // Beyond its last support a floor only lies on the wall's own thickness.
+            let low = match i {
+                0 => 0.0,
+                _ if i + 1 == here.len() => 1.0,
+                _ => left / (left + right),
+            };
+            let low = Some(low);
             // What goes on as it was is one load.
-            let goes_on = |(s, l): &&mut (Support, Line)| *s == support && l.to == from && l.load == load;
+            let goes_on = |(s, l): &&mut (Support, Line)| {
+                *s == support && l.to == from && l.load == load && l.low == low
+            };
             match out.iter_mut().rev().take(near.len()).find(goes_on) {
                 Some((_, line)) => line.to = to,
-                None => out.push((support, Line { from, to, load, by: From::Floor(n) })),
+                None => out.push((support, Line { from, to, load, by: From::Floor(n), low })),
             }
         }
     }

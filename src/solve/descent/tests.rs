@@ -293,3 +293,60 @@ fn a_wall_moved_by_a_millimetre_changes_nothing_by_a_jump() {
         }
     }
 }
+
+/// A floor comes to its end walls from within, to a wall under it from both sides as its spans are; a beam
+/// across comes from the side on which it lies, what stands above from none.
+#[test]
+fn floors_and_beams_come_from_their_sides() {
+    let mut m = table();
+    // Spans of 1 m and 3 m: half of each on the middle wall.
+    m.walls.push(wall(0, place(Axis::Y, 1000.0, 0.0, 3000.0), 5.0));
+    m.walls.push(wall(0, place(Axis::X, 3000.0, 0.0, 4000.0), 5.0));
+    m.storeys = 2;
+    m.walls.push(wall(1, place(Axis::Y, 1000.0, 0.0, 3000.0), 7.0));
+    m.beams.push(Beam {
+        storey: 0,
+        place: place(Axis::Y, 2500.0, 1000.0, 3050.0),
+        weight: 2.0,
+        bearing: 100.0,
+    });
+    m.walls.push(wall(0, place(Axis::X, 1000.0, 2000.0, 3000.0), 5.0));
+    let d = lead_down(&m).expect("a path");
+    let sides = |i: usize| d.walls[i].piers[0].sides;
+    let none = [0.0; 3];
+    // Before the beam: 3 m of floor in y, whose middle third the beam takes from y = 1 m on.
+    near(sides(0)[0], none);
+    near(sides(0)[1], [2e-3 * 500.0 * 3000.0, 3e-3 * 500.0 * 3000.0, 0.0]);
+    near(sides(1)[1], none);
+    near(sides(2)[0], [2e-3 * 500.0 * 3000.0, 3e-3 * 500.0 * 3000.0, 0.0]);
+    assert!(sides(2)[1][0] > sides(2)[0][0], "the longer span brings more");
+    // The beam's far end lies on the wall at y = 3 m and comes from below it; its near end from above.
+    let end = d.beams[0].reactions;
+    near(sides(3)[0], end[1]);
+    near(sides(3)[1], none);
+    near(sides(5)[0], none);
+    near(sides(5)[1], end[0]);
+    // The wall above is in the load at the head, and comes from no side.
+    let from_floors = sides(2)[0][0] + sides(2)[1][0];
+    assert!((d.walls[2].piers[0].head[0] - from_floors - 7.0 * 3000.0).abs() < 1e-6);
+}
+
+/// What goes to the sides of an opening keeps the side from which it came, and its moment goes down with it.
+#[test]
+fn jambs_keep_the_side_of_their_load() {
+    let mut m = table();
+    m.walls[0].openings.push(Opening { from: 1000.0, to: 2000.0, over: 1.0, under: 0.0 });
+    let d = lead_down(&m).expect("a path");
+    for (n, pier) in d.walls[0].piers.iter().enumerate() {
+        // 1 m of its own and half of the opening, all from the upper side.
+        near(pier.sides[1], [2e-3 * 2000.0 * 1500.0, 3e-3 * 2000.0 * 1500.0, 0.0]);
+        near(pier.sides[0], [0.0; 3]);
+        near(pier.head, pier.sides[1]);
+        // At the foot 500 N of wall over the opening stand on the jamb, half a metre off the middle.
+        let towards = if n == 0 { 1.0 } else { -1.0 };
+        near(
+            [pier.foot_moment[0] - pier.moment[0], pier.foot_moment[1] - pier.moment[1], 0.0],
+            [towards * 500.0 * 500.0, 0.0, 0.0],
+        );
+    }
+}

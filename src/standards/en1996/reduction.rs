@@ -44,6 +44,40 @@ pub fn in_middle(
         "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
         e_mk = max(e_h / 2.0 + e_init, 0.05 * t)
     );
+    annex_g(s, annex, t, t_ef, h_ef, e_mk, f_k)
+}
+
+/// Eccentricity in the middle fifth with a load across the wall: `e_md = M_md/N_md` of the loads at the head and
+/// `e_hm` of the lateral load, both on the force there, 6.1.2.2(1) eq. 6.6 and 6.7. All stand on the sheet.
+pub fn middle_under_lateral_load(
+    s: &mut Sheet,
+    t: Length,
+    e_init: Length,
+    e_md: Length,
+    e_hm: Length,
+) -> Length {
+    calc!(
+        s,
+        "6.1.2.2(1) eq. 6.6, 6.7",
+        "eccentricity in the middle; none from creep in the UK up to a slenderness of 27",
+        e_mk = max(e_md + e_hm + e_init, 0.05 * t)
+    );
+    e_mk
+}
+
+/// Phi_m of Annex G, eq. G.1 to G.4. `t`, `t_ef`, `h_ef`, `e_mk` and `f_k` stand on the sheet.
+///
+/// # Scope
+/// `e_mk` less than half of `t`: beyond it no section is left, and the formula says nothing.
+pub fn annex_g(
+    s: &mut Sheet,
+    annex: &Annex,
+    t: Length,
+    t_ef: Length,
+    h_ef: Length,
+    e_mk: Length,
+    f_k: Stress,
+) -> Num {
     given!(
         s,
         "modulus of elasticity E over compressive strength",
