@@ -63,7 +63,7 @@ pub fn holds(b: &Building) -> Vec<(String, String)> {
     }
     for p in b.found.panels.iter().filter(|p| p.openings > 0) {
         let (mark, how) = match found::treated(b, p) {
-            Some(own) => (own.mark.clone(), "it is worked here as a wall without them"),
+            Some(own) => (own.mark.clone(), "it is worked here as a wall without openings"),
             None => (p.on.clone(), "it is not worked here"),
         };
         out.push((

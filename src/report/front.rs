@@ -284,11 +284,13 @@ pub fn cautions(b: &Building) -> Vec<String> {
             list(&bearings)
         )
     };
-    // Every return's footing, or none is promised.
-    let ground = if !returns.is_empty() && b.footings().count() == returns.len() {
-        "the wall below, settlement of the ground"
-    } else {
-        "the wall and footing below"
+    // Every return's footing, or none is promised; the lengths of wall below are on a sheet where the plan has floors.
+    let footed = !returns.is_empty() && b.footings().count() == returns.len();
+    let ground = match (footed, b.floors.is_empty()) {
+        (true, true) => "the wall below, settlement of the ground",
+        (true, false) => "footings of walls that are no returns, settlement of the ground",
+        (false, true) => "the wall and footing below",
+        (false, false) => "the footing below",
     };
     out.push(format!(
         "Not covered: {beam}, {ground}, movement and fire. They need calculations of their own."

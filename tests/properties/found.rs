@@ -44,7 +44,7 @@ fn a_panel_given_over_a_window_is_a_hold_point() {
         "between = [\"party wall\", \"R1\"]\n\n[panels.before]\n",
         "between = [\"R1\", \"flank wall\"]\n\n[panels.before]\n",
     );
-    let found = hold(&results, "worked here as a wall without them").expect("a hold point");
+    let found = hold(&results, "worked here as a wall without openings").expect("a hold point");
     assert_eq!(found.of, ["P1"]);
 }
 
