@@ -1,6 +1,7 @@
 //! Peak velocity pressure from the charts of the UK National Annex, read by the engineer: UK NA.2.17,
 //! Figures NA.7 and NA.8. The charts themselves are not held.
 
+use super::sensible;
 use crate::quantity::functions::{max, metres, sq};
 use crate::quantity::{Density, Length, Num, Speed, Stress};
 use crate::trace::{Outside, Sheet};
@@ -38,8 +39,8 @@ pub struct Town {
 /// A height or displacement below nought.
 pub fn reading_height(s: &mut Sheet, z: Length, h_dis: Length) -> Result<Length, Outside> {
     let clause = "UK NA.2.17";
-    require!(s, ID, clause, "a height over ground", metres(z) > 0.0);
-    require!(s, ID, "A.5(1)", "a displaced ground is never lowered", metres(h_dis) >= 0.0);
+    sensible(clause, "a height over ground", z > Length::ZERO)?;
+    sensible("A.5(1)", "a displaced ground is never lowered", h_dis >= Length::ZERO)?;
     let source = "UK Figure NA.7, from memory, check against the standard (M)";
     given!(s, "least height of the charts", source, z_low = Length::new(LEAST_HEIGHT));
     calc!(s, clause, "height at which the charts are read", z_d = max(z - h_dis, z_low));
@@ -63,19 +64,18 @@ pub fn peak_pressure_read(
     reading: Reading,
 ) -> Result<Stress, Outside> {
     let clause = "UK NA.2.17";
-    if !(reading.shore_km >= 0.0 && reading.town.is_none_or(|t| t.into_km >= 0.0)) {
-        return Err(Outside::new(ID, clause, "distances to the shore and into the town not below nought"));
-    }
-    require!(s, ID, "4.3.3", "a hill does not slow the wind", c_o >= 1.0);
+    let measured = reading.shore_km >= 0.0 && reading.town.is_none_or(|t| t.into_km >= 0.0);
+    sensible(clause, "distances to the shore and into the town not below nought", measured)?;
+    sensible("4.3.3", "a hill does not slow the wind", c_o >= 1.0)?;
     calc!(s, "4.5(1) eq. 4.10", "basic velocity pressure", q_b = 0.5 * rho * sq(v_b));
     let at = metres(z_d).base();
     let source = format!("read from UK Figure NA.7 at {at:.1} m, {} km from the shore", reading.shore_km);
     given!(s, "exposure factor", &source, c_e = Num::new(reading.c_e));
-    require!(s, ID, clause, "an exposure factor above nought", c_e > 0.0);
+    sensible(clause, "an exposure factor above nought", c_e > 0.0)?;
     let q_g = if let Some(town) = reading.town {
         let source = format!("read from UK Figure NA.8 at {at:.1} m, {} km into the town", town.into_km);
         given!(s, "correction in towns", &source, c_e_T = Num::new(town.c_e_T));
-        require!(s, ID, clause, "a correction in towns above nought", c_e_T > 0.0);
+        sensible(clause, "a correction in towns above nought", c_e_T > 0.0)?;
         require!(s, ID, clause, "a town shelters and never exposes", c_e_T <= 1.0);
         calc!(s, clause, "peak velocity pressure on level ground, town", q_g = c_e * c_e_T * q_b);
         q_g

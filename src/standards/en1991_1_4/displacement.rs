@@ -1,9 +1,10 @@
 //! Displacement height among closely spaced buildings: Annex A.5.
 
+use super::sensible;
 use crate::quantity::Length;
-use crate::quantity::functions::{metres, min};
+use crate::quantity::functions::min;
 use crate::trace::{Outside, Sheet};
-use crate::{calc, decide, given, require};
+use crate::{calc, decide, given};
 
 /// Displacement height h_dis: A.5(1). From memory, check against the standard (H).
 ///
@@ -14,9 +15,9 @@ use crate::{calc, decide, given, require};
 /// A length below nought, or no height at all.
 pub fn displacement(s: &mut Sheet, h_ave: Length, x: Length, h: Length) -> Result<Length, Outside> {
     let clause = "A.5(1)";
-    require!(s, "wind", clause, "a building with a height", metres(h) > 0.0);
-    require!(s, "wind", clause, "buildings upwind with a height", metres(h_ave) >= 0.0);
-    require!(s, "wind", clause, "buildings upwind, none downwind", metres(x) >= 0.0);
+    sensible(clause, "a building with a height", h > Length::ZERO)?;
+    sensible(clause, "buildings upwind with a height", h_ave >= Length::ZERO)?;
+    sensible(clause, "buildings upwind, none downwind", x >= Length::ZERO)?;
     if decide!(s, clause, "close by", "further off", x <= 2.0 * h_ave) {
         calc!(s, clause, "displacement height", h_dis = min(0.8 * h_ave, 0.6 * h));
         return Ok(h_dis);

@@ -4,7 +4,7 @@
 //! a canopy or free-standing walls (7.3, 7.4). So is 7.2.9(3): a dominant opening that is shut in a storm
 //! may count as shut, and open as an accident.
 
-use crate::quantity::functions::square_metres;
+use super::sensible;
 use crate::quantity::{Area, Num};
 use crate::trace::{Outside, Sheet};
 use crate::{calc, decide, given, require};
@@ -35,13 +35,10 @@ pub fn no_dominant_face(s: &mut Sheet) -> Internal {
 /// No opening, or fewer than twice the rest: no face is dominant, use [`no_dominant_face`].
 pub fn dominant_face(s: &mut Sheet, A_op: Area, A_rest: Area, c_op: Num) -> Result<Internal, Outside> {
     let clause = "7.2.9(5)";
-    let id = "wind";
-    if !c_op.is_finite() {
-        return Err(Outside::new(id, clause, "an external coefficient that is a number"));
-    }
-    require!(s, id, clause, "openings in the face", square_metres(A_op) > 0.0);
-    require!(s, id, clause, "openings elsewhere not below nought", square_metres(A_rest) >= 0.0);
-    require!(s, id, "7.2.9(4)", "openings at least twice those elsewhere", A_op >= 2.0 * A_rest);
+    sensible(clause, "an external coefficient that is a number", c_op.is_finite())?;
+    sensible(clause, "openings in the face", A_op > Area::ZERO)?;
+    sensible(clause, "openings elsewhere not below nought", A_rest >= Area::ZERO)?;
+    require!(s, "wind", "7.2.9(4)", "openings at least twice those elsewhere", A_op >= 2.0 * A_rest);
     let k_i = if decide!(s, clause, "three times and more", "from two to three times", A_op >= 3.0 * A_rest) {
         given!(s, "share of the outer pressure", "7.2.9(5) eq. 7.3", k_i = Num::new(0.9));
         k_i

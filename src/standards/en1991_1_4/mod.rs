@@ -24,5 +24,18 @@ pub use reference::{Strip, strips};
 pub use size::size_and_dynamics;
 pub use velocity::basic_velocity;
 
+use crate::quantity::Length;
+use crate::trace::Outside;
+
 /// The edition every sheet prints.
 pub const EDITION: &str = "BS EN 1991-1-4:2005+A1:2010 with UK National Annex";
+
+/// Whether a length is one: above nought, and finite.
+fn is_length(l: Length) -> bool {
+    l > Length::ZERO && l.is_finite()
+}
+
+/// Refuses figures that no building has, without a line on the sheet: `words` says what is wanted.
+fn sensible(clause: &str, words: &str, holds: bool) -> Result<(), Outside> {
+    if holds { Ok(()) } else { Err(Outside::new("wind", clause, words)) }
+}

@@ -4,12 +4,11 @@
 //! digits: the formula downwind of cliffs meets the one of the crest within 0.033 over the whole range of
 //! heights, though the two share no coefficient. A test holds that.
 
+use super::sensible;
 use crate::quantity::functions::{cube, exp, log10, max, metres, pow, sq};
 use crate::quantity::{Length, Num};
 use crate::trace::{Outside, Sheet};
-use crate::{calc, decide, given, require};
-
-const ID: &str = "orography";
+use crate::{calc, decide, given};
 
 /// The shape of the ground.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
@@ -48,21 +47,21 @@ pub struct Slope {
 
 /// Orography factor c_o at height `z`: A.3(1) to (3). `z` stands on the sheet; the slope is put there.
 ///
+/// Whether a hill counts at all is read on the site: UK Figure NA.2, 4.3.3(2). It never slows the wind here.
+///
 /// # Errors
 /// A slope without length, a height below nought, or figures that are no numbers.
 pub fn orography(sheet: &mut Sheet, slope: Slope, z: Length) -> Result<Num, Outside> {
     let clause = "A.3";
     let lengths = [slope.height, slope.upwind, slope.from_crest, z];
-    if !lengths.iter().all(|l| l.is_finite()) {
-        return Err(Outside::new(ID, clause, "figures of the slope that are numbers"));
-    }
+    sensible(clause, "figures of the slope that are numbers", lengths.iter().all(|l| l.is_finite()))?;
     let source = "job file";
     given!(sheet, "height of the hill or cliff", source, H = slope.height);
     given!(sheet, "length of the upwind slope", source, L_u = slope.upwind);
     given!(sheet, "distance from the crest, upwind negative", source, X = slope.from_crest);
-    require!(sheet, ID, clause, "a slope with a length", metres(L_u) > 0.0);
-    require!(sheet, ID, clause, "a height of the feature not below nought", metres(H) >= 0.0);
-    require!(sheet, ID, clause, "a height over ground not below nought", metres(z) >= 0.0);
+    sensible(clause, "a slope with a length", L_u > Length::ZERO)?;
+    sensible(clause, "a height of the feature not below nought", H >= Length::ZERO)?;
+    sensible(clause, "a height over ground not below nought", z >= Length::ZERO)?;
     calc!(sheet, "A.3(1)", "upwind slope", phi = H / L_u);
     if decide!(sheet, "A.3(1)", "level enough: no effect", "the slope counts", phi < 0.05) {
         given!(sheet, "orography factor", "A.3(1)", c_o = Num::new(1.0));
@@ -76,6 +75,7 @@ pub fn orography(sheet: &mut Sheet, slope: Slope, z: Length) -> Result<Num, Outs
         calc!(sheet, "Table A.2", "effective length", L_e = H / 0.3);
         L_e
     };
+    sheet.note("The coefficients of Annex A.3 are from memory, check against the standard (M).");
     let s = location(sheet, slope, X, L_u, L_e, z)?;
     if shallow {
         calc!(sheet, "A.3(1)", "orography factor", c_o = 1.0 + 2.0 * s * phi);
@@ -110,11 +110,9 @@ fn location(
         return Ok(s);
     }
     if slope.ground.falls_again() {
-        if !slope.downwind.is_finite() {
-            return Err(Outside::new(ID, clause, "a downwind slope whose length is a number"));
-        }
+        sensible(clause, "a downwind slope whose length is a number", slope.downwind.is_finite())?;
         given!(sheet, "length of the downwind slope", "job file", L_d = slope.downwind);
-        require!(sheet, ID, clause, "a downwind slope with a length", metres(L_d) > 0.0);
+        sensible(clause, "a downwind slope with a length", L_d > Length::ZERO)?;
         calc!(sheet, clause, "distance over length of the slope", x_d = X / L_d);
         if !decide!(sheet, clause, "within the reach of the slope", "beyond it: none", x_d <= 2.0) {
             return Ok(none(sheet));

@@ -2,6 +2,7 @@
 //!
 //! This is the text of the EN; the UK National Annex uses charts instead (`charts.rs`).
 
+use super::sensible;
 use crate::quantity::functions::{KG_M3, ln, max, metres, pow, sq};
 use crate::quantity::{Density, Length, Num, Speed, Stress};
 use crate::trace::{Outside, Sheet};
@@ -42,8 +43,8 @@ pub fn peak_pressure_displaced(
 ) -> Result<Stress, Outside> {
     let id = "wind";
     require!(s, id, "4.3.2(1)", "heights up to 200 m", metres(z) <= 200.0);
-    require!(s, id, "4.3.3", "a hill does not slow the wind", c_o >= 1.0);
-    require!(s, id, "A.5(1)", "a displaced ground is never lowered", metres(h_dis) >= 0.0);
+    sensible("4.3.3", "a hill does not slow the wind", c_o >= 1.0)?;
+    sensible("A.5(1)", "a displaced ground is never lowered", h_dis >= Length::ZERO)?;
     if metres(h_dis) > 0.0 {
         require!(s, id, "A.5(1)", "displaced ground in terrain category IV only", metres(z_0) >= 1.0);
     }

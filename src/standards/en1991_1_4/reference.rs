@@ -1,10 +1,10 @@
 //! Reference heights of the windward wall: 7.2.2(1), Figure 7.4. From memory, check against the
 //! standard (H).
 
-use crate::quantity::functions::metres;
+use super::{is_length, sensible};
 use crate::quantity::{Length, Num, print};
 use crate::trace::{Column, Outside, Sheet, Table};
-use crate::{calc, decide, found, require};
+use crate::{calc, decide, found};
 
 /// A strip of the windward wall with one pressure.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -27,8 +27,8 @@ pub struct Strip {
 /// Height or breadth not above nought.
 pub fn strips(s: &mut Sheet, h: Length, b: Length) -> Result<Vec<Strip>, Outside> {
     let clause = "7.2.2(1) Figure 7.4";
-    require!(s, "wind", clause, "a height", metres(h) > 0.0);
-    require!(s, "wind", clause, "a breadth", metres(b) > 0.0);
+    sensible(clause, "a height", is_length(h))?;
+    sensible(clause, "a breadth", is_length(b))?;
     let one = Strip { from: Length::ZERO, to: h, z_e: h };
     if decide!(s, clause, "one height for the whole wall", "in strips", h <= b) {
         return Ok(vec![one]);
@@ -113,6 +113,11 @@ mod tests {
 
     #[test]
     fn no_wall_is_refused() {
-        assert!(of(0.0, 5.0).is_err() && of(5.0, 0.0).is_err() && of(f64::NAN, 5.0).is_err());
+        assert!(
+            of(0.0, 5.0).is_err()
+                && of(5.0, 0.0).is_err()
+                && of(f64::NAN, 5.0).is_err()
+                && of(f64::INFINITY, 5.0).is_err()
+        );
     }
 }

@@ -1,5 +1,6 @@
 //! Size factor and dynamic factor: 6.1, 6.2.
 
+use super::sensible;
 use crate::quantity::functions::metres;
 use crate::quantity::{Length, Num};
 use crate::trace::{Outside, Sheet};
@@ -14,7 +15,7 @@ use crate::{calc, given, require};
 /// 15 m and more (6.2(1)a, from memory, H), or no height.
 pub fn size_and_dynamics(s: &mut Sheet, h: Length) -> Result<Num, Outside> {
     let clause = "6.2(1)a";
-    require!(s, "wind", clause, "a height", metres(h) > 0.0);
+    sensible(clause, "a height", h > Length::ZERO)?;
     require!(s, "wind", clause, "buildings below 15 m", metres(h) < 15.0);
     let source = "UK NA.2.20, from memory, check against the standard (M)";
     given!(s, "size factor: Table NA.3 gives at most this", source, c_s = Num::new(1.0));

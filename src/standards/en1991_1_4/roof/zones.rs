@@ -1,9 +1,10 @@
 //! Zones in bands across the wind: Figures 7.6 and 7.8b. From memory, check against the standard (H).
 
-use crate::quantity::functions::{metres, min};
+use super::super::{is_length, sensible};
+use crate::calc;
+use crate::quantity::functions::min;
 use crate::quantity::{Area, Length};
 use crate::trace::{Outside, Sheet};
-use crate::{calc, require};
 
 /// e, which measures every zone: the lesser of b and 2h. Figures 7.6 to 7.8.
 ///
@@ -11,9 +12,9 @@ use crate::{calc, require};
 /// A side not above nought.
 pub fn measure(s: &mut Sheet, h: Length, b: Length, d: Length) -> Result<Length, Outside> {
     let clause = "7.2.3 to 7.2.5";
-    require!(s, "roof", clause, "a height", metres(h) > 0.0);
-    require!(s, "roof", clause, "a breadth", metres(b) > 0.0);
-    require!(s, "roof", clause, "a depth", metres(d) > 0.0);
+    sensible(clause, "a height", is_length(h))?;
+    sensible(clause, "a breadth", is_length(b))?;
+    sensible(clause, "a depth", is_length(d))?;
     calc!(s, "Figures 7.6 to 7.8", "measure of the zones", e = min(b, 2.0 * h));
     Ok(e)
 }
