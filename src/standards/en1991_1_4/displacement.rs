@@ -18,6 +18,8 @@ pub fn displacement(s: &mut Sheet, h_ave: Length, x: Length, h: Length) -> Resul
     sensible(clause, "a building with a height", h > Length::ZERO)?;
     sensible(clause, "buildings upwind with a height", h_ave >= Length::ZERO)?;
     sensible(clause, "buildings upwind, none downwind", x >= Length::ZERO)?;
+    given!(s, "average height of the buildings upwind", "job file", h_ave);
+    given!(s, "distance to them", "job file", x);
     if decide!(s, clause, "close by", "further off", x <= 2.0 * h_ave) {
         calc!(s, clause, "displacement height", h_dis = min(0.8 * h_ave, 0.6 * h));
         return Ok(h_dis);

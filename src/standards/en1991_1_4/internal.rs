@@ -38,6 +38,9 @@ pub fn dominant_face(s: &mut Sheet, A_op: Area, A_rest: Area, c_op: Num) -> Resu
     sensible(clause, "an external coefficient that is a number", c_op.is_finite())?;
     sensible(clause, "openings in the face", A_op > Area::ZERO)?;
     sensible(clause, "openings elsewhere not below nought", A_rest >= Area::ZERO)?;
+    given!(s, "openings in the dominant face", "job file", A_op);
+    given!(s, "openings in all other faces", "job file", A_rest);
+    given!(s, "external coefficient at the openings", "Table 7.1", c_op);
     require!(s, "wind", "7.2.9(4)", "openings at least twice those elsewhere", A_op >= 2.0 * A_rest);
     let k_i = if decide!(s, clause, "three times and more", "from two to three times", A_op >= 3.0 * A_rest) {
         given!(s, "share of the outer pressure", "7.2.9(5) eq. 7.3", k_i = Num::new(0.9));

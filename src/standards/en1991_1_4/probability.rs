@@ -19,6 +19,7 @@ const OF_THE_MAP: f64 = 0.02;
 /// (Table 3.1, from memory, M).
 pub fn probability(s: &mut Sheet, p: Num) -> Result<Num, Outside> {
     let clause = "4.2(2)P note 4";
+    given!(s, "yearly probability that the wind is exceeded", "job file", p);
     sensible(clause, "a yearly probability above nought", p > 0.0)?;
     require!(s, "wind", "EN 1991-1-6 Table 3.1", "a return period of two years and more", p <= 0.5);
     let source = "4.2(2)P note 4, UK NA, from memory, check against the standard (H)";

@@ -1,7 +1,9 @@
 //! External pressure on flat, monopitch and duopitch roofs.
 //!
 //! BS EN 1991-1-4:2005+A1:2010, 7.2.3 to 7.2.5, Tables 7.2 to 7.4b: c_pe,10 alone, for roofs as a whole.
-//! From memory (M). The UK National Annex varies some roof values; its own are not held.
+//! From memory (M). Tables 7.2, 7.4a and 7.4b agree with a public reproduction of the Bulgarian edition; no
+//! second text of Tables 7.3a and 7.3b was at hand. The UK National Annex of 2011 has roof values of its own,
+//! Tables NA.5 to NA.7b (numbers from its contents list): they are not held, and may be greater.
 
 use std::fmt;
 
@@ -79,7 +81,8 @@ const fn one(zone: RoofZone, values: [f64; 6]) -> Row {
     (zone, values, values)
 }
 
-/// Table 7.4a, c_pe,10. From memory (M).
+/// Table 7.4a, c_pe,10. From memory (M). The reproduction has -0.6 as both values of zone I at 5 degrees; the
+/// nought here is never the worse, and nothing takes it.
 pub const DUOPITCH_EAVES: [Row; 5] = [
     (RoofZone::F, [-1.7, -0.9, -0.5, 0.0, 0.7, 0.8], [0.0, 0.2, 0.7, 0.7, 0.7, 0.8]),
     (RoofZone::G, [-1.2, -0.8, -0.5, 0.0, 0.7, 0.8], [0.0, 0.2, 0.7, 0.7, 0.7, 0.8]),

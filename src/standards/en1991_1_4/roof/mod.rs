@@ -37,7 +37,7 @@ fn at(roof: Roof, zone: RoofZone, pitch: f64, sign: Sign) -> Result<Looked<f64>,
 /// What every roof says about its values.
 fn whose_values(s: &mut Sheet) {
     s.note(
-        "The roof coefficients are those of the EN for areas of 10 m² and more. The UK National Annex varies \
-         some of them: check against it.",
+        "The roof coefficients are those of the EN for areas of 10 m² and more. The UK National Annex has its own \
+         in Tables NA.5 to NA.7b, and they may be greater: check against them.",
     );
 }
