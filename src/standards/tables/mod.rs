@@ -17,6 +17,7 @@ pub mod flexural;
 pub mod gamma_m;
 mod interpolate;
 pub mod panel_limits;
+pub mod roofs;
 pub mod selfweight;
 pub mod shear;
 pub mod stiffness;
