@@ -273,6 +273,9 @@ pub struct Edge {
 pub struct Span {
     /// Length between vertical supports.
     pub length: Length,
+    /// Where it begins and ends along its plan wall, in the plan's x or y, smaller first; none where the job
+    /// does not name the walls that hold it.
+    pub ends: Option<(Length, Length)>,
     /// Top edge.
     pub top: Edge,
     /// Base edge.

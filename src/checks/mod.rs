@@ -19,6 +19,7 @@ pub mod takedown;
 pub mod whole;
 pub mod wind;
 
+mod bays;
 mod bearing_sheet;
 mod bearing_views;
 mod panel_sheet;
@@ -28,7 +29,7 @@ mod return_sheet;
 mod return_views;
 mod shapes;
 
-use crate::building::Building;
+use crate::building::{Building, TakeDown, take_down};
 use crate::sketch::Drawing;
 use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
@@ -65,6 +66,8 @@ pub struct Job<'a> {
     pub annex: Annex,
     /// Wind on the site.
     pub wind: Result<Pressures, Outside>,
+    /// Loads led down, where its plan has floors.
+    pub down: Option<TakeDown>,
     /// The storey's sharing, where it is given.
     pub storey: Option<Result<Storey, Outside>>,
     /// The whole building against wind, where its plan has floors.
@@ -83,7 +86,8 @@ impl<'a> Job<'a> {
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
         let holds = outcome::holds(building);
-        let mut job = Self { building, annex, wind, storey, whole: Vec::new(), holds };
+        let down = take_down(building).and_then(Result::ok);
+        let mut job = Self { building, annex, wind, down, storey, whole: Vec::new(), holds };
         job.whole = whole::of(&job);
         let found = whole::holds(&job);
         outcome::add(&mut job.holds, found);

@@ -101,24 +101,25 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
 }
 
 fn span<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: Option<&PlanWall>) -> Option<Span> {
-    let length = match on {
+    let place = match on {
         Some(wall) if around.led && t.has("between") => {
             if t.has("length") {
                 t.clash("its length is given twice", "length", "between")
                     .allowed("`length`, or `between` with the two walls of the plan that hold its ends")
                     .help("take one of the two out");
             }
-            between(t, around, wall)
+            between(t, around, wall).map(|(from, to)| (to - from, Some((from, to))))
         }
-        _ => t.need("length").quantity(&LENGTH),
+        _ => t.need("length").quantity(&LENGTH).map(|length| (length, None)),
     };
     let [top, base, left, right] = ["top", "base", "left", "right"].map(|key| edge(t, key));
     t.finish();
-    Some(Span { length: length?, top: top?, base: base?, left: left?, right: right? })
+    let (length, ends) = place?;
+    Some(Span { length, ends, top: top?, base: base?, left: left?, right: right? })
 }
 
-/// Length between the lines of two plan walls that meet the wall of the panel.
-fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<Length> {
+/// The lines of two plan walls that meet the wall of the panel, smaller first.
+fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<(Length, Length)> {
     let entry = t.need("between");
     let wanted = "the two walls of the plan that hold its ends: [\"party wall\", \"R1\"]";
     let items = entry.list(wanted)?;
@@ -140,7 +141,8 @@ fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<
         Some(line.at)
     };
     let (a, z) = (place(a), place(z));
-    let length = Length::new((a? - z?).abs());
+    let (a, z) = (a?, z?);
+    let length = Length::new((a - z).abs());
     if !LENGTH.allow(length.base()) {
         entry
             .fault(Kind::Contradiction, format_args!("the panel would be {:.0} mm long", length.base()))
@@ -149,7 +151,7 @@ fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<
             .help("name two walls apart from each other");
         return None;
     }
-    Some(length)
+    Some((Length::new(a.min(z)), Length::new(a.max(z))))
 }
 
 fn edge(t: &Table<'_>, key: &'static str) -> Option<Edge> {

@@ -38,6 +38,27 @@ pub enum Fate {
     Added,
 }
 
+/// Which of two plans a drawing is.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum When {
+    /// As the walls stand: what will come out stands, what is new does not.
+    Before,
+    /// What came out is dashed, what is new is there.
+    After,
+}
+
+impl When {
+    /// Whether a wall is solid on this plan.
+    pub fn shows(self, fate: Fate) -> bool {
+        fate != if self == When::Before { Fate::Added } else { Fate::Removed }
+    }
+
+    /// The word for captions.
+    pub fn word(self) -> &'static str {
+        if self == When::Before { "before" } else { "after" }
+    }
+}
+
 /// Walls thinner than this on paper (mm) are not hatched: the lines would run together.
 const HATCHED: f64 = 1.3;
 /// Distance between the crossed hatch lines of a new wall, mm on paper.
@@ -67,14 +88,15 @@ pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
     Point::new(scale.paper(x), -scale.paper(y))
 }
 
-/// Draws walls: what stays and comes in one body, what goes dashed.
-pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
+/// Draws walls: what stands in one body, what went dashed; on the plan before, short lines across what
+/// comes out show where it is cut.
+pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
     let rings = |wanted: &dyn Fn(Fate) -> bool| -> Vec<(Fate, [Point; 4])> {
         let chosen: Vec<&PlanWall> = walls.iter().filter(|w| wanted(w.fate)).collect();
         chosen.iter().map(|w| (w.fate, to_corners(w, &chosen).ring(scale))).collect()
     };
-    let standing = rings(&|fate| fate != Fate::Removed);
-    let removed = rings(&|fate| fate == Fate::Removed);
+    let standing = rings(&|fate| when.shows(fate));
+    let removed = rings(&|fate| when == When::After && fate == Fate::Removed);
     for (index, (fate, ring)) in standing.iter().enumerate() {
         // Where two walls share ground, the later one leaves it to the earlier.
         let thick = (ring[0] - ring[3]).hypot();
@@ -93,18 +115,44 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
     outlines(board, Pen::Cut, &standing, &[]);
     let solid: Vec<_> = standing.iter().map(|(_, ring)| *ring).collect();
     outlines(board, Pen::Removed, &removed, &solid);
+    if when == When::Before {
+        for wall in walls.iter().filter(|wall| wall.fate == Fate::Removed) {
+            cuts(board, wall, scale);
+        }
+    }
 }
 
-/// The wall with its ends run on to the far faces of walls that it meets at a corner.
+/// How far the line of a cut runs beyond the faces of the wall, mm on paper.
+const BEYOND_FACE: f64 = 1.2;
+
+/// Lines across the two ends of a wall that comes out.
+fn cuts(board: &mut Board, wall: &PlanWall, scale: Scale) {
+    let [a, b, c, d] = wall.ring(scale);
+    for (one, other) in [(a, d), (b, c)] {
+        let out = (one - other).normalize() * BEYOND_FACE;
+        board.line(Pen::Beyond, one + out, other - out);
+    }
+}
+
+/// How far walls that meet end to end run into each other, mm: they are one body, without a line between.
+const INTO: f64 = 1.0;
+
+/// The wall with its ends run on to the far faces of walls that it meets at a corner, and into walls that go
+/// on in its line.
 fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
     let along = Vec2::new(wall.to.0 - wall.from.0, wall.to.1 - wall.from.1).normalize();
     let run_on = |end: (f64, f64)| {
-        let meets = |other: &&&PlanWall| {
+        let reach = |other: &&PlanWall| {
             let near = |p: (f64, f64)| (p.0 - end.0).hypot(p.1 - end.1) < 1.0;
             let way = Vec2::new(other.to.0 - other.from.0, other.to.1 - other.from.1).normalize();
-            (near(other.from) || near(other.to)) && way.cross(along).abs() > 0.99
+            let turn = way.cross(along).abs();
+            match near(other.from) || near(other.to) {
+                true if turn > 0.99 => other.thickness / 2.0,
+                true if turn < 0.01 && !std::ptr::eq(*other, wall) => INTO,
+                _ => 0.0,
+            }
         };
-        others.iter().filter(meets).map(|other| other.thickness / 2.0).fold(0.0, f64::max)
+        others.iter().map(reach).fold(0.0, f64::max)
     };
     let (back, ahead) = (along * run_on(wall.from), along * run_on(wall.to));
     PlanWall {
@@ -181,13 +229,17 @@ impl At for Line {
     }
 }
 
-/// A label for a wall: beside its middle, or further along it.
+/// How much further off a wall its label may stand, clear of the lines across the wall, mm on paper.
+const FURTHER: f64 = 1.5;
+
+/// A label for a wall: beside its middle, or further along it, or a line of text further off.
 pub fn wall_note(wall: &PlanWall, scale: Scale, note: Note) -> Note {
     let (from, to) = (paper(scale, wall.from), paper(scale, wall.to));
-    let half = scale.paper(wall.thickness / 2.0) + 1.0;
+    let near = scale.paper(wall.thickness / 2.0) + 1.0;
     let upright = (to - from).x.abs() < (to - from).y.abs();
     let mut note = Note { target: wall.middle(scale), ..note };
-    for share in [0.5, 0.35, 0.65, 0.2, 0.8] {
+    let shares = [0.5, 0.35, 0.65, 0.2, 0.8];
+    for (half, share) in [near, near + FURTHER].into_iter().flat_map(|off| shares.map(|share| (off, share))) {
         let at = from.lerp(to, share);
         let (a, b) = match upright {
             true => (Spot::new((at.x + half, at.y), 1.0, 0.0), Spot::new((at.x - half, at.y), -1.0, 0.0)),
@@ -211,9 +263,12 @@ pub fn north(board: &mut Board, centre: Point, degrees: f64) {
     board.note(Note::new(Role::Note, beyond, Text::plain("N")).spot(Spot::new(beyond, 0.0, 0.0)).rank(0));
 }
 
+/// Length of a wind arrow, mm on paper.
+pub const WIND: f64 = 9.0;
+
 /// A wind arrow that blows `along` at `tip`, with its words behind it.
 pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
-    let tail = tip - along * 11.0;
+    let tail = tip - along * WIND;
     load::open_arrow(board, tail, tip);
     let middle = tail.midpoint(tip);
     let (x, y) = (along.x.abs() * 2.0, along.y.abs() * 2.0);

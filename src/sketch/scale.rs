@@ -55,8 +55,7 @@ pub fn fit_all<const N: usize>(
     from: f64,
     draw: impl Fn(Scale) -> [Drawing; N],
 ) -> [Drawing; N] {
-    let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
-    fit_by(from, draw, |drawings| drawings.iter().map(over).sum())
+    fit_by(from, draw, |drawings| drawings.iter().map(|d| over(d, frame)).sum())
 }
 
 /// Drawings to be compared side by side, at one scale: the largest at which the row, with `gap`
@@ -67,11 +66,30 @@ pub fn fit_row<const N: usize>(
     from: f64,
     draw: impl Fn(Scale) -> [Drawing; N],
 ) -> [Drawing; N] {
+    fit_by(from, draw, |drawings| over_row(drawings, frame, gap))
+}
+
+/// Clear space that the page leaves between drawings side by side, mm.
+pub const APART: f64 = 8.0;
+
+/// Two drawings to be compared, at one scale: the largest at which they fit `row` beside each other, or
+/// each of them `alone` one above the other. The page finds the same by their widths.
+pub fn fit_pair(row: Frame, alone: Frame, from: f64, draw: impl Fn(Scale) -> [Drawing; 2]) -> [Drawing; 2] {
     fit_by(from, draw, |drawings| {
-        let width: f64 = drawings.iter().map(|d| d.width).sum::<f64>() + gap * (N as f64 - 1.0);
-        let height = drawings.iter().map(|d| d.height).fold(0.0, f64::max);
-        (width - frame.width).max(0.0) + (height - frame.height).max(0.0)
+        over_row(drawings, row, APART).min(drawings.iter().map(|d| over(d, alone)).sum())
     })
+}
+
+/// By how much a drawing sticks out of its frame, mm.
+fn over(d: &Drawing, frame: Frame) -> f64 {
+    (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0)
+}
+
+/// By how much a row of drawings, `gap` apart, sticks out of its frame, mm.
+fn over_row(drawings: &[Drawing], frame: Frame, gap: f64) -> f64 {
+    let width: f64 = drawings.iter().map(|d| d.width + gap).sum::<f64>() - gap;
+    let height = drawings.iter().map(|d| d.height).fold(0.0, f64::max);
+    (width - frame.width).max(0.0) + (height - frame.height).max(0.0)
 }
 
 /// The drawings at the largest preferred scale at which nothing sticks out; else where least does.
