@@ -10,14 +10,15 @@ const LOOK: f64 = 0.36;
 /// Every span of the floors over `storey`, along the line on which each floor is looked at: from one support
 /// that the take-down leads its load to, to the next.
 pub fn of(b: &Building, down: &TakeDown, storey: &str, after: bool) -> Vec<PlanMark> {
-    let state = if after { &down.after } else { &down.before };
+    let [before, now] =
+        [&down.before, if after { &down.after } else { &down.before }].map(|s| by_floor(b, s));
+    let gone = down.before.walls.iter().position(|s| b.plan[s.wall].removed);
+    let gone = gone.map(|i| down.before.model.walls[i].place);
     let here = b.floors.iter().enumerate().filter(|(_, f)| f.storey == storey);
     here.flat_map(|(n, floor)| {
-        let across = look(b, down, n, floor);
-        let mut at: Vec<f64> = supports(state, n)
-            .filter(|(_, l)| l.from <= across && across <= l.to)
-            .map(|(p, _)| p.at)
-            .collect();
+        let across = look(floor, &before[n], gone);
+        let passes = |(_, l): &&(Place, &Line)| l.from <= across && across <= l.to;
+        let mut at: Vec<f64> = now[n].iter().filter(passes).map(|(p, _)| p.at).collect();
         at.sort_by(f64::total_cmp);
         at.dedup();
         let point = |s: f64| if floor.spans == Along::X { (s, across) } else { (across, s) };
@@ -27,31 +28,35 @@ pub fn of(b: &Building, down: &TakeDown, storey: &str, after: bool) -> Vec<PlanM
     .collect()
 }
 
-/// The line across the span on which floor `n` is looked at: where the wall that comes out bears it, if it
+/// The line across the span on which a floor is looked at: where the wall that comes out bears it, if it
 /// does, since there the spans change.
-fn look(b: &Building, down: &TakeDown, n: usize, floor: &PlanFloor) -> f64 {
+fn look(floor: &PlanFloor, before: &[(Place, &Line)], gone: Option<Place>) -> f64 {
     let (a, z) = match floor.spans {
         Along::X => (floor.from.1.base(), floor.to.1.base()),
         Along::Y => (floor.from.0.base(), floor.to.0.base()),
     };
     let (a, z) = (a.min(z), a.max(z));
     let usual = a + LOOK * (z - a);
-    let state = &down.before;
-    let gone = state.walls.iter().position(|s| b.plan[s.wall].removed).map(|i| state.model.walls[i].place);
-    let on_it = supports(state, n).filter(|(p, _)| Some(*p) == gone).map(|(_, l)| (l.from, l.to));
+    let on_it = before.iter().filter(|(p, _)| Some(*p) == gone).map(|(_, l)| (l.from, l.to));
     match on_it.reduce(|x, y| (x.0.min(y.0), x.1.max(y.1))) {
         Some((from, to)) if !(from..=to).contains(&usual) => from + LOOK * (to - from),
         _ => usual,
     }
 }
 
-/// The walls and beams that floor `n` bears on, each with the load that it brings.
-fn supports(state: &State, n: usize) -> impl Iterator<Item = (Place, &Line)> {
+/// For each floor the walls and beams that it bears on, each with the load that it brings.
+fn by_floor<'a>(b: &Building, state: &'a State) -> Vec<Vec<(Place, &'a Line)>> {
     let walls = state.model.walls.iter().map(|w| w.place).zip(state.down.walls.iter().map(|c| &c.head));
     let beams = state.model.beams.iter().map(|w| w.place).zip(state.down.beams.iter().map(|c| &c.loads));
-    walls.chain(beams).flat_map(move |(place, loads)| {
-        loads.lines.iter().filter(move |l| l.by == From::Floor(n)).map(move |l| (place, l))
-    })
+    let mut out = vec![Vec::new(); b.floors.len()];
+    for (place, loads) in walls.chain(beams) {
+        for line in &loads.lines {
+            if let From::Floor(n) = line.by {
+                out[n].push((place, line));
+            }
+        }
+    }
+    out
 }
 
 #[cfg(test)]

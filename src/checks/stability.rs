@@ -1,6 +1,8 @@
 //! The storey's wind, every bracing wall's share of it, before and after the removal.
 
 use super::plan;
+use std::collections::HashMap;
+
 use super::wind::Pressures;
 use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands, stands_in};
 use crate::quantity::functions::{metres, sqrt};
@@ -91,19 +93,27 @@ pub fn share(
     );
     let before = shares(b, st, Stands::Before)?;
     let after = shares(b, st, Stands::After)?;
+    // The first of each mark, as a search through the list would find it.
+    let by_mark = |rows: Vec<Row>| {
+        let mut found: HashMap<String, (f64, Option<Length>)> = HashMap::new();
+        rows.into_iter().for_each(|(mark, share, width)| {
+            found.entry(mark).or_insert((share, width));
+        });
+        found
+    };
+    let (before, after) = (by_mark(before), by_mark(after));
     let list: Vec<Share> = st
         .walls
         .iter()
         .filter(|w| w.along == st.wind_along)
         .map(|w| {
-            let find = |v: &[(String, f64, Option<Length>)]| v.iter().find(|x| x.0 == w.mark).cloned();
-            let (b, a) = (find(&before), find(&after));
+            let (b, a) = (before.get(&w.mark), after.get(&w.mark));
             Share {
                 mark: w.mark.clone(),
-                before: b.as_ref().map(|x| x.1),
-                after: a.as_ref().map(|x| x.1),
-                width_before: b.and_then(|x| x.2),
-                width_after: a.and_then(|x| x.2),
+                before: b.map(|x| x.0),
+                after: a.map(|x| x.0),
+                width_before: b.and_then(|x| x.1),
+                width_after: a.and_then(|x| x.1),
             }
         })
         .collect();
@@ -268,14 +278,17 @@ fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<[Drawing; 2]> 
     // A return that is no line of the plan is drawn where its mark lies.
     let others = b.returns.iter().filter(|r| r.storey == st.storey && !here.iter().any(|w| w.mark == r.mark));
     walls.extend(others.filter_map(|r| plan::return_wall(b, r)));
-    let marks: Vec<String> = walls.iter().map(|w| w.name.clone()).collect();
+    let mut marks: HashMap<&str, usize> = HashMap::new();
+    for (n, wall) in walls.iter().enumerate() {
+        marks.entry(wall.name.as_str()).or_insert(n);
+    }
     let percent = |x: Option<f64>| x.map(|p| format!("{:.0} %", p * 100.0));
     let mut shares = Vec::new();
     // Of very many walls those are drawn whose share changes: the table has them all.
     let many = storey.shares.len() > MANY;
     let changed = |x: &Share| x.before.zip(x.after).is_none_or(|(b, a)| (b - a).abs() > 0.005);
     for x in storey.shares.iter().filter(|x| !many || changed(x)) {
-        if let Some(wall) = marks.iter().position(|m| *m == x.mark) {
+        if let Some(&wall) = marks.get(x.mark.as_str()) {
             shares.push(sketch::Share { wall, before: percent(x.before), after: percent(x.after) });
         }
     }

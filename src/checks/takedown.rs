@@ -184,11 +184,9 @@ fn walls(b: &Building, down: &TakeDown) -> Table {
     let mut rows = Vec::new();
     let mut strong = Vec::new();
     for (k, storey) in b.storeys.iter().enumerate() {
-        for wall in b.plan.iter().filter(|w| stands_in(b, w, &storey.mark)) {
+        for (n, wall) in b.plan.iter().enumerate().filter(|(_, w)| stands_in(b, w, &storey.mark)) {
             let of = |state: &State| {
-                state
-                    .wall(b, &wall.mark, k)
-                    .map(|(w, on)| (length(w.place), on.head.total(), on.foot.total()))
+                state.of_plan(n, k).map(|(w, on)| (length(w.place), on.head.total(), on.foot.total()))
             };
             let (before, after) = (of(&down.before), of(&down.after));
             let Some((l, ..)) = before.or(after) else { continue };

@@ -95,7 +95,7 @@ impl Board {
             path.line_to(line.p1);
         }
         if !path.elements().is_empty() {
-            self.ground.soft.push(ring.to_vec());
+            self.ground.hatch(ring);
             self.items.push(Item::Stroke { pen: Pen::Hatch, path: Path(path) });
         }
     }

@@ -86,7 +86,9 @@ impl PlanWind {
 pub fn key_plans(views: &[KeyPlan; 2], row: Frame, alone: Frame) -> [Drawing; 2] {
     let out = |view: &KeyPlan| rows(&view.panels).into_iter().max().unwrap_or(0);
     let clear = ROW * out(&views[0]).max(out(&views[1])) as f64;
-    fit_pair(row, alone, 50.0, |scale| views.each_ref().map(|view| draw(view, clear, scale)))
+    fit_pair((row, alone), plan::size(&views[0].walls), 50.0, |scale| {
+        views.each_ref().map(|view| draw(view, clear, scale))
+    })
 }
 
 /// One plan; what stands around it stands `clear` mm farther out than usual.

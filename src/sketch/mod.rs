@@ -19,6 +19,7 @@ pub mod chain;
 pub mod dimension;
 pub mod drawing;
 pub mod footing;
+mod grid;
 pub mod ground;
 pub mod hatch;
 pub mod key_plan;
@@ -39,6 +40,7 @@ pub mod return_elevation;
 mod return_loads;
 pub mod return_section;
 mod return_stress;
+mod rings;
 #[cfg(test)]
 mod samples;
 pub mod scale;

@@ -9,6 +9,7 @@ use super::hatch::{self, Material};
 use super::load;
 use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
+use super::rings::{Rings, outside};
 use super::scale::Scale;
 use super::text::Text;
 
@@ -91,13 +92,10 @@ pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
 /// Draws walls: what stands in one body, what went dashed; on the plan before, short lines across what
 /// comes out show where it is cut.
 pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
-    let rings = |wanted: &dyn Fn(Fate) -> bool| -> Vec<(Fate, [Point; 4])> {
-        let chosen: Vec<&PlanWall> = walls.iter().filter(|w| wanted(w.fate)).collect();
-        chosen.iter().map(|w| (w.fate, to_corners(w, &chosen).ring(scale))).collect()
-    };
-    let standing = rings(&|fate| when.shows(fate));
-    let removed = rings(&|fate| when == When::After && fate == Fate::Removed);
-    for (index, (fate, ring)) in standing.iter().enumerate() {
+    let standing = Rings::new(walls.iter().filter(|w| when.shows(w.fate)), scale);
+    let removed = |w: &&PlanWall| when == When::After && w.fate == Fate::Removed;
+    let removed = Rings::new(walls.iter().filter(removed), scale);
+    for (index, (fate, ring)) in standing.all.iter().enumerate() {
         // Where two walls share ground, the later one leaves it to the earlier.
         let thick = (ring[0] - ring[3]).hypot();
         let added = *fate == Fate::Added;
@@ -107,14 +105,13 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
                 lines = hatch::diagonals(ring, CROSSED, 0.0, true);
                 lines.extend(hatch::diagonals(ring, CROSSED, 0.0, false));
             }
-            let earlier: Vec<_> = standing[..index].iter().map(|(_, ring)| *ring).collect();
+            let earlier = standing.touching(ring, |other| other < index);
             let lines = lines.into_iter().flat_map(|line| outside(line, &earlier)).collect();
             board.hatching(lines, ring);
         }
     }
-    outlines(board, Pen::Cut, &standing, &[]);
-    let solid: Vec<_> = standing.iter().map(|(_, ring)| *ring).collect();
-    outlines(board, Pen::Removed, &removed, &solid);
+    outlines(board, Pen::Cut, &standing, None);
+    outlines(board, Pen::Removed, &removed, Some(&standing));
     if when == When::Before {
         for wall in walls.iter().filter(|wall| wall.fate == Fate::Removed) {
             cuts(board, wall, scale);
@@ -134,98 +131,17 @@ fn cuts(board: &mut Board, wall: &PlanWall, scale: Scale) {
     }
 }
 
-/// How far walls that meet end to end run into each other, mm: they are one body, without a line between.
-const INTO: f64 = 1.0;
-
-/// The wall with its ends run on to the far faces of walls that it meets at a corner, and into walls that go
-/// on in its line.
-fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
-    let along = Vec2::new(wall.to.0 - wall.from.0, wall.to.1 - wall.from.1).normalize();
-    let run_on = |end: (f64, f64)| {
-        let reach = |other: &&PlanWall| {
-            let near = |p: (f64, f64)| (p.0 - end.0).hypot(p.1 - end.1) < 1.0;
-            let way = Vec2::new(other.to.0 - other.from.0, other.to.1 - other.from.1).normalize();
-            let turn = way.cross(along).abs();
-            match near(other.from) || near(other.to) {
-                true if turn > 0.99 => other.thickness / 2.0,
-                true if turn < 0.01 && !std::ptr::eq(*other, wall) => INTO,
-                _ => 0.0,
-            }
-        };
-        others.iter().map(reach).fold(0.0, f64::max)
-    };
-    let (back, ahead) = (along * run_on(wall.from), along * run_on(wall.to));
-    PlanWall {
-        from: (wall.from.0 - back.x, wall.from.1 - back.y),
-        to: (wall.to.0 + ahead.x, wall.to.1 + ahead.y),
-        ..wall.clone()
-    }
-}
-
-/// Outlines without the pieces that lie inside another wall.
-fn outlines(board: &mut Board, pen: Pen, rings: &[(Fate, [Point; 4])], solid: &[[Point; 4]]) {
-    for (index, (_, ring)) in rings.iter().enumerate() {
-        let mut others: Vec<[Point; 4]> = solid.to_vec();
-        others.extend(rings.iter().enumerate().filter(|(i, _)| *i != index).map(|(_, (_, r))| *r));
+/// Outlines without the pieces that lie inside another wall, or inside what stands.
+fn outlines(board: &mut Board, pen: Pen, rings: &Rings, solid: Option<&Rings>) {
+    for (index, (_, ring)) in rings.all.iter().enumerate() {
+        let mut others = solid.map_or_else(Vec::new, |solid| solid.touching(ring, |_| true));
+        others.extend(rings.touching(ring, |other| other != index));
         for side in 0..4 {
             let line = Line::new(ring[side], ring[(side + 1) % 4]);
             for piece in outside(line, &others) {
                 board.line(pen, piece.p0, piece.p1);
             }
         }
-    }
-}
-
-/// The pieces of a line outside all of the given convex rings.
-fn outside(line: Line, rings: &[[Point; 4]]) -> Vec<Line> {
-    let mut pieces = vec![(0.0_f64, 1.0_f64)];
-    for ring in rings {
-        let Some((enter, leave)) = within(line, ring) else {
-            continue;
-        };
-        pieces = pieces
-            .into_iter()
-            .flat_map(|(a, b)| [(a, b.min(enter)), (a.max(leave), b)])
-            .filter(|(a, b)| (b - a) * line.p0.distance(line.p1) > 0.02)
-            .collect();
-    }
-    pieces.into_iter().map(|(a, b)| Line::new(line.eval_at(a), line.eval_at(b))).collect()
-}
-
-/// The part of a line strictly inside a convex ring.
-fn within(line: Line, ring: &[Point; 4]) -> Option<(f64, f64)> {
-    let centre =
-        Point::new(ring.iter().map(|p| p.x).sum::<f64>() / 4.0, ring.iter().map(|p| p.y).sum::<f64>() / 4.0);
-    let (mut enter, mut leave) = (0.0_f64, 1.0_f64);
-    for side in 0..4 {
-        let (a, b) = (ring[side], ring[(side + 1) % 4]);
-        let mut normal = (b - a).turn_90().normalize();
-        if normal.dot(centre - a) < 0.0 {
-            normal = -normal;
-        }
-        // A line along a face is not inside: both walls show it, one on the other.
-        let (from, step) = (normal.dot(line.p0 - a) - 1e-6, normal.dot(line.p1 - line.p0));
-        if step.abs() < 1e-12 {
-            if from <= 0.0 {
-                return None;
-            }
-        } else {
-            let at = -from / step;
-            if step > 0.0 { enter = enter.max(at) } else { leave = leave.min(at) }
-        }
-    }
-    (enter < leave).then_some((enter, leave))
-}
-
-/// Helper on lines.
-trait At {
-    /// The point at a share of the length.
-    fn eval_at(&self, share: f64) -> Point;
-}
-
-impl At for Line {
-    fn eval_at(&self, share: f64) -> Point {
-        self.p0.lerp(self.p1, share)
     }
 }
 
@@ -277,6 +193,12 @@ pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
         .spot(Spot::new((middle.x, middle.y - 3.0 - y), 0.0, -1.0).cost(1.0))
         .spot(Spot::new((middle.x + 3.0 + x, middle.y), 1.0, 0.0).cost(1.0));
     board.note(note.rank(1));
+}
+
+/// Width and height that walls cover, full size, mm.
+pub fn size(walls: &[PlanWall]) -> (f64, f64) {
+    let extent = extent(walls, Scale(1.0));
+    (extent.width(), extent.height())
 }
 
 /// Extent of walls on the paper.

@@ -36,10 +36,12 @@ pub struct Share {
     pub after: Option<String>,
 }
 
-/// Draws the plan before and after at one scale, each with its shares; `frame` is that of a row of both, or
-/// of one of them where they stand one above the other.
-pub fn stability_plans(view: &StabilityPlan, frame: Frame, stacked: Frame) -> [Drawing; 2] {
-    fit_pair(frame, stacked, 50.0, |scale| [When::Before, When::After].map(|when| draw(view, when, scale)))
+/// Draws the plan before and after at one scale, each with its shares: in `row` beside each other, or each within
+/// `alone` one above the other, whichever is larger.
+pub fn stability_plans(view: &StabilityPlan, row: Frame, alone: Frame) -> [Drawing; 2] {
+    fit_pair((row, alone), plan::size(&view.walls), 50.0, |scale| {
+        [When::Before, When::After].map(|when| draw(view, when, scale))
+    })
 }
 
 fn draw(view: &StabilityPlan, when: When, scale: Scale) -> Drawing {
