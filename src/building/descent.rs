@@ -86,6 +86,13 @@ impl State {
         let i = self.walls.iter().position(|s| s.storey == storey && b.plan[s.wall].mark == mark)?;
         Some((&self.model.walls[i], &self.down.walls[i]))
     }
+
+    /// Plan wall number `wall` in storey number `storey`, with what it carries.
+    pub fn of_plan(&self, wall: usize, storey: usize) -> Option<(&Wall, &descent::OnWall)> {
+        // Walls stand in the order of the plan, each from storey to storey.
+        let i = self.walls.binary_search_by_key(&(wall, storey), |s| (s.wall, s.storey)).ok()?;
+        Some((&self.model.walls[i], &self.down.walls[i]))
+    }
 }
 
 impl TakeDown {

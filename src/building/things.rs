@@ -273,6 +273,9 @@ pub struct Edge {
 pub struct Span {
     /// Length between vertical supports.
     pub length: Length,
+    /// Where it begins and ends along its plan wall, in the plan's x or y, smaller first; none where the job
+    /// does not name the walls that hold it.
+    pub ends: Option<(Length, Length)>,
     /// Top edge.
     pub top: Edge,
     /// Base edge.
@@ -307,8 +310,6 @@ pub struct Panel {
     pub height: Length,
     /// Plan wall it belongs to.
     pub on: Option<String>,
-    /// Where it lies after the removal, in x or y of the plan, as far as that is known.
-    pub range: Option<(Length, Length)>,
     /// Dead load per length on the loaded leaf at the top of the panel.
     pub dead_above: LineLoad,
     /// Own net pressure instead of the site's.

@@ -176,7 +176,7 @@ fn differences(b: &Building) -> Vec<Vec<String>> {
         own.map_or_else(Vec::new, |r| of_return(r, f))
     });
     let of_panels = b.found.panels.iter().flat_map(|f| {
-        found::treated(b, f).filter(|p| p.range.is_some()).map_or_else(Vec::new, |p| of_panel(p, f))
+        found::treated(b, f).filter(|p| p.after.ends.is_some()).map_or_else(Vec::new, |p| of_panel(p, f))
     });
     of_returns.chain(of_panels).collect()
 }

@@ -29,8 +29,9 @@ mod place;
 mod return_sheet;
 mod return_views;
 mod shapes;
+mod spans;
 
-use crate::building::Building;
+use crate::building::{Building, TakeDown, take_down};
 use crate::sketch::Drawing;
 use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
@@ -67,6 +68,8 @@ pub struct Job<'a> {
     pub annex: Annex,
     /// Wind on the site.
     pub wind: Result<Pressures, Outside>,
+    /// Loads led down, where its plan has floors.
+    pub down: Option<TakeDown>,
     /// The storey's sharing, where it is given.
     pub storey: Option<Result<Storey, Outside>>,
     /// The whole building against wind, where its plan has floors.
@@ -87,7 +90,9 @@ impl<'a> Job<'a> {
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
         let holds = outcome::holds(building);
-        let mut job = Self { building, annex, wind, storey, whole: Vec::new(), piers: Vec::new(), holds };
+        let down = take_down(building).and_then(Result::ok);
+        let mut job =
+            Self { building, annex, wind, down, storey, whole: Vec::new(), piers: Vec::new(), holds };
         job.whole = whole::of(&job);
         let found = whole::holds(&job);
         outcome::add(&mut job.holds, found);

@@ -1,11 +1,13 @@
-//! The key plan: walls, what comes out, and where every mark is.
+//! The key plan before and after: walls, what comes out, and where every mark is.
 
-use super::{Job, Section, place};
-use crate::building::{Along, At, Building, PlanWall, stands_in};
-use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanSpan, PlanWind};
+use super::{Job, Section, place, spans};
+use crate::building::{Along, At, Building, PlanWall, Return, stands_in};
+use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind, When, key_plans};
 use crate::trace::Sheet;
 
-const FRAME: Frame = Frame::new(160.0, 108.0);
+/// Frame on the sheet of two plans side by side, and of one that stands alone, mm.
+const ROW: Frame = Frame::new(170.0, 150.0);
+const ALONE: Frame = Frame::new(170.0, 108.0);
 
 /// The key plan, where the job gives walls as lines.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
@@ -13,55 +15,71 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     if b.plan.is_empty() {
         return Vec::new();
     }
+    let plans = key_plans(&[When::Before, When::After].map(|when| view(job, when)), ROW, ALONE);
     let mut sheet = Sheet::recorder();
-    sheet.drawings(&["key-plan"]);
-    let mut drawing = sketch::key_plan(&view(b), FRAME);
-    drawing.name = "key-plan".to_owned();
+    sheet.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));
     let mut section = Section::plain("plan", "Key plan", sheet);
-    section.drawings.push(drawing);
+    section.drawings.extend(plans);
     vec![section]
 }
 
-fn view(b: &Building) -> KeyPlan {
-    let here = |w: &&PlanWall| stands_in(b, w, &b.removed.storey);
-    let mut walls: Vec<sketch::PlanWall> = b.plan.iter().filter(here).map(|w| wall(b, w)).collect();
-    let mut marks: Vec<PlanMark> = Vec::new();
-    for r in &b.returns {
-        if let Some((from, to)) = place::of_return(b, r) {
-            marks.push(PlanMark { mark: r.mark.clone(), from, to });
-            // A return that is a wall of the plan is drawn already.
-            if from != to && !b.plan.iter().any(|w| w.mark == r.mark) {
-                walls.push(sketch::PlanWall {
-                    name: String::new(),
-                    from,
-                    to,
-                    thickness: thickness(b, &r.build_up),
-                    fate: Fate::Stays,
-                });
-            }
-        }
-    }
+/// One of the two plans. Returns, beams and panels as they are afterwards have their marks on the plan after.
+fn view(job: &Job<'_>, when: When) -> KeyPlan {
+    let b = job.building;
+    let after = when == When::After;
+    let walls = walls(b, &b.removed.storey, when);
+    let marks = b.returns.iter().filter_map(|r| {
+        place::of_return(b, r).filter(|_| after).map(|(from, to)| PlanMark { mark: r.mark.clone(), from, to })
+    });
+    let place = if after { place::of_panel } else { place::of_panel_before };
     let panels = b
         .panels
         .iter()
-        .filter_map(|p| place::of_panel(b, p).map(|(from, to)| PlanMark { mark: p.mark.clone(), from, to }))
-        .collect();
+        .filter_map(|p| place(b, p).map(|(from, to)| PlanMark { mark: p.mark.clone(), from, to }));
     let winds = match b.stability.as_ref().map(|s| s.wind_along) {
         Some(Along::X) => vec![PlanWind::Rightwards, PlanWind::Leftwards],
         Some(Along::Y) => vec![PlanWind::Upwards, PlanWind::Downwards],
         None => Vec::new(),
     };
     KeyPlan {
-        name: "key-plan".to_owned(),
+        name: format!("key-plan-{}", when.word()),
         title: b.removed.storey.clone(),
+        when,
         walls,
-        marks,
-        panels,
-        beams: beams(b),
-        spans: spans(b),
+        marks: marks.collect(),
+        panels: panels.collect(),
+        beams: if after { beams(b) } else { Vec::new() },
+        spans: job.down.as_ref().map_or_else(Vec::new, |down| spans::of(b, down, &b.removed.storey, after)),
         north: b.north,
         winds,
     }
+}
+
+/// The walls of a storey with the returns among them. On the plan before a return has no name: it is part of
+/// the wall as it stands.
+fn walls(b: &Building, storey: &str, when: When) -> Vec<sketch::PlanWall> {
+    let here = b.plan.iter().filter(|w| stands_in(b, w, storey));
+    let mut walls: Vec<sketch::PlanWall> = here.map(|w| wall(b, w)).collect();
+    for r in &b.returns {
+        match walls.iter_mut().find(|w| w.name == r.mark) {
+            Some(wall) if when == When::Before => wall.name.clear(),
+            Some(_) => {}
+            None => walls.extend(return_wall(b, r).map(|w| sketch::PlanWall { name: String::new(), ..w })),
+        }
+    }
+    walls
+}
+
+/// A return as a wall of the plan; nothing where the job does not say where it lies.
+pub(super) fn return_wall(b: &Building, r: &Return) -> Option<sketch::PlanWall> {
+    let (from, to) = place::of_return(b, r).filter(|(from, to)| from != to)?;
+    Some(sketch::PlanWall {
+        name: r.mark.clone(),
+        from,
+        to,
+        thickness: thickness(b, &r.build_up),
+        fate: Fate::Stays,
+    })
 }
 
 fn point(at: At) -> (f64, f64) {
@@ -74,21 +92,7 @@ fn beams(b: &Building) -> Vec<PlanMark> {
         .collect()
 }
 
-fn spans(b: &Building) -> Vec<PlanSpan> {
-    let here = b.floors.iter().filter(|f| f.storey == b.removed.storey);
-    here.map(|f| {
-        let (a, z) = (point(f.from), point(f.to));
-        PlanSpan {
-            mark: f.mark.clone(),
-            from: (a.0.min(z.0), a.1.min(z.1)),
-            to: (a.0.max(z.0), a.1.max(z.1)),
-            along_x: f.spans == Along::X,
-        }
-    })
-    .collect()
-}
-
-pub(super) fn thickness(b: &Building, build_up: &str) -> f64 {
+fn thickness(b: &Building, build_up: &str) -> f64 {
     b.build_up(build_up).map_or(100.0, |u| u.thickness().base())
 }
 

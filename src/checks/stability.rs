@@ -1,11 +1,13 @@
 //! The storey's wind, every bracing wall's share of it, before and after the removal.
 
+use super::plan;
+use std::collections::HashMap;
+
 use super::wind::Pressures;
-use super::{place, plan};
 use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands, stands_in};
 use crate::quantity::functions::{metres, sqrt};
 use crate::quantity::{Force, Length, print};
-use crate::sketch::{self, Drawing, Fate, Frame, PlanWind, StabilityPlan, stability_plan};
+use crate::sketch::{self, Drawing, Frame, PlanWind, StabilityPlan, stability_plans};
 use crate::solve::torsion::{self, Bracing, Push};
 use crate::standards::annex::Annex;
 use crate::trace::{Column, Outside, Sheet, Table};
@@ -13,8 +15,9 @@ use crate::{calc, given};
 
 /// As many shares as can be read on a plan.
 const MANY: usize = 40;
-/// Frame on the sheet, mm.
-const FRAME: Frame = Frame::new(146.0, 110.0);
+/// Frame on the sheet of two plans side by side, and of one that stands alone, mm.
+const ROW: Frame = Frame::new(170.0, 120.0);
+const ALONE: Frame = Frame::new(170.0, 80.0);
 
 /// What one wall takes.
 #[derive(Clone, Debug, PartialEq)]
@@ -90,19 +93,27 @@ pub fn share(
     );
     let before = shares(b, st, Stands::Before)?;
     let after = shares(b, st, Stands::After)?;
+    // The first of each mark, as a search through the list would find it.
+    let by_mark = |rows: Vec<Row>| {
+        let mut found: HashMap<String, (f64, Option<Length>)> = HashMap::new();
+        rows.into_iter().for_each(|(mark, share, width)| {
+            found.entry(mark).or_insert((share, width));
+        });
+        found
+    };
+    let (before, after) = (by_mark(before), by_mark(after));
     let list: Vec<Share> = st
         .walls
         .iter()
         .filter(|w| w.along == st.wind_along)
         .map(|w| {
-            let find = |v: &[(String, f64, Option<Length>)]| v.iter().find(|x| x.0 == w.mark).cloned();
-            let (b, a) = (find(&before), find(&after));
+            let (b, a) = (before.get(&w.mark), after.get(&w.mark));
             Share {
                 mark: w.mark.clone(),
-                before: b.as_ref().map(|x| x.1),
-                after: a.as_ref().map(|x| x.1),
-                width_before: b.and_then(|x| x.2),
-                width_after: a.and_then(|x| x.2),
+                before: b.map(|x| x.0),
+                after: a.map(|x| x.0),
+                width_before: b.and_then(|x| x.1),
+                width_after: a.and_then(|x| x.1),
             }
         })
         .collect();
@@ -248,9 +259,9 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     let mut drawings = Vec::new();
     match share(&mut s, job.building, st, *wind, &job.annex) {
         Ok(storey) => {
-            if let Some(drawing) = drawn(job.building, st, &storey) {
-                s.drawings(&[&drawing.name]);
-                drawings.push(drawing);
+            if let Some(plans) = drawn(job.building, st, &storey) {
+                s.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));
+                drawings.extend(plans);
             }
         }
         Err(outside) => s.leave(outside),
@@ -259,27 +270,25 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     vec![super::Section { drawings, ..section }]
 }
 
-/// The plan with each bracing wall's share; none where the plan shows no bracing wall.
-fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<Drawing> {
+/// The plans with each bracing wall's share; none where the plan shows no bracing wall.
+fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<[Drawing; 2]> {
     let here: Vec<&crate::building::PlanWall> =
         b.plan.iter().filter(|w| stands_in(b, w, &st.storey)).collect();
     let mut walls: Vec<sketch::PlanWall> = here.iter().map(|w| plan::wall(b, w)).collect();
-    let marks: Vec<&str> = here.iter().map(|w| w.mark.as_str()).collect();
+    // A return that is no line of the plan is drawn where its mark lies.
+    let others = b.returns.iter().filter(|r| r.storey == st.storey && !here.iter().any(|w| w.mark == r.mark));
+    walls.extend(others.filter_map(|r| plan::return_wall(b, r)));
+    let mut marks: HashMap<&str, usize> = HashMap::new();
+    for (n, wall) in walls.iter().enumerate() {
+        marks.entry(wall.name.as_str()).or_insert(n);
+    }
     let percent = |x: Option<f64>| x.map(|p| format!("{:.0} %", p * 100.0));
     let mut shares = Vec::new();
     // Of very many walls those are drawn whose share changes: the table has them all.
     let many = storey.shares.len() > MANY;
     let changed = |x: &Share| x.before.zip(x.after).is_none_or(|(b, a)| (b - a).abs() > 0.005);
     for x in storey.shares.iter().filter(|x| !many || changed(x)) {
-        let place = marks.iter().position(|m| *m == x.mark).or_else(|| {
-            // A return is no line of the plan: it is drawn where its mark lies.
-            let r = b.returns.iter().find(|r| r.mark == x.mark)?;
-            let (from, to) = place::of_return(b, r).filter(|(a, b)| a != b)?;
-            let thickness = plan::thickness(b, &r.build_up);
-            walls.push(sketch::PlanWall { name: r.mark.clone(), from, to, thickness, fate: Fate::Stays });
-            Some(walls.len() - 1)
-        });
-        if let Some(wall) = place {
+        if let Some(&wall) = marks.get(x.mark.as_str()) {
             shares.push(sketch::Share { wall, before: percent(x.before), after: percent(x.after) });
         }
     }
@@ -292,7 +301,5 @@ fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<Drawing> {
     };
     let view =
         StabilityPlan { name: "stability-plan".to_owned(), title: st.storey.clone(), walls, shares, wind };
-    let mut drawing = stability_plan(&view, FRAME);
-    drawing.name = "stability-plan".to_owned();
-    Some(drawing)
+    Some(stability_plans(&view, ROW, ALONE))
 }

@@ -2,7 +2,7 @@
 
 use super::shapes::leaf_material;
 use super::{Job, Section};
-use crate::building::{Building, State, TakeDown, line_of, stands_in, storey_height, take_down};
+use crate::building::{Building, State, TakeDown, line_of, stands_in, storey_height};
 use crate::quantity::{Force, LineLoad, print};
 use crate::sketch::hatch::Material;
 use crate::sketch::{Drawing, Frame, LoadStack, StackStorey, StackWall, load_stack};
@@ -12,7 +12,7 @@ use crate::trace::{Column, Sheet, Table};
 /// The take-down sheet, where the job gives floors on its plan.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let b = job.building;
-    let Some(Ok(down)) = take_down(b) else { return Vec::new() };
+    let Some(down) = &job.down else { return Vec::new() };
     let mut s = Sheet::recorder();
     s.note(
         "Characteristic loads, led down by statics. Floors and roofs span one way, as simple spans between the walls \
@@ -24,7 +24,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     s.table(|| weights(b));
     s.table(|| floors(b));
     s.heading(1, "What walls carry");
-    s.table(|| walls(b, &down));
+    s.table(|| walls(b, down));
     if !b.beams.is_empty() {
         s.heading(1, "Beams and their ends");
         s.table(|| beams(b, &down.after));
@@ -51,10 +51,10 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         });
     }
     s.heading(1, "What goes in comes out");
-    s.table(|| balance(&down));
-    given_by_hand(&mut s, b, &down);
+    s.table(|| balance(down));
+    given_by_hand(&mut s, b, down);
     let mut section = Section::plain("takedown", "Load take-down", s);
-    section.drawings.extend(stack(b, &down));
+    section.drawings.extend(stack(b, down));
     vec![section]
 }
 
@@ -184,11 +184,9 @@ fn walls(b: &Building, down: &TakeDown) -> Table {
     let mut rows = Vec::new();
     let mut strong = Vec::new();
     for (k, storey) in b.storeys.iter().enumerate() {
-        for wall in b.plan.iter().filter(|w| stands_in(b, w, &storey.mark)) {
+        for (n, wall) in b.plan.iter().enumerate().filter(|(_, w)| stands_in(b, w, &storey.mark)) {
             let of = |state: &State| {
-                state
-                    .wall(b, &wall.mark, k)
-                    .map(|(w, on)| (length(w.place), on.head.total(), on.foot.total()))
+                state.of_plan(n, k).map(|(w, on)| (length(w.place), on.head.total(), on.foot.total()))
             };
             let (before, after) = (of(&down.before), of(&down.after));
             let Some((l, ..)) = before.or(after) else { continue };

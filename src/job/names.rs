@@ -1,5 +1,7 @@
 //! Names that one part of the file gives and another refers to.
 
+use std::collections::HashMap;
+
 use super::entry::{Entry, one_line, quoted};
 use super::limits::{nearest, one_of};
 use super::reader::{Reader, Span, Table};
@@ -21,12 +23,16 @@ pub struct Seen<'a, T> {
 pub struct Names<'a, T> {
     what: &'static str,
     seen: Vec<Seen<'a, T>>,
+    /// The first of each name.
+    by_name: HashMap<String, usize>,
+    /// The same without regard to case.
+    by_lower: HashMap<String, usize>,
 }
 
 impl<'a, T> Names<'a, T> {
     /// No things yet; `what` is the singular.
     pub fn new(what: &'static str) -> Self {
-        Self { what, seen: Vec::new() }
+        Self { what, seen: Vec::new(), by_name: HashMap::new(), by_lower: HashMap::new() }
     }
 
     /// Reads tables that carry a `mark`, and records marks that stand twice.
@@ -43,19 +49,22 @@ impl<'a, T> Names<'a, T> {
             let Some(name) = name else { continue };
             let place = table.place("mark");
             names.refuse_twice(table.reader, &name, &place);
-            names.seen.push(Seen { name, place, table, item });
+            names.push(Seen { name, place, table, item });
         }
         names
     }
 
     /// Adds a thing.
     pub fn push(&mut self, seen: Seen<'a, T>) {
+        let n = self.seen.len();
+        self.by_name.entry(seen.name.clone()).or_insert(n);
+        self.by_lower.entry(seen.name.to_lowercase()).or_insert(n);
         self.seen.push(seen);
     }
 
     /// Records `name` as a second use of a name that is already here; case does not tell marks apart.
     pub fn refuse_twice(&self, reader: &Reader, name: &str, place: &Span) {
-        let Some(first) = self.seen.iter().find(|s| s.name.to_lowercase() == name.to_lowercase()) else {
+        let Some(first) = self.by_lower.get(&name.to_lowercase()).map(|n| &self.seen[*n]) else {
             return;
         };
         reader
@@ -78,7 +87,7 @@ impl<'a, T> Names<'a, T> {
 
     /// The thing of that name.
     pub fn get(&self, name: &str) -> Option<&Seen<'a, T>> {
-        self.seen.iter().find(|s| s.name == name)
+        self.by_name.get(name).map(|n| &self.seen[*n])
     }
 
     /// What was read of the thing of that name.
@@ -89,7 +98,7 @@ impl<'a, T> Names<'a, T> {
     /// The name that an entry refers to; one that is not here is recorded with the nearest.
     pub fn refer(&self, entry: &Entry<'a>) -> Option<String> {
         let name = entry.line()?;
-        known(entry, &name, self.what, &self.list()).then_some(name)
+        (self.by_name.contains_key(&name) || known(entry, &name, self.what, &self.list())).then_some(name)
     }
 
     /// The names.

@@ -65,7 +65,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     let wall_at = wall_at.or(found.map(|f| f.wall_at));
     let after = read_side(after_table.as_ref(), around, wall_on, drawn.map(|(f, s)| (&f.after, s)));
     let before = before.map(|r| r.span);
-    let (range, edges_taken) = after.as_ref().map_or((None, false), |r| (r.range, r.taken));
+    let edges_taken = after.as_ref().is_some_and(|r| r.taken);
     let after = after.map(|r| r.span);
     let arching = arching(t, route);
 
@@ -111,7 +111,6 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
         storey: storey?,
         height: height?,
         on,
-        range,
         dead_above: dead_above?,
         wind,
         route: route?,
@@ -133,8 +132,6 @@ fn side<'a>(t: &Table<'a>, key: &'static str, shown: bool) -> Option<Table<'a>> 
 /// A side of the panel as read.
 struct ReadSide {
     span: Span,
-    /// Where it lies on the plan.
-    range: Option<(Length, Length)>,
     /// Whether an edge comes from the plan.
     taken: bool,
 }
@@ -147,9 +144,9 @@ fn read_side<'a>(
 ) -> Option<ReadSide> {
     let Some(own) = own else {
         let (span, storey) = shown?;
-        return Some(ReadSide { span: found::span(span, storey), range: Some(span.range), taken: true });
+        return Some(ReadSide { span: found::span(span, storey), taken: true });
     };
-    let mut range = None;
+    let mut ends = None;
     let length = match (on, shown) {
         (Some(wall), _) if around.led && own.has("between") => {
             if own.has("length") {
@@ -157,11 +154,11 @@ fn read_side<'a>(
                     .allowed("`length`, or `between` with the two walls of the plan that hold its ends")
                     .help("take one of the two out");
             }
-            range = between(own, around, wall);
-            range.map(|(a, z)| z - a)
+            ends = between(own, around, wall);
+            ends.map(|(a, z)| z - a)
         }
         (_, Some((span, _))) if !own.has("length") => {
-            range = Some(span.range);
+            ends = Some(span.range);
             Some(span.length())
         }
         _ => own.need("length").quantity(&LENGTH),
@@ -180,8 +177,8 @@ fn read_side<'a>(
     let left = edge("left", drawn.as_ref().map(|d| d.left.clone()));
     let right = edge("right", drawn.as_ref().map(|d| d.right.clone()));
     own.finish();
-    let span = Span { length: length?, top: top?, base: base?, left: left?, right: right? };
-    Some(ReadSide { span, range, taken })
+    let span = Span { length: length?, ends, top: top?, base: base?, left: left?, right: right? };
+    Some(ReadSide { span, taken })
 }
 
 /// The panel of the plan that this one is: the one between the walls named, or the only one of its wall.
@@ -237,7 +234,7 @@ fn pairs(all: &[&FoundPanel]) -> String {
     all.iter().map(pair).collect::<Vec<_>>().join(" or ")
 }
 
-/// From line to line of two plan walls that meet the wall of the panel.
+/// The lines of two plan walls that meet the wall of the panel, smaller first.
 fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<(Length, Length)> {
     let entry = t.need("between");
     let wanted = "the two walls of the plan that hold its ends: [\"party wall\", \"R1\"]";

@@ -23,6 +23,8 @@ pub struct Board {
     items: Vec<Item>,
     notes: Vec<Note>,
     ground: Ground,
+    /// Paper that the drawing takes even where nothing is drawn.
+    kept: Option<Rect>,
 }
 
 /// The words that go with a finished drawing.
@@ -75,6 +77,11 @@ impl Board {
         self.ground.bar(&polygon(&[a, c, b, d]), 0.0);
     }
 
+    /// Takes paper for the drawing even where nothing is drawn, so that drawings side by side hang from one line.
+    pub fn keep(&mut self, area: Rect) {
+        self.kept = Some(self.kept.map_or(area, |kept| kept.union(area)));
+    }
+
     /// Hatches a closed polygon as cut masonry.
     pub fn hatch(&mut self, material: Material, ring: &[Point]) {
         self.hatching(hatch::masonry(material, ring), ring);
@@ -88,7 +95,7 @@ impl Board {
             path.line_to(line.p1);
         }
         if !path.elements().is_empty() {
-            self.ground.soft.push(ring.to_vec());
+            self.ground.hatch(ring);
             self.items.push(Item::Stroke { pen: Pen::Hatch, path: Path(path) });
         }
     }
@@ -108,7 +115,7 @@ impl Board {
             Item::Fill { path, .. } => path.0.bounding_box(),
             Item::Label(label) => label.area(),
         });
-        boxes.reduce(|a, b| a.union(b)).unwrap_or(Rect::ZERO)
+        boxes.chain(self.kept).reduce(|a, b| a.union(b)).unwrap_or(Rect::ZERO)
     }
 
     /// Places the labels, moves everything into the frame and hands over the drawing.

@@ -1,6 +1,9 @@
 //! What labels must keep off: lines and filled areas, and hatching that a label would hide.
 
-use kurbo::{BezPath, Line, PathEl, Point, Rect};
+use kurbo::{BezPath, Line, PathEl, Point, Rect, Shape};
+
+use super::board::polygon;
+use super::grid::Grid;
 
 /// Clear space between a label and the edge of a line, mm.
 const OFF_LINE: f64 = 0.3;
@@ -10,8 +13,10 @@ const OFF_LINE: f64 = 0.3;
 pub struct Ground {
     /// Pieces of line with half their width.
     bars: Vec<(Line, f64)>,
+    by_place: Grid,
     /// Hatched areas, as closed rings.
-    pub soft: Vec<Vec<Point>>,
+    soft: Vec<Vec<Point>>,
+    soft_by_place: Grid,
 }
 
 impl Ground {
@@ -21,28 +26,41 @@ impl Ground {
         kurbo::flatten(path, 0.05, |element| match element {
             PathEl::MoveTo(p) => (start, last) = (p, p),
             PathEl::LineTo(p) => {
-                self.bars.push((Line::new(last, p), half_width));
+                self.line(Line::new(last, p), half_width);
                 last = p;
             }
             PathEl::ClosePath => {
-                self.bars.push((Line::new(last, start), half_width));
+                self.line(Line::new(last, start), half_width);
                 last = start;
             }
             _ => {}
         });
     }
 
+    fn line(&mut self, line: Line, half_width: f64) {
+        self.by_place.add_line(line, half_width + OFF_LINE);
+        self.bars.push((line, half_width));
+    }
+
+    /// Adds a hatched area, a closed ring.
+    pub fn hatch(&mut self, ring: &[Point]) {
+        self.soft_by_place.add(polygon(ring).bounding_box());
+        self.soft.push(ring.to_vec());
+    }
+
     /// Whether a label cannot stand there.
     pub fn blocks(&self, area: Rect) -> bool {
-        self.bars.iter().any(|(line, half)| {
+        self.by_place.any_near(area, |n| {
+            let (line, half) = self.bars[n];
             let reach = half + OFF_LINE;
-            crosses(*line, area.inflate(reach, reach))
+            crosses(line, area.inflate(reach, reach))
         })
     }
 
     /// Whether any hatching lies under an area.
     pub fn hatched(&self, area: Rect) -> bool {
-        self.soft.iter().any(|ring| {
+        self.soft_by_place.any_near(area, |n| {
+            let ring = &self.soft[n];
             let sides = ring.iter().zip(ring.iter().cycle().skip(1));
             let crossed = sides.clone().any(|(a, b)| crosses(Line::new(*a, *b), area));
             // Even-odd: a ring does not cross itself.
@@ -57,7 +75,8 @@ impl Ground {
 
     /// How many pieces of line a leader runs across.
     pub fn crossed_by(&self, leader: Line) -> usize {
-        self.bars.iter().filter(|(line, _)| meet(leader, *line)).count()
+        let near = self.by_place.along(leader);
+        near.into_iter().filter(|n| meet(leader, self.bars[*n].0)).count()
     }
 }
 

@@ -1,25 +1,27 @@
-//! The plan that everything else refers to: walls, returns and panels with their marks.
+//! The plan that everything else refers to, before and after: walls, returns and panels with their marks.
 
-use kurbo::{Point, Vec2};
+use kurbo::{Point, Rect, Vec2};
 
 use super::board::{Board, Words};
 use super::dimension::{self, mm};
 use super::drawing::{Drawing, Role};
 use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::plan::{self, Fate, PlanWall, paper, wall_note};
-use super::scale::{Frame, Scale, fit};
+use super::plan::{self, Fate, PlanWall, When, paper, wall_note};
+use super::scale::{Frame, Scale, fit_pair};
 use super::text::Text;
 use super::view::list;
 
 /// What the key plan shows. Places in mm, x to the right, y up the sheet.
 #[derive(Clone, Debug)]
 pub struct KeyPlan {
-    /// Identifier of the drawing: `key-plan`, `ground-floor`.
+    /// Identifier of the drawing: `key-plan-before`.
     pub name: String,
     /// Which floor: `ground floor`.
     pub title: String,
-    /// Walls; a return is a wall too.
+    /// Before the removal or after it.
+    pub when: When,
+    /// Walls, those that go and come as well; a return is a wall too.
     pub walls: Vec<PlanWall>,
     /// Marks of returns.
     pub marks: Vec<PlanMark>,
@@ -27,8 +29,8 @@ pub struct KeyPlan {
     pub panels: Vec<PlanMark>,
     /// Beams and padstones, as centre lines with their mark.
     pub beams: Vec<PlanMark>,
-    /// Floors with the way they span; may be empty.
-    pub spans: Vec<PlanSpan>,
+    /// Floors, one line from support to support for each span.
+    pub spans: Vec<PlanMark>,
     /// Where north is, degrees clockwise from the top of the sheet.
     pub north: f64,
     /// Wind directions considered.
@@ -44,19 +46,6 @@ pub struct PlanMark {
     pub from: (f64, f64),
     /// End of the stretch, mm.
     pub to: (f64, f64),
-}
-
-/// A floor on the plan: an arrow with two heads shows the way it spans.
-#[derive(Clone, Debug)]
-pub struct PlanSpan {
-    /// `F1`.
-    pub mark: String,
-    /// Least x and y, mm.
-    pub from: (f64, f64),
-    /// Greatest x and y, mm.
-    pub to: (f64, f64),
-    /// Spans along x; along y otherwise.
-    pub along_x: bool,
 }
 
 /// A wind arrow at an edge of the plan.
@@ -92,67 +81,80 @@ impl PlanWind {
     }
 }
 
-/// Draws the key plan.
-pub fn key_plan(view: &KeyPlan, frame: Frame) -> Drawing {
-    fit(frame, 50.0, |scale| draw(view, scale))
+/// Draws the key plan before and after at one scale: in `row` beside each other, or each within `alone` one
+/// above the other, whichever is larger.
+pub fn key_plans(views: &[KeyPlan; 2], row: Frame, alone: Frame) -> [Drawing; 2] {
+    let out = |view: &KeyPlan| rows(&view.panels).into_iter().max().unwrap_or(0);
+    let clear = ROW * out(&views[0]).max(out(&views[1])) as f64;
+    fit_pair((row, alone), plan::size(&views[0].walls), 50.0, |scale| {
+        views.each_ref().map(|view| draw(view, clear, scale))
+    })
 }
 
-fn draw(view: &KeyPlan, scale: Scale) -> Drawing {
+/// One plan; what stands around it stands `clear` mm farther out than usual.
+fn draw(view: &KeyPlan, clear: f64, scale: Scale) -> Drawing {
     let mut board = Board::default();
-    plan::walls(&mut board, &view.walls, scale);
+    plan::walls(&mut board, &view.walls, scale, view.when);
+    let half = scale.paper(view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max));
     for beam in &view.beams {
         let (from, to) = (paper(scale, beam.from), paper(scale, beam.to));
         board.line(Pen::Axis, from, to);
         board.note(stretch_note(from, to, 1.2, Text::mark(&beam.mark)));
     }
     for span in &view.spans {
-        spans(&mut board, span, scale);
+        arrow(&mut board, span, half, scale);
     }
     for mark in &view.marks {
         let (from, to) = (paper(scale, mark.from), paper(scale, mark.to));
-        let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
-        board.note(stretch_note(from, to, scale.paper(half) + 1.2, Text::mark(&mark.mark)).rank(1));
+        board.note(stretch_note(from, to, half + 1.2, Text::mark(&mark.mark)).rank(1));
     }
-    for panel in &view.panels {
-        stretch(&mut board, view, panel, scale);
+    for (panel, row) in view.panels.iter().zip(rows(&view.panels)) {
+        stretch(&mut board, view, panel, row, scale);
     }
     let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
     let told = |w: &PlanWall| view.walls.len() <= NAMED || w.fate != Fate::Stays;
-    for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name) && told(w)) {
-        let word = match wall.fate {
-            Fate::Stays => "",
-            Fate::Removed => " removed",
-            Fate::Added => " new",
-        };
-        let text = Text::plain(&format!("{}{word}", wall.name));
+    let there = |w: &PlanWall| view.when == When::After || view.when.shows(w.fate);
+    for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name) && told(w) && there(w)) {
+        let text = Text::plain(&format!("{}{}", wall.name, word(wall.fate, view.when)));
         board.note(wall_note(wall, scale, Note::new(Role::Note, Point::ZERO, text)));
     }
-    surroundings(&mut board, &view.walls, &view.winds, Some(view.north), scale, true);
+    let (before, after) = (view.when == When::Before, view.when == When::After);
+    let around = Around {
+        winds: if after { &view.winds } else { &[] },
+        north: before.then_some(view.north),
+        dimensions: before,
+        clear,
+    };
+    surroundings(&mut board, &view.walls, &around, scale);
+    // The north point stands over the one plan, wind over the other: both take as much.
+    let extent = plan::extent(&view.walls, scale);
+    board.keep(Rect { y0: extent.y0 - HEAD - clear, ..extent });
     board.finish(Words {
         name: view.name.clone(),
-        caption: format!("Key plan, {}{}", view.title, key(view)),
+        caption: format!("Key plan, {}, {} the removal{}", view.title, view.when.word(), key(view)),
         scale: scale.text(),
         alt: alt(view),
     })
 }
 
-/// The arrow of a floor, clear of the walls it spans between, off the middle where marks stand.
-fn spans(board: &mut Board, span: &PlanSpan, scale: Scale) {
+/// What is said behind the name of a wall.
+fn word(fate: Fate, when: When) -> &'static str {
+    match (fate, when) {
+        (Fate::Stays, _) => "",
+        (Fate::Removed, When::Before) => " comes out",
+        (Fate::Removed, When::After) => " removed",
+        (Fate::Added, _) => " new",
+    }
+}
+
+/// The arrow of one span of a floor, from face to face of the walls that it bears on.
+fn arrow(board: &mut Board, span: &PlanMark, half: f64, scale: Scale) {
     let (a, z) = (paper(scale, span.from), paper(scale, span.to));
-    let area = kurbo::Rect::from_points(a, z);
-    let (from, to) = match span.along_x {
-        true => {
-            let y = area.y0 + 0.62 * area.height();
-            (Point::new(area.x0 + 0.12 * area.width(), y), Point::new(area.x0 + 0.42 * area.width(), y))
-        }
-        false => {
-            let x = area.x0 + 0.24 * area.width();
-            (Point::new(x, area.y0 + 0.25 * area.height()), Point::new(x, area.y0 + 0.75 * area.height()))
-        }
-    };
+    let along = (z - a).normalize();
+    let clear = along * (half + 1.0).min((z - a).hypot() / 4.0);
+    let (from, to) = (a + clear, z - clear);
     board.line(Pen::Leader, from, to);
-    let along = (to - from).normalize() * 1.6;
-    for (tip, back) in [(from, along), (to, -along)] {
+    for (tip, back) in [(from, along * 1.6), (to, along * -1.6)] {
         for turn in [0.4, -0.4] {
             let (s, c) = f64::sin_cos(turn);
             board.line(Pen::Leader, tip, tip + Vec2::new(back.x * c - back.y * s, back.x * s + back.y * c));
@@ -164,18 +166,45 @@ fn spans(board: &mut Board, span: &PlanSpan, scale: Scale) {
 /// More walls than these are not all named: nobody could read it.
 const NAMED: usize = 60;
 
+/// Paper over a plan for the north point, mm.
+const HEAD: f64 = 18.5;
+
+/// Distance between the lines of panels that run beside each other, mm on paper.
+const ROW: f64 = 4.4;
+
+/// For each panel, how many rows farther out than the first its line runs, clear of the panels before it.
+fn rows(panels: &[PlanMark]) -> Vec<usize> {
+    let mut rows: Vec<usize> = Vec::new();
+    for (n, panel) in panels.iter().enumerate() {
+        let taken: Vec<usize> =
+            (0..n).filter(|i| run_together(&panels[*i], panel)).map(|i| rows[i]).collect();
+        rows.push((0..).find(|row| !taken.contains(row)).unwrap_or(0));
+    }
+    rows
+}
+
+/// Whether two stretches lie on one line and share some of it.
+fn run_together(a: &PlanMark, b: &PlanMark) -> bool {
+    let (from, to) = (Point::from(a.from), Point::from(a.to));
+    let along = (to - from).normalize();
+    let off = |p: (f64, f64)| along.cross(Point::from(p) - from).abs();
+    let on = |p: (f64, f64)| along.dot(Point::from(p) - from);
+    let (start, end) = (on(b.from).min(on(b.to)), on(b.from).max(on(b.to)));
+    off(b.from) < 1.0 && off(b.to) < 1.0 && start < (to - from).hypot() - 1.0 && end > 1.0
+}
+
 /// Distance of a panel's line from the thickest wall's face, mm on paper.
 const STRETCH: f64 = 2.2;
 
 /// The line that shows how far a panel runs, on the side away from the middle of the plan.
-fn stretch(board: &mut Board, view: &KeyPlan, panel: &PlanMark, scale: Scale) {
+fn stretch(board: &mut Board, view: &KeyPlan, panel: &PlanMark, row: usize, scale: Scale) {
     let (from, to) = (paper(scale, panel.from), paper(scale, panel.to));
     let along = (to - from).normalize();
     let side = along.turn_90();
     let centre = plan::extent(&view.walls, scale).center();
     let out = if (from.midpoint(to) - centre).dot(side) < 0.0 { -side } else { side };
     let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
-    let shift = out * (scale.paper(half) + STRETCH);
+    let shift = out * (scale.paper(half) + STRETCH + ROW * row as f64);
     board.line(Pen::Leader, from + shift, to + shift);
     for end in [from, to] {
         board.line(Pen::Leader, end + shift - out, end + shift + out);
@@ -207,44 +236,54 @@ fn stretch_note(from: Point, to: Point, off: f64, text: Text) -> Note {
     note
 }
 
+/// What stands around a plan.
+pub(super) struct Around<'a> {
+    /// Wind arrows.
+    pub winds: &'a [PlanWind],
+    /// North, degrees clockwise from the top of the sheet.
+    pub north: Option<f64>,
+    /// Overall dimensions.
+    pub dimensions: bool,
+    /// How much farther out than usual everything stands, mm on paper.
+    pub clear: f64,
+}
+
 /// Overall dimensions, wind arrows and north point around a plan.
-pub(super) fn surroundings(
-    board: &mut Board,
-    walls: &[PlanWall],
-    winds: &[PlanWind],
-    north: Option<f64>,
-    scale: Scale,
-    dimensions: bool,
-) {
+pub(super) fn surroundings(board: &mut Board, walls: &[PlanWall], around: &Around<'_>, scale: Scale) {
     let extent = plan::extent(walls, scale);
-    if dimensions {
+    let clear = around.clear;
+    if around.dimensions {
         let (w, h) = (extent.width() * scale.0, extent.height() * scale.0);
-        dimension::across(board, (extent.x0, extent.x1), extent.y1 + 11.0, extent.y1, mm(w));
-        dimension::up(board, (extent.y1, extent.y0), extent.x0 - 11.0, extent.x0, mm(h));
+        let out = 11.0 + clear;
+        dimension::across(board, (extent.x0, extent.x1), extent.y1 + out, extent.y1, mm(w));
+        dimension::up(board, (extent.y1, extent.y0), extent.x0 - out, extent.x0, mm(h));
     }
-    let (left, below) = if dimensions { (19.0, 18.0) } else { (5.0, 5.0) };
     let c = extent.center();
-    for wind in winds {
+    // Wind from the sides is drawn over the ends of the plan: beside them it would take the plan's room.
+    let over = extent.y0 - 7.0 - clear;
+    let second = if extent.width() < 40.0 { over - 6.0 } else { over };
+    for wind in around.winds {
         let tip = match wind {
-            PlanWind::Rightwards => Point::new(extent.x0 - left, c.y),
-            PlanWind::Leftwards => Point::new(extent.x1 + 9.0, c.y),
-            PlanWind::Upwards => Point::new(c.x, extent.y1 + below),
-            PlanWind::Downwards => Point::new(c.x, extent.y0 - 8.0),
+            PlanWind::Rightwards => Point::new(extent.x0 + plan::WIND, over),
+            PlanWind::Leftwards => Point::new(extent.x1 - plan::WIND, second),
+            PlanWind::Upwards => Point::new(c.x, extent.y1 + 5.0 + clear),
+            PlanWind::Downwards => Point::new(c.x, extent.y0 - 5.0 - clear),
         };
         plan::wind(board, tip, wind.along(), "wind");
     }
-    if let Some(north) = north {
-        plan::north(board, Point::new(extent.x1 + 14.0, extent.y0 + 3.0), north);
+    if let Some(north) = around.north {
+        plan::north(board, Point::new(extent.x1 - 4.0, extent.y0 - 10.5 - clear), north);
     }
 }
 
 fn key(view: &KeyPlan) -> String {
     let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
     let mut key = String::new();
+    let before = view.when == When::Before;
     if has(Fate::Removed) {
-        key += "; dashed: removed";
+        key += if before { "; thin lines across a wall: where it is cut" } else { "; dashed: removed" };
     }
-    if has(Fate::Added) {
+    if has(Fate::Added) && !before {
         key += "; crossed hatching: new";
     }
     if view.walls.len() > NAMED {
@@ -254,7 +293,7 @@ fn key(view: &KeyPlan) -> String {
         key += "; chain line: beam over";
     }
     if !view.spans.is_empty() {
-        key += "; arrows with two heads: the way floors over it span";
+        key += "; arrows with two heads: floors over it, from support to support";
     }
     key
 }
@@ -262,12 +301,18 @@ fn key(view: &KeyPlan) -> String {
 fn alt(view: &KeyPlan) -> String {
     let extent = plan::extent(&view.walls, Scale(1.0));
     let mut alt = format!(
-        "Key plan of the {}, {} mm by {} mm overall. ",
+        "Key plan of the {} {} the removal, {} mm by {} mm overall. ",
         view.title,
+        view.when.word(),
         mm(extent.width()),
         mm(extent.height())
     );
-    for (fate, word) in [(Fate::Stays, "stay"), (Fate::Removed, "removed"), (Fate::Added, "new")] {
+    let before = view.when == When::Before;
+    let gone = if before { "to come out" } else { "removed" };
+    for (fate, word) in [(Fate::Stays, "stay"), (Fate::Removed, gone), (Fate::Added, "new")] {
+        if before && !view.when.shows(fate) {
+            continue;
+        }
         let walls: Vec<String> = view
             .walls
             .iter()
@@ -283,15 +328,21 @@ fn alt(view: &KeyPlan) -> String {
     let marks: Vec<String> =
         view.marks.iter().chain(&view.panels).chain(&view.beams).map(|mark| mark.mark.clone()).collect();
     for span in &view.spans {
-        alt += &format!("Floor {} spans along {}. ", span.mark, if span.along_x { "x" } else { "y" });
+        let along = if span.from.1 == span.to.1 { "x" } else { "y" };
+        let length = (span.to.0 - span.from.0).hypot(span.to.1 - span.from.1);
+        alt += &format!("Floor {} spans {} mm along {along}. ", span.mark, mm(length));
     }
     if !marks.is_empty() {
         alt += &format!("Marked: {}. ", list(&marks));
     }
-    let winds: Vec<String> = view.winds.iter().map(|wind| wind.words().to_owned()).collect();
+    let after = view.when == When::After;
+    let winds: Vec<String> =
+        view.winds.iter().filter(|_| after).map(|wind| wind.words().to_owned()).collect();
     if !winds.is_empty() {
         alt += &format!("Wind arrows {}. ", list(&winds));
     }
-    alt += &format!("North is {} degrees clockwise from the top of the sheet.", mm(view.north));
-    alt
+    if before {
+        alt += &format!("North is {} degrees clockwise from the top of the sheet.", mm(view.north));
+    }
+    alt.trim_end().to_owned()
 }

@@ -9,6 +9,7 @@ use super::hatch::{self, Material};
 use super::load;
 use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
+use super::rings::{Rings, outside};
 use super::scale::Scale;
 use super::text::Text;
 
@@ -36,6 +37,27 @@ pub enum Fate {
     Removed,
     /// It is new.
     Added,
+}
+
+/// Which of two plans a drawing is.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum When {
+    /// As the walls stand: what will come out stands, what is new does not.
+    Before,
+    /// What came out is dashed, what is new is there.
+    After,
+}
+
+impl When {
+    /// Whether a wall is solid on this plan.
+    pub fn shows(self, fate: Fate) -> bool {
+        fate != if self == When::Before { Fate::Added } else { Fate::Removed }
+    }
+
+    /// The word for captions.
+    pub fn word(self) -> &'static str {
+        if self == When::Before { "before" } else { "after" }
+    }
 }
 
 /// Walls thinner than this on paper (mm) are not hatched: the lines would run together.
@@ -67,15 +89,13 @@ pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
     Point::new(scale.paper(x), -scale.paper(y))
 }
 
-/// Draws walls: what stays and comes in one body, what goes dashed.
-pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
-    let rings = |wanted: &dyn Fn(Fate) -> bool| -> Vec<(Fate, [Point; 4])> {
-        let chosen: Vec<&PlanWall> = walls.iter().filter(|w| wanted(w.fate)).collect();
-        chosen.iter().map(|w| (w.fate, to_corners(w, &chosen).ring(scale))).collect()
-    };
-    let standing = rings(&|fate| fate != Fate::Removed);
-    let removed = rings(&|fate| fate == Fate::Removed);
-    for (index, (fate, ring)) in standing.iter().enumerate() {
+/// Draws walls: what stands in one body, what went dashed; on the plan before, short lines across what
+/// comes out show where it is cut.
+pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
+    let standing = Rings::new(walls.iter().filter(|w| when.shows(w.fate)), scale);
+    let removed = |w: &&PlanWall| when == When::After && w.fate == Fate::Removed;
+    let removed = Rings::new(walls.iter().filter(removed), scale);
+    for (index, (fate, ring)) in standing.all.iter().enumerate() {
         // Where two walls share ground, the later one leaves it to the earlier.
         let thick = (ring[0] - ring[3]).hypot();
         let added = *fate == Fate::Added;
@@ -85,40 +105,37 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale) {
                 lines = hatch::diagonals(ring, CROSSED, 0.0, true);
                 lines.extend(hatch::diagonals(ring, CROSSED, 0.0, false));
             }
-            let earlier: Vec<_> = standing[..index].iter().map(|(_, ring)| *ring).collect();
+            let earlier = standing.touching(ring, |other| other < index);
             let lines = lines.into_iter().flat_map(|line| outside(line, &earlier)).collect();
             board.hatching(lines, ring);
         }
     }
-    outlines(board, Pen::Cut, &standing, &[]);
-    let solid: Vec<_> = standing.iter().map(|(_, ring)| *ring).collect();
-    outlines(board, Pen::Removed, &removed, &solid);
-}
-
-/// The wall with its ends run on to the far faces of walls that it meets at a corner.
-fn to_corners(wall: &PlanWall, others: &[&PlanWall]) -> PlanWall {
-    let along = Vec2::new(wall.to.0 - wall.from.0, wall.to.1 - wall.from.1).normalize();
-    let run_on = |end: (f64, f64)| {
-        let meets = |other: &&&PlanWall| {
-            let near = |p: (f64, f64)| (p.0 - end.0).hypot(p.1 - end.1) < 1.0;
-            let way = Vec2::new(other.to.0 - other.from.0, other.to.1 - other.from.1).normalize();
-            (near(other.from) || near(other.to)) && way.cross(along).abs() > 0.99
-        };
-        others.iter().filter(meets).map(|other| other.thickness / 2.0).fold(0.0, f64::max)
-    };
-    let (back, ahead) = (along * run_on(wall.from), along * run_on(wall.to));
-    PlanWall {
-        from: (wall.from.0 - back.x, wall.from.1 - back.y),
-        to: (wall.to.0 + ahead.x, wall.to.1 + ahead.y),
-        ..wall.clone()
+    outlines(board, Pen::Cut, &standing, None);
+    outlines(board, Pen::Removed, &removed, Some(&standing));
+    if when == When::Before {
+        for wall in walls.iter().filter(|wall| wall.fate == Fate::Removed) {
+            cuts(board, wall, scale);
+        }
     }
 }
 
-/// Outlines without the pieces that lie inside another wall.
-fn outlines(board: &mut Board, pen: Pen, rings: &[(Fate, [Point; 4])], solid: &[[Point; 4]]) {
-    for (index, (_, ring)) in rings.iter().enumerate() {
-        let mut others: Vec<[Point; 4]> = solid.to_vec();
-        others.extend(rings.iter().enumerate().filter(|(i, _)| *i != index).map(|(_, (_, r))| *r));
+/// How far the line of a cut runs beyond the faces of the wall, mm on paper.
+const BEYOND_FACE: f64 = 1.2;
+
+/// Lines across the two ends of a wall that comes out.
+fn cuts(board: &mut Board, wall: &PlanWall, scale: Scale) {
+    let [a, b, c, d] = wall.ring(scale);
+    for (one, other) in [(a, d), (b, c)] {
+        let out = (one - other).normalize() * BEYOND_FACE;
+        board.line(Pen::Beyond, one + out, other - out);
+    }
+}
+
+/// Outlines without the pieces that lie inside another wall, or inside what stands.
+fn outlines(board: &mut Board, pen: Pen, rings: &Rings, solid: Option<&Rings>) {
+    for (index, (_, ring)) in rings.all.iter().enumerate() {
+        let mut others = solid.map_or_else(Vec::new, |solid| solid.touching(ring, |_| true));
+        others.extend(rings.touching(ring, |other| other != index));
         for side in 0..4 {
             let line = Line::new(ring[side], ring[(side + 1) % 4]);
             for piece in outside(line, &others) {
@@ -128,66 +145,17 @@ fn outlines(board: &mut Board, pen: Pen, rings: &[(Fate, [Point; 4])], solid: &[
     }
 }
 
-/// The pieces of a line outside all of the given convex rings.
-fn outside(line: Line, rings: &[[Point; 4]]) -> Vec<Line> {
-    let mut pieces = vec![(0.0_f64, 1.0_f64)];
-    for ring in rings {
-        let Some((enter, leave)) = within(line, ring) else {
-            continue;
-        };
-        pieces = pieces
-            .into_iter()
-            .flat_map(|(a, b)| [(a, b.min(enter)), (a.max(leave), b)])
-            .filter(|(a, b)| (b - a) * line.p0.distance(line.p1) > 0.02)
-            .collect();
-    }
-    pieces.into_iter().map(|(a, b)| Line::new(line.eval_at(a), line.eval_at(b))).collect()
-}
+/// How much further off a wall its label may stand, clear of the lines across the wall, mm on paper.
+const FURTHER: f64 = 1.5;
 
-/// The part of a line strictly inside a convex ring.
-fn within(line: Line, ring: &[Point; 4]) -> Option<(f64, f64)> {
-    let centre =
-        Point::new(ring.iter().map(|p| p.x).sum::<f64>() / 4.0, ring.iter().map(|p| p.y).sum::<f64>() / 4.0);
-    let (mut enter, mut leave) = (0.0_f64, 1.0_f64);
-    for side in 0..4 {
-        let (a, b) = (ring[side], ring[(side + 1) % 4]);
-        let mut normal = (b - a).turn_90().normalize();
-        if normal.dot(centre - a) < 0.0 {
-            normal = -normal;
-        }
-        // A line along a face is not inside: both walls show it, one on the other.
-        let (from, step) = (normal.dot(line.p0 - a) - 1e-6, normal.dot(line.p1 - line.p0));
-        if step.abs() < 1e-12 {
-            if from <= 0.0 {
-                return None;
-            }
-        } else {
-            let at = -from / step;
-            if step > 0.0 { enter = enter.max(at) } else { leave = leave.min(at) }
-        }
-    }
-    (enter < leave).then_some((enter, leave))
-}
-
-/// Helper on lines.
-trait At {
-    /// The point at a share of the length.
-    fn eval_at(&self, share: f64) -> Point;
-}
-
-impl At for Line {
-    fn eval_at(&self, share: f64) -> Point {
-        self.p0.lerp(self.p1, share)
-    }
-}
-
-/// A label for a wall: beside its middle, or further along it.
+/// A label for a wall: beside its middle, or further along it, or a line of text further off.
 pub fn wall_note(wall: &PlanWall, scale: Scale, note: Note) -> Note {
     let (from, to) = (paper(scale, wall.from), paper(scale, wall.to));
-    let half = scale.paper(wall.thickness / 2.0) + 1.0;
+    let near = scale.paper(wall.thickness / 2.0) + 1.0;
     let upright = (to - from).x.abs() < (to - from).y.abs();
     let mut note = Note { target: wall.middle(scale), ..note };
-    for share in [0.5, 0.35, 0.65, 0.2, 0.8] {
+    let shares = [0.5, 0.35, 0.65, 0.2, 0.8];
+    for (half, share) in [near, near + FURTHER].into_iter().flat_map(|off| shares.map(|share| (off, share))) {
         let at = from.lerp(to, share);
         let (a, b) = match upright {
             true => (Spot::new((at.x + half, at.y), 1.0, 0.0), Spot::new((at.x - half, at.y), -1.0, 0.0)),
@@ -211,9 +179,12 @@ pub fn north(board: &mut Board, centre: Point, degrees: f64) {
     board.note(Note::new(Role::Note, beyond, Text::plain("N")).spot(Spot::new(beyond, 0.0, 0.0)).rank(0));
 }
 
+/// Length of a wind arrow, mm on paper.
+pub const WIND: f64 = 9.0;
+
 /// A wind arrow that blows `along` at `tip`, with its words behind it.
 pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
-    let tail = tip - along * 11.0;
+    let tail = tip - along * WIND;
     load::open_arrow(board, tail, tip);
     let middle = tail.midpoint(tip);
     let (x, y) = (along.x.abs() * 2.0, along.y.abs() * 2.0);
@@ -222,6 +193,12 @@ pub fn wind(board: &mut Board, tip: Point, along: Vec2, words: &str) {
         .spot(Spot::new((middle.x, middle.y - 3.0 - y), 0.0, -1.0).cost(1.0))
         .spot(Spot::new((middle.x + 3.0 + x, middle.y), 1.0, 0.0).cost(1.0));
     board.note(note.rank(1));
+}
+
+/// Width and height that walls cover, full size, mm.
+pub fn size(walls: &[PlanWall]) -> (f64, f64) {
+    let extent = extent(walls, Scale(1.0));
+    (extent.width(), extent.height())
 }
 
 /// Extent of walls on the paper.

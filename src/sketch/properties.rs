@@ -162,8 +162,8 @@ prop_compose! {
 prop_compose! {
     fn any_plan()(
         w in 4000..12000_i32, d in 4000..11000_i32, inner in proptest::collection::vec((0.05..0.95_f64, any::<bool>(), 0..3_usize, 0.1..1.0_f64), 0..=10),
-        north in 0.0..360.0_f64,
-    ) -> KeyPlan {
+        north in 0.0..360.0_f64, bay in 0.05..0.95_f64,
+    ) -> [KeyPlan; 2] {
         let (w, d) = (f64::from(w), f64::from(d));
         let mut walls = vec![
             wall("W1", (0.0, 0.0), (w, 0.0), 302.5, Fate::Stays), wall("W2", (w, 0.0), (w, d), 302.5, Fate::Stays),
@@ -179,10 +179,13 @@ prop_compose! {
                 marks.push(PlanMark { mark: format!("R{i}"), from, to });
             }
         }
-        KeyPlan {
-            name: "key-plan".into(), title: "ground floor".into(), walls, marks, panels, beams: vec![], spans: vec![],
-            north: north.round(), winds: vec![PlanWind::Upwards, PlanWind::Leftwards],
-        }
+        let span = |y: f64, from: f64, to: f64| PlanMark { mark: "F1".into(), from: (from * w, y * d), to: (to * w, y * d) };
+        let after = KeyPlan {
+            name: "key-plan-after".into(), title: "ground floor".into(), when: When::After, walls, marks, panels, beams: vec![],
+            spans: vec![span(bay, 0.0, 1.0)], north: north.round(), winds: vec![PlanWind::Upwards, PlanWind::Leftwards],
+        };
+        let spans = vec![span(bay, 0.0, bay), span(bay, bay, 1.0)];
+        [KeyPlan { name: "key-plan-before".into(), when: When::Before, marks: vec![], spans, ..after.clone() }, after]
     }
 }
 
@@ -305,16 +308,28 @@ proptest! {
     }
 
     #[test]
-    fn any_key_plan_is_sound_and_true(view in any_plan()) {
-        let frame = Frame::new(165.0, 220.0);
-        let drawing = key_plan(&view, frame);
-        sound(&drawing);
-        prop_assert!(frame.holds(&drawing), "{} x {}", drawing.width, drawing.height);
-        let wide = view.walls[0].to.0 + 302.5;
-        prop_assert!(has_length(&drawing, Pen::Dimension, wide));
-        let shares = (0..view.walls.len()).map(|wall| Share { wall, before: Some("12 %".into()), after: Some("18 %".into()) });
-        let plan = StabilityPlan { name: "stability".into(), title: "ground floor".into(), shares: shares.collect(), walls: view.walls, wind: PlanWind::Rightwards };
-        sound(&stability_plan(&plan, frame));
+    fn any_key_plan_is_sound_and_true(views in any_plan()) {
+        let (row, alone) = (Frame::new(170.0, 150.0), Frame::new(170.0, 130.0));
+        let pair = key_plans(&views, row, alone);
+        prop_assert_eq!(&pair[0].scale, &pair[1].scale);
+        let wide: f64 = pair.iter().map(|d| d.width).sum();
+        let in_row = wide + scale::APART <= row.width && pair.iter().all(|d| d.height <= row.height);
+        prop_assert!(in_row || pair.iter().all(|d| alone.holds(d)), "{} and {} wide", pair[0].width, pair[1].width);
+        pair.iter().for_each(sound);
+        let walls = &views[0].walls;
+        prop_assert!(has_length(&pair[0], Pen::Dimension, walls[0].to.0 + 302.5));
+        // What comes out is dashed on one of the two only, and where it is new it is not there before.
+        let gone = walls.iter().any(|w| w.fate == Fate::Removed);
+        prop_assert_eq!(pair[0].strokes(Pen::Removed).count(), 0);
+        prop_assert!(gone || pair[1].strokes(Pen::Removed).count() == 0);
+        let named = |d: &Drawing, name: &str| d.labels().any(|l| l.plain().split(' ').next() == Some(name));
+        for w in walls.iter().filter(|w| !views[1].marks.iter().any(|m| m.from == w.from && m.to == w.to)) {
+            prop_assert_eq!(named(&pair[0], &w.name), w.fate != Fate::Added, "{} before", w.name);
+            prop_assert!(named(&pair[1], &w.name), "{} after", w.name);
+        }
+        let shares = (0..walls.len()).map(|wall| Share { wall, before: Some("12 %".into()), after: Some("18 %".into()) });
+        let plan = StabilityPlan { name: "stability".into(), title: "ground floor".into(), shares: shares.collect(), walls: walls.clone(), wind: PlanWind::Rightwards };
+        stability_plans(&plan, row, alone).iter().for_each(sound);
     }
 
     #[test]

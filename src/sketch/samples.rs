@@ -243,10 +243,32 @@ pub fn stack() -> LoadStack {
     }
 }
 
+pub fn plans() -> [KeyPlan; 2] {
+    let after = plan();
+    let before = KeyPlan {
+        name: "key-plan-before".into(),
+        when: When::Before,
+        marks: vec![],
+        panels: after.panels[..1].to_vec(),
+        beams: vec![],
+        spans: vec![
+            span("F1", (0.0, 2000.0), (4000.0, 2000.0)),
+            span("F1", (4000.0, 2000.0), (8200.0, 2000.0)),
+        ],
+        ..after.clone()
+    };
+    [before, after]
+}
+
+fn span(mark: &str, from: (f64, f64), to: (f64, f64)) -> PlanMark {
+    PlanMark { mark: mark.into(), from, to }
+}
+
 pub fn plan() -> KeyPlan {
     KeyPlan {
-        name: "key-plan".into(),
+        name: "key-plan-after".into(),
         title: "ground floor".into(),
+        when: When::After,
         walls: vec![
             wall("W1", (0.0, 0.0), (8200.0, 0.0), 277.5, Fate::Stays),
             wall("W2", (8200.0, 0.0), (8200.0, 7000.0), 277.5, Fate::Stays),
@@ -268,8 +290,8 @@ pub fn plan() -> KeyPlan {
         ],
         beams: vec![PlanMark { mark: "B1".into(), from: (4000.0, 600.0), to: (4000.0, 6450.0) }],
         spans: vec![
-            PlanSpan { mark: "F1".into(), from: (0.0, 0.0), to: (8200.0, 3500.0), along_x: true },
-            PlanSpan { mark: "F2".into(), from: (0.0, 3500.0), to: (8200.0, 7000.0), along_x: false },
+            span("F1", (0.0, 2000.0), (8200.0, 2000.0)),
+            span("F2", (2000.0, 3500.0), (2000.0, 7000.0)),
         ],
         north: 20.0,
         winds: vec![PlanWind::Upwards, PlanWind::Downwards],

@@ -55,8 +55,7 @@ pub fn fit_all<const N: usize>(
     from: f64,
     draw: impl Fn(Scale) -> [Drawing; N],
 ) -> [Drawing; N] {
-    let over = |d: &Drawing| (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0);
-    fit_by(from, draw, |drawings| drawings.iter().map(over).sum())
+    fit_by(from, draw, |drawings| drawings.iter().map(|d| over(d, frame)).sum())
 }
 
 /// Drawings to be compared side by side, at one scale: the largest at which the row, with `gap`
@@ -67,11 +66,45 @@ pub fn fit_row<const N: usize>(
     from: f64,
     draw: impl Fn(Scale) -> [Drawing; N],
 ) -> [Drawing; N] {
+    fit_by(from, draw, |drawings| over_row(drawings, frame, gap))
+}
+
+/// Clear space that the page leaves between drawings side by side, mm.
+pub const APART: f64 = 8.0;
+
+/// Two drawings to be compared, at one scale: the largest at which they fit `row` beside each other, or
+/// each of them `alone` one above the other. The page finds the same by their widths.
+///
+/// `least` is the full size (mm) of what each of them shows at least: scales at which not even that has room are
+/// not drawn, but for the smallest.
+pub fn fit_pair(
+    (row, alone): (Frame, Frame),
+    least: (f64, f64),
+    from: f64,
+    draw: impl Fn(Scale) -> [Drawing; 2],
+) -> [Drawing; 2] {
+    let hopeless = |scale: Scale| {
+        let (width, height) = (scale.paper(least.0), scale.paper(least.1));
+        let in_row = 2.0 * width + APART <= row.width && height <= row.height;
+        !in_row && (width > alone.width || height > alone.height)
+    };
+    let smallest = PREFERRED[PREFERRED.len() - 1];
+    let from = PREFERRED.into_iter().find(|n| *n >= from && !hopeless(Scale(*n))).unwrap_or(smallest);
     fit_by(from, draw, |drawings| {
-        let width: f64 = drawings.iter().map(|d| d.width).sum::<f64>() + gap * (N as f64 - 1.0);
-        let height = drawings.iter().map(|d| d.height).fold(0.0, f64::max);
-        (width - frame.width).max(0.0) + (height - frame.height).max(0.0)
+        over_row(drawings, row, APART).min(drawings.iter().map(|d| over(d, alone)).sum())
     })
+}
+
+/// By how much a drawing sticks out of its frame, mm.
+fn over(d: &Drawing, frame: Frame) -> f64 {
+    (d.width - frame.width).max(0.0) + (d.height - frame.height).max(0.0)
+}
+
+/// By how much a row of drawings, `gap` apart, sticks out of its frame, mm.
+fn over_row(drawings: &[Drawing], frame: Frame, gap: f64) -> f64 {
+    let width: f64 = drawings.iter().map(|d| d.width + gap).sum::<f64>() - gap;
+    let height = drawings.iter().map(|d| d.height).fold(0.0, f64::max);
+    (width - frame.width).max(0.0) + (height - frame.height).max(0.0)
 }
 
 /// The drawings at the largest preferred scale at which nothing sticks out; else where least does.
@@ -132,5 +165,24 @@ mod tests {
     #[test]
     fn what_never_fits_is_drawn_as_small_as_it_goes() {
         assert_eq!(fit(Frame::new(10.0, 10.0), 5.0, square(90_000.0)).scale, "1:500");
+    }
+    #[test]
+    fn a_pair_stands_side_by_side_or_one_above_the_other_whichever_is_larger() {
+        let frames = (Frame::new(170.0, 150.0), Frame::new(170.0, 100.0));
+        let pair = |side: f64| {
+            let drawn = std::cell::RefCell::new(Vec::new());
+            let [a, b] = fit_pair(frames, (side, side), 50.0, |s| {
+                drawn.borrow_mut().push(s.0);
+                [square(side)(s), square(side)(s)]
+            });
+            assert_eq!(a.scale, b.scale);
+            (a.scale, drawn.into_inner())
+        };
+        // 81 mm each in a row, 100 mm each where one stands above the other.
+        assert_eq!(pair(4050.0), ("1:50".to_owned(), vec![50.0]));
+        assert_eq!(pair(5000.0), ("1:50".to_owned(), vec![50.0]));
+        // Scales without hope are not drawn; what never fits is drawn once.
+        assert_eq!(pair(10_001.0), ("1:200".to_owned(), vec![200.0]));
+        assert_eq!(pair(90_000.0), ("1:500".to_owned(), vec![500.0]));
     }
 }

@@ -4,10 +4,10 @@ use kurbo::Point;
 
 use super::board::{Board, Words};
 use super::drawing::{Drawing, Role};
-use super::key_plan::{PlanWind, surroundings};
+use super::key_plan::{Around, PlanWind, surroundings};
 use super::note::Note;
-use super::plan::{self, Fate, PlanWall, wall_note};
-use super::scale::{Frame, Scale, fit};
+use super::plan::{self, Fate, PlanWall, When, wall_note};
+use super::scale::{Frame, Scale, fit_pair};
 use super::text::Text;
 
 /// What the stability plan shows, for one direction of wind.
@@ -36,30 +36,37 @@ pub struct Share {
     pub after: Option<String>,
 }
 
-/// Draws the stability plan.
-pub fn stability_plan(view: &StabilityPlan, frame: Frame) -> Drawing {
-    fit(frame, 50.0, |scale| draw(view, scale))
+/// Draws the plan before and after at one scale, each with its shares: in `row` beside each other, or each within
+/// `alone` one above the other, whichever is larger.
+pub fn stability_plans(view: &StabilityPlan, row: Frame, alone: Frame) -> [Drawing; 2] {
+    fit_pair((row, alone), plan::size(&view.walls), 50.0, |scale| {
+        [When::Before, When::After].map(|when| draw(view, when, scale))
+    })
 }
 
-fn draw(view: &StabilityPlan, scale: Scale) -> Drawing {
+fn draw(view: &StabilityPlan, when: When, scale: Scale) -> Drawing {
     let mut board = Board::default();
-    plan::walls(&mut board, &view.walls, scale);
+    plan::walls(&mut board, &view.walls, scale, when);
     for (wall, share) in bracing(view) {
-        let mut note = Note::new(Role::Load, Point::ZERO, Text::mark(&wall.name));
-        for line in lines(share, wall.fate) {
-            note = note.words(&line);
+        let note = Note::new(Role::Load, Point::ZERO, Text::mark(&wall.name));
+        if let Some(words) = words(share, wall.fate, when) {
+            board.note(wall_note(wall, scale, note.words(&words)));
         }
-        board.note(wall_note(wall, scale, note));
     }
-    surroundings(&mut board, &view.walls, &[view.wind], None, scale, false);
-    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
+    let around = Around { winds: &[view.wind], north: None, dimensions: false, clear: 0.0 };
+    surroundings(&mut board, &view.walls, &around, scale);
+    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate) && when == When::After;
     let dashed = if has(Fate::Removed) { "; dashed: removed" } else { "" };
     let crossed = if has(Fate::Added) { "; crossed hatching: new" } else { "" };
     board.finish(Words {
-        name: view.name.clone(),
-        caption: format!("Shares of the storey's wind, {}, before and after{dashed}{crossed}", view.title),
+        name: format!("{}-{}", view.name, when.word()),
+        caption: format!(
+            "Shares of the storey's wind, {}, {} the removal{dashed}{crossed}",
+            view.title,
+            when.word()
+        ),
         scale: scale.text(),
-        alt: alt(view),
+        alt: alt(view, when),
     })
 }
 
@@ -68,30 +75,24 @@ fn bracing(view: &StabilityPlan) -> impl Iterator<Item = (&PlanWall, &Share)> {
     view.shares.iter().filter_map(|share| Some((view.walls.get(share.wall)?, share)))
 }
 
-/// `before 24 %` and `after 31 %`; empty where there is nothing to say.
-fn lines(share: &Share, fate: Fate) -> [String; 2] {
-    let line = |word, value: &Option<String>, none: (Fate, &str)| match value {
-        Some(value) => format!("{word} {value}"),
-        None if fate == none.0 => none.1.to_owned(),
-        None => String::new(),
-    };
-    [
-        line("before", &share.before, (Fate::Added, "new")),
-        line("after", &share.after, (Fate::Removed, "removed")),
-    ]
+/// What a wall takes on this plan: `24 %`; nothing where it is not there, `removed` where it stood.
+fn words(share: &Share, fate: Fate, when: When) -> Option<String> {
+    let value = if when == When::Before { &share.before } else { &share.after };
+    let removed = when == When::After && fate == Fate::Removed;
+    value.clone().or_else(|| removed.then(|| "removed".to_owned()))
 }
 
-fn alt(view: &StabilityPlan) -> String {
-    let mut alt = format!("Plan of the {} with each bracing wall's share of the storey's wind. ", view.title);
+fn alt(view: &StabilityPlan, when: When) -> String {
+    let time = when.word();
+    let mut alt = format!(
+        "Plan of the {} {time} the removal, with each bracing wall's share of the storey's wind. ",
+        view.title
+    );
     for (wall, share) in bracing(view) {
-        alt += &match (&share.before, &share.after) {
-            (Some(before), Some(after)) => {
-                format!("{} takes {before} before and {after} after the removal. ", wall.name)
-            }
-            (Some(before), None) => format!("{} takes {before} before the removal. ", wall.name),
-            (None, Some(after)) => format!("{} takes {after} after the removal. ", wall.name),
-            (None, None) => format!("{} takes nothing. ", wall.name),
-        };
+        if let Some(words) = words(share, wall.fate, when) {
+            let takes = if words == "removed" { "is" } else { "takes" };
+            alt += &format!("{} {takes} {words}. ", wall.name);
+        }
     }
     alt.trim_end().to_owned()
 }

@@ -96,9 +96,7 @@ fn hand_cases_are_sound() {
         return_actions(&actions(true), FRAME),
         panel_section(&wall_section(), FRAME),
         footing_sketch(&footing(), FRAME),
-        key_plan(&plan(), FRAME),
         load_stack(&stack(), FRAME),
-        stability_plan(&stability(), FRAME),
         chain(&links()),
         bearing_elevation(&bearing(true), FRAME),
         bearing_elevation(&bearing(false), FRAME),
@@ -107,6 +105,8 @@ fn hand_cases_are_sound() {
     ];
     let [before, after] = panels();
     drawings.extend(panel_pair(&before, &after, Frame::new(165.0, 110.0)));
+    drawings.extend(key_plans(&plans(), FRAME, Frame::new(165.0, 110.0)));
+    drawings.extend(stability_plans(&stability(), FRAME, Frame::new(165.0, 110.0)));
     for drawing in &drawings {
         show(drawing, "");
     }
@@ -160,14 +160,16 @@ fn awkward_cases_are_sound() {
     narrow.openings.clear();
     narrow.walls[0].x = 400.0;
     (wide.mark, wide.length) = ("P3".into(), 9000.0);
-    let mut crowded = plan();
-    crowded.name = "crowded-plan".into();
-    for i in 0..6 {
-        let y = 900.0 + 450.0 * f64::from(i);
-        let fate = if i % 2 == 0 { Fate::Stays } else { Fate::Removed };
-        crowded.walls.push(wall(&format!("W{}", 8 + i), (4000.0, y), (8200.0, y), 100.0, fate));
+    let mut crowded = plans();
+    for view in &mut crowded {
+        view.name = format!("crowded-{}", view.name);
+        for i in 0..6 {
+            let y = 900.0 + 450.0 * f64::from(i);
+            let fate = if i % 2 == 0 { Fate::Stays } else { Fate::Removed };
+            view.walls.push(wall(&format!("W{}", 8 + i), (4000.0, y), (8200.0, y), 100.0, fate));
+        }
     }
-    let drawings = [
+    let mut drawings = vec![
         return_elevation(&short, FRAME),
         return_elevation(&long, FRAME),
         return_section(&flanged, FRAME),
@@ -176,8 +178,8 @@ fn awkward_cases_are_sound() {
         footing_sketch(&gone, FRAME),
         panel_elevation(&narrow, Frame::new(80.0, 110.0)),
         panel_elevation(&wide, FRAME),
-        key_plan(&crowded, FRAME),
     ];
+    drawings.extend(key_plans(&crowded, FRAME, FRAME));
     for drawing in &drawings {
         show(drawing, "-awkward");
         tidy(drawing);
@@ -200,7 +202,7 @@ fn small_frames_are_kept() {
     drawings.push(bearing_elevation(&bearing(true), column));
     drawings.push(bearing_section(&across(true), column));
     drawings.push(footing_sketch(&footing(), column));
-    drawings.push(key_plan(&plan(), Frame::new(105.0, 140.0)));
+    drawings.extend(key_plans(&plans(), column, column));
     drawings.push(load_stack(&stack(), column));
     for drawing in &drawings {
         show(drawing, "-small");

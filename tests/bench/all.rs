@@ -4,6 +4,7 @@ mod check;
 #[path = "../jobs/mod.rs"]
 mod jobs;
 mod many;
+mod row;
 mod sheet;
 
 fn main() {

@@ -9,7 +9,7 @@ use perpend::trace::Sheet;
 
 use super::jobs;
 
-fn demo(name: &str) -> String {
+pub(super) fn demo(name: &str) -> String {
     jobs::demos().into_iter().find(|(n, _)| n == name).expect("a demo job").1
 }
 
@@ -113,43 +113,4 @@ fn lead_down(bencher: Bencher<'_, '_>, walls: usize) {
         }
     }
     bencher.bench(|| descent::lead_down(black_box(&model)).expect("a path"));
-}
-
-/// The end terrace with more and more houses beside it, by the number of plan walls: read, led down, checked.
-#[divan::bench(args = [10, 20, 100, 1000], max_time = 20)]
-fn plan_walls(bencher: Bencher<'_, '_>, walls: usize) {
-    let text = row(walls);
-    bencher.bench(|| perpend::check("row.toml", black_box(&text)).expect("a valid job"));
-}
-
-/// The end terrace's job with houses added to its right until the plan has so many walls.
-fn row(walls: usize) -> String {
-    use std::fmt::Write;
-    let text = demo("end-terrace");
-    let (plan, rest) = text.split_once("[[plan.beams]]").expect("the job has a beam");
-    let mut more = String::new();
-    let there = text.matches("[[plan.walls]]").count();
-    // Narrow houses in rows: the plan has room for 100 m each way.
-    for n in 0..walls.saturating_sub(there) / 3 {
-        let (x, y) = (5.0 + 2.0 * (n % 45) as f64, 9.0 * (n / 45) as f64);
-        let (z, top) = (x + 2.0, y + 8.0);
-        for (mark, from, to) in
-            [("rear", (x, y), (z, y)), ("front", (x, top), (z, top)), ("side", (z, y), (z, top))]
-        {
-            let _ = write!(
-                more,
-                "[[plan.walls]]\nmark = \"{mark} {n}\"\nbuild_up = \"one brick wall\"\nfrom = [\"{} m\", \"{} m\"]\nto = \
-                 [\"{} m\", \"{} m\"]\n\n",
-                from.0, from.1, to.0, to.1
-            );
-        }
-        for (mark, load, storey) in [("F", "first floor", "ground"), ("R", "roof", "first")] {
-            let _ = write!(
-                more,
-                "[[plan.floors]]\nmark = \"{mark} {n}\"\nload = \"{load}\"\nstorey = \"{storey}\"\nfrom = [\"{x} m\", \"{y} \
-                 m\"]\nto = [\"{z} m\", \"{top} m\"]\nspans = \"y\"\n\n"
-            );
-        }
-    }
-    format!("{plan}{more}[[plan.beams]]{rest}")
 }

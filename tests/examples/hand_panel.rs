@@ -36,7 +36,7 @@ fn brick_leaf() -> PanelModel {
     let span = |length| {
         let held = |kind| Held { kind, reason: "as the example says".to_owned() };
         let (top, base, left, right) = (held(Simple), held(Simple), held(Continuous), held(Simple));
-        Span { length: Length::new(length), top, base, left, right }
+        Span { length: Length::new(length), ends: None, top, base, left, right }
     };
     PanelModel {
         mark: "P1".to_owned(),

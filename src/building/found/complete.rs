@@ -41,7 +41,7 @@ pub fn complete(b: &mut Building, mut found: Found) {
 pub fn treated<'b>(b: &'b Building, found: &FoundPanel) -> Option<&'b Panel> {
     b.panels.iter().find(|p| {
         p.on.as_ref() == Some(&found.on)
-            && p.range.is_none_or(|(a, z)| {
+            && p.after.ends.is_none_or(|(a, z)| {
                 let (c, e) = found.after.range;
                 (z.base().min(e.base()) - a.base().max(c.base())) * 2.0 >= (e - c).base()
             })
@@ -96,6 +96,7 @@ pub fn span(of: &FoundSpan, storey: &Storey) -> Span {
     let over = if storey.floor_above == FloorKind::Roof { "roof" } else { "floor" };
     Span {
         length: of.length(),
+        ends: Some(of.range),
         top: simple(format!("Taken from the plan: the {over} over it holds it against moving.")),
         base: simple("Foot of the wall: held against moving.".to_owned()),
         left: side(&of.held[0]),
@@ -149,7 +150,6 @@ fn new_panel(b: &Building, p: &FoundPanel) -> Option<Panel> {
         storey: storey.mark.clone(),
         height: storey.clear_height,
         on: Some(p.on.clone()),
-        range: Some(p.after.range),
         dead_above: LineLoad::ZERO,
         wind: None,
         route: PanelRoute::Flexure,

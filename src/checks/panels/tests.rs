@@ -34,6 +34,7 @@ pub(super) fn span(length: f64, [top, base, left, right]: [Edge; 4]) -> Span {
     let held = |kind| Held { kind, reason: "as the test says".to_owned() };
     Span {
         length: Length::new(length),
+        ends: None,
         top: held(top),
         base: held(base),
         left: held(left),

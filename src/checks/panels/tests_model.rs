@@ -93,7 +93,6 @@ fn panel() -> Panel {
         storey: String::new(),
         height: Length::new(2400.0),
         on: None,
-        range: None,
         dead_above: LineLoad::new(8.5),
         wind: None,
         route: PanelRoute::Flexure,

@@ -113,7 +113,14 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         None => vec![own],
     };
     let held = Held { kind: Edge::Simple, reason: String::new() };
-    let span = Span { length: p.m.l, top: held.clone(), base: held.clone(), left: held.clone(), right: held };
+    let span = Span {
+        length: p.m.l,
+        ends: None,
+        top: held.clone(),
+        base: held.clone(),
+        left: held.clone(),
+        right: held,
+    };
     PanelModel {
         mark: String::new(),
         h: p.m.h,

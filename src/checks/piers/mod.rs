@@ -20,7 +20,7 @@ pub mod work;
 pub use sheet::sections;
 
 use super::Job;
-use crate::building::{Building, State, TakeDown, take_down};
+use crate::building::{Building, State, TakeDown};
 use crate::quantity::{Force, Stress};
 use crate::solve::descent::{From, Triple};
 use crate::standards::en1990::Combination;
@@ -112,7 +112,7 @@ impl Used {
 /// not known.
 pub fn of(job: &Job<'_>) -> Vec<Used> {
     let b = job.building;
-    let (Some(Ok(down)), Ok(wind)) = (take_down(b), &job.wind) else { return Vec::new() };
+    let (Some(down), Ok(wind)) = (&job.down, &job.wind) else { return Vec::new() };
     let mut out = Vec::new();
     for k in 0..b.storeys.len() {
         for (i, stack) in down.on_leaf.walls.iter().enumerate().filter(|(_, s)| s.storey == k) {
@@ -122,7 +122,7 @@ pub fn of(job: &Job<'_>) -> Vec<Used> {
             let before = down.on_leaf_before.walls.iter().position(|s| s == stack);
             let Some(before) = before else { continue };
             for n in 0..down.on_leaf.down.walls[i].piers.len() {
-                out.push(used(job, &down, (before, i), n, wind.panel));
+                out.push(used(job, down, (before, i), n, wind.panel));
             }
         }
     }

@@ -63,8 +63,9 @@ pub fn of(
     let Ok(shared) = stability::share(&mut Sheet::silent(), b, &storey, wind, annex) else {
         return Vec::new();
     };
-    for (i, line) in lines.iter_mut().enumerate() {
-        line.share = shared.after(&i.to_string()).unwrap_or(0.0);
+    // The lines along the wind are the first walls, and shares come in their order.
+    for (line, share) in lines.iter_mut().zip(&shared.shares) {
+        line.share = share.after.unwrap_or(0.0);
     }
     lines
 }

@@ -12,7 +12,7 @@ mod storey;
 pub use storey::complete;
 
 use super::{Job, Section};
-use crate::building::{Along, Building, Proof, Side, take_down};
+use crate::building::{Along, Building, Proof, Side};
 use crate::quantity::{Force, print};
 use crate::trace::{Column, Sheet, Table};
 use levels::Level;
@@ -43,12 +43,12 @@ pub fn directions(b: &Building) -> Vec<Along> {
 
 /// The whole building, where the plan has floors and the wind is known.
 pub fn of(job: &Job<'_>) -> Vec<Direction> {
-    let (Some(Ok(down)), Ok(wind)) = (take_down(job.building), &job.wind) else { return Vec::new() };
+    let (Some(down), Ok(wind)) = (&job.down, &job.wind) else { return Vec::new() };
     directions(job.building)
         .into_iter()
         .map(|along| {
-            let levels = levels::of(job.building, &down, along, wind.overall);
-            let piers = piers::of(job, &down, along, &levels, *wind);
+            let levels = levels::of(job.building, down, along, wind.overall);
+            let piers = piers::of(job, down, along, &levels, *wind);
             Direction { along, levels, piers }
         })
         .collect()

@@ -1,5 +1,7 @@
 //! Every length of wall between openings, as a cantilever of its storey.
 
+use std::collections::HashMap;
+
 use super::levels::Level;
 use super::lines;
 use crate::building::{
@@ -40,7 +42,7 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
     let b = job.building;
     // The pier stands alone: nothing of the job's own returns leans on it.
     let alone = Building { returns: Vec::new(), ..b.clone() };
-    let mut out: Vec<Used> = Vec::new();
+    let mut out = All::default();
     for level in levels {
         for after in [false, true] {
             let (state, leaf) =
@@ -51,12 +53,12 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
                     let Whole { i, name, pier } = whole;
                     let share = line.share * (pier.to - pier.from) / line.length;
                     let used = worked(job, &alone, leaf, i, &pier, level, share, wind);
-                    note(&mut out, name, level, &pier, (after, share, used));
+                    out.note(name, level, &pier, (after, share, used));
                 }
             }
         }
     }
-    out
+    out.list
 }
 
 /// A length of wall that nothing interrupts: one plan wall or several that go on in each other.
@@ -111,22 +113,32 @@ fn joined(a: Pier, z: Pier) -> Pier {
     out
 }
 
-/// Notes what one state finds of a pier beside what the other found of the same.
-fn note(
-    out: &mut Vec<Used>,
-    wall: String,
-    level: &Level,
-    pier: &Pier,
-    (after, share, used): (bool, f64, (f64, String)),
-) {
-    let (from, to) = (pier.from, pier.to);
-    let same = |u: &&mut Used| u.wall == wall && u.storey == level.storey && u.from == from && u.to == to;
-    let at = match out.iter_mut().find(same) {
-        Some(there) => there,
-        None => {
-            out.push(Used {
+/// Piers in the order in which they were found.
+#[derive(Default)]
+struct All {
+    list: Vec<Used>,
+    /// By mark, storey and the bits of where they begin and end.
+    places: HashMap<(String, usize, u64, u64), usize>,
+}
+
+impl All {
+    /// Notes what one state finds of a pier beside what the other found of the same.
+    fn note(
+        &mut self,
+        wall: String,
+        level: &Level,
+        pier: &Pier,
+        (after, share, used): (bool, f64, (f64, String)),
+    ) {
+        let (from, to, storey) = (pier.from, pier.to, level.storey);
+        // Nought is the same with either sign.
+        let bits = |x: f64| (x + 0.0).to_bits();
+        let next = self.list.len();
+        let n = *self.places.entry((wall.clone(), storey, bits(from), bits(to))).or_insert(next);
+        if n == next {
+            self.list.push(Used {
                 wall,
-                storey: level.storey,
+                storey,
                 from,
                 to,
                 share_before: None,
@@ -134,14 +146,13 @@ fn note(
                 before: None,
                 after: None,
             });
-            let last = out.len() - 1;
-            &mut out[last]
         }
-    };
-    if after {
-        (at.share_after, at.after) = (Some(share), Some(used));
-    } else {
-        (at.share_before, at.before) = (Some(share), Some(used));
+        let at = &mut self.list[n];
+        if after {
+            (at.share_after, at.after) = (Some(share), Some(used));
+        } else {
+            (at.share_before, at.before) = (Some(share), Some(used));
+        }
     }
 }
 
