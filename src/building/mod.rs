@@ -9,6 +9,7 @@ pub mod found;
 mod heights;
 mod parts;
 mod plan;
+mod site;
 mod things;
 mod words;
 
@@ -19,10 +20,12 @@ pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
 pub use found::Found;
 pub use heights::strip_height;
 pub use parts::{
-    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, StatedWind, Storey,
-    Strength, TerrainWind, UnitStrength, Wind,
+    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, Storey, Strength, UnitStrength,
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
+pub use site::{
+    Dominant, Feature, Orography, Readings, Roof, RoofForm, Sector, Site, StatedWind, Town, Wind,
+};
 pub use things::{
     Arching, Assumption, Bearing, Before, BracingWall, Edge, Flange, Footing, FromAbove, Head, HoldPoint,
     Link, Load, Padstone, Panel, Photograph, Removed, Return, Span, Stability,

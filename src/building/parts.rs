@@ -1,8 +1,8 @@
 //! Identity, basis, wind, materials, build-ups and storeys.
 
-use super::{FloorKind, Status, WindRoute};
-use crate::quantity::{Force, Length, PerArea, Speed, Stress, Weight};
-use crate::standards::masonry::{Mortar, TerrainCategory, UnitKind};
+use super::{FloorKind, Status};
+use crate::quantity::{Force, Length, PerArea, Stress, Weight};
+use crate::standards::masonry::{Mortar, UnitKind};
 
 /// A value that departs from what the tool would derive, with the reason given for it.
 #[derive(Clone, Debug, PartialEq)]
@@ -84,55 +84,6 @@ pub struct Basis {
     pub gamma_m_shear: Option<Cause<f64>>,
     /// Factor on dead load where it helps; the default 0.9 has an empty reason.
     pub helping_factor: Cause<f64>,
-}
-
-/// Wind on the site: the route that decides, and the figures of each route that were given.
-#[derive(Clone, Debug)]
-pub struct Wind {
-    /// Which route decides.
-    pub route: WindRoute,
-    /// Route 1.
-    pub stated: Option<StatedWind>,
-    /// Route 2.
-    pub terrain: Option<TerrainWind>,
-}
-
-/// A net pressure with a written reason.
-#[derive(Clone, Debug)]
-pub struct StatedWind {
-    /// Net on the building, for returns and storeys.
-    pub overall: Stress,
-    /// Net on a panel.
-    pub panel: Stress,
-    /// Why this figure.
-    pub reason: String,
-}
-
-/// Site data for EN 1991-1-4 clause 4.
-#[derive(Clone, Debug)]
-pub struct TerrainWind {
-    /// Map value of the basic wind velocity.
-    pub v_map: Speed,
-    /// Altitude above sea level.
-    pub altitude: Length,
-    /// Terrain category.
-    pub category: TerrainCategory,
-    /// Reference height z.
-    pub height: Length,
-    /// Breadth across the wind, b.
-    pub breadth: Length,
-    /// Depth along the wind, d.
-    pub depth: Length,
-    /// Direction factor; default 1.0 with an empty reason.
-    pub c_dir: Cause<f64>,
-    /// Season factor.
-    pub c_season: Cause<f64>,
-    /// Probability factor.
-    pub c_prob: Cause<f64>,
-    /// Orography factor, with the reason (for 1.0 too).
-    pub c_o: Cause<f64>,
-    /// Whether windward and leeward pressures are taken as not fully correlated (0.85).
-    pub lack_of_correlation: bool,
 }
 
 /// Strength of the unit as known.

@@ -1,7 +1,7 @@
 //! The wind on the site: where it stands, what lies around it, and how the job reads it.
 
-use super::{Cause, Side, WindRoute};
-use crate::quantity::{Length, Speed, Stress};
+use super::{Along, Cause, Side, WindRoute};
+use crate::quantity::{Area, Length, Speed, Stress};
 use crate::standards::en1991_1_4::Ground;
 use crate::standards::masonry::TerrainCategory;
 
@@ -100,8 +100,10 @@ pub struct Town {
 pub struct Dominant {
     /// The face.
     pub side: Side,
-    /// Area of its openings over that of all others.
-    pub times: f64,
+    /// Area of its openings.
+    pub area: Area,
+    /// Area of the openings of all other faces.
+    pub others: Area,
     /// Which opening.
     pub words: String,
 }
@@ -122,10 +124,12 @@ pub enum RoofForm {
 pub struct Roof {
     /// Its form.
     pub form: RoofForm,
-    /// Pitch, degrees.
+    /// Pitch, degrees; nil for a flat roof.
     pub pitch: f64,
     /// Direction of the ridge, or of the eaves of a single slope.
-    pub ridge: super::Along,
+    pub ridge: Along,
+    /// Height of the eaves.
+    pub eaves: Length,
 }
 
 /// Exposure to wind from some directions.

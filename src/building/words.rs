@@ -44,6 +44,8 @@ WindRoute {
     Stated = "stated",
     /// Route 2.
     Terrain = "terrain",
+    /// Route 3: the UK charts as the engineer reads them.
+    Charts = "charts",
 });
 
 choice!(/// What is above a storey.

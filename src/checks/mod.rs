@@ -37,7 +37,7 @@ use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
 use outcome::{Hold, Outcome};
 use stability::Storey;
-use wind::Pressures;
+use wind::Wind;
 
 /// One section of the pack: a sheet with its drawings.
 pub struct Section {
@@ -67,7 +67,7 @@ pub struct Job<'a> {
     /// National values.
     pub annex: Annex,
     /// Wind on the site.
-    pub wind: Result<Pressures, Outside>,
+    pub wind: Result<Wind, Outside>,
     /// Loads led down, where its plan has floors.
     pub down: Option<TakeDown>,
     /// The storey's sharing, where it is given.
@@ -86,7 +86,7 @@ impl<'a> Job<'a> {
         let annex = Annex::UK;
         let wind = wind::pressures(&mut Sheet::silent(), building, &annex);
         let storey = building.stability.as_ref().map(|st| {
-            let pressures = wind.clone()?;
+            let pressures = wind.clone()?.along(st.wind_along);
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
         let holds = outcome::holds(building);

@@ -53,7 +53,7 @@ pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
             leaf.thickness,
         )?);
     }
-    let m = panels::model(b, p, &leaves, wind.panel, "wind sheet").ok_or_else(missing)?;
+    let m = panels::model(b, p, &leaves, wind.of_panel(p), "wind sheet").ok_or_else(missing)?;
     Ok(PanelModel { strengths_on: same_leaves(b, p), ..m })
 }
 

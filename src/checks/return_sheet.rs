@@ -18,7 +18,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                     let inputs = Inputs {
                         building: job.building,
                         ret,
-                        wind: *wind,
+                        wind: wind.of_return(job.building, ret),
                         storey: job.sharing(),
                         annex: &job.annex,
                     };

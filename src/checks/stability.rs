@@ -257,7 +257,7 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     let mut s = Sheet::recorder();
     s.note(format!("The wall removed braced: {}.", job.building.removed.braced.trim_end_matches('.')));
     let mut drawings = Vec::new();
-    match share(&mut s, job.building, st, *wind, &job.annex) {
+    match share(&mut s, job.building, st, wind.along(st.wind_along), &job.annex) {
         Ok(storey) => {
             if let Some(plans) = drawn(job.building, st, &storey) {
                 s.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));

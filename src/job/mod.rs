@@ -7,7 +7,7 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
+//! * `identity basis wind materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
 //!   the file's order
 //! * [`start`]: the job to start from
 
@@ -31,6 +31,7 @@ mod reader;
 mod returns;
 pub mod start;
 mod syntax;
+mod wind;
 mod words;
 
 #[cfg(test)]
@@ -79,7 +80,6 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let revision_tables = root.need("revisions").tables("revision", "letter");
     let revisions = identity::revisions(&revision_tables);
     let basis = basis::basis(root.may("basis").table("basis").as_ref());
-    let wind = root.need("wind").table("wind").and_then(|t| basis::wind(&t));
 
     let materials =
         materials::by_name("material", root.need("materials").named("material"), materials::material);
@@ -88,6 +88,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     });
     let storeys = Names::marked("storey", root.need("storeys").tables("storey", "mark"), ground::storey);
     ground::stacked(&storeys);
+    let wind =
+        root.need("wind").table("wind").and_then(|t| wind::wind(&t, &storeys, root.has("plan")));
 
     let plan_table = root.may("plan").table("plan");
     let north = plan_table.as_ref().map_or(Some(0.0), plan::north);

@@ -1,5 +1,7 @@
 //! The words of the job file for the kinds that the standards' tables are entered with.
 
+use crate::building::RoofForm;
+use crate::standards::en1991_1_4::Ground;
 use crate::standards::masonry::{Edge, Mortar, TerrainCategory, UnitKind};
 
 /// Kinds of unit.
@@ -30,6 +32,18 @@ pub const TERRAIN: &[(&str, TerrainCategory)] = &[
     ("III", TerrainCategory::III),
     ("IV", TerrainCategory::IV),
 ];
+
+/// What lifts the wind: Annex A.3.
+pub const GROUND: &[(&str, Ground)] = &[
+    ("hill", Ground::Hill),
+    ("ridge", Ground::Ridge),
+    ("cliff", Ground::Cliff),
+    ("escarpment", Ground::Escarpment),
+];
+
+/// Forms of roof.
+pub const ROOFS: &[(&str, RoofForm)] =
+    &[("duopitch", RoofForm::Duopitch), ("monopitch", RoofForm::Monopitch), ("flat", RoofForm::Flat)];
 
 /// Edges of a panel.
 pub const EDGES: &[(&str, Edge)] =

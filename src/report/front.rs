@@ -128,6 +128,9 @@ fn stability(b: &Building) -> Vec<String> {
         WindRoute::Terrain => {
             "Wind: EN 1991-1-4 clause 4 with a terrain category, see the wind sheet".to_owned()
         }
+        WindRoute::Charts => {
+            "Wind: EN 1991-1-4 and the charts of the UK National Annex as read, see the wind sheet".to_owned()
+        }
     }];
     if let Some(st) = &b.stability {
         out.push(match st.share_by {

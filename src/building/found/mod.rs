@@ -130,6 +130,23 @@ pub fn find(around: &Around<'_>) -> Found {
     Found { returns, panels, added: Vec::new() }
 }
 
+/// The side of the building on which a plan wall faces the outside at `s`, in the storey of the wall that comes
+/// out: none for a wall inside, along a neighbour, or askew.
+pub fn facing(b: &super::Building, mark: &str, s: Length) -> Option<Side> {
+    let around = Around {
+        walls: b.plan.iter().collect(),
+        storeys: b.storeys.iter().collect(),
+        floors: b.floors.iter().collect(),
+        build_ups: b.build_ups.iter().collect(),
+        neighbours: &b.neighbours,
+        storey: &b.removed.storey,
+    };
+    let floor = Floor::of(&around)?;
+    let line = floor.lines.iter().find(|l| l.wall.mark == mark)?;
+    let outside = floor.outside(line, s.base())?;
+    Some(storey::side(line.along, outside))
+}
+
 /// Whether a plan wall stands in the storey marked `storey`, the wall that comes out in `removed` alone.
 pub fn stands(wall: &PlanWall, storey: &str, removed: &str) -> bool {
     if wall.storeys.is_empty() {

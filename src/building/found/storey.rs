@@ -141,13 +141,7 @@ impl<'a> Floor<'a> {
                 if line.at < middle { -1.0 } else { 1.0 }
             }
         };
-        let facing = match (line.along, side < 0.0) {
-            (Along::X, true) => Side::Down,
-            (Along::X, false) => Side::Up,
-            (Along::Y, true) => Side::Left,
-            (Along::Y, false) => Side::Right,
-        };
-        (!self.around.neighbours.contains(&facing)).then_some(side)
+        (!self.around.neighbours.contains(&self::side(line.along, side))).then_some(side)
     }
 
     /// The middle of all walls in the direction `along`.
@@ -172,6 +166,16 @@ pub fn covered(around: &Around<'_>, storey: &str, (p, q): (f64, f64)) -> bool {
         let (x, y) = (range(f.from.0, f.to.0), range(f.from.1, f.to.1));
         x.0 < p && p < x.1 && y.0 < q && q < y.1
     })
+}
+
+/// The side on which a wall along `along` faces, `outside` being the sign of the direction across.
+pub const fn side(along: Along, outside: f64) -> Side {
+    match (along, outside < 0.0) {
+        (Along::X, true) => Side::Down,
+        (Along::X, false) => Side::Up,
+        (Along::Y, true) => Side::Left,
+        (Along::Y, false) => Side::Right,
+    }
 }
 
 /// Walls in one line that touch.

@@ -44,7 +44,7 @@ pub fn section(job: &Job<'_>, ret: &Return) -> Option<Section> {
 }
 
 fn stands<'a>(job: &Job<'_>, ret: &'a Return, footing: &'a Footing) -> Result<Stands<'a>, Outside> {
-    let wind = job.wind.clone()?;
+    let wind = job.wind.as_ref().map_err(Clone::clone)?.of_return(job.building, ret);
     let inputs = Inputs { building: job.building, ret, wind, storey: job.sharing(), annex: &job.annex };
     Stands::of(&inputs, ret, footing)
 }

@@ -122,7 +122,7 @@ pub fn of(job: &Job<'_>) -> Vec<Used> {
             let before = down.on_leaf_before.walls.iter().position(|s| s == stack);
             let Some(before) = before else { continue };
             for n in 0..down.on_leaf.down.walls[i].piers.len() {
-                out.push(used(job, down, (before, i), n, wind.panel));
+                out.push(used(job, down, (before, i), n, wind.worst.panel));
             }
         }
     }

@@ -1,7 +1,8 @@
 //! Wind and tilt of every level of the building in one direction.
 
 use crate::building::{Along, Building, TakeDown, line_of, storey_height, strip_height};
-use crate::quantity::{Force, Length, Moment, Stress};
+use crate::checks::wind::Wind;
+use crate::quantity::{Force, Length, Moment};
 use crate::solve::descent::Axis;
 
 /// The head of a storey.
@@ -15,7 +16,9 @@ pub struct Level {
     pub front: Length,
     /// Height of wind face collected.
     pub strip: Length,
-    /// Characteristic wind of the level.
+    /// Part of the roof in the wind of the level; nil where the roof is an upright face.
+    pub F_roof: Force,
+    /// Characteristic wind of the level, with the roof.
     pub F_k: Force,
     /// Characteristic wind of this level and all above it.
     pub F_above: Force,
@@ -36,17 +39,25 @@ pub const fn axis(along: Along) -> Axis {
 }
 
 /// Levels of the building for wind along `along`, lowest first.
-pub fn of(b: &Building, down: &TakeDown, along: Along, q: Stress) -> Vec<Level> {
+pub fn of(b: &Building, down: &TakeDown, along: Along, wind: &Wind) -> Vec<Level> {
+    let q = wind.along(along).overall;
+    let roof = wind.roof(along);
     let (begin, end) = front(b, along);
     let n = b.storeys.len();
-    let strip = |k: usize| strip_height(&b.storeys, k);
+    let top = |k: usize| k + 1 == n;
+    let strip = |k: usize| match roof {
+        // Up to the ceiling, and half of a gable; the slopes bring their own part.
+        Some(r) if top(k) => storey_height(b, k) / 2.0 + r.gable / 2.0,
+        _ => strip_height(&b.storeys, k),
+    };
     let mut out: Vec<Level> = Vec::new();
     let (mut F_above, mut M_above) = (Force::ZERO, Moment::ZERO);
     for k in (0..n).rev() {
         // What is above turns about this level by the height of the storey between.
         M_above =
             out.last().map_or(Moment::ZERO, |up: &Level| M_above + up.F_above * storey_height(b, k + 1));
-        let F_k = q * (end - begin) * strip(k);
+        let F_roof = roof.filter(|_| top(k)).map_or(Force::ZERO, |r| r.force * (end - begin));
+        let F_k = q * (end - begin) * strip(k) + F_roof;
         F_above = F_above + F_k;
         let load = passing(down, k);
         out.push(Level {
@@ -54,6 +65,7 @@ pub fn of(b: &Building, down: &TakeDown, along: Along, q: Stress) -> Vec<Level> 
             begin,
             front: end - begin,
             strip: strip(k),
+            F_roof,
             F_k,
             F_above,
             M_above,

@@ -47,8 +47,8 @@ pub fn of(job: &Job<'_>) -> Vec<Direction> {
     directions(job.building)
         .into_iter()
         .map(|along| {
-            let levels = levels::of(job.building, down, along, wind.overall);
-            let piers = piers::of(job, down, along, &levels, *wind);
+            let levels = levels::of(job.building, down, along, wind);
+            let piers = piers::of(job, down, along, &levels, wind.along(along));
             Direction { along, levels, piers }
         })
         .collect()
@@ -155,6 +155,7 @@ fn wind(b: &Building, d: &Direction) -> Table {
             format!("head of {}", b.storeys[l.storey].mark),
             print::show("h", l.strip.dynamic()).value,
             print::show("L", l.front.dynamic()).value,
+            kn(l.F_roof),
             kn(l.F_k),
             kn(l.F_above),
             kn(l.dead),
@@ -162,13 +163,14 @@ fn wind(b: &Building, d: &Direction) -> Table {
         ]
     });
     Table {
-        caption: "Levels: strip and front, the wind of the level, all wind from there up (characteristic), and the \
+        caption: "Levels: strip and front, the part of the roof, the wind of the level with it, all wind from there up (characteristic), and the \
                   vertical load that leans there, unfactored"
             .to_owned(),
         columns: vec![
             Column::words("level"),
             Column::numbers("strip, mm"),
             Column::numbers("front, mm"),
+            Column::numbers("roof, kN"),
             Column::numbers("wind, kN"),
             Column::numbers("from there up, kN"),
             Column::numbers("dead, kN"),

@@ -24,11 +24,11 @@ pub fn complete(b: Building) -> Building {
 
 fn from_plan(b: &Building) -> Option<Stability> {
     let down = take_down(b)?.ok()?;
-    let q = wind::pressures(&mut Sheet::silent(), b, &Annex::UK).ok()?.overall;
+    let wind = wind::pressures(&mut Sheet::silent(), b, &Annex::UK).ok()?;
     let gone = line_of(b.plan.iter().find(|w| w.removed)?)?;
     let along = if gone.along == Axis::X { Along::X } else { Along::Y };
     let k = b.storeys.iter().position(|s| s.mark == b.removed.storey)?;
-    let level = levels::of(b, &down, along, q).into_iter().nth(k)?;
+    let level = levels::of(b, &down, along, &wind).into_iter().nth(k)?;
     let concrete = b.storeys[k].floor_above == FloorKind::Concrete;
     let mut walls = bracing(b, &down, along, k);
     if concrete {
@@ -40,7 +40,8 @@ fn from_plan(b: &Building) -> Option<Stability> {
         front: (level.begin, level.begin + level.front),
         strip_height: level.strip,
         share_by: if concrete { ShareBy::Stiffness } else { ShareBy::Width },
-        force_above: level.F_above - level.F_k,
+        // With the part of the roof, where it comes at this level.
+        force_above: level.F_above - level.F_k + level.F_roof,
         dead: level.dead,
         imposed: level.imposed,
         walls,

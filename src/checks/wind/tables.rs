@@ -1,0 +1,101 @@
+//! All pressures side by side.
+
+use super::velocity::{Onto, shown};
+use super::{Derived, Pressures};
+use crate::building::{Building, Site};
+use crate::quantity::{Stress, print};
+use crate::trace::{Column, Sheet, Table};
+
+/// What the site gives, in one table; a panel with a pressure of its own stands beside it.
+pub fn pressures(s: &mut Sheet, b: &Building, site: &Site, d: &Derived) {
+    let turned = site.sectors.iter().any(|x| !x.bearings.is_empty());
+    s.table(|| {
+        let from = |o: &Onto| o.bearing.map_or_else(|| "any".to_owned(), |b| format!("{b}°"));
+        let speed = |o: &Onto| format!("{:.1}", o.v_b.base() / 1e3);
+        let rows = d.onto.iter().map(|o| vec![o.side.word().to_owned(), from(o), speed(o), shown(o.q_p)]);
+        Table {
+            caption: if turned {
+                "Wind onto each side of the plan".to_owned()
+            } else {
+                "Wind onto each side of the plan, the same from all directions".to_owned()
+            },
+            columns: vec![
+                Column::words("onto"),
+                Column::words("from"),
+                Column::numbers("basic velocity, m/s"),
+                Column::numbers("peak pressure, kN/m²"),
+            ],
+            rows: rows.collect(),
+            strong: vec![],
+        }
+    });
+    s.table(|| {
+        let mut rows = vec![
+            vec!["whole building".into(), "wind along x".into(), String::new(), String::new(), shown(d.along[0]), String::new()],
+            vec!["whole building".into(), "wind along y".into(), String::new(), String::new(), shown(d.along[1]), String::new()],
+        ];
+        for p in &d.panels {
+            let place = p.place.map_or_else(
+                || "place not on the plan".to_owned(),
+                |x| format!("on {}, zone {}", x.side.word(), p.zone),
+            );
+            let own = b.panels.iter().find(|x| x.mark == p.mark).and_then(|x| x.wind.as_ref());
+            let own = own.map_or_else(String::new, |c| {
+                format!("{} ({})", shown(c.value), print::significant(c.value.base() / p.worst.base()))
+            });
+            rows.push(vec![p.mark.clone(), place, shown(p.inward), shown(p.outward), shown(p.worst), own]);
+        }
+        Table {
+            caption: "Net characteristic pressures, kN/m²; in brackets the pressure stated for a panel over this one".to_owned(),
+            columns: vec![
+                Column::words("where"),
+                Column::words("which"),
+                Column::numbers("inward"),
+                Column::numbers("outward"),
+                Column::numbers("taken"),
+                Column::words("stated"),
+            ],
+            rows,
+            strong: vec![],
+        }
+    });
+}
+
+/// Stated figures, which are used, beside what the site gives.
+pub fn beside(s: &mut Sheet, b: &Building, stated: Pressures, d: &Derived) {
+    s.table(|| compare(stated, d, "Stated pressure beside the one of the site, kN/m²", "stated, used", "of the site"));
+    let _ = b;
+    let worst = d.worst();
+    if worst.overall > stated.overall || worst.panel > stated.panel {
+        s.note(
+            "The stated pressure is lower than the one of the site. The person who states it answers for the difference.",
+        );
+    }
+}
+
+/// Stated figures that are not used.
+pub fn unused(s: &mut Sheet, stated: Pressures, d: &Derived) {
+    s.table(|| compare(stated, d, "Stated pressure, not used, beside the one of the site, kN/m²", "stated", "of the site, used"));
+}
+
+fn compare(stated: Pressures, d: &Derived, caption: &str, ours: &str, theirs: &str) -> Table {
+    let row = |name: &str, a: Stress, z: Stress| {
+        vec![name.to_owned(), shown(a), shown(z), print::significant(a.base() / z.base())]
+    };
+    let mut rows = vec![
+        row("overall, wind along x", stated.overall, d.along[0]),
+        row("overall, wind along y", stated.overall, d.along[1]),
+    ];
+    rows.extend(d.panels.iter().map(|p| row(&format!("panel {}", p.mark), stated.panel, p.worst)));
+    Table {
+        caption: caption.to_owned(),
+        columns: vec![
+            Column::words("pressure"),
+            Column::numbers(ours),
+            Column::numbers(theirs),
+            Column::numbers("stated / site"),
+        ],
+        rows,
+        strong: vec![],
+    }
+}
