@@ -210,11 +210,10 @@ pub struct Led {
     pub junctions: Vec<String>,
 }
 
-/// Takes the loads that the job does not give from the plan: on returns without loads that are walls of
-/// the plan, on panels the least dead load over the length of their wall, and at junctions the least over
+/// Takes the loads that the job does not give from the plan as it was led down: on returns without loads that are
+/// walls of the plan, on panels the least dead load over the length of their wall, and at junctions the least over
 /// the wall met with its own weight.
-pub fn take_loads(b: &mut Building, led: &Led) {
-    let Some(Ok(down)) = take_down(b) else { return };
+pub fn take_loads(b: &mut Building, down: &TakeDown, led: &Led) {
     let number = |b: &Building, mark: &str| b.storeys.iter().position(|s| s.mark == mark);
     for i in 0..b.returns.len() {
         let r = &b.returns[i];

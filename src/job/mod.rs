@@ -291,9 +291,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         warnings: Vec::new(),
     };
     found::complete(&mut building, found);
-    plan::to_the_ground(reader, &building, &marks_of_plan);
-    let led = Led { panels: led_panels, junctions: led_junctions };
-    crate::building::take_loads(&mut building, &led);
+    if let Some(down) = plan::to_the_ground(reader, &building, &marks_of_plan) {
+        let led = Led { panels: led_panels, junctions: led_junctions };
+        crate::building::take_loads(&mut building, &down, &led);
+    }
     if !building.floors.is_empty() {
         bearings::of_led_loads(reader, &building, &of_loads);
     }

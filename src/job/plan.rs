@@ -10,7 +10,8 @@ use super::reader::{Reader, Span, Table};
 use super::words::{NORTH, TURN};
 use crate::building::found;
 use crate::building::{
-    Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey, take_down,
+    Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey, TakeDown,
+    take_down,
 };
 use crate::error::Kind;
 use crate::quantity::{Length, LineLoad, Stress};
@@ -299,9 +300,12 @@ pub fn closes(walls: &Names<'_, PlanWall>, around: &found::Around<'_>) {
     }
 }
 
-/// Records where a load of the plan does not reach the ground.
-pub fn to_the_ground(reader: &Reader, b: &Building, marks: &Marks) {
-    let Some(Err(trouble)) = take_down(b) else { return };
+/// Leads the loads of the plan down; records where one does not reach the ground.
+pub fn to_the_ground(reader: &Reader, b: &Building, marks: &Marks) -> Option<TakeDown> {
+    let trouble = match take_down(b)? {
+        Ok(down) => return Some(down),
+        Err(trouble) => trouble,
+    };
     let place = marks.0.iter().find(|(mark, _)| *mark == trouble.mark).map(|(_, place)| place.clone());
     let when = if trouble.after { "once the wall is out" } else { "before the removal" };
     let fault = reader
@@ -316,4 +320,5 @@ pub fn to_the_ground(reader: &Reader, b: &Building, marks: &Marks) {
             trouble.sketch
         )
     });
+    None
 }

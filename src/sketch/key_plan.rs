@@ -2,10 +2,12 @@
 
 use kurbo::{Point, Rect, Vec2};
 
+use super::around::{Around, PlanWind, surroundings};
 use super::board::{Board, Words};
-use super::dimension::{self, mm};
+use super::dimension::mm;
 use super::drawing::{Drawing, Role};
 use super::note::{Note, Spot};
+use super::panel_lines::{ROW, rows, stretch};
 use super::pen::Pen;
 use super::plan::{self, Fate, PlanWall, When, paper, wall_note};
 use super::scale::{Frame, Scale, fit_pair};
@@ -48,39 +50,6 @@ pub struct PlanMark {
     pub to: (f64, f64),
 }
 
-/// A wind arrow at an edge of the plan.
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub enum PlanWind {
-    /// Blows to the right, from the left edge.
-    Rightwards,
-    /// Blows to the left.
-    Leftwards,
-    /// Blows up the sheet.
-    Upwards,
-    /// Blows down the sheet.
-    Downwards,
-}
-
-impl PlanWind {
-    fn along(self) -> Vec2 {
-        match self {
-            PlanWind::Rightwards => Vec2::new(1.0, 0.0),
-            PlanWind::Leftwards => Vec2::new(-1.0, 0.0),
-            PlanWind::Upwards => Vec2::new(0.0, -1.0),
-            PlanWind::Downwards => Vec2::new(0.0, 1.0),
-        }
-    }
-
-    fn words(self) -> &'static str {
-        match self {
-            PlanWind::Rightwards => "from the left",
-            PlanWind::Leftwards => "from the right",
-            PlanWind::Upwards => "from below",
-            PlanWind::Downwards => "from above",
-        }
-    }
-}
-
 /// Draws the key plan before and after at one scale: in `row` beside each other, or each within `alone` one
 /// above the other, whichever is larger.
 pub fn key_plans(views: &[KeyPlan; 2], row: Frame, alone: Frame) -> [Drawing; 2] {
@@ -112,7 +81,8 @@ fn draw(view: &KeyPlan, clear: f64, scale: Scale) -> Drawing {
         stretch(&mut board, view, panel, row, scale);
     }
     let marked = |name: &str| view.marks.iter().any(|mark| mark.mark == name);
-    let told = |w: &PlanWall| view.walls.len() <= NAMED || w.fate != Fate::Stays;
+    let all_named = all_named(view, scale);
+    let told = |w: &PlanWall| all_named || w.fate != Fate::Stays;
     let there = |w: &PlanWall| view.when == When::After || view.when.shows(w.fate);
     for wall in view.walls.iter().filter(|w| !w.name.is_empty() && !marked(&w.name) && told(w) && there(w)) {
         let text = Text::plain(&format!("{}{}", wall.name, word(wall.fate, view.when)));
@@ -131,7 +101,12 @@ fn draw(view: &KeyPlan, clear: f64, scale: Scale) -> Drawing {
     board.keep(Rect { y0: extent.y0 - HEAD - clear, ..extent });
     board.finish(Words {
         name: view.name.clone(),
-        caption: format!("Key plan, {}, {} the removal{}", view.title, view.when.word(), key(view)),
+        caption: format!(
+            "Key plan, {}, {} the removal{}",
+            view.title,
+            view.when.word(),
+            key(view, all_named)
+        ),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -166,58 +141,17 @@ fn arrow(board: &mut Board, span: &PlanMark, half: f64, scale: Scale) {
 /// More walls than these are not all named: nobody could read it.
 const NAMED: usize = 60;
 
+/// Paper that a name needs, mm²: it is about 15 mm by 3 mm, with some room around it.
+const ROOM: f64 = 60.0;
+
+/// Whether every wall can be named so that somebody reads it.
+fn all_named(view: &KeyPlan, scale: Scale) -> bool {
+    let paper = plan::extent(&view.walls, scale).area();
+    view.walls.len() <= NAMED && ROOM * view.walls.len() as f64 <= paper
+}
+
 /// Paper over a plan for the north point, mm.
 const HEAD: f64 = 18.5;
-
-/// Distance between the lines of panels that run beside each other, mm on paper.
-const ROW: f64 = 4.4;
-
-/// For each panel, how many rows farther out than the first its line runs, clear of the panels before it.
-fn rows(panels: &[PlanMark]) -> Vec<usize> {
-    let mut rows: Vec<usize> = Vec::new();
-    for (n, panel) in panels.iter().enumerate() {
-        let taken: Vec<usize> =
-            (0..n).filter(|i| run_together(&panels[*i], panel)).map(|i| rows[i]).collect();
-        rows.push((0..).find(|row| !taken.contains(row)).unwrap_or(0));
-    }
-    rows
-}
-
-/// Whether two stretches lie on one line and share some of it.
-fn run_together(a: &PlanMark, b: &PlanMark) -> bool {
-    let (from, to) = (Point::from(a.from), Point::from(a.to));
-    let along = (to - from).normalize();
-    let off = |p: (f64, f64)| along.cross(Point::from(p) - from).abs();
-    let on = |p: (f64, f64)| along.dot(Point::from(p) - from);
-    let (start, end) = (on(b.from).min(on(b.to)), on(b.from).max(on(b.to)));
-    off(b.from) < 1.0 && off(b.to) < 1.0 && start < (to - from).hypot() - 1.0 && end > 1.0
-}
-
-/// Distance of a panel's line from the thickest wall's face, mm on paper.
-const STRETCH: f64 = 2.2;
-
-/// The line that shows how far a panel runs, on the side away from the middle of the plan.
-fn stretch(board: &mut Board, view: &KeyPlan, panel: &PlanMark, row: usize, scale: Scale) {
-    let (from, to) = (paper(scale, panel.from), paper(scale, panel.to));
-    let along = (to - from).normalize();
-    let side = along.turn_90();
-    let centre = plan::extent(&view.walls, scale).center();
-    let out = if (from.midpoint(to) - centre).dot(side) < 0.0 { -side } else { side };
-    let half = view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max);
-    let shift = out * (scale.paper(half) + STRETCH + ROW * row as f64);
-    board.line(Pen::Leader, from + shift, to + shift);
-    for end in [from, to] {
-        board.line(Pen::Leader, end + shift - out, end + shift + out);
-    }
-    let mut note = Note::new(Role::Mark, from.midpoint(to) + shift, Text::mark(&panel.mark));
-    for share in [0.5, 0.4, 0.6, 0.3, 0.7] {
-        for sign in [1.0, -1.0] {
-            let at = from.lerp(to, share) + shift + out * sign;
-            note = note.spot(Spot::new(at, (out.x * sign).round(), (out.y * sign).round()));
-        }
-    }
-    board.note(note.rank(1));
-}
 
 /// A mark beside a stretch of wall.
 fn stretch_note(from: Point, to: Point, off: f64, text: Text) -> Note {
@@ -236,47 +170,7 @@ fn stretch_note(from: Point, to: Point, off: f64, text: Text) -> Note {
     note
 }
 
-/// What stands around a plan.
-pub(super) struct Around<'a> {
-    /// Wind arrows.
-    pub winds: &'a [PlanWind],
-    /// North, degrees clockwise from the top of the sheet.
-    pub north: Option<f64>,
-    /// Overall dimensions.
-    pub dimensions: bool,
-    /// How much farther out than usual everything stands, mm on paper.
-    pub clear: f64,
-}
-
-/// Overall dimensions, wind arrows and north point around a plan.
-pub(super) fn surroundings(board: &mut Board, walls: &[PlanWall], around: &Around<'_>, scale: Scale) {
-    let extent = plan::extent(walls, scale);
-    let clear = around.clear;
-    if around.dimensions {
-        let (w, h) = (extent.width() * scale.0, extent.height() * scale.0);
-        let out = 11.0 + clear;
-        dimension::across(board, (extent.x0, extent.x1), extent.y1 + out, extent.y1, mm(w));
-        dimension::up(board, (extent.y1, extent.y0), extent.x0 - out, extent.x0, mm(h));
-    }
-    let c = extent.center();
-    // Wind from the sides is drawn over the ends of the plan: beside them it would take the plan's room.
-    let over = extent.y0 - 7.0 - clear;
-    let second = if extent.width() < 40.0 { over - 6.0 } else { over };
-    for wind in around.winds {
-        let tip = match wind {
-            PlanWind::Rightwards => Point::new(extent.x0 + plan::WIND, over),
-            PlanWind::Leftwards => Point::new(extent.x1 - plan::WIND, second),
-            PlanWind::Upwards => Point::new(c.x, extent.y1 + 5.0 + clear),
-            PlanWind::Downwards => Point::new(c.x, extent.y0 - 5.0 - clear),
-        };
-        plan::wind(board, tip, wind.along(), "wind");
-    }
-    if let Some(north) = around.north {
-        plan::north(board, Point::new(extent.x1 - 4.0, extent.y0 - 10.5 - clear), north);
-    }
-}
-
-fn key(view: &KeyPlan) -> String {
+fn key(view: &KeyPlan, all_named: bool) -> String {
     let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
     let mut key = String::new();
     let before = view.when == When::Before;
@@ -286,7 +180,7 @@ fn key(view: &KeyPlan) -> String {
     if has(Fate::Added) && !before {
         key += "; crossed hatching: new";
     }
-    if view.walls.len() > NAMED {
+    if !all_named {
         key += "; walls that stay are not named";
     }
     if !view.beams.is_empty() {

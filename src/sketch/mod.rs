@@ -12,10 +12,12 @@
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
+pub mod around;
 pub mod bearing_elevation;
 pub mod bearing_section;
 pub mod board;
 pub mod chain;
+mod choices;
 pub mod dimension;
 pub mod drawing;
 pub mod footing;
@@ -27,6 +29,7 @@ pub mod load;
 pub mod load_stack;
 pub mod note;
 pub mod panel_elevation;
+mod panel_lines;
 pub mod panel_section;
 pub mod pen;
 pub mod place;
@@ -50,12 +53,13 @@ pub(crate) mod tests;
 pub mod text;
 pub mod view;
 
+pub use around::PlanWind;
 pub use bearing_elevation::{BearingElevation, Stone, bearing_elevation};
 pub use bearing_section::{BearingSection, bearing_section};
 pub use chain::{Branch, Chain, ChainLink, Known, chain};
 pub use drawing::{Drawing, Item};
 pub use footing::{FootingSketch, Pressure, footing_sketch};
-pub use key_plan::{KeyPlan, PlanMark, PlanWind, key_plans};
+pub use key_plan::{KeyPlan, PlanMark, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
 pub use panel_section::{Floor, PanelSection, panel_section};

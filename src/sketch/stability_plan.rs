@@ -2,9 +2,9 @@
 
 use kurbo::Point;
 
+use super::around::{Around, PlanWind, surroundings};
 use super::board::{Board, Words};
 use super::drawing::{Drawing, Role};
-use super::key_plan::{Around, PlanWind, surroundings};
 use super::note::Note;
 use super::plan::{self, Fate, PlanWall, When, wall_note};
 use super::scale::{Frame, Scale, fit_pair};
@@ -55,13 +55,18 @@ fn draw(view: &StabilityPlan, when: When, scale: Scale) -> Drawing {
     }
     let around = Around { winds: &[view.wind], north: None, dimensions: false, clear: 0.0 };
     surroundings(&mut board, &view.walls, &around, scale);
-    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate) && when == When::After;
-    let dashed = if has(Fate::Removed) { "; dashed: removed" } else { "" };
-    let crossed = if has(Fate::Added) { "; crossed hatching: new" } else { "" };
+    let has = |fate| view.walls.iter().any(|wall| wall.fate == fate);
+    let after = when == When::After;
+    let gone = match (has(Fate::Removed), after) {
+        (true, true) => "; dashed: removed",
+        (true, false) => "; thin lines across a wall: where it is cut",
+        (false, _) => "",
+    };
+    let crossed = if has(Fate::Added) && after { "; crossed hatching: new" } else { "" };
     board.finish(Words {
         name: format!("{}-{}", view.name, when.word()),
         caption: format!(
-            "Shares of the storey's wind, {}, {} the removal{dashed}{crossed}",
+            "Shares of the storey's wind, {}, {} the removal{gone}{crossed}",
             view.title,
             when.word()
         ),

@@ -210,3 +210,34 @@ fn small_frames_are_kept() {
         assert!(drawing.width <= column.width, "{} is {} wide", drawing.name, drawing.width);
     }
 }
+
+/// Names that nobody could read are left out, and the drawing says so; what comes out keeps its name.
+#[test]
+fn a_long_row_of_houses_is_drawn_without_the_names_of_what_stays() {
+    let mut row = plans();
+    for view in &mut row {
+        view.walls.truncate(7);
+        for i in 0..16 {
+            let x = 8200.0 + 2000.0 * f64::from(i);
+            for (k, y) in [0.0, 7000.0].into_iter().enumerate() {
+                view.walls.push(wall(&format!("H{i}-{k}"), (x, y), (x + 2000.0, y), 215.0, Fate::Stays));
+            }
+            view.walls.push(wall(
+                &format!("H{i}"),
+                (x + 2000.0, 0.0),
+                (x + 2000.0, 7000.0),
+                215.0,
+                Fate::Stays,
+            ));
+        }
+    }
+    assert!(row[0].walls.len() < 60);
+    for drawing in key_plans(&row, FRAME, FRAME) {
+        show(&drawing, "-row");
+        sound(&drawing);
+        assert!(drawing.caption.contains("walls that stay are not named"), "{}", drawing.caption);
+        let names: Vec<String> = drawing.labels().map(|l| l.plain()).collect();
+        assert!(names.iter().any(|n| n.starts_with("W5 ")), "{names:?}");
+        assert!(!names.iter().any(|n| n.starts_with('H') || n == "W1"), "{names:?}");
+    }
+}

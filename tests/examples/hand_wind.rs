@@ -7,15 +7,18 @@ use super::job::{BLOCK_140, PLAIN_RETURN, with_return};
 use perpend::trace::{Entry, Sheet};
 
 const TERRAIN: &str = r#"
-[wind.terrain]
+[wind.site]
 v_map = "22.5 m/s"
 altitude = "120 m"
-category = "III"
 height = "12.0 m"
-breadth = "10 m"
-depth = "20.0 m"
+along_x = "20.0 m"
+along_y = "20.0 m"
 c_o = { value = 1.1, reason = "A long slope." }
 lack_of_correlation = true
+
+[[wind.sectors]]
+bearings = "any"
+category = "III"
 "#;
 
 /// The value printed under `name`, last.
@@ -27,7 +30,13 @@ fn printed(s: &Sheet, name: &str) -> f64 {
         Entry::Step(step) => Some(step.result.clone()),
         _ => None,
     };
-    let found = s.entries.iter().rev().filter_map(of).find(|v| v.name == name);
+    // Of columns the last.
+    let flat = s.entries.iter().flat_map(|e| match e {
+        Entry::Columns(c) => c.rows.iter().filter_map(|r| r.entries().last().cloned()).collect(),
+        other => vec![other.clone()],
+    });
+    let flat: Vec<Entry> = flat.collect();
+    let found = flat.iter().rev().filter_map(of).find(|v| v.name == name);
     found.unwrap_or_else(|| panic!("{name} stands")).value.value
 }
 
@@ -61,14 +70,14 @@ fn wind_by_terrain_by_hand() {
     let i_v = 1.0 / (1.1 * 40.0_f64.ln());
     let q_p = (1.0 + 7.0 * i_v) * 0.5 * 1.226 * v_m * v_m * 1e-6;
     same("q_p", q_p);
-    // h/d = 12/20 = 0.6. D: c_pe,1 = 1.0 throughout. E: -0.3 at 0.25, -0.5 at 1: -0.3933. A, B: -1.4, -1.1.
-    let c_e = -0.3_f64 - 0.2 * (0.6 - 0.25) / 0.75;
-    assert!((c_e + 0.3933).abs() < 5e-5);
-    let (c_d, c_a, c_b) = (1.0, -1.4, -1.1);
-    // Overall, with 0.85 for lack of correlation; local against +0.2 and -0.3 inside.
+    // h/d = 12/20 = 0.6 along x and y. Of 10 m² and more, D: 0.7 at 0.25, 0.8 at 1: 0.7467; E: -0.3 and -0.5: -0.3933.
+    let step = (0.6_f64 - 0.25) / 0.75;
+    let (c_d, c_e) = (0.7 + 0.1 * step, -0.3 - 0.2 * step);
+    assert!((c_d - 0.7467).abs() < 5e-5 && (c_e + 0.3933).abs() < 5e-5);
+    // Overall, with 0.85 for lack of correlation; c_s c_d is 1.
     same("q_net", q_p * 0.85 * (c_d - c_e));
-    same("q_in", q_p * (c_d + 0.3));
-    same("q_mid", q_p * (0.2 - c_b));
-    same("q_cor", q_p * (0.2 - c_a));
+    // Locally, of 1 m²: D 1.0 against -0.3 inside; A -1.4 against +0.2 inside.
+    same("q_in", q_p * 1.3);
+    same("q_out", q_p * 1.6);
     same("q_panel", q_p * 1.6);
 }

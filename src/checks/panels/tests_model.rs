@@ -42,7 +42,7 @@ fn house() -> Building {
             gamma_m_shear: None,
             helping_factor: cause(0.9),
         },
-        wind: Wind { route: WindRoute::Stated, stated: None, terrain: None },
+        wind: Wind { route: WindRoute::Stated, stated: None, site: None },
         materials: Vec::new(),
         build_ups: vec![BuildUp {
             name: "outer wall".to_owned(),

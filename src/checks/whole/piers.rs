@@ -43,6 +43,7 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
     // The pier stands alone: nothing of the job's own returns leans on it.
     let alone = Building { returns: Vec::new(), ..b.clone() };
     let mut out = All::default();
+    let mut known: HashMap<Like, (f64, String)> = HashMap::new();
     for level in levels {
         for after in [false, true] {
             let (state, leaf) =
@@ -52,7 +53,12 @@ pub fn of(job: &Job<'_>, down: &TakeDown, along: Along, levels: &[Level], wind: 
                 for whole in together(b, leaf, &line.walls) {
                     let Whole { i, name, pier } = whole;
                     let share = line.share * (pier.to - pier.from) / line.length;
-                    let used = worked(job, &alone, leaf, i, &pier, level, share, wind);
+                    // Before and after, and from house to house, many are used alike.
+                    let like = Like::new(b, leaf, i, &pier, level, share);
+                    let used = known
+                        .entry(like)
+                        .or_insert_with(|| worked(job, &alone, leaf, i, &pier, level, share, wind))
+                        .clone();
                     out.note(name, level, &pier, (after, share, used));
                 }
             }
@@ -111,6 +117,26 @@ fn joined(a: Pier, z: Pier) -> Pier {
         out.sides[1][k] = a.sides[1][k] + z.sides[1][k];
     }
     out
+}
+
+/// All that the use of a pier follows from, to the last bit; wind and level are those of its storey.
+#[derive(PartialEq, Eq, Hash)]
+struct Like {
+    build_up: String,
+    storey: usize,
+    figures: [u64; 8],
+}
+
+impl Like {
+    fn new(b: &Building, leaf: &State, i: usize, pier: &Pier, level: &Level, share: f64) -> Self {
+        let ([g, q, u], [m, n, o]) = (pier.head, pier.moment);
+        let figures = [pier.to - pier.from, share, g, q, u, m, n, o];
+        Self {
+            build_up: b.plan[leaf.walls[i].wall].build_up.clone(),
+            storey: level.storey,
+            figures: figures.map(f64::to_bits),
+        }
+    }
 }
 
 /// Piers in the order in which they were found.

@@ -156,10 +156,10 @@ pub const SLIPS: &[Slip] = &[
         &["panel P2, after: `right` says how the edge is held, but not why"],
     ),
     slip(
-        "direction factor without a reason",
+        "season factor without a reason",
         "lack_of_correlation = true",
-        "c_dir = 0.85",
+        "c_season = 0.85",
         "0.85",
-        &["wind by terrain: `c_dir` is the number 0.85", "without a reason"],
+        &["site of the wind: `c_season` is the number 0.85", "without a reason"],
     ),
 ];
