@@ -55,6 +55,8 @@ pub struct AreaLoad {
     pub imposed: Stress,
     /// Characteristic uplift of the wind.
     pub uplift: Stress,
+    /// Whether the job gives the uplift; else that of the wind sheet is taken, where it is worked out.
+    pub uplift_given: bool,
     /// Where the figures come from.
     pub source: String,
 }

@@ -291,6 +291,13 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         warnings: Vec::new(),
     };
     found::complete(&mut building, found);
+    // What the wind lifts is part of what the plan leads down.
+    let unknown = crate::checks::wind::roof::lift(&mut building);
+    for name in unknown {
+        reader.warn(format!(
+            "area load {name}: its roof is taken not to lift: give `roof` in [wind.site], or `uplift` with the load"
+        ));
+    }
     if let Some(down) = plan::to_the_ground(reader, &building, &marks_of_plan) {
         let led = Led { panels: led_panels, junctions: led_junctions };
         crate::building::take_loads(&mut building, &down, &led);

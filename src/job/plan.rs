@@ -172,6 +172,7 @@ pub fn area_load(name: &str, t: &Table<'_>) -> Option<AreaLoad> {
         dead: dead?,
         imposed: imposed?,
         uplift: uplift?,
+        uplift_given: t.has("uplift"),
         source: source.unwrap_or_default(),
     })
 }

@@ -25,6 +25,7 @@ pub const UNITS: &[Unit] = &[
     unit("mm", "mm", (0, 1, 0), 1.0),
     unit("m", "m", (0, 1, 0), 1e3),
     unit("cm", "cm", (0, 1, 0), 10.0),
+    unit("km", "km", (0, 1, 0), 1e6),
     unit("mm2", "mm²", (0, 2, 0), 1.0),
     unit("m2", "m²", (0, 2, 0), 1e6),
     unit("kN", "kN", (1, 0, 0), 1e3),

@@ -56,7 +56,7 @@ fn before_the_sheets(bencher: Bencher<'_, '_>) {
 fn with_inputs(name: &str, run: impl FnOnce(&Inputs<'_>)) {
     let building = job::read("job.toml", &demo(name)).expect("a valid job");
     let job = Job::new(&building);
-    let wind = *job.wind.as_ref().expect("wind within the method");
+    let wind = job.wind.as_ref().expect("wind within the method").worst;
     run(&Inputs {
         building: &building,
         ret: &building.returns[0],

@@ -5,6 +5,7 @@ use super::velocity::Onto;
 use crate::building::{self, Building, FloorKind, Roof, RoofForm, Site};
 use crate::quantity::functions::max;
 use crate::quantity::{Length, LineLoad, Stress};
+use crate::standards::annex::Annex;
 use crate::standards::en1991_1_4::roof::{self, RoofWind};
 use crate::trace::{Outside, Sheet};
 use crate::{calc, given, verify};
@@ -72,16 +73,47 @@ pub fn both(
     Ok(both)
 }
 
+/// Whether an area load lies over a top storey.
+fn is_roof(b: &Building, name: &str) -> bool {
+    let over = |mark: &str| b.storey(mark).is_some_and(|x| x.floor_above == FloorKind::Roof);
+    b.floors.iter().any(|f| f.load == name && over(&f.storey))
+}
+
+/// Gives the roofs of the plan the uplift of the wind where the job states none; yields the names of those
+/// whose uplift nothing says.
+pub fn lift(b: &mut Building) -> Vec<String> {
+    let asks = |b: &Building, a: &building::AreaLoad| !a.uplift_given && is_roof(b, &a.name);
+    if !b.area_loads.iter().any(|a| asks(b, a)) {
+        return Vec::new();
+    }
+    // A site outside the method has no uplift; its sheet says so and nothing is adequate then.
+    let Ok(wind) = super::pressures(&mut Sheet::silent(), b, &Annex::UK) else { return Vec::new() };
+    let roof = wind.derived.and_then(|d| d.roof);
+    let mut unknown = Vec::new();
+    for n in 0..b.area_loads.len() {
+        if !asks(b, &b.area_loads[n]) {
+            continue;
+        }
+        match roof {
+            Some([x, y]) => b.area_loads[n].uplift = max(max(x.uplift, y.uplift), Stress::ZERO),
+            None => unknown.push(b.area_loads[n].name.clone()),
+        }
+    }
+    unknown
+}
+
 /// The uplift with which the take-down works must cover the one of the wind.
 fn against_loads(s: &mut Sheet, b: &Building, both: [Along; 2]) {
-    let over = |mark: &str| b.storey(mark).is_some_and(|x| x.floor_above == FloorKind::Roof);
-    let used = |name: &str| b.floors.iter().any(|f| f.load == name && over(&f.storey));
-    for load in b.area_loads.iter().filter(|a| used(&a.name)) {
+    for load in b.area_loads.iter().filter(|a| is_roof(b, &a.name)) {
         given!(s, "uplift for wind along x, not below nought", "above", U_1 = max(both[0].uplift, Stress::ZERO));
         given!(s, "for wind along y", "above", U_2 = max(both[1].uplift, Stress::ZERO));
+        calc!(s, "5.3", "uplift of the roof per area on plan, characteristic", q_W = max(U_1, U_2));
+        if !load.uplift_given && load.uplift == q_W {
+            s.note(format!("The load take-down works with this uplift of {}.", load.name));
+            continue;
+        }
         let source = format!("area load {}", load.name);
         given!(s, "uplift in the load take-down", &source, q_U = load.uplift);
-        calc!(s, "5.3", "uplift of the roof per area on plan, characteristic", q_W = max(U_1, U_2));
         verify!(s, "roof-uplift", "5.3, 7.2.3 to 7.2.5", "uplift of the roof that the take-down works with", q_W <= q_U);
         if q_W > q_U {
             s.note(format!(

@@ -457,6 +457,6 @@ pub const SLIPS: &[Slip] = &[
         "height = \"2.40 m\"\nposition = [\"3.2 m\", \"0.32 m\"]",
         "height = 2400\nposition = [\"3.2 m\", \"0.32 m\"]",
         "2400",
-        &["`height` is the number 2400 without a unit", "units: m, mm or cm", "height = \"2400 mm\""],
+        &["`height` is the number 2400 without a unit", "units: m, mm, cm or km", "height = \"2400 mm\""],
     ),
 ];

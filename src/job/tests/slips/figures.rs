@@ -17,7 +17,7 @@ pub const SLIPS: &[Slip] = &[
         "640",
         &[
             "return R1: `length` is the number 640 without a unit",
-            "units: mm, m or cm",
+            "units: mm, m, cm or km",
             "length = \"640 mm\"",
         ],
     ),
@@ -33,7 +33,7 @@ pub const SLIPS: &[Slip] = &[
         "length = \"640 mm\"",
         "length = \"640 mn\"",
         "\"640 mn\"",
-        &["has the unknown unit \"mn\"", "units: mm, m or cm", "write the unit as mm"],
+        &["has the unknown unit \"mn\"", "units: mm, m, cm or km", "write the unit as mm"],
     ),
     slip(
         "unit in capitals",
@@ -47,7 +47,7 @@ pub const SLIPS: &[Slip] = &[
         "length = \"640 mm\"",
         "length = \"640 kN\"",
         "\"640 kN\"",
-        &["has the unit kN, which is not that of a length", "write one of the units mm, m or cm"],
+        &["has the unit kN, which is not that of a length", "write one of the units mm, m, cm or km"],
     ),
     slip(
         "comma for a point",
