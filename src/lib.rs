@@ -8,7 +8,7 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity solve trace standards building job sketch checks pack report files many cli`.
+//! this order: `error quantity solve trace standards building wind job sketch checks pack report files many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
@@ -26,6 +26,7 @@ pub mod sketch;
 pub mod solve;
 pub mod standards;
 pub mod trace;
+pub mod wind;
 
 use std::path::Path;
 

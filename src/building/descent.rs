@@ -3,6 +3,8 @@
 use super::found::{REACH, stands};
 use super::{Along, Before, Building, Load, PlanWall, heights};
 use crate::quantity::{Force, Length, LineLoad};
+use crate::standards::annex::Annex;
+use crate::standards::en1990::Combination;
 use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 
 /// Source of a load that comes from the plan.
@@ -242,7 +244,9 @@ pub fn take_loads(b: &mut Building, down: &TakeDown, led: &Led) {
             continue;
         };
         if let Some((wall, on)) = down.on_leaf.wall(b, &r.junction.to, storey) {
-            b.returns[i].junction.dead = LineLoad::new(least_dead(wall, on) + wall.weight);
+            let (dead, lift) = least_dead(wall, on, over_helping(b));
+            b.returns[i].junction.dead = LineLoad::new(dead + wall.weight);
+            b.returns[i].junction.uplift = LineLoad::new(lift);
         }
     }
     for i in 0..b.panels.len() {
@@ -251,25 +255,34 @@ pub fn take_loads(b: &mut Building, down: &TakeDown, led: &Led) {
         if left_out(b, &p.mark, &led.panels)
             && let Some((wall, on)) = down.on_leaf.wall(b, on, storey)
         {
-            b.panels[i].dead_above = LineLoad::new(least_dead(wall, on));
+            let (dead, lift) = least_dead(wall, on, over_helping(b));
+            b.panels[i].dead_above = LineLoad::new(dead);
+            b.panels[i].lift_above = LineLoad::new(lift);
         }
     }
 }
 
-/// The least dead load per length at the head of a wall, point loads left out: what helps a panel must
-/// be there over all of it.
-fn least_dead(wall: &Wall, on: &descent::OnWall) -> f64 {
+/// How much dead load that helps one unit of uplift undoes: EN 1990 6.4.3.2.
+fn over_helping(b: &Building) -> f64 {
+    let helping = b.basis.helping_factor.value;
+    Combination::Helping.factors(&Annex::UK, helping).gamma_U / helping
+}
+
+/// Dead load and uplift per length at the head of a wall where the least is left of the one, each unit of the other
+/// undoing `undoes` of it; point loads left out: what helps a panel must be there over all of it.
+fn least_dead(wall: &Wall, on: &descent::OnWall, undoes: f64) -> (f64, f64) {
     let Place { from, to, .. } = wall.place;
     let mut cuts = vec![from, to];
     cuts.extend(on.head.lines.iter().flat_map(|l| [l.from, l.to]).filter(|c| from < *c && *c < to));
     cuts.sort_by(f64::total_cmp);
     cuts.dedup();
-    let over = |a: f64, z: f64| -> f64 {
+    let over = |a: f64, z: f64| {
         let covers = |l: &&descent::Line| l.from <= a && z <= l.to;
-        on.head.lines.iter().filter(covers).map(|l| l.load[0]).sum()
+        on.head.lines.iter().filter(covers).fold((0.0, 0.0), |(g, u), l| (g + l.load[0], u + l.load[2]))
     };
-    let least = cuts.windows(2).map(|c| over(c[0], c[1])).fold(f64::INFINITY, f64::min);
-    if least.is_finite() { least } else { 0.0 }
+    let left = |(g, u): &(f64, f64)| g - undoes * u;
+    let pieces = cuts.windows(2).map(|c| over(c[0], c[1]));
+    pieces.min_by(|a, z| left(a).total_cmp(&left(z))).unwrap_or_default()
 }
 
 fn model(b: &Building, after: bool, leaf: bool) -> (Vec<Stack>, Model) {

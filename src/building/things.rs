@@ -114,6 +114,8 @@ pub struct Flange {
     pub next_wall_right: Option<Length>,
     /// Dead load per length in the wall met at the foot of the return, own weight included.
     pub dead: LineLoad,
+    /// Roof uplift that is not off this load yet.
+    pub uplift: LineLoad,
 }
 
 /// How the head of a return is held in its plane.
@@ -312,6 +314,8 @@ pub struct Panel {
     pub on: Option<String>,
     /// Dead load per length on the loaded leaf at the top of the panel.
     pub dead_above: LineLoad,
+    /// Roof uplift that is not off this load yet.
+    pub lift_above: LineLoad,
     /// Own net pressure instead of the site's.
     pub wind: Option<Cause<Stress>>,
     /// Which route decides.

@@ -1,6 +1,6 @@
 //! The edge of a floor along the top of a panel: the wind that draws the wall off it, and its straps.
 
-use super::panels::PanelModel;
+use super::panels::{PanelModel, strength};
 use super::{Job, Section, panel_sheet};
 use crate::building::{FloorEdge, Joists, StrapsKnown};
 use crate::quantity::functions::{KN, MPA};
@@ -68,8 +68,8 @@ pub fn check(s: &mut Sheet, e: &FloorEdge, m: &PanelModel, annex: &Annex) {
     given!(s, "wind face that the floor collects", "job file", h_s = e.strip_height);
     calc!(s, "EN 1990 eq. 6.10", "pull on the floor edge", n_s = gamma_W * q_net * h_s);
     let leaf = &m.leaves[m.loaded()];
-    given!(s, "dead load on top of the loaded leaf", "job file", G_a = leaf.G_above);
     given!(s, "factor on dead load that helps", "basis of this job", gamma_h = Num::new(m.helping));
+    let G_a = strength::helps(s, leaf, annex, gamma_h);
     given!(s, "thickness of the loaded leaf", "job file", t = leaf.t);
     calc!(s, "EN 1990 6.4.3.2", "stress where straps hold", sigma_v = gamma_h * G_a / t);
     given!(

@@ -2,7 +2,7 @@
 
 use super::{Job, Section};
 use crate::building::Return;
-use crate::quantity::{Force, print};
+use crate::quantity::{Force, LineLoad, print};
 use crate::trace::{Column, Sheet, Table};
 
 /// The sheet of unfactored loads.
@@ -28,11 +28,14 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     });
     s.table(|| Table {
         caption: "Dead load in the outer walls at the head of each panel, unfactored".to_owned(),
-        columns: vec![Column::words("panel"), Column::numbers("dead, kN/m")],
+        columns: vec![Column::words("panel"), Column::numbers("dead, kN/m"), Column::numbers("roof uplift, kN/m")],
         rows: b
             .panels
             .iter()
-            .map(|p| vec![p.mark.clone(), print::show("g", p.dead_above.dynamic()).value])
+            .map(|p| {
+                let per = |g: LineLoad| print::show("g", g.dynamic()).value;
+                vec![p.mark.clone(), per(p.dead_above), per(p.lift_above)]
+            })
             .collect(),
         strong: vec![],
     });

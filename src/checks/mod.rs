@@ -37,7 +37,7 @@ use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
 use outcome::{Hold, Outcome};
 use stability::Storey;
-use wind::Wind;
+use crate::wind::{Wind, pressures};
 
 /// One section of the pack: a sheet with its drawings.
 pub struct Section {
@@ -84,7 +84,7 @@ impl<'a> Job<'a> {
     /// Works out what several checks need, on silent sheets.
     pub fn new(building: &'a Building) -> Self {
         let annex = Annex::UK;
-        let wind = wind::pressures(&mut Sheet::silent(), building, &annex);
+        let wind = pressures(&mut Sheet::silent(), building, &annex);
         let storey = building.stability.as_ref().map(|st| {
             let pressures = wind.clone()?.along(st.wind_along);
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)

@@ -3,7 +3,7 @@
 use super::plan;
 use std::collections::HashMap;
 
-use super::wind::Pressures;
+use crate::wind::Pressures;
 use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands, stands_in};
 use crate::quantity::functions::{metres, sqrt};
 use crate::quantity::{Force, Length, print};

@@ -147,5 +147,6 @@ pub fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>, found: Option<&Found
         next_wall_left,
         next_wall_right,
         dead: dead?,
+        uplift: LineLoad::ZERO,
     })
 }

@@ -176,7 +176,7 @@ mod tests {
         assert_eq!(height.meant(dim, 2.4, ""), Some("m"));
         assert_eq!(height.meant(dim, 2400.0, "mn"), Some("mm"));
         assert_eq!(height.meant(dim, 1e9, ""), None);
-        assert_eq!(height.units(dim), "m, mm or cm");
+        assert_eq!(height.units(dim), "m, mm, cm or km");
     }
 
     #[test]

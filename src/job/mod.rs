@@ -292,7 +292,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     };
     found::complete(&mut building, found);
     // What the wind lifts is part of what the plan leads down.
-    let unknown = crate::checks::wind::roof::lift(&mut building);
+    for words in crate::wind::place::odd(&building) {
+        reader.warn(words);
+    }
+    let unknown = crate::wind::roof::lift(&mut building);
     for name in unknown {
         reader.warn(format!(
             "area load {name}: its roof is taken not to lift: give `roof` in [wind.site], or `uplift` with the load"

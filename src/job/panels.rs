@@ -112,6 +112,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
         height: height?,
         on,
         dead_above: dead_above?,
+        lift_above: LineLoad::ZERO,
         wind,
         route: route?,
         sharing: sharing?,

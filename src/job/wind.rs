@@ -267,13 +267,13 @@ fn round(t: &Table<'_>, tables: &[Table<'_>], all: &[Option<Sector>], route: Opt
     let whole: Vec<u16> = (0..12).map(|n| n * 30).collect();
     if !read.is_empty() && (any && read.len() > 1 || !any && seen != whole) {
         t.fault(Kind::Contradiction, "the sectors do not go round once")
-            .at(t.place("sectors"), "sectors")
+            .at(tables[0].place("bearings"), "bearings")
             .allowed("one sector with bearings = \"any\", or every bearing from 0 to 330 in steps of 30 in one sector")
             .help("add the bearings that are missing, or take out what stands twice");
     }
     if !read.is_empty() && !any && !turned {
         t.fault(Kind::Contradiction, "the sectors have bearings, but the plan does not say where north is")
-            .at(t.place("sectors"), "bearings")
+            .at(tables[0].place("bearings"), "bearings")
             .allowed("bearings with [plan] and its `north`")
             .help("add [plan], or write bearings = \"any\"");
     }

@@ -19,12 +19,15 @@ impl std::fmt::Display for Shown {
 }
 
 /// A value in the unit its symbol asks for, with three significant digits; lengths to the
-/// millimetre, or to a tenth where the tenth is there.
+/// millimetre, or to a tenth where the tenth is there; from 10 m in metres.
 pub fn show(symbol: &str, value: Dyn) -> Shown {
     let unit = unit::for_print(symbol, value);
     let scaled = value.value / unit.factor;
-    let digits =
-        if unit.printed == "mm" && scaled.abs() >= 10.0 { length(scaled) } else { significant(scaled) };
+    let digits = match unit.printed {
+        "mm" if scaled.abs() >= 10.0 => length(scaled),
+        "m" => group(format!("{scaled:.3}").trim_end_matches('0').trim_end_matches('.')),
+        _ => significant(scaled),
+    };
     Shown { value: digits, unit: unit.printed.to_owned() }
 }
 

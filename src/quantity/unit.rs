@@ -119,6 +119,10 @@ fn nearest(name: &str, dim: Dim) -> Option<&'static str> {
         .map(|(_, u)| u)
 }
 
+/// Lengths from 10 m, mm, and areas from 1 m², mm², are those of sites and walls and are printed in metres.
+const LONG: f64 = 1e4;
+const WIDE: f64 = 1e6;
+
 /// The unit a value is printed in: by its dimension, and where a dimension has two customs by the
 /// letter of its symbol (`f sigma tau E`: N/mm²; `q w g p`: kN/m²; a force called `m` or `M`: kNm/m).
 pub fn for_print(symbol: &str, value: Dyn) -> &'static Unit {
@@ -127,7 +131,9 @@ pub fn for_print(symbol: &str, value: Dyn) -> &'static Unit {
     let Dim { force, length, time } = value.dim;
     let name = match (force, length, time) {
         (0, 0, 0) => return &NONE,
+        (0, 1, 0) if size >= LONG => "m",
         (0, 1, 0) => "mm",
+        (0, 2, 0) if size >= WIDE => "m2",
         (0, 2, 0) if size >= 1e5 => return &MM2_LARGE,
         (0, 2, 0) => "mm2",
         (0, 3, 0) if size >= 1e6 => return &MM3_LARGE,

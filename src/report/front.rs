@@ -1,5 +1,6 @@
 //! The words of the front sheets: outcome, summary, assumptions, cautions.
 
+use crate::sketch::text::capital;
 use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
 use crate::checks::Results;
 use crate::checks::outcome::Outcome;
@@ -316,10 +317,4 @@ fn lower(text: &str) -> String {
         }
         _ => text.to_owned(),
     }
-}
-
-fn capital(text: &str) -> String {
-    let text = text.replace('_', " ");
-    let mut letters = text.chars();
-    letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
 }

@@ -5,6 +5,9 @@ use super::drawing::Drawing;
 /// Preferred scales (`1:n`), largest drawing first. Common practice in the UK, no published source.
 pub const PREFERRED: [f64; 8] = [5.0, 10.0, 20.0, 25.0, 50.0, 100.0, 200.0, 500.0];
 
+/// Scales of maps, for what stands in the land.
+pub const SITE: [f64; 9] = [250.0, 500.0, 1000.0, 2000.0, 2500.0, 5000.0, 10_000.0, 25_000.0, 50_000.0];
+
 /// A scale `1:n`.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Scale(pub f64);
@@ -46,6 +49,12 @@ impl Scale {
 /// frame; at the one that sticks out least if none fits.
 pub fn fit(frame: Frame, from: f64, draw: impl Fn(Scale) -> Drawing) -> Drawing {
     let [drawing] = fit_all(frame, from, |scale| [draw(scale)]);
+    drawing
+}
+
+/// The drawing at the largest scale of a map that fits the frame.
+pub fn fit_site(frame: Frame, draw: impl Fn(Scale) -> Drawing) -> Drawing {
+    let [drawing] = fit_in(&SITE, |scale| [draw(scale)], |drawings| over(&drawings[0], frame));
     drawing
 }
 
@@ -115,9 +124,19 @@ fn fit_by<const N: usize>(
     draw: impl Fn(Scale) -> [Drawing; N],
     excess: impl Fn(&[Drawing; N]) -> f64,
 ) -> [Drawing; N] {
+    let first = PREFERRED.iter().position(|n| *n >= from).unwrap_or(PREFERRED.len() - 1);
+    fit_in(&PREFERRED[first..], draw, excess)
+}
+
+/// As [`fit_by`], from a list of scales that is not empty.
+fn fit_in<const N: usize>(
+    scales: &[f64],
+    draw: impl Fn(Scale) -> [Drawing; N],
+    excess: impl Fn(&[Drawing; N]) -> f64,
+) -> [Drawing; N] {
     let mut best: Option<(f64, [Drawing; N])> = None;
-    for n in PREFERRED.into_iter().filter(|n| *n >= from) {
-        let drawings = draw(Scale(n));
+    for n in scales {
+        let drawings = draw(Scale(*n));
         let over = excess(&drawings);
         if over <= 0.0 {
             return drawings;
@@ -128,7 +147,7 @@ fn fit_by<const N: usize>(
             _ => (over, drawings),
         });
     }
-    best.expect("there is a preferred scale from 1:5 to 1:500").1
+    best.expect("a list of scales is not empty").1
 }
 
 #[cfg(test)]

@@ -18,7 +18,7 @@ pub const SUB_SIZE: f64 = 0.7;
 pub const SUB_DROP: f64 = 0.15;
 
 /// Greek letters that a symbol may be based on.
-const GREEK: [(&str, &str); 12] = [
+const GREEK: [(&str, &str); 13] = [
     ("alpha", "α"),
     ("beta", "β"),
     ("gamma", "γ"),
@@ -29,6 +29,7 @@ const GREEK: [(&str, &str); 12] = [
     ("rho", "ρ"),
     ("sigma", "σ"),
     ("tau", "τ"),
+    ("phi", "φ"),
     ("psi", "ψ"),
     ("Phi", "Φ"),
 ];
@@ -46,6 +47,13 @@ pub struct Extent {
     pub ascent: f64,
     /// Ink below the baseline.
     pub descent: f64,
+}
+
+/// A sentence's first letter large, `_` as a space.
+pub fn capital(text: &str) -> String {
+    let text = text.replace('_', " ");
+    let mut letters = text.chars();
+    letters.next().map(|c| c.to_uppercase().collect::<String>() + letters.as_str()).unwrap_or_default()
 }
 
 impl Text {

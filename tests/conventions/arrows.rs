@@ -3,13 +3,14 @@
 use super::sources;
 
 /// The modules, each of which may use those before it. [`perpend`]'s crate doc says the same.
-const ORDER: [&str; 14] = [
+const ORDER: [&str; 15] = [
     "error",
     "quantity",
     "solve",
     "trace",
     "standards",
     "building",
+    "wind",
     "job",
     "sketch",
     "checks",

@@ -54,7 +54,9 @@ fn the_spine_wall_under_the_end_of_the_beam() {
     let phi = (1.0 - 2.0 * e / 100.0) * (-u * u / 2.0).exp();
     let N_Rd = phi * 100.0 * l * block() / 3.0;
 
-    let (_, results) = perpend::check("through-room.toml", THROUGH).unwrap_or_else(|e| panic!("{e}"));
+    // With a roof that does not lift: lifted, the helping case would decide.
+    let text = THROUGH.replacen("imposed = \"0.6 kN/m2\"", "imposed = \"0.6 kN/m2\"\nuplift = \"0 kN/m2\"", 1);
+    let (_, results) = perpend::check("through-room.toml", &text).unwrap_or_else(|e| panic!("{e}"));
     let sheet = &results.sections.iter().find(|s| s.id == "piers").expect("the sheet of piers").sheet;
     assert!(sheet.faults.is_empty() && sheet.outside.is_empty());
     let v = sheet.verdicts.iter().find(|v| v.id == "pier-middle").expect("its verdict");
@@ -69,8 +71,12 @@ fn the_spine_wall_under_the_end_of_the_beam() {
 /// it, so the wind leaves it by flexure between floor and ceiling alone.
 #[test]
 fn the_back_wall_between_window_and_door() {
-    // 2.8 m of wall, half of a window of 1.2 m and half of a door of 0.9 m: 0.55 kN/m² times 1.5.
-    let W = 1.5 * 0.55e-3 * (2800.0 + 600.0 + 450.0) / 2800.0;
+    let b = perpend::job::read("bungalow.toml", BUNGALOW).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    let job = Job::new(&b);
+    // The worst net pressure of the site on any panel, worked by hand elsewhere.
+    let q = job.wind.as_ref().expect("within the method").worst.panel.base();
+    // 2.8 m of wall, half of a window of 1.2 m and half of a door of 0.9 m: the pressure times 1.5.
+    let W = 1.5 * q * (2800.0 + 600.0 + 450.0) / 2800.0;
     // Dead load that helps, at mid-height: 1.2 m of each leaf. Brick 102.5 mm, 20 kN/m³, f_xk1 0.4 N/mm² (water
     // absorption 7 to 12 %, M4); block 100 mm, 19 kN/m³, f_xk1 0.25 N/mm². gamma_M 2.7. Both leaves weigh on
     // themselves: stress = weight by volume times height.
@@ -83,8 +89,6 @@ fn the_back_wall_between_window_and_door() {
     // The outer leaf keeps what it can take; the rest is on the inner one.
     let used = (W - outer) / inner;
 
-    let b = perpend::job::read("bungalow.toml", BUNGALOW).unwrap_or_else(|r| panic!("{}", r.render(false)));
-    let job = Job::new(&b);
     let pier = job.piers.iter().find(|u| u.wall == "back wall" && u.from == 3200.0).expect("it is there");
     let (ratio, words) = pier.after.used();
     assert_eq!(words, "flexure, H");

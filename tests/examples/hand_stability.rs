@@ -2,7 +2,7 @@
 
 use perpend::building::{Along, BracingWall, Ends, ShareBy, Stands};
 use perpend::checks::stability::share;
-use perpend::checks::wind::Pressures;
+use perpend::wind::Pressures;
 use perpend::quantity::{Length, Stress};
 use perpend::standards::annex::Annex;
 use perpend::trace::Sheet;

@@ -15,6 +15,7 @@ mod hand_slenderness;
 mod hand_stability;
 mod hand_takedown;
 mod hand_wind;
+mod hand_wind_house;
 pub mod job;
 mod johansen;
 mod roberts_v3;

@@ -150,7 +150,7 @@ impl Variation {
                 format!("title = \"{}\"", self.dice.title(words))
             }
             ("wind.stated", "overall" | "panel") => times(value, self.wind, 3),
-            ("wind.site", "v_map") => format!("v_map = \"{:.1} m/s\"", self.dice.between(20.0, 26.0)),
+            ("wind.site", "v_map") => format!("v_map = \"{:.1} m/s\"", self.dice.between(15.0, 24.0)),
             (_, "strength") if material => times(value, self.dice.between(0.8, 1.6), 1),
             ("returns", "length") if !self.lengths_twice => times(value, self.dice.between(1.0, 1.9), 0),
             ("returns.loads", "dead" | "imposed") => times(value, self.dice.between(0.3, 2.0), 1),

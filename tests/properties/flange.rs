@@ -42,6 +42,7 @@ fn stressed(m: &Model, flange: Option<Flange>, n: f64, x: f64, toe: Toe) -> (Str
         back: x < 0.0,
         flange,
         gamma_G: Num::new(1.0),
+        gamma_U: Num::new(1.5),
     };
     let mut s = Sheet::recorder();
     perpend::given!(s, "", "", l = m.l);
@@ -76,7 +77,7 @@ proptest! {
         let from_free = place * (l + t_f);
         let (x, x_longer) = (l / 2.0 - from_free, (l + t_f) / 2.0 - from_free);
         let toe = if x_longer >= 0.0 { Toe::Free } else { Toe::Junction };
-        let flange = Flange { b_f: web.t, t_f: Length::new(t_f), G_f: Force::ZERO };
+        let flange = Flange { b_f: web.t, t_f: Length::new(t_f), G_f: Force::ZERO, U_f: Force::ZERO };
         let n = n * 1e3;
         let (one, _) = stressed(&web, Some(flange), n, x, toe);
         let (two, overturning) = stressed(&longer, None, n, x_longer, toe);
@@ -163,7 +164,7 @@ fn the_flange_may_hold_the_resultant_back() {
 #[test]
 fn overturning_about_either_edge() {
     let m = model();
-    let flange = Flange { b_f: Length::new(800.0), t_f: Length::new(140.0), G_f: Force::ZERO };
+    let flange = Flange { b_f: Length::new(800.0), t_f: Length::new(140.0), G_f: Force::ZERO, U_f: Force::ZERO };
     let ratio = |x: f64, toe| stressed(&m, Some(flange), 40e3, x, toe).1;
     // l = 900 mm: 100/450 and 100/(450 + 140).
     assert!((ratio(100.0, Toe::Free) - 100.0 / 450.0).abs() < 1e-12);

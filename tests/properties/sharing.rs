@@ -2,7 +2,7 @@
 
 use perpend::building::{Along, BracingWall, Building, Ends, ShareBy, Stands};
 use perpend::checks::stability::{Share, share};
-use perpend::checks::wind::Pressures;
+use perpend::wind::Pressures;
 use perpend::quantity::{Length, Stress};
 use perpend::solve::torsion::{self, Bracing, Push};
 use perpend::standards::annex::Annex;

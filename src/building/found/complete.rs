@@ -70,6 +70,7 @@ pub fn junction(r: &FoundReturn) -> Flange {
         next_wall_left: r.to_next[0],
         next_wall_right: r.to_next[1],
         dead: LineLoad::ZERO,
+        uplift: LineLoad::ZERO,
     }
 }
 
@@ -151,6 +152,7 @@ fn new_panel(b: &Building, p: &FoundPanel) -> Option<Panel> {
         height: storey.clear_height,
         on: Some(p.on.clone()),
         dead_above: LineLoad::ZERO,
+        lift_above: LineLoad::ZERO,
         wind: None,
         route: PanelRoute::Flexure,
         sharing: Sharing::Strength,

@@ -5,7 +5,7 @@ use crate::checks::returns::build::{self, Acting, Change, Inputs};
 use crate::checks::returns::in_plane::compressive_strength;
 use crate::checks::returns::model::Model;
 use crate::checks::returns::vertical::{self, Slender};
-use crate::checks::wind::Pressures;
+use crate::wind::Pressures;
 use crate::quantity::functions::abs;
 use crate::quantity::{Force, Length, Num, Stress};
 use crate::standards::annex::Annex;

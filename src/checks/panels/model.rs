@@ -14,6 +14,8 @@ pub struct PanelLeaf {
     pub masonry: Masonry,
     /// Dead load per length on top of this leaf, characteristic, nothing that may be absent.
     pub G_above: LineLoad,
+    /// Roof uplift per length on top of this leaf, characteristic, where it is not off the dead load yet.
+    pub U_above: LineLoad,
     /// Carries the floors; the other leaf has its own weight alone.
     pub loaded: bool,
 }
@@ -117,6 +119,7 @@ pub fn model(
             t: leaf.thickness,
             masonry: m.clone(),
             G_above: if i == loaded { p.dead_above } else { LineLoad::ZERO },
+            U_above: if i == loaded { p.lift_above } else { LineLoad::ZERO },
             loaded: i == loaded,
         })
         .collect();

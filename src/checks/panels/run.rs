@@ -37,7 +37,7 @@ pub struct Outcome {
 pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     s.table(|| held(m));
     let W_Ed = wind(s, m, annex);
-    let strengths = strengths(s, m);
+    let strengths = strengths(s, m, annex);
     // Before is information: worked silently by the same code, printed in the table side by side.
     let before = s.recording().then(|| {
         let mut quiet = Sheet::silent();
@@ -92,8 +92,8 @@ pub fn hold_points(m: &PanelModel) -> Vec<String> {
 }
 
 /// Strengths of the leaves: worked here, or quoted from the sheet where the same leaves stand already.
-fn strengths(s: &mut Sheet, m: &PanelModel) -> Vec<Strength> {
-    let of = |s: &mut Sheet| s.columns(&m.leaf_names(), |s, i| strength::of_leaf(s, m, i));
+fn strengths(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Vec<Strength> {
+    let of = |s: &mut Sheet| s.columns(&m.leaf_names(), |s, i| strength::of_leaf(s, m, annex, i));
     match &m.strengths_on {
         None => {
             s.heading(2, if m.leaves.len() == 1 { "Strength of the leaf" } else { "Strength of the leaves" });
@@ -117,7 +117,7 @@ fn wind(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Stress {
     calc!(s, "EN 1990 6.4.3.2", "design pressure", W_Ed = gamma_W * q_net);
     s.note(
         "The section is the same both ways, so one direction of the wind covers the other. Helping decides: it \
-         presses least. A roof's uplift must already be off the dead load given. No openings are taken.",
+         presses least. A dead load that the job gives must have the roof's uplift off already. No openings are taken.",
     );
     W_Ed
 }

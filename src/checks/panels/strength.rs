@@ -1,8 +1,10 @@
 //! What each leaf resists per unit width: the same before and after.
 
-use super::model::PanelModel;
-use crate::quantity::{Area, Force, Length, Num, Stress};
+use super::model::{PanelLeaf, PanelModel};
+use crate::quantity::functions::max;
+use crate::quantity::{Area, Force, Length, LineLoad, Num, Stress};
 use crate::standards::annex::Annex;
+use crate::standards::en1990::Combination;
 use crate::standards::en1996::{lateral::strength as clause, slenderness};
 use crate::trace::Sheet;
 use crate::{calc, given};
@@ -29,7 +31,7 @@ pub struct Strength {
 }
 
 /// Strengths of leaf `i`, written on the sheet.
-pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
+pub fn of_leaf(s: &mut Sheet, m: &PanelModel, annex: &Annex, i: usize) -> Strength {
     let leaf = &m.leaves[i];
     let materials = "materials sheet";
     given!(s, "actual thickness", "job file", t = leaf.t);
@@ -40,8 +42,7 @@ pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
     given!(s, "material factor, flexure", sources.1, gamma_Mf = leaf.masonry.gamma_f);
     calc!(s, "2.4.1", "design compressive strength", f_d = f_k / gamma_Mc);
     given!(s, "helping factor", "basis of this job", gamma_h = Num::new(m.helping));
-    let from = if leaf.loaded { "job file" } else { "this leaf carries no floor" };
-    given!(s, "dead load on top of the leaf", from, G_a = leaf.G_above);
+    let G_a = helps(s, leaf, annex, gamma_h);
     given!(s, "weight of the masonry", "materials", rho_m = leaf.masonry.density);
     let pre = clause::precompression(s, gamma_h, G_a, rho_m, t, h, f_d);
     let sigma_d = pre.sigma_d;
@@ -61,6 +62,29 @@ pub fn of_leaf(s: &mut Sheet, m: &PanelModel, i: usize) -> Strength {
         }
     };
     Strength { t, f_d, sigma_v: pre.sigma_v, sigma_d, f_xd1_app, Z, M_Rd1: parallel.M_Rd1, across }
+}
+
+/// Dead load on top of a leaf that can help; the helping factor `gamma_h` stands on the sheet.
+pub fn helps(s: &mut Sheet, leaf: &PanelLeaf, annex: &Annex, gamma_h: Num) -> LineLoad {
+    let from = if leaf.loaded { "loads" } else { "this leaf carries no floor" };
+    if leaf.U_above == LineLoad::ZERO {
+        given!(s, "dead load on top of the leaf", from, G_a = leaf.G_above);
+        return G_a;
+    }
+    given!(s, "dead load on top of the leaf, all of it", from, G_t = leaf.G_above);
+    given!(s, "roof uplift on it", from, U_a = leaf.U_above);
+    let clause = Combination::Helping.clause();
+    let factor = Combination::Helping.factors(annex, gamma_h.base()).gamma_U;
+    given!(s, "factor on uplift where dead load helps", clause, gamma_u = Num::new(factor));
+    let nil = LineLoad::ZERO;
+    given!(s, "least", "no load", G_0 = nil);
+    calc!(
+        s,
+        "EN 1990 6.4.3.2",
+        "dead load less the uplift over the helping factor",
+        G_a = max(G_t - gamma_u / gamma_h * U_a, G_0)
+    );
+    G_a
 }
 
 /// Effective thickness, for the size limits alone.

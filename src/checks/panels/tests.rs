@@ -52,6 +52,7 @@ pub(super) fn single(length: f64, edges: [Edge; 4], q: f64, g: f64) -> PanelMode
             t: Length::new(102.5),
             masonry: masonry(5.0, 0.4, Some(1.1)),
             G_above: LineLoad::new(g),
+            U_above: LineLoad::ZERO,
             loaded: true,
         }],
         q_net: Stress::new(q * 1e-3),
@@ -75,6 +76,7 @@ pub(super) fn cavity(length: f64, edges: [Edge; 4], q: f64) -> PanelModel {
         t: Length::new(100.0),
         masonry: Masonry { density: Weight::new(15e-6), ..masonry(3.5, 0.25, Some(0.45)) },
         G_above: LineLoad::new(8.0),
+        U_above: LineLoad::ZERO,
         loaded: true,
     });
     m.ties = Some(PerArea::new(2.5e-6));

@@ -94,6 +94,7 @@ fn panel() -> Panel {
         height: Length::new(2400.0),
         on: None,
         dead_above: LineLoad::new(8.5),
+        lift_above: LineLoad::ZERO,
         wind: None,
         route: PanelRoute::Flexure,
         sharing: Sharing::Strength,

@@ -104,6 +104,7 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         t,
         masonry: masonry.clone(),
         G_above: LineLoad::ZERO,
+        U_above: LineLoad::ZERO,
         loaded,
     };
     let own = leaf(p.m.t, &p.m.masonry, true);

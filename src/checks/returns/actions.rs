@@ -89,6 +89,8 @@ pub struct Actions {
     pub flange: Option<Flange>,
     /// Factor on dead load in this case.
     pub gamma_G: Num,
+    /// Factor on roof uplift in this case.
+    pub gamma_U: Num,
 }
 
 /// Partial factors of the case, noted on the sheet.
@@ -128,6 +130,7 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         );
         (N_Ed, M_N)
     };
+    let gamma_U = Num::new(case.combination.factors(annex, m.helping).gamma_U);
     let H_nu = tilt(s, m, annex);
     let (M_W, V_Ed) = statics::design::at(s, m, gamma_W, H_nu, at);
     let flange = m.flange.filter(|_| at == At::Foot);
@@ -141,7 +144,7 @@ pub fn at(s: &mut Sheet, m: &Model, annex: &Annex, case: Case, at: At) -> Action
         M_Ed
     };
     let back = signed < Moment::ZERO;
-    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), back, flange, gamma_G }
+    Actions { at, N_Ed, M_Ed, V_Ed, toe: toe(m, flange, N_Ed, signed), back, flange, gamma_G, gamma_U }
 }
 
 /// The edge on whose side of the section's centroid the resultant acts.

@@ -2,11 +2,11 @@
 
 use super::lateral;
 use super::model::{Flange, Lateral, Model, Vertical};
-use crate::building::{Acts, BaseJoint, BuildUp, Building, Head, Load, Restraint, Return};
+use crate::building::{Acts, BaseJoint, BuildUp, Building, Head, LED, Load, Restraint, Return};
 use crate::checks::masonry::{self, Masonry};
 use crate::checks::stability::Storey;
-use crate::checks::wind::Pressures;
-use crate::quantity::{Force, Length, Num, print};
+use crate::wind::Pressures;
+use crate::quantity::{Force, Length, LineLoad, Num, print};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::flange::{self, Side};
 use crate::standards::en1996::slenderness::Stiffened;
@@ -35,7 +35,7 @@ pub struct Change {
     pub length: Option<Length>,
     /// Dead load added at mid-length.
     pub dead: Force,
-    /// Factor on the wind.
+    /// Factor on the wind, roof uplift with it.
     pub wind: f64,
 }
 
@@ -113,7 +113,7 @@ fn leaf(
     given!(s, "weight of the masonry", "job file", g_m = masonry.density);
     calc!(s, "statics", "own weight of the leaf", G_w = g_m * l * t * h);
     // The wall met presses the loaded leaf alone; counted with both it would be there twice.
-    let flange = if this.loaded { flange(s, i, h, t) } else { None };
+    let flange = if this.loaded { flange(s, i, h, t, change.wind) } else { None };
     let loads: Vec<&Load> = r.loads.iter().filter(|x| x.leaf == k).collect();
     let stretch = l / r.length;
     let mut at_head = Vertical::default();
@@ -121,9 +121,10 @@ fn leaf(
         let from_middle = x.at * stretch.base() - l / 2.0;
         at_head = at_head.with_dead(x.dead, from_middle);
         at_head.Q = at_head.Q + x.imposed;
-        at_head.U = at_head.U + x.uplift;
+        // A stronger wind lifts more.
+        at_head.U = at_head.U + x.uplift * change.wind;
         at_head.S_Q = at_head.S_Q + x.imposed * from_middle;
-        at_head.S_U = at_head.S_U + x.uplift * from_middle;
+        at_head.S_U = at_head.S_U + x.uplift * change.wind * from_middle;
         at_head.T_G = at_head.T_G + x.dead * x.eccentricity;
         at_head.T_Q = at_head.T_Q + x.imposed * x.eccentricity;
     }
@@ -189,7 +190,7 @@ fn stiffened(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> bool {
 }
 
 /// The flange that may be counted, where the junction is bonded: 5.5.3.
-fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> Option<Flange> {
+fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length, wind: f64) -> Option<Flange> {
     let j = &i.ret.junction;
     if !j.bonded {
         return None;
@@ -202,7 +203,13 @@ fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length) -> Option<Flange>
     calc!(s, "5.5.3", "width of the flange that counts", b_f = b_L + t + b_R);
     given!(s, "dead load in the wall met at the foot, per length", "job file", g_f = j.dead);
     calc!(s, "statics", "dead load that the flange brings", G_f = g_f * b_f);
-    Some(Flange { b_f, t_f, G_f })
+    let u_f = j.uplift * wind;
+    if u_f > LineLoad::ZERO {
+        given!(s, "roof uplift in the wall met, per length", LED, u_f = u_f);
+        calc!(s, "statics", "uplift on the flange", U_f = u_f * b_f);
+        return Some(Flange { b_f, t_f, G_f, U_f });
+    }
+    Some(Flange { b_f, t_f, G_f, U_f: Force::ZERO })
 }
 
 /// rho_2: 1.0 under timber floors, 0.75 under concrete unless the load is far off centre.

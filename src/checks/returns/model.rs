@@ -45,6 +45,8 @@ pub struct Flange {
     pub t_f: Length,
     /// Dead load that this width brings at the foot.
     pub G_f: Force,
+    /// Roof uplift on it.
+    pub U_f: Force,
 }
 
 /// Wind at characteristic value as it reaches this leaf, one direction.
@@ -142,7 +144,11 @@ impl Model {
     pub fn vertical(&self, at: At) -> Vertical {
         let v = self.at_head.with_dead(self.own * at.share(), Length::ZERO);
         match self.flange {
-            Some(f) if at == At::Foot => v.with_dead(f.G_f, -((self.l + f.t_f) / 2.0)),
+            Some(f) if at == At::Foot => {
+                let from_middle = -((self.l + f.t_f) / 2.0);
+                let v = v.with_dead(f.G_f, from_middle);
+                Vertical { U: v.U + f.U_f, S_U: v.S_U + f.U_f * from_middle, ..v }
+            }
             _ => v,
         }
     }

@@ -55,6 +55,7 @@ pub fn sliding(s: &mut Sheet, m: &Model, a: &Actions, mu_source: &str, id: &str)
     given!(s, "coefficient of friction at the dpc", mu_source, mu = m.mu);
     if let Some(f) = a.flange {
         let (gamma_G, G_f) = (a.gamma_G, f.G_f);
+        // Uplift on the flange stays taken off: on the safe side.
         calc!(s, "statics", "vertical force without the flange's load", N_s = N_Ed - gamma_G * G_f);
         calc!(s, "first principles", "sliding resistance", V_Rds = mu * N_s / gamma_Mv);
         verify!(s, id, "first principles", "sliding at the dpc", V_Ed <= V_Rds);
@@ -70,7 +71,15 @@ pub fn junction(s: &mut Sheet, m: &Model, f: Flange, a: &Actions, st: &Stressed,
     let (t, h, gamma_G) = (m.t, m.h, a.gamma_G);
     given!(s, "vertical force in the flange", "from the stress block", N_fl = st.N_flange);
     given!(s, "dead load that the flange brings, characteristic", "load table", G_f = f.G_f);
-    calc!(s, "EN 1990 6.4.3.2", "in this case", N_f = gamma_G * G_f);
+    let N_f = if f.U_f > Force::ZERO {
+        given!(s, "factor on roof uplift", "above", gamma_U = a.gamma_U);
+        given!(s, "roof uplift on the flange, characteristic", "above", U_f = f.U_f);
+        calc!(s, "EN 1990 6.4.3.2", "in this case", N_f = gamma_G * G_f - gamma_U * U_f);
+        N_f
+    } else {
+        calc!(s, "EN 1990 6.4.3.2", "in this case", N_f = gamma_G * G_f);
+        N_f
+    };
     calc!(s, "statics", "vertical shear at the junction", V_j = abs(N_fl - N_f));
     given!(s, "initial shear strength", "materials sheet", f_vk0 = m.masonry.f_vk0);
     given!(s, "material factor, shear", m.masonry.gamma_v_source.as_str(), gamma_Mv = m.masonry.gamma_v);

@@ -1,7 +1,7 @@
 //! Wind and tilt of every level of the building in one direction.
 
 use crate::building::{Along, Building, TakeDown, line_of, storey_height, strip_height};
-use crate::checks::wind::Wind;
+use crate::wind::Wind;
 use crate::quantity::{Force, Length, Moment};
 use crate::solve::descent::Axis;
 

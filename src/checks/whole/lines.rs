@@ -3,7 +3,7 @@
 use super::levels::{Level, axis};
 use crate::building::{Along, BracingWall, Building, Ends, FloorKind, ShareBy, Stability, Stands, State};
 use crate::checks::stability;
-use crate::checks::wind::Pressures;
+use crate::wind::Pressures;
 use crate::quantity::{Force, Length};
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;

@@ -11,7 +11,7 @@ use crate::building::{
 use crate::checks::Job;
 use crate::checks::returns::{self, build::Inputs, check::Check};
 use crate::checks::stability::{Share, Storey};
-use crate::checks::wind::Pressures;
+use crate::wind::Pressures;
 use crate::quantity::{Force, Length, LineLoad, Num};
 use crate::solve::descent::Pier;
 use crate::trace::Sheet;
@@ -282,6 +282,7 @@ fn as_return(b: &Building, leaf: &State, i: usize, pier: &Pier, level: &Level, s
             next_wall_left: None,
             next_wall_right: None,
             dead: LineLoad::ZERO,
+            uplift: LineLoad::ZERO,
         },
     }
 }

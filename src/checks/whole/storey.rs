@@ -4,11 +4,11 @@ use super::{levels, lines};
 use crate::building::{
     Along, BracingWall, Building, FloorKind, ShareBy, Stability, Stands, TakeDown, line_of, take_down,
 };
-use crate::checks::wind;
 use crate::quantity::Length;
 use crate::solve::descent::Axis;
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
+use crate::wind;
 
 /// The building with the storey's stability of its plan, where floors stand on the plan and the job
 /// gives none; the wind blows along the wall that comes out.

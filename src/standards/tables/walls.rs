@@ -71,8 +71,8 @@ pub fn c_pe(zone: Zone, h_over_d: f64, area: f64) -> Result<Looked<f64>, OutOfTa
         .row("zone", zone)
         .row("h/d", number(h_over_d))
         .row("loaded area", format!("{} m²", number(area)))
-        .row("c_pe,10", number(ten))
-        .row("c_pe,1", number(one)))
+        .row("coefficient for 10 m²", number(ten))
+        .row("for 1 m²", number(one)))
 }
 
 /// Net overall coefficient of windward and leeward walls together, no unit.

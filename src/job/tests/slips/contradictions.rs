@@ -98,7 +98,7 @@ pub const SLIPS: &[Slip] = &[
         "sectors that leave a bearing out",
         "bearings = \"any\"",
         "bearings = [0, 30, 60, 90, 120, 150, 180, 210, 240, 270, 300]",
-        "bearings",
+        "[0, 30, 60, 90, 120, 150, 180, 210, 240, 270, 300]",
         &["the sectors do not go round once"],
     ),
     slip(

@@ -27,7 +27,7 @@ pub(super) fn location(
             return Ok(none(sheet));
         }
         let A_s = at_crest(sheet, r_z);
-        calc!(sheet, "A.3(3)", "B", B_s = 0.3542 * sq(r_z) - 1.0577 * r_z + 2.6456);
+        calc!(sheet, "A.3(3)", "coefficient B", B_s = 0.3542 * sq(r_z) - 1.0577 * r_z + 2.6456);
         calc!(sheet, "A.3(3)", "location factor", s = A_s * exp(B_s * x_u));
         return Ok(s);
     }
@@ -40,7 +40,7 @@ pub(super) fn location(
             return Ok(none(sheet));
         }
         let A_s = at_crest(sheet, r_z);
-        calc!(sheet, "A.3(3)", "B", B_s = -0.3056 * sq(r_z) + 1.0212 * r_z - 1.7637);
+        calc!(sheet, "A.3(3)", "coefficient B", B_s = -0.3056 * sq(r_z) + 1.0212 * r_z - 1.7637);
         calc!(sheet, "A.3(3)", "location factor", s = A_s * exp(B_s * x_d));
         return Ok(s);
     }
@@ -66,7 +66,7 @@ fn at_crest(sheet: &mut Sheet, r_z: Num) -> Num {
     calc!(
         sheet,
         "A.3(3)",
-        "A",
+        "coefficient A",
         A_s = 0.1552 * pow(r_z, 4.0) - 0.8575 * cube(r_z) + 1.8133 * sq(r_z) - 1.9115 * r_z + 1.0124
     );
     A_s
@@ -77,8 +77,8 @@ fn behind_cliff(sheet: &mut Sheet, r_z: Num, x_f: Num) -> Num {
     let clause = "A.3(3)";
     given!(sheet, "least height of the formula over the effective length", clause, r_1 = Num::new(0.1));
     calc!(sheet, clause, "logarithm of the height", k_z = log10(max(r_z, r_1)));
-    calc!(sheet, clause, "A", A_k = -1.3420 * cube(k_z) - 0.8222 * sq(k_z) + 0.4609 * k_z - 0.0791);
-    calc!(sheet, clause, "B", B_k = -1.0196 * cube(k_z) - 0.8910 * sq(k_z) + 0.5343 * k_z - 0.1156);
+    calc!(sheet, clause, "coefficient A", A_k = -1.3420 * cube(k_z) - 0.8222 * sq(k_z) + 0.4609 * k_z - 0.0791);
+    calc!(sheet, clause, "coefficient B", B_k = -1.0196 * cube(k_z) - 0.8910 * sq(k_z) + 0.5343 * k_z - 0.1156);
     calc!(sheet, clause, "C", C_k = 0.8030 * cube(k_z) + 0.4236 * sq(k_z) - 0.5738 * k_z + 0.1606);
     calc!(sheet, clause, "by the formula", s_f = A_k * sq(log10(x_f)) + B_k * log10(x_f) + C_k);
     s_f

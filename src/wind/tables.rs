@@ -29,42 +29,43 @@ pub fn pressures(s: &mut Sheet, b: &Building, site: &Site, d: &Derived) {
             strong: vec![],
         }
     });
+    let stated = |mark: &str| b.panels.iter().find(|x| x.mark == mark).and_then(|x| x.wind.as_ref());
+    let any = d.panels.iter().any(|p| stated(&p.mark).is_some());
     s.table(|| {
-        let mut rows = vec![
-            vec!["whole building".into(), "wind along x".into(), String::new(), String::new(), shown(d.along[0]), String::new()],
-            vec!["whole building".into(), "wind along y".into(), String::new(), String::new(), shown(d.along[1]), String::new()],
-        ];
+        let whole = |which: &str, q: Stress| {
+            vec!["whole building".into(), which.into(), String::new(), String::new(), shown(q), String::new()]
+        };
+        let mut rows = vec![whole("wind along x", d.along[0]), whole("wind along y", d.along[1])];
         for p in &d.panels {
             let place = p.place.map_or_else(
                 || "place not on the plan".to_owned(),
                 |x| format!("on {}, zone {}", x.side.word(), p.zone),
             );
-            let own = b.panels.iter().find(|x| x.mark == p.mark).and_then(|x| x.wind.as_ref());
-            let own = own.map_or_else(String::new, |c| {
+            let own = stated(&p.mark).map_or_else(String::new, |c| {
                 format!("{} ({})", shown(c.value), print::significant(c.value.base() / p.worst.base()))
             });
             rows.push(vec![p.mark.clone(), place, shown(p.inward), shown(p.outward), shown(p.worst), own]);
         }
-        Table {
-            caption: "Net characteristic pressures, kN/m²; in brackets the pressure stated for a panel over this one".to_owned(),
-            columns: vec![
-                Column::words("where"),
-                Column::words("which"),
-                Column::numbers("inward"),
-                Column::numbers("outward"),
-                Column::numbers("taken"),
-                Column::words("stated"),
-            ],
-            rows,
-            strong: vec![],
+        let mut columns = vec![
+            Column::words("where"),
+            Column::words("which"),
+            Column::numbers("inward"),
+            Column::numbers("outward"),
+            Column::numbers("of the site"),
+            Column::words("stated, taken"),
+        ];
+        if !any {
+            columns.pop();
+            rows.iter_mut().for_each(|row| drop(row.pop()));
         }
+        let beside = if any { "; in brackets the pressure stated for a panel over this one" } else { "" };
+        Table { caption: format!("Net characteristic pressures, kN/m²{beside}"), columns, rows, strong: vec![] }
     });
 }
 
 /// Stated figures, which are used, beside what the site gives.
-pub fn beside(s: &mut Sheet, b: &Building, stated: Pressures, d: &Derived) {
+pub fn beside(s: &mut Sheet, stated: Pressures, d: &Derived) {
     s.table(|| compare(stated, d, "Stated pressure beside the one of the site, kN/m²", "stated, used", "of the site"));
-    let _ = b;
     let worst = d.worst();
     if worst.overall > stated.overall || worst.panel > stated.panel {
         s.note(

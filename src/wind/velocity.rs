@@ -68,7 +68,7 @@ pub fn onto(
         "The annex's charts are not held here: the factors were read by the person named, at the distances given. Size and \
          dynamic factor follow."
     } else {
-        "This route is the text of the EN with a terrain category; the UK National Annex reads q_p from charts instead."
+        "This route is the text of the EN with a terrain category; the UK National Annex reads the peak pressure from charts instead."
     });
     Ok(out)
 }

@@ -105,9 +105,9 @@ pub fn lift(b: &mut Building) -> Vec<String> {
 /// The uplift with which the take-down works must cover the one of the wind.
 fn against_loads(s: &mut Sheet, b: &Building, both: [Along; 2]) {
     for load in b.area_loads.iter().filter(|a| is_roof(b, &a.name)) {
-        given!(s, "uplift for wind along x, not below nought", "above", U_1 = max(both[0].uplift, Stress::ZERO));
-        given!(s, "for wind along y", "above", U_2 = max(both[1].uplift, Stress::ZERO));
-        calc!(s, "5.3", "uplift of the roof per area on plan, characteristic", q_W = max(U_1, U_2));
+        given!(s, "uplift for wind along x, not below nought", "above", q_ux = max(both[0].uplift, Stress::ZERO));
+        given!(s, "for wind along y", "above", q_uy = max(both[1].uplift, Stress::ZERO));
+        calc!(s, "5.3", "uplift of the roof per area on plan, characteristic", q_W = max(q_ux, q_uy));
         if !load.uplift_given && load.uplift == q_W {
             s.note(format!("The load take-down works with this uplift of {}.", load.name));
             continue;

@@ -1,0 +1,158 @@
+//! Wind on the site: stated with a reason, by terrain category, or by the charts as the engineer reads them.
+//!
+//! * [`velocity`]: the peak pressure of the wind onto each side of the building
+//! * [`walls`]: overall pressures along x and y; [`inside`]: internal pressure
+//! * [`panels`]: net pressures on each panel by its place and size; [`roof`]: uplift and the part along the wind
+//! * `tables`: all pressures side by side
+
+pub mod inside;
+pub mod panels;
+pub mod place;
+pub mod roof;
+mod tables;
+pub mod velocity;
+pub mod walls;
+
+use crate::building::{Along, Building, Panel, Return, Side, Site, StatedWind, WindRoute, line_of};
+use crate::given;
+use crate::quantity::functions::max;
+use crate::quantity::Stress;
+use crate::solve::descent::Axis;
+use crate::standards::annex::Annex;
+use crate::trace::{Outside, Sheet};
+
+/// Sides of the building, in the order in which everything here lists them.
+pub const SIDES: [Side; 4] = [Side::Left, Side::Right, Side::Down, Side::Up];
+
+/// Net characteristic pressures that a check takes.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Pressures {
+    /// Overall, windward and leeward together: returns and storeys.
+    pub overall: Stress,
+    /// Net on a panel, the worst place and sign.
+    pub panel: Stress,
+}
+
+/// Wind as the checks take it.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Wind {
+    /// Where neither direction nor place is known: the worst of all.
+    pub worst: Pressures,
+    /// What was worked out for the site, where it decides.
+    pub derived: Option<Derived>,
+}
+
+/// What the site gives.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Derived {
+    /// Peak pressure of the wind onto each of [`SIDES`], with the bearing that governs.
+    pub onto: [velocity::Onto; 4],
+    /// Net overall pressure for wind along x and along y, the worse sense.
+    pub along: [Stress; 2],
+    /// Every panel.
+    pub panels: Vec<panels::Net>,
+    /// The roof for wind along x and along y.
+    pub roof: Option<[roof::Along; 2]>,
+}
+
+impl Derived {
+    /// The worst of everything.
+    pub fn worst(&self) -> Pressures {
+        let overall = max(self.along[0], self.along[1]);
+        let panel = self.panels.iter().map(|p| p.worst).reduce(max).unwrap_or(Stress::ZERO);
+        Pressures { overall, panel }
+    }
+}
+
+impl Wind {
+    /// Pressures for wind along a direction.
+    pub fn along(&self, along: Along) -> Pressures {
+        let overall = self.derived.as_ref().map_or(self.worst.overall, |d| d.along[along as usize]);
+        Pressures { overall, ..self.worst }
+    }
+
+    /// Pressures for a return: of the wind along it, where the plan or the storey says how it lies.
+    pub fn of_return(&self, b: &Building, r: &Return) -> Pressures {
+        let drawn = b.plan.iter().find(|w| w.mark == r.mark).and_then(line_of);
+        let drawn = drawn.map(|p| if p.along == Axis::X { Along::X } else { Along::Y });
+        let along = drawn.or(b.stability.as_ref().map(|s| s.wind_along));
+        along.map_or(self.worst, |a| self.along(a))
+    }
+
+    /// Net pressure on a panel.
+    pub fn of_panel(&self, p: &Panel) -> Stress {
+        let net = self.derived.iter().flat_map(|d| &d.panels).find(|n| n.mark == p.mark);
+        net.map_or(self.worst.panel, |n| n.worst)
+    }
+
+    /// Force of the roof along the wind per length across it, where the roof is worked out.
+    pub fn roof(&self, along: Along) -> Option<roof::Along> {
+        self.derived.as_ref()?.roof.map(|r| r[along as usize])
+    }
+}
+
+/// Works out the wind by the job's route; what the other gives stands beside it where it was given.
+///
+/// # Errors
+/// [`Outside`] where the site leaves the range of EN 1991-1-4.
+pub fn pressures(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Wind, Outside> {
+    let derived = of_site(s, b, annex)?;
+    let used = decided(s, b, derived.as_ref());
+    used.ok_or_else(|| Outside::new("wind", "EN 1991-1-4", "no wind is given"))
+}
+
+/// What the site gives, where the job describes it.
+pub fn of_site(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Option<Derived>, Outside> {
+    b.wind.site.as_ref().map(|site| derive(s, b, site, annex)).transpose()
+}
+
+/// The wind by the route that decides, with the other beside it.
+pub fn decided(s: &mut Sheet, b: &Building, derived: Option<&Derived>) -> Option<Wind> {
+    let stated = b.wind.stated.as_ref();
+    match (b.wind.route, stated, derived) {
+        (WindRoute::Stated, Some(st), derived) => {
+            let worst = by_statement(s, st);
+            if let Some(d) = derived {
+                tables::beside(s, worst, d);
+            }
+            Some(Wind { worst, derived: None })
+        }
+        (_, _, Some(d)) => {
+            if let Some(st) = stated {
+                tables::unused(s, Pressures { overall: st.overall, panel: st.panel }, d);
+            }
+            Some(Wind { worst: d.worst(), derived: Some(d.clone()) })
+        }
+        (_, Some(st), None) => Some(Wind { worst: by_statement(s, st), derived: None }),
+        (_, None, None) => None,
+    }
+}
+
+fn by_statement(s: &mut Sheet, st: &StatedWind) -> Pressures {
+    s.heading(1, "Stated");
+    let source = format!("stated: {}", st.reason);
+    given!(s, "net overall pressure, for returns and storeys", &source, q_net = st.overall);
+    let overall = q_net;
+    given!(s, "net pressure on a panel", &source, q_panel = st.panel);
+    s.note("A stated pressure is an assumption: confirm it against the site.");
+    Pressures { overall, panel: q_panel }
+}
+
+fn derive(s: &mut Sheet, b: &Building, site: &Site, annex: &Annex) -> Result<Derived, Outside> {
+    // Beside stated figures the charts stand where they were read, else the terrain.
+    let charts = match b.wind.route {
+        WindRoute::Charts => true,
+        WindRoute::Terrain => false,
+        WindRoute::Stated => site.sectors.iter().all(|x| x.readings.is_some()),
+    };
+    let onto = velocity::onto(s, b, site, charts, annex)?;
+    let along = walls::overall(s, site, &onto)?;
+    let panels = panels::all(s, b, site, &onto)?;
+    let roof = match &site.roof {
+        Some(roof) => Some(roof::both(s, b, site, roof, &onto)?),
+        None => None,
+    };
+    let derived = Derived { onto, along, panels, roof };
+    tables::pressures(s, b, site, &derived);
+    Ok(derived)
+}
