@@ -3,9 +3,9 @@
 use super::found::{REACH, stands};
 use super::{Along, Before, Building, Load, PlanWall, heights};
 use crate::quantity::{Force, Length, LineLoad};
+use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
-use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 
 /// Source of a load that comes from the plan.
 pub const LED: &str = "load take-down of this pack";

@@ -20,7 +20,8 @@ pub use floors::{Collapse, Diaphragm, FloorEdge, Strap};
 pub use found::Found;
 pub use heights::strip_height;
 pub use parts::{
-    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, Storey, Strength, UnitStrength,
+    Basis, BuildUp, Cause, Identity, Leaf, Material, Person, Revision, Signatures, Storey, Strength,
+    UnitStrength,
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
 pub use site::{

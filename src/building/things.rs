@@ -169,6 +169,8 @@ pub struct Return {
     pub strip_height: Option<Length>,
     /// Wind from above.
     pub from_above: FromAbove,
+    /// Own net overall pressure instead of the site's.
+    pub wind: Option<Cause<Stress>>,
     /// What holds head and foot out of plane.
     pub restraint: Restraint,
     /// Overall height of the wall it buttresses.

@@ -28,7 +28,11 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     });
     s.table(|| Table {
         caption: "Dead load in the outer walls at the head of each panel, unfactored".to_owned(),
-        columns: vec![Column::words("panel"), Column::numbers("dead, kN/m"), Column::numbers("roof uplift, kN/m")],
+        columns: vec![
+            Column::words("panel"),
+            Column::numbers("dead, kN/m"),
+            Column::numbers("roof uplift, kN/m"),
+        ],
         rows: b
             .panels
             .iter()

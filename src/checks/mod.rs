@@ -35,9 +35,9 @@ use crate::building::{Building, TakeDown, take_down};
 use crate::sketch::Drawing;
 use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
+use crate::wind::{Wind, pressures};
 use outcome::{Hold, Outcome};
 use stability::Storey;
-use crate::wind::{Wind, pressures};
 
 /// One section of the pack: a sheet with its drawings.
 pub struct Section {
@@ -86,7 +86,7 @@ impl<'a> Job<'a> {
         let annex = Annex::UK;
         let wind = pressures(&mut Sheet::silent(), building, &annex);
         let storey = building.stability.as_ref().map(|st| {
-            let pressures = wind.clone()?.along(st.wind_along);
+            let pressures = stability::pressures(building, &wind.clone()?, st);
             stability::share(&mut Sheet::silent(), building, st, pressures, &annex)
         });
         let holds = outcome::holds(building);

@@ -60,7 +60,11 @@ pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
 /// The first panel before this one with the same wall, height and load: its sheet has the strengths.
 fn same_leaves(b: &Building, p: &Panel) -> Option<String> {
     let same = |o: &&Panel| {
-        o.build_up == p.build_up && o.height == p.height && o.dead_above == p.dead_above && o.lift_above == p.lift_above && o.route == p.route
+        o.build_up == p.build_up
+            && o.height == p.height
+            && o.dead_above == p.dead_above
+            && o.lift_above == p.lift_above
+            && o.route == p.route
     };
     b.panels.iter().take_while(|o| o.mark != p.mark).find(same).map(|o| o.mark.clone())
 }

@@ -3,7 +3,6 @@
 use super::plan;
 use std::collections::HashMap;
 
-use crate::wind::Pressures;
 use crate::building::{Along, BracingWall, Building, Ends, ShareBy, Stability, Stands, stands_in};
 use crate::quantity::functions::{metres, sqrt};
 use crate::quantity::{Force, Length, print};
@@ -11,6 +10,7 @@ use crate::sketch::{self, Drawing, Frame, PlanWind, StabilityPlan, stability_pla
 use crate::solve::torsion::{self, Bracing, Push};
 use crate::standards::annex::Annex;
 use crate::trace::{Column, Outside, Sheet, Table};
+use crate::wind::{Pressures, Wind};
 use crate::{calc, given};
 
 /// As many shares as can be read on a plan.
@@ -56,6 +56,12 @@ impl Storey {
     pub fn after(&self, mark: &str) -> Option<f64> {
         self.shares.iter().find(|s| s.mark == mark).and_then(|s| s.after)
     }
+}
+
+/// Wind on the face that the storey collects.
+pub fn pressures(b: &Building, wind: &Wind, st: &Stability) -> Pressures {
+    let storey = b.storeys.iter().position(|s| s.mark == st.storey);
+    storey.map_or_else(|| wind.along(st.wind_along), |k| wind.level(b, st.wind_along, k))
 }
 
 /// Shares the storey's wind on the sheet.
@@ -257,7 +263,7 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     let mut s = Sheet::recorder();
     s.note(format!("The wall removed braced: {}.", job.building.removed.braced.trim_end_matches('.')));
     let mut drawings = Vec::new();
-    match share(&mut s, job.building, st, wind.along(st.wind_along), &job.annex) {
+    match share(&mut s, job.building, st, pressures(job.building, wind, st), &job.annex) {
         Ok(storey) => {
             if let Some(plans) = drawn(job.building, st, &storey) {
                 s.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));

@@ -132,7 +132,11 @@ fn weights(b: &Building) -> Table {
             let parts: Vec<String> = a.parts.iter().map(|(name, w)| format!("{name} {w}")).collect();
             format!("{} (typical weights, from memory (M): check against the building)", parts.join(", "))
         };
-        let lift = if a.uplift_given || a.uplift == crate::quantity::Stress::ZERO { "" } else { "; uplift from the wind sheet" };
+        let lift = if a.uplift_given || a.uplift == crate::quantity::Stress::ZERO {
+            ""
+        } else {
+            "; uplift from the wind sheet"
+        };
         let from = format!("{from}{lift}");
         vec![a.name.clone(), area(a.dead), area(a.imposed), area(a.uplift), from]
     });

@@ -88,8 +88,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     });
     let storeys = Names::marked("storey", root.need("storeys").tables("storey", "mark"), ground::storey);
     ground::stacked(&storeys);
-    let wind =
-        root.need("wind").table("wind").and_then(|t| wind::wind(&t, &storeys, root.has("plan")));
+    let wind = root.need("wind").table("wind").and_then(|t| wind::wind(&t, &storeys, root.has("plan")));
 
     let plan_table = root.may("plan").table("plan");
     let north = plan_table.as_ref().map_or(Some(0.0), plan::north);

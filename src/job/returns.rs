@@ -11,10 +11,10 @@ use super::reader::{Reader, Span, Table};
 use crate::building::found::{self, Found, FoundReturn};
 use crate::building::{
     Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
-    Restraint, Return, Stability, Stands, Storey,
+    Restraint, Return, ShareBy, Stability, Stands, Storey,
 };
 use crate::error::Kind;
-use crate::quantity::{Length, Num};
+use crate::quantity::{Length, Num, Stress};
 
 /// Most characters of a mark.
 pub const MARK: usize = 12;
@@ -107,6 +107,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         _ => t.need("tributary_width").quantity(&TRIBUTARY),
     };
     let from_above = from_above(t);
+    let wind = own_wind(t, around);
     let floor = storey.as_ref().and_then(|s| around.storeys.item(s)).and_then(found::restraint);
     let restraint = match (found, floor) {
         (Some(_), Some(held)) if !t.has("restraint") => Some(held),
@@ -198,6 +199,7 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         tributary_width: tributary_width?,
         strip_height,
         from_above: from_above?,
+        wind,
         restraint: restraint?,
         supported_wall_height: supported_wall_height?,
         nearest_opening,
@@ -207,6 +209,23 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Return> {
         junction: junction?,
         footing: footing?,
     })
+}
+
+/// A pressure of its own, where the floor does not share the force of the whole storey.
+fn own_wind(t: &Table<'_>, around: &Around<'_, '_>) -> Option<Cause<Stress>> {
+    let shared = around.stability.is_some_and(|(_, s)| s.share_by == ShareBy::Stiffness);
+    if t.has("wind") && shared {
+        let whole = around.stability.map_or_else(|| t.head(), |(st, _)| st.place("share_by"));
+        t.fault(
+            Kind::Contradiction,
+            "a return cannot have a wind of its own where the floor shares by stiffness",
+        )
+        .at(t.place("wind"), "its own pressure")
+        .and(whole, "shared by stiffness")
+        .allowed("`wind` on a return with share_by = \"tributary width\"")
+        .help("state the pressure of the whole building under [wind.stated]");
+    }
+    t.may("wind").cause(|e| e.quantity(&super::wind::PRESSURE))
 }
 
 /// Marks of the footings with their places, whether the rest of them could be read or not.

@@ -15,7 +15,7 @@ use crate::error::Kind;
 use crate::quantity::{Area, Length};
 
 /// Net pressures; 5 kN/m2 is typed in place of 0.5 more often than it is meant.
-const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2").odd(&[
+pub const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2").odd(&[
     Odd::Below(0.25, "less than even a sheltered site gives, mostly a slip of the point"),
     Odd::Above(2.0, "more than UK sites of two or three storeys give, mostly a slip of the point"),
 ]);
@@ -29,7 +29,8 @@ const REFERENCE_HEIGHT: Limits =
     Limits::new(2.0, 60.0, "m").odd(&[Odd::Above(20.0, "tall for a masonry house")]);
 const SIDE: Limits = Limits::new(2.0, 200.0, "m").odd(&[Odd::Above(60.0, "long for a masonry house")]);
 const SEASON: Limits = Limits::new(0.6, 1.0, "");
-const PROBABILITY: Limits = Limits::new(0.001, 0.5, "").odd(&[Odd::Above(0.02, "a wind weaker than that of 50 years")]);
+const PROBABILITY: Limits =
+    Limits::new(0.001, 0.5, "").odd(&[Odd::Above(0.02, "a wind weaker than that of 50 years")]);
 const OROGRAPHY: Limits = Limits::new(1.0, 2.5, "");
 /// Height of a hill or cliff, and the lengths of its slopes.
 const HILL: Limits = Limits::new(1.0, 1500.0, "m");
@@ -58,7 +59,10 @@ pub fn wind(t: &Table<'_>, storeys: &Names<'_, Storey>, turned: bool) -> Option<
     if route.is_some() && !t.has(key) {
         t.fault(
             Kind::Contradiction,
-            format_args!("the route is \"{}\", but there is no [wind.{key}]", route.map_or("", WindRoute::word)),
+            format_args!(
+                "the route is \"{}\", but there is no [wind.{key}]",
+                route.map_or("", WindRoute::word)
+            ),
         )
         .at(t.place("route"), "route")
         .and(t.head(), format!("nothing under it is called `{key}`"))
@@ -259,7 +263,13 @@ fn readings(t: &Table<'_>) -> Option<Readings> {
 }
 
 /// Every bearing once, or one sector for any; what the route needs in each.
-fn round(t: &Table<'_>, tables: &[Table<'_>], all: &[Option<Sector>], route: Option<WindRoute>, turned: bool) {
+fn round(
+    t: &Table<'_>,
+    tables: &[Table<'_>],
+    all: &[Option<Sector>],
+    route: Option<WindRoute>,
+    turned: bool,
+) {
     let Some(read) = all.iter().map(Option::as_ref).collect::<Option<Vec<&Sector>>>() else { return };
     let any = read.iter().any(|s| s.bearings.is_empty());
     let mut seen: Vec<u16> = read.iter().flat_map(|s| s.bearings.iter().copied()).collect();

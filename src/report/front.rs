@@ -1,10 +1,10 @@
 //! The words of the front sheets: outcome, summary, assumptions, cautions.
 
-use crate::sketch::text::capital;
 use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
 use crate::checks::Results;
 use crate::checks::outcome::Outcome;
 use crate::pack::data::{Assumption, Summary};
+use crate::sketch::text::capital;
 use crate::standards::{en1991_1_4, en1992, en1996};
 
 /// One plain sentence on the outcome.

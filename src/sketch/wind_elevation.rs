@@ -156,7 +156,10 @@ fn alt(view: &WindElevation) -> String {
             level.force.symbol,
             level.force.value
         );
-        alt += &level.roof.as_ref().map_or_else(|| ". ".to_owned(), |r| format!(", of it {} {}. ", r.value, r.words));
+        alt += &level
+            .roof
+            .as_ref()
+            .map_or_else(|| ". ".to_owned(), |r| format!(", of it {} {}. ", r.value, r.words));
     }
     alt + &format!("The foot takes {} {}.", view.foot.value, view.foot.words)
 }

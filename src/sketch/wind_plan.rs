@@ -101,7 +101,11 @@ fn draw(view: &WindPlan, scale: Scale) -> Drawing {
         caption: format!(
             "{}: pressure outside by zone, kN/m², arrows onto the wall where it presses{}{}{}",
             capital(&view.words),
-            if view.panels.is_empty() { "" } else { "; thick: the panels with the net pressure that they take" },
+            if view.panels.is_empty() {
+                ""
+            } else {
+                "; thick: the panels with the net pressure that they take"
+            },
             if view.between.is_empty() { "" } else { "; chain lines: where the neighbours begin" },
             view.remark
         ),

@@ -2,13 +2,13 @@
 
 use super::walls::out;
 use crate::building::{Side, Site};
+use crate::calc;
 use crate::given;
 use crate::quantity::Num;
 use crate::quantity::functions::{max, min};
 use crate::standards::en1991_1_4 as wind;
 use crate::standards::tables::walls::{Zone, c_pe};
 use crate::trace::{Outside, Sheet};
-use crate::calc;
 
 /// What presses outward and what sucks inward the most, for wind onto one side.
 #[derive(Clone, Copy, Debug, PartialEq)]

@@ -13,10 +13,12 @@ mod tables;
 pub mod velocity;
 pub mod walls;
 
-use crate::building::{Along, Building, Panel, Return, Side, Site, StatedWind, WindRoute, line_of};
+use crate::building::{
+    Along, Building, Panel, Return, Side, Site, StatedWind, WindRoute, line_of, storey_height,
+};
 use crate::given;
 use crate::quantity::functions::max;
-use crate::quantity::Stress;
+use crate::quantity::{Length, Stress};
 use crate::solve::descent::Axis;
 use crate::standards::annex::Annex;
 use crate::trace::{Outside, Sheet};
@@ -47,8 +49,8 @@ pub struct Wind {
 pub struct Derived {
     /// Peak pressure of the wind onto each of [`SIDES`], with the bearing that governs.
     pub onto: [velocity::Onto; 4],
-    /// Net overall pressure for wind along x and along y, the worse sense.
-    pub along: [Stress; 2],
+    /// Net overall pressures for wind along x and along y, the worse sense.
+    pub along: [walls::Overall; 2],
     /// Every panel.
     pub panels: Vec<panels::Net>,
     /// The roof for wind along x and along y.
@@ -58,25 +60,44 @@ pub struct Derived {
 impl Derived {
     /// The worst of everything.
     pub fn worst(&self) -> Pressures {
-        let overall = max(self.along[0], self.along[1]);
+        let overall = max(self.along[0].top, self.along[1].top);
         let panel = self.panels.iter().map(|p| p.worst).reduce(max).unwrap_or(Stress::ZERO);
         Pressures { overall, panel }
     }
 }
 
 impl Wind {
-    /// Pressures for wind along a direction.
+    /// Pressures for wind along a direction, at the top of the building.
     pub fn along(&self, along: Along) -> Pressures {
-        let overall = self.derived.as_ref().map_or(self.worst.overall, |d| d.along[along as usize]);
+        let overall = self.derived.as_ref().map_or(self.worst.overall, |d| d.along[along as usize].top);
         Pressures { overall, ..self.worst }
     }
 
-    /// Pressures for a return: of the wind along it, where the plan or the storey says how it lies.
+    /// Pressures for wind along a direction on what the floor over storey `k` collects.
+    pub fn level(&self, b: &Building, along: Along, k: usize) -> Pressures {
+        let strips = self.derived.iter().flat_map(|d| &d.along[along as usize].strips);
+        let top = collected_up_to(b, k);
+        let own = strips.into_iter().find(|(strip, _)| top <= strip.to);
+        own.map_or_else(|| self.along(along), |(_, overall)| Pressures { overall: *overall, ..self.worst })
+    }
+
+    /// Pressures for a return: its own, or those of [`Wind::site_at`].
     pub fn of_return(&self, b: &Building, r: &Return) -> Pressures {
+        let site = self.site_at(b, r);
+        let overall = r.wind.as_ref().map_or(site.overall, |stated| stated.value);
+        Pressures { overall, ..site }
+    }
+
+    /// What the site gives for a return: the wind along it, where the plan or the storey says how it lies.
+    pub fn site_at(&self, b: &Building, r: &Return) -> Pressures {
         let drawn = b.plan.iter().find(|w| w.mark == r.mark).and_then(line_of);
         let drawn = drawn.map(|p| if p.along == Axis::X { Along::X } else { Along::Y });
         let along = drawn.or(b.stability.as_ref().map(|s| s.wind_along));
-        along.map_or(self.worst, |a| self.along(a))
+        let storey = b.storeys.iter().position(|s| s.mark == r.storey);
+        match (along, storey) {
+            (Some(along), Some(k)) => self.level(b, along, k),
+            _ => self.worst,
+        }
     }
 
     /// Net pressure on a panel.
@@ -89,6 +110,17 @@ impl Wind {
     pub fn roof(&self, along: Along) -> Option<roof::Along> {
         self.derived.as_ref()?.roof.map(|r| r[along as usize])
     }
+}
+
+/// Height over ground of the wind face that the floor over storey `k` collects; the ground lies under the lowest floor
+/// by what the building is higher than its storeys.
+fn collected_up_to(b: &Building, k: usize) -> Length {
+    let height = |k: usize| storey_height(b, k);
+    let storeys: Length = (0..=k).map(height).sum();
+    let over = if k + 1 < b.storeys.len() { height(k + 1) / 2.0 } else { b.storeys[k].total_height };
+    let whole = b.storeys.first().map_or(Length::ZERO, |s| s.total_height);
+    let plinth = b.wind.site.as_ref().map_or(Length::ZERO, |s| s.height - whole);
+    storeys + over + max(plinth, Length::ZERO)
 }
 
 /// Works out the wind by the job's route; what the other gives stands beside it where it was given.
@@ -146,7 +178,7 @@ fn derive(s: &mut Sheet, b: &Building, site: &Site, annex: &Annex) -> Result<Der
         WindRoute::Stated => site.sectors.iter().all(|x| x.readings.is_some()),
     };
     let onto = velocity::onto(s, b, site, charts, annex)?;
-    let along = walls::overall(s, site, &onto)?;
+    let along = walls::overall(s, site, &onto, charts, annex)?;
     let panels = panels::all(s, b, site, &onto)?;
     let roof = match &site.roof {
         Some(roof) => Some(roof::both(s, b, site, roof, &onto)?),

@@ -117,10 +117,7 @@ fn cases(site: &Site, h: Length, onto: Onto, place: Option<OnSide>) -> Vec<Case>
 }
 
 /// The case of the greatest pressure above nought.
-fn greatest(
-    cases: &[Case],
-    of: impl Fn(&Case) -> Result<Stress, Outside>,
-) -> Result<Option<Case>, Outside> {
+fn greatest(cases: &[Case], of: impl Fn(&Case) -> Result<Stress, Outside>) -> Result<Option<Case>, Outside> {
     let mut best: Option<(Stress, Case)> = None;
     for c in cases {
         let q = of(c)?;

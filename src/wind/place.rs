@@ -50,7 +50,10 @@ pub fn extent(b: &Building) -> [(Length, Length); 2] {
 /// Where the size of the building and the plan with its neighbours do not go together, in words.
 pub fn odd(b: &Building) -> Vec<String> {
     let (Some(site), false) = (&b.wind.site, b.plan.is_empty()) else { return Vec::new() };
-    let axes = [("along_x", site.size.0, [Side::Left, Side::Right]), ("along_y", site.size.1, [Side::Down, Side::Up])];
+    let axes = [
+        ("along_x", site.size.0, [Side::Left, Side::Right]),
+        ("along_y", site.size.1, [Side::Down, Side::Up]),
+    ];
     let mut words = Vec::new();
     for ((key, size, sides), (low, high)) in axes.into_iter().zip(extent(b)) {
         let alone = !sides.iter().any(|side| b.neighbours.contains(side));
@@ -58,7 +61,8 @@ pub fn odd(b: &Building) -> Vec<String> {
         let close = (size - plan).abs() <= CLOSE * plan;
         let fits = if alone { close } else { close || size > plan };
         if !fits {
-            let neighbours = if alone { "without a neighbour on that axis" } else { "without its neighbours" };
+            let neighbours =
+                if alone { "without a neighbour on that axis" } else { "without its neighbours" };
             words.push(format!(
                 "[wind.site] says {key} = {:.2} m, but the plan is {:.2} m long {neighbours}: see which is right",
                 size / 1e3,

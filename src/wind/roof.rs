@@ -35,7 +35,12 @@ pub fn both(
     s.heading(1, "Roof");
     let heads = ["wind along x".to_owned(), "wind along y".to_owned()];
     let found = s.columns(&heads, |s, i| {
-        given!(s, "peak pressure, the greater of both senses", "above", q_p = max(onto[2 * i].q_p, onto[2 * i + 1].q_p));
+        given!(
+            s,
+            "peak pressure, the greater of both senses",
+            "above",
+            q_p = max(onto[2 * i].q_p, onto[2 * i + 1].q_p)
+        );
         let (along, across) = if i == 0 { site.size } else { (site.size.1, site.size.0) };
         given!(s, "height to the ridge", "job file", h = site.height);
         given!(s, "depth along the wind", "job file", d = along);
@@ -52,7 +57,9 @@ pub fn both(
         let on_eaves = direction != roof.ridge;
         let all: Vec<RoofWind> = match roof.form {
             RoofForm::Flat => vec![roof::flat(s, q_p, c_pi, h, b, d, roof.pitch)?],
-            RoofForm::Duopitch if on_eaves => vec![roof::duopitch_on_eaves(s, q_p, c_pi, h, b, d, roof.pitch)?],
+            RoofForm::Duopitch if on_eaves => {
+                vec![roof::duopitch_on_eaves(s, q_p, c_pi, h, b, d, roof.pitch)?]
+            }
             RoofForm::Duopitch => vec![roof::duopitch_on_gable(s, q_p, c_pi, h, b, d, roof.pitch)?],
             RoofForm::Monopitch if on_eaves => vec![
                 roof::monopitch_on_low_eaves(s, q_p, c_pi, h, b, d, roof.pitch)?,
@@ -61,11 +68,18 @@ pub fn both(
             RoofForm::Monopitch => vec![roof::monopitch_on_side(s, q_p, c_pi, h, b, d, roof.pitch)?],
         };
         let nil = RoofWind { uplift: Stress::new(f64::NEG_INFINITY), along: LineLoad::ZERO };
-        let most = all.into_iter().fold(nil, |m, w| RoofWind {
-            uplift: max(m.uplift, w.uplift),
-            along: max(m.along, w.along),
-        });
-        Ok(Along { uplift: most.uplift, force: most.along, gable: if on_eaves || roof.form == RoofForm::Flat { Length::ZERO } else { site.height - roof.eaves } })
+        let most = all
+            .into_iter()
+            .fold(nil, |m, w| RoofWind { uplift: max(m.uplift, w.uplift), along: max(m.along, w.along) });
+        Ok(Along {
+            uplift: most.uplift,
+            force: most.along,
+            gable: if on_eaves || roof.form == RoofForm::Flat {
+                Length::ZERO
+            } else {
+                site.height - roof.eaves
+            },
+        })
     });
     let all: Vec<Along> = found.into_iter().collect::<Result<_, _>>()?;
     let both = [all[0], all[1]];
@@ -105,7 +119,12 @@ pub fn lift(b: &mut Building) -> Vec<String> {
 /// The uplift with which the take-down works must cover the one of the wind.
 fn against_loads(s: &mut Sheet, b: &Building, both: [Along; 2]) {
     for load in b.area_loads.iter().filter(|a| is_roof(b, &a.name)) {
-        given!(s, "uplift for wind along x, not below nought", "above", q_ux = max(both[0].uplift, Stress::ZERO));
+        given!(
+            s,
+            "uplift for wind along x, not below nought",
+            "above",
+            q_ux = max(both[0].uplift, Stress::ZERO)
+        );
         given!(s, "for wind along y", "above", q_uy = max(both[1].uplift, Stress::ZERO));
         calc!(s, "5.3", "uplift of the roof per area on plan, characteristic", q_W = max(q_ux, q_uy));
         if !load.uplift_given && load.uplift == q_W {
@@ -114,7 +133,13 @@ fn against_loads(s: &mut Sheet, b: &Building, both: [Along; 2]) {
         }
         let source = format!("area load {}", load.name);
         given!(s, "uplift in the load take-down", &source, q_U = load.uplift);
-        verify!(s, "roof-uplift", "5.3, 7.2.3 to 7.2.5", "uplift of the roof that the take-down works with", q_W <= q_U);
+        verify!(
+            s,
+            "roof-uplift",
+            "5.3, 7.2.3 to 7.2.5",
+            "uplift of the roof that the take-down works with",
+            q_W <= q_U
+        );
         if q_W > q_U {
             s.note(format!(
                 "Write uplift = \"{:.2} kN/m2\" or more under [area_loads.{}]: dead load that the roof lifts does not help.",

@@ -1,7 +1,7 @@
 //! All pressures side by side.
 
 use super::velocity::{Onto, shown};
-use super::{Derived, Pressures};
+use super::{Derived, Pressures, Wind};
 use crate::building::{Building, Site};
 use crate::quantity::{Stress, print};
 use crate::trace::{Column, Sheet, Table};
@@ -29,43 +29,65 @@ pub fn pressures(s: &mut Sheet, b: &Building, site: &Site, d: &Derived) {
             strong: vec![],
         }
     });
-    let stated = |mark: &str| b.panels.iter().find(|x| x.mark == mark).and_then(|x| x.wind.as_ref());
-    let any = d.panels.iter().any(|p| stated(&p.mark).is_some());
-    s.table(|| {
-        let whole = |which: &str, q: Stress| {
-            vec!["whole building".into(), which.into(), String::new(), String::new(), shown(q), String::new()]
-        };
-        let mut rows = vec![whole("wind along x", d.along[0]), whole("wind along y", d.along[1])];
-        for p in &d.panels {
-            let place = p.place.map_or_else(
-                || "place not on the plan".to_owned(),
-                |x| format!("on {}, zone {}", x.side.word(), p.zone),
-            );
-            let own = stated(&p.mark).map_or_else(String::new, |c| {
-                format!("{} ({})", shown(c.value), print::significant(c.value.base() / p.worst.base()))
-            });
-            rows.push(vec![p.mark.clone(), place, shown(p.inward), shown(p.outward), shown(p.worst), own]);
+    s.table(|| places(b, d));
+}
+
+/// Pressures of the whole building, the returns and the panels, with what the job states for one of them.
+fn places(b: &Building, d: &Derived) -> Table {
+    let row = |mark: &str,
+               which: &str,
+               [inward, outward]: [Option<Stress>; 2],
+               of_site: Stress,
+               own: Option<Stress>| {
+        let some = |q: Option<Stress>| q.map_or_else(String::new, shown);
+        let own = own.map_or_else(String::new, |q| {
+            format!("{} ({})", shown(q), print::significant(q.base() / of_site.base()))
+        });
+        vec![mark.to_owned(), which.to_owned(), some(inward), some(outward), shown(of_site), own]
+    };
+    let mut rows = Vec::new();
+    for (which, on) in ["wind along x", "wind along y"].into_iter().zip(&d.along) {
+        for (strip, q) in &on.strips {
+            let which = format!("{which}, up to {:.2} m", strip.to.base() / 1e3);
+            rows.push(row("whole building", &which, [None, None], *q, None));
         }
-        let mut columns = vec![
-            Column::words("where"),
-            Column::words("which"),
-            Column::numbers("inward"),
-            Column::numbers("outward"),
-            Column::numbers("of the site"),
-            Column::words("stated, taken"),
-        ];
-        if !any {
-            columns.pop();
-            rows.iter_mut().for_each(|row| drop(row.pop()));
-        }
-        let beside = if any { "; in brackets the pressure stated for a panel over this one" } else { "" };
-        Table { caption: format!("Net characteristic pressures, kN/m²{beside}"), columns, rows, strong: vec![] }
-    });
+        rows.push(row("whole building", which, [None, None], on.top, None));
+    }
+    let wind = Wind { worst: d.worst(), derived: Some(d.clone()) };
+    for r in &b.returns {
+        let own = r.wind.as_ref().map(|c| c.value);
+        rows.push(row(&r.mark, "return", [None, None], wind.site_at(b, r).overall, own));
+    }
+    for p in &d.panels {
+        let place = p.place.map_or_else(
+            || "place not on the plan".to_owned(),
+            |x| format!("on {}, zone {}", x.side.word(), p.zone),
+        );
+        let own = b.panels.iter().find(|x| x.mark == p.mark).and_then(|x| x.wind.as_ref()).map(|c| c.value);
+        rows.push(row(&p.mark, &place, [Some(p.inward), Some(p.outward)], p.worst, own));
+    }
+    let mut columns = vec![
+        Column::words("where"),
+        Column::words("which"),
+        Column::numbers("inward"),
+        Column::numbers("outward"),
+        Column::numbers("of the site"),
+        Column::words("stated, taken"),
+    ];
+    let any = rows.iter().any(|row| !row[5].is_empty());
+    if !any {
+        columns.pop();
+        rows.iter_mut().for_each(|row| drop(row.pop()));
+    }
+    let beside = if any { "; in brackets the stated one over that of the site" } else { "" };
+    Table { caption: format!("Net characteristic pressures, kN/m²{beside}"), columns, rows, strong: vec![] }
 }
 
 /// Stated figures, which are used, beside what the site gives.
 pub fn beside(s: &mut Sheet, stated: Pressures, d: &Derived) {
-    s.table(|| compare(stated, d, "Stated pressure beside the one of the site, kN/m²", "stated, used", "of the site"));
+    s.table(|| {
+        compare(stated, d, "Stated pressure beside the one of the site, kN/m²", "stated, used", "of the site")
+    });
     let worst = d.worst();
     if worst.overall > stated.overall || worst.panel > stated.panel {
         s.note(
@@ -76,7 +98,15 @@ pub fn beside(s: &mut Sheet, stated: Pressures, d: &Derived) {
 
 /// Stated figures that are not used.
 pub fn unused(s: &mut Sheet, stated: Pressures, d: &Derived) {
-    s.table(|| compare(stated, d, "Stated pressure, not used, beside the one of the site, kN/m²", "stated", "of the site, used"));
+    s.table(|| {
+        compare(
+            stated,
+            d,
+            "Stated pressure, not used, beside the one of the site, kN/m²",
+            "stated",
+            "of the site, used",
+        )
+    });
 }
 
 fn compare(stated: Pressures, d: &Derived, caption: &str, ours: &str, theirs: &str) -> Table {
@@ -84,8 +114,8 @@ fn compare(stated: Pressures, d: &Derived, caption: &str, ours: &str, theirs: &s
         vec![name.to_owned(), shown(a), shown(z), print::significant(a.base() / z.base())]
     };
     let mut rows = vec![
-        row("overall, wind along x", stated.overall, d.along[0]),
-        row("overall, wind along y", stated.overall, d.along[1]),
+        row("overall, wind along x", stated.overall, d.along[0].top),
+        row("overall, wind along y", stated.overall, d.along[1].top),
     ];
     rows.extend(d.panels.iter().map(|p| row(&format!("panel {}", p.mark), stated.panel, p.worst)));
     Table {

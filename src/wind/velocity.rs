@@ -48,7 +48,14 @@ pub fn onto(
     charts: bool,
     annex: &Annex,
 ) -> Result<[Onto; 4], Outside> {
-    s.heading(1, if charts { "Peak pressure by the charts of the UK annex" } else { "Peak pressure by terrain category" });
+    s.heading(
+        1,
+        if charts {
+            "Peak pressure by the charts of the UK annex"
+        } else {
+            "Peak pressure by terrain category"
+        },
+    );
     let shared = shared(s, site)?;
     given!(
         s,
@@ -75,7 +82,12 @@ pub fn onto(
 
 fn shared(s: &mut Sheet, site: &Site) -> Result<Shared, Outside> {
     let source = "job file";
-    given!(s, "map value of the basic wind velocity", "read from UK Figure NA.1, job file", v_map = site.v_map);
+    given!(
+        s,
+        "map value of the basic wind velocity",
+        "read from UK Figure NA.1, job file",
+        v_map = site.v_map
+    );
     given!(s, "altitude", source, A = site.altitude);
     given!(s, "reference height, that of the building", source, z = site.height);
     let because = if site.c_season.reason.is_empty() {
@@ -128,6 +140,20 @@ fn shared(s: &mut Sheet, site: &Site) -> Result<Shared, Outside> {
     Ok(Shared { v_map, A, z, c_season, c_prob, c_o, h_dis })
 }
 
+/// Peak pressure at a height below that of the building, of the wind that governs there; silently.
+///
+/// # Errors
+/// [`Outside`] where a clause does not reach.
+pub fn at_height(site: &Site, o: &Onto, z: Length, annex: &Annex) -> Result<Stress, Outside> {
+    let mut s = Sheet::silent();
+    let lower = Site { height: z, ..site.clone() };
+    let shared = shared(&mut s, &lower)?;
+    let here = |x: &&Sector| o.bearing.is_none_or(|b| x.bearings.contains(&b));
+    let missing = || Outside::new("wind", "UK NA Table NA.1", "a sector for every side");
+    let sector = site.sectors.iter().find(here).ok_or_else(missing)?;
+    peak(&mut s, shared, (sector, o.bearing), false, annex).map(|(_, q)| q)
+}
+
 /// Velocity and peak pressure of one sector; what is shared, and rho, stand on the sheet.
 fn peak(
     s: &mut Sheet,
@@ -138,7 +164,8 @@ fn peak(
 ) -> Result<(Speed, Stress), Outside> {
     let Shared { v_map, A, z, c_season, c_prob, c_o, h_dis } = w;
     let rho = wind::air(annex.rho_air);
-    let out = |e: crate::standards::source::OutOfTable| Outside::new("wind", "UK NA Table NA.1", e.to_string());
+    let out =
+        |e: crate::standards::source::OutOfTable| Outside::new("wind", "UK NA Table NA.1", e.to_string());
     let one = Num::new(1.0);
     let looked = c_dir(bearing.map(f64::from)).map_err(out)?;
     lookup!(s, "UK NA Table NA.1", "direction factor", c_dir = looked, one);
@@ -204,8 +231,12 @@ fn by_sector(
     );
     let found = s.columns(&heads, |s, i| {
         let (side, sector, bearing) = chosen[i];
-        peak(s, shared, (sector, Some(bearing)), charts, annex)
-            .map(|(v_b, q_p)| Onto { side, bearing: Some(bearing), v_b, q_p })
+        peak(s, shared, (sector, Some(bearing)), charts, annex).map(|(v_b, q_p)| Onto {
+            side,
+            bearing: Some(bearing),
+            v_b,
+            q_p,
+        })
     });
     let all: Vec<Onto> = found.into_iter().collect::<Result<_, _>>()?;
     all.try_into().map_err(|_| Outside::new("wind", "job file", "four sides"))

@@ -41,7 +41,13 @@ fn brick_leaf() -> PanelModel {
     PanelModel {
         mark: "P1".to_owned(),
         h: Length::new(2400.0),
-        leaves: vec![PanelLeaf { t: Length::new(102.5), masonry, G_above: LineLoad::new(8.5), U_above: LineLoad::ZERO, loaded: true }],
+        leaves: vec![PanelLeaf {
+            t: Length::new(102.5),
+            masonry,
+            G_above: LineLoad::new(8.5),
+            U_above: LineLoad::ZERO,
+            loaded: true,
+        }],
         q_net: Stress::new(0.45e-3),
         q_source: "stated".to_owned(),
         helping: 0.9,

@@ -2,10 +2,10 @@
 
 use perpend::building::{Along, BracingWall, Ends, ShareBy, Stands};
 use perpend::checks::stability::share;
-use perpend::wind::Pressures;
 use perpend::quantity::{Length, Stress};
 use perpend::standards::annex::Annex;
 use perpend::trace::Sheet;
+use perpend::wind::Pressures;
 
 use super::job::{BLOCK_140, PLAIN_RETURN, with_return};
 

@@ -82,6 +82,8 @@ struct Variation {
     dice: Dice,
     wind: f64,
     panel: f64,
+    /// The job states a pressure.
+    stated: bool,
     /// The returns stand among the bracing walls too, with the same length.
     lengths_twice: bool,
 }
@@ -90,10 +92,11 @@ impl Variation {
     fn new(seed: u64) -> Self {
         let mut dice = Dice(seed);
         let (wind, panel) = (dice.between(0.1, 1.5), dice.between(0.5, 1.0));
-        Self { seed, dice, wind, panel, lengths_twice: false }
+        Self { seed, dice, wind, panel, stated: false, lengths_twice: false }
     }
 
     fn of(&mut self, text: &str) -> String {
+        self.stated = text.contains("[wind.stated]");
         self.lengths_twice = text.contains("[[bracing]]\nmark = \"R");
         let mut out = String::new();
         let mut section = String::new();
@@ -150,6 +153,8 @@ impl Variation {
                 format!("title = \"{}\"", self.dice.title(words))
             }
             ("wind.stated", "overall" | "panel") => times(value, self.wind, 3),
+            // Where a stated pressure stands beside the site, either may decide.
+            ("wind", "route") if self.stated && self.dice.below(2) == 0 => "route = \"stated\"".to_owned(),
             ("wind.site", "v_map") => format!("v_map = \"{:.1} m/s\"", self.dice.between(15.0, 24.0)),
             (_, "strength") if material => times(value, self.dice.between(0.8, 1.6), 1),
             ("returns", "length") if !self.lengths_twice => times(value, self.dice.between(1.0, 1.9), 0),

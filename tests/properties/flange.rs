@@ -164,7 +164,8 @@ fn the_flange_may_hold_the_resultant_back() {
 #[test]
 fn overturning_about_either_edge() {
     let m = model();
-    let flange = Flange { b_f: Length::new(800.0), t_f: Length::new(140.0), G_f: Force::ZERO, U_f: Force::ZERO };
+    let flange =
+        Flange { b_f: Length::new(800.0), t_f: Length::new(140.0), G_f: Force::ZERO, U_f: Force::ZERO };
     let ratio = |x: f64, toe| stressed(&m, Some(flange), 40e3, x, toe).1;
     // l = 900 mm: 100/450 and 100/(450 + 140).
     assert!((ratio(100.0, Toe::Free) - 100.0 / 450.0).abs() < 1e-12);

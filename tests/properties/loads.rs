@@ -1,17 +1,17 @@
 //! How loads, wind and restraint reach the model of a return: by hand, for any numbers.
 
 use perpend::building::{Acts, Head, Leaf, Path, Restraint, ShareBy, Stands, UnitStrength, WindRoute};
+use perpend::checks::Job;
 use perpend::checks::masonry::derive;
 use perpend::checks::returns::build::{Change, models};
 use perpend::checks::returns::check::Check;
 use perpend::checks::returns::flexure;
 use perpend::checks::returns::model::Model;
 use perpend::checks::returns::rules::by_rule;
-use perpend::checks::Job;
-use perpend::wind;
 use perpend::quantity::{Force, Length, Num, Stress};
 use perpend::standards::annex::Annex;
 use perpend::trace::{Entry, Sheet};
+use perpend::wind;
 
 use super::{Case, building, with_inputs, worked};
 

@@ -13,6 +13,7 @@ mod outcome;
 mod remedy;
 mod returns;
 mod sharing;
+mod site;
 mod whole;
 
 use perpend::building::{BaseJoint, Building, FromAbove, Head, Load, Path, Return};

@@ -2,11 +2,11 @@
 
 use perpend::building::{Along, BracingWall, Building, Ends, ShareBy, Stands};
 use perpend::checks::stability::{Share, share};
-use perpend::wind::Pressures;
 use perpend::quantity::{Length, Stress};
 use perpend::solve::torsion::{self, Bracing, Push};
 use perpend::standards::annex::Annex;
 use perpend::trace::Sheet;
+use perpend::wind::Pressures;
 use proptest::prelude::*;
 
 fn wall(n: usize, along: Along, at: f64, other: f64, length: f64) -> BracingWall {

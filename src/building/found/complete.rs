@@ -125,6 +125,7 @@ fn new_return(b: &Building, r: &FoundReturn) -> Option<Return> {
         tributary_width: r.tributary,
         strip_height: Some(r.strip),
         from_above: FromAbove::default(),
+        wind: None,
         restraint: restraint(storey).unwrap_or(Restraint::None),
         supported_wall_height: max(r.supported, storey.clear_height),
         nearest_opening: r.nearest_opening,

@@ -5,12 +5,12 @@ use crate::checks::returns::build::{self, Acting, Change, Inputs};
 use crate::checks::returns::in_plane::compressive_strength;
 use crate::checks::returns::model::Model;
 use crate::checks::returns::vertical::{self, Slender};
-use crate::wind::Pressures;
 use crate::quantity::functions::abs;
 use crate::quantity::{Force, Length, Num, Stress};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
 use crate::trace::{Outside, Sheet};
+use crate::wind::Pressures;
 use crate::{calc, given};
 
 /// What does not change with the seat.

@@ -5,12 +5,12 @@ use super::model::{Flange, Lateral, Model, Vertical};
 use crate::building::{Acts, BaseJoint, BuildUp, Building, Head, LED, Load, Restraint, Return};
 use crate::checks::masonry::{self, Masonry};
 use crate::checks::stability::Storey;
-use crate::wind::Pressures;
 use crate::quantity::{Force, Length, LineLoad, Num, print};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::flange::{self, Side};
 use crate::standards::en1996::slenderness::Stiffened;
 use crate::trace::{Column, Outside, Sheet, Table};
+use crate::wind::Pressures;
 use crate::{calc, decide, given};
 
 /// What a return is checked with.
@@ -203,9 +203,9 @@ fn flange(s: &mut Sheet, i: &Inputs<'_>, h: Length, t: Length, wind: f64) -> Opt
     calc!(s, "5.5.3", "width of the flange that counts", b_f = b_L + t + b_R);
     given!(s, "dead load in the wall met at the foot, per length", "job file", g_f = j.dead);
     calc!(s, "statics", "dead load that the flange brings", G_f = g_f * b_f);
-    let u_f = j.uplift * wind;
-    if u_f > LineLoad::ZERO {
-        given!(s, "roof uplift in the wall met, per length", LED, u_f = u_f);
+    let lifts = j.uplift * wind;
+    if lifts > LineLoad::ZERO {
+        given!(s, "roof uplift in the wall met, per length", LED, u_f = lifts);
         calc!(s, "statics", "uplift on the flange", U_f = u_f * b_f);
         return Some(Flange { b_f, t_f, G_f, U_f });
     }

@@ -13,7 +13,8 @@ use crate::{calc, given};
 pub fn of(s: &mut Sheet, i: &Inputs<'_>, m: &Model, share: f64, wind: f64) -> Lateral {
     let r = i.ret;
     let part = i.storey.and_then(|st| st.after(&r.mark).map(|p| (st, p)));
-    given!(s, "net overall pressure, characteristic", "wind sheet", q_net = i.wind.overall * wind);
+    let source = r.wind.as_ref().map_or_else(|| "wind sheet".to_owned(), |c| format!("stated: {}", c.reason));
+    given!(s, "net overall pressure, characteristic", &source, q_net = i.wind.overall * wind);
     let shown = i.building.found.of_return(&r.mark);
     let from = |as_drawn: bool| if as_drawn { "plan" } else { "job file" };
     let source = from(shown.is_some_and(|f| f.tributary == r.tributary_width));

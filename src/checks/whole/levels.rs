@@ -1,9 +1,9 @@
 //! Wind and tilt of every level of the building in one direction.
 
 use crate::building::{Along, Building, TakeDown, line_of, storey_height, strip_height};
-use crate::wind::Wind;
 use crate::quantity::{Force, Length, Moment};
 use crate::solve::descent::Axis;
+use crate::wind::Wind;
 
 /// The head of a storey.
 #[derive(Clone, Debug)]
@@ -40,7 +40,6 @@ pub const fn axis(along: Along) -> Axis {
 
 /// Levels of the building for wind along `along`, lowest first.
 pub fn of(b: &Building, down: &TakeDown, along: Along, wind: &Wind) -> Vec<Level> {
-    let q = wind.along(along).overall;
     let roof = wind.roof(along);
     let (begin, end) = front(b, along);
     let n = b.storeys.len();
@@ -57,7 +56,7 @@ pub fn of(b: &Building, down: &TakeDown, along: Along, wind: &Wind) -> Vec<Level
         M_above =
             out.last().map_or(Moment::ZERO, |up: &Level| M_above + up.F_above * storey_height(b, k + 1));
         let F_roof = roof.filter(|_| top(k)).map_or(Force::ZERO, |r| r.force * (end - begin));
-        let F_k = q * (end - begin) * strip(k) + F_roof;
+        let F_k = wind.level(b, along, k).overall * (end - begin) * strip(k) + F_roof;
         F_above = F_above + F_k;
         let load = passing(down, k);
         out.push(Level {

@@ -3,10 +3,10 @@
 use super::levels::{Level, axis};
 use crate::building::{Along, BracingWall, Building, Ends, FloorKind, ShareBy, Stability, Stands, State};
 use crate::checks::stability;
-use crate::wind::Pressures;
 use crate::quantity::{Force, Length};
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
+use crate::wind::Pressures;
 
 /// How far walls of one line may miss each other, mm.
 pub const LINE: f64 = 150.0;

@@ -104,9 +104,15 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     }
     let mut s = Sheet::recorder();
     neighbours(&mut s, b);
+    s.note(if b.wind.site.as_ref().is_some_and(|site| site.roof.is_some()) {
+        "Wind on each level: the net overall pressure on half the storey under it and half the storey over it; at the roof \
+         half a gable, or what the slopes bring, from the wind sheet."
+    } else {
+        "Wind on each level: the net overall pressure on half the storey under it and half the storey over it; at the roof \
+         the height up to the ridge is taken as an upright face."
+    });
     s.note(
-        "Wind on each level: the net overall pressure on half the storey under it and half the storey over it; at the \
-         roof the height up to the ridge is taken as an upright face. A timber floor shares by tributary width, a \
+        "A timber floor shares by tributary width, a \
          concrete one by stiffness with torsion; in one line the lengths between openings share by length. The lengths \
          that stay of the wall that comes out are not counted after it: they have sheets of their own. Each length \
          stands as a cantilever of its storey, its head free, under the load of the take-down on its loaded leaf and \

@@ -11,10 +11,10 @@ use crate::building::{
 use crate::checks::Job;
 use crate::checks::returns::{self, build::Inputs, check::Check};
 use crate::checks::stability::{Share, Storey};
-use crate::wind::Pressures;
 use crate::quantity::{Force, Length, LineLoad, Num};
 use crate::solve::descent::Pier;
 use crate::trace::Sheet;
+use crate::wind::Pressures;
 
 /// One length of wall with what it is used, before the removal and after it.
 #[derive(Clone, Debug)]
@@ -259,6 +259,7 @@ fn as_return(b: &Building, leaf: &State, i: usize, pier: &Pier, level: &Level, s
         path: Path::Sideways,
         tributary_width: Length::ZERO,
         strip_height: None,
+        wind: None,
         from_above: FromAbove { force: level.F_above * share, moment: level.M_above * share },
         restraint: if storey.floor_above == FloorKind::Concrete {
             Restraint::Concrete

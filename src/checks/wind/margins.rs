@@ -121,7 +121,12 @@ fn shown(found: &[(String, Margin)], site: Option<(f64, f64)>) -> Table {
             Margin::Times(times) => {
                 let faster = times.sqrt();
                 let (v_map, v_b) = site.unwrap_or_default();
-                vec![mark.clone(), format!("{:.2}", down(*times, 0.01)), speed(v_map * faster), speed(v_b * faster)]
+                vec![
+                    mark.clone(),
+                    format!("{:.2}", down(*times, 0.01)),
+                    speed(v_map * faster),
+                    speed(v_b * faster),
+                ]
             }
             Margin::Beyond => only(format!("more than {}", print::significant(MOST))),
             Margin::Never => only("fails without wind".to_owned()),

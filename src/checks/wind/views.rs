@@ -4,8 +4,8 @@ use crate::building::{Along, Building, Orography, RoofForm, Side, Site, storey_h
 use crate::checks::Job;
 use crate::quantity::{Force, Length, Stress, print};
 use crate::sketch::{
-    Action, Drawing, Frame, GroundProfile, Piece, PlanWind, WallZone, WindElevation, WindLevel, WindPanel, WindPlan,
-    ground_profile, wind_elevation, wind_elevations, wind_plans,
+    Action, Drawing, Frame, GroundProfile, Piece, PlanWind, WallZone, WindElevation, WindLevel, WindPanel,
+    WindPlan, ground_profile, wind_elevation, wind_elevations, wind_plans,
 };
 use crate::standards::en1991_1_4::{self as standard, Ground, Slope};
 use crate::standards::tables::walls::{Zone, c_pe, side_zones};
@@ -91,14 +91,17 @@ fn plan(b: &Building, site: &Site, d: &Derived, (along, n): (Along, usize)) -> R
             Side::Down => PlanWind::Upwards,
             Side::Up => PlanWind::Downwards,
         },
-        overall: ("q_net".to_owned(), kn_m2(d.along[along as usize])),
+        overall: ("q_net".to_owned(), kn_m2(d.along[along as usize].top)),
         zones: zones(site, &onto, size)?,
         panels: panels.collect(),
-        remark: match [Side::Left, Side::Right, Side::Down, Side::Up].map(|side| b.neighbours.contains(&side)) {
-            [true, true, ..] | [.., true, true] => "; where the row ends is not known, and it is drawn as if it ended here",
-            _ => "",
-        }
-        .to_owned(),
+        remark:
+            match [Side::Left, Side::Right, Side::Down, Side::Up].map(|side| b.neighbours.contains(&side)) {
+                [true, true, ..] | [.., true, true] => {
+                    "; where the row ends is not known, and it is drawn as if it ended here"
+                }
+                _ => "",
+            }
+            .to_owned(),
     })
 }
 
@@ -245,7 +248,13 @@ fn storey(job: &Job<'_>, wind: &Wind) -> Option<WindElevation> {
     Some(view(b, wind, st.wind_along, vec![level], (shared.F_k, shared.L_f)))
 }
 
-fn view(b: &Building, wind: &Wind, along: Along, levels: Vec<WindLevel>, (total, front): (Force, Length)) -> WindElevation {
+fn view(
+    b: &Building,
+    wind: &Wind,
+    along: Along,
+    levels: Vec<WindLevel>,
+    (total, front): (Force, Length),
+) -> WindElevation {
     let word = if along == Along::X { "x" } else { "y" };
     let top = levels.last().map_or(0.0, |l| l.strip.1);
     let top = b.wind.site.as_ref().map_or(top, |s| s.height.base().max(top));

@@ -5,6 +5,7 @@
 
 mod charts;
 mod displacement;
+mod friction;
 mod internal;
 mod orography;
 mod pressure;
@@ -16,6 +17,7 @@ mod velocity;
 
 pub use charts::{Reading, Town, peak_pressure_read, reading_height};
 pub use displacement::displacement;
+pub use friction::{Surfaces, friction};
 pub use internal::{Internal, dominant_face, no_dominant_face};
 pub use orography::{Ground, Slope, orography};
 pub use pressure::{air, peak_pressure, peak_pressure_displaced};

@@ -119,7 +119,7 @@ pub const SLIPS: &[Slip] = &[
         "hill without a length",
         "orography = \"None: level ground for 1 km.\"",
         "orography = { form = \"hill\", height = \"30 m\", from_crest = \"0 m\", downwind = \"200 m\", words = \"Map.\" }",
-        "{ form",
+        "{ form = \"hill\", height = \"30 m\", from_crest = \"0 m\", downwind = \"200 m\", words = \"Map.\" }",
         &["`upwind` is missing"],
     ),
     slip(

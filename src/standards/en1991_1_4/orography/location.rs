@@ -77,8 +77,18 @@ fn behind_cliff(sheet: &mut Sheet, r_z: Num, x_f: Num) -> Num {
     let clause = "A.3(3)";
     given!(sheet, "least height of the formula over the effective length", clause, r_1 = Num::new(0.1));
     calc!(sheet, clause, "logarithm of the height", k_z = log10(max(r_z, r_1)));
-    calc!(sheet, clause, "coefficient A", A_k = -1.3420 * cube(k_z) - 0.8222 * sq(k_z) + 0.4609 * k_z - 0.0791);
-    calc!(sheet, clause, "coefficient B", B_k = -1.0196 * cube(k_z) - 0.8910 * sq(k_z) + 0.5343 * k_z - 0.1156);
+    calc!(
+        sheet,
+        clause,
+        "coefficient A",
+        A_k = -1.3420 * cube(k_z) - 0.8222 * sq(k_z) + 0.4609 * k_z - 0.0791
+    );
+    calc!(
+        sheet,
+        clause,
+        "coefficient B",
+        B_k = -1.0196 * cube(k_z) - 0.8910 * sq(k_z) + 0.5343 * k_z - 0.1156
+    );
     calc!(sheet, clause, "C", C_k = 0.8030 * cube(k_z) + 0.4236 * sq(k_z) - 0.5738 * k_z + 0.1606);
     calc!(sheet, clause, "by the formula", s_f = A_k * sq(log10(x_f)) + B_k * log10(x_f) + C_k);
     s_f
