@@ -291,7 +291,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     };
     found::complete(&mut building, found);
     // What the wind lifts is part of what the plan leads down.
-    for words in crate::wind::place::odd(&building) {
+    for words in crate::wind::place::odd(&building).into_iter().chain(crate::wind::routes::odd(&building)) {
         reader.warn(words);
     }
     let unknown = crate::wind::roof::lift(&mut building);

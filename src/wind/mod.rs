@@ -3,12 +3,13 @@
 //! * [`velocity`]: the peak pressure of the wind onto each side of the building
 //! * [`walls`]: overall pressures along x and y; [`inside`]: internal pressure
 //! * [`panels`]: net pressures on each panel by its place and size; [`roof`]: uplift and the part along the wind
-//! * `tables`: all pressures side by side
+//! * `tables`: all pressures in one place; [`routes`]: the routes side by side
 
 pub mod inside;
 pub mod panels;
 pub mod place;
 pub mod roof;
+pub mod routes;
 mod tables;
 pub mod velocity;
 pub mod walls;
@@ -129,35 +130,36 @@ fn collected_up_to(b: &Building, k: usize) -> Length {
 /// [`Outside`] where the site leaves the range of EN 1991-1-4.
 pub fn pressures(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Wind, Outside> {
     let derived = of_site(s, b, annex)?;
-    let used = decided(s, b, derived.as_ref());
+    let used = decided(s, b, annex, derived.as_ref());
     used.ok_or_else(|| Outside::new("wind", "EN 1991-1-4", "no wind is given"))
 }
 
-/// What the site gives, where the job describes it.
+/// What the site gives, where the job describes it: by the route that decides; beside a stated pressure by the charts
+/// where they were read, else by the terrain.
 pub fn of_site(s: &mut Sheet, b: &Building, annex: &Annex) -> Result<Option<Derived>, Outside> {
-    b.wind.site.as_ref().map(|site| derive(s, b, site, annex)).transpose()
+    b.wind.site.as_ref().map(|site| by_route(s, b, site, by_charts(b, site), annex)).transpose()
 }
 
-/// The wind by the route that decides, with the other beside it.
-pub fn decided(s: &mut Sheet, b: &Building, derived: Option<&Derived>) -> Option<Wind> {
-    let stated = b.wind.stated.as_ref();
-    match (b.wind.route, stated, derived) {
-        (WindRoute::Stated, Some(st), derived) => {
-            let worst = by_statement(s, st);
-            if let Some(d) = derived {
-                tables::beside(s, worst, d);
-            }
-            Some(Wind { worst, derived: None })
-        }
-        (_, _, Some(d)) => {
-            if let Some(st) = stated {
-                tables::unused(s, Pressures { overall: st.overall, panel: st.panel }, d);
-            }
-            Some(Wind { worst: d.worst(), derived: Some(d.clone()) })
-        }
-        (_, Some(st), None) => Some(Wind { worst: by_statement(s, st), derived: None }),
-        (_, None, None) => None,
+fn by_charts(b: &Building, site: &Site) -> bool {
+    match b.wind.route {
+        WindRoute::Charts => true,
+        WindRoute::Terrain => false,
+        WindRoute::Stated => routes::described(site, true),
     }
+}
+
+/// The wind by the route that decides, with the others beside it.
+pub fn decided(s: &mut Sheet, b: &Building, annex: &Annex, derived: Option<&Derived>) -> Option<Wind> {
+    let wind = match (b.wind.route, &b.wind.stated, derived) {
+        (WindRoute::Stated, Some(st), _) | (_, Some(st), None) => {
+            Wind { worst: by_statement(s, st), derived: None }
+        }
+        (_, _, Some(d)) => Wind { worst: d.worst(), derived: Some(d.clone()) },
+        (_, None, None) => return None,
+    };
+    let known = derived.zip(b.wind.site.as_ref()).map(|(d, site)| (d, by_charts(b, site)));
+    routes::beside(s, b, annex, known);
+    Some(wind)
 }
 
 fn by_statement(s: &mut Sheet, st: &StatedWind) -> Pressures {
@@ -170,13 +172,14 @@ fn by_statement(s: &mut Sheet, st: &StatedWind) -> Pressures {
     Pressures { overall, panel: q_panel }
 }
 
-fn derive(s: &mut Sheet, b: &Building, site: &Site, annex: &Annex) -> Result<Derived, Outside> {
-    // Beside stated figures the charts stand where they were read, else the terrain.
-    let charts = match b.wind.route {
-        WindRoute::Charts => true,
-        WindRoute::Terrain => false,
-        WindRoute::Stated => site.sectors.iter().all(|x| x.readings.is_some()),
-    };
+/// What the site gives by the charts, or else by the terrain.
+fn by_route(
+    s: &mut Sheet,
+    b: &Building,
+    site: &Site,
+    charts: bool,
+    annex: &Annex,
+) -> Result<Derived, Outside> {
     let onto = velocity::onto(s, b, site, charts, annex)?;
     let along = walls::overall(s, site, &onto, charts, annex)?;
     let panels = panels::all(s, b, site, &onto)?;

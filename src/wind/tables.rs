@@ -1,7 +1,7 @@
 //! All pressures side by side.
 
 use super::velocity::{Onto, shown};
-use super::{Derived, Pressures, Wind};
+use super::{Derived, Wind};
 use crate::building::{Building, Site};
 use crate::quantity::{Stress, print};
 use crate::trace::{Column, Sheet, Table};
@@ -81,52 +81,4 @@ fn places(b: &Building, d: &Derived) -> Table {
     }
     let beside = if any { "; in brackets the stated one over that of the site" } else { "" };
     Table { caption: format!("Net characteristic pressures, kN/m²{beside}"), columns, rows, strong: vec![] }
-}
-
-/// Stated figures, which are used, beside what the site gives.
-pub fn beside(s: &mut Sheet, stated: Pressures, d: &Derived) {
-    s.table(|| {
-        compare(stated, d, "Stated pressure beside the one of the site, kN/m²", "stated, used", "of the site")
-    });
-    let worst = d.worst();
-    if worst.overall > stated.overall || worst.panel > stated.panel {
-        s.note(
-            "The stated pressure is lower than the one of the site. The person who states it answers for the difference.",
-        );
-    }
-}
-
-/// Stated figures that are not used.
-pub fn unused(s: &mut Sheet, stated: Pressures, d: &Derived) {
-    s.table(|| {
-        compare(
-            stated,
-            d,
-            "Stated pressure, not used, beside the one of the site, kN/m²",
-            "stated",
-            "of the site, used",
-        )
-    });
-}
-
-fn compare(stated: Pressures, d: &Derived, caption: &str, ours: &str, theirs: &str) -> Table {
-    let row = |name: &str, a: Stress, z: Stress| {
-        vec![name.to_owned(), shown(a), shown(z), print::significant(a.base() / z.base())]
-    };
-    let mut rows = vec![
-        row("overall, wind along x", stated.overall, d.along[0].top),
-        row("overall, wind along y", stated.overall, d.along[1].top),
-    ];
-    rows.extend(d.panels.iter().map(|p| row(&format!("panel {}", p.mark), stated.panel, p.worst)));
-    Table {
-        caption: caption.to_owned(),
-        columns: vec![
-            Column::words("pressure"),
-            Column::numbers(ours),
-            Column::numbers(theirs),
-            Column::numbers("stated / site"),
-        ],
-        rows,
-        strong: vec![],
-    }
 }

@@ -13,7 +13,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let mut drawings = Vec::new();
     match of_site(&mut s, job.building, &job.annex) {
         Ok(derived) => {
-            if let Some(wind) = decided(&mut s, job.building, derived.as_ref()) {
+            if let Some(wind) = decided(&mut s, job.building, &job.annex, derived.as_ref()) {
                 margins::table(&mut s, job, derived.as_ref());
                 drawings = views::drawings(&mut s, job, &wind, derived.as_ref());
             }

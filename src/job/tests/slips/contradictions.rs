@@ -75,7 +75,7 @@ pub const SLIPS: &[Slip] = &[
     ),
     slip(
         "wind route without its table",
-        "route = \"stated\"\n\n[wind.stated]\noverall = \"0.50 kN/m2\"\npanel = \"0.55 kN/m2\"\nreason = \"Houses of the same height on all sides, no hill within 1 km.\"",
+        "route = \"stated\"\n\n[wind.stated]\noverall = \"0.50 kN/m2\"\npanel = \"0.80 kN/m2\"\nreason = \"Houses of the same height on all sides, no hill within 1 km.\"",
         "route = \"stated\"",
         "\"stated\"",
         &["the route is \"stated\", but there is no [wind.stated]"],
