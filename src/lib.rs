@@ -37,14 +37,26 @@ use checks::Results;
 use error::{Error, Trouble};
 use pack::{Typeset, photograph};
 
-/// The building of a job file and what its checks found. `name` is the file's name for diagnostics.
+/// The building of a job file and what its checks found, without drawings. `name` is the file's name for diagnostics.
 ///
 /// # Errors
 /// [`Error::Job`] with every diagnostic of the file; [`Error::Internal`] where a sheet would print
 /// something that it did not compute.
 pub fn check(name: &str, text: &str) -> Result<(Building, Results), Error> {
+    work(name, text, checks::results)
+}
+
+/// As [`check`], with the drawings of every sheet.
+///
+/// # Errors
+/// As [`check`].
+pub fn draw(name: &str, text: &str) -> Result<(Building, Results), Error> {
+    work(name, text, checks::run)
+}
+
+fn work(name: &str, text: &str, run: fn(&Building) -> Results) -> Result<(Building, Results), Error> {
     let building = checks::whole::complete(job::read(name, text)?);
-    let results = checks::run(&building);
+    let results = run(&building);
     if let Some((sheet, fault)) = results.faults().next() {
         return Err(Error::Internal { step: format!("sheet {sheet}: {}: {}", fault.step, fault.what) });
     }
@@ -69,7 +81,7 @@ pub struct Sheeted {
 /// As [`check`]; [`Error::File`] for a photograph that cannot be used; [`Error::Internal`] where the
 /// pack cannot be set.
 pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
-    let (building, results) = check(name, text)?;
+    let (building, results) = draw(name, text)?;
     let digest = digest(text);
     let data = report::pack(&building, &results, text, &digest);
     let files = photographs(&building, folder)?;

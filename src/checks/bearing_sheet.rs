@@ -33,7 +33,8 @@ fn section<'a>(job: &'a Job<'_>, bearings: &[&'a Bearing]) -> Section {
     }
     remarks(&mut sheet, bearings);
     let checked = check(&mut sheet, job.building, bearings, &job.annex);
-    let drawings = checked.iter().flatten().flat_map(|c| bearing_views::drawings(job.building, c)).collect();
+    let each = checked.iter().flatten();
+    let drawings = job.drawings(|| each.flat_map(|c| bearing_views::drawings(job.building, c)));
     let list = |of: &dyn Fn(&Bearing) -> &str, between: &str| {
         bearings.iter().map(|x| of(x)).collect::<Vec<_>>().join(between)
     };

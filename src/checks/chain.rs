@@ -1,6 +1,6 @@
 //! The chain from the wind face to the ground: every link with how it is known, drawn and in words.
 
-use super::{Job, Section, links};
+use super::{Job, Section, links, named};
 use crate::building::{Building, CollapseClass, Link, Proof};
 use crate::sketch::{self, Branch, Chain, ChainLink, Known};
 use crate::trace::{Column, Sheet, Table};
@@ -9,8 +9,8 @@ use crate::trace::{Column, Sheet, Table};
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let mut s = Sheet::recorder();
     let links = links::links(job.building);
-    let drawing = sketch::chain(&view(job, &links));
-    s.drawings(&[&drawing.name]);
+    let drawings = job.drawings(|| [sketch::chain(&view(job, &links))]);
+    named(&mut s, &drawings);
     let strong =
         links.iter().enumerate().filter(|(_, l)| l.proof == Proof::Assumed).map(|(i, _)| i).collect();
     s.table(|| Table {
@@ -35,7 +35,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     s.heading(1, "Disproportionate collapse");
     s.note(class(job.building));
     let section = Section::plain("chain", "The chain from wind to ground", s);
-    vec![Section { drawings: vec![drawing], ..section }]
+    vec![Section { drawings, ..section }]
 }
 
 /// The consequence class, and what it asks of this job.

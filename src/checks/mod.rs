@@ -78,6 +78,8 @@ pub struct Job<'a> {
     pub piers: Vec<piers::Used>,
     /// Hold points, given and found.
     pub holds: Vec<Hold>,
+    /// Whether drawings are wanted: they take longer than all checks together.
+    pub drawn: bool,
 }
 
 impl<'a> Job<'a> {
@@ -91,8 +93,17 @@ impl<'a> Job<'a> {
         });
         let holds = outcome::holds(building);
         let down = take_down(building).and_then(Result::ok);
-        let mut job =
-            Self { building, annex, wind, down, storey, whole: Vec::new(), piers: Vec::new(), holds };
+        let mut job = Self {
+            building,
+            annex,
+            wind,
+            down,
+            storey,
+            whole: Vec::new(),
+            piers: Vec::new(),
+            holds,
+            drawn: true,
+        };
         job.whole = whole::of(&job);
         let found = whole::holds(&job);
         outcome::add(&mut job.holds, found);
@@ -105,9 +116,21 @@ impl<'a> Job<'a> {
         job
     }
 
+    /// Drawings, where they are wanted.
+    pub fn drawings<D: IntoIterator<Item = Drawing>>(&self, draw: impl FnOnce() -> D) -> Vec<Drawing> {
+        if self.drawn { draw().into_iter().collect() } else { Vec::new() }
+    }
+
     /// The storey's sharing, where it was given and could be worked out.
     pub fn sharing(&self) -> Option<&Storey> {
         self.storey.as_ref().and_then(|r| r.as_ref().ok())
+    }
+}
+
+/// Names drawings on a sheet, beside each other.
+fn named(s: &mut Sheet, drawings: &[Drawing]) {
+    if !drawings.is_empty() {
+        s.drawings(&drawings.iter().map(|d| d.name.as_str()).collect::<Vec<_>>());
     }
 }
 
@@ -150,9 +173,17 @@ impl Results {
     }
 }
 
-/// Checks a building.
+/// Checks a building and draws it.
 pub fn run(building: &Building) -> Results {
-    let job = Job::new(building);
+    of(Job::new(building))
+}
+
+/// Checks a building without its drawings, for whoever wants the results alone.
+pub fn results(building: &Building) -> Results {
+    of(Job { drawn: false, ..Job::new(building) })
+}
+
+fn of(job: Job<'_>) -> Results {
     let sections: Vec<Section> = LIST.iter().flat_map(|check| check(&job)).collect();
     let outcome = outcome::of_job(&sections, &job.holds);
     Results { sections, holds: job.holds, outcome }

@@ -28,7 +28,7 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             sheet.drawings(&[&name("before"), &name("after")]);
             panels::check(&mut sheet, &m, &job.annex);
             sheet.drawings(&[&name("section")]);
-            drawings = panel_views::drawings(job.building, p, &m);
+            drawings = job.drawings(|| panel_views::drawings(job.building, p, &m));
         }
         Err(outside) => sheet.leave(outside),
     }

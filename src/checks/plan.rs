@@ -1,6 +1,6 @@
 //! The key plan before and after: walls, what comes out, and where every mark is.
 
-use super::{Job, Section, place, spans};
+use super::{Job, Section, named, place, spans};
 use crate::building::{Along, At, Building, PlanWall, Return, stands_in};
 use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind, When, key_plans};
 use crate::trace::Sheet;
@@ -15,9 +15,10 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     if b.plan.is_empty() {
         return Vec::new();
     }
-    let plans = key_plans(&[When::Before, When::After].map(|when| view(job, when)), ROW, ALONE);
+    let views = || [When::Before, When::After].map(|when| view(job, when));
+    let plans = job.drawings(|| key_plans(&views(), ROW, ALONE));
     let mut sheet = Sheet::recorder();
-    sheet.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));
+    named(&mut sheet, &plans);
     let mut section = Section::plain("plan", "Key plan", sheet);
     section.drawings.extend(plans);
     vec![section]

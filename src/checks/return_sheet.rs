@@ -23,7 +23,8 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                         annex: &job.annex,
                     };
                     let checked = check(&mut sheet, &inputs);
-                    drawings = return_views::drawings(job.building, ret, &checked, &job.annex);
+                    drawings =
+                        job.drawings(|| return_views::drawings(job.building, ret, &checked, &job.annex));
                 }
                 Err(outside) => sheet.leave(outside.clone()),
             }

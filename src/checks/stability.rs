@@ -265,10 +265,8 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
     let mut drawings = Vec::new();
     match share(&mut s, job.building, st, pressures(job.building, wind, st), &job.annex) {
         Ok(storey) => {
-            if let Some(plans) = drawn(job.building, st, &storey) {
-                s.drawings(&plans.each_ref().map(|plan| plan.name.as_str()));
-                drawings.extend(plans);
-            }
+            drawings = job.drawings(|| drawn(job.building, st, &storey).into_iter().flatten());
+            super::named(&mut s, &drawings);
         }
         Err(outside) => s.leave(outside),
     }

@@ -54,7 +54,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     s.table(|| balance(down));
     given_by_hand(&mut s, b, down);
     let mut section = Section::plain("takedown", "Load take-down", s);
-    section.drawings.extend(stack(b, down));
+    section.drawings.extend(job.drawings(|| stack(b, down)));
     vec![section]
 }
 

@@ -21,7 +21,7 @@ fn plan_walls_three_storeys(bencher: Bencher<'_, '_>, walls: usize) {
     bencher.bench(|| perpend::check("row.toml", black_box(&text)).expect("a valid job"));
 }
 
-/// The end terrace's job with houses added to its right until the plan has so many walls.
+/// The end terrace's job with houses added to its left until the plan has so many walls.
 fn row(walls: usize) -> String {
     let text = demo("end-terrace");
     let (plan, rest) = text.split_once("[[plan.floors]]").expect("the job has floors");
@@ -36,20 +36,26 @@ fn row(walls: usize) -> String {
         );
     };
     // Narrow houses in rows: the plan has room for 100 m each way.
-    let house = |n: usize| (5.0 + 2.0 * (n % 45) as f64, 9.0 * (n / 45) as f64);
-    for n in 0..wanted / 3 {
+    let house = |n: usize| (-2.0 - 2.0 * (n % 45) as f64, 9.0 * (n / 45) as f64);
+    // Rows after the first begin with a wall of their own.
+    let ends = |houses: usize| houses.saturating_sub(1) / 45;
+    let houses = (0..=wanted / 3).rev().find(|&n| 3 * n + ends(n) <= wanted).unwrap_or(0);
+    for n in 0..houses {
         let (x, y) = house(n);
         let (z, top) = (x + 2.0, y + 8.0);
         wall("rear", n, (x, y), (z, y));
         wall("front", n, (x, top), (z, top));
-        wall("side", n, (z, y), (z, top));
+        wall("side", n, (x, y), (x, top));
+        if n > 0 && n % 45 == 0 {
+            wall("end", n, (z, y), (z, top));
+        }
     }
     // What is left over divides the first houses.
-    for n in 0..wanted % 3 {
+    for n in 0..wanted - 3 * houses - ends(houses) {
         let (x, y) = house(n);
-        wall("middle", n, (x, y + 4.0), (x + 2.0, y + 4.0));
+        wall("middle", n, (x + 0.4, y + 4.0), (x + 1.6, y + 4.0));
     }
-    for n in 0..wanted / 3 {
+    for n in 0..houses {
         let (x, y) = house(n);
         more += &floor(&format!("F {n}"), "first floor", "ground", (x, y), (x + 2.0, y + 8.0));
         more += &floor(&format!("R {n}"), "roof", "first", (x, y), (x + 2.0, y + 8.0));

@@ -4,7 +4,7 @@ use std::path::Path;
 
 use divan::{Bencher, black_box};
 use perpend::pack::{self, Times};
-use perpend::{check, digest, report};
+use perpend::{digest, draw, report};
 
 use super::jobs::START;
 
@@ -22,7 +22,7 @@ fn whole() -> perpend::Sheeted {
 /// Results to the pack's data as JSON.
 #[divan::bench(sample_count = 20)]
 fn data(bencher: Bencher<'_, '_>) {
-    let (building, results) = check("job.toml", START).expect("a valid job");
+    let (building, results) = draw("job.toml", START).expect("a valid job");
     let digest = digest(START);
     bencher.bench(|| {
         serde_json::to_vec(&report::pack(black_box(&building), &results, START, &digest)).expect("JSON")

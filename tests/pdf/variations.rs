@@ -1,11 +1,11 @@
 //! Nothing overlaps, leaves its place or is missing, on the demo jobs and on variations of them.
 
-use perpend::{check, pack, report};
+use perpend::{check, draw, pack, report};
 
 use crate::jobs;
 
 fn flaws(name: &str, text: &str) -> Vec<String> {
-    let (building, results) = check(name, text).unwrap_or_else(|e| panic!("{name}: {e}\n{text}"));
+    let (building, results) = draw(name, text).unwrap_or_else(|e| panic!("{name}: {e}\n{text}"));
     let data = report::pack(&building, &results, text, &perpend::digest(text));
     let found = pack::inspect(&data, &[]).unwrap_or_else(|e| panic!("{name}: {e}"));
     pack::evict(2);

@@ -18,7 +18,7 @@ use crate::jobs;
 
 /// A whole pack as text.
 fn pack(name: &str, job: &str) -> String {
-    let (building, results) = perpend::check(name, job).unwrap_or_else(|e| panic!("{name}: {e}"));
+    let (building, results) = perpend::draw(name, job).unwrap_or_else(|e| panic!("{name}: {e}"));
     // The digest would change the text with every remark in the job file.
     let pack = report::pack(&building, &results, job, "");
     let mut out = String::new();

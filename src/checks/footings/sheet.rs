@@ -21,7 +21,7 @@ pub fn section(job: &Job<'_>, ret: &Return) -> Option<Section> {
     match stands(job, ret, footing) {
         Ok(st) => {
             let pressed = check(&mut sheet, &st);
-            drawings.extend(view::drawing(ret, &st, &pressed));
+            drawings = job.drawings(|| view::drawing(ret, &st, &pressed));
             if let Some(drawing) = drawings.first() {
                 sheet.drawings(&[&drawing.name]);
                 // Seen first, then worked.

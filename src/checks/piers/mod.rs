@@ -19,11 +19,14 @@ pub mod work;
 
 pub use sheet::sections;
 
+use std::collections::HashMap;
+
 use super::Job;
 use crate::building::{Building, State, TakeDown};
 use crate::quantity::{Force, Stress};
-use crate::solve::descent::{From, Triple};
+use crate::solve::descent::{From, Place, Triple};
 use crate::standards::en1990::Combination;
+use crate::standards::tables::annex_e::Edges;
 use crate::trace::Outside;
 use model::PierModel;
 
@@ -113,6 +116,7 @@ impl Used {
 pub fn of(job: &Job<'_>) -> Vec<Used> {
     let b = job.building;
     let (Some(down), Ok(wind)) = (&job.down, &job.wind) else { return Vec::new() };
+    let mut known = Known::new();
     let mut out = Vec::new();
     for k in 0..b.storeys.len() {
         for (i, stack) in down.on_leaf.walls.iter().enumerate().filter(|(_, s)| s.storey == k) {
@@ -122,7 +126,7 @@ pub fn of(job: &Job<'_>) -> Vec<Used> {
             let before = down.on_leaf_before.walls.iter().position(|s| s == stack);
             let Some(before) = before else { continue };
             for n in 0..down.on_leaf.down.walls[i].piers.len() {
-                out.push(used(job, down, (before, i), n, wind.worst.panel));
+                out.push(used(job, down, (before, i), n, (wind.worst.panel, &mut known)));
             }
         }
     }
@@ -134,7 +138,13 @@ fn has_a_sheet(b: &Building, wall: usize, storey: usize) -> bool {
     b.returns.iter().any(|r| r.mark == b.plan[wall].mark && r.storey == b.storeys[storey].mark)
 }
 
-fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_panel: Stress) -> Used {
+fn used(
+    job: &Job<'_>,
+    down: &TakeDown,
+    (i, j): (usize, usize),
+    n: usize,
+    (q_panel, known): (Stress, &mut Known),
+) -> Used {
     let b = job.building;
     let (stack, on) = (&down.on_leaf.walls[j], &down.on_leaf.down.walls[j]);
     let pier = on.piers[n];
@@ -150,7 +160,7 @@ fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_pane
         }
         _ => None,
     });
-    let after = state(job, &down.on_leaf, j, n, q_panel);
+    let after = state(job, &down.on_leaf, j, n, (q_panel, &mut *known));
     Used {
         wall: b.plan[stack.wall].mark.clone(),
         storey: stack.storey,
@@ -158,7 +168,7 @@ fn used(job: &Job<'_>, down: &TakeDown, (i, j): (usize, usize), n: usize, q_pane
         to: pier.to,
         windy: after.worked.as_ref().is_ok_and(|all| all.iter().any(|w| w.model.wind.is_some())),
         beams: beams.collect(),
-        before: state(job, &down.on_leaf_before, i, n, q_panel),
+        before: state(job, &down.on_leaf_before, i, n, (q_panel, known)),
         after,
     }
 }
@@ -169,16 +179,61 @@ fn design(job: &Job<'_>, t: Triple) -> Force {
     Force::new(f.gamma_G * t[0] + f.gamma_Q * t[1])
 }
 
+/// What was worked of piers that are alike to the last bit: before and after, and from house to house, many are.
+type Known = HashMap<Like, Result<Vec<Worked>, Outside>>;
+
+/// All that the working of a pier follows from; its materials are those of its build-up.
+#[derive(PartialEq, Eq, Hash)]
+struct Like {
+    build_up: String,
+    storey: usize,
+    windy: bool,
+    bays: Vec<(Edges, [u64; 2])>,
+    figures: Vec<u64>,
+}
+
+impl Like {
+    /// None for a pier on which a beam ends: what stands under it follows from more.
+    fn new(job: &Job<'_>, leaf: &State, i: usize, n: usize) -> Option<Self> {
+        let b = job.building;
+        let (stack, wall, on) = (&leaf.walls[i], &leaf.model.walls[i], &leaf.down.walls[i]);
+        let pier = on.piers[n];
+        let beams = |p: &crate::solve::descent::Point| matches!(p.by, From::Beam(..));
+        if on.head.points.iter().any(|p| beams(p) && pier.from <= p.at && p.at <= pier.to) {
+            return None;
+        }
+        let place = Place { from: pier.from, to: pier.to, ..wall.place };
+        let windy = outer::in_the_wind(b, stack.storey, place, wall.thickness);
+        let bays =
+            if windy { bays::of(leaf, i, n, b.storeys[stack.storey].clear_height) } else { Vec::new() };
+        let loads = [pier.head, pier.moment, pier.foot, pier.foot_moment, pier.sides[0], pier.sides[1]];
+        let figures = [pier.to - pier.from, wall.weight].into_iter().chain(loads.into_iter().flatten());
+        Some(Self {
+            build_up: b.plan[stack.wall].build_up.clone(),
+            storey: stack.storey,
+            windy,
+            bays: bays.iter().map(|x| (x.edges, [x.l, x.l_w].map(|l| l.base().to_bits()))).collect(),
+            figures: figures.map(f64::to_bits).collect(),
+        })
+    }
+}
+
 /// One pier in one state.
-fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, q_panel: Stress) -> InState {
+fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, (q_panel, known): (Stress, &mut Known)) -> InState {
     let N_Ed = design(job, leaf.down.walls[i].piers[n].foot);
-    let worked = model::of(job, leaf, i, n, q_panel).map(|models| {
-        let work = |model: PierModel| {
-            let used = matrix::run(&model, &job.annex).map(|worst| worst.largest());
-            Worked { model, used }
-        };
-        models.into_iter().map(work).collect()
-    });
+    let work = || {
+        model::of(job, leaf, i, n, q_panel).map(|models| {
+            let work = |model: PierModel| {
+                let used = matrix::run(&model, &job.annex).map(|worst| worst.largest());
+                Worked { model, used }
+            };
+            models.into_iter().map(work).collect()
+        })
+    };
+    let worked = match Like::new(job, leaf, i, n) {
+        Some(like) => known.entry(like).or_insert_with(work).clone(),
+        None => work(),
+    };
     InState { N_Ed, worked }
 }
 

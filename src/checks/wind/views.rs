@@ -1,7 +1,7 @@
 //! The drawings of the wind sheet: zones and panels on the plan, forces at the levels, the ground.
 
 use crate::building::{Along, Building, Orography, RoofForm, Side, Site, storey_height};
-use crate::checks::Job;
+use crate::checks::{Job, named};
 use crate::quantity::{Force, Length, Stress, print};
 use crate::sketch::{
     Action, Drawing, Frame, GroundProfile, Piece, PlanWind, WallZone, WindElevation, WindLevel, WindPanel,
@@ -23,6 +23,9 @@ const GROUND: Frame = Frame::new(150.0, 60.0);
 
 /// Drawings, named on the sheet.
 pub fn drawings(s: &mut Sheet, job: &Job<'_>, wind: &Wind, derived: Option<&Derived>) -> Vec<Drawing> {
+    if !job.drawn {
+        return Vec::new();
+    }
     let b = job.building;
     let mut all: Vec<Vec<Drawing>> = Vec::new();
     if let (Some(site), Some(d)) = (&b.wind.site, derived) {
@@ -30,9 +33,8 @@ pub fn drawings(s: &mut Sheet, job: &Job<'_>, wind: &Wind, derived: Option<&Deri
         all.extend(ground(site).map(|d| vec![d]));
     }
     all.push(elevations(job, wind));
-    for row in all.iter().filter(|row| !row.is_empty()) {
-        let names: Vec<&str> = row.iter().map(|d| d.name.as_str()).collect();
-        s.drawings(&names);
+    for row in &all {
+        named(s, row);
     }
     all.into_iter().flatten().collect()
 }

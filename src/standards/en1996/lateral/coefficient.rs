@@ -62,7 +62,9 @@ pub fn alpha_2(
         Some(found) => {
             let table = annex_e::tabulated(found.case, mu.base(), eta.base()).map_err(|_| outside())?;
             if table.inside {
-                let value = looked(found, &table);
+                // The words are for a sheet that is printed: a search asks for thousands of values.
+                let bare = Looked::new(table.value, "Annex E", table.source);
+                let value = if s.recording() { looked(found, &table) } else { bare };
                 lookup!(s, clause, "bending moment coefficient", alpha_2 = value, Num::new(1.0));
                 let label = found.case.letter().to_string();
                 return Ok(Coefficient { alpha_2, label, by_pattern });
