@@ -379,3 +379,101 @@ proptest! {
         sound(&bearing_section(&across, FRAME));
     }
 }
+
+fn zone(out: PlanWind, ends: (f64, f64), name: &str, presses: bool, part: f64) -> WallZone {
+    WallZone { piece: Piece { out, ends }, name: name.into(), presses, part, value: format!("{part:.3}") }
+}
+
+fn wind_plan(size: (f64, f64), a: f64, parts: [f64; 4], panel: (f64, f64)) -> WindPlan {
+    let (w, h) = size;
+    let (cut, aside) = (a * w, [PlanWind::Downwards, PlanWind::Upwards]);
+    let mut zones = vec![
+        zone(PlanWind::Leftwards, (0.0, h), "D", true, parts[0]),
+        zone(PlanWind::Rightwards, (0.0, h), "E", false, parts[1]),
+    ];
+    for out in aside {
+        zones.push(zone(out, (0.0, cut), "A", false, parts[2]));
+        zones.push(zone(out, (cut, w), "B", false, parts[3]));
+    }
+    WindPlan {
+        name: "wind-x".into(),
+        words: "wind along x, onto left".into(),
+        size,
+        between: vec![((w / 2.0, 0.0), (w / 2.0, h))],
+        wind: PlanWind::Rightwards,
+        overall: ("q_net".into(), "0.812 kN/m²".into()),
+        zones,
+        panels: vec![WindPanel {
+            mark: "P1".into(),
+            piece: Piece { out: PlanWind::Downwards, ends: (panel.0 * w / 2.0, w / 2.0 + panel.1 * w / 2.0) },
+            value: "0.955 kN/m²".into(),
+        }],
+        remark: String::new(),
+    }
+}
+
+fn wind_elevation_view(depth: f64, storeys: &[f64], roof: f64) -> WindElevation {
+    let mut levels = Vec::new();
+    let mut foot = 0.0;
+    for (n, height) in storeys.iter().enumerate() {
+        let head = foot + height;
+        let over = storeys.get(n + 1).map_or(roof / 2.0, |next| next / 2.0);
+        levels.push(WindLevel {
+            height: head,
+            strip: (foot + height / 2.0, head + over),
+            force: Action::new("F_k", "12.9 kN", ""),
+            roof: (n + 1 == storeys.len()).then(|| Action::new("", "8.88 kN", "of it from the roof")),
+        });
+        foot = head;
+    }
+    WindElevation {
+        name: "forces-x".into(),
+        words: "wind along x".into(),
+        front: "8.30 m".into(),
+        depth,
+        roof: vec![(0.0, foot), (0.5, foot + roof), (1.0, foot)],
+        pressure: Action::new("q_net", "0.648 kN/m²", "overall pressure"),
+        levels,
+        foot: Action::new("", "26.5 kN", "at the foot"),
+    }
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(40))]
+
+    #[test]
+    fn wind_on_any_plan_is_sound(
+        w in 5000.0..40_000.0_f64, h in 4000.0..20_000.0_f64, a in 0.1..0.9_f64,
+        parts in prop::array::uniform4(0.05..1.0_f64), from in 0.0..0.9_f64, to in 0.1..1.0_f64,
+    ) {
+        let views = [wind_plan((w, h), a, parts, (from, to)), wind_plan((w, h), 1.0 - a, parts, (to / 2.0, to))];
+        let drawings = wind_plans(&views, Frame::new(170.0, 110.0), Frame::new(170.0, 90.0));
+        drawings.iter().for_each(sound);
+        prop_assert!(has_length(&drawings[0], Pen::Cut, w / 2.0 + to * w / 2.0 - from * w / 2.0));
+    }
+
+    #[test]
+    fn wind_on_any_house_is_sound(
+        depth in 4000.0..20_000.0_f64, storeys in prop::collection::vec(2200.0..3600.0_f64, 1..4), roof in 0.0..4000.0_f64,
+    ) {
+        let view = wind_elevation_view(depth, &storeys, roof);
+        let frame = Frame::new(170.0, 62.0);
+        wind_elevations(&[view.clone(), view.clone()], Frame::new(170.0, 110.0), frame).iter().for_each(sound);
+        sound(&wind_elevation(&view, frame));
+    }
+
+    #[test]
+    fn any_ground_is_sound(
+        height in 5.0..200.0_f64, up in 40.0..2000.0_f64, down in 40.0..2000.0_f64, at in -1.4..1.4_f64, falls in any::<bool>(),
+    ) {
+        let view = GroundProfile {
+            form: if falls { "hill" } else { "cliff" }.into(),
+            height: height * 1e3,
+            upwind: up * 1e3,
+            downwind: falls.then_some(down * 1e3),
+            site: at * up * 1e3,
+            factors: [Action::new("c_o", "1.15", "orography factor"), Action::new("phi", "0.162", "upwind slope")],
+        };
+        sound(&ground_profile(&view, Frame::new(150.0, 60.0)));
+    }
+}

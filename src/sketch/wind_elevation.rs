@@ -8,7 +8,7 @@ use super::drawing::{Drawing, Role, Style};
 use super::load;
 use super::note::{Note, Spot};
 use super::pen::Pen;
-use super::scale::{APART, Frame, Scale, fit, fit_row};
+use super::scale::{Frame, Scale, fit, fit_pair};
 use super::text::{Text, capital};
 use super::view::Action;
 
@@ -51,9 +51,10 @@ const COMB: f64 = 8.0;
 /// From the face to the pressure, and from the pressure to the dimensions, mm.
 const OFF: f64 = 1.0;
 
-/// Draws two winds at one scale beside each other.
-pub fn wind_elevations(views: &[WindElevation; 2], row: Frame) -> [Drawing; 2] {
-    fit_row(row, APART, 50.0, |scale| views.each_ref().map(|view| draw(view, scale)))
+/// Draws two winds at one scale, in `row` beside each other or each `alone`.
+pub fn wind_elevations(views: &[WindElevation; 2], row: Frame, alone: Frame) -> [Drawing; 2] {
+    let least = (views[0].depth.max(views[1].depth), 0.0);
+    fit_pair((row, alone), least, 50.0, |scale| views.each_ref().map(|view| draw(view, scale)))
 }
 
 /// Draws one wind.

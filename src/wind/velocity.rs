@@ -99,7 +99,17 @@ fn shared(s: &mut Sheet, site: &Site) -> Result<Shared, Outside> {
     if !site.p.reason.is_empty() {
         s.note(format!("Another return period than 50 years: {}.", site.p.reason.trim_end_matches('.')));
     }
-    let c_prob = wind::probability(s, Num::new(site.p.value))?;
+    let c_prob = if site.p.reason.is_empty() {
+        given!(
+            s,
+            "probability factor, for the 50 years of the map",
+            "4.2(2)P note 4",
+            c_prob = Num::new(1.0)
+        );
+        c_prob
+    } else {
+        wind::probability(s, Num::new(site.p.value))?
+    };
     let c_o = match &site.orography {
         Orography::None(reason) => {
             given!(s, "orography factor", &format!("stated: {reason}"), c_o = Num::new(1.0));

@@ -54,7 +54,7 @@ fn every_mix_of_choices_gives_a_sound_sheet() {
     for n in 0..256_u32 {
         let choice: [bool; 8] = std::array::from_fn(|k| n >> k & 1 == 1);
         let text = job(choice);
-        match perpend::check("choices", &text) {
+        match perpend::draw("choices", &text) {
             Ok((_, results)) => {
                 read += 1;
                 let sheet = results.sections.iter().find(|s| s.id == "R1").expect("the sheet of R1");

@@ -136,18 +136,15 @@ fn shown(found: &[(String, Margin)], site: Option<(f64, f64)>) -> Table {
         }
         row
     };
-    let mut columns = vec![Column::words("where"), Column::numbers("pressure, times what it is")];
+    let mut columns = vec![Column::words("where"), Column::numbers("pressure, times")];
     if site.is_some() {
-        columns.extend([
-            Column::numbers("map value of the velocity, m/s"),
-            Column::numbers("basic velocity of the worst side, m/s"),
-        ]);
+        columns.extend([Column::numbers("map value, m/s"), Column::numbers("basic velocity, m/s")]);
     }
     let mut rows: Vec<Vec<String>> = found.iter().map(row).collect();
     if let Some((v_map, v_b)) = site {
         rows.insert(0, vec!["as it is".to_owned(), "1".to_owned(), speed(v_map), speed(v_b)]);
     }
-    Table { caption: "Wind at which each reaches 1.00".to_owned(), columns, rows, strong: vec![] }
+    Table { caption: "Wind at which each reaches 1.00: the pressure over what it is now, and the velocities of the worst side".to_owned(), columns, rows, strong: vec![] }
 }
 
 #[cfg(test)]

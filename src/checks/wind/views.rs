@@ -3,6 +3,7 @@
 use crate::building::{Along, Building, Orography, RoofForm, Side, Site, storey_height};
 use crate::checks::{Job, named};
 use crate::quantity::{Force, Length, Stress, print};
+use crate::sketch::scale::APART;
 use crate::sketch::{
     Action, Drawing, Frame, GroundProfile, Piece, PlanWind, WallZone, WindElevation, WindLevel, WindPanel,
     WindPlan, ground_profile, wind_elevation, wind_elevations, wind_plans,
@@ -18,7 +19,8 @@ use crate::wind::{Derived, Wind};
 /// Frames on the sheet: two drawings side by side, one that stands alone, the ground, mm.
 const ROW: Frame = Frame::new(170.0, 110.0);
 const ALONE: Frame = Frame::new(170.0, 90.0);
-const ONE: Frame = Frame::new(120.0, 70.0);
+const ONE: Frame = Frame::new(120.0, 62.0);
+const LOW: Frame = Frame::new(170.0, 62.0);
 const GROUND: Frame = Frame::new(150.0, 60.0);
 
 /// Drawings, named on the sheet.
@@ -34,7 +36,10 @@ pub fn drawings(s: &mut Sheet, job: &Job<'_>, wind: &Wind, derived: Option<&Deri
     }
     all.push(elevations(job, wind));
     for row in &all {
-        named(s, row);
+        // One above the other they need not stay on one page.
+        let width: f64 = row.iter().map(|d| d.width + APART).sum::<f64>() - APART;
+        let abreast = if width <= ROW.width { row.len() } else { 1 };
+        row.chunks(abreast.max(1)).for_each(|some| named(s, some));
     }
     all.into_iter().flatten().collect()
 }
@@ -208,7 +213,7 @@ fn elevations(job: &Job<'_>, wind: &Wind) -> Vec<Drawing> {
         job.whole.iter().map(|d| levels(job, wind, d)).collect()
     };
     match <[WindElevation; 2]>::try_from(views) {
-        Ok(pair) => wind_elevations(&pair, ROW).to_vec(),
+        Ok(pair) => wind_elevations(&pair, ROW, LOW).to_vec(),
         Err(views) => views.iter().map(|view| wind_elevation(view, ONE)).collect(),
     }
 }
