@@ -2,7 +2,7 @@
 
 use super::{Along, Cause, Side, WindRoute};
 use crate::quantity::{Area, Length, Speed, Stress};
-use crate::standards::en1991_1_4::Ground;
+use crate::standards::en1991_1_4::{Ground, Slope};
 use crate::standards::masonry::TerrainCategory;
 
 /// Wind on the site: the route that decides, and the figures of each route that were given.
@@ -82,6 +82,19 @@ pub struct Feature {
     pub from_crest: Length,
     /// Where this was read, and by whom.
     pub words: String,
+}
+
+impl Feature {
+    /// As Annex A.3 has it.
+    pub const fn slope(&self) -> Slope {
+        Slope {
+            ground: self.form,
+            height: self.height,
+            upwind: self.upwind,
+            downwind: self.downwind,
+            from_crest: self.from_crest,
+        }
+    }
 }
 
 /// Buildings upwind, for the displacement height of A.5.

@@ -15,13 +15,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             let mut drawings = Vec::new();
             match &job.wind {
                 Ok(wind) => {
-                    let inputs = Inputs {
-                        building: job.building,
-                        ret,
-                        wind: wind.of_return(job.building, ret),
-                        storey: job.sharing(),
-                        annex: &job.annex,
-                    };
+                    let inputs = Inputs::new(job, ret, wind);
                     let checked = check(&mut sheet, &inputs);
                     drawings =
                         job.drawings(|| return_views::drawings(job.building, ret, &checked, &job.annex));

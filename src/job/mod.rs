@@ -7,7 +7,7 @@
 //! * [`read`]: the whole file
 //! * `limits`: what a number may be, declared beside each field
 //! * `names`: marks and names, and references to them
-//! * `identity basis wind materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
+//! * `identity basis wind sectors materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
 //!   the file's order
 //! * [`start`]: the job to start from
 
@@ -29,6 +29,7 @@ mod panels;
 mod plan;
 mod reader;
 mod returns;
+mod sectors;
 pub mod start;
 mod syntax;
 mod wind;

@@ -10,6 +10,7 @@ pub mod panels;
 pub mod place;
 pub mod roof;
 pub mod routes;
+pub mod sides;
 mod tables;
 pub mod velocity;
 pub mod walls;

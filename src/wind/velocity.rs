@@ -1,10 +1,10 @@
 //! The peak velocity pressure of the wind onto each side of the building.
 
-use super::SIDES;
+use super::{SIDES, sides};
 use crate::building::{Building, Orography, Sector, Side, Site};
 use crate::quantity::{Length, Num, Speed, Stress, print};
 use crate::standards::annex::Annex;
-use crate::standards::en1991_1_4::{self as wind, Reading, Slope};
+use crate::standards::en1991_1_4::{self as wind, Reading};
 use crate::standards::tables::wind::{c_dir, roughness};
 use crate::trace::{Outside, Sheet};
 use crate::{given, lookup};
@@ -22,12 +22,9 @@ pub struct Onto {
     pub q_p: Stress,
 }
 
-/// Farthest that the wind may come off the square of a side: 7.2.1(2) with the wind normal to it, +-45 degrees.
-const OFF: f64 = 45.0;
-
 /// What every direction shares.
 #[derive(Clone, Copy)]
-struct Shared {
+pub struct Shared {
     v_map: Speed,
     A: Length,
     z: Length,
@@ -69,7 +66,7 @@ pub fn onto(
         let (v_b, q_p) = peak(s, shared, (sector, None), charts, annex)?;
         SIDES.map(|side| Onto { side, bearing: None, v_b, q_p })
     } else {
-        by_sector(s, b, site, shared, charts, annex)?
+        sides::by_sector(s, b, site, shared, charts, annex)?
     };
     s.note(if charts {
         "The annex's charts are not held here: the factors were read by the person named, at the distances given. Size and \
@@ -124,14 +121,7 @@ fn shared(s: &mut Sheet, site: &Site) -> Result<Shared, Outside> {
                 "{} It counts for every direction of the wind, the safe side; altitude is that of its foot.",
                 f.words
             ));
-            let slope = Slope {
-                ground: f.form,
-                height: f.height,
-                upwind: f.upwind,
-                downwind: f.downwind,
-                from_crest: f.from_crest,
-            };
-            wind::orography(s, slope, z)?
+            wind::orography(s, f.slope(), z)?
         }
     };
     let h_dis = match &site.town {
@@ -165,7 +155,7 @@ pub fn at_height(site: &Site, o: &Onto, z: Length, annex: &Annex) -> Result<Stre
 }
 
 /// Velocity and peak pressure of one sector; what is shared, and rho, stand on the sheet.
-fn peak(
+pub fn peak(
     s: &mut Sheet,
     w: Shared,
     (sector, bearing): (&Sector, Option<u16>),
@@ -202,72 +192,6 @@ fn peak(
         wind::peak_pressure(s, v_b, z, z_0, z_min, c_o, rho)
     };
     Ok((v_b, q_p))
-}
-
-/// Onto each side the worst of the bearings within 45 degrees of its square.
-fn by_sector(
-    s: &mut Sheet,
-    b: &Building,
-    site: &Site,
-    shared: Shared,
-    charts: bool,
-    annex: &Annex,
-) -> Result<[Onto; 4], Outside> {
-    let mut chosen = Vec::new();
-    for side in SIDES {
-        let square = bearing_of(b, side);
-        let mut worst: Option<(&Sector, u16, Stress)> = None;
-        for sector in &site.sectors {
-            for &bearing in &sector.bearings {
-                if off(f64::from(bearing), square) > OFF {
-                    continue;
-                }
-                let mut silent = Sheet::silent();
-                let (_, q) = peak(&mut silent, shared, (sector, Some(bearing)), charts, annex)?;
-                if worst.is_none_or(|w| q > w.2) {
-                    worst = Some((sector, bearing, q));
-                }
-            }
-        }
-        let missing = || Outside::new("wind", "UK NA Table NA.1", "a bearing for every side");
-        let (sector, bearing, _) = worst.ok_or_else(missing)?;
-        chosen.push((side, sector, bearing));
-    }
-    let heads: Vec<String> =
-        chosen.iter().map(|(side, _, bearing)| format!("onto {}, from {bearing}°", side.word())).collect();
-    s.note(
-        "Onto each side the bearing within 45° of its square that gives the greatest pressure (UK Table NA.1, in steps of \
-         30°); north is that of the plan.",
-    );
-    let found = s.columns(&heads, |s, i| {
-        let (side, sector, bearing) = chosen[i];
-        peak(s, shared, (sector, Some(bearing)), charts, annex).map(|(v_b, q_p)| Onto {
-            side,
-            bearing: Some(bearing),
-            v_b,
-            q_p,
-        })
-    });
-    let all: Vec<Onto> = found.into_iter().collect::<Result<_, _>>()?;
-    all.try_into().map_err(|_| Outside::new("wind", "job file", "four sides"))
-}
-
-/// Where the wind square onto a side comes from, degrees from north.
-pub fn bearing_of(b: &Building, side: Side) -> f64 {
-    let turn = match side {
-        Side::Up => 0.0,
-        Side::Right => 90.0,
-        Side::Down => 180.0,
-        Side::Left => 270.0,
-    };
-    // North lies `north` degrees clockwise from the top of the page.
-    (turn - b.north).rem_euclid(360.0)
-}
-
-/// Between two bearings, degrees.
-fn off(a: f64, z: f64) -> f64 {
-    let d = (a - z).rem_euclid(360.0);
-    d.min(360.0 - d)
 }
 
 /// A pressure as it is printed.

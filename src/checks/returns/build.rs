@@ -3,6 +3,7 @@
 use super::lateral;
 use super::model::{Flange, Lateral, Model, Vertical};
 use crate::building::{Acts, BaseJoint, BuildUp, Building, Head, LED, Load, Restraint, Return};
+use crate::checks::Job;
 use crate::checks::masonry::{self, Masonry};
 use crate::checks::stability::Storey;
 use crate::quantity::{Force, Length, LineLoad, Num, print};
@@ -10,7 +11,7 @@ use crate::standards::annex::Annex;
 use crate::standards::en1996::flange::{self, Side};
 use crate::standards::en1996::slenderness::Stiffened;
 use crate::trace::{Column, Outside, Sheet, Table};
-use crate::wind::Pressures;
+use crate::wind::{Pressures, Wind};
 use crate::{calc, decide, given};
 
 /// What a return is checked with.
@@ -51,6 +52,19 @@ pub struct Acting {
     pub leaf: usize,
     /// Its share; 1 where it acts alone.
     pub share: f64,
+}
+
+impl<'a> Inputs<'a> {
+    /// Of a return of a job under its wind.
+    pub fn new(job: &'a Job<'a>, ret: &'a Return, wind: &Wind) -> Self {
+        Self {
+            building: job.building,
+            ret,
+            wind: wind.of_return(job.building, ret),
+            storey: job.sharing(),
+            annex: &job.annex,
+        }
+    }
 }
 
 /// The leaves that act, outer first.

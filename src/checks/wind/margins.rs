@@ -21,13 +21,7 @@ pub fn table(s: &mut Sheet, job: &Job<'_>, derived: Option<&Derived>) {
     let wind = job.wind.as_ref();
     for ret in &job.building.returns {
         let Ok(wind) = wind else { continue };
-        let inputs = Inputs {
-            building: job.building,
-            ret,
-            wind: wind.of_return(job.building, ret),
-            storey: job.sharing(),
-            annex: &job.annex,
-        };
+        let inputs = Inputs::new(job, ret, wind);
         let passes = |times: f64| of_return::passes(&inputs, Change { wind: times, ..Change::NONE });
         found.push((ret.mark.clone(), margin(passes)));
     }

@@ -1,5 +1,6 @@
 //! The wind sheet: what [`crate::wind`] works out, the drawings, and how far the wind may grow.
 
+mod forces;
 pub mod margins;
 mod views;
 
