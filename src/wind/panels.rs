@@ -49,7 +49,12 @@ pub fn all(s: &mut Sheet, b: &Building, site: &Site, onto: &[Onto; 4]) -> Result
          where it lies, that of the corner.",
     );
     if let Some(d) = &site.dominant {
-        s.note(format!("An opening dominates on the {} side: {}", d.side.word(), d.words));
+        s.note(format!(
+            "An opening dominates on the {} side: {} It counts shut and open, open in the full wind with full factors; \
+             7.2.9(3) would let that be an accidental situation.",
+            d.side.word(),
+            d.words
+        ));
     }
     if b.panels.is_empty() {
         let net = one(s, site, onto, ("any panel", crate::quantity::Area::new(1e6)), None)?;
