@@ -18,7 +18,11 @@ const C_ET: Limits = Limits::new(0.4, 1.0, "");
 pub fn sector(t: &Table<'_>) -> Option<Sector> {
     let bearings = bearings(&t.need("bearings"));
     let category = if t.has("category") { t.need("category").pick(TERRAIN).map(Some) } else { Some(None) };
-    let readings = if t.has("c_e") { readings(t).map(Some) } else { Some(None) };
+    let readings = if ["c_e", "shore", "read_by", "c_eT", "into_town"].iter().any(|key| t.has(key)) {
+        readings(t).map(Some)
+    } else {
+        Some(None)
+    };
     t.finish();
     Some(Sector { bearings: bearings?, category: category?, readings: readings? })
 }
