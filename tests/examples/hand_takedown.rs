@@ -65,3 +65,18 @@ fn the_rear_wall_beside_its_door() {
         + floor * 1800.0 * 0.5;
     close(on.piers[0].head[0], head + door);
 }
+
+/// A roof that spans onto the flank wall: half of its 5 m presses and lifts the wall's panels.
+#[test]
+fn a_roof_presses_and_lifts_the_panels_of_its_wall() {
+    let roof = JOB.find("mark = \"RF\"").expect("the roof");
+    let (before, after) = JOB.split_at(roof);
+    let text = format!("{before}{}", after.replacen("spans = \"y\"", "spans = \"x\"", 1));
+    let b = perpend::job::read("end-terrace.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
+    let uplift = b.area_loads.iter().find(|a| a.name == "roof").expect("a roof").uplift.base() * 1e3;
+    assert!(uplift > 0.3, "{uplift}");
+    // Upstairs leaf of the flank wall, 102.5 mm of 20 kN/m³, 2.4 m high, and half of the roof.
+    let p = b.panels.iter().find(|p| p.mark == "P1").expect("the panel");
+    close(p.dead_above.base(), 0.1025 * 20.0 * 2.4 + 1.15 * 2.5);
+    close(p.lift_above.base(), uplift * 2.5);
+}

@@ -4,7 +4,7 @@ use perpend::checks::returns::actions::{Actions, Case, Direction, Toe};
 use perpend::checks::returns::build::Change;
 use perpend::checks::returns::in_plane::{self, Stressed};
 use perpend::checks::returns::model::{At, Flange, Model};
-use perpend::quantity::{Force, Length, Moment, Num};
+use perpend::quantity::{Force, Length, LineLoad, Moment, Num};
 use perpend::standards::annex::Annex;
 use perpend::standards::en1990::Combination;
 use perpend::standards::en1996::section::{Section, block_area, triangle};
@@ -171,4 +171,48 @@ fn overturning_about_either_edge() {
     assert!((ratio(100.0, Toe::Free) - 100.0 / 450.0).abs() < 1e-12);
     assert!((ratio(-100.0, Toe::Free) - 100.0 / 590.0).abs() < 1e-12);
     assert!((ratio(-500.0, Toe::Junction) - 500.0 / 590.0).abs() < 1e-12);
+}
+
+/// Roof uplift on the wall met comes off the flange's load: 2 kN/m over its width, where N leaves the wall and with its
+/// own arm; the sheet keeps its locks and the junction carries what the flange takes less what it still brings.
+#[test]
+fn uplift_on_the_flange_is_taken_off() {
+    use perpend::checks::returns::{actions, check};
+    let c = super::Case {
+        l: 900.0,
+        h: 2500.0,
+        bonded: true,
+        propped: false,
+        dpc: true,
+        path: 0,
+        b_t: 300.0,
+        loads: vec![(30.0, 5.0, 0.0, 0.5, 0.0)],
+        above: (0.0, 0.0),
+        flange: (1500.0, 1500.0, 140.0),
+    };
+    let mut b = building(&c);
+    let (calm, ..) = worked(&b, Change::NONE).expect("inside");
+    b.returns[0].junction.uplift = LineLoad::new(2.0);
+    let (m, ..) = worked(&b, Change::NONE).expect("inside");
+    let f = m.flange.expect("a flange");
+    let lift = 2.0 * f.b_f.base();
+    assert!((f.U_f.base() - lift).abs() < 1e-9);
+    let foot = |m: &Model, combination| {
+        let case = Case { combination, direction: Direction::ToFree };
+        actions::at(&mut Sheet::silent(), m, &Annex::UK, case, At::Foot).N_Ed.base()
+    };
+    let less = foot(&calm, Combination::Helping) - foot(&m, Combination::Helping);
+    assert!((less - 1.5 * lift).abs() < 1e-6, "{less} of {lift}");
+    assert_eq!(foot(&calm, Combination::Gravity), foot(&m, Combination::Gravity));
+    let arm = (900.0 + 140.0) / 2.0;
+    assert!((m.vertical(At::Foot).S_U.base() + lift * arm).abs() < 1e-6);
+    // Twice the wind lifts twice as much.
+    let (blown, ..) = worked(&b, Change { wind: 2.0, ..Change::NONE }).expect("inside");
+    assert!((blown.flange.expect("a flange").U_f.base() - 2.0 * lift).abs() < 1e-9);
+    super::with_inputs(&b, |i| {
+        let mut s = Sheet::recorder();
+        check(&mut s, i);
+        assert!(s.faults.is_empty(), "{:?}", s.faults);
+        assert!(s.verdicts.iter().any(|v| v.id.ends_with("junction")), "{:?}", s.verdicts.len());
+    });
 }

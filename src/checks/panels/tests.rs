@@ -290,3 +290,25 @@ fn remedies_are_values_that_pass() {
     let said = |e: &Entry| matches!(e, Entry::Note(n) if n.starts_with("As it stands the panel takes"));
     assert!(s.entries.iter().any(said));
 }
+
+/// 8 kN/m of dead load under 2 kN/m of roof uplift: 8 − 1.5/0.9 x 2 = 4.667 kN/m help, and under 6 kN/m nothing does.
+#[test]
+fn uplift_comes_off_what_helps() {
+    let helps = |lift: f64| {
+        let mut m = single(3000.0, [Edge::Simple; 4], 0.6, 8.0);
+        m.leaves[0].U_above = LineLoad::new(lift);
+        let mut s = Sheet::recorder();
+        crate::given!(s, "", "", gamma_h = Num::new(m.helping));
+        let left = super::strength::helps(&mut s, &m.leaves[0], &Annex::UK, gamma_h);
+        assert!(s.faults.is_empty(), "{:?}", s.faults);
+        let mut s = Sheet::recorder();
+        super::check(&mut s, &m, &Annex::UK);
+        assert!(s.faults.is_empty(), "{:?}", s.faults);
+        let wind = super::remedy::greatest_wind(&m, &Annex::UK).expect("it stands without wind");
+        (left.base(), wind)
+    };
+    let (none, some, all) = (helps(0.0), helps(2.0), helps(6.0));
+    assert_eq!((none.0, all.0), (8.0, 0.0));
+    assert!((some.0 - (8.0 - 1.5 / 0.9 * 2.0)).abs() < 1e-12, "{}", some.0);
+    assert!(none.1 > some.1 && some.1 > all.1, "{none:?} {some:?} {all:?}");
+}
