@@ -151,13 +151,15 @@ fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
 /// Lines of the results schedule, in the order of the section.
 pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
     let amount = |v: &Value| print::show(&v.name, v.value).to_string();
-    let mark = if s.mark.is_empty() { s.title.clone() } else { s.mark.clone() };
+    let mark = s.mark.clone();
+    // Of a sheet without a mark the title stands before each result: the column of marks is narrow.
+    let told = |words: &str| if mark.is_empty() { format!("{}: {words}", s.title) } else { words.to_owned() };
     // Of a sheet of several things each result goes under the mark that ends its words.
     let own = |words: &str| {
         let ends = |m: &&str| words.ends_with(&format!(", {m}"));
         match s.mark.split(", ").find(ends) {
             Some(m) if s.mark.contains(", ") => (m.to_owned(), words[..words.len() - m.len() - 2].to_owned()),
-            _ => (mark.clone(), words.to_owned()),
+            _ => (mark.clone(), told(words)),
         }
     };
     let verdict = |v: &Verdict| data::Scheduled {
@@ -172,7 +174,7 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
     };
     let outside = s.sheet.outside.iter().map(|o| data::Scheduled {
         mark: mark.clone(),
-        check: o.words.clone(),
+        check: told(&o.words),
         demand: String::new(),
         resistance: String::new(),
         ratio: String::new(),
