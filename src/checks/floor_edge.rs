@@ -1,7 +1,7 @@
 //! The edge of a floor along the top of a panel: the wind that draws the wall off it, and its straps.
 
 use super::panels::{PanelModel, strength};
-use super::{Job, Section, panel_sheet};
+use super::{Job, Section, links, panel_sheet};
 use crate::building::{FloorEdge, Joists, StrapsKnown};
 use crate::quantity::functions::{KN, MPA};
 use crate::quantity::print::show;
@@ -25,7 +25,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     for e in &b.floor_edges {
         let Some(panel) = b.panel(&e.panel) else { continue };
         match panel_sheet::model(job, panel) {
-            Ok(m) => edges.push((e, m)),
+            Ok(m) => edges.push((e, hardest(job, e, m))),
             Err(outside) => s.leave(outside),
         }
     }
@@ -34,7 +34,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     }
     s.note(
         "Suction draws the wall outward, and straps hold its top to the floor; friction and built-in joists are not \
-         counted. The wind is the net pressure of the panel, whichever way it acts.",
+         counted. The wind is the greatest net pressure of the panels held, whichever way it acts.",
     );
     let tables = edges.len().div_ceil(ABREAST).max(1);
     for few in edges.chunks(edges.len().div_ceil(tables).max(1)) {
@@ -56,6 +56,20 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let marks: Vec<&str> = b.floor_edges.iter().map(|e| e.mark.as_str()).collect();
     let section = Section::plain("floor-edges", "The floor edge and its straps", s);
     vec![Section { mark: marks.join(", "), ..section }]
+}
+
+/// The model of the edge's own panel under the greatest pressure of the panels that the edge holds.
+fn hardest(job: &Job<'_>, e: &FloorEdge, mut m: PanelModel) -> PanelModel {
+    let held = links::concerned(job.building, e);
+    for panel in job.building.panels.iter().filter(|p| held.contains(&p.mark)) {
+        if let Ok(other) = panel_sheet::model(job, panel)
+            && other.q_net > m.q_net
+        {
+            m.q_net = other.q_net;
+            m.q_source = format!("{}, {}", other.q_source, panel.mark);
+        }
+    }
+    m
 }
 
 /// The force on one strap against what it takes, and the spacing that would do.

@@ -212,3 +212,18 @@ fn a_return_may_state_its_own() {
     let refused = perpend::check("own.toml", &job).err().map(|e| e.to_string()).unwrap_or_default();
     assert!(refused.contains("where the floor shares by stiffness"), "{refused}");
 }
+
+/// One edge of the floor holds both panels of the flank wall: its straps take the pressure of the one in the corner.
+#[test]
+fn straps_take_the_hardest_panel_they_hold() {
+    let end = include_str!("../../jobs/end-terrace.toml");
+    let (b, results) = perpend::check("end-terrace.toml", end).unwrap_or_else(|e| panic!("{e}"));
+    let net = derived(&b).expect("within").panels;
+    let of = |mark: &str| net.iter().find(|p| p.mark == mark).expect("the panel").worst.base();
+    assert!(of("P2") > of("P1"));
+    let sheet = &results.sections.iter().find(|s| s.id == "floor-edges").expect("its sheet").sheet;
+    let strap = sheet.verdicts.iter().find(|v| v.id.ends_with("strap")).expect("a strap");
+    // 1.5 x pressure x 2.55 m of face x 0.55 m apart.
+    let hand = 1.5 * of("P2") * 2550.0 * 550.0;
+    assert!((strap.demand.value.value - hand).abs() < 1e-6 * hand, "{} {hand}", strap.demand.value.value);
+}
