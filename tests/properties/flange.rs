@@ -136,22 +136,27 @@ proptest! {
     }
 }
 
-/// The edge that a case presses follows the resultant, not the wind alone: the flange's own weight may outweigh it.
-#[test]
-fn the_flange_may_hold_the_resultant_back() {
-    use perpend::checks::returns::actions;
-    let c = super::Case {
+/// A bonded cantilever of 900 mm with room for its flange.
+fn bonded(b_t: f64, load: (f64, f64, f64, f64, f64)) -> super::Case {
+    super::Case {
         l: 900.0,
         h: 2500.0,
         bonded: true,
         propped: false,
         dpc: true,
         path: 0,
-        b_t: 0.0,
-        loads: vec![(5.0, 0.0, 0.0, 0.5, 0.0)],
+        b_t,
+        loads: vec![load],
         above: (0.0, 0.0),
         flange: (1500.0, 1500.0, 140.0),
-    };
+    }
+}
+
+/// The edge that a case presses follows the resultant, not the wind alone: the flange's own weight may outweigh it.
+#[test]
+fn the_flange_may_hold_the_resultant_back() {
+    use perpend::checks::returns::actions;
+    let c = bonded(0.0, (5.0, 0.0, 0.0, 0.5, 0.0));
     let (m, ..) = worked(&building(&c), Change::NONE).expect("inside");
     let case = Case { combination: Combination::Helping, direction: Direction::ToFree };
     let a = actions::at(&mut Sheet::silent(), &m, &Annex::UK, case, At::Foot);
@@ -178,18 +183,7 @@ fn overturning_about_either_edge() {
 #[test]
 fn uplift_on_the_flange_is_taken_off() {
     use perpend::checks::returns::{actions, check};
-    let c = super::Case {
-        l: 900.0,
-        h: 2500.0,
-        bonded: true,
-        propped: false,
-        dpc: true,
-        path: 0,
-        b_t: 300.0,
-        loads: vec![(30.0, 5.0, 0.0, 0.5, 0.0)],
-        above: (0.0, 0.0),
-        flange: (1500.0, 1500.0, 140.0),
-    };
+    let c = bonded(300.0, (30.0, 5.0, 0.0, 0.5, 0.0));
     let mut b = building(&c);
     let (calm, ..) = worked(&b, Change::NONE).expect("inside");
     b.returns[0].junction.uplift = LineLoad::new(2.0);
