@@ -242,6 +242,7 @@ fn the_named_route_decides() {
     let text =
         crate::jobs::demos().into_iter().find(|(name, _)| name == "hold-points").expect("the demo job").1;
     b.wind = perpend::job::read("x.toml", &text).unwrap_or_else(|e| panic!("{e:?}")).wind;
+    b.wind.route = WindRoute::Stated;
     let stated = wind::pressures(&mut Sheet::silent(), &b, &Annex::UK).expect("wind");
     b.wind.route = WindRoute::Terrain;
     let terrain = wind::pressures(&mut Sheet::silent(), &b, &Annex::UK).expect("wind");

@@ -28,10 +28,12 @@ fn resistances(m: &Model, direction: Direction) -> (f64, f64) {
 proptest! {
     #![proptest_config(ProptestConfig::with_cases(64))]
 
-    /// More wind never lowers the use of any check: the worst of both directions.
+    /// More wind never lowers the use of any check: the worst of both directions. Without roof uplift, which grows with
+    /// the wind and may take a load off the edge that it leans on.
     #[test]
     fn more_wind_never_lowers_a_use(c in any_case(), from in 0.0..2.0_f64, more in 0.0..1.0_f64) {
-        let b = building(&c);
+        let mut b = building(&c);
+        b.returns[0].loads.iter_mut().for_each(|load| load.uplift = Force::ZERO);
         let wind = |wind| worked(&b, Change { wind, ..Change::NONE });
         let (Some((_, _, less)), Some((_, _, more))) = (wind(from), wind(from + more)) else { return Ok(()) };
         let falls = worst(&more).iter().any(|&(check, ratio)| check == Check::Overturning && ratio > 1.0);

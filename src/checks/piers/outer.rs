@@ -48,7 +48,11 @@ fn neighbour(b: &Building, place: Place, thickness: f64, upper: bool) -> bool {
         (Axis::Y, false) => (Side::Left, Along::Y),
         (Axis::Y, true) => (Side::Right, Along::Y),
     };
+    // Asked first: where the plan ends takes every wall of it.
+    if !b.neighbours.contains(&side) {
+        return false;
+    }
     let (low, high) = levels::front(b, across);
     let face = if upper { high.base() - place.at } else { place.at - low.base() };
-    b.neighbours.contains(&side) && face - thickness / 2.0 <= LINE
+    face - thickness / 2.0 <= LINE
 }

@@ -53,13 +53,14 @@ pub fn stresses(s: &mut Sheet, m: &Model, a: &Actions) -> Stressed {
     let (l, t, N_Ed, M_Ed) = (m.l, m.t, a.N_Ed, a.M_Ed);
     if N_Ed <= Force::ZERO {
         decide!(s, "6.2", "", "nothing presses the section", N_Ed > 0.0 * KN);
+        given!(s, "area that is pressed", "nothing presses the section", A_c = Area::ZERO);
         return Stressed {
             l_c: Length::ZERO,
             N_web: Force::ZERO,
             N_flange: Force::ZERO,
             sigma_toe: None,
             a: Length::ZERO,
-            A_c: Area::ZERO,
+            A_c,
         };
     }
     calc!(s, "statics", "eccentricity in plane", e = M_Ed / N_Ed);
