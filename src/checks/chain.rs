@@ -11,7 +11,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let links = links::links(job.building);
     let drawings = job.drawings(|| [sketch::chain(&view(job, &links))]);
     named(&mut s, &drawings);
-    let strong =
+    let strong: Vec<usize> =
         links.iter().enumerate().filter(|(_, l)| l.proof == Proof::Assumed).map(|(i, _)| i).collect();
     s.table(|| Table {
         caption: "Each link of the load path, from the wind face to the ground, and how it is known"
@@ -31,7 +31,9 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             .collect(),
         strong,
     });
-    s.note("A link that is assumed makes the whole result conditional: each stands among the hold points.");
+    if links.iter().any(|l| l.proof == Proof::Assumed) {
+        s.note("A link that is assumed makes the whole result conditional: each stands among the hold points.");
+    }
     s.heading(1, "Disproportionate collapse");
     s.note(class(job.building));
     let section = Section::plain("chain", "The chain from wind to ground", s);
@@ -86,12 +88,43 @@ fn view(job: &Job<'_>, all: &[Link]) -> Chain {
 
 fn branch(job: &Job<'_>, l: &Link) -> Branch {
     let (known, beside) = match l.proof {
-        Proof::Calculated => (Known::Calculated, sheets(job.building, l)),
-        Proof::Rule => (Known::Rule, String::new()),
-        Proof::Seen => (Known::Seen, String::new()),
+        Proof::Calculated => calculated(job, l),
+        Proof::Rule => (Known::Rule, unshown(job, l)),
+        Proof::Seen if butted(job.building, l) => (Known::Seen, "butted, not counted".to_owned()),
+        Proof::Seen => (Known::Seen, unshown(job, l)),
         Proof::Assumed => (Known::Assumed, hold(job, l)),
     };
     Branch { of: l.of.join(", "), known, beside }
+}
+
+/// A link on sheets of this pack holds where what stands on them does.
+fn calculated(job: &Job<'_>, l: &Link) -> (Known, String) {
+    let about = marks(job.building, l);
+    let failing: Vec<&str> = about.into_iter().filter(|m| job.failing.iter().any(|f| f == m)).collect();
+    if failing.is_empty() {
+        return (Known::Calculated, join(&sheets(job.building, l), &unshown(job, l)));
+    }
+    (Known::Fails, format!("see {}", failing.join(", ")))
+}
+
+fn join(a: &str, b: &str) -> String {
+    if b.is_empty() { a.to_owned() } else { format!("{a}; {b}") }
+}
+
+/// The hold points of walls that the sheet of the whole building does not show to carry what the removal adds.
+fn unshown(job: &Job<'_>, l: &Link) -> String {
+    if l.link != "bracing wall" {
+        return String::new();
+    }
+    let holds: Vec<String> =
+        super::whole::holds(job).into_iter().filter_map(|(_, text)| job.hold_of(&text)).collect();
+    if holds.is_empty() { String::new() } else { format!("not by calculation: hold point {}", holds.join(", ")) }
+}
+
+/// Whether a link speaks of junctions that were seen not to be bonded.
+fn butted(b: &Building, l: &Link) -> bool {
+    let mut about = b.returns.iter().filter(|r| l.of.is_empty() || l.of.contains(&r.mark)).peekable();
+    l.link == "junction" && about.peek().is_some() && about.all(|r| !r.junction.bonded)
 }
 
 /// The hold point that an assumed link became.
@@ -103,22 +136,30 @@ fn hold(job: &Job<'_>, l: &Link) -> String {
 
 /// Where a link is calculated: the sheets of this pack about it, or what its words name.
 fn sheets(b: &Building, l: &Link) -> String {
-    let named = |marks: Vec<&str>| {
-        let of: Vec<&str> =
-            marks.into_iter().filter(|m| l.of.is_empty() || l.of.iter().any(|o| o == m)).collect();
-        match of.as_slice() {
-            [] => "see the table".to_owned(),
-            [one] => format!("sheet {one}"),
-            several => format!("sheets {}", several.join(", ")),
-        }
-    };
-    let returns = || b.returns.iter().map(|r| r.mark.as_str()).collect();
-    match l.link.as_str() {
-        "wind face" if !b.panels.is_empty() => "wind sheet".to_owned(),
-        "panel" => named(b.panels.iter().map(|p| p.mark.as_str()).collect()),
-        "floor edge" => named(b.floor_edges.iter().map(|e| e.mark.as_str()).collect()),
-        "diaphragm" if b.diaphragm.is_some() => "sheet Floor".to_owned(),
-        "bracing wall" | "junction" | "dpc" => named(returns()),
-        _ => "see the table".to_owned(),
+    match (l.link.as_str(), marks(b, l).as_slice()) {
+        ("wind face", _) if !b.panels.is_empty() => "wind sheet".to_owned(),
+        ("bracing wall", _) if !b.floors.is_empty() => "sheet of the whole building".to_owned(),
+        // Where the words name another calculation, or say that no force comes here.
+        ("bracing wall" | "junction" | "dpc", _) if !l.words.trim().is_empty() => "see the table".to_owned(),
+        (_, []) => "see the table".to_owned(),
+        (_, [one]) => format!("sheet {one}"),
+        (_, several) => format!("sheets {}", several.join(", ")),
     }
+}
+
+/// Marks of the sheets of this pack that a link is about.
+fn marks<'a>(b: &'a Building, l: &Link) -> Vec<&'a str> {
+    let all: Vec<&str> = match l.link.as_str() {
+        "panel" => b.panels.iter().map(|p| p.mark.as_str()).collect(),
+        "floor edge" => b.floor_edges.iter().map(|e| e.mark.as_str()).collect(),
+        "diaphragm" => b.diaphragm.iter().map(|_| "Floor").collect(),
+        "footing" => b.footings().map(|(_, f)| f.mark.as_str()).collect(),
+        "bracing wall" | "junction" | "dpc" => b.returns.iter().map(|r| r.mark.as_str()).collect(),
+        _ => Vec::new(),
+    };
+    let about = |m: &str| {
+        let over = b.footings().find(|(_, f)| f.mark == m).map(|(r, _)| r.mark.as_str());
+        l.of.is_empty() || l.of.iter().any(|o| o == m || over == Some(o)) || m == "Floor"
+    };
+    all.into_iter().filter(|m| about(m)).collect()
 }

@@ -9,7 +9,7 @@ use crate::quantity::{Length, Num};
 use crate::standards::annex::Annex;
 use crate::standards::tables::approved_document_a as ada;
 use crate::standards::tables::gamma_m;
-use crate::trace::Sheet;
+use crate::trace::{Sheet, Unshown};
 use crate::{calc, decide, given, lookup, verify};
 
 /// As many edges as stand side by side.
@@ -48,6 +48,16 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     s.of.clear();
     for (e, _) in &edges {
         by_rule(&mut s, e);
+        if e.known == StrapsKnown::None {
+            s.unshown(Unshown {
+                id: format!("none-{}", e.mark),
+                clause: "statics".to_owned(),
+                words: format!("straps, {}", e.mark),
+                finding: "None is known to hold the wall to the floor.".to_owned(),
+                ratio: None,
+                hold: job.hold_of(&links::edge_text(b, e)),
+            });
+        }
     }
     s.note(
         "What a strap takes hold of in the floor, and how it is fixed there, is by rule and by seeing; it is not \

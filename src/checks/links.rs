@@ -1,7 +1,9 @@
 //! The links of the load path and how each is known: as given, or as the checks of this pack show it.
 
 use super::diaphragm;
-use crate::building::{Building, CollapseClass, DiaphragmProof, FloorEdge, Head, Link, Proof, StrapsKnown};
+use crate::building::{
+    Building, CollapseClass, DiaphragmProof, FloorEdge, Footing, Head, Link, Path, Proof, Return, Stands, StrapsKnown,
+};
 
 /// The links of the load path, in order, each with what is to be seen where nothing is said of it.
 pub const LINKS: [(&str, &str); 8] = [
@@ -50,6 +52,12 @@ fn held_elsewhere(b: &Building) -> Vec<String> {
     out
 }
 
+/// Whether walls that are no returns of this pack share the wind after the removal.
+fn shares_elsewhere(b: &Building) -> bool {
+    let walls = b.stability.iter().flat_map(|st| &st.walls);
+    walls.filter(|w| w.stands != Stands::Before).any(|w| !b.returns.iter().any(|r| r.mark == w.mark))
+}
+
 /// The footings that a link is about: those that this pack calculates, and the rest, which is assumed
 /// where the link claims a calculation.
 fn under(b: &Building, link: &Link) -> Vec<Link> {
@@ -63,9 +71,19 @@ fn under(b: &Building, link: &Link) -> Vec<Link> {
     };
     let (here, rest): (Vec<String>, Vec<String>) =
         about.into_iter().partition(|m| b.footings().any(|(r, f)| r.mark == *m || f.mark == *m));
+    // Calculated for a footing that nobody saw: what the figures rest on is assumed.
+    let unseen = |m: &String| {
+        b.footings().find(|(r, f)| f.proof == Proof::Assumed && (r.mark == *m || f.mark == *m))
+    };
     let mut out = Vec::new();
-    if !here.is_empty() {
-        out.push(Link { of: here, ..link.clone() });
+    let seen: Vec<String> = here.iter().filter(|m| unseen(m).is_none()).cloned().collect();
+    if !seen.is_empty() {
+        out.push(Link { of: seen, ..link.clone() });
+    }
+    for m in here {
+        if let Some((r, f)) = unseen(&m) {
+            out.push(Link { proof: Proof::Assumed, words: dig(r, f), of: vec![m], ..link.clone() });
+        }
     }
     if !rest.is_empty() || out.is_empty() {
         out.push(unnamed(link, rest));
@@ -73,15 +91,53 @@ fn under(b: &Building, link: &Link) -> Vec<Link> {
     out
 }
 
+/// What is to be closed where nobody saw a footing.
+pub fn dig(r: &Return, f: &Footing) -> String {
+    format!(
+        "Before the wall comes down: dig down to the footing under {}, measure its width, its thickness and how far it \
+         runs, and see the ground. {}.",
+        r.mark,
+        f.words.trim_end_matches('.')
+    )
+}
+
+/// Whether wind in its plane reaches the foot of a return: where its head is held and the wall spans up and
+/// down the floor takes all of it.
+pub fn sheared(r: &Return) -> bool {
+    !matches!(r.head, Head::Propped(_)) || r.path != Path::UpAndDown
+}
+
+/// The joint at the foot, where it is said to be calculated: on the sheets of returns that wind reaches there.
+fn joint(b: &Building, link: &Link) -> Vec<Link> {
+    let about = |r: &&Return| link.of.is_empty() || link.of.contains(&r.mark);
+    let (here, rest): (Vec<&Return>, Vec<&Return>) = b.returns.iter().filter(about).partition(|r| sheared(r));
+    let of = |all: Vec<&Return>| all.into_iter().map(|r| r.mark.clone()).collect::<Vec<_>>();
+    let mut out = Vec::new();
+    if !here.is_empty() {
+        out.push(Link { of: of(here), ..link.clone() });
+    }
+    if !rest.is_empty() {
+        let words = "Statics: no wind in their plane reaches the foot, since the floor takes it at the head. The joint \
+                     under the walls that hold the head belongs to the link bracing wall.";
+        out.push(Link { of: of(rest), words: words.to_owned(), ..link.clone() });
+    }
+    if out.is_empty() { vec![unnamed(link, link.of.clone())] } else { out }
+}
+
 /// A link as it is given, unless it claims a calculation that nobody can name: then it is assumed.
 fn proven(b: &Building, link: &Link) -> Vec<Link> {
     if link.link == "footing" {
         return under(b, link);
     }
+    if link.link == "dpc" && link.proof == Proof::Calculated && link.words.trim().is_empty() {
+        return joint(b, link);
+    }
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
-        "bracing wall" => !b.floors.is_empty() || !b.returns.is_empty() && held_elsewhere(b).is_empty(),
-        "junction" | "dpc" => !b.returns.is_empty(),
+        "bracing wall" => {
+            !b.floors.is_empty() || !b.returns.is_empty() && held_elsewhere(b).is_empty() && !shares_elsewhere(b)
+        }
+        "junction" => !b.returns.is_empty(),
         // Floors say below how far they are calculated.
         _ => false,
     };
@@ -161,7 +217,7 @@ pub fn concerned(b: &Building, e: &FloorEdge) -> Vec<String> {
 }
 
 /// What is to be closed at a floor edge whose straps were not seen.
-fn edge_text(b: &Building, e: &FloorEdge) -> String {
+pub fn edge_text(b: &Building, e: &FloorEdge) -> String {
     let panels = concerned(b, e)[1..].join(", ");
     let told = |words: &str| {
         let words = words.trim_end_matches('.');

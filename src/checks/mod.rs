@@ -78,6 +78,8 @@ pub struct Job<'a> {
     pub piers: Vec<piers::Used>,
     /// Hold points, given and found.
     pub holds: Vec<Hold>,
+    /// Marks of what earlier sheets did not find adequate.
+    pub failing: Vec<String>,
     /// Whether drawings are wanted: they take longer than all checks together.
     pub drawn: bool,
 }
@@ -102,6 +104,7 @@ impl<'a> Job<'a> {
             whole: Vec::new(),
             piers: Vec::new(),
             holds,
+            failing: Vec::new(),
             drawn: true,
         };
         job.whole = whole::of(&job);
@@ -114,6 +117,11 @@ impl<'a> Job<'a> {
         outcome::add(&mut job.holds, found);
         outcome::add(&mut job.holds, found::holds(building));
         job
+    }
+
+    /// Mark of the hold point with this text.
+    pub fn hold_of(&self, text: &str) -> Option<String> {
+        self.holds.iter().find(|h| h.text == text).map(|h| h.mark.clone())
     }
 
     /// Drawings, where they are wanted.
@@ -164,6 +172,8 @@ pub struct Results {
     pub holds: Vec<Hold>,
     /// The outcome of the whole job.
     pub outcome: Outcome,
+    /// What is no verdict and belongs on the front sheets all the same.
+    pub remarks: Vec<String>,
 }
 
 impl Results {
@@ -183,10 +193,39 @@ pub fn results(building: &Building) -> Results {
     of(Job { drawn: false, ..Job::new(building) })
 }
 
-fn of(job: Job<'_>) -> Results {
-    let sections: Vec<Section> = LIST.iter().flat_map(|check| check(&job)).collect();
+fn of(mut job: Job<'_>) -> Results {
+    let mut sections: Vec<Section> = Vec::new();
+    for check in LIST {
+        let found = check(&job);
+        let fails = |s: &&Section| !outcome::holds_all(&s.sheet) || !s.sheet.outside.is_empty();
+        // A sheet of several things names them with commas between.
+        job.failing.extend(found.iter().filter(fails).flat_map(|s| s.mark.split(", ")).map(str::to_owned));
+        sections.extend(found);
+    }
     let outcome = outcome::of_job(&sections, &job.holds);
-    Results { sections, holds: job.holds, outcome }
+    let remarks = remarks(&job);
+    Results { sections, holds: job.holds, outcome, remarks }
+}
+
+/// The house as it stands, where calculation does not show it, before and after alike.
+fn remarks(job: &Job<'_>) -> Vec<String> {
+    let told = |walls: Vec<String>, what: &str, sheet: &str| {
+        let some = match walls.len() {
+            0 => return None,
+            1 => "1 length of wall".to_owned(),
+            n => format!("{n} lengths of wall"),
+        };
+        Some(format!(
+            "As the house stands: {some} used above 1 {what}, on the sheet \"{sheet}\"; the removal adds nothing to them"
+        ))
+    };
+    [
+        told(whole::as_it_stands(job), "against wind, each taken alone", "The whole building against wind"),
+        told(piers::as_it_stands(job), "by vertical load", "Lengths of wall between openings"),
+    ]
+    .into_iter()
+    .flatten()
+    .collect()
 }
 
 #[cfg(test)]

@@ -99,12 +99,7 @@ pub fn holds(b: &Building) -> Vec<Hold> {
     let buried =
         b.footings().filter(|(r, f)| f.proof == Proof::Assumed && !told("footing", [&r.mark, &f.mark]));
     let footings = buried.map(|(r, f)| {
-        let text = format!(
-            "Before the wall comes down: dig down to the footing under {}, measure its width, its thickness and how \
-             far it runs, and see the ground. {}",
-            r.mark, f.words
-        );
-        (text, vec![r.mark.clone(), f.mark.clone()], None)
+        (links::dig(r, f), vec![r.mark.clone(), f.mark.clone()], None)
     });
     let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None));
     let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None));
@@ -133,16 +128,25 @@ pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>) {
 /// The outcome of one sheet; hold points that concern `mark` or the whole job make it conditional. A sheet of
 /// several things has their marks with commas between.
 pub fn of_sheet(sheet: &Sheet, mark: &str, holds: &[Hold]) -> Outcome {
+    judge(holds_all(sheet), sheet.outside.is_empty(), open(mark, holds).len())
+}
+
+/// Marks of the open hold points that concern `mark` or the whole job.
+pub fn open<'a>(mark: &str, holds: &'a [Hold]) -> Vec<&'a str> {
     let concerns = |h: &Hold| h.of.is_empty() || h.of.iter().any(|m| mark.split(", ").any(|own| own == m));
-    let open = holds.iter().filter(|h| h.closed.is_none() && concerns(h)).count();
-    judge(sheet.verdicts.iter().all(|v| v.holds), sheet.outside.is_empty(), open)
+    holds.iter().filter(|h| h.closed.is_none() && concerns(h)).map(|h| h.mark.as_str()).collect()
 }
 
 /// The outcome of the job: what fails fails the job, what is outside leaves it outside.
 pub fn of_job(sections: &[Section], holds: &[Hold]) -> Outcome {
-    let hold = sections.iter().all(|s| s.sheet.verdicts.iter().all(|v| v.holds));
+    let hold = sections.iter().all(|s| holds_all(&s.sheet));
     let inside = sections.iter().all(|s| s.sheet.outside.is_empty());
     judge(hold, inside, holds.iter().filter(|h| h.closed.is_none()).count())
+}
+
+/// Whether nothing on a sheet fails.
+pub fn holds_all(sheet: &Sheet) -> bool {
+    sheet.verdicts.iter().all(|v| v.holds) && sheet.unshown.iter().all(|u| u.hold.is_some())
 }
 
 fn judge(hold: bool, inside: bool, open: usize) -> Outcome {

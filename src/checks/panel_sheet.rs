@@ -3,7 +3,9 @@
 use super::panels::{self, PanelModel};
 use super::{Job, Section, masonry, panel_views};
 use crate::building::{Building, Panel};
-use crate::trace::{Outside, Sheet};
+use crate::sketch::Wind;
+use crate::standards::masonry::Edge;
+use crate::trace::{Outside, Sheet, Unshown};
 
 /// One section a panel.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
@@ -28,11 +30,34 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             sheet.drawings(&[&name("before"), &name("after")]);
             panels::check(&mut sheet, &m, &job.annex);
             sheet.drawings(&[&name("section")]);
-            drawings = job.drawings(|| panel_views::drawings(job.building, p, &m));
+            leaning(job, p, &mut sheet);
+            let off = p.wind.is_none() && job.wind.as_ref().is_ok_and(|w| w.off_panel(p));
+            let wind = if off { Wind::Away } else { Wind::Toward };
+            drawings = job.drawings(|| panel_views::drawings(job.building, p, &m, wind));
         }
         Err(outside) => sheet.leave(outside),
     }
     Section { id: p.mark.clone(), mark: p.mark.clone(), title: p.title.clone(), sheet, drawings }
+}
+
+/// A panel is held no better than the returns that its edges name.
+fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
+    let edges = [&p.after.top, &p.after.base, &p.after.left, &p.after.right];
+    let names = |reason: &str, mark: &str| {
+        reason.split(|c: char| !c.is_alphanumeric() && c != '-' && c != '_').any(|word| word == mark)
+    };
+    for r in job.building.returns.iter().filter(|r| job.failing.contains(&r.mark)) {
+        if edges.iter().any(|e| e.kind != Edge::Free && names(&e.reason, &r.mark)) {
+            s.unshown(Unshown {
+                id: format!("leans-{}", r.mark),
+                clause: "statics".to_owned(),
+                words: format!("support by {}", r.mark),
+                finding: format!("An edge of this panel is held by {}, which is not adequate on its own sheet.", r.mark),
+                ratio: None,
+                hold: None,
+            });
+        }
+    }
 }
 
 /// The model of a panel, strengths derived silently: they stand on the materials sheet.

@@ -17,7 +17,7 @@ const SECTION: Frame = Frame::new(96.0, 84.0);
 const FLOOR_DEPTH: f64 = 220.0;
 
 /// Elevation before and after, and the section.
-pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
+pub fn drawings(b: &Building, p: &Panel, m: &PanelModel, wind: Wind) -> Vec<Drawing> {
     let Some(build_up) = b.build_up(&p.build_up) else { return Vec::new() };
     let thickness = b.build_up(&b.removed.build_up).map_or(100.0, |u| u.loaded().1.thickness.base());
     let wall = |words: String, removed: bool| {
@@ -36,7 +36,7 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel) -> Vec<Drawing> {
     let [mut first, mut second] = panel_pair(&before, &after, ELEVATION);
     first.name = format!("{}-before", p.mark);
     second.name = format!("{}-after", p.mark);
-    let mut third = panel_section(&section(b, p, m, build_up), SECTION);
+    let mut third = panel_section(&section(b, p, m, build_up, wind), SECTION);
     third.name = format!("{}-section", p.mark);
     vec![first, second, third]
 }
@@ -75,7 +75,7 @@ fn elevation(
     }
 }
 
-fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> PanelSection {
+fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp, wind: Wind) -> PanelSection {
     let all = layers(b, build_up);
     let (k, _) = build_up.loaded();
     let loaded = if all.len() == 3 { 2 * k } else { 0 };
@@ -98,9 +98,11 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp) -> Panel
         }],
         dpc: Some(0.0),
         // Spacing of ties on a square grid, from their number per area.
-        ties: build_up.ties.map(|n| (1.0 / n.base()).sqrt()),
+        ties: build_up.ties.map(|n| {
+            ((1.0 / n.base()).sqrt(), format!("{} ties per m²", print::significant(n.base() * 1e6)))
+        }),
         wind: Some((
-            Wind::Toward,
+            wind,
             Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""),
         )),
         precompression: Some((

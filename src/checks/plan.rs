@@ -1,8 +1,9 @@
 //! The key plan before and after: walls, what comes out, and where every mark is.
 
 use super::{Job, Section, named, place, spans};
-use crate::building::{Along, At, Building, PlanWall, Return, stands_in};
-use crate::sketch::{self, Fate, Frame, KeyPlan, PlanMark, PlanWind, When, key_plans};
+use crate::building::{Along, At, Building, PlanOpening, PlanWall, Return, stands_in};
+use crate::quantity::Length;
+use crate::sketch::{self, Fate, Frame, Gap, KeyPlan, PlanMark, PlanWind, When, key_plans};
 use crate::trace::Sheet;
 
 /// Frame on the sheet of two plans side by side, and of one that stands alone, mm.
@@ -60,7 +61,7 @@ fn view(job: &Job<'_>, when: When) -> KeyPlan {
 /// the wall as it stands.
 fn walls(b: &Building, storey: &str, when: When) -> Vec<sketch::PlanWall> {
     let here = b.plan.iter().filter(|w| stands_in(b, w, storey));
-    let mut walls: Vec<sketch::PlanWall> = here.map(|w| wall(b, w)).collect();
+    let mut walls: Vec<sketch::PlanWall> = here.map(|w| wall(b, w, storey)).collect();
     for r in &b.returns {
         match walls.iter_mut().find(|w| w.name == r.mark) {
             Some(wall) if when == When::Before => wall.name.clear(),
@@ -80,6 +81,7 @@ pub(super) fn return_wall(b: &Building, r: &Return) -> Option<sketch::PlanWall> 
         to,
         thickness: thickness(b, &r.build_up),
         fate: Fate::Stays,
+        openings: Vec::new(),
     })
 }
 
@@ -97,13 +99,21 @@ fn thickness(b: &Building, build_up: &str) -> f64 {
     b.build_up(build_up).map_or(100.0, |u| u.thickness().base())
 }
 
-/// A plan wall as drawings see it.
-pub(super) fn wall(b: &Building, w: &PlanWall) -> sketch::PlanWall {
+/// A plan wall as drawings see it, with its openings in a storey.
+pub(super) fn wall(b: &Building, w: &PlanWall, storey: &str) -> sketch::PlanWall {
+    let gap = |o: &PlanOpening| Gap {
+        from: o.from.base(),
+        to: (o.from + o.width).base(),
+        window: o.sill > Length::ZERO,
+    };
+    let mut openings: Vec<Gap> = w.openings.iter().filter(|o| o.storey == storey).map(gap).collect();
+    openings.sort_by(|a, b| a.from.total_cmp(&b.from));
     sketch::PlanWall {
         name: w.mark.clone(),
         from: (w.from.0.base(), w.from.1.base()),
         to: (w.to.0.base(), w.to.1.base()),
         thickness: thickness(b, &w.build_up),
         fate: if w.removed { Fate::Removed } else { Fate::Stays },
+        openings,
     }
 }

@@ -7,7 +7,7 @@ use super::returns::in_plane;
 use super::returns::matrix::Matrix;
 use super::returns::model::{At, Model};
 use super::shapes::{layers, leaf_material};
-use crate::building::{BaseJoint, BuildUp, Building, Head, Return};
+use crate::building::{BaseJoint, BuildUp, Building, Head, Path, Proof, Return, ShareBy};
 use crate::quantity::{Dyn, Force, Length, print};
 use crate::sketch::{
     Action, Curve, Drawing, Flange, Frame, Layer, PlacedLoad, ReturnActions, ReturnElevation, ReturnSection,
@@ -28,13 +28,14 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
     let loaded = if build_up.loaded().0 == 0 { "outer-" } else { "inner-" };
     let drawn = |m: &Model| m.leaf.is_empty() || m.leaf == loaded;
     let Some((m, matrix)) = checked.models.iter().find(|(m, _)| drawn(m)) else { return Vec::new() };
-    let case = worst(matrix.as_ref(), Check::Overturning);
+    let case = drawn_case(m, matrix.as_ref(), annex);
     let mut out = vec![
         return_elevation(&elevation(b, r, m, build_up, case, annex), ELEVATION),
         return_section(&section(b, r, m, matrix.as_ref(), build_up, annex), SECTION),
         return_actions(&diagram(r, m, case, annex), ACTIONS),
     ];
     // The case of the force is too long for a label beside it.
+    out[0].caption = format!("{}; {}", out[0].caption, case.name());
     out[1].caption = format!("{}; {}", out[1].caption, worst(matrix.as_ref(), Check::Toe).name());
     out[2].caption.push_str("; moment of wind and tilt");
     if !m.sheared() && m.lateral.M_k.base() == 0.0 {
@@ -54,6 +55,17 @@ fn worst(matrix: Option<&Matrix>, check: Check) -> Case {
             x.worst(k).map(|i| x.cases[i])
         })
         .unwrap_or(Case::all()[0])
+}
+
+/// The case in which it would overturn first; where a held head leaves the foot without wind, that of the greatest
+/// force at the head.
+fn drawn_case(m: &Model, matrix: Option<&Matrix>, annex: &Annex) -> Case {
+    if m.sheared() {
+        return worst(matrix, Check::Overturning);
+    }
+    let at_head = |c: &Case| design(m, *c, annex).H_Ed.base();
+    let greater = |a: Case, b: Case| if at_head(&b) > at_head(&a) { b } else { a };
+    Case::all().into_iter().reduce(greater).unwrap_or(Case::all()[0])
 }
 
 fn show(symbol: &str, value: Dyn, words: &str) -> Action {
@@ -83,6 +95,10 @@ fn elevation(
         ),
     });
     let flat = |f: Force| f > Force::ZERO;
+    let through_floor = r.path == Path::UpAndDown;
+    // Where the storey shares by stiffness the front of this return does not come into it.
+    let by_stiffness =
+        through_floor && b.stability.as_ref().is_some_and(|st| st.share_by == ShareBy::Stiffness && st.walls.iter().any(|w| w.mark == r.mark));
     ReturnElevation {
         mark: r.mark.clone(),
         length: m.l.base(),
@@ -90,7 +106,11 @@ fn elevation(
         words: format!("{} {}", print::show("t", leaf.thickness.dynamic()), leaf_material(b, leaf).word()),
         wall: Side::Left,
         wall_layers: wall_layers(b, r),
-        junction: if r.junction.bonded { "bonded".to_owned() } else { "butted, not counted".to_owned() },
+        junction: match (r.junction.bonded, r.junction.proof) {
+            (true, Proof::Assumed) => "bonded, assumed".to_owned(),
+            (true, _) => "bonded".to_owned(),
+            (false, _) => "not bonded, not counted".to_owned(),
+        },
         prop: match &r.head {
             Head::Free => None,
             Head::Propped(walls) => Some(walls.join(", ")),
@@ -105,7 +125,8 @@ fn elevation(
         },
         head_moment: (design.M_h.base() > 0.0).then(|| show("M_h", design.M_h.dynamic(), "from above")),
         line_load: (design.w_Ed.base() > 0.0).then(|| show("w_Ed", design.w_Ed.dynamic(), "")),
-        tributary: Some(r.tributary_width.base()),
+        tributary: (!by_stiffness).then_some(r.tributary_width.base()),
+        through_floor,
         wind: wind(case),
     }
 }
@@ -168,9 +189,15 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     let whole = if free || a.flange.is_none() { st.l_c } else { st.l_c + t_f };
     let compressed = if whole > depth { depth } else { whole };
     let full = a.flange.is_none() && st.l_c >= l;
-    let heel = full.then(|| {
+    // With a flange the straight line of stress may reach nought beyond the section.
+    let beyond = a.flange.is_some() && whole > depth;
+    let heel = (full || beyond).then(|| {
         let e = l / 2.0 - st.a;
-        let at = a.N_Ed / (m.t * l) * (1.0 - (e * 6.0 / l).base());
+        let at = if beyond {
+            sigma * (1.0 - (depth / whole).base())
+        } else {
+            a.N_Ed / (m.t * l) * (1.0 - (e * 6.0 / l).base())
+        };
         ((at / sigma).base(), show("sigma", at.dynamic(), ""))
     });
     Some(Stress {

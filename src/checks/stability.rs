@@ -278,7 +278,7 @@ pub fn sections(job: &super::Job<'_>) -> Vec<super::Section> {
 fn drawn(b: &Building, st: &Stability, storey: &Storey) -> Option<[Drawing; 2]> {
     let here: Vec<&crate::building::PlanWall> =
         b.plan.iter().filter(|w| stands_in(b, w, &st.storey)).collect();
-    let mut walls: Vec<sketch::PlanWall> = here.iter().map(|w| plan::wall(b, w)).collect();
+    let mut walls: Vec<sketch::PlanWall> = here.iter().map(|w| plan::wall(b, w, &st.storey)).collect();
     // A return that is no line of the plan is drawn where its mark lies.
     let others = b.returns.iter().filter(|r| r.storey == st.storey && !here.iter().any(|w| w.mark == r.mark));
     walls.extend(others.filter_map(|r| plan::return_wall(b, r)));

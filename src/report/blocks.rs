@@ -2,7 +2,7 @@
 
 use serde_json::{Value as Json, json};
 
-use super::{anchor, bar, verdict_words};
+use super::{anchor, bar, unshown_words, verdict_words};
 use crate::checks::Section;
 use crate::quantity::print;
 use crate::trace::math::{self, Node};
@@ -36,9 +36,10 @@ fn block(s: &Section, entry: &Entry) -> Option<Json> {
             "kind": "found", "symbol": symbol(value), "result": result(value), "words": words, "clause": clause,
         }),
         Entry::Step(step) => self::step(step),
+        // The words are those of the way it went, so the relation stands as it was found to be.
         Entry::Decide { relation, words, clause } => json!({
-            "kind": "decide", "clause": clause, "words": words, "holds": relation.holds,
-            "condition": math::relation(relation).json(), "values": written(relation),
+            "kind": "decide", "clause": clause, "words": words, "holds": true,
+            "condition": math::relation_found(relation).json(), "values": math::relation_values(relation).json(),
         }),
         Entry::Require { relation, words, clause } => json!({
             "kind": "require", "clause": clause, "words": words, "holds": relation.holds,
@@ -47,6 +48,11 @@ fn block(s: &Section, entry: &Entry) -> Option<Json> {
         Entry::Verify(v) => verdict(s, v),
         Entry::Outside(o) => json!({
             "kind": "outside", "id": o.id, "clause": o.clause, "words": o.words, "anchor": anchor(s, &o.id),
+        }),
+        Entry::Unshown(u) => json!({
+            "kind": "unshown", "id": u.id, "clause": u.clause, "words": u.words, "finding": u.finding,
+            "ratio": u.ratio.map_or_else(String::new, print::ratio), "bar": bar(u.ratio.unwrap_or(0.0)),
+            "verdict": unshown_words(u), "anchor": anchor(s, &u.id),
         }),
         Entry::Rule { id, words, clause, finding, met } => json!({
             "kind": "rule", "id": id, "clause": clause, "words": words, "finding": finding, "met": met,
@@ -74,7 +80,7 @@ fn row(s: &Section, row: &Row) -> Option<Json> {
         Some(Entry::Verify(v)) => verdict(s, v),
         Some(e) => match (e.value(), e.relation()) {
             (Some(v), _) => result(v),
-            (_, Some(r)) => json!({"value": if r.holds { "yes" } else { "no" }, "unit": ""}),
+            (_, Some(r)) => json!({"value": row.way(e, r), "unit": ""}),
             _ => Json::Null,
         },
         None => Json::Null,

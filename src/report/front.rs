@@ -2,7 +2,8 @@
 
 use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
 use crate::checks::Results;
-use crate::checks::outcome::Outcome;
+use crate::checks::links::sheared;
+use crate::checks::outcome::{Outcome, holds_all};
 use crate::pack::data::{Assumption, Summary};
 use crate::sketch::text::capital;
 use crate::standards::{en1991_1_4, en1992, en1996};
@@ -12,7 +13,7 @@ pub fn sentence(results: &Results) -> String {
     let failing: Vec<&str> = results
         .sections
         .iter()
-        .filter(|s| s.sheet.verdicts.iter().any(|v| !v.holds))
+        .filter(|s| !holds_all(&s.sheet))
         .map(|s| if s.mark.is_empty() { s.title.as_str() } else { s.mark.as_str() })
         .collect();
     let outside: Vec<&str> = results
@@ -23,19 +24,31 @@ pub fn sentence(results: &Results) -> String {
         .collect();
     match results.outcome {
         Outcome::NotAdequate => format!(
-            "What is to stay is not enough as it stands: {} does not pass every check. The wall may not come out on \
+            "What is to stay is not enough as it stands: {} {} not pass every check. The wall may not come out on \
              the strength of this pack.",
-            list(&failing)
+            list(&failing),
+            does(&failing)
         ),
         Outcome::Outside => format!(
-            "No check fails, but {} leaves the range of a clause: this pack does not decide it, and the wall may not \
+            "No check fails, but {} {} the range of a clause: this pack does not decide it, and the wall may not \
              come out on its strength.",
-            list(&outside)
+            list(&outside),
+            if outside.len() == 1 { "leaves" } else { "leave" }
         ),
         Outcome::Conditional(_) => {
-            "Every check passes. The wall may come out only when each open hold point below \
-                                    is closed and signed."
-                .to_owned()
+            let waiting = unshown(results);
+            let passes = if waiting.is_empty() {
+                "Every check passes.".to_owned()
+            } else {
+                format!(
+                    "No verdict fails, but this calculation does not show all that it needs to: {} of the results below \
+                     {} on {}.",
+                    waiting.len(),
+                    if waiting.len() == 1 { "rests" } else { "rest" },
+                    list(&distinct(&waiting))
+                )
+            };
+            format!("{passes} The wall may come out only when each open hold point below is closed and signed.")
         }
         Outcome::Adequate => {
             "Every check passes, and every link of the load path is calculated, held by a named rule, \
@@ -43,6 +56,26 @@ pub fn sentence(results: &Results) -> String {
                 .to_owned()
         }
     }
+}
+
+/// The hold points on which results without a verdict rest, one for each.
+fn unshown(results: &Results) -> Vec<&str> {
+    let all = results.sections.iter().flat_map(|s| &s.sheet.unshown);
+    all.filter_map(|u| u.hold.as_deref()).collect()
+}
+
+fn distinct<'a>(items: &[&'a str]) -> Vec<&'a str> {
+    let mut out: Vec<&str> = Vec::new();
+    for item in items {
+        if !out.contains(item) {
+            out.push(item);
+        }
+    }
+    out
+}
+
+const fn does(items: &[&str]) -> &'static str {
+    if items.len() == 1 { "does" } else { "do" }
 }
 
 /// `a, b and c`.
@@ -55,12 +88,12 @@ pub fn list(items: &[&str]) -> String {
 }
 
 /// The design summary.
-pub fn summary(b: &Building, _results: &Results) -> Vec<Summary> {
+pub fn summary(b: &Building, results: &Results) -> Vec<Summary> {
     vec![
         entry("The job", job(b)),
         entry("Codes and edition", codes(b)),
         entry("Basis", basis(b)),
-        entry("Load path and stability", stability(b)),
+        entry("Load path and stability", [stability(b), results.remarks.clone()].concat()),
         entry("Who is responsible for what", responsible(b)),
     ]
 }
@@ -220,7 +253,7 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
         }
     }
     for r in &b.returns {
-        if r.base == crate::building::BaseJoint::Dpc {
+        if r.base == crate::building::BaseJoint::Dpc && sheared(r) {
             let source =
                 if r.mu.reason.is_empty() { "common practice, no published source" } else { &r.mu.reason };
             all.push((
@@ -259,7 +292,7 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
 /// The cautions, written for this job.
 pub fn cautions(b: &Building) -> Vec<String> {
     let place = b.identity.address.first().map_or("the address named", String::as_str);
-    let returns: Vec<&str> = b.returns.iter().map(|r| r.mark.as_str()).collect();
+    let bonded: Vec<&str> = b.returns.iter().filter(|r| r.junction.bonded).map(|r| r.mark.as_str()).collect();
     let seen = match &b.identity.visited {
         Some(date) => format!("What was not seen on {} is not known.", crate::job::date_in_words(date)),
         None => "The building was not visited. Everything about it is taken from others.".to_owned(),
@@ -271,13 +304,15 @@ pub fn cautions(b: &Building) -> Vec<String> {
          for the unfactored loads of this pack, and stays until the permanent work carries."
             .to_owned(),
     ];
-    if !returns.is_empty() {
-        out.push(format!(
-            "Stop and call the engineer if the junction of {} is found butted where it is counted as bonded, if the \
-             mortar is soft, if a leaf is chased or cracked, or if a size differs from the sketch.",
-            list(&returns)
-        ));
-    }
+    let butted = if bonded.is_empty() {
+        String::new()
+    } else {
+        format!("the junction of {} is found butted, since it is counted as bonded, if ", list(&bonded))
+    };
+    out.push(format!(
+        "Stop and call the engineer if {butted}the mortar is soft, if a leaf is chased or cracked, or if a size differs \
+         from the sketch."
+    ));
     out.push(seen);
     let bearings: Vec<&str> = b.bearings.iter().map(|x| x.mark.as_str()).collect();
     let beam = if bearings.is_empty() {
@@ -288,14 +323,14 @@ pub fn cautions(b: &Building) -> Vec<String> {
             list(&bearings)
         )
     };
-    // Every return's footing, or none is promised; the lengths of wall below are on a sheet where the plan has floors.
-    let footed = !returns.is_empty() && b.footings().count() == returns.len();
-    let ground = match (footed, b.floors.is_empty()) {
-        (true, true) => "the wall below, settlement of the ground",
-        (true, false) => "footings of walls that are no returns, settlement of the ground",
-        (false, true) => "the wall and footing below",
-        (false, false) => "the footing below",
+    // The lengths of wall below are on a sheet where the plan has floors.
+    let footed: Vec<&str> = b.footings().map(|(_, f)| f.mark.as_str()).collect();
+    let below = if footed.is_empty() {
+        "the footing below".to_owned()
+    } else {
+        format!("footings other than {}, settlement of the ground", list(&footed))
     };
+    let ground = if b.floors.is_empty() { format!("the wall below, {below}") } else { below };
     out.push(format!(
         "Not covered: {beam}, {ground}, movement and fire. They need calculations of their own."
     ));

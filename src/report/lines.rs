@@ -37,7 +37,10 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
         for r in rows {
             let check = if s.mark.contains(", ") { format!("{}, {}", r.check, r.mark) } else { r.check };
             let stress = r.verdict != "adequate";
-            let text = if r.ratio.is_empty() {
+            let text = if r.demand.is_empty() {
+                let ratio = if r.ratio.is_empty() { String::new() } else { format!("{:>36}  ", r.ratio) };
+                format!("  {:<wide$} {ratio}{}", check, r.verdict)
+            } else if r.ratio.is_empty() {
                 format!("  {:<wide$} {}", check, r.verdict)
             } else {
                 let (demand, resistance) = (r.demand, r.resistance);

@@ -12,7 +12,7 @@ pub fn of_job(file: &str, b: &Building, results: &Results) -> Json {
     let sections: Vec<Json> = results
         .sections
         .iter()
-        .filter(|s| !s.mark.is_empty() || !s.sheet.verdicts.is_empty() || !s.sheet.outside.is_empty())
+        .filter(|s| !s.mark.is_empty() || s.sheet.judges())
         .map(|s| {
             let o = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
             let checks: Vec<Json> = s
@@ -35,9 +35,15 @@ pub fn of_job(file: &str, b: &Building, results: &Results) -> Json {
                 .iter()
                 .map(|o| json!({"id": o.id, "clause": o.clause, "words": o.words}))
                 .collect();
+            let unshown: Vec<Json> = s
+                .sheet
+                .unshown
+                .iter()
+                .map(|u| json!({"id": u.id, "clause": u.clause, "words": u.words, "finding": u.finding, "ratio": u.ratio.filter(|r| r.is_finite()), "hold_point": u.hold}))
+                .collect();
             json!({
                 "id": s.id, "title": s.title, "outcome": o.kind(), "words": o.words(),
-                "checks": checks, "outside": outside,
+                "checks": checks, "outside": outside, "not_shown": unshown,
             })
         })
         .collect();

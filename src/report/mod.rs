@@ -17,7 +17,7 @@ use crate::checks::{Results, Section};
 use crate::job::date_in_words;
 use crate::pack::data::{self, OutcomeKind};
 use crate::quantity::print;
-use crate::trace::{Value, Verdict};
+use crate::trace::{Unshown, Value, Verdict};
 
 /// Name and version, as printed.
 pub const PROGRAM: (&str, &str) = ("Perpend", env!("CARGO_PKG_VERSION"));
@@ -135,16 +135,35 @@ fn kind(outcome: Outcome) -> OutcomeKind {
 fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
     let judged = !s.mark.is_empty();
     let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
-    let plain_failure = !judged && (!s.sheet.verdicts.is_empty() || !s.sheet.outside.is_empty());
+    let plain_failure = !judged && s.sheet.judges();
     data::Section {
         id: s.id.clone(),
         title: s.title.clone(),
         mark: s.mark.clone(),
-        outcome: (judged || plain_failure)
-            .then(|| data::SectionOutcome { kind: kind(outcome), words: outcome.words() }),
+        outcome: (judged || plain_failure).then(|| data::SectionOutcome {
+            kind: kind(outcome),
+            words: if s.sheet.judges() { words(s, outcome, results) } else { UNJUDGED.to_owned() },
+        }),
         blocks: blocks::of_section(s),
         // Returns and panels open a sheet; what belongs to them follows where there is room.
         new_page: b.returns.iter().any(|r| r.mark == s.mark) || b.panels.iter().any(|p| p.mark == s.mark),
+    }
+}
+
+/// What stands over a sheet that has a mark and no verdict.
+const UNJUDGED: &str = "by rule alone, no verdict";
+
+/// More open hold points than these are counted, not named.
+const NAMED: usize = 4;
+
+/// The outcome of a sheet in words, with the hold points that it waits for by their marks.
+fn words(s: &Section, outcome: Outcome, results: &Results) -> String {
+    let open = outcome::open(&s.mark, &results.holds);
+    match outcome {
+        Outcome::Conditional(n) if n <= NAMED => {
+            format!("adequate once {} {} closed", front::list(&open), if n == 1 { "is" } else { "are" })
+        }
+        _ => outcome.words(),
     }
 }
 
@@ -182,7 +201,22 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
         verdict: "outside the method".to_owned(),
         anchor: anchor(s, &o.id),
     });
-    s.sheet.verdicts.iter().map(verdict).chain(outside).collect()
+    let unshown = s.sheet.unshown.iter().map(|u| data::Scheduled {
+        mark: own(&u.words).0,
+        check: own(&u.words).1,
+        demand: String::new(),
+        resistance: String::new(),
+        ratio: u.ratio.map_or_else(String::new, print::ratio),
+        bar: bar(u.ratio.unwrap_or(0.0)),
+        verdict: unshown_words(u),
+        anchor: anchor(s, &u.id),
+    });
+    s.sheet.verdicts.iter().map(verdict).chain(outside).chain(unshown).collect()
+}
+
+/// What stands in place of a verdict.
+pub fn unshown_words(u: &Unshown) -> String {
+    u.hold.as_ref().map_or_else(|| verdict_words(false).to_owned(), |h| format!("hold point {h}"))
 }
 
 /// `adequate` or `not adequate`.

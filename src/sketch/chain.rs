@@ -47,10 +47,12 @@ pub enum Known {
     Seen,
     /// Not known: heavy dashes, and a break in the link.
     Assumed,
+    /// Calculated, and it does not hold: as broken.
+    Fails,
 }
 
 impl Known {
-    const ALL: [Self; 4] = [Self::Calculated, Self::Rule, Self::Seen, Self::Assumed];
+    const ALL: [Self; 5] = [Self::Calculated, Self::Rule, Self::Seen, Self::Assumed, Self::Fails];
 
     /// In words.
     pub const fn words(self) -> &'static str {
@@ -59,6 +61,7 @@ impl Known {
             Self::Rule => "by rule",
             Self::Seen => "seen",
             Self::Assumed => "assumed",
+            Self::Fails => "not adequate",
         }
     }
 }
@@ -106,7 +109,7 @@ pub fn chain(view: &Chain) -> Drawing {
         y += height;
     }
     close(&mut board, &above, centre, y);
-    key(&mut board, y + ROW + 7.0);
+    key(&mut board, view, y + ROW + 7.0);
     board.finish(Words {
         name: "chain".to_owned(),
         caption: "The chain from the wind face to the ground".to_owned(),
@@ -250,7 +253,7 @@ fn limb(board: &mut Board, known: Known, from: Point, to: Point) {
                 board.line(Pen::Beyond, from + side * way, to + side * way);
             }
         }
-        Known::Assumed => {
+        Known::Assumed | Known::Fails => {
             // Broken: two strokes across a gap.
             let (a, b) = (from.lerp(to, 0.36), from.lerp(to, 0.64));
             board.line(Pen::Open, from, a);
@@ -284,7 +287,7 @@ fn frame(board: &mut Board, known: Known, area: Rect) {
             board.rect(Pen::Beyond, area);
             board.rect(Pen::Beyond, area.inset(-0.8));
         }
-        Known::Assumed => board.rect(Pen::Open, area),
+        Known::Assumed | Known::Fails => board.rect(Pen::Open, area),
     }
 }
 
@@ -305,12 +308,14 @@ fn close(board: &mut Board, above: &[(f64, String)], centre: f64, y: f64) {
     board.note(Note::new(Role::Note, foot, Text::plain("ground")).spot(Spot::new(beside, 1.0, 0.0)));
 }
 
-/// What the lines stand for.
-fn key(board: &mut Board, y: f64) {
-    let step = (NAMES + NODES) / 4.0;
-    for (n, known) in Known::ALL.into_iter().enumerate() {
+/// What the lines stand for; what fails says so in its node.
+fn key(board: &mut Board, view: &Chain, y: f64) {
+    let fails = view.links.iter().flat_map(|l| &l.branches).any(|b| b.known == Known::Fails);
+    let known: Vec<Known> = Known::ALL.into_iter().filter(|k| fails || *k != Known::Fails).collect();
+    let step = (NAMES + NODES) / known.len() as f64;
+    for (n, known) in known.into_iter().enumerate() {
         let from = Point::new(n as f64 * step, y);
-        let to = from + Vec2::new(10.0, 0.0);
+        let to = from + Vec2::new(8.0, 0.0);
         limb(board, known, from, to);
         board.note(Note::new(Role::Note, to, Text::plain(known.words())).spot(Spot::new(
             to + Vec2::new(1.5, 0.0),

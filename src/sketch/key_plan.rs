@@ -177,6 +177,10 @@ fn key(view: &KeyPlan, all_named: bool) -> String {
     if has(Fate::Removed) {
         key += if before { "; thin lines across a wall: where it is cut" } else { "; dashed: removed" };
     }
+    let mut gaps = view.walls.iter().filter(|w| view.when.shows(w.fate)).flat_map(|w| &w.openings);
+    if gaps.any(|gap| gap.window) {
+        key += "; thin lines along a gap: window";
+    }
     if has(Fate::Added) && !before {
         key += "; crossed hatching: new";
     }
@@ -212,7 +216,17 @@ fn alt(view: &KeyPlan) -> String {
             .iter()
             .filter(|wall| wall.fate == fate && !wall.name.is_empty())
             .map(|wall| {
-                format!("{} ({} mm thick, {} mm long)", wall.name, mm(wall.thickness), mm(wall.length()))
+                let openings = match wall.openings.len() {
+                    0 => String::new(),
+                    1 => ", 1 opening".to_owned(),
+                    n => format!(", {n} openings"),
+                };
+                format!(
+                    "{} ({} mm thick, {} mm long{openings})",
+                    wall.name,
+                    mm(wall.thickness),
+                    mm(wall.length())
+                )
             })
             .collect();
         if !walls.is_empty() {

@@ -67,7 +67,7 @@ pub use key_plan::{KeyPlan, PlanMark, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
 pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
 pub use panel_section::{Floor, PanelSection, panel_section};
-pub use plan::{Fate, PlanWall, When};
+pub use plan::{Fate, Gap, PlanWall, When};
 pub use return_actions::{Curve, ReturnActions, return_actions};
 pub use return_elevation::{PlacedLoad, ReturnElevation, return_elevation};
 pub use return_section::{Flange, ReturnSection, Stress, Toe, return_section};

@@ -26,8 +26,9 @@ pub struct PanelSection {
     pub floors: Vec<Floor>,
     /// Level of the damp-proof course, mm.
     pub dpc: Option<f64>,
-    /// Vertical spacing of the wall ties, mm; none where there are no ties.
-    pub ties: Option<f64>,
+    /// Vertical spacing at which wall ties are drawn, mm, and how many there are, in words; none where there are no
+    /// ties.
+    pub ties: Option<(f64, String)>,
     /// Wind pressure with its direction.
     pub wind: Option<(Wind, Action)>,
     /// Load on top of a leaf: its index in `layers`, and the value.
@@ -149,13 +150,14 @@ fn floor_reach(view: &PanelSection) -> f64 {
 }
 
 fn ties(board: &mut Board, view: &PanelSection, ruler: Ruler) {
-    let Some(spacing) = view.ties.filter(|spacing| *spacing > 0.0) else {
+    let Some((spacing, words)) = view.ties.as_ref().filter(|ties| ties.0 > 0.0) else {
         return;
     };
     let mut x = 0.0;
     for layer in &view.layers {
         let next = x + layer.thickness();
         if matches!(layer, Layer::Cavity { .. }) {
+            let spacing = *spacing;
             let mut y = spacing / 2.0;
             let mut first = None;
             while y < view.height {
@@ -168,7 +170,7 @@ fn ties(board: &mut Board, view: &PanelSection, ruler: Ruler) {
             let at = ruler.at(next, first + spacing * ((view.height * 0.6 / spacing).floor()));
             let inside = ruler.at(thickness(&view.layers), 0.0).x;
             board.note(
-                Note::new(Role::Note, at, Text::plain(&format!("ties at {}", mm(spacing))))
+                Note::new(Role::Note, at, Text::plain(words))
                     .spot(Spot::new((inside + 4.0, at.y), 1.0, 0.0).led()),
             );
         }
@@ -234,8 +236,8 @@ fn alt(view: &PanelSection) -> String {
         mm(view.height),
         layer_words(&view.layers)
     );
-    if let Some(spacing) = view.ties {
-        alt += &format!("Wall ties every {} mm of height. ", mm(spacing));
+    if let Some((_, words)) = &view.ties {
+        alt += &format!("Wall ties, {words}. ");
     }
     let floors: Vec<String> =
         view.floors.iter().map(|floor| format!("{} at {} mm", floor.words, mm(floor.level))).collect();

@@ -26,6 +26,19 @@ pub struct PlanWall {
     pub thickness: f64,
     /// What happens to it.
     pub fate: Fate,
+    /// Doors and windows, in order along it.
+    pub openings: Vec<Gap>,
+}
+
+/// A door or window in a wall on plan.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Gap {
+    /// From the start of the centre line, mm.
+    pub from: f64,
+    /// Where it ends, mm.
+    pub to: f64,
+    /// Wall stands under it.
+    pub window: bool,
 }
 
 /// What happens to a wall.
@@ -73,6 +86,28 @@ impl PlanWall {
         [from + side, to + side, to - side, from - side]
     }
 
+    /// A stretch of it from `from` to `to` along its centre line, mm, without openings.
+    fn stretch(&self, from: f64, to: f64) -> Self {
+        let at = |s: f64| {
+            let share = s / self.length();
+            (
+                self.from.0 + share * (self.to.0 - self.from.0),
+                self.from.1 + share * (self.to.1 - self.from.1),
+            )
+        };
+        Self { from: at(from), to: at(to), openings: Vec::new(), ..self.clone() }
+    }
+
+    /// What stands of it between its openings.
+    fn pieces(&self) -> Vec<Self> {
+        if self.openings.is_empty() {
+            return vec![self.clone()];
+        }
+        let begins = std::iter::once(0.0).chain(self.openings.iter().map(|o| o.to));
+        let ends = self.openings.iter().map(|o| o.from).chain([self.length()]);
+        begins.zip(ends).filter(|(a, b)| b - a > 1.0).map(|(a, b)| self.stretch(a, b)).collect()
+    }
+
     /// The middle of its centre line on the paper.
     pub fn middle(&self, scale: Scale) -> Point {
         paper(scale, self.from).midpoint(paper(scale, self.to))
@@ -92,9 +127,10 @@ pub fn paper(scale: Scale, (x, y): (f64, f64)) -> Point {
 /// Draws walls: what stands in one body, what went dashed; on the plan before, short lines across what
 /// comes out show where it is cut.
 pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
-    let standing = Rings::new(walls.iter().filter(|w| when.shows(w.fate)), scale);
+    let pieces: Vec<PlanWall> = walls.iter().flat_map(PlanWall::pieces).collect();
+    let standing = Rings::new(pieces.iter().filter(|w| when.shows(w.fate)), scale);
     let removed = |w: &&PlanWall| when == When::After && w.fate == Fate::Removed;
-    let removed = Rings::new(walls.iter().filter(removed), scale);
+    let removed = Rings::new(pieces.iter().filter(removed), scale);
     for (index, (fate, ring)) in standing.all.iter().enumerate() {
         // Where two walls share ground, the later one leaves it to the earlier.
         let thick = (ring[0] - ring[3]).hypot();
@@ -112,10 +148,22 @@ pub fn walls(board: &mut Board, walls: &[PlanWall], scale: Scale, when: When) {
     }
     outlines(board, Pen::Cut, &standing, None);
     outlines(board, Pen::Removed, &removed, Some(&standing));
+    for wall in walls.iter().filter(|w| when.shows(w.fate)) {
+        windows(board, wall, scale);
+    }
     if when == When::Before {
         for wall in walls.iter().filter(|wall| wall.fate == Fate::Removed) {
             cuts(board, wall, scale);
         }
+    }
+}
+
+/// Thin lines along the faces of the wall under a window.
+fn windows(board: &mut Board, wall: &PlanWall, scale: Scale) {
+    for gap in wall.openings.iter().filter(|o| o.window) {
+        let [a, b, c, d] = wall.stretch(gap.from, gap.to).ring(scale);
+        board.line(Pen::Beyond, a, b);
+        board.line(Pen::Beyond, d, c);
     }
 }
 

@@ -75,7 +75,7 @@ prop_compose! {
         let all = elevation().head_forces;
         ReturnElevation {
             length, height: f64::from(height), wall: if left { Side::Left } else { Side::Right }, wall_layers, prop, dpc,
-            removed, loads, head_forces: all[..forces].to_vec(), head_moment: moment, line_load: line, tributary,
+            removed, loads, head_forces: all[..forces].to_vec(), head_moment: moment, through_floor: line.is_none(), line_load: line, tributary,
             wind: if toward { Wind::Toward } else { Wind::Away }, ..elevation()
         }
     }
@@ -337,7 +337,7 @@ proptest! {
         let height = f64::from(height);
         let mut view = wall_section();
         view.precompression = view.precompression.map(|(_, action)| (layers.len() - 1, action));
-        (view.layers, view.height, view.ties) = (layers, height, Some(f64::from(ties)));
+        (view.layers, view.height, view.ties) = (layers, height, Some((f64::from(ties), "2.5 ties per m²".to_owned())));
         view.floors[1] = Floor { level: height + f64::from(top), depth: f64::from(top), concrete: false, words: "timber floor".into() };
         let drawing = panel_section(&view, FRAME);
         sound(&drawing);

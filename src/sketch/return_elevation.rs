@@ -46,6 +46,8 @@ pub struct ReturnElevation {
     pub line_load: Option<Action>,
     /// Front whose wind this return takes, mm.
     pub tributary: Option<f64>,
+    /// The floor brings all of its wind to the head: none blows on the wall that it meets.
+    pub through_floor: bool,
     /// Direction of the wind.
     pub wind: Wind,
 }
@@ -263,6 +265,9 @@ fn alt(view: &ReturnElevation) -> String {
     }
     if let Some(front) = view.tributary {
         alt += &format!("It takes the wind from {} mm of front. ", mm(front));
+    }
+    if view.through_floor {
+        return alt + "The floor brings the wind to its head.";
     }
     alt += match view.wind {
         Wind::Toward => "The wind blows onto the outer wall.",

@@ -91,7 +91,8 @@ pub(super) fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) 
         board.note(note.spot(Spot::new(back - right * 1.5, -ruler.hand, 0.0)));
     } else if let Some(front) = view.tributary {
         let at = ruler.by(face, 0.3 * h, -clear, 0.0);
-        let text = Text::plain(&format!("takes {} of front", mm(front)));
+        let by = if view.through_floor { ", by the floor" } else { "" };
+        let text = Text::plain(&format!("takes {} of front{by}", mm(front)));
         board.note(Note::new(Role::Note, at, text).spot(Spot::new(at, -ruler.hand, 0.0)));
     }
 
@@ -121,6 +122,9 @@ pub(super) fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) 
         from = out - right * 2.0;
     }
     head_moment(board, view, ruler, toward);
+    if view.through_floor {
+        return;
+    }
 
     let reach = ruler.by(face, 0.62 * h, -clear - 5.0, 0.0);
     let out = reach - right * 12.0;

@@ -31,6 +31,7 @@ pub fn elevation() -> ReturnElevation {
         head_moment: Some(Action::new("M_head", "1.10 kNm", "")),
         line_load: Some(Action::new("w_Ed", "1.95 kN/m", "")),
         tributary: Some(2600.0),
+        through_floor: false,
         wind: Wind::Toward,
     }
 }
@@ -195,14 +196,14 @@ pub fn wall_section() -> PanelSection {
             Floor { level: 2625.0, depth: 225.0, concrete: false, words: "timber floor, strapped".into() },
         ],
         dpc: Some(-75.0),
-        ties: Some(450.0),
+        ties: Some((450.0, "4.94 ties per m²".to_owned())),
         wind: Some((Wind::Toward, Action::new("W_Ed", "0.90 kN/m²", "corner zone"))),
         precompression: Some((2, Action::new("N_G", "12.4 kN/m", "dead load, helping"))),
     }
 }
 
 pub fn wall(name: &str, from: (f64, f64), to: (f64, f64), thickness: f64, fate: Fate) -> PlanWall {
-    PlanWall { name: name.into(), from, to, thickness, fate }
+    PlanWall { name: name.into(), from, to, thickness, fate, openings: Vec::new() }
 }
 
 /// Two storeys over a beam on two lengths of wall.

@@ -45,6 +45,18 @@ impl Row {
         if self.entries().any(|e| e.relation().is_some()) { words.join("; else ") } else { together(&words) }
     }
 
+    /// What a cell of a relation says: whether a limit is kept; of a branch whether it went the way of the
+    /// first column, and nothing where all went one way, which the words say.
+    pub fn way(&self, entry: &Entry, relation: &Relation) -> &'static str {
+        let word = |yes: bool| if yes { "yes" } else { "no" };
+        if !matches!(entry, Entry::Decide { .. }) {
+            return word(relation.holds);
+        }
+        let mut ways = self.entries().filter_map(Entry::relation).map(|r| r.holds);
+        let first = ways.next().unwrap_or(relation.holds);
+        if ways.all(|way| way == first) { "" } else { word(relation.holds == first) }
+    }
+
     /// What a table was entered with, for each column; empty where it says the same as one before.
     pub fn entered(&self) -> Vec<String> {
         let mut said: Vec<String> = Vec::new();

@@ -83,6 +83,24 @@ impl Outside {
     }
 }
 
+/// Something that no verdict shows and that must not be silent in the results: a hold point asks for other
+/// proof, or nothing can.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Unshown {
+    /// Unique on its sheet.
+    pub id: String,
+    /// Clause or source.
+    pub clause: String,
+    /// What is not shown.
+    pub words: String,
+    /// What was found of it.
+    pub finding: String,
+    /// Its use, where there is one.
+    pub ratio: Option<f64>,
+    /// Mark of the hold point; without one it is a failure.
+    pub hold: Option<String>,
+}
+
 /// A column of a table.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Column {
@@ -179,6 +197,8 @@ pub enum Entry {
     Verify(Verdict),
     /// A check that left its range.
     Outside(Outside),
+    /// What no verdict shows.
+    Unshown(Unshown),
     /// A rule printed beside the calculation, never instead of it.
     Rule {
         /// Which.
@@ -232,6 +252,7 @@ impl Entry {
             Self::Step(step) => Some(&step.clause),
             Self::Verify(v) => Some(&v.clause),
             Self::Outside(o) => Some(&o.clause),
+            Self::Unshown(u) => Some(&u.clause),
             _ => None,
         }
     }
@@ -248,6 +269,7 @@ impl Entry {
             Self::Step(step) => Some(&step.words),
             Self::Verify(v) => Some(&v.words),
             Self::Outside(o) => Some(&o.words),
+            Self::Unshown(u) => Some(&u.words),
             _ => None,
         }
     }

@@ -77,6 +77,12 @@ pub fn relation(r: &Relation) -> Node {
     pair(r.op, node(&r.left, View::Symbols), node(&r.right, View::Symbols))
 }
 
+/// A relation in symbols, with the sign that is true.
+pub fn relation_found(r: &Relation) -> Node {
+    let op = if r.holds { r.op } else { r.op.opposite() };
+    pair(op, node(&r.left, View::Symbols), node(&r.right, View::Symbols))
+}
+
 /// A relation in values, with the sign that is true.
 pub fn relation_values(r: &Relation) -> Node {
     let op = if r.holds { r.op } else { r.op.opposite() };

@@ -29,6 +29,6 @@ pub mod symbol;
 pub mod text;
 
 pub use columns::{Columns, Row};
-pub use entry::{Column, Entry, Outside, Relation, Step, Table, Value, Verdict};
+pub use entry::{Column, Entry, Outside, Relation, Step, Table, Unshown, Value, Verdict};
 pub use parse::Op;
 pub use sheet::{Fault, Sheet, Traced};

@@ -2,7 +2,7 @@
 
 use std::collections::HashMap;
 
-use super::entry::{Entry, Outside, Relation, Step, Table, Value, Verdict};
+use super::entry::{Entry, Outside, Relation, Step, Table, Unshown, Value, Verdict};
 use super::expr::UNIT_CONSTS;
 use super::parse;
 use crate::quantity::{Dyn, Q};
@@ -47,6 +47,8 @@ pub struct Sheet {
     pub verdicts: Vec<Verdict>,
     /// Checks that left their range, kept on every sheet.
     pub outside: Vec<Outside>,
+    /// What no verdict shows, kept on every sheet.
+    pub unshown: Vec<Unshown>,
     /// Broken locks.
     pub faults: Vec<Fault>,
     /// The case printed with each verdict until it changes.
@@ -125,6 +127,17 @@ impl Sheet {
         outside.id = self.unique(&outside.id);
         self.push(|| Entry::Outside(outside.clone()));
         self.outside.push(outside);
+    }
+
+    /// Whether anything on it is a result.
+    pub fn judges(&self) -> bool {
+        !self.verdicts.is_empty() || !self.outside.is_empty() || !self.unshown.is_empty()
+    }
+
+    /// Notes what no verdict shows.
+    pub fn unshown(&mut self, unshown: Unshown) {
+        self.push(|| Entry::Unshown(unshown.clone()));
+        self.unshown.push(unshown);
     }
 
     /// Records an input, unless it stands already with this value; see [`given!`](crate::given).

@@ -1,6 +1,6 @@
 //! The sheet as plain text: the first renderer, for the terminal, snapshots and reviewable diffs.
 
-use super::entry::{Entry, Table, Value};
+use super::entry::{Entry, Relation, Table, Value};
 use super::math::{self, Node};
 use super::parse::Op;
 use super::{Columns, Row, Sheet, Step, Verdict, symbol};
@@ -33,11 +33,15 @@ pub fn entry(entry: &Entry) -> String {
         Entry::Found { value, words, clause } => line(&format!("{}   {words}", shown(value)), clause),
         Entry::Step(s) => line(&step(s), &s.clause),
         Entry::Decide { relation, words, clause } | Entry::Require { relation, words, clause } => {
-            let (symbols, values) = (math::relation(relation), math::relation_values(relation));
+            let (symbols, values) = (relation_of(entry, relation), math::relation_values(relation));
             line(&format!("{}: {}; {words}", node(&symbols), node(&values)), clause)
         }
         Entry::Verify(v) => line(&verdict(v), &v.clause),
         Entry::Outside(o) => line(&format!("OUTSIDE THE METHOD {}: {}", o.id, o.words), &o.clause),
+        Entry::Unshown(u) => {
+            let what = u.hold.as_ref().map_or("NOT ADEQUATE".to_owned(), |h| format!("hold point {h}"));
+            line(&format!("NOT SHOWN {}: {}: {what}", u.words, u.finding), &u.clause)
+        }
         Entry::Rule { words, clause, finding, met, .. } => {
             line(&format!("rule, {words}: {finding}: {}", if *met { "met" } else { "not met" }), clause)
         }
@@ -86,8 +90,8 @@ fn row(c: &Columns, row: &Row) -> String {
             line(&format!("{before} = {}", values()), &row.sources())
         }
         Entry::Decide { relation, .. } | Entry::Require { relation, .. } => {
-            let (symbols, numbers) = (math::relation(relation), math::relation_values(relation));
-            let says = cells(&|e| e.relation().map(|r| if r.holds { "yes" } else { "no" }.to_owned()));
+            let (symbols, numbers) = (relation_of(lead, relation), math::relation_values(relation));
+            let says = cells(&|e| e.relation().map(|r| row.way(e, r).to_owned()));
             let left = format!("{}: {}: {says}; {}", node(&symbols), node(&numbers), row.words());
             line(&left, &row.sources())
         }
@@ -99,6 +103,14 @@ fn row(c: &Columns, row: &Row) -> String {
             row.cells.iter().enumerate().filter_map(of).collect()
         }
         other => entry(other),
+    }
+}
+
+/// A branch as it was found to be, whose words are those of the way it went; a limit as it is written.
+fn relation_of(entry: &Entry, relation: &Relation) -> Node {
+    match entry {
+        Entry::Decide { .. } => math::relation_found(relation),
+        _ => math::relation(relation),
     }
 }
 

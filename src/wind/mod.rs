@@ -108,6 +108,12 @@ impl Wind {
         net.map_or(self.worst.panel, |n| n.worst)
     }
 
+    /// Whether the wind that decides on a panel draws it outward.
+    pub fn off_panel(&self, p: &Panel) -> bool {
+        let net = self.derived.iter().flat_map(|d| &d.panels).find(|n| n.mark == p.mark);
+        net.is_some_and(|n| n.outward > n.inward)
+    }
+
     /// Force of the roof along the wind per length across it, where the roof is worked out.
     pub fn roof(&self, along: Along) -> Option<roof::Along> {
         self.derived.as_ref()?.roof.map(|r| r[along as usize])

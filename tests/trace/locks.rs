@@ -207,7 +207,7 @@ fn faults_of_any_section_are_listed() {
     let mut broken = Sheet::recorder();
     broken.fault("x = y".to_owned(), "y does not stand on this sheet".to_owned());
     let sections = vec![Section::plain("a", "A", Sheet::recorder()), Section::plain("b", "B", broken)];
-    let results = Results { sections, holds: Vec::new(), outcome: Outcome::Adequate };
+    let results = Results { sections, holds: Vec::new(), outcome: Outcome::Adequate, remarks: Vec::new() };
     let listed: Vec<(&str, &str)> = results.faults().map(|(id, f)| (id, f.step.as_str())).collect();
     assert_eq!(listed, [("b", "x = y")]);
 }

@@ -78,7 +78,8 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
     given!(s, "weight of the footing per volume", source.as_str(), g_c = f.density.value);
     calc!(s, "statics", "weight of the footing", G_F = g_c * B * t_F * L);
     let left = if st.flanged { ", flange left out" } else { "" };
-    let source = format!("load table of {}{left}", st.mark);
+    let deep = if st.deep { ", with the wall in the depth of the floor" } else { "" };
+    let source = format!("load table of {}{left}{deep}", st.mark);
     let source = source.as_str();
     given!(s, "dead load at the foot", source, G = v.G);
     given!(s, "imposed load", source, Q = v.Q);

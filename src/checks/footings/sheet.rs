@@ -173,8 +173,7 @@ fn growth(st: &Stands<'_>, all: &[(Case, Pressed)]) -> String {
     }
     let change = (x.p_max / p_0).base() - 1.0;
     let word = if change < 0.0 { "falls" } else { "grows" };
-    // Never rounded towards passing: growth up, relief down.
-    let percent = if change < 0.0 { (-change * 100.0).floor() } else { (change * 100.0).ceil() };
+    let percent = change.abs() * 100.0;
     let mut words = format!(
         "Under {} the pressure {word} from {} to {} kN/m², by {percent:.0} %. Before the removal the wall was long \
          and its wind is left out of the column before, so the growth is not shown too small.",

@@ -1,7 +1,7 @@
 //! What stands on a footing: the return's own loads at its foot, without what a flange brings, and what
 //! pushes it.
 
-use crate::building::{Acts, Footing, Return};
+use crate::building::{Acts, Building, Footing, Return, storey_height};
 use crate::checks::returns::build::{self, Acting, Change, Inputs};
 use crate::checks::returns::model::{At, Model, Vertical};
 use crate::quantity::{Force, Length, Moment};
@@ -21,6 +21,8 @@ pub struct Stands<'a> {
     pub T_U: Moment,
     /// A flange is counted on the return's sheet.
     pub flanged: bool,
+    /// The wall in the depth of the floor is among the loads, as in the take-down that gives those before.
+    pub deep: bool,
 }
 
 impl<'a> Stands<'a> {
@@ -47,7 +49,9 @@ impl<'a> Stands<'a> {
         whole.flange = None;
         (whole.own, whole.at_head) = (Force::ZERO, Vertical::default());
         let mut across = Across::default();
+        let more = in_the_floor(i.building, ret, footing);
         for (n, (k, m)) in leaves.iter().enumerate() {
+            let m = &Model { own: m.own * (1.0 + more), ..m.clone() };
             let plain = Model { flange: None, ..m.clone() }.vertical(At::Foot);
             across.add(&plain, place(*k), m.rho_2.is_none());
             whole.own = whole.own + m.own;
@@ -60,7 +64,8 @@ impl<'a> Stands<'a> {
         }
         let foot = whole.vertical(At::Foot);
         let [T_G, T_Q, T_U] = across.sums();
-        Ok(Self { mark: &ret.mark, footing, loads: Vertical { T_G, T_Q, ..foot }, T_U, flanged, whole })
+        let loads = Vertical { T_G, T_Q, ..foot };
+        Ok(Self { mark: &ret.mark, footing, loads, T_U, flanged, deep: more > 0.0, whole })
     }
 
     /// Whether the loads press off the middle of the footing, across the wall.
@@ -72,6 +77,13 @@ impl<'a> Stands<'a> {
     pub fn pushed(&self) -> bool {
         self.whole.sheared() || self.whole.lateral.M_k > Moment::ZERO
     }
+}
+
+/// How much heavier the wall is up to the floor above than over its clear height, where the take-down counts it so.
+fn in_the_floor(b: &Building, r: &Return, f: &Footing) -> f64 {
+    let led = f.before.is_some_and(|before| before.led);
+    let storey = b.storeys.iter().position(|s| s.mark == r.storey).filter(|_| led);
+    storey.map_or(0.0, |k| (storey_height(b, k) / r.height).base() - 1.0).max(0.0)
 }
 
 /// Moments across the wall: of the leaves' places, and of loads off the middle of a leaf whose head

@@ -1,11 +1,13 @@
 //! Between what a pier carries the wind sideways: walls that meet it hold it, openings leave it free.
 
 use super::across;
+use super::around::Lines;
 use super::model::{PierModel, Wind};
 use super::work;
 use crate::building::{BuildUp, Edge as Held, PanelRoute, Sharing, Span, State};
 use crate::checks::panels::{PanelLeaf, PanelModel};
 use crate::quantity::{Length, LineLoad, Moment, Stress};
+use crate::solve::descent::Place;
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
 use crate::standards::masonry::Edge;
@@ -28,11 +30,12 @@ pub struct Bay {
 
 /// The bays of pier `n` of wall `i`. A wall that meets it holds it where it is a fifth of the height long
 /// there, 5.5.1.2(5).
-pub fn of(state: &State, i: usize, n: usize, h: Length) -> Vec<Bay> {
+pub fn of(state: &State, lines: &Lines, i: usize, n: usize, h: Length) -> Vec<Bay> {
     let (wall, pier) = (&state.model.walls[i], &state.down.walls[i].piers[n]);
     let near = REACH + wall.thickness / 2.0;
+    let stretch = Place { from: pier.from, to: pier.to, ..wall.place };
     let mut stops: Vec<f64> = Vec::new();
-    for (other, on) in state.model.walls.iter().zip(&state.down.walls) {
+    for (other, on) in lines.near(stretch, near).into_iter().map(|k| (&state.model.walls[k], &state.down.walls[k])) {
         if other.storey != wall.storey || other.place.along == wall.place.along {
             continue;
         }

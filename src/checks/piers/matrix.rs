@@ -13,12 +13,14 @@ use crate::trace::{Outside, Sheet};
 pub struct Worst {
     /// Section, combination in which it is worst, use there, and what governs it.
     pub sections: Vec<(At, Combination, f64, String)>,
+    /// Slenderness over its limit.
+    pub slender: f64,
 }
 
 impl Worst {
     /// The largest use and what governs it.
     pub fn largest(&self) -> (f64, String) {
-        self.sections.iter().fold((0.0, String::new()), |worst, (_, c, ratio, words)| {
+        self.sections.iter().fold((self.slender, "slenderness".to_owned()), |worst, (_, c, ratio, words)| {
             if *ratio > worst.0 { (*ratio, format!("{words}, {}", short(*c))) } else { worst }
         })
     }
@@ -48,7 +50,9 @@ pub fn section(s: &mut Sheet, p: &PierModel, annex: &Annex, ready: Ready, c: Com
 /// # Errors
 /// [`Outside`] below the least plan area and beyond the limit of slenderness.
 pub fn run(p: &PierModel, annex: &Annex) -> Result<Worst, Outside> {
-    let ready = work::prepare(&mut Sheet::silent(), p, annex)?;
+    let mut s = Sheet::silent();
+    let ready = work::prepare(&mut s, p, annex)?;
+    let slender = s.verdicts.iter().map(|v| v.ratio).fold(0.0, f64::max);
     let mut sections = Vec::new();
     for &at in work::sections(p) {
         let mut worst: Option<(At, Combination, f64, String)> = None;
@@ -63,7 +67,7 @@ pub fn run(p: &PierModel, annex: &Annex) -> Result<Worst, Outside> {
         }
         sections.extend(worst);
     }
-    Ok(Worst { sections })
+    Ok(Worst { sections, slender })
 }
 
 /// What governs, in a word or two.

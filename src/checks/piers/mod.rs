@@ -1,5 +1,6 @@
 //! Vertical resistance of every length of wall between openings, before the removal and after it.
 //!
+//! * [`around`]: what lies around a length, found by place
 //! * [`mod@outer`]: which walls the wind presses across
 //! * [`bays`]: between what a length carries it sideways; [`across`]: what the loaded leaf has of it, as a panel
 //! * [`model`]: from the take-down to what the check needs
@@ -7,6 +8,7 @@
 //! * [`matrix`]: every section under every combination
 
 pub mod across;
+pub mod around;
 pub mod bays;
 pub mod matrix;
 pub mod middle;
@@ -28,6 +30,7 @@ use crate::solve::descent::{From, Place, Triple};
 use crate::standards::en1990::Combination;
 use crate::standards::tables::annex_e::Edges;
 use crate::trace::Outside;
+use around::{Around, Lines};
 use model::PierModel;
 
 /// By how much a load has to grow for its pier to be judged: less is the dust of the sums.
@@ -116,6 +119,14 @@ impl Used {
 pub fn of(job: &Job<'_>) -> Vec<Used> {
     let b = job.building;
     let (Some(down), Ok(wind)) = (&job.down, &job.wind) else { return Vec::new() };
+    let sight = Sight {
+        around: Around::new(b),
+        before: Lines::new(&down.on_leaf_before),
+        after: Lines::new(&down.on_leaf),
+        q_panel: wind.worst.panel,
+    };
+    let first: HashMap<(usize, usize), usize> =
+        down.on_leaf_before.walls.iter().enumerate().map(|(i, s)| ((s.wall, s.storey), i)).collect();
     let mut known = Known::new();
     let mut out = Vec::new();
     for k in 0..b.storeys.len() {
@@ -123,14 +134,39 @@ pub fn of(job: &Job<'_>) -> Vec<Used> {
             if has_a_sheet(b, stack.wall, k) {
                 continue;
             }
-            let before = down.on_leaf_before.walls.iter().position(|s| s == stack);
-            let Some(before) = before else { continue };
+            let Some(&before) = first.get(&(stack.wall, stack.storey)) else { continue };
             for n in 0..down.on_leaf.down.walls[i].piers.len() {
-                out.push(used(job, down, (before, i), n, (wind.worst.panel, &mut known)));
+                out.push(used(job, down, (before, i), n, (&sight, &mut known)));
             }
         }
     }
     out
+}
+
+/// What the piers of a job see of the rest of it.
+struct Sight {
+    around: Around,
+    before: Lines,
+    after: Lines,
+    q_panel: Stress,
+}
+
+/// What a pier sees in one state.
+#[derive(Clone, Copy)]
+pub struct Seen<'a> {
+    /// Floors and the ends of the plan.
+    pub around: &'a Around,
+    /// Walls of the state.
+    pub lines: &'a Lines,
+    /// Net pressure on panels.
+    pub q_panel: Stress,
+}
+
+impl Sight {
+    const fn at(&self, after: bool) -> Seen<'_> {
+        let lines = if after { &self.after } else { &self.before };
+        Seen { around: &self.around, lines, q_panel: self.q_panel }
+    }
 }
 
 /// Whether a plan wall is a return of that storey, which has a sheet of its own.
@@ -143,7 +179,7 @@ fn used(
     down: &TakeDown,
     (i, j): (usize, usize),
     n: usize,
-    (q_panel, known): (Stress, &mut Known),
+    (sight, known): (&Sight, &mut Known),
 ) -> Used {
     let b = job.building;
     let (stack, on) = (&down.on_leaf.walls[j], &down.on_leaf.down.walls[j]);
@@ -160,7 +196,7 @@ fn used(
         }
         _ => None,
     });
-    let after = state(job, &down.on_leaf, j, n, (q_panel, &mut *known));
+    let after = state(job, &down.on_leaf, j, n, (sight.at(true), &mut *known));
     Used {
         wall: b.plan[stack.wall].mark.clone(),
         storey: stack.storey,
@@ -168,7 +204,7 @@ fn used(
         to: pier.to,
         windy: after.worked.as_ref().is_ok_and(|all| all.iter().any(|w| w.model.wind.is_some())),
         beams: beams.collect(),
-        before: state(job, &down.on_leaf_before, i, n, (q_panel, known)),
+        before: state(job, &down.on_leaf_before, i, n, (sight.at(false), known)),
         after,
     }
 }
@@ -194,7 +230,7 @@ struct Like {
 
 impl Like {
     /// None for a pier on which a beam ends: what stands under it follows from more.
-    fn new(job: &Job<'_>, leaf: &State, i: usize, n: usize) -> Option<Self> {
+    fn new(job: &Job<'_>, leaf: &State, seen: Seen<'_>, i: usize, n: usize) -> Option<Self> {
         let b = job.building;
         let (stack, wall, on) = (&leaf.walls[i], &leaf.model.walls[i], &leaf.down.walls[i]);
         let pier = on.piers[n];
@@ -203,9 +239,9 @@ impl Like {
             return None;
         }
         let place = Place { from: pier.from, to: pier.to, ..wall.place };
-        let windy = outer::in_the_wind(b, stack.storey, place, wall.thickness);
-        let bays =
-            if windy { bays::of(leaf, i, n, b.storeys[stack.storey].clear_height) } else { Vec::new() };
+        let windy = outer::in_the_wind(b, seen.around, stack.storey, place, wall.thickness);
+        let h = b.storeys[stack.storey].clear_height;
+        let bays = if windy { bays::of(leaf, seen.lines, i, n, h) } else { Vec::new() };
         let loads = [pier.head, pier.moment, pier.foot, pier.foot_moment, pier.sides[0], pier.sides[1]];
         let figures = [pier.to - pier.from, wall.weight].into_iter().chain(loads.into_iter().flatten());
         Some(Self {
@@ -219,10 +255,10 @@ impl Like {
 }
 
 /// One pier in one state.
-fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, (q_panel, known): (Stress, &mut Known)) -> InState {
+fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, (seen, known): (Seen<'_>, &mut Known)) -> InState {
     let N_Ed = design(job, leaf.down.walls[i].piers[n].foot);
     let work = || {
-        model::of(job, leaf, i, n, q_panel).map(|models| {
+        model::of(job, leaf, i, n, seen).map(|models| {
             let work = |model: PierModel| {
                 let used = matrix::run(&model, &job.annex).map(|worst| worst.largest());
                 Worked { model, used }
@@ -230,7 +266,7 @@ fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, (q_panel, known): (Str
             models.into_iter().map(work).collect()
         })
     };
-    let worked = match Like::new(job, leaf, i, n) {
+    let worked = match Like::new(job, leaf, seen, i, n) {
         Some(like) => known.entry(like).or_insert_with(work).clone(),
         None => work(),
     };

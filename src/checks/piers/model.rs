@@ -1,7 +1,7 @@
 //! Lengths of wall between openings, from the take-down to what the check needs.
 
 use super::bays::{self, Bay};
-use super::outer;
+use super::{Seen, outer};
 use crate::building::{FloorKind, Restraint, State, Storey};
 use crate::checks::Job;
 use crate::checks::masonry::{self, Masonry};
@@ -110,19 +110,19 @@ pub fn of(
     leaf: &State,
     i: usize,
     n: usize,
-    q_panel: Stress,
+    seen: Seen<'_>,
 ) -> Result<Vec<PierModel>, Outside> {
     let b = job.building;
     let (stack, wall, on) = (&leaf.walls[i], &leaf.model.walls[i], &leaf.down.walls[i]);
     let storey = &b.storeys[stack.storey];
     let pier = on.piers[n];
-    let whole = one(job, leaf, i, &pier, q_panel, n)?;
+    let whole = one(job, leaf, i, &pier, seen, n)?;
     let mut out = vec![whole];
     let ends = on.head.points.iter().filter(|p| pier.from <= p.at && p.at <= pier.to);
     for end in ends {
         let From::Beam(beam, _) = end.by else { continue };
         let (stretch, under) = beneath(storey, wall, on, &pier, end.at, b.beams[beam].mark.clone());
-        let mut m = one(job, leaf, i, &stretch, q_panel, n)?;
+        let mut m = one(job, leaf, i, &stretch, seen, n)?;
         m.under = Some(under);
         out.push(m);
     }
@@ -166,7 +166,7 @@ fn one(
     leaf: &State,
     i: usize,
     pier: &Pier,
-    q_panel: Stress,
+    seen: Seen<'_>,
     n: usize,
 ) -> Result<PierModel, Outside> {
     let b = job.building;
@@ -224,9 +224,9 @@ fn one(
         ties: build_up.ties,
         under: None,
     };
-    if outer::in_the_wind(b, stack.storey, place, wall.thickness) {
-        let bays = bays::of(leaf, i, n, storey.clear_height);
-        p.wind = bays::worst(&p, bays, q_panel, build_up, &job.annex);
+    if outer::in_the_wind(b, seen.around, stack.storey, place, wall.thickness) {
+        let bays = bays::of(leaf, seen.lines, i, n, storey.clear_height);
+        p.wind = bays::worst(&p, bays, seen.q_panel, build_up, &job.annex);
     }
     Ok(p)
 }

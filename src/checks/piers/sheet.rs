@@ -2,12 +2,13 @@
 
 use super::model::PierModel;
 use super::{Used, matrix, place, work};
+use crate::building::Building;
 use crate::checks::returns::model::At;
 use crate::checks::{Job, Section};
-use crate::given;
-use crate::quantity::print;
+use crate::quantity::{Num, print};
 use crate::standards::en1996::concentrated;
 use crate::trace::{Column, Outside, Sheet, Table};
+use crate::{given, verify};
 
 /// The sheet of the lengths of wall between openings, where the plan has floors.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
@@ -42,14 +43,49 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     }
     // A limit that one leaves hides no failure of another. Of equals the first.
     let inside = judged.iter().flat_map(|u| u.after.worked.iter().flatten().map(move |w| (*u, w)));
-    let inside = inside.filter_map(|(u, w)| Some((u, w, w.used.as_ref().ok()?.0)));
-    if let Some((u, w, _)) = inside.reduce(|a, b| if b.2 > a.2 { b } else { a }) {
+    let inside: Vec<_> = inside.filter_map(|(u, w)| Some((u, w, w.used.as_ref().ok()?.0))).collect();
+    let worst = inside.iter().copied().reduce(|a, b| if b.2 > a.2 { b } else { a });
+    if let Some((u, w, _)) = worst {
         s.heading(1, format!("The one of highest use that is judged: {}", place(b, u)));
+        s.of = named(b, u);
         if let Err(outside) = record(&mut s, job, &w.model) {
             s.leave(outside);
         }
+        s.of.clear();
     }
+    others(&mut s, b, &judged, worst.map(|w| w.0));
     vec![Section::plain("piers", "Lengths of wall between openings", s)]
+}
+
+/// A judged length in few words, for the results.
+fn named(b: &Building, u: &Used) -> String {
+    format!("{}, {}", u.wall, b.storeys[u.storey].mark)
+}
+
+/// The largest use of every other length that is judged, each a verdict of its own.
+fn others(s: &mut Sheet, b: &Building, judged: &[&Used], worst: Option<&Used>) {
+    let rest: Vec<(&Used, f64, String)> = judged
+        .iter()
+        .filter(|u| worst.is_none_or(|w| !std::ptr::eq(**u, w)))
+        .filter_map(|u| {
+            let worked = u.after.worked.iter().flatten().filter_map(|w| w.used.as_ref().ok());
+            let (ratio, words) = worked.reduce(|a, b| if b.0 > a.0 { b } else { a })?;
+            Some((*u, *ratio, words.clone()))
+        })
+        .collect();
+    if rest.is_empty() {
+        return;
+    }
+    s.heading(1, "The other lengths that are judged");
+    for (u, ratio, words) in rest {
+        s.case = format!("{}, {words}", place(b, u));
+        given!(s, "largest use of a length of wall", "table above, worked silently", eta_w = Num::new(ratio));
+        given!(s, "limit of a use", "EN 1990 6.4.2", eta_1 = Num::new(1.0));
+        s.of = named(b, u);
+        verify!(s, "pier-other", "6.1.2", "largest use", eta_w <= eta_1);
+        s.of.clear();
+    }
+    s.case.clear();
 }
 
 fn words(s: &mut Sheet, job: &Job<'_>) {

@@ -1,5 +1,6 @@
 //! What must hold for any length of wall, and the limits of the method.
 
+use super::around::{Around, Lines};
 use super::model::PierModel;
 use super::{Used, bays, matrix, outer, sheet, work};
 use crate::building::{Building, Side, line_of, take_down};
@@ -175,10 +176,11 @@ fn an_addition_shelters_its_own_storey() {
     addition.from = (Length::new(1000.0), Length::new(-3000.0));
     addition.to = (Length::new(4000.0), Length::ZERO);
     b.floors.push(addition);
+    let around = Around::new(&b);
     let at = |from: f64, to: f64| Place { along: Axis::X, at: 0.0, from, to };
-    assert!(!outer::in_the_wind(&b, 0, at(1500.0, 3500.0), 267.5), "inside");
-    assert!(outer::in_the_wind(&b, 1, at(1500.0, 3500.0), 267.5), "above its roof");
-    assert!(outer::in_the_wind(&b, 0, at(0.0, 3400.0), 267.5), "in part beside it");
+    assert!(!outer::in_the_wind(&b, &around, 0, at(1500.0, 3500.0), 267.5), "inside");
+    assert!(outer::in_the_wind(&b, &around, 1, at(1500.0, 3500.0), 267.5), "above its roof");
+    assert!(outer::in_the_wind(&b, &around, 0, at(0.0, 3400.0), 267.5), "in part beside it");
 }
 
 /// Bays add up to their length; walls that meet it hold it, openings do not; the wall that comes out holds it before.
@@ -189,7 +191,7 @@ fn bays_lie_between_walls_that_meet_and_openings() {
     let h = Length::new(2400.0);
     let of = |state: &crate::building::State| {
         let i = state.walls.iter().position(|s| s.storey == 0 && b.plan[s.wall].mark == "rear wall");
-        bays::of(state, i.expect("it stands"), 0, h)
+        bays::of(state, &Lines::new(state), i.expect("it stands"), 0, h)
     };
     let (before, after) = (of(&down.on_leaf_before), of(&down.on_leaf));
     let lengths = |bays: &[bays::Bay]| bays.iter().map(|x| x.l.base()).collect::<Vec<_>>();

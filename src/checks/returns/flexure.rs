@@ -48,23 +48,33 @@ pub fn at_bonded_foot(s: &mut Sheet, m: &Model, a: &Actions, f_d: Stress, id: &s
 }
 
 /// Mid-height of a return whose head is held. Two routes, each enough by itself: the section without
-/// tension carries N in a block centred on it, or the section is uncracked with f_xk1. The route of
-/// the lower use decides and is named; the other is not worked where it is not needed.
+/// tension carries N in a block centred on it, or the section is uncracked with f_xk1 and its pressed
+/// edge does not crush. The route of the lower use decides and is named; the other is not worked where
+/// it is not needed.
 pub fn at_mid_height(s: &mut Sheet, m: &Model, a: &Actions, st: &Stressed, Phi: Num, f_d: Stress, id: &str) {
-    let by_block = {
+    let used = |route: &dyn Fn(&mut Sheet)| {
         let mut silent = Sheet::silent();
-        in_plane::toe(&mut silent, a, st, Phi, f_d, id);
-        silent.verdicts[0].ratio
+        route(&mut silent);
+        silent.verdicts.iter().map(|v| v.ratio).fold(0.0, f64::max)
     };
-    let by_flexure = {
-        let M_Rd = resistance(&mut Sheet::silent(), m, a, f_d);
-        if M_Rd > Moment::ZERO { (a.M_Ed / M_Rd).base() } else { f64::INFINITY }
-    };
-    if by_block <= by_flexure {
-        in_plane::toe(s, a, st, Phi, f_d, id);
-    } else {
-        let M_Ed = a.M_Ed;
-        let M_Rd = resistance(s, m, a, f_d);
-        verify!(s, id, "6.3.1, by analogy", "flexure at mid-height", M_Ed <= M_Rd);
-    }
+    let by_block = |s: &mut Sheet| in_plane::toe(s, a, st, Phi, f_d, id);
+    let by_flexure = |s: &mut Sheet| uncracked(s, m, a, Phi, f_d, id);
+    if used(&by_block) <= used(&by_flexure) { by_block(s) } else { by_flexure(s) }
+}
+
+/// The uncracked section: what it stretches by 6.3.1, what it presses within the reduced strength.
+fn uncracked(s: &mut Sheet, m: &Model, a: &Actions, Phi: Num, f_d: Stress, id: &str) {
+    let (M_Ed, N_Ed, l, t) = (a.M_Ed, a.N_Ed, m.l, m.t);
+    let M_Rd = resistance(s, m, a, f_d);
+    verify!(s, id, "6.3.1, by analogy", "flexure at mid-height", M_Ed <= M_Rd);
+    given!(s, "least reduction across the wall: head, middle, foot", "vertical resistance, this sheet", Phi);
+    calc!(s, "6.1.2.1(2) with first principles", "strength of the pressed edge", f_dp = Phi * f_d);
+    calc!(
+        s,
+        "first principles",
+        "stress at the pressed edge in plane, uncracked",
+        sigma_p = N_Ed / (t * l) + 6.0 * M_Ed / (t * sq(l))
+    );
+    let edge = format!("{id}-edge");
+    verify!(s, &edge, "first principles", "pressed edge at mid-height", sigma_p <= f_dp);
 }

@@ -14,7 +14,7 @@ pub use storey::complete;
 use super::{Job, Section};
 use crate::building::{Along, Building, Proof, Side};
 use crate::quantity::{Force, print};
-use crate::trace::{Column, Sheet, Table};
+use crate::trace::{Column, Sheet, Table, Unshown};
 use levels::Level;
 use piers::Used;
 
@@ -67,33 +67,83 @@ fn grows(p: &Used) -> bool {
     uses.is_none_or(|(b, a)| more(a.0, b.0)) || shares.is_none_or(|(b, a)| more(a, b))
 }
 
+/// Of each wall that gets more by the removal and does not carry its share alone after it, the length used most.
+fn over(d: &Direction) -> Vec<&Used> {
+    let used = |p: &Used| p.after.as_ref().map_or(0.0, |a| a.0);
+    let mut out: Vec<&Used> = Vec::new();
+    for p in d.piers.iter().filter(|p| grows(p) && used(p) > 1.0) {
+        match out.iter_mut().find(|o| o.wall == p.wall && o.storey == p.storey) {
+            Some(known) if used(p) > used(known) => *known = p,
+            Some(_) => {}
+            None => out.push(p),
+        }
+    }
+    out
+}
+
+/// Use before and after, in words.
+fn uses_of(p: &Used) -> String {
+    let ratio = |x: &Option<(f64, String)>| x.as_ref().map_or("none".to_owned(), |u| print::ratio(u.0));
+    format!("use {} before the removal, {} after it", ratio(&p.before), ratio(&p.after))
+}
+
+/// What is to be shown of a direction, where walls that get more by the removal do not carry their share alone.
+fn hold_text(b: &Building, d: &Direction) -> Option<String> {
+    let name = |p: &&Used| format!("{}, {} ({})", p.wall, b.storeys[p.storey].mark, uses_of(p));
+    let walls: Vec<String> = over(d).iter().map(name).collect();
+    (!walls.is_empty()).then(|| {
+        format!(
+            "Before the wall comes down, show how the house stands against wind along {}: by the sheet of the whole \
+             building these walls get more by the removal and do not carry it alone: {}.",
+            d.along.word(),
+            walls.join("; ")
+        )
+    })
+}
+
 /// A hold point for every direction in which walls that get more by the removal do not carry their share
 /// alone after it, where the job does not rest on these figures anyhow.
 pub fn holds(job: &Job<'_>) -> Vec<(String, String)> {
     if counts(job.building) {
         return Vec::new();
     }
-    let over = |d: &Direction| {
-        let mut walls: Vec<&str> = Vec::new();
-        for p in d.piers.iter().filter(|p| grows(p) && p.after.as_ref().is_some_and(|(r, _)| *r > 1.0)) {
-            if !walls.contains(&p.wall.as_str()) {
-                walls.push(&p.wall);
-            }
-        }
-        walls.join(", ")
-    };
-    let text = |d: &Direction| {
-        let walls = over(d);
-        (!walls.is_empty()).then(|| {
-            let text = format!(
-                "Before the wall comes down, show how the house stands against wind along {}: on the sheet of the whole \
-                 building the lengths of {walls} get more by the removal and do not carry it, each taken alone.",
-                d.along.word()
-            );
-            (String::new(), text)
-        })
-    };
+    let text = |d: &Direction| hold_text(job.building, d).map(|text| (String::new(), text));
     job.whole.iter().filter_map(text).collect()
+}
+
+/// The same in the results, so that no failure waits in a table alone.
+fn unshown(s: &mut Sheet, job: &Job<'_>, d: &Direction) {
+    let hold = hold_text(job.building, d).and_then(|text| job.hold_of(&text));
+    for (n, p) in over(d).into_iter().enumerate() {
+        s.unshown(Unshown {
+            id: format!("alone-{}-{n}", d.along.word()),
+            clause: "6.2, first principles".to_owned(),
+            words: format!(
+                "{}, {}, {:.2} to {:.2} m, wind along {}",
+                p.wall,
+                job.building.storeys[p.storey].mark,
+                p.from / 1e3,
+                p.to / 1e3,
+                d.along.word()
+            ),
+            finding: format!("Taken alone: {}.", uses_of(p)),
+            ratio: p.after.as_ref().map(|a| a.0),
+            hold: hold.clone(),
+        });
+    }
+}
+
+/// Lengths that do not carry their wind alone and whose use the removal does not raise, in words.
+pub fn as_it_stands(job: &Job<'_>) -> Vec<String> {
+    if counts(job.building) {
+        return Vec::new();
+    }
+    let b = job.building;
+    let over = |p: &&Used| !grows(p) && p.after.as_ref().is_some_and(|a| a.0 > 1.0);
+    let name = |p: &Used| format!("{}, {}, {:.2} to {:.2} m", p.wall, b.storeys[p.storey].mark, p.from / 1e3, p.to / 1e3);
+    let mut out: Vec<String> = job.whole.iter().flat_map(|d| &d.piers).filter(over).map(name).collect();
+    out.dedup();
+    out
 }
 
 /// The sheet of the whole building.
@@ -134,6 +184,8 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         s.table(|| uses(b, d));
         if counts {
             verdict(&mut s, d);
+        } else {
+            unshown(&mut s, job, d);
         }
     }
     vec![Section::plain("whole", "The whole building against wind", s)]
@@ -203,7 +255,7 @@ fn uses(b: &Building, d: &Direction) -> Table {
             percent(p.share_after),
             ratio(&p.before),
             ratio(&p.after),
-            p.after.as_ref().or(p.before.as_ref()).map_or_else(String::new, |(_, what)| what.clone()),
+            governs(p),
         ]
     });
     let rows: Vec<Vec<String>> = rows.collect();
@@ -223,6 +275,15 @@ fn uses(b: &Building, d: &Direction) -> Table {
         ],
         rows,
         strong,
+    }
+}
+
+/// What governs, of before and after where they differ.
+fn governs(p: &Used) -> String {
+    match (&p.before, &p.after) {
+        (Some((_, before)), Some((_, after))) if before != after => format!("{before}; after {after}"),
+        (_, Some((_, what))) | (Some((_, what)), None) => what.clone(),
+        (None, None) => String::new(),
     }
 }
 

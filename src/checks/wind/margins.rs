@@ -17,17 +17,20 @@ pub fn table(s: &mut Sheet, job: &Job<'_>, derived: Option<&Derived>) {
     if !s.recording() {
         return;
     }
-    let mut found: Vec<(String, Margin)> = Vec::new();
+    let mut found: Vec<Found> = Vec::new();
     let wind = job.wind.as_ref();
     for ret in &job.building.returns {
         let Ok(wind) = wind else { continue };
         let inputs = Inputs::new(job, ret, wind);
         let passes = |times: f64| of_return::passes(&inputs, Change { wind: times, ..Change::NONE });
-        found.push((ret.mark.clone(), margin(passes)));
+        let of_site = inputs.wind.overall / wind.site_at(job.building, ret).overall;
+        found.push(Found { mark: ret.mark.clone(), margin: margin(passes), of_site: of_site.base() });
     }
     for p in &job.building.panels {
         let Ok(m) = panel_sheet::model(job, p) else { continue };
-        found.push((p.mark.clone(), margin(|times| panels::remedy::passes(&blown(&m, times), &job.annex))));
+        let of_site = wind.map_or(1.0, |w| (m.q_net / w.of_panel(p)).base());
+        let margin = margin(|times| panels::remedy::passes(&blown(&m, times), &job.annex));
+        found.push(Found { mark: p.mark.clone(), margin, of_site });
     }
     if found.is_empty() {
         return;
@@ -38,7 +41,8 @@ pub fn table(s: &mut Sheet, job: &Job<'_>, derived: Option<&Derived>) {
     s.note(
         "Found by search on the same checks with every pressure of the wind and the roof's uplift grown alike; the pressure \
          grows with the square of the velocity. Returns and panels alone: footings, straps and the whole building have their \
-         own ratios. Rounded down.",
+         own ratios. Where a return or panel states a pressure of its own, the velocities are those at which the site \
+         gives it. Rounded down.",
     );
 }
 
@@ -65,6 +69,14 @@ pub enum Margin {
     Beyond,
     /// It does not pass without wind.
     Never,
+}
+
+/// How far the wind may grow at one return or panel.
+struct Found {
+    mark: String,
+    margin: Margin,
+    /// Its pressure over what the site gives there: not 1 where it is stated.
+    of_site: f64,
 }
 
 /// From what is there upwards while it passes, or downwards until it does.
@@ -106,14 +118,15 @@ pub fn margin(passes: impl Fn(f64) -> bool) -> Margin {
 }
 
 /// Of the site, where there is one, map value and basic velocity, mm/s.
-fn shown(found: &[(String, Margin)], site: Option<(f64, f64)>) -> Table {
+fn shown(found: &[Found], site: Option<(f64, f64)>) -> Table {
     let down = |x: f64, step: f64| (x / step + 1e-9).floor() * step;
     let speed = |mm_s: f64| format!("{:.1}", down(mm_s / 1e3, 0.1));
-    let row = |(mark, margin): &(String, Margin)| {
+    let as_it_is = |mm_s: f64| format!("{:.1}", mm_s / 1e3);
+    let row = |Found { mark, margin, of_site }: &Found| {
         let only = |text: String| vec![mark.clone(), text, String::new(), String::new()];
         let mut row = match margin {
             Margin::Times(times) => {
-                let faster = times.sqrt();
+                let faster = (times * of_site).sqrt();
                 let (v_map, v_b) = site.unwrap_or_default();
                 vec![
                     mark.clone(),
@@ -136,7 +149,7 @@ fn shown(found: &[(String, Margin)], site: Option<(f64, f64)>) -> Table {
     }
     let mut rows: Vec<Vec<String>> = found.iter().map(row).collect();
     if let Some((v_map, v_b)) = site {
-        rows.insert(0, vec!["as it is".to_owned(), "1".to_owned(), speed(v_map), speed(v_b)]);
+        rows.insert(0, vec!["as it is".to_owned(), "1".to_owned(), as_it_is(v_map), as_it_is(v_b)]);
     }
     Table { caption: "Wind at which each reaches 1.00: the pressure over what it is now, and the velocities of the worst side".to_owned(), columns, rows, strong: vec![] }
 }
