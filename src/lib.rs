@@ -91,7 +91,12 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     Ok(Sheeted { building, results, typeset, file_name })
 }
 
-fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Vec<u8>)>, Error> {
+/// The photographs of a job, each with the name by which its pack calls it, turned upright and scaled to print.
+/// `folder` is where the job file lies.
+///
+/// # Errors
+/// [`Error`] where a file cannot be read or is no picture.
+pub fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Vec<u8>)>, Error> {
     let taken_in = |(n, p): (usize, &building::Photograph)| {
         let path = folder.join(&p.file);
         let shown = path.display().to_string();

@@ -1,7 +1,7 @@
 //! The plan led down to the ground: what every wall carries, before the removal and after it.
 
 use super::found::{REACH, stands};
-use super::{Along, Before, Building, Load, PlanWall, heights};
+use super::{Along, Before, Building, FloorKind, Load, PlanWall, heights};
 use crate::quantity::{Force, Length, LineLoad};
 use crate::solve::descent::{self, Axis, Descent, Floor, From, Model, Opening, Place, Support, Wall};
 use crate::standards::annex::Annex;
@@ -111,7 +111,9 @@ impl TakeDown {
         let met = b.returns.iter().find(|r| r.mark == mark).map(|r| r.junction.to.as_str());
         let met = met.and_then(|to| b.plan.iter().find(|w| w.mark == to));
         let first = met.is_none_or(|m| away(m, end(from)) <= away(m, end(to)));
-        let place = |s: f64| if first { s - from } else { to - s };
+        // A return begins at the face of the wall that it meets; what stands within that wall stands at its face.
+        let face = met.and_then(|m| b.build_up(&m.build_up)).map_or(0.0, |u| u.thickness().base() / 2.0);
+        let place = |s: f64| ((if first { s - from } else { to - s }) - face).max(0.0);
         let leaf = b
             .plan
             .iter()
@@ -182,7 +184,12 @@ impl State {
     /// What brings a load, by its mark.
     pub fn name(&self, b: &Building, by: From) -> String {
         match by {
-            From::Floor(i) => format!("floor {}", b.floors[i].mark),
+            From::Floor(i) => {
+                let floor = &b.floors[i];
+                let roof = b.storey(&floor.storey).is_some_and(|s| s.floor_above == FloorKind::Roof);
+                let word = if roof { "roof" } else { "floor" };
+                if floor.mark == word { word.to_owned() } else { format!("{word} {}", floor.mark) }
+            }
             From::Wall(i) => format!("{} above", b.plan[self.walls[i].wall].mark),
             From::Beam(i, _) => format!("beam {}", b.beams[i].mark),
             From::Own => "own weight".to_owned(),

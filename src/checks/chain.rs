@@ -32,7 +32,9 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         strong,
     });
     if links.iter().any(|l| l.proof == Proof::Assumed) {
-        s.note("A link that is assumed makes the whole result conditional: each stands among the hold points.");
+        s.note(
+            "A link that is assumed makes the whole result conditional: each stands among the hold points.",
+        );
     }
     s.heading(1, "Disproportionate collapse");
     s.note(class(job.building));
@@ -118,7 +120,11 @@ fn unshown(job: &Job<'_>, l: &Link) -> String {
     }
     let holds: Vec<String> =
         super::whole::holds(job).into_iter().filter_map(|(_, text)| job.hold_of(&text)).collect();
-    if holds.is_empty() { String::new() } else { format!("not by calculation: hold point {}", holds.join(", ")) }
+    if holds.is_empty() {
+        String::new()
+    } else {
+        format!("not by calculation: hold point {}", holds.join(", "))
+    }
 }
 
 /// Whether a link speaks of junctions that were seen not to be bonded.

@@ -52,7 +52,11 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             s.unshown(Unshown {
                 id: format!("none-{}", e.mark),
                 clause: "statics".to_owned(),
-                words: format!("straps, {}", e.mark),
+                words: if b.floor_edges.len() > 1 {
+                    format!("straps, {}", e.mark)
+                } else {
+                    "straps".to_owned()
+                },
                 finding: "None is known to hold the wall to the floor.".to_owned(),
                 ratio: None,
                 hold: job.hold_of(&links::edge_text(b, e)),

@@ -2,7 +2,8 @@
 
 use super::diaphragm;
 use crate::building::{
-    Building, CollapseClass, DiaphragmProof, FloorEdge, Footing, Head, Link, Path, Proof, Return, Stands, StrapsKnown,
+    Building, CollapseClass, DiaphragmProof, FloorEdge, Footing, Head, Link, Path, Proof, Return, Stands,
+    StrapsKnown,
 };
 
 /// The links of the load path, in order, each with what is to be seen where nothing is said of it.
@@ -36,9 +37,24 @@ pub fn links(b: &Building) -> Vec<Link> {
                 }]
             }));
         }
+        let untold = if name == "footing" { untold(b, &given) } else { Vec::new() };
         out.extend(given.into_iter().flat_map(|l| proven(b, l)));
+        if !untold.is_empty() {
+            let told =
+                Link { link: name.to_owned(), proof: Proof::Calculated, words: String::new(), of: untold };
+            out.extend(under(b, &told));
+        }
     }
     out
+}
+
+/// Returns with a footing of which no link speaks, where links speak of others by name.
+fn untold(b: &Building, given: &[&Link]) -> Vec<String> {
+    if given.iter().any(|l| l.of.is_empty()) {
+        return Vec::new();
+    }
+    let told = |mark: &String| given.iter().any(|l| l.of.contains(mark));
+    b.footings().filter(|(r, f)| !told(&r.mark) && !told(&f.mark)).map(|(r, _)| r.mark.clone()).collect()
 }
 
 /// Marks of the walls outside this pack that hold the heads of returns.
@@ -72,9 +88,8 @@ fn under(b: &Building, link: &Link) -> Vec<Link> {
     let (here, rest): (Vec<String>, Vec<String>) =
         about.into_iter().partition(|m| b.footings().any(|(r, f)| r.mark == *m || f.mark == *m));
     // Calculated for a footing that nobody saw: what the figures rest on is assumed.
-    let unseen = |m: &String| {
-        b.footings().find(|(r, f)| f.proof == Proof::Assumed && (r.mark == *m || f.mark == *m))
-    };
+    let unseen =
+        |m: &String| b.footings().find(|(r, f)| f.proof == Proof::Assumed && (r.mark == *m || f.mark == *m));
     let mut out = Vec::new();
     let seen: Vec<String> = here.iter().filter(|m| unseen(m).is_none()).cloned().collect();
     if !seen.is_empty() {
@@ -135,7 +150,8 @@ fn proven(b: &Building, link: &Link) -> Vec<Link> {
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
         "bracing wall" => {
-            !b.floors.is_empty() || !b.returns.is_empty() && held_elsewhere(b).is_empty() && !shares_elsewhere(b)
+            !b.floors.is_empty()
+                || !b.returns.is_empty() && held_elsewhere(b).is_empty() && !shares_elsewhere(b)
         }
         "junction" => !b.returns.is_empty(),
         // Floors say below how far they are calculated.

@@ -67,7 +67,11 @@ fn beams(job: &Job<'_>) -> Vec<Vec<String>> {
     for (stack, carried) in before.walls.iter().zip(&before.down.walls) {
         let wall = &b.plan[stack.wall];
         if wall.removed && b.storeys[stack.storey].mark == b.removed.storey {
-            out.push(row(wall.mark.clone(), "all that it carries at its head, before".to_owned(), carried.head.total()));
+            out.push(row(
+                wall.mark.clone(),
+                "all that it carries at its head, before".to_owned(),
+                carried.head.total(),
+            ));
         }
     }
     out

@@ -98,9 +98,7 @@ pub fn holds(b: &Building) -> Vec<Hold> {
     });
     let buried =
         b.footings().filter(|(r, f)| f.proof == Proof::Assumed && !told("footing", [&r.mark, &f.mark]));
-    let footings = buried.map(|(r, f)| {
-        (links::dig(r, f), vec![r.mark.clone(), f.mark.clone()], None)
-    });
+    let footings = buried.map(|(r, f)| (links::dig(r, f), vec![r.mark.clone(), f.mark.clone()], None));
     let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None));
     let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None));
     let mut all: Vec<(String, Vec<String>, Option<String>)> = Vec::new();

@@ -52,7 +52,10 @@ fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
                 id: format!("leans-{}", r.mark),
                 clause: "statics".to_owned(),
                 words: format!("support by {}", r.mark),
-                finding: format!("An edge of this panel is held by {}, which is not adequate on its own sheet.", r.mark),
+                finding: format!(
+                    "An edge of this panel is held by {}, which is not adequate on its own sheet.",
+                    r.mark
+                ),
                 ratio: None,
                 hold: None,
             });

@@ -101,10 +101,7 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp, wind: Wi
         ties: build_up.ties.map(|n| {
             ((1.0 / n.base()).sqrt(), format!("{} ties per m²", print::significant(n.base() * 1e6)))
         }),
-        wind: Some((
-            wind,
-            Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""),
-        )),
+        wind: Some((wind, Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""))),
         precompression: Some((
             loaded,
             Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""),

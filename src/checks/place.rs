@@ -159,8 +159,8 @@ mod tests {
     fn a_return_begins_where_the_wall_is_cut() {
         let b = read(DEMO);
         let [r1, r2] = [0, 1].map(|i| of_return(&b, &b.returns[i]).expect("it has a position"));
-        assert_eq!((r1.0.1.round(), r1.1.1.round()), (890.0, 0.0));
-        assert_eq!((r2.0.1.round(), r2.1.1.round()), (2810.0, 3600.0));
+        assert_eq!((r1.0.1.round(), r1.1.1.round()), (1029.0, 139.0));
+        assert_eq!((r2.0.1.round(), r2.1.1.round()), (2760.0, 3550.0));
     }
 
     #[test]

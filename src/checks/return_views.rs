@@ -97,8 +97,10 @@ fn elevation(
     let flat = |f: Force| f > Force::ZERO;
     let through_floor = r.path == Path::UpAndDown;
     // Where the storey shares by stiffness the front of this return does not come into it.
-    let by_stiffness =
-        through_floor && b.stability.as_ref().is_some_and(|st| st.share_by == ShareBy::Stiffness && st.walls.iter().any(|w| w.mark == r.mark));
+    let by_stiffness = through_floor
+        && b.stability
+            .as_ref()
+            .is_some_and(|st| st.share_by == ShareBy::Stiffness && st.walls.iter().any(|w| w.mark == r.mark));
     ReturnElevation {
         mark: r.mark.clone(),
         length: m.l.base(),

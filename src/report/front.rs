@@ -48,7 +48,9 @@ pub fn sentence(results: &Results) -> String {
                     list(&distinct(&waiting))
                 )
             };
-            format!("{passes} The wall may come out only when each open hold point below is closed and signed.")
+            format!(
+                "{passes} The wall may come out only when each open hold point below is closed and signed."
+            )
         }
         Outcome::Adequate => {
             "Every check passes, and every link of the load path is calculated, held by a named rule, \

@@ -90,10 +90,7 @@ impl PlanWall {
     fn stretch(&self, from: f64, to: f64) -> Self {
         let at = |s: f64| {
             let share = s / self.length();
-            (
-                self.from.0 + share * (self.to.0 - self.from.0),
-                self.from.1 + share * (self.to.1 - self.from.1),
-            )
+            (self.from.0 + share * (self.to.0 - self.from.0), self.from.1 + share * (self.to.1 - self.from.1))
         };
         Self { from: at(from), to: at(to), openings: Vec::new(), ..self.clone() }
     }

@@ -30,13 +30,13 @@ fn loads_on_the_return_at_the_party_wall() {
     close(on.dead.base(), beam[0]);
     close(on.imposed.base(), beam[1]);
     close(on.uplift.base(), beam[2]);
-    // Middle of a bearing of 150 mm that begins at 0.80 m.
-    close(on.at.base(), 875.0);
+    // Middle of a bearing of 150 mm that begins at 0.80 m, from the face of the wall met, half of 215 mm off its line.
+    close(on.at.base(), 875.0 - 107.5);
     // Beside the beam the floors and the wall above stand on the first 0.80 m of the return itself.
     close(find("floor F1").dead.base(), f1 * 800.0);
     close(find("floor F2").imposed.base(), 1.5 * 2.3 * 800.0);
     close(find("bedroom wall above").dead.base(), (roof + wall) * 800.0);
-    close(find("bedroom wall above").at.base(), 400.0);
+    close(find("bedroom wall above").at.base(), 400.0 - 107.5);
     assert!(r1.loads.iter().all(|l| l.source == LED));
 }
 

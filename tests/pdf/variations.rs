@@ -1,13 +1,16 @@
 //! Nothing overlaps, leaves its place or is missing, on the demo jobs and on variations of them.
 
-use perpend::{check, draw, pack, report};
+use std::path::Path;
+
+use perpend::{check, draw, pack, photographs, report};
 
 use crate::jobs;
 
 fn flaws(name: &str, text: &str) -> Vec<String> {
     let (building, results) = draw(name, text).unwrap_or_else(|e| panic!("{name}: {e}\n{text}"));
     let data = report::pack(&building, &results, text, &perpend::digest(text));
-    let found = pack::inspect(&data, &[]).unwrap_or_else(|e| panic!("{name}: {e}"));
+    let files = photographs(&building, Path::new("jobs")).unwrap_or_else(|e| panic!("{name}: {e}"));
+    let found = pack::inspect(&data, &files).unwrap_or_else(|e| panic!("{name}: {e}"));
     pack::evict(2);
     found.iter().map(|flaw| format!("{name}: {flaw}")).collect()
 }

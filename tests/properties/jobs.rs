@@ -76,7 +76,10 @@ proptest! {
         match perpend::check(name, &text) {
             Ok((building, results)) => {
                 // What is valid comes to one of the four outcomes, and what fails is said to fail.
-                let fails = results.sections.iter().any(|s| s.sheet.verdicts.iter().any(|v| !v.holds));
+                let fails = results.sections.iter().any(|s| {
+                    let sheet = &s.sheet;
+                    sheet.verdicts.iter().any(|v| !v.holds) || sheet.unshown.iter().any(|u| u.hold.is_none())
+                });
                 prop_assert_eq!(fails, results.outcome.kind() == "not-adequate");
                 for section in &results.sections {
                     prop_assert!(section.sheet.verdicts.iter().all(|v| v.ratio >= 0.0), "{}", section.id);

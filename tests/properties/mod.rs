@@ -7,6 +7,7 @@ mod flange;
 mod floors;
 mod footing;
 mod found;
+mod honest;
 mod jobs;
 mod loads;
 mod outcome;

@@ -134,9 +134,12 @@ fn a_footing_not_seen_is_held() {
         of.sort();
         (of, results.outcome)
     };
-    // The link tells of R1, the footing of R2 for itself.
+    // Each link tells of its own.
     assert_eq!(holds(&text), (vec!["R1 F1".to_owned(), "R2 F2".to_owned()], Outcome::Conditional(5)));
-    let told = text
+    let start = text.find("[[links]]\nlink = \"footing\"").expect("a link");
+    let second = start + 9 + text[start + 9..].find("[[links]]").expect("another");
+    let end = second + text[second..].find("\n\n").expect("an empty line");
+    let told = format!("{}{}", &text[..second], &text[end..])
         .replace("measure the footing.\"\nfor = [\"R1\"]", "measure the footing.\"\nfor = [\"F1\", \"R2\"]");
     let (of, outcome) = holds(&told);
     assert_eq!((of, outcome), (vec!["F1 R2 R1 F2".to_owned()], Outcome::Conditional(4)));

@@ -27,6 +27,9 @@ fn one(floor: &Floor<'_>, piece: &Line<'_>) -> Option<FoundReturn> {
         true => piece.openings.first().map_or(near, |o| o.0) - far,
         false => far - piece.openings.last().map_or(near, |o| o.1),
     };
+    // Its line runs on to that of the wall met; it begins at the face.
+    let build_up = floor.build_up(met)?;
+    let length = (length - build_up.thickness().base() / 2.0).max(0.0);
     let row = floor.row(met);
     let s = piece.at;
     let half = piece.thickness / 2.0;
@@ -51,7 +54,7 @@ fn one(floor: &Floor<'_>, piece: &Line<'_>) -> Option<FoundReturn> {
         nearest_opening: opening.map(Length::new),
         to_end: edges.map(|e| Length::new(e.max(0.0))),
         to_next: [clear(low), clear(high)],
-        thickness: floor.build_up(met)?.loaded().1.thickness,
+        thickness: build_up.loaded().1.thickness,
         supported: supported(floor, met),
         strip: strip_height(&floor.around.storeys, floor.number),
         holds: length >= STIFFENS * floor.storey().clear_height.base(),

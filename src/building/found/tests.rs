@@ -117,7 +117,8 @@ fn two_pieces_stay_and_two_panels_lose_a_wall() {
     let marks: Vec<_> = found.returns.iter().map(|r| (r.mark.as_str(), r.meets.as_str())).collect();
     assert_eq!(marks, [("R1", "rear"), ("R2", "spine")]);
     let r1 = &found.returns[0];
-    assert_eq!((r1.length.base(), r1.tributary.base()), (1000.0, 3000.0));
+    // From the face of the wall met, half of 100 mm off its line.
+    assert_eq!((r1.length.base(), r1.tributary.base()), (950.0, 3000.0));
     // 3 m to either corner, less half the nib and, clear, half the wall there.
     assert_eq!(r1.to_end.map(|l| l.base()), [2950.0, 2950.0]);
     assert_eq!(r1.to_next.map(|l| l.map(|l| l.base())), [Some(2900.0), Some(2900.0)]);
@@ -165,9 +166,10 @@ fn a_nib_shorter_than_a_fifth_of_the_height_holds_nothing() {
         h.wall("gone").from = at(AS_IS, 3.0, y);
         h.find()
     };
-    let found = short(&mut h, 0.48);
+    // Its line begins 50 mm behind the face of the wall met.
+    let found = short(&mut h, 0.53);
     assert_eq!(found.panels.len(), 2, "2.40 m / 5 = 0.48 m is enough");
-    let found = short(&mut h, 0.47);
+    let found = short(&mut h, 0.52);
     assert_eq!(spans(&found), [(3000.0, 6000.0, vec!["west".to_owned(), "east".to_owned()])]);
     assert_eq!(found.panels[0].wall_at, Length::new(3000.0));
     assert!(!found.returns[0].holds);
@@ -238,7 +240,7 @@ fn a_return_ends_at_its_first_opening() {
         sill: Length::ZERO,
         height: Length::new(2000.0),
     });
-    assert_eq!(h.find().returns[1].length, Length::new(400.0));
+    assert_eq!(h.find().returns[1].length, Length::new(350.0));
 }
 
 #[test]

@@ -61,7 +61,8 @@ impl Lines {
     pub fn near(&self, stretch: Place, near: f64) -> Vec<usize> {
         let reach = rectangle(stretch, near);
         let reach = AABB::from_corners(reach.lower(), reach.upper());
-        let mut out: Vec<usize> = self.0.locate_in_envelope_intersecting(reach).map(|area| area.data).collect();
+        let mut out: Vec<usize> =
+            self.0.locate_in_envelope_intersecting(reach).map(|area| area.data).collect();
         out.sort_unstable();
         out
     }

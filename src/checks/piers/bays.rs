@@ -35,7 +35,9 @@ pub fn of(state: &State, lines: &Lines, i: usize, n: usize, h: Length) -> Vec<Ba
     let near = REACH + wall.thickness / 2.0;
     let stretch = Place { from: pier.from, to: pier.to, ..wall.place };
     let mut stops: Vec<f64> = Vec::new();
-    for (other, on) in lines.near(stretch, near).into_iter().map(|k| (&state.model.walls[k], &state.down.walls[k])) {
+    for (other, on) in
+        lines.near(stretch, near).into_iter().map(|k| (&state.model.walls[k], &state.down.walls[k]))
+    {
         if other.storey != wall.storey || other.place.along == wall.place.along {
             continue;
         }

@@ -18,6 +18,11 @@ pub struct Worst {
 }
 
 impl Worst {
+    /// The largest use of a section.
+    pub fn by_load(&self) -> f64 {
+        self.sections.iter().map(|s| s.2).fold(0.0, f64::max)
+    }
+
     /// The largest use and what governs it.
     pub fn largest(&self) -> (f64, String) {
         self.sections.iter().fold((self.slender, "slenderness".to_owned()), |worst, (_, c, ratio, words)| {

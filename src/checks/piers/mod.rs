@@ -43,6 +43,8 @@ pub struct Worked {
     pub model: PierModel,
     /// Largest use and what governs it, or the limit that was left.
     pub used: Result<(f64, String), Outside>,
+    /// Largest use of what it carries, slenderness left out.
+    pub by_load: f64,
 }
 
 /// What one pier is used in one state.
@@ -260,8 +262,9 @@ fn state(job: &Job<'_>, leaf: &State, i: usize, n: usize, (seen, known): (Seen<'
     let work = || {
         model::of(job, leaf, i, n, seen).map(|models| {
             let work = |model: PierModel| {
-                let used = matrix::run(&model, &job.annex).map(|worst| worst.largest());
-                Worked { model, used }
+                let worst = matrix::run(&model, &job.annex);
+                let by_load = worst.as_ref().map_or(0.0, matrix::Worst::by_load);
+                Worked { model, used: worst.map(|worst| worst.largest()), by_load }
             };
             models.into_iter().map(work).collect()
         })

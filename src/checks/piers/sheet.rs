@@ -43,7 +43,8 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     }
     // A limit that one leaves hides no failure of another. Of equals the first.
     let inside = judged.iter().flat_map(|u| u.after.worked.iter().flatten().map(move |w| (*u, w)));
-    let inside: Vec<_> = inside.filter_map(|(u, w)| Some((u, w, w.used.as_ref().ok()?.0))).collect();
+    // By what it carries: how slender it is says itself.
+    let inside: Vec<_> = inside.filter(|(_, w)| w.used.is_ok()).map(|(u, w)| (u, w, w.by_load)).collect();
     let worst = inside.iter().copied().reduce(|a, b| if b.2 > a.2 { b } else { a });
     if let Some((u, w, _)) = worst {
         s.heading(1, format!("The one of highest use that is judged: {}", place(b, u)));

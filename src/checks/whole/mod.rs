@@ -140,7 +140,9 @@ pub fn as_it_stands(job: &Job<'_>) -> Vec<String> {
     }
     let b = job.building;
     let over = |p: &&Used| !grows(p) && p.after.as_ref().is_some_and(|a| a.0 > 1.0);
-    let name = |p: &Used| format!("{}, {}, {:.2} to {:.2} m", p.wall, b.storeys[p.storey].mark, p.from / 1e3, p.to / 1e3);
+    let name = |p: &Used| {
+        format!("{}, {}, {:.2} to {:.2} m", p.wall, b.storeys[p.storey].mark, p.from / 1e3, p.to / 1e3)
+    };
     let mut out: Vec<String> = job.whole.iter().flat_map(|d| &d.piers).filter(over).map(name).collect();
     out.dedup();
     out

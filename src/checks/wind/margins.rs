@@ -164,6 +164,9 @@ mod tests {
             let Margin::Times(x) = margin(|times| times <= limit) else { panic!("{limit}") };
             assert!(x <= limit && limit - x < 2.0 * CLOSE, "{x} of {limit}");
         }
+        // A pressure that is stated at a quarter of the site's stands for half of its velocity.
+        let found = Found { mark: "P1".to_owned(), margin: Margin::Times(1.0), of_site: 0.25 };
+        assert_eq!(shown(&[found], Some((20e3, 24e3))).rows[1][1..], ["1.00", "10.0", "12.0"]);
         assert_eq!(margin(|_| true), Margin::Beyond);
         assert_eq!(margin(|_| false), Margin::Never);
     }

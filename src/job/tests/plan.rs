@@ -88,7 +88,7 @@ const SLIPS: &[Slip] = &[
     ),
     (
         "dead load without a source",
-        "source = \"Slates 0.75 kN/m2 on slope at 30 degrees, ceiling 0.25 kN/m2; snow by the job's own sheet.\"\n",
+        "source = \"Slates 0.75 kN/m2 on slope at 30 degrees, ceiling 0.25 kN/m2; snow from RH's snow calculation, page 1.\"\n",
         "",
         "area_loads.roof",
         &["`source` is missing"],
@@ -126,7 +126,7 @@ const SLIPS: &[Slip] = &[
         "mark = \"R1\"\nhead",
         "mark = \"R1\"\nlength = \"1150 mm\"\nhead",
         "\"1150 mm\"",
-        &["not as long as its wall on the plan", "950 mm long on the plan"],
+        &["not as long as its wall on the plan", "842 mm long on the plan"],
     ),
     (
         "head held by the wall that comes out",
@@ -210,7 +210,7 @@ fn each_slip_in_a_plan_is_said_where_it_stands() {
 fn loads_given_by_hand_stay_as_they_are() {
     let text = PLAN.replacen(
         "[returns.junction]\nbonded = false\nproof = \"seen\"\nwords = \"Straight joint",
-        "[[returns.loads]]\nwhat = \"beam B1\"\ndead = \"20 kN\"\nimposed = \"13 kN\"\nat = \"875 mm\"\n\n[returns.junction]\nbonded = false\nproof = \"seen\"\nwords = \"Straight joint",
+        "[[returns.loads]]\nwhat = \"beam B1\"\ndead = \"20 kN\"\nimposed = \"13 kN\"\nat = \"767 mm\"\n\n[returns.junction]\nbonded = false\nproof = \"seen\"\nwords = \"Straight joint",
         1,
     );
     let b = read("plan.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
@@ -223,7 +223,7 @@ fn loads_given_by_hand_stay_as_they_are() {
 fn what_the_job_leaves_out_comes_from_the_plan() {
     let b = read("plan.toml", PLAN).unwrap_or_else(|r| panic!("{}", r.render(false)));
     let r = &b.returns[1];
-    assert_eq!((r.length.base(), r.tributary_width.base(), r.height.base()), (1250.0, 4000.0, 2450.0));
+    assert_eq!((r.length.base(), r.tributary_width.base(), r.height.base()), (1117.5, 4000.0, 2450.0));
     assert_eq!((r.junction.to.as_str(), r.junction.thickness.base()), ("flank wall", 102.5));
     // Two storeys of wall are met, 2.70 and 2.40 m.
     assert_eq!((r.supported_wall_height.base(), r.nearest_opening), (5100.0, None));
@@ -239,7 +239,14 @@ fn what_the_job_leaves_out_comes_from_the_plan() {
 #[test]
 fn a_plan_alone_is_a_job() {
     let (a, z) = (PLAN.find("[[returns]]").unwrap_or(0), PLAN.find("[collapse]").unwrap_or(0));
-    let text = format!("{}{}", &PLAN[..a], &PLAN[z..]).replace("for = [\"R1\", \"R2\"]", "");
+    let text = format!("{}{}", &PLAN[..a], &PLAN[z..]);
+    let links = text.find("[[links]]").unwrap_or(0);
+    let after = text.find("[[assumptions]]").unwrap_or(0);
+    let text = format!(
+        "{}[[links]]\nlink = \"wind face\"\nproof = \"calculated\"\n\n{}",
+        &text[..links],
+        &text[after..]
+    );
     let b = read("plan.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
     assert_eq!(b.found.added, ["R1", "R2", "P1", "P2"]);
     assert!(b.returns.iter().all(|r| !r.loads.is_empty() && r.head == crate::building::Head::Free));

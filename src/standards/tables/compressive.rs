@@ -60,7 +60,9 @@ pub fn k(unit: UnitKind, group: Group, laid_flat: bool) -> Result<Looked<f64>, O
             ));
         }
     };
-    let looked = Looked::new(value, "UK NA Table NA.4", source).row("unit", unit).row("group", if group == Group::One { "1" } else { "2" });
+    let looked = Looked::new(value, "UK NA Table NA.4", source)
+        .row("unit", unit)
+        .row("group", if group == Group::One { "1" } else { "2" });
     Ok(if laid_flat { looked.row("laid", "flat") } else { looked })
 }
 
