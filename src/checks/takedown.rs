@@ -137,7 +137,7 @@ fn weights(b: &Building) -> Table {
         } else {
             "; uplift from the wind sheet"
         };
-        let from = format!("{from}{lift}");
+        let from = format!("{}{lift}", if lift.is_empty() { &from } else { from.trim_end_matches('.') });
         vec![a.name.clone(), area(a.dead), area(a.imposed), area(a.uplift), from]
     });
     Table {

@@ -292,7 +292,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     };
     found::complete(&mut building, found);
     // What the wind lifts is part of what the plan leads down.
-    for words in crate::wind::place::odd(&building).into_iter().chain(crate::wind::routes::odd(&building)) {
+    let wind = crate::wind::place::odd(&building).into_iter().chain(crate::wind::routes::odd(&building));
+    for words in wind.chain(crate::wind::stated_low(&building)) {
         reader.warn(words);
     }
     let unknown = crate::wind::roof::lift(&mut building);

@@ -119,6 +119,7 @@ fn codes(b: &Building) -> Vec<String> {
         en1991_1_4::EDITION.to_owned(),
         en1996::EDITION.to_owned(),
         "Approved Document A, 2013 edition, for rules printed beside the calculation".to_owned(),
+        "BS EN 772-1, BS EN 845-1, BS EN 998-2, BS EN 1991-1-1 and BS 5628-1 where a sheet names them".to_owned(),
         "Figures of the standards were entered from memory and recalculated where possible; each carries its \
          confidence (H, M, L). Check them against the purchased standard."
             .to_owned(),

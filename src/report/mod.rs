@@ -203,7 +203,8 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
     });
     let unshown = s.sheet.unshown.iter().map(|u| data::Scheduled {
         mark: own(&u.words).0,
-        check: own(&u.words).1,
+        // Its words name the thing: no title before them.
+        check: if mark.is_empty() { u.words.clone() } else { own(&u.words).1 },
         demand: String::new(),
         resistance: String::new(),
         ratio: u.ratio.map_or_else(String::new, print::ratio),

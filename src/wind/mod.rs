@@ -120,6 +120,28 @@ impl Wind {
     }
 }
 
+/// Returns and panels that state less wind than the site gives them, a sentence each.
+pub fn stated_low(b: &Building) -> Vec<String> {
+    let own = b.returns.iter().any(|r| r.wind.is_some()) || b.panels.iter().any(|p| p.wind.is_some());
+    let Some(wind) = own.then(|| pressures(&mut Sheet::silent(), b, &Annex::UK).ok()).flatten() else {
+        return Vec::new();
+    };
+    let words = |mark: &str, stated: Stress, site: Stress| {
+        (stated < site * 0.995).then(|| {
+            let show = |q: Stress| crate::quantity::print::show("q_net", q.dynamic());
+            format!(
+                "wind: {mark} states {}, less than the {} that the site gives there: whoever states it answers for the \
+                 difference",
+                show(stated),
+                show(site)
+            )
+        })
+    };
+    let of_return = |r: &Return| words(&r.mark, r.wind.as_ref()?.value, wind.site_at(b, r).overall);
+    let of_panel = |p: &Panel| words(&p.mark, p.wind.as_ref()?.value, wind.of_panel(p));
+    b.returns.iter().filter_map(of_return).chain(b.panels.iter().filter_map(of_panel)).collect()
+}
+
 /// Height over ground of the wind face that the floor over storey `k` collects; the ground lies under the lowest floor
 /// by what the building is higher than its storeys.
 fn collected_up_to(b: &Building, k: usize) -> Length {

@@ -138,7 +138,7 @@ fn inward(s: &mut Sheet, site: &Site, c: Case, m2: f64, c_sd: Num) -> Result<Str
     if c.zone != Zone::D {
         return Ok(Stress::ZERO);
     }
-    let side = format!("wind onto {}, above", c.onto.side.word());
+    let side = format!("wind onto the {} side, above", c.onto.side.word());
     given!(s, "peak pressure, inward", &side, q_p = c.onto.q_p);
     let look = c_pe(Zone::D, c.r_hd.base(), m2).map_err(out)?;
     lookup!(s, "Table 7.1", "windward wall", c_D = look, Num::new(1.0));
@@ -152,7 +152,7 @@ fn outward(s: &mut Sheet, site: &Site, c: Case, m2: f64, c_sd: Num) -> Result<St
     if c.zone == Zone::D {
         return Ok(Stress::ZERO);
     }
-    let side = format!("wind onto {}, above", c.onto.side.word());
+    let side = format!("wind onto the {} side, above", c.onto.side.word());
     given!(s, "peak pressure, outward", &side, q_o = c.onto.q_p);
     let look = c_pe(c.zone, c.r_hd.base(), m2).map_err(out)?;
     lookup!(s, "Table 7.1", "suction of its zone", c_z = look, Num::new(1.0));

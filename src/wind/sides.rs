@@ -39,8 +39,10 @@ pub fn by_sector(
         let (sector, bearing, _) = worst.ok_or_else(missing)?;
         chosen.push((side, sector, bearing));
     }
-    let heads: Vec<String> =
-        chosen.iter().map(|(side, _, bearing)| format!("onto {}, from {bearing}°", side.word())).collect();
+    let heads: Vec<String> = chosen
+        .iter()
+        .map(|(side, _, bearing)| format!("onto the {} side, from {bearing}°", side.word()))
+        .collect();
     s.note(
         "Onto each side the bearing within 45° of its square that gives the greatest pressure (UK Table NA.1, in steps of \
          30°); north is that of the plan.",

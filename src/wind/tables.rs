@@ -20,7 +20,7 @@ pub fn pressures(s: &mut Sheet, b: &Building, site: &Site, d: &Derived) {
                 "Wind onto each side of the plan, the same from all directions".to_owned()
             },
             columns: vec![
-                Column::words("onto"),
+                Column::words("onto the side"),
                 Column::words("from"),
                 Column::numbers("basic velocity, m/s"),
                 Column::numbers("peak pressure, kN/m²"),
@@ -60,21 +60,21 @@ fn places(b: &Building, d: &Derived) -> Table {
     }
     for p in &d.panels {
         let place = p.place.map_or_else(
-            || "place not on the plan".to_owned(),
+            || "place not given: the corner zone".to_owned(),
             |x| format!("on {}, zone {}", x.side.word(), p.zone),
         );
         let own = b.panels.iter().find(|x| x.mark == p.mark).and_then(|x| x.wind.as_ref()).map(|c| c.value);
         rows.push(row(&p.mark, &place, [Some(p.inward), Some(p.outward)], p.worst, own));
     }
+    let any = rows.iter().any(|row| !row[5].is_empty());
     let mut columns = vec![
         Column::words("where"),
         Column::words("which"),
         Column::numbers("inward"),
         Column::numbers("outward"),
-        Column::numbers("of the site"),
+        Column::numbers(if any { "of the site" } else { "used" }),
         Column::words("stated, taken"),
     ];
-    let any = rows.iter().any(|row| !row[5].is_empty());
     if !any {
         columns.pop();
         rows.iter_mut().for_each(|row| drop(row.pop()));

@@ -223,6 +223,23 @@ fn a_return_may_state_its_own() {
     assert!(refused.contains("where the floor shares by stiffness"), "{refused}");
 }
 
+/// What states less than its site gives is read, and said at the front.
+#[test]
+fn stating_less_than_the_site_is_said() {
+    let rear = include_str!("../../jobs/rear-opening.toml");
+    let place = rear.find("[[returns]]").expect("returns");
+    let warned = |mark: &str, value: &str| {
+        let (before, after) = rear.split_at(place);
+        let own =
+            format!("mark = \"{mark}\"\nwind = {{ value = \"{value} kN/m2\", reason = \"Sheltered.\" }}");
+        let job = format!("{before}{}", after.replacen(&format!("mark = \"{mark}\""), &own, 1));
+        let (b, _) = perpend::check("own.toml", &job).unwrap_or_else(|e| panic!("{e}"));
+        b.warnings.iter().filter(|w| w.contains(&format!("{mark} states"))).count()
+    };
+    assert_eq!([warned("R1", "0.60"), warned("R1", "0.40")], [0, 1]);
+    assert_eq!([warned("P1", "0.80"), warned("P1", "0.40")], [0, 1]);
+}
+
 /// One edge of the floor holds both panels of the flank wall: its straps take the pressure of the one in the corner.
 #[test]
 fn straps_take_the_hardest_panel_they_hold() {

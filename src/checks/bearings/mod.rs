@@ -116,7 +116,7 @@ pub fn remarks(s: &mut Sheet, bearings: &[&Bearing]) {
     returns.dedup();
     let returns = returns.join(", ");
     s.note(format!(
-        "Clause 6.1.3, its figures and paragraph numbers are from memory, check against the standard. Pressing with \
+        "Clause 6.1.3, its figures and paragraph numbers are from memory, check against the standard (M). Pressing with \
          imposed load leading (1.35 G + 1.5 Q) decides: no other combination brings more vertical load; the moment of the \
          wind in plane is on the sheet of each return. The design strength is the wall's, as there: the reduction for a \
          small plan area (6.1.2.1(3)) goes with the plan area of the wall, not with the area loaded, and 6.1.3 does not \

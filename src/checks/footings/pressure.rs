@@ -71,7 +71,7 @@ pub fn common(s: &mut Sheet, st: &Stands<'_>) -> (Length, Length, Force) {
     };
     let L = length(st);
     let source = if f.density.reason.is_empty() {
-        "EN 1991-1-1 Table A.1, plain concrete; from memory, check against the standard".to_owned()
+        "EN 1991-1-1 Table A.1, plain concrete; from memory, check against the standard (H)".to_owned()
     } else {
         format!("stated: {}", f.density.reason)
     };

@@ -98,7 +98,7 @@ pub fn enough(ties: PerArea) -> bool {
 
 /// Whether the ties are enough in number to let leaves share.
 pub fn counted(s: &mut Sheet, ties: Option<PerArea>, phase: &str) -> bool {
-    let source = "6.5, 8.5.2.2, UK: from memory, check against the standard";
+    let source = "6.5, 8.5.2.2, UK: from memory, check against the standard (M)";
     let Some(number) = ties else {
         if phase == "after" {
             let words = "wall ties of at least 2.5 per m²";

@@ -80,7 +80,7 @@ fn plan(b: &Building, site: &Site, d: &Derived, (along, n): (Along, usize)) -> R
     let word = if along == Along::X { "x" } else { "y" };
     Ok(WindPlan {
         name: format!("wind-{word}"),
-        words: format!("wind along {word}, onto {}{from}", onto.side.word()),
+        words: format!("wind along {word}, onto the {} side{from}", onto.side.word()),
         size,
         between: if drawn { party_lines(b, [x, y]) } else { Vec::new() },
         wind: match onto.side {
