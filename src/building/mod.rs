@@ -29,11 +29,11 @@ pub use site::{
 };
 pub use things::{
     Arching, Assumption, Bearing, Before, BracingWall, Edge, Flange, Footing, FromAbove, Head, HoldPoint,
-    Link, Load, Padstone, Panel, Photograph, Removed, Return, Span, Stability,
+    Link, Load, Padstone, Panel, PanelOpening, Photograph, Removed, Return, Span, Stability,
 };
 pub use words::{
-    Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Joists, PanelRoute, Path, Proof,
-    Restraint, ShareBy, Sharing, Side, Stands, Status, StrapsKnown, WindRoute,
+    Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Frame, Joists, PanelRoute, Path,
+    Proof, Restraint, ShareBy, Sharing, Side, Stands, Status, StrapsKnown, WindRoute,
 };
 
 /// Everything a pack is made from.

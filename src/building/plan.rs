@@ -1,6 +1,6 @@
 //! The plan: walls, floors and beams as they lie; metres of the plan in mm.
 
-use super::Along;
+use super::{Along, Frame};
 use crate::quantity::{Length, LineLoad, Stress};
 
 /// A point of the plan, (x, y).
@@ -40,6 +40,8 @@ pub struct PlanOpening {
     pub sill: Length,
     /// Height of the opening.
     pub height: Length,
+    /// How its frame passes the wind on.
+    pub frame: Frame,
 }
 
 /// What a floor or roof weighs and carries, per area on plan.

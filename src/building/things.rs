@@ -1,7 +1,7 @@
 //! What is checked and what carries it: returns, panels, bracing walls, links, hold points.
 
 use super::{
-    Acts, Along, BaseJoint, Cause, Ends, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
+    Acts, Along, BaseJoint, Cause, Ends, Frame, PanelRoute, Path, Proof, Restraint, ShareBy, Sharing, Stands,
 };
 use crate::quantity::{Force, Length, LineLoad, Moment, Num, Stress, Weight};
 
@@ -288,6 +288,23 @@ pub struct Span {
     pub left: Edge,
     /// Right edge.
     pub right: Edge,
+    /// Doors and windows from left to right, apart from each other and from the ends.
+    pub openings: Vec<PanelOpening>,
+}
+
+/// A door or window of a panel.
+#[derive(Clone, Debug, PartialEq)]
+pub struct PanelOpening {
+    /// From the left end of the panel to it, seen from outside.
+    pub at: Length,
+    /// Width.
+    pub width: Length,
+    /// Height of the sill above the foot of the panel; nil for a door.
+    pub sill: Length,
+    /// Height of the opening.
+    pub height: Length,
+    /// How its frame passes the wind on.
+    pub frame: Frame,
 }
 
 /// What resists the arch thrust.

@@ -48,6 +48,18 @@ WindRoute {
     Charts = "charts",
 });
 
+choice!(/// How the frame of a door or window passes its wind on to the wall.
+Frame {
+    /// To the two jambs.
+    Jambs = "jambs",
+    /// All round.
+    AllRound = "all round",
+    /// To head and sill; of a door to the head alone.
+    HeadAndSill = "head and sill",
+    /// Nobody knows: the worst of the three.
+    Unknown = "unknown",
+});
+
 choice!(/// What is above a storey.
 FloorKind {
     /// Joists and boards.

@@ -44,5 +44,6 @@ fn section<'a>(job: &'a Job<'_>, bearings: &[&'a Bearing]) -> Section {
         title: format!("Bearing of {} on {}", bearings[0].beam, list(&|x| &x.on, " and ")),
         sheet,
         drawings,
+        leans: Vec::new(),
     }
 }

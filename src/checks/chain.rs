@@ -11,8 +11,15 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let links = links::links(job.building);
     let drawings = job.drawings(|| [sketch::chain(&view(job, &links))]);
     named(&mut s, &drawings);
-    let strong: Vec<usize> =
-        links.iter().enumerate().filter(|(_, l)| l.proof == Proof::Assumed).map(|(i, _)| i).collect();
+    let fails = |l: &Link| l.proof == Proof::Calculated && calculated(job, l).0 == Known::Fails;
+    let open = |l: &Link| l.proof == Proof::Assumed || fails(l) || !unshown(job, l).is_empty();
+    let strong: Vec<usize> = links.iter().enumerate().filter(|(_, l)| open(l)).map(|(i, _)| i).collect();
+    let proof = |l: &Link| if fails(l) { "not adequate".to_owned() } else { l.proof.word().to_owned() };
+    let words = |l: &Link| match (fails(l), unshown(job, l)) {
+        (true, _) => join(&calculated(job, l).1, &l.words),
+        (false, hold) if !hold.is_empty() => join(&hold, &l.words),
+        _ => l.words.clone(),
+    };
     s.table(|| Table {
         caption: "Each link of the load path, from the wind face to the ground, and how it is known"
             .to_owned(),
@@ -26,7 +33,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
             .iter()
             .map(|l| {
                 let of = if l.of.is_empty() { "all".to_owned() } else { l.of.join(", ") };
-                vec![l.link.clone(), of, l.proof.word().to_owned(), l.words.clone()]
+                vec![l.link.clone(), of, proof(l), words(l)]
             })
             .collect(),
         strong,
@@ -35,6 +42,19 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         s.note(
             "A link that is assumed makes the whole result conditional: each stands among the hold points.",
         );
+    }
+    let fallen: Vec<&str> = job
+        .building
+        .returns
+        .iter()
+        .map(|r| r.mark.as_str())
+        .filter(|m| job.failing.iter().any(|f| f == m))
+        .collect();
+    if !fallen.is_empty() {
+        s.note(format!(
+            "Not adequate on sheets of their own: {}. What leans on them has no support, whatever this chain says of it.",
+            fallen.join(", ")
+        ));
     }
     s.heading(1, "Disproportionate collapse");
     s.note(class(job.building));
@@ -110,12 +130,13 @@ fn calculated(job: &Job<'_>, l: &Link) -> (Known, String) {
 }
 
 fn join(a: &str, b: &str) -> String {
-    if b.is_empty() { a.to_owned() } else { format!("{a}; {b}") }
+    if b.trim().is_empty() { a.to_owned() } else { format!("{a}; {b}") }
 }
 
 /// The hold points of walls that the sheet of the whole building does not show to carry what the removal adds.
 fn unshown(job: &Job<'_>, l: &Link) -> String {
-    if l.link != "bracing wall" {
+    // The joint at the foot of those walls is part of what they do not carry alone.
+    if l.link != "bracing wall" && l.link != "dpc" || l.proof == Proof::Assumed {
         return String::new();
     }
     let holds: Vec<String> =

@@ -61,8 +61,13 @@ pub fn holds(b: &Building) -> Vec<(String, String)> {
             ));
         }
     }
-    for p in b.found.panels.iter().filter(|p| p.openings > 0) {
-        let (mark, how) = match found::treated(b, p) {
+    for p in &b.found.panels {
+        let doors = p.after.openings.len();
+        let own = found::treated(b, p);
+        if doors == 0 || own.is_some_and(|own| own.after.openings.len() >= doors) {
+            continue;
+        }
+        let (mark, how) = match own {
             Some(own) => (own.mark.clone(), "it is worked here as a wall without openings"),
             None => (p.on.clone(), "it is not worked here"),
         };
@@ -73,7 +78,7 @@ pub fn holds(b: &Building) -> Vec<(String, String)> {
                 p.on,
                 held(&p.after),
                 m(p.after.length()),
-                if p.openings == 1 { "opening".to_owned() } else { format!("{} openings", p.openings) },
+                if doors == 1 { "opening".to_owned() } else { format!("{doors} openings") },
             ),
         ));
     }
@@ -135,13 +140,16 @@ fn returns(b: &Building) -> Table {
 
 fn panels(b: &Building) -> Table {
     let rows = b.found.panels.iter().map(|p| {
-        let how = match (found::treated(b, p), p.openings) {
-            (Some(own), 0) if b.found.added.contains(&own.mark) => {
+        let doors = p.after.openings.len();
+        let how = match found::treated(b, p) {
+            Some(own) if own.after.openings.len() < doors => {
+                format!("{}, without its openings: a hold point", own.mark)
+            }
+            Some(own) if b.found.added.contains(&own.mark) => {
                 format!("{}, edges taken from the plan", own.mark)
             }
-            (Some(own), 0) => own.mark.clone(),
-            (Some(own), _) => format!("{}, without its openings: a hold point", own.mark),
-            (None, _) => "not worked: a hold point".to_owned(),
+            Some(own) => own.mark.clone(),
+            None => "not worked: a hold point".to_owned(),
         };
         vec![
             p.on.clone(),
@@ -149,7 +157,7 @@ fn panels(b: &Building) -> Table {
             m(p.before.length()),
             held(&p.after),
             m(p.after.length()),
-            p.openings.to_string(),
+            doors.to_string(),
             how,
         ]
     });

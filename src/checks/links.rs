@@ -150,8 +150,9 @@ fn proven(b: &Building, link: &Link) -> Vec<Link> {
     let here = match link.link.as_str() {
         "wind face" | "panel" => !b.panels.is_empty(),
         "bracing wall" => {
-            !b.floors.is_empty()
-                || !b.returns.is_empty() && held_elsewhere(b).is_empty() && !shares_elsewhere(b)
+            let own = |m: &String| b.returns.iter().any(|r| r.mark == *m);
+            let alone = !b.returns.is_empty() && held_elsewhere(b).is_empty() && !shares_elsewhere(b);
+            !b.floors.is_empty() || alone || !link.of.is_empty() && link.of.iter().all(own)
         }
         "junction" => !b.returns.is_empty(),
         // Floors say below how far they are calculated.
@@ -252,6 +253,12 @@ pub fn edge_text(b: &Building, e: &FloorEdge) -> String {
                 told(&e.words)
             )
         }
+        _ if !e.words.trim().is_empty() => format!(
+            "Before the wall comes down, fit restraint straps that hold the wall to the floor along {} at {panels}, for \
+             the force on its sheet: none is there.{}",
+            e.mark,
+            told(&e.words)
+        ),
         _ => format!(
             "Before the wall comes down, open up the floor edge {} and show restraint straps that hold the wall to the \
              floor at {panels} for the force on its sheet, or fit them: none is known to be there.{}",

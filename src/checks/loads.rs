@@ -15,7 +15,12 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         b.removed.carried.trim_end_matches('.')
     ));
     s.table(|| Table {
-        caption: "Unfactored loads on what stays and on what comes out, own weight not included".to_owned(),
+        caption: if job.down.is_some() {
+            "Unfactored loads on what stays and on what comes out, own weight not included"
+        } else {
+            "Unfactored loads on what stays, own weight not included; what comes out is not led down"
+        }
+        .to_owned(),
         columns: vec![
             Column::words("on"),
             Column::words("load"),

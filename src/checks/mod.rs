@@ -51,12 +51,26 @@ pub struct Section {
     pub sheet: Sheet,
     /// Drawings named by the sheet's entries.
     pub drawings: Vec<Drawing>,
+    /// Marks of what it is held by: what they wait for, it waits for.
+    pub leans: Vec<String>,
 }
 
 impl Section {
     /// A section without a mark or drawings.
     pub fn plain(id: &str, title: &str, sheet: Sheet) -> Self {
-        Self { id: id.to_owned(), mark: String::new(), title: title.to_owned(), sheet, drawings: Vec::new() }
+        Self {
+            id: id.to_owned(),
+            mark: String::new(),
+            title: title.to_owned(),
+            sheet,
+            drawings: Vec::new(),
+            leans: Vec::new(),
+        }
+    }
+
+    /// All whose hold points concern it, with commas between.
+    pub fn concerns(&self) -> String {
+        std::iter::once(&self.mark).chain(&self.leans).cloned().collect::<Vec<_>>().join(", ")
     }
 }
 
@@ -221,7 +235,11 @@ fn remarks(job: &Job<'_>) -> Vec<String> {
     };
     [
         told(whole::as_it_stands(job), "against wind, each taken alone", "The whole building against wind"),
-        told(piers::as_it_stands(job), "by vertical load", "Lengths of wall between openings"),
+        told(
+            piers::as_it_stands(job),
+            "by vertical load, with the wind across where it reaches them",
+            "Lengths of wall between openings",
+        ),
     ]
     .into_iter()
     .flatten()

@@ -2,7 +2,7 @@
 
 use super::panels::{self, PanelModel};
 use super::{Job, Section, masonry, panel_views};
-use crate::building::{Building, Panel};
+use crate::building::{Building, Panel, Return};
 use crate::sketch::Wind;
 use crate::standards::masonry::Edge;
 use crate::trace::{Outside, Sheet, Unshown};
@@ -28,38 +28,43 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
         Ok(m) => {
             let name = |kind: &str| format!("{}-{kind}", p.mark);
             sheet.drawings(&[&name("before"), &name("after")]);
+            leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
             sheet.drawings(&[&name("section")]);
-            leaning(job, p, &mut sheet);
             let off = p.wind.is_none() && job.wind.as_ref().is_ok_and(|w| w.off_panel(p));
             let wind = if off { Wind::Away } else { Wind::Toward };
             drawings = job.drawings(|| panel_views::drawings(job.building, p, &m, wind));
         }
         Err(outside) => sheet.leave(outside),
     }
-    Section { id: p.mark.clone(), mark: p.mark.clone(), title: p.title.clone(), sheet, drawings }
+    let leans = named(job, p).map(|r| r.mark.clone()).collect();
+    Section { id: p.mark.clone(), mark: p.mark.clone(), title: p.title.clone(), sheet, drawings, leans }
+}
+
+/// Returns that the edges of a panel name after the removal.
+fn named<'a>(job: &'a Job<'_>, p: &'a Panel) -> impl Iterator<Item = &'a Return> {
+    let edges = [&p.after.top, &p.after.base, &p.after.left, &p.after.right];
+    let word = |c: char| !c.is_alphanumeric() && c != '-' && c != '_';
+    let names = move |mark: &str| {
+        edges.iter().any(|e| e.kind != Edge::Free && e.reason.split(word).any(|word| word == mark))
+    };
+    job.building.returns.iter().filter(move |r| names(&r.mark))
 }
 
 /// A panel is held no better than the returns that its edges name.
 fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
-    let edges = [&p.after.top, &p.after.base, &p.after.left, &p.after.right];
-    let names = |reason: &str, mark: &str| {
-        reason.split(|c: char| !c.is_alphanumeric() && c != '-' && c != '_').any(|word| word == mark)
-    };
-    for r in job.building.returns.iter().filter(|r| job.failing.contains(&r.mark)) {
-        if edges.iter().any(|e| e.kind != Edge::Free && names(&e.reason, &r.mark)) {
-            s.unshown(Unshown {
-                id: format!("leans-{}", r.mark),
-                clause: "statics".to_owned(),
-                words: format!("support by {}", r.mark),
-                finding: format!(
-                    "An edge of this panel is held by {}, which is not adequate on its own sheet.",
-                    r.mark
-                ),
-                ratio: None,
-                hold: None,
-            });
-        }
+    for r in named(job, p).filter(|r| job.failing.contains(&r.mark)) {
+        s.unshown(Unshown {
+            id: format!("leans-{}", r.mark),
+            clause: "statics".to_owned(),
+            words: format!("support by {}", r.mark),
+            finding: format!(
+                "An edge of this panel is held by {}, which is not adequate on its own sheet.",
+                r.mark
+            ),
+            ratio: None,
+            hold: None,
+        });
     }
 }
 

@@ -1,9 +1,10 @@
 //! What the drawings of a panel show.
 
+use super::links;
 use super::panels::PanelModel;
 use super::shapes::layers;
-use crate::building::{BuildUp, Building, Edge, FloorKind, Panel, Span};
-use crate::quantity::print;
+use crate::building::{BuildUp, Building, Edge, FloorKind, Panel, PanelOpening, Span, StrapsKnown};
+use crate::quantity::{Length, LineLoad, print};
 use crate::sketch::{
     self, Action, Drawing, Floor, Frame, PanelElevation, PanelSection, Support, WallBehind, Wind, panel_pair,
     panel_section,
@@ -41,6 +42,17 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel, wind: Wind) -> Vec<Draw
     vec![first, second, third]
 }
 
+fn opening(o: &PanelOpening) -> sketch::Opening {
+    let words = if o.sill == Length::ZERO { "door" } else { "window" };
+    sketch::Opening {
+        x: o.at.base(),
+        y: o.sill.base(),
+        width: o.width.base(),
+        height: o.height.base(),
+        words: words.to_owned(),
+    }
+}
+
 fn edge(e: &Edge) -> sketch::Edge {
     let support = match e.kind {
         Kind::Free => Support::Free,
@@ -68,7 +80,7 @@ fn elevation(
         right: edge(&span.right),
         top: edge(&span.top),
         base: edge(&span.base),
-        openings: Vec::new(),
+        openings: span.openings.iter().map(opening).collect(),
         walls: inside.into_iter().collect(),
         yield_lines: Vec::new(),
         values: vec![Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), "")],
@@ -85,7 +97,19 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp, wind: Wi
         FloorKind::Concrete => "concrete floor",
         FloorKind::Roof => "roof",
     };
-    let held = |e: &Edge| if e.kind == Kind::Free { "not held" } else { "held" };
+    let words = match (above, b.storeys.last().is_some_and(|s| s.mark == p.storey)) {
+        (FloorKind::Concrete, true) => "roof slab",
+        (FloorKind::Timber, true) => "roof",
+        _ => words,
+    };
+    let edge = b.floor_edges.iter().find(|e| links::concerned(b, e).contains(&p.mark));
+    let held = |e: &Edge| match (e.kind, edge.map(|e| e.known)) {
+        (Kind::Free, _) => "not held",
+        (_, Some(StrapsKnown::None)) => "no strap known",
+        (_, Some(StrapsKnown::ToBeFitted)) => "straps to be fitted",
+        (_, Some(StrapsKnown::Seen)) => "strapped",
+        (_, None) => "held",
+    };
     PanelSection {
         mark: p.mark.clone(),
         height: p.height.base(),
@@ -102,9 +126,7 @@ fn section(b: &Building, p: &Panel, m: &PanelModel, build_up: &BuildUp, wind: Wi
             ((1.0 / n.base()).sqrt(), format!("{} ties per m²", print::significant(n.base() * 1e6)))
         }),
         wind: Some((wind, Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), ""))),
-        precompression: Some((
-            loaded,
-            Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""),
-        )),
+        precompression: (p.dead_above > LineLoad::ZERO)
+            .then(|| (loaded, Action::new("g_k", &print::show("g", p.dead_above.dynamic()).to_string(), ""))),
     }
 }

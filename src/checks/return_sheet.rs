@@ -28,6 +28,7 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                 title: ret.title.clone(),
                 sheet,
                 drawings,
+                leans: Vec::new(),
             };
             std::iter::once(section).chain(footings::section(job, ret))
         })

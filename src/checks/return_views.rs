@@ -192,11 +192,11 @@ fn stress(m: &Model, matrix: &Matrix, annex: &Annex) -> Option<Stress> {
     let compressed = if whole > depth { depth } else { whole };
     let full = a.flange.is_none() && st.l_c >= l;
     // With a flange the straight line of stress may reach nought beyond the section.
-    let beyond = a.flange.is_some() && whole > depth;
+    let beyond = a.flange.is_some() && st.c > depth;
     let heel = (full || beyond).then(|| {
         let e = l / 2.0 - st.a;
         let at = if beyond {
-            sigma * (1.0 - (depth / whole).base())
+            sigma * (1.0 - (depth / st.c).base())
         } else {
             a.N_Ed / (m.t * l) * (1.0 - (e * 6.0 / l).base())
         };

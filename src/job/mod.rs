@@ -25,6 +25,7 @@ mod identity;
 mod limits;
 mod materials;
 mod names;
+mod openings;
 mod panels;
 mod plan;
 mod reader;

@@ -3,6 +3,7 @@
 use super::entry::{Entry, quoted};
 use super::ground::{DRAWN, HEIGHT};
 use super::limits::{Limits, Odd};
+use super::openings;
 use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
@@ -64,9 +65,21 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     let wall_at = after_table.as_ref().and_then(|a| a.may("wall_at").quantity(&WALL_AT));
     let wall_at = wall_at.or(found.map(|f| f.wall_at));
     let after = read_side(after_table.as_ref(), around, wall_on, drawn.map(|(f, s)| (&f.after, s)));
-    let before = before.map(|r| r.span);
+    let mut before = before.map(|r| r.span);
     let edges_taken = after.as_ref().is_some_and(|r| r.taken);
-    let after = after.map(|r| r.span);
+    let mut after = after.map(|r| r.span);
+    if t.has("openings") {
+        let given = openings::read(t);
+        if let (Some(after), Some(given)) = (&mut after, given) {
+            after.openings = given;
+            if let Some(before) = &mut before {
+                before.openings = openings::before(after, before, wall_at);
+            }
+        }
+    }
+    if let (Some(after), Some(height)) = (&after, height) {
+        openings::fit(t, &after.openings, after.length, height);
+    }
     let arching = arching(t, route);
 
     if let Some(seen) = storey.as_ref().and_then(|s| around.storeys.get(s)) {
@@ -178,7 +191,8 @@ fn read_side<'a>(
     let left = edge("left", drawn.as_ref().map(|d| d.left.clone()));
     let right = edge("right", drawn.as_ref().map(|d| d.right.clone()));
     own.finish();
-    let span = Span { length: length?, ends, top: top?, base: base?, left: left?, right: right? };
+    let openings = shown.map_or_else(Vec::new, |(span, _)| span.openings.clone());
+    let span = Span { length: length?, ends, top: top?, base: base?, left: left?, right: right?, openings };
     Some(ReadSide { span, taken })
 }
 

@@ -10,8 +10,8 @@ use super::reader::{Reader, Span, Table};
 use super::words::{NORTH, TURN};
 use crate::building::found;
 use crate::building::{
-    Along, AreaLoad, BuildUp, Building, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey, TakeDown,
-    take_down,
+    Along, AreaLoad, BuildUp, Building, Frame, PlanBeam, PlanFloor, PlanOpening, PlanWall, Side, Storey,
+    TakeDown, take_down,
 };
 use crate::error::Kind;
 use crate::quantity::{Length, LineLoad, Stress};
@@ -99,6 +99,7 @@ fn opening<'a>(t: &Table<'a>, storeys: &Names<'a, Storey>) -> Option<PlanOpening
     let width = t.need("width").quantity(&WIDTH);
     let height: Option<Length> = t.need("height").quantity(&OPENING);
     let sill = if t.has("sill") { t.may("sill").quantity(&SILL) } else { Some(Length::ZERO) };
+    let frame = frame(t);
     t.finish();
     if let (Some(height), Some(sill), Some(seen)) =
         (height, sill, storey.as_ref().and_then(|s| storeys.item(s)))
@@ -110,7 +111,23 @@ fn opening<'a>(t: &Table<'a>, storeys: &Names<'a, Storey>) -> Option<PlanOpening
             .help("correct the sill or the height");
         return None;
     }
-    Some(PlanOpening { storey: storey?, from: from?, width: width?, sill: sill?, height: height? })
+    Some(PlanOpening {
+        storey: storey?,
+        from: from?,
+        width: width?,
+        sill: sill?,
+        height: height?,
+        frame: frame?,
+    })
+}
+
+/// How the frame of an opening passes the wind on; unknown where it is not said.
+pub fn frame(t: &Table<'_>) -> Option<Frame> {
+    let entry = t.may("frame");
+    match &entry.value {
+        Some(_) => entry.choice(Frame::WORDS, Frame::from_word),
+        None => Some(Frame::Unknown),
+    }
 }
 
 /// Whether the openings of each storey lie in the wall, apart from each other, in the order of the file.

@@ -1,6 +1,6 @@
 //! The words of the front sheets: outcome, summary, assumptions, cautions.
 
-use crate::building::{Building, Cause, Head, Path, ShareBy, WindRoute};
+use crate::building::{Building, Cause, Frame, Head, Path, ShareBy, WindRoute};
 use crate::checks::Results;
 use crate::checks::links::sheared;
 use crate::checks::outcome::{Outcome, holds_all};
@@ -42,8 +42,9 @@ pub fn sentence(results: &Results) -> String {
             } else {
                 format!(
                     "No verdict fails, but this calculation does not show all that it needs to: {} of the results below \
-                     {} on {}.",
+                     {} no verdict and {} on {}.",
                     waiting.len(),
+                    if waiting.len() == 1 { "has" } else { "have" },
                     if waiting.len() == 1 { "rests" } else { "rest" },
                     list(&distinct(&waiting))
                 )
@@ -66,7 +67,7 @@ fn unshown(results: &Results) -> Vec<&str> {
     all.filter_map(|u| u.hold.as_deref()).collect()
 }
 
-fn distinct<'a>(items: &[&'a str]) -> Vec<&'a str> {
+pub fn distinct<'a>(items: &[&'a str]) -> Vec<&'a str> {
     let mut out: Vec<&str> = Vec::new();
     for item in items {
         if !out.contains(item) {
@@ -272,6 +273,19 @@ pub fn assumptions(b: &Building) -> Vec<Assumption> {
             "method of this pack".to_owned(),
         ));
     }
+    for p in &b.panels {
+        for (n, o) in p.after.openings.iter().enumerate().filter(|(_, o)| o.frame != Frame::Unknown) {
+            let to = match o.frame {
+                Frame::Jambs => "its jambs",
+                Frame::AllRound => "the wall all round",
+                _ => "head and sill",
+            };
+            all.push((
+                format!("The frame of opening {} of {} passes its wind on to {to}.", n + 1, p.mark),
+                "job file".to_owned(),
+            ));
+        }
+    }
     if !b.floors.is_empty() {
         all.push((
             "Lengths of wall between openings are held across at head and foot by floors and roof, and outer walls \
@@ -326,6 +340,7 @@ pub fn cautions(b: &Building) -> Vec<String> {
             list(&bearings)
         )
     };
+    let straps = if b.floor_edges.is_empty() { "straps at the edges of floors, " } else { "" };
     // The lengths of wall below are on a sheet where the plan has floors.
     let footed: Vec<&str> = b.footings().map(|(_, f)| f.mark.as_str()).collect();
     let below = if footed.is_empty() {
@@ -335,7 +350,7 @@ pub fn cautions(b: &Building) -> Vec<String> {
     };
     let ground = if b.floors.is_empty() { format!("the wall below, {below}") } else { below };
     out.push(format!(
-        "Not covered: {beam}, {ground}, movement and fire. They need calculations of their own."
+        "Not covered: {beam}, {straps}{ground}, movement and fire. They need calculations of their own."
     ));
     out.push(
         "The resistance of a compressed end by a uniform block, friction at the foot, and flexure in plane are first \

@@ -29,7 +29,7 @@ pub fn of_job(b: &Building, results: &Results) -> Vec<Line> {
         if rows.is_empty() {
             continue;
         }
-        let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
+        let outcome = outcome::of_sheet(&s.sheet, &s.concerns(), &results.holds);
         let name = if s.mark.is_empty() { s.title.clone() } else { format!("{}  {}", s.mark, s.title) };
         out.push(plain(""));
         let stress = outcome != outcome::Outcome::Adequate;

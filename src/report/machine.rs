@@ -14,7 +14,7 @@ pub fn of_job(file: &str, b: &Building, results: &Results) -> Json {
         .iter()
         .filter(|s| !s.mark.is_empty() || s.sheet.judges())
         .map(|s| {
-            let o = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
+            let o = outcome::of_sheet(&s.sheet, &s.concerns(), &results.holds);
             let checks: Vec<Json> = s
                 .sheet
                 .verdicts

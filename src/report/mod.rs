@@ -134,7 +134,7 @@ fn kind(outcome: Outcome) -> OutcomeKind {
 
 fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
     let judged = !s.mark.is_empty();
-    let outcome = outcome::of_sheet(&s.sheet, &s.mark, &results.holds);
+    let outcome = outcome::of_sheet(&s.sheet, &s.concerns(), &results.holds);
     let plain_failure = !judged && s.sheet.judges();
     data::Section {
         id: s.id.clone(),
@@ -158,8 +158,13 @@ const NAMED: usize = 4;
 
 /// The outcome of a sheet in words, with the hold points that it waits for by their marks.
 fn words(s: &Section, outcome: Outcome, results: &Results) -> String {
-    let open = outcome::open(&s.mark, &results.holds);
+    let marks = s.concerns();
+    let open = outcome::open(&marks, &results.holds);
+    let waits: Vec<&str> = s.sheet.unshown.iter().filter_map(|u| u.hold.as_deref()).collect();
     match outcome {
+        Outcome::Conditional(_) if !waits.is_empty() => {
+            format!("not shown: {}", front::list(&front::distinct(&waits)))
+        }
         Outcome::Conditional(n) if n <= NAMED => {
             format!("adequate once {} {} closed", front::list(&open), if n == 1 { "is" } else { "are" })
         }

@@ -253,7 +253,18 @@ fn limb(board: &mut Board, known: Known, from: Point, to: Point) {
                 board.line(Pen::Beyond, from + side * way, to + side * way);
             }
         }
-        Known::Assumed | Known::Fails => {
+        Known::Fails => {
+            // Broken, and crossed out.
+            let (a, b) = (from.lerp(to, 0.3), from.lerp(to, 0.7));
+            board.line(Pen::Open, from, a);
+            board.line(Pen::Open, b, to);
+            let (along, middle) = ((to - from).normalize() * 1.3, from.midpoint(to));
+            for way in [1.0, -1.0] {
+                let arm = side * (1.5 * way) + along;
+                board.line(Pen::Support, middle - arm, middle + arm);
+            }
+        }
+        Known::Assumed => {
             // Broken: two strokes across a gap.
             let (a, b) = (from.lerp(to, 0.36), from.lerp(to, 0.64));
             board.line(Pen::Open, from, a);

@@ -12,7 +12,7 @@ use perpend::standards::masonry::Edge::{Continuous, Simple};
 use perpend::trace::Sheet;
 
 /// A single leaf of 102.5 mm clay brick, 2.4 m high and 4.0 m long after the removal, all values stated.
-fn brick_leaf() -> PanelModel {
+pub fn brick_leaf() -> PanelModel {
     let factor = |x| (Num::new(x), "stated".to_owned());
     let ((gamma_c, gamma_c_source), (gamma_f, gamma_f_source), (gamma_v, gamma_v_source)) =
         (factor(3.0), factor(2.7), factor(2.5));
@@ -36,7 +36,7 @@ fn brick_leaf() -> PanelModel {
     let span = |length| {
         let held = |kind| Held { kind, reason: "as the example says".to_owned() };
         let (top, base, left, right) = (held(Simple), held(Simple), held(Continuous), held(Simple));
-        Span { length: Length::new(length), ends: None, top, base, left, right }
+        Span { length: Length::new(length), ends: None, top, base, left, right, openings: Vec::new() }
     };
     PanelModel {
         mark: "P1".to_owned(),

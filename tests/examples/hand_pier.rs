@@ -58,7 +58,7 @@ fn the_spine_wall_under_the_end_of_the_beam() {
     // So little wind that the rear wall under the other end of the beam does not govern.
     let text = THROUGH
         .replacen("imposed = \"0.6 kN/m2\"", "imposed = \"0.6 kN/m2\"\nuplift = \"0 kN/m2\"", 1)
-        .replacen("v_map = \"21.5 m/s\"", "v_map = \"19.0 m/s\"", 1);
+        .replacen("v_map = \"21.0 m/s\"", "v_map = \"19.0 m/s\"", 1);
     let (_, results) = perpend::check("through-room.toml", &text).unwrap_or_else(|e| panic!("{e}"));
     let sheet = &results.sections.iter().find(|s| s.id == "piers").expect("the sheet of piers").sheet;
     assert!(sheet.faults.is_empty() && sheet.outside.is_empty());

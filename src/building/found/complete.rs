@@ -12,8 +12,7 @@ use crate::standards::masonry;
 /// Coefficient of friction at a dpc: common practice, no published source.
 pub const MU_USUAL: f64 = 0.4;
 
-/// Adds a return and a panel for everything found that the job file does not give. Panels with
-/// openings are not added: they would be worked as plain walls.
+/// Adds a return and a panel for everything found that the job file does not give.
 pub fn complete(b: &mut Building, mut found: Found) {
     for r in &found.returns {
         let valid = r.mark.chars().all(|c| c.is_ascii_alphanumeric() || c == '-' || c == '_');
@@ -25,7 +24,7 @@ pub fn complete(b: &mut Building, mut found: Found) {
             b.returns.push(new);
         }
     }
-    for p in found.panels.iter().filter(|p| p.openings == 0) {
+    for p in &found.panels {
         if treated(b, p).is_some() {
             continue;
         }
@@ -102,6 +101,7 @@ pub fn span(of: &FoundSpan, storey: &Storey) -> Span {
         base: simple("Foot of the wall: held against moving.".to_owned()),
         left: side(&of.held[0]),
         right: side(&of.held[1]),
+        openings: of.openings.clone(),
     }
 }
 

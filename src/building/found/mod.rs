@@ -12,7 +12,7 @@ mod storey;
 #[cfg(test)]
 mod tests;
 
-use super::{Along, BuildUp, PlanFloor, PlanWall, Side, Storey};
+use super::{Along, BuildUp, PanelOpening, PlanFloor, PlanWall, Side, Storey};
 use crate::quantity::Length;
 pub use closes::{OpenEnd, open_ends};
 pub use complete::{MU_USUAL, complete, junction, restraint, span, title_of_panel, title_of_return, treated};
@@ -74,8 +74,6 @@ pub struct FoundPanel {
     pub after: FoundSpan,
     /// From its left end to where the wall met it.
     pub wall_at: Length,
-    /// Doors and windows in it after the removal.
-    pub openings: usize,
 }
 
 /// From support to support along a wall.
@@ -85,6 +83,8 @@ pub struct FoundSpan {
     pub range: (Length, Length),
     /// What holds its left and its right end, seen from outside; nothing where that end is free.
     pub held: [Option<String>; 2],
+    /// Doors and windows in it, from its left end.
+    pub openings: Vec<PanelOpening>,
 }
 
 impl FoundSpan {

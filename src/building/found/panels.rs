@@ -2,7 +2,7 @@
 
 use super::storey::{Floor, Line, Support};
 use super::{FoundPanel, FoundReturn, FoundSpan, REACH};
-use crate::building::Along;
+use crate::building::{Along, PanelOpening, PlanOpening};
 use crate::quantity::Length;
 
 /// Panels of the outer walls that the line of the wall that comes out meets.
@@ -37,11 +37,12 @@ fn on(floor: &Floor<'_>, line: &Line<'_>, stays: Option<&FoundReturn>) -> Vec<Fo
     let high = supports.iter().find(|x| x.at > s).cloned().unwrap_or_else(|| end(row.to));
     let at_gone = |mark: &str| Support { at: s, half: 0.0, mark: mark.to_owned() };
     let before = at_gone(&gone.wall.mark);
+    let doors = floor.doors(line);
     let span = |a: &Support, z: &Support| FoundSpan {
         range: (Length::new(a.at), Length::new(z.at)),
         held: in_view(line.along, outside, [a, z]).map(|x| (!x.mark.is_empty()).then(|| x.mark.clone())),
+        openings: within(&doors, (a.at, z.at), rightwards(line.along, outside)),
     };
-    let openings = |a: f64, z: f64| row.openings.iter().filter(|o| o.0 < z && o.1 > a).count();
     let wall_at = |a: f64, z: f64| {
         let left = in_view(line.along, outside, [a, z])[0];
         Length::new((s - left).abs())
@@ -51,7 +52,6 @@ fn on(floor: &Floor<'_>, line: &Line<'_>, stays: Option<&FoundReturn>) -> Vec<Fo
         before,
         after: span(a, z),
         wall_at: wall_at(a.at, z.at),
-        openings: openings(a.at, z.at),
     };
     let sides = [(&low, &before), (&before, &high)];
     match stays.filter(|r| r.holds) {
@@ -71,10 +71,31 @@ fn on(floor: &Floor<'_>, line: &Line<'_>, stays: Option<&FoundReturn>) -> Vec<Fo
 
 /// Two things at the lesser and the greater end of a line, as left and right seen from outside.
 fn in_view<T>(along: Along, outside: f64, [low, high]: [T; 2]) -> [T; 2] {
-    // Looking towards greater y, greater x is to the right; looking towards greater x, greater y is to the left.
-    let rightwards = match along {
+    if rightwards(along, outside) { [low, high] } else { [high, low] }
+}
+
+/// Whether greater x or y lies to the right, seen from outside. Looking towards greater y, greater x is to the right;
+/// looking towards greater x, greater y is to the left.
+fn rightwards(along: Along, outside: f64) -> bool {
+    match along {
         Along::X => outside < 0.0,
         Along::Y => outside > 0.0,
+    }
+}
+
+/// The openings that reach into a stretch, from its left end seen from outside; what lies beyond its ends is cut off.
+fn within(doors: &[(f64, f64, &PlanOpening)], (a, z): (f64, f64), rightwards: bool) -> Vec<PanelOpening> {
+    let one = |&(from, to, o): &(f64, f64, &PlanOpening)| {
+        let (from, to) = (from.max(a), to.min(z));
+        (to > from).then(|| PanelOpening {
+            at: Length::new(if rightwards { from - a } else { z - to }),
+            width: Length::new(to - from),
+            sill: o.sill,
+            height: o.height,
+            frame: o.frame,
+        })
     };
-    if rightwards { [low, high] } else { [high, low] }
+    let mut out: Vec<PanelOpening> = doors.iter().filter_map(one).collect();
+    out.sort_by(|p, q| p.at.base().total_cmp(&q.at.base()));
+    out
 }

@@ -1,7 +1,7 @@
 //! The storey of the wall that comes out, as lines along x and y.
 
 use super::{Around, REACH, STIFFENS, across, stands};
-use crate::building::{Along, BuildUp, PlanWall, Side, Storey};
+use crate::building::{Along, BuildUp, PlanOpening, PlanWall, Side, Storey};
 use crate::quantity::Length;
 
 /// A wall of the storey, with its openings there; mm of the plan.
@@ -102,6 +102,16 @@ impl<'a> Floor<'a> {
         row
     }
 
+    /// Doors and windows of the walls in the line of `line`, with where each begins and ends along it.
+    pub fn doors(&self, line: &Line<'_>) -> Vec<(f64, f64, &'a PlanOpening)> {
+        let same = |l: &&Line<'a>| l.along == line.along && (l.at - line.at).abs() <= REACH;
+        let storey = self.around.storey;
+        let mut all: Vec<_> =
+            self.lines.iter().filter(same).flat_map(|l| doors(l.wall, l.along, storey)).collect();
+        all.sort_by(|a, b| a.0.total_cmp(&b.0));
+        all
+    }
+
     /// Walls that hold the row of `line` and stay, in order, those in the line of the wall that comes out left out.
     pub fn supports(&self, line: &Line<'_>) -> Vec<Support> {
         let row = self.row(line);
@@ -199,6 +209,21 @@ fn solid(l: &Line<'_>, at: f64) -> f64 {
     (at - low).max(high - at)
 }
 
+/// Openings of a wall along x or y in a storey, with where each begins and ends along it, mm of the plan.
+fn doors<'a>(
+    wall: &'a PlanWall,
+    along: Along,
+    storey: &str,
+) -> impl Iterator<Item = (f64, f64, &'a PlanOpening)> {
+    let of = |at: crate::building::At| if along == Along::X { at.0.base() } else { at.1.base() };
+    let (start, end) = (of(wall.from), of(wall.to));
+    let ahead = if end > start { 1.0 } else { -1.0 };
+    wall.openings.iter().filter(move |o| o.storey == storey).map(move |o| {
+        let (p, q) = (start + ahead * o.from.base(), start + ahead * (o.from + o.width).base());
+        (p.min(q), p.max(q), o)
+    })
+}
+
 fn line<'a>(around: &Around<'_>, wall: &'a PlanWall, storey: &str) -> Option<Line<'a>> {
     let (a, z) = ((wall.from.0.base(), wall.from.1.base()), (wall.to.0.base(), wall.to.1.base()));
     let (along, at, start, end) = if a.1 == z.1 {
@@ -208,16 +233,7 @@ fn line<'a>(around: &Around<'_>, wall: &'a PlanWall, storey: &str) -> Option<Lin
     } else {
         return None;
     };
-    let ahead = if end > start { 1.0 } else { -1.0 };
-    let mut openings: Vec<(f64, f64)> = wall
-        .openings
-        .iter()
-        .filter(|o| o.storey == storey)
-        .map(|o| {
-            let (p, q) = (start + ahead * o.from.base(), start + ahead * (o.from + o.width).base());
-            (p.min(q), p.max(q))
-        })
-        .collect();
+    let mut openings: Vec<(f64, f64)> = doors(wall, along, storey).map(|(a, z, _)| (a, z)).collect();
     openings.sort_by(|a, b| a.0.total_cmp(&b.0));
     let thickness =
         around.build_ups.iter().find(|b| b.name == wall.build_up).map_or(100.0, |b| b.thickness().base());

@@ -40,6 +40,7 @@ pub fn section(job: &Job<'_>, ret: &Return) -> Option<Section> {
         title: format!("Footing under {}", ret.mark),
         sheet,
         drawings,
+        leans: Vec::new(),
     })
 }
 

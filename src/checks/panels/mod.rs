@@ -3,12 +3,14 @@
 //! * [`mod@model`]: what the check needs, quantities only, and how a building yields it
 //! * [`strength`]: what each leaf resists per unit width
 //! * [`form`]: which way the panel spans, what pressure a leaf can take
+//! * [`opened`]: the same with doors and windows, by piers and strips
 //! * [`sharing`]: two leaves and their ties
 //! * [`run`]: the check: before as information, after as the verdict, both side by side
 //! * [`remedy`]: what would make it pass
 
 pub mod form;
 pub mod model;
+pub mod opened;
 pub mod remedy;
 pub mod run;
 pub mod sharing;

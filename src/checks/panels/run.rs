@@ -3,7 +3,7 @@
 use super::form::{Form, LeafOutcome, State, leaf};
 use super::model::{PanelModel, edges};
 use super::strength::{self, Strength};
-use super::{remedy, sharing};
+use super::{opened, remedy, sharing};
 use crate::building::{PanelRoute, Span};
 use crate::quantity::print::{self, show};
 use crate::quantity::{Length, Num, Stress};
@@ -117,8 +117,11 @@ fn wind(s: &mut Sheet, m: &PanelModel, annex: &Annex) -> Stress {
     calc!(s, "EN 1990 6.4.3.2", "design pressure", W_Ed = gamma_W * q_net);
     s.note(
         "The section is the same both ways, so one direction of the wind covers the other. Helping decides: it \
-         presses least. A dead load that the job gives must have the roof's uplift off already. No openings are taken.",
+         presses least. A dead load that the job gives must already be net of the roof's uplift.",
     );
+    if m.after.openings.is_empty() {
+        s.note("The panel has no openings.");
+    }
     W_Ed
 }
 
@@ -139,7 +142,9 @@ fn state(
     } else if phase == "after" {
         s.note("Size limits of panels in bending do not apply to an arch; its own slenderness is checked.");
     }
-    let worked = if m.route == PanelRoute::Arching {
+    let worked = if m.route == PanelRoute::Arching && !span.openings.is_empty() {
+        Err(Outside::new(&format!("arching-{phase}"), "6.3.2", "an arch in a wall with openings is not worked"))
+    } else if m.route == PanelRoute::Arching {
         arch(s, m, annex, W_Ed, l, strengths, phase)
     } else {
         bend(s, m, annex, span, W_Ed, strengths, phase)
@@ -178,7 +183,14 @@ fn bend(
     }
     let state = State { m, edges, form, l, W_Ed, phase, judged: true };
     let first = s.verdicts.len();
-    let leaves = s.columns(&m.leaf_names(), |s, i| leaf(s, state, &strengths[i]));
+    let openings = &span.openings;
+    if !openings.is_empty() && phase == "after" {
+        opened_remarks(s);
+    }
+    let leaves = s.columns(&m.leaf_names(), |s, i| match openings.as_slice() {
+        [] => leaf(s, state, &strengths[i]),
+        some => opened::leaf(s, state, &strengths[i], some),
+    });
     let leaves = leaves.into_iter().collect::<Result<Vec<LeafOutcome>, Outside>>()?;
     if leaves.len() == 1 {
         let ratio = s.verdicts[first..].iter().map(|v| v.ratio).fold(0.0, f64::max);
@@ -186,6 +198,17 @@ fn bend(
     }
     let (w_Rd, ratio) = sharing::cavity(s, state, annex, strengths, &leaves);
     Ok(Outcome { l, leaves, W_Ed, w_Rd, ratio })
+}
+
+/// How openings are worked by hand, and what of it is not the code's.
+fn opened_remarks(s: &mut Sheet) {
+    s.note(
+        "Openings by hand: the wall is taken in piers, and half of the wind on the breadth of an opening goes to the jamb of \
+         each pier beside it. An end pier whose outer edge is held spans both ways, that load on its free edge, by the yield \
+         lines of Annex E; any other spans between top and base, each load with a part of its strength. The wall over and \
+         under an opening spans between the jambs. No clause has it: equilibrium, with Annex E for what the pieces take. \
+         Dead load that goes to the piers from over the openings is not counted as help.",
+    );
 }
 
 /// What the way of spanning leaves out.

@@ -39,6 +39,7 @@ pub(super) fn span(length: f64, [top, base, left, right]: [Edge; 4]) -> Span {
         base: held(base),
         left: held(left),
         right: held(right),
+        openings: Vec::new(),
     }
 }
 

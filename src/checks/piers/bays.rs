@@ -126,6 +126,7 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         base: held.clone(),
         left: held.clone(),
         right: held,
+        openings: Vec::new(),
     };
     PanelModel {
         mark: String::new(),

@@ -24,6 +24,8 @@ pub struct Stressed {
     pub a: Length,
     /// Area of the uniform block.
     pub A_c: Area,
+    /// From the toe to where the straight line of stress reaches nought, which may lie beyond a flanged section.
+    pub c: Length,
 }
 
 /// Overturning about the edge that M turns towards: 0.9 G against 1.5 W, e < l/2. First principles.
@@ -61,6 +63,7 @@ pub fn stresses(s: &mut Sheet, m: &Model, a: &Actions) -> Stressed {
             sigma_toe: None,
             a: Length::ZERO,
             A_c,
+            c: Length::ZERO,
         };
     }
     calc!(s, "statics", "eccentricity in plane", e = M_Ed / N_Ed);
@@ -92,7 +95,7 @@ fn plain(s: &mut Sheet, l: Length, t: Length, N_Ed: Force, e: Length) -> Stresse
         Some(sigma_toe)
     };
     calc!(s, "first principles", "area of the uniform stress block centred on N", A_c = t * (l - 2.0 * e));
-    Stressed { l_c, N_web: N_Ed, N_flange: Force::ZERO, sigma_toe, a: l / 2.0 - e, A_c }
+    Stressed { l_c, N_web: N_Ed, N_flange: Force::ZERO, sigma_toe, a: l / 2.0 - e, A_c, c: l_c }
 }
 
 fn flanged(
@@ -138,6 +141,7 @@ fn flanged(
             sigma_toe: None,
             a: x,
             A_c,
+            c: Length::ZERO,
         },
         Some(block) => {
             let compressed = if block.c < L_s { block.c } else { L_s };
@@ -147,7 +151,7 @@ fn flanged(
                 (if compressed > t_f { compressed - t_f } else { Length::ZERO }, block.N_2, block.N_1)
             };
             given!(s, "compressed length of the web", "from the neutral axis above", l_c = web);
-            Stressed { l_c, N_web, N_flange, sigma_toe: Some(block.sigma_toe), a: x, A_c }
+            Stressed { l_c, N_web, N_flange, sigma_toe: Some(block.sigma_toe), a: x, A_c, c: block.c }
         }
     }
 }

@@ -41,8 +41,8 @@ pub fn table(s: &mut Sheet, job: &Job<'_>, derived: Option<&Derived>) {
     s.note(
         "Found by search on the same checks with every pressure of the wind and the roof's uplift grown alike; the pressure \
          grows with the square of the velocity. Returns and panels alone: footings, straps and the whole building have their \
-         own ratios. Where a return or panel states a pressure of its own, the velocities are those at which the site \
-         gives it. Rounded down.",
+         own ratios. Where a return or panel states a pressure of its own, the velocities are those at which this site \
+         would have that pressure. Rounded down.",
     );
 }
 

@@ -13,7 +13,7 @@
 use std::fmt;
 
 use super::annex_e_cells::{H_OVER_L, MU, cells};
-use super::annex_e_theory::{Pattern, theory};
+pub use super::annex_e_theory::{Pattern, theory};
 use super::interpolate::{Place, number, place};
 use crate::standards::source::{Confidence, OutOfTable, Source};
 

@@ -7,6 +7,7 @@ mod floors;
 mod footings;
 mod form;
 mod names;
+mod openings;
 
 /// A slip: the good job with `from` replaced by `to` once.
 pub struct Slip {
@@ -40,6 +41,7 @@ pub fn all() -> impl Iterator<Item = &'static Slip> {
         floors::SLIPS,
         bearings::SLIPS,
         footings::SLIPS,
+        openings::SLIPS,
     ]
     .into_iter()
     .flatten()

@@ -11,6 +11,7 @@
 
 pub mod arching;
 pub mod coefficient;
+pub mod free_edge;
 pub mod size;
 pub mod span;
 pub mod strength;
