@@ -11,6 +11,7 @@
 
 #![allow(non_snake_case, missing_docs, reason = "symbols as the standards write them; tests need no docs")]
 
+mod bounds;
 mod cli;
 mod conventions;
 mod examples;

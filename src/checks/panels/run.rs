@@ -143,7 +143,11 @@ fn state(
         s.note("Size limits of panels in bending do not apply to an arch; its own slenderness is checked.");
     }
     let worked = if m.route == PanelRoute::Arching && !span.openings.is_empty() {
-        Err(Outside::new(&format!("arching-{phase}"), "6.3.2", "an arch in a wall with openings is not worked"))
+        Err(Outside::new(
+            &format!("arching-{phase}"),
+            "6.3.2",
+            "an arch in a wall with openings is not worked",
+        ))
     } else if m.route == PanelRoute::Arching {
         arch(s, m, annex, W_Ed, l, strengths, phase)
     } else {

@@ -10,7 +10,11 @@ pub const SLIPS: &[Slip] = &[
         BEFORE,
         "sharing = \"strength\"\nopenings = [{ at = \"2.4 m\", width = \"1.0 m\", height = \"2.0 m\" }]\n\n[panels.before]",
         "[{ at = \"2.4 m\", width = \"1.0 m\", height = \"2.0 m\" }]",
-        &["opening 1 lies outside the panel", "inside 3100 mm by 2400 mm", "correct the opening or the panel"],
+        &[
+            "opening 1 lies outside the panel",
+            "inside 3100 mm by 2400 mm",
+            "correct the opening or the panel",
+        ],
     ),
     slip(
         "opening higher than its panel",
