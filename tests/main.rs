@@ -2,6 +2,7 @@
 //!
 //! * `trace`: the three locks and the three renderings
 //! * `examples`: one file a published source, and two hand calculations
+//! * `bounds`: the limit analyses of panels
 //! * `properties`: what must be monotone, symmetric or continuous
 //! * `sheets`: every demo job as text
 //! * `pdf`: the packs, read back

@@ -14,20 +14,20 @@ use proptest::prelude::*;
 
 use super::hand_panel::brick_leaf;
 
-fn window(at: f64, width: f64, sill: f64, height: f64, frame: Frame) -> PanelOpening {
+pub fn window(at: f64, width: f64, sill: f64, height: f64, frame: Frame) -> PanelOpening {
     let mm = Length::new;
     PanelOpening { at: mm(at), width: mm(width), sill: mm(sill), height: mm(height), frame }
 }
 
 /// A brick leaf of 102.5 mm, 2.4 m high and 4.0 m long on four simple edges, 8.5 kN/m on top, with these openings.
-fn panel(openings: &[PanelOpening]) -> PanelModel {
+pub fn panel(openings: &[PanelOpening]) -> PanelModel {
     let mut m = brick_leaf();
     m.after.left.kind = Simple;
     m.after.openings = openings.to_vec();
     m
 }
 
-fn pressure(m: &PanelModel) -> f64 {
+pub fn pressure(m: &PanelModel) -> f64 {
     let mut s = Sheet::recorder();
     check(&mut s, m, &Annex::UK);
     assert!(s.faults.is_empty() && s.outside.is_empty(), "{:?} {:?}", s.faults, s.outside);
@@ -35,7 +35,7 @@ fn pressure(m: &PanelModel) -> f64 {
 }
 
 /// Resistances of the leaf at mid-height: (0.4/2.7 + 0.9 x 10.96/102.5) Z and 1.1/2.7 Z, as in the panel by hand.
-fn resistances() -> (f64, f64) {
+pub fn resistances() -> (f64, f64) {
     let z = 102.5 * 102.5 / 6.0;
     let sigma = 0.9 * (8.5 + 20.0 * 0.1025 * 1.2) / 102.5;
     ((0.4 / 2.7 + sigma) * z, 1.1 / 2.7 * z)
