@@ -111,7 +111,7 @@ fn elevation(
         junction: match (r.junction.bonded, r.junction.proof) {
             (true, Proof::Assumed) => "bonded, assumed".to_owned(),
             (true, _) => "bonded".to_owned(),
-            (false, _) => "not bonded, not counted".to_owned(),
+            (false, _) => "not counted".to_owned(),
         },
         prop: match &r.head {
             Head::Free => None,

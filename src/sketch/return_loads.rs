@@ -91,8 +91,7 @@ pub(super) fn sideways(board: &mut Board, view: &ReturnElevation, ruler: Ruler) 
         board.note(note.spot(Spot::new(back - right * 1.5, -ruler.hand, 0.0)));
     } else if let Some(front) = view.tributary {
         let at = ruler.by(face, 0.3 * h, -clear, 0.0);
-        let by = if view.through_floor { ", by the floor" } else { "" };
-        let text = Text::plain(&format!("takes {} of front{by}", mm(front)));
+        let text = Text::plain(&format!("takes {} of front", mm(front)));
         board.note(Note::new(Role::Note, at, text).spot(Spot::new(at, -ruler.hand, 0.0)));
     }
 
