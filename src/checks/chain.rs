@@ -11,10 +11,11 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let links = links::links(job.building);
     let drawings = job.drawings(|| [sketch::chain(&view(job, &links))]);
     named(&mut s, &drawings);
-    let fails = |l: &Link| l.proof == Proof::Calculated && calculated(job, l).0 == Known::Fails;
+    let fails = |l: &Link| l.proof == Proof::Calculated && calculated(job, l).0 != Known::Calculated;
     let open = |l: &Link| l.proof == Proof::Assumed || fails(l) || !unshown(job, l).is_empty();
     let strong: Vec<usize> = links.iter().enumerate().filter(|(_, l)| open(l)).map(|(i, _)| i).collect();
-    let proof = |l: &Link| if fails(l) { "not adequate".to_owned() } else { l.proof.word().to_owned() };
+    let proof =
+        |l: &Link| if fails(l) { calculated(job, l).0.words().to_owned() } else { l.proof.word().to_owned() };
     let words = |l: &Link| match (fails(l), unshown(job, l)) {
         (true, _) => join(&calculated(job, l).1, &l.words),
         (false, hold) if !hold.is_empty() => join(&hold, &l.words),
@@ -122,11 +123,13 @@ fn branch(job: &Job<'_>, l: &Link) -> Branch {
 /// A link on sheets of this pack holds where what stands on them does.
 fn calculated(job: &Job<'_>, l: &Link) -> (Known, String) {
     let about = marks(job.building, l);
-    let failing: Vec<&str> = about.into_iter().filter(|m| job.failing.iter().any(|f| f == m)).collect();
-    if failing.is_empty() {
-        return (Known::Calculated, join(&sheets(job.building, l), &unshown(job, l)));
+    for (known, list) in [(Known::Fails, &job.failing), (Known::Outside, &job.outside)] {
+        let broken: Vec<&str> = about.iter().copied().filter(|m| list.iter().any(|f| f == m)).collect();
+        if !broken.is_empty() {
+            return (known, format!("see {}", broken.join(", ")));
+        }
     }
-    (Known::Fails, format!("see {}", failing.join(", ")))
+    (Known::Calculated, join(&sheets(job.building, l), &unshown(job, l)))
 }
 
 fn join(a: &str, b: &str) -> String {

@@ -94,6 +94,8 @@ pub struct Job<'a> {
     pub holds: Vec<Hold>,
     /// Marks of what earlier sheets did not find adequate.
     pub failing: Vec<String>,
+    /// Marks of what earlier sheets left outside the method, and that does not fail.
+    pub outside: Vec<String>,
     /// Whether drawings are wanted: they take longer than all checks together.
     pub drawn: bool,
 }
@@ -119,6 +121,7 @@ impl<'a> Job<'a> {
             piers: Vec::new(),
             holds,
             failing: Vec::new(),
+            outside: Vec::new(),
             drawn: true,
         };
         job.whole = whole::of(&job);
@@ -211,9 +214,12 @@ fn of(mut job: Job<'_>) -> Results {
     let mut sections: Vec<Section> = Vec::new();
     for check in LIST {
         let found = check(&job);
-        let fails = |s: &&Section| !outcome::holds_all(&s.sheet) || !s.sheet.outside.is_empty();
         // A sheet of several things names them with commas between.
-        job.failing.extend(found.iter().filter(fails).flat_map(|s| s.mark.split(", ")).map(str::to_owned));
+        let marks = |s: &Section| s.mark.split(", ").map(str::to_owned).collect::<Vec<_>>();
+        let (hold, fail): (Vec<&Section>, Vec<&Section>) =
+            found.iter().partition(|s| outcome::holds_all(&s.sheet));
+        job.failing.extend(fail.into_iter().flat_map(marks));
+        job.outside.extend(hold.into_iter().filter(|s| !s.sheet.outside.is_empty()).flat_map(marks));
         sections.extend(found);
     }
     let outcome = outcome::of_job(&sections, &job.holds);

@@ -66,6 +66,13 @@ fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
             hold: None,
         });
     }
+    for r in named(job, p).filter(|r| job.outside.contains(&r.mark)) {
+        let words = format!(
+            "an edge of this panel is held by {}, which its own sheet leaves outside the method",
+            r.mark
+        );
+        s.leave(Outside::new(&format!("leans-{}", r.mark), "statics", words));
+    }
 }
 
 /// The model of a panel, strengths derived silently: they stand on the materials sheet.

@@ -49,10 +49,13 @@ pub enum Known {
     Assumed,
     /// Calculated, and it does not hold: as broken.
     Fails,
+    /// Left outside the method by what calculates it: as broken.
+    Outside,
 }
 
 impl Known {
-    const ALL: [Self; 5] = [Self::Calculated, Self::Rule, Self::Seen, Self::Assumed, Self::Fails];
+    const ALL: [Self; 6] =
+        [Self::Calculated, Self::Rule, Self::Seen, Self::Assumed, Self::Fails, Self::Outside];
 
     /// In words.
     pub const fn words(self) -> &'static str {
@@ -62,6 +65,7 @@ impl Known {
             Self::Seen => "seen",
             Self::Assumed => "assumed",
             Self::Fails => "not adequate",
+            Self::Outside => "outside the method",
         }
     }
 }
@@ -253,7 +257,7 @@ fn limb(board: &mut Board, known: Known, from: Point, to: Point) {
                 board.line(Pen::Beyond, from + side * way, to + side * way);
             }
         }
-        Known::Fails => {
+        Known::Fails | Known::Outside => {
             // Broken, and crossed out.
             let (a, b) = (from.lerp(to, 0.3), from.lerp(to, 0.7));
             board.line(Pen::Open, from, a);
@@ -298,7 +302,7 @@ fn frame(board: &mut Board, known: Known, area: Rect) {
             board.rect(Pen::Beyond, area);
             board.rect(Pen::Beyond, area.inset(-0.8));
         }
-        Known::Assumed | Known::Fails => board.rect(Pen::Open, area),
+        Known::Assumed | Known::Fails | Known::Outside => board.rect(Pen::Open, area),
     }
 }
 
@@ -321,8 +325,9 @@ fn close(board: &mut Board, above: &[(f64, String)], centre: f64, y: f64) {
 
 /// What the lines stand for; what fails says so in its node.
 fn key(board: &mut Board, view: &Chain, y: f64) {
-    let fails = view.links.iter().flat_map(|l| &l.branches).any(|b| b.known == Known::Fails);
-    let known: Vec<Known> = Known::ALL.into_iter().filter(|k| fails || *k != Known::Fails).collect();
+    let broken = |k: &Known| matches!(k, Known::Fails | Known::Outside);
+    let there = |k: &Known| view.links.iter().flat_map(|l| &l.branches).any(|b| b.known == *k);
+    let known: Vec<Known> = Known::ALL.into_iter().filter(|k| !broken(k) || there(k)).collect();
     let step = (NAMES + NODES) / known.len() as f64;
     for (n, known) in known.into_iter().enumerate() {
         let from = Point::new(n as f64 * step, y);

@@ -112,6 +112,20 @@ fn a_pier_with_a_free_edge_by_hand() {
     assert!((sheet - hand).abs() < 1e-9 * hand, "{sheet} {hand}");
 }
 
+/// A pier wider than the strip that spreads the load of its jamb: 0.7 h over the root of mu, here 2.17 m of 2.8 m.
+#[test]
+fn a_wide_pier_with_a_free_edge_by_hand() {
+    let (m_1, m_2) = resistances();
+    let mut m = panel(&[window(400.0, 800.0, 900.0, 1200.0, Frame::Jambs)]);
+    m.after.right.kind = Free;
+    let strip = 0.7 * 2400.0 / (m_1 / m_2).sqrt();
+    assert!(strip < 2800.0);
+    // Its own wind, and half of the opening on the strip: parts of one strength.
+    let hand = 1.0 / (2400.0 * 2400.0 / (8.0 * m_1) * (1.0 + 400.0 / strip));
+    let sheet = pressure(&m);
+    assert!((sheet - hand).abs() < 1e-9 * hand, "{sheet} {hand}");
+}
+
 /// Top and base are what piers span between: without one of them nothing is said.
 #[test]
 fn a_free_top_is_outside() {

@@ -91,3 +91,16 @@ fn bond_does_not_help_against_crushing() {
     let middle: Vec<f64> = r2.verdicts.iter().filter(|v| v.id.contains("middle")).map(|v| v.ratio).collect();
     assert!(middle.iter().any(|r| *r > 1.0), "{middle:?}");
 }
+
+/// What a return leaves outside the method its panel leaves outside too: neither adequate nor not.
+#[test]
+fn a_panel_held_by_what_is_outside_is_outside() {
+    let text = demo("rear-opening").replacen("restraint = \"timber floor\"", "restraint = \"none\"", 1);
+    let (_, results) = results(&text);
+    let of = |id: &str| &results.sections.iter().find(|s| s.id == id).expect("its sheet").sheet;
+    assert!(!of("R1").outside.is_empty() && of("R1").verdicts.iter().all(|v| v.holds));
+    assert!(of("P1").outside.iter().any(|o| o.words.contains("held by R1")), "{:?}", of("P1").outside);
+    assert!(perpend::checks::outcome::holds_all(of("P1")), "it is not said to fail");
+    let chain = results.sections.iter().find(|s| s.id == "chain").expect("its sheet");
+    assert!(chain.drawings[0].alt.contains("outside the method (see P1)"), "{}", chain.drawings[0].alt);
+}
