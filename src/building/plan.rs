@@ -42,6 +42,8 @@ pub struct PlanOpening {
     pub height: Length,
     /// How its frame passes the wind on.
     pub frame: Frame,
+    /// How far its lintel bears on the wall at either end, where that is known.
+    pub bearing: Option<Length>,
 }
 
 /// What a floor or roof weighs and carries, per area on plan.

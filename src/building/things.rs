@@ -268,6 +268,8 @@ pub struct Padstone {
 pub struct Edge {
     /// Free, simple or continuous.
     pub kind: crate::standards::masonry::Edge,
+    /// The stretch of the edge that is held so, from the left end or the foot; none where all of it is.
+    pub stretch: Option<(Length, Length)>,
     /// Why.
     pub reason: String,
 }
@@ -305,6 +307,8 @@ pub struct PanelOpening {
     pub height: Length,
     /// How its frame passes the wind on.
     pub frame: Frame,
+    /// How far its lintel bears on the wall at either end, where that is known.
+    pub bearing: Option<Length>,
 }
 
 /// What resists the arch thrust.

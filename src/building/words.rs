@@ -148,6 +148,8 @@ PanelRoute {
     OneWay = "one way",
     /// Arch thrust.
     Arching = "arching",
+    /// Limit analysis of the whole panel with its openings; its safe side decides.
+    LimitAnalysis = "limit analysis",
 });
 
 choice!(/// How two leaves share the wind.

@@ -1,11 +1,12 @@
 //! The edge of a floor along the top of a panel: the wind that draws the wall off it, and its straps.
 
+use super::panels::bracket::reactions;
 use super::panels::{PanelModel, strength};
 use super::{Job, Section, links, panel_sheet};
 use crate::building::{FloorEdge, Joists, StrapsKnown};
-use crate::quantity::functions::{KN, MPA};
+use crate::quantity::functions::{KN, MPA, max};
 use crate::quantity::print::show;
-use crate::quantity::{Length, Num};
+use crate::quantity::{Length, LineLoad, Num, Stress};
 use crate::standards::annex::Annex;
 use crate::standards::tables::approved_document_a as ada;
 use crate::standards::tables::gamma_m;
@@ -94,7 +95,7 @@ pub fn check(s: &mut Sheet, e: &FloorEdge, m: &PanelModel, annex: &Annex) {
     given!(s, "net pressure on the panel, characteristic", &m.q_source, q_net = m.q_net);
     given!(s, "factor on wind", "EN 1990 NA.A1.2", gamma_W = Num::new(annex.gamma_Q));
     given!(s, "wind face that the floor collects", "job file", h_s = e.strip_height);
-    calc!(s, "EN 1990 eq. 6.10", "pull on the floor edge", n_s = gamma_W * q_net * h_s);
+    let n_s = pull(s, m, annex, gamma_W, q_net, h_s);
     let leaf = &m.leaves[m.loaded()];
     given!(s, "factor on dead load that helps", "basis of this job", gamma_h = Num::new(m.helping));
     let G_a = strength::helps(s, leaf, annex, gamma_h);
@@ -138,6 +139,33 @@ pub fn check(s: &mut Sheet, e: &FloorEdge, m: &PanelModel, annex: &Annex) {
             let _ = s_max;
         }
     }
+}
+
+/// What the floor edge gets: the wind on its strip, and no less than what the panel's limit analysis brings to its top
+/// with the rest of the strip. The arguments stand on the sheet.
+fn pull(s: &mut Sheet, m: &PanelModel, annex: &Annex, gamma_W: Num, q_net: Stress, h_s: Length) -> LineLoad {
+    let top = reactions::of(m, annex).and_then(|all| all.into_iter().find(|r| r.edge == "top"));
+    let Some(top) = top else {
+        calc!(s, "EN 1990 eq. 6.10", "pull on the floor edge", n_s = gamma_W * q_net * h_s);
+        return n_s;
+    };
+    let source = format!("limit analysis, sheet {}", m.mark);
+    given!(
+        s,
+        "top of the panel with its openings, largest stretch, design",
+        &source,
+        n_top = LineLoad::new(top.most)
+    );
+    given!(s, "clear height of the panel", "job file", h = m.h);
+    given!(s, "least", "no wind face", h_0 = Length::ZERO);
+    calc!(s, "statics", "rest of the strip, beyond half the panel", h_rest = max(h_s - h / 2.0, h_0));
+    calc!(
+        s,
+        "EN 1990 eq. 6.10",
+        "pull on the floor edge",
+        n_s = max(gamma_W * q_net * h_s, n_top + gamma_W * q_net * h_rest)
+    );
+    n_s
 }
 
 /// The rule on straps beside the calculation, never instead of it.

@@ -1,8 +1,11 @@
 //! The sheet of each panel, before and after the removal.
 
+use super::panels::bracket::Effort;
 use super::panels::{self, PanelModel};
 use super::{Job, Section, masonry, panel_views};
-use crate::building::{Building, Panel, Return};
+use crate::building::{Building, Panel, Path, Return};
+use crate::quantity::LineLoad;
+use crate::quantity::print::show;
 use crate::sketch::Wind;
 use crate::standards::masonry::Edge;
 use crate::trace::{Outside, Sheet, Unshown};
@@ -30,6 +33,7 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             sheet.drawings(&[&name("before"), &name("after")]);
             leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
+            passed_on(job, p, &m, &mut sheet);
             sheet.drawings(&[&name("section")]);
             let off = p.wind.is_none() && job.wind.as_ref().is_ok_and(|w| w.off_panel(p));
             let wind = if off { Wind::Away } else { Wind::Toward };
@@ -75,6 +79,43 @@ fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
     }
 }
 
+/// What the panel's limit analysis brings to returns that hold its ends, against what their own sheets count.
+fn passed_on(job: &Job<'_>, p: &Panel, m: &PanelModel, s: &mut Sheet) {
+    let (Some(all), Ok(wind)) = (panels::bracket::reactions::of(m, &job.annex), &job.wind) else { return };
+    for (side, edge) in [("left", &p.after.left), ("right", &p.after.right)] {
+        let Some(reaction) = all.iter().find(|r| r.edge == side) else { continue };
+        let named = named(job, p).filter(|r| r.path != Path::UpAndDown && edge.reason.contains(&r.mark));
+        for r in named {
+            let brings = LineLoad::new(reaction.total / reaction.length);
+            let counts = wind.of_return(job.building, r).overall * r.tributary_width * job.annex.gamma_Q;
+            let line = |x: LineLoad| show("w_Ed", x.dynamic()).to_string();
+            if brings <= counts {
+                s.note(format!(
+                    "To {} the panel brings {} over the height; the sheet of {} counts {} for its whole strip.",
+                    r.mark,
+                    line(brings),
+                    r.mark,
+                    line(counts)
+                ));
+            } else {
+                s.unshown(Unshown {
+                    id: format!("brings-{}", r.mark),
+                    clause: "limit analysis".to_owned(),
+                    words: format!("wind passed on to {}", r.mark),
+                    finding: format!(
+                        "By limit analysis the panel brings {} to {}, more than the {} that its sheet counts.",
+                        line(brings),
+                        r.mark,
+                        line(counts)
+                    ),
+                    ratio: Some(brings.base() / counts.base()),
+                    hold: None,
+                });
+            }
+        }
+    }
+}
+
 /// The model of a panel, strengths derived silently: they stand on the materials sheet.
 pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
     let b = job.building;
@@ -94,7 +135,8 @@ pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
         )?);
     }
     let m = panels::model(b, p, &leaves, wind.of_panel(p), "wind sheet").ok_or_else(missing)?;
-    Ok(PanelModel { strengths_on: same_leaves(b, p), ..m })
+    let effort = if job.drawn { Effort::Read } else { Effort::Decide };
+    Ok(PanelModel { strengths_on: same_leaves(b, p), effort, ..m })
 }
 
 /// The first panel before this one with the same wall, height and load: its sheet has the strengths.

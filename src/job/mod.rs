@@ -16,6 +16,7 @@ mod bearing;
 mod bearings;
 mod closing;
 mod date;
+mod edges;
 mod entry;
 mod figure;
 mod floors;

@@ -6,6 +6,7 @@ use super::reader::Table;
 use crate::building::{PanelOpening, Span};
 use crate::error::Kind;
 use crate::quantity::Length;
+use crate::quantity::functions::min;
 
 const AT: Limits = Limits::new(0.0, 20.0, "m");
 const WIDTH: Limits = Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
@@ -24,8 +25,16 @@ pub fn read(t: &Table<'_>) -> Option<Vec<PanelOpening>> {
         let sill = if o.has("sill") { o.may("sill").quantity(&SILL) } else { Some(Length::ZERO) };
         let height = o.need("height").quantity(&HEIGHT);
         let frame = plan::frame(o);
+        let bearing = plan::lintel(o);
         o.finish();
-        Some(PanelOpening { at: at?, width: width?, sill: sill?, height: height?, frame: frame? })
+        Some(PanelOpening {
+            at: at?,
+            width: width?,
+            sill: sill?,
+            height: height?,
+            frame: frame?,
+            bearing: bearing?,
+        })
     };
     let all: Vec<_> = t.may("openings").tables(&format!("{}, opening", t.name), "").iter().map(one).collect();
     let mut all: Vec<PanelOpening> = all.into_iter().collect::<Option<_>>()?;
@@ -89,6 +98,17 @@ pub fn fit(t: &Table<'_>, all: &[PanelOpening], length: Length, height: Length) 
                 );
                 return;
             }
+        }
+        if let Some(bearing) = o.bearing.filter(|b| *b > min(o.at - reached, next - end)) {
+            fault(
+                format!(
+                    "the lintel of opening {n} bears {} at either end, more than the masonry there",
+                    mm(bearing)
+                ),
+                format!("at most {}", mm(min(o.at - reached, next - end))),
+                "correct the bearing, or write openings under one lintel as one",
+            );
+            return;
         }
         reached = end;
     }

@@ -1,5 +1,6 @@
 //! `[[panels]]`: outer walls across their plane, before and after the removal.
 
+use super::edges;
 use super::entry::{Entry, quoted};
 use super::ground::{DRAWN, HEIGHT};
 use super::limits::{Limits, Odd};
@@ -7,7 +8,6 @@ use super::openings;
 use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
-use super::words::EDGES;
 use crate::building::found::{self, FoundPanel, FoundSpan};
 use crate::building::{Arching, Edge, Panel, PanelRoute, PlanWall, Sharing, Span, Storey, line_of};
 use crate::error::Kind;
@@ -79,6 +79,13 @@ pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
     }
     if let (Some(after), Some(height)) = (&after, height) {
         openings::fit(t, &after.openings, after.length, height);
+    }
+    if let Some(height) = height {
+        for (own, span) in [(&before_table, &before), (&after_table, &after)] {
+            if let (Some(own), Some(span)) = (own, span) {
+                edges::fit(own, span, height);
+            }
+        }
     }
     let arching = arching(t, route);
 
@@ -184,7 +191,7 @@ fn read_side<'a>(
             taken = true;
             Some(drawn)
         }
-        _ => edge(own, key),
+        _ => edges::read(own, key),
     };
     let top = edge("top", drawn.as_ref().map(|d| d.top.clone()));
     let base = edge("base", drawn.as_ref().map(|d| d.base.clone()));
@@ -283,23 +290,6 @@ fn between<'a>(t: &Table<'a>, around: &Around<'_, 'a>, on: &PlanWall) -> Option<
         return None;
     }
     Some((Length::new(a.min(z)), Length::new(a.max(z))))
-}
-
-fn edge(t: &Table<'_>, key: &'static str) -> Option<Edge> {
-    let entry = t.need(key);
-    let wanted = "{ edge = \"simple\", reason = \"...\" }";
-    if let Some(toml::de::DeValue::String(_)) = entry.present(wanted) {
-        t.fault(Kind::Missing, format_args!("`{key}` says how the edge is held, but not why"))
-            .at(entry.place(), "no reason")
-            .allowed(wanted)
-            .help(format!("write {key} = {{ edge = \"...\", reason = \"...\" }}"));
-        return None;
-    }
-    let table = entry.table(&format!("{}, {key}", t.name))?;
-    let kind = table.need("edge").pick(EDGES);
-    let reason = table.need("reason").text();
-    table.finish();
-    Some(Edge { kind: kind?, reason: reason? })
 }
 
 fn arching(t: &Table<'_>, route: Option<PanelRoute>) -> Option<Arching> {

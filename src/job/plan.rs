@@ -21,6 +21,9 @@ const AREA: Limits = Limits::new(0.0, 20.0, "kN/m2").odd(&[Odd::Above(8.0, "much
 const DEAD: Limits = Limits::new(0.05, 20.0, "kN/m2")
     .odd(&[Odd::Below(0.2, "little for a floor or roof"), Odd::Above(8.0, "much for a floor of a house")]);
 const BEAM: Limits = Limits::new(0.0, 10.0, "kN/m").odd(&[Odd::Above(2.0, "heavy for a beam in a house")]);
+/// 100 mm as the least for a lintel, and 150 mm for wider openings: common practice, no published source.
+const LINTEL: Limits =
+    Limits::new(20.0, 600.0, "mm").odd(&[Odd::Below(100.0, "short for the bearing of a lintel")]);
 const BEARING: Limits = Limits::new(50.0, 600.0, "mm").odd(&[Odd::Below(90.0, "short for a bearing")]);
 const WIDTH: Limits = Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
 const OPENING: Limits = Limits::new(0.2, 6.0, "m");
@@ -100,6 +103,7 @@ fn opening<'a>(t: &Table<'a>, storeys: &Names<'a, Storey>) -> Option<PlanOpening
     let height: Option<Length> = t.need("height").quantity(&OPENING);
     let sill = if t.has("sill") { t.may("sill").quantity(&SILL) } else { Some(Length::ZERO) };
     let frame = frame(t);
+    let bearing = lintel(t);
     t.finish();
     if let (Some(height), Some(sill), Some(seen)) =
         (height, sill, storey.as_ref().and_then(|s| storeys.item(s)))
@@ -118,7 +122,13 @@ fn opening<'a>(t: &Table<'a>, storeys: &Names<'a, Storey>) -> Option<PlanOpening
         sill: sill?,
         height: height?,
         frame: frame?,
+        bearing: bearing?,
     })
+}
+
+/// How far the lintel of an opening bears at either end: `Some(None)` where the job does not say.
+pub fn lintel(t: &Table<'_>) -> Option<Option<Length>> {
+    if t.has("lintel") { t.may("lintel").quantity(&LINTEL).map(Some) } else { Some(None) }
 }
 
 /// How the frame of an opening passes the wind on; unknown where it is not said.

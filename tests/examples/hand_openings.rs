@@ -16,7 +16,7 @@ use super::hand_panel::brick_leaf;
 
 pub fn window(at: f64, width: f64, sill: f64, height: f64, frame: Frame) -> PanelOpening {
     let mm = Length::new;
-    PanelOpening { at: mm(at), width: mm(width), sill: mm(sill), height: mm(height), frame }
+    PanelOpening { at: mm(at), width: mm(width), sill: mm(sill), height: mm(height), frame, bearing: None }
 }
 
 /// A brick leaf of 102.5 mm, 2.4 m high and 4.0 m long on four simple edges, 8.5 kN/m on top, with these openings.

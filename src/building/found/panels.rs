@@ -93,6 +93,7 @@ fn within(doors: &[(f64, f64, &PlanOpening)], (a, z): (f64, f64), rightwards: bo
             sill: o.sill,
             height: o.height,
             frame: o.frame,
+            bearing: o.bearing,
         })
     };
     let mut out: Vec<PanelOpening> = doors.iter().filter_map(one).collect();

@@ -1,8 +1,9 @@
 //! Which way a panel spans, and what a leaf takes that way.
 
+use super::bracket::{self, Bounds};
 use super::model::PanelModel;
 use super::strength::Strength;
-use crate::building::PanelRoute;
+use crate::building::{PanelRoute, Span};
 use crate::quantity::functions::sq;
 use crate::quantity::{Force, Length, Num, Stress};
 use crate::standards::en1996::lateral::{coefficient, span};
@@ -21,6 +22,8 @@ pub enum Form {
     Horizontal,
     /// Held at its base alone.
     Cantilever,
+    /// As limit analysis finds.
+    Limit,
 }
 
 impl Form {
@@ -31,6 +34,7 @@ impl Form {
             Self::Vertical => "vertical",
             Self::Horizontal => "horizontal",
             Self::Cantilever => "cantilever",
+            Self::Limit => "limit",
         }
     }
 
@@ -41,6 +45,7 @@ impl Form {
             Self::Vertical => "spanning between top and base",
             Self::Horizontal => "spanning between its vertical edges",
             Self::Cantilever => "held at its base alone",
+            Self::Limit => "as limit analysis finds",
         }
     }
 
@@ -53,6 +58,9 @@ impl Form {
         let held = |e: Edge| e != Edge::Free;
         let floors = held(top) && held(base);
         let sides = held(left) && held(right);
+        if route == PanelRoute::LimitAnalysis {
+            return Ok(Self::Limit);
+        }
         if route == PanelRoute::OneWay {
             return if floors {
                 Ok(Self::Vertical)
@@ -98,6 +106,8 @@ pub struct LeafOutcome {
     pub across: Option<(Force, Force)>,
     /// Pressure it can take.
     pub w_Rd: Stress,
+    /// By limit analysis, where that was worked.
+    pub bounds: Option<Bounds>,
 }
 
 /// What is worked with: a state of the panel. `W_Ed`, `h` and `l` stand on the sheet.
@@ -132,12 +142,19 @@ macro_rules! by_leaf {
     };
 }
 
-/// Works one leaf: the pressure it can take, and for a single leaf the moments against their resistances.
+/// Works one leaf without openings, or any by limit analysis: the pressure it can take, and for a single leaf the
+/// moments against their resistances.
 ///
 /// # Errors
 /// [`Outside`] where the strength or the coefficient that this way of spanning needs does not exist.
-pub fn leaf(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOutcome, Outside> {
+pub fn leaf(
+    s: &mut Sheet,
+    state: State<'_>,
+    span: &Span,
+    strength: &Strength,
+) -> Result<LeafOutcome, Outside> {
     match state.form {
+        Form::Limit => bracket::sheet::leaf(s, state, span, strength),
         Form::Plate => plate(s, state, strength),
         Form::Horizontal => horizontal(s, state, strength),
         Form::Vertical | Form::Cantilever => upright(s, state, strength),

@@ -4,10 +4,12 @@
 //! * [`strength`]: what each leaf resists per unit width
 //! * [`form`]: which way the panel spans, what pressure a leaf can take
 //! * [`opened`]: the same with doors and windows, by piers and strips
+//! * [`bracket`]: the same by limit analysis, between a safe side and an upper one
 //! * [`sharing`]: two leaves and their ties
 //! * [`run`]: the check: before as information, after as the verdict, both side by side
 //! * [`remedy`]: what would make it pass
 
+pub mod bracket;
 pub mod form;
 pub mod model;
 pub mod opened;

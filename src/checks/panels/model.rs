@@ -1,9 +1,10 @@
 //! What the check of one panel needs.
 
-use crate::building::{Arching, Building, Cause, Panel, PanelRoute, Sharing, Span};
+use super::bracket::Effort;
+use crate::building::{self, Arching, Building, Cause, Panel, PanelRoute, Sharing, Span};
 use crate::checks::masonry::Masonry;
 use crate::quantity::{Force, Length, LineLoad, PerArea, Stress};
-use crate::standards::tables::annex_e::Edges;
+use crate::standards::tables::annex_e::{Edge, Edges};
 
 /// One leaf.
 #[derive(Clone, Debug)]
@@ -49,6 +50,8 @@ pub struct PanelModel {
     pub before: Span,
     /// After the removal.
     pub after: Span,
+    /// How much of a limit analysis is worked.
+    pub effort: Effort,
     /// The sheet on which the same leaves, of the same height and load, are worked already.
     pub strengths_on: Option<String>,
 }
@@ -90,9 +93,10 @@ impl PanelModel {
     }
 }
 
-/// The edges of a span.
+/// The edges of a span, for a check that knows whole edges alone: one that is held over a part counts as free.
 pub fn edges(span: &Span) -> Edges {
-    Edges::new(span.top.kind, span.base.kind, span.left.kind, span.right.kind)
+    let of = |e: &building::Edge| if e.stretch.is_some() { Edge::Free } else { e.kind };
+    Edges::new(of(&span.top), of(&span.base), of(&span.left), of(&span.right))
 }
 
 /// What the check of panel `p` needs. `masonry` holds the strengths of its leaves, outer first; `q_net` is the
@@ -141,6 +145,7 @@ pub fn model(
         arching: p.arching.clone(),
         before: p.before.clone(),
         after: p.after.clone(),
+        effort: Effort::default(),
         strengths_on: None,
     })
 }

@@ -1,7 +1,9 @@
 //! What would make a panel pass: by search on the same check, on a silent sheet.
 
+use super::bracket::Effort;
 use super::model::PanelModel;
 use super::run::check;
+use crate::building::PanelRoute;
 use crate::quantity::print::show;
 use crate::quantity::{Length, LineLoad, Stress};
 use crate::solve::root::{greatest, least};
@@ -12,6 +14,9 @@ use crate::trace::{Sheet, Value};
 /// Lengths are given in steps of 10 mm, loads with the three digits that are printed; always rounded to the
 /// side that passes.
 const LENGTH_STEP: f64 = 10.0;
+
+/// Wall that stays beside an opening as it is widened, mm: narrower masonry is not counted on.
+const NARROWEST: f64 = 100.0;
 
 fn digits_step(x: f64) -> f64 {
     if x > 0.0 { 10f64.powf(x.log10().floor() - 2.0) } else { 1.0 }
@@ -35,7 +40,7 @@ pub struct Remedy {
 /// Whether the panel passes: every verdict after the removal holds and no limit is left.
 pub fn passes(m: &PanelModel, annex: &Annex) -> bool {
     let mut s = Sheet::silent();
-    check(&mut s, m, annex);
+    check(&mut s, &PanelModel { effort: Effort::Search, ..m.clone() }, annex);
     s.holds()
 }
 
@@ -55,7 +60,69 @@ pub fn greatest_length(m: &PanelModel, annex: &Annex) -> Option<Length> {
         shorter.after.length = Length::new(l);
         passes(&shorter, annex)
     };
-    greatest(at, l / 10.0, l * 4.0, 195, 0.5).map(|l| Length::new(down(l, LENGTH_STEP)))
+    let (steps, precision) = if m.route == PanelRoute::LimitAnalysis { (39, 20.0) } else { (195, 0.5) };
+    greatest(at, l / 10.0, l * 4.0, steps, precision).map(|l| Length::new(down(l, LENGTH_STEP)))
+}
+
+/// How finely a length is searched from its own value up: steps, and mm. A limit analysis is worked at each.
+fn fineness(m: &PanelModel) -> (u32, f64) {
+    if m.route == PanelRoute::LimitAnalysis { (20, 25.0) } else { (200, 1.0) }
+}
+
+/// Greatest length of a panel that passes, from its own to twice that.
+pub fn longest(m: &PanelModel, annex: &Annex) -> Option<Length> {
+    let l = m.after.length.base();
+    let at = |l: f64| {
+        let mut longer = m.clone();
+        longer.after.length = Length::new(l);
+        passes(&longer, annex)
+    };
+    let (steps, precision) = fineness(m);
+    greatest(at, l, 2.0 * l, steps, precision).map(|l| Length::new(down(l, LENGTH_STEP)))
+}
+
+/// Greatest width of opening `i` of a panel that passes, widened evenly to both sides, and the width at which only
+/// [`NARROWEST`] is left beside it.
+pub fn widest(m: &PanelModel, annex: &Annex, i: usize) -> Option<(Length, Length)> {
+    let all = &m.after.openings;
+    let o = all.get(i)?;
+    let (from, to) = (o.at.base(), (o.at + o.width).base());
+    let left = i.checked_sub(1).map_or(0.0, |j| (all[j].at + all[j].width).base());
+    let right = all.get(i + 1).map_or(m.after.length.base(), |next| next.at.base());
+    let spare = (from - left).min(right - to) - NARROWEST;
+    let width = to - from;
+    let at = |w: f64| {
+        let mut wider = m.clone();
+        let o = &mut wider.after.openings[i];
+        o.at = Length::new((from + to - w) / 2.0);
+        o.width = Length::new(w);
+        passes(&wider, annex)
+    };
+    let most = width + 2.0 * spare.max(0.0);
+    let (steps, precision) = fineness(m);
+    let w = greatest(at, width, most, steps, precision)?;
+    Some((Length::new(down(w, LENGTH_STEP)), Length::new(down(most, LENGTH_STEP))))
+}
+
+/// How far a panel with openings that passes may move, as lines of a table: what, as it is, up to.
+pub fn margins(m: &PanelModel, annex: &Annex) -> Vec<[String; 3]> {
+    let mm = |l: Length| show("l", l.dynamic()).to_string();
+    let mut out = Vec::new();
+    if let Some(q) = greatest_wind(m, annex) {
+        let pressure = |q: Stress| show("q_net", q.dynamic()).to_string();
+        out.push(["net pressure, characteristic".to_owned(), pressure(m.q_net), pressure(q)]);
+    }
+    if let Some(l) = longest(m, annex) {
+        let end = down(2.0 * m.after.length.base(), LENGTH_STEP);
+        let to = if l.base() >= end { format!("{} and more", mm(l)) } else { mm(l) };
+        out.push(["length, added at its right end".to_owned(), mm(m.after.length), to]);
+    }
+    for (i, o) in m.after.openings.iter().enumerate() {
+        let Some((w, most)) = widest(m, annex, i) else { continue };
+        let to = if w >= most { format!("{}, no wall left beside it", mm(w)) } else { mm(w) };
+        out.push([format!("width of opening {}, about its middle", i + 1), mm(o.width), to]);
+    }
+    out
 }
 
 /// Least dead load per length on the loaded leaf at which the panel passes, up to 500 kN/m; `None` where
@@ -67,7 +134,9 @@ pub fn least_dead(m: &PanelModel, annex: &Annex) -> Option<LineLoad> {
         heavier.leaves[i].G_above = LineLoad::new(g);
         passes(&heavier, annex)
     };
-    least(at, 0.0, 500.0, 100, 1e-3).map(|g| LineLoad::new((g / digits_step(g)).ceil() * digits_step(g)))
+    let (steps, precision) = if m.route == PanelRoute::LimitAnalysis { (12, 2.0) } else { (100, 1e-3) };
+    least(at, 0.0, 500.0, steps, precision)
+        .map(|g| LineLoad::new((g / digits_step(g)).ceil() * digits_step(g)))
 }
 
 /// Simple edges that would do it if one of them alone were continuous, by name.

@@ -1,9 +1,10 @@
 //! The check of a panel: before as information, after as the verdict, and both side by side.
 
+use super::bracket::{Bounds, Effort};
 use super::form::{Form, LeafOutcome, State, leaf};
 use super::model::{PanelModel, edges};
 use super::strength::{self, Strength};
-use super::{opened, remedy, sharing};
+use super::{bracket, opened, remedy, sharing};
 use crate::building::{PanelRoute, Span};
 use crate::quantity::print::{self, show};
 use crate::quantity::{Length, Num, Stress};
@@ -26,6 +27,10 @@ pub struct Outcome {
     pub w_Rd: Stress,
     /// Largest use in bending or arching.
     pub ratio: f64,
+    /// By limit analysis, where that was worked.
+    pub bounds: Option<Bounds>,
+    /// By hand, where limit analysis decides.
+    pub hand: Option<Stress>,
 }
 
 /// Checks a panel on the sheet: strengths, before (information), after (verdicts), both side by side, and
@@ -38,6 +43,7 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     s.table(|| held(m));
     let W_Ed = wind(s, m, annex);
     let strengths = strengths(s, m, annex);
+    at_hand(m, &strengths);
     // Before is information: worked silently by the same code, printed in the table side by side.
     let before = s.recording().then(|| {
         let mut quiet = Sheet::silent();
@@ -53,12 +59,30 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
         for o in left {
             s.note(format!("Before the removal: outside the method, {} [{}].", o.words, o.clause));
         }
+        let holds = s.verdicts[v..].iter().all(|v| v.holds) && s.outside.len() == o;
+        let limit = m.route == PanelRoute::LimitAnalysis || !m.after.openings.is_empty();
+        if holds && limit && m.effort == Effort::Read {
+            s.heading(1, "How far it may move");
+            s.table(|| moves(m, annex));
+        }
         if s.verdicts[v..].iter().any(|v| !v.holds) && s.outside.len() == o {
             s.heading(1, "What would make it pass");
             for r in remedy::remedies(m, annex) {
                 s.note(r.sentence);
             }
         }
+    }
+}
+
+/// Has the limit analyses that the sheet will ask for worked on all cores.
+fn at_hand(m: &PanelModel, strengths: &[Strength]) {
+    let all = [&m.after, &m.before];
+    let spans = if m.effort == Effort::Read { &all[..] } else { &all[..1] };
+    let decides = m.route == PanelRoute::LimitAnalysis;
+    let shown = |span: &&&Span| decides || m.effort != Effort::Search && !span.openings.is_empty();
+    let wanted: Vec<&Span> = spans.iter().filter(shown).copied().collect();
+    if m.route != PanelRoute::Arching {
+        bracket::prepare(m, &wanted, strengths, m.effort);
     }
 }
 
@@ -188,20 +212,46 @@ fn bend(
     let state = State { m, edges, form, l, W_Ed, phase, judged: true };
     let first = s.verdicts.len();
     let openings = &span.openings;
-    if !openings.is_empty() && phase == "after" {
+    let by_hand = form != Form::Limit && !openings.is_empty();
+    if by_hand && phase == "after" {
         opened_remarks(s);
     }
-    let leaves = s.columns(&m.leaf_names(), |s, i| match openings.as_slice() {
-        [] => leaf(s, state, &strengths[i]),
-        some => opened::leaf(s, state, &strengths[i], some),
-    });
-    let leaves = leaves.into_iter().collect::<Result<Vec<LeafOutcome>, Outside>>()?;
-    if leaves.len() == 1 {
-        let ratio = s.verdicts[first..].iter().map(|v| v.ratio).fold(0.0, f64::max);
-        return Ok(Outcome { l, w_Rd: leaves[0].w_Rd, leaves, W_Ed, ratio });
+    if form == Form::Limit && phase == "after" {
+        bracket::sheet::decides(s, state, span, strengths);
     }
-    let (w_Rd, ratio) = sharing::cavity(s, state, annex, strengths, &leaves);
-    Ok(Outcome { l, leaves, W_Ed, w_Rd, ratio })
+    let leaves = s.columns(&m.leaf_names(), |s, i| {
+        if by_hand {
+            opened::leaf(s, state, &strengths[i], openings, m.leaf_name(i))
+        } else {
+            leaf(s, state, span, &strengths[i])
+        }
+    });
+    let leaves = match leaves.into_iter().collect::<Result<Vec<LeafOutcome>, Outside>>() {
+        Ok(leaves) => leaves,
+        Err(outside) => {
+            // What the hand route cannot work is shown by the other all the same.
+            if bracket::sheet::wanted(state, span) && by_hand {
+                bracket::sheet::beside(s, state, span, strengths, None);
+            }
+            return Err(outside);
+        }
+    };
+    let (w_Rd, ratio) = if leaves.len() == 1 {
+        (leaves[0].w_Rd, s.verdicts[first..].iter().map(|v| v.ratio).fold(0.0, f64::max))
+    } else {
+        sharing::cavity(s, state, annex, strengths, &leaves)
+    };
+    let mut hand = None;
+    let bounds = if form == Form::Limit {
+        let all: Option<Vec<Bounds>> = leaves.iter().map(|l| l.bounds).collect();
+        hand = bracket::sheet::hand_beside(s, state, span, strengths);
+        all.and_then(|all| bracket::sheet::of_wall(&mut Sheet::silent(), state, &all))
+    } else if bracket::sheet::wanted(state, span) {
+        bracket::sheet::beside(s, state, span, strengths, Some(w_Rd))
+    } else {
+        None
+    };
+    Ok(Outcome { l, leaves, W_Ed, w_Rd, ratio, bounds, hand })
 }
 
 /// How openings are worked by hand, and what of it is not the code's.
@@ -288,7 +338,7 @@ fn arch(
         }
     }
     let leaves = vec![LeafOutcome { label: "arching".to_owned(), w_Rd: q_lat_d, ..Default::default() }];
-    Ok(Outcome { l, leaves, W_Ed, w_Rd: q_lat_d, ratio })
+    Ok(Outcome { l, leaves, W_Ed, w_Rd: q_lat_d, ratio, bounds: None, hand: None })
 }
 
 /// How the edges are held before and after, and why.
@@ -296,7 +346,7 @@ fn held(m: &PanelModel) -> Table {
     let (b, a) = (&m.before, &m.after);
     let row = |name: &str, b: &crate::building::Edge, a: &crate::building::Edge| {
         let why = if b.reason == a.reason { "the same".to_owned() } else { a.reason.clone() };
-        vec![name.to_owned(), b.kind.to_string(), b.reason.clone(), a.kind.to_string(), why]
+        vec![name.to_owned(), how(b), b.reason.clone(), how(a), why]
     };
     Table {
         caption: "Edges, seen from outside".to_owned(),
@@ -308,6 +358,28 @@ fn held(m: &PanelModel) -> Table {
             row("right", &b.right, &a.right),
         ],
         strong: Vec::new(),
+    }
+}
+
+/// How far each thing may move before the panel fails, the others as they are.
+fn moves(m: &PanelModel, annex: &Annex) -> Table {
+    let caption = "Up to where the panel passes by the route that decides, one thing at a time; rounded down";
+    let coarse = "; by limit analysis on a coarse grid, lowered for it by 1 %";
+    let limit = m.route == PanelRoute::LimitAnalysis;
+    Table {
+        caption: format!("{caption}{}", if limit { coarse } else { "" }),
+        columns: ["", "as it is", "passes up to"].map(Column::words).to_vec(),
+        rows: remedy::margins(m, annex).into_iter().map(Vec::from).collect(),
+        strong: Vec::new(),
+    }
+}
+
+/// How an edge is held, with its stretch where that is not all of it.
+fn how(e: &crate::building::Edge) -> String {
+    let mm = |l: Length| show("l", l.dynamic()).to_string();
+    match e.stretch {
+        None => e.kind.to_string(),
+        Some((from, to)) => format!("{} from {} to {}, else free", e.kind, mm(from), mm(to)),
     }
 }
 
@@ -345,6 +417,12 @@ fn side_by_side(m: &PanelModel, before: Option<&Outcome>, after: Option<&Outcome
     }
     row("design pressure".to_owned(), &|o| Some(show("W_Ed", o.W_Ed.dynamic()).to_string()));
     row("pressure the panel can take".to_owned(), &|o| Some(show("w_Rd", o.w_Rd.dynamic()).to_string()));
+    let deciding = m.route == PanelRoute::LimitAnalysis;
+    let low = if deciding { "limit analysis, safe side (decides)" } else { "limit analysis, safe side" };
+    let pressure = |w: Stress| show("w_Rd", w.dynamic()).to_string();
+    row(low.to_owned(), &|o| o.bounds.map(|b| pressure(b.low)));
+    row("limit analysis, weakest crack pattern".to_owned(), &|o| o.bounds?.high.map(pressure));
+    row("by hand".to_owned(), &|o| o.hand.map(pressure));
     row("use".to_owned(), &|o| Some(print::ratio(o.ratio)));
     let strong = vec![rows.len() - 1];
     Table {

@@ -1,8 +1,8 @@
 //! What each leaf resists per unit width: the same before and after.
 
 use super::model::{PanelLeaf, PanelModel};
-use crate::quantity::functions::max;
-use crate::quantity::{Area, Force, Length, LineLoad, Num, Stress};
+use crate::quantity::functions::{max, min};
+use crate::quantity::{Area, Force, Length, LineLoad, Num, Stress, Weight};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
 use crate::standards::en1996::{lateral::strength as clause, slenderness};
@@ -20,6 +20,12 @@ pub struct Strength {
     pub sigma_v: Stress,
     /// The same, at most 0.2 f_d.
     pub sigma_d: Stress,
+    /// Stress of the dead load on top of the leaf that helps, not capped.
+    pub sigma_top: Stress,
+    /// Own weight that helps: stress per height above the joint.
+    pub sigma_own: Weight,
+    /// Design strength parallel to the bed joints, without the help of dead load.
+    pub f_xd1: Stress,
     /// Apparent design strength parallel to the bed joints.
     pub f_xd1_app: Stress,
     /// Section modulus per unit width.
@@ -28,6 +34,15 @@ pub struct Strength {
     pub M_Rd1: Force,
     /// Across the bed joints, where there is such a strength: resistance per unit height and orthogonal ratio.
     pub across: Option<(Force, Num)>,
+}
+
+impl Strength {
+    /// Apparent strength of a bed joint of a full-height pier at the height `part` of `h`: its own dead load in place of
+    /// that at mid-height, capped as that is. 6.3.1(4).
+    pub fn bed_stress(&self, part: f64, h: Length) -> Stress {
+        let helps = self.sigma_top + self.sigma_own * (1.0 - part) * h;
+        self.f_xd1 + min(helps, 0.2 * self.f_d)
+    }
 }
 
 /// Strengths of leaf `i`, written on the sheet.
@@ -61,7 +76,19 @@ pub fn of_leaf(s: &mut Sheet, m: &PanelModel, annex: &Annex, i: usize) -> Streng
             None
         }
     };
-    Strength { t, f_d, sigma_v: pre.sigma_v, sigma_d, f_xd1_app, Z, M_Rd1: parallel.M_Rd1, across }
+    Strength {
+        t,
+        f_d,
+        sigma_v: pre.sigma_v,
+        sigma_d,
+        sigma_top: gamma_h * G_a / t,
+        sigma_own: gamma_h * rho_m,
+        f_xd1: parallel.f_xd1,
+        f_xd1_app,
+        Z,
+        M_Rd1: parallel.M_Rd1,
+        across,
+    }
 }
 
 /// Dead load on top of a leaf that can help; the helping factor `gamma_h` stands on the sheet.

@@ -92,9 +92,9 @@ fn one(s: &mut Sheet, p: &PierModel, w: &Wind, annex: &Annex, ready: Ready, W_Ed
     let both_ways = Form::of(w.panel.route, w.bay.edges, "pier-flexure")
         .is_ok_and(|form| form == Form::Plate)
         && limits(p, w, annex)
-        && form::leaf(&mut Sheet::silent(), state(Form::Plate), &strength).is_ok();
+        && form::leaf(&mut Sheet::silent(), state(Form::Plate), &w.panel.after, &strength).is_ok();
     let form = if both_ways { Form::Plate } else { Form::Vertical };
-    let out = form::leaf(s, state(form), &strength).unwrap_or_default();
+    let out = form::leaf(s, state(form), &w.panel.after, &strength).unwrap_or_default();
     Leaf { strength, out }
 }
 
@@ -203,6 +203,9 @@ fn bending(
         f_d,
         sigma_v: pre.sigma_v,
         sigma_d: pre.sigma_d,
+        sigma_top: gamma_h * G_a / t,
+        sigma_own: gamma_h * rho_m,
+        f_xd1: parallel.f_xd1,
         f_xd1_app,
         Z,
         M_Rd1: parallel.M_Rd1,

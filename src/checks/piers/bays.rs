@@ -5,6 +5,7 @@ use super::around::Lines;
 use super::model::{PierModel, Wind};
 use super::work;
 use crate::building::{BuildUp, Edge as Held, PanelRoute, Sharing, Span, State};
+use crate::checks::panels::bracket::Effort;
 use crate::checks::panels::{PanelLeaf, PanelModel};
 use crate::quantity::{Length, LineLoad, Moment, Stress};
 use crate::solve::descent::Place;
@@ -118,7 +119,7 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         Some(o) => vec![own, leaf(o.t, &o.masonry, false)],
         None => vec![own],
     };
-    let held = Held { kind: Edge::Simple, reason: String::new() };
+    let held = Held { kind: Edge::Simple, stretch: None, reason: String::new() };
     let span = Span {
         length: p.m.l,
         ends: None,
@@ -142,6 +143,7 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         arching: None,
         before: span.clone(),
         after: span,
+        effort: Effort::default(),
         strengths_on: None,
     }
 }

@@ -29,6 +29,7 @@ pub fn leaf(
     state: State<'_>,
     strength: &Strength,
     openings: &[PanelOpening],
+    name: &str,
 ) -> Result<LeafOutcome, Outside> {
     let id = format!("{}-{}", state.form.id(), state.phase);
     let edges = state.edges;
@@ -60,7 +61,7 @@ pub fn leaf(
         }
         s.note(format!(
             "How the frames pass their wind on is not known: jambs, all round, head and sill were tried; \"{}\" is the \
-             worst, and worked here.",
+             worst for the {name}, and worked here.",
             frame.word()
         ));
     }

@@ -65,6 +65,8 @@ pub struct Safe {
     /// mm of the wall that it holds, averaged. Positive pushes against the wind; 0 where it is free or where
     /// there is no wall. A node where two stretches meet is shared by the lengths of the sides that meet.
     pub reactions: [Vec<f64>; 4],
+    /// The length of wall that each of these stretches holds, mm.
+    pub lengths: [Vec<f64>; 4],
     /// How many triangles the mesh has.
     pub triangles: usize,
     /// The solver's word for how it ended.
@@ -106,10 +108,12 @@ pub fn safe(plate: &Plate<'_>, spacing: f64) -> Result<Safe, Trouble> {
             }
         }
     }
+    let (reactions, lengths) = reactions(plate, &problem, &found, &loads);
     Ok(Safe {
         pressure: found.factor * plate.m_H / (size * size),
         field: field(&problem, &found, plate.m_H),
-        reactions: reactions(plate, &problem, &found, &loads),
+        reactions,
+        lengths,
         triangles: mesh.triangles.len(),
         status: found.status,
     })
@@ -145,8 +149,16 @@ fn field(problem: &Problem<'_>, found: &Found, m_H: f64) -> Vec<Field> {
     mesh.triangles.iter().enumerate().map(one).collect()
 }
 
-/// What is left over of the load at the held nodes, shared out to their stretches.
-fn reactions(plate: &Plate<'_>, problem: &Problem<'_>, found: &Found, loads: &[f64]) -> [Vec<f64>; 4] {
+/// One number for each stretch of each edge.
+type OfStretches = [Vec<f64>; 4];
+
+/// What is left over of the load at the held nodes, shared out to their stretches, and the lengths of wall held.
+fn reactions(
+    plate: &Plate<'_>,
+    problem: &Problem<'_>,
+    found: &Found,
+    loads: &[f64],
+) -> (OfStretches, OfStretches) {
     let mesh = problem.mesh;
     let mut shares = vec![0.0; mesh.nodes.len()];
     let on_supports = || {
@@ -169,7 +181,7 @@ fn reactions(plate: &Plate<'_>, problem: &Problem<'_>, found: &Found, loads: &[f
         sum.0 += side.nodes.iter().map(|&n| residual(n) * length / shares[n]).sum::<f64>();
         sum.1 += length;
     }
-    sums.map(|edge| {
-        edge.iter().map(|&(force, length)| if length > 0.0 { force / length } else { 0.0 }).collect()
-    })
+    let per_length = |&(force, length): &(f64, f64)| if length > 0.0 { force / length } else { 0.0 };
+    let lengths = [0, 1, 2, 3].map(|e: usize| sums[e].iter().map(|s| s.1).collect());
+    (sums.map(|edge| edge.iter().map(per_length).collect()), lengths)
 }

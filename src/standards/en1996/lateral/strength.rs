@@ -41,6 +41,8 @@ pub fn precompression(
 /// Bending about the bed joints.
 #[derive(Clone, Copy, Debug)]
 pub struct Parallel {
+    /// Design strength f_xd1, without precompression.
+    pub f_xd1: Stress,
     /// Apparent design strength f_xd1,app.
     pub f_xd1_app: Stress,
     /// Section modulus per unit length.
@@ -58,7 +60,7 @@ pub fn parallel(s: &mut Sheet, t: Length, f_xk1: Stress, gamma_Mf: Num, sigma_d:
     calc!(s, "2.4.1", "design strength, parallel", f_xd1 = f_xk1 / gamma_Mf);
     calc!(s, "6.3.1(4) eq. 6.16", "with precompression", f_xd1_app = f_xd1 + sigma_d);
     calc!(s, "6.3.1(3) eq. 6.15", "resistance, parallel", M_Rd1 = f_xd1_app * Z);
-    Parallel { f_xd1_app, Z, M_Rd1 }
+    Parallel { f_xd1, f_xd1_app, Z, M_Rd1 }
 }
 
 /// Bending about the perpends.
