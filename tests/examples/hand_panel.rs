@@ -5,6 +5,7 @@
 
 use perpend::building::{Edge as Held, PanelRoute, Sharing, Span};
 use perpend::checks::masonry::Masonry;
+use perpend::checks::panels::bracket::Effort;
 use perpend::checks::panels::{PanelLeaf, PanelModel, check};
 use perpend::quantity::{Length, LineLoad, Num, Stress, Weight};
 use perpend::standards::annex::Annex;
@@ -58,6 +59,7 @@ pub fn brick_leaf() -> PanelModel {
         arching: None,
         before: span(2000.0),
         after: span(4000.0),
+        effort: Effort::default(),
         strengths_on: None,
     }
 }

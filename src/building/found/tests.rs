@@ -197,6 +197,7 @@ fn a_short_wall_holds_no_other() {
         sill: Length::ZERO,
         height: Length::new(2000.0),
         frame: Frame::Unknown,
+        bearing: None,
     };
     h.wall("stub").openings.push(door);
     assert_eq!(spans(&h.find())[1].2[1], "east");
@@ -212,6 +213,7 @@ fn windows_are_counted_and_end_what_is_met() {
         sill: Length::new(900.0),
         height: Length::new(1200.0),
         frame: Frame::Unknown,
+        bearing: None,
     };
     h.wall("rear").openings.push(PlanOpening { storey: "first".to_owned(), ..window.clone() });
     assert_eq!(h.find().returns[0].nearest_opening, None, "a window above is not in this storey");
@@ -242,6 +244,7 @@ fn a_return_ends_at_its_first_opening() {
         sill: Length::ZERO,
         height: Length::new(2000.0),
         frame: Frame::Unknown,
+        bearing: None,
     });
     assert_eq!(h.find().returns[1].length, Length::new(350.0));
 }

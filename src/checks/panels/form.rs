@@ -127,12 +127,14 @@ pub struct State<'a> {
     pub phase: &'static str,
     /// Whether the moments of a single leaf are judged here; else only the pressure it takes is found.
     pub judged: bool,
+    /// Whether another route decides: what is found here has then not the symbol of what the wall can take.
+    pub beside: bool,
 }
 
 /// `w_Rd`, or `w_leaf` where there are several, from one formula.
 macro_rules! by_leaf {
-    ($s:expr, $m:expr, $clause:expr, $($f:tt)+) => {
-        if $m.leaves.len() == 1 {
+    ($s:expr, $state:expr, $clause:expr, $($f:tt)+) => {
+        if $state.m.leaves.len() == 1 && !$state.beside {
             calc!($s, $clause, "pressure that the wall can take", w_Rd = $($f)+);
             w_Rd
         } else {
@@ -190,7 +192,7 @@ fn plate(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafOut
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
     let found = coefficient::alpha_2(s, &id(state), edges, h, l, mu)?;
     let alpha_2 = found.alpha_2;
-    let w_Rd = by_leaf!(s, m, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
+    let w_Rd = by_leaf!(s, state, "5.5.5(7), 6.3.1", M_Rd2 / (alpha_2 * sq(l)));
     let mut out =
         LeafOutcome { label: found.label, mu: Some(mu), alpha_2: Some(alpha_2), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 && state.judged {
@@ -212,7 +214,7 @@ fn horizontal(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<Le
     let (resistance, _) = strength.across.ok_or_else(|| missing(state))?;
     let above = m.strength_from();
     given!(s, "resistance per unit height, across the bed joints", &above, M_Rd2 = resistance);
-    let w_Rd = by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
+    let w_Rd = by_leaf!(s, state, "statics, 6.3.1", 8.0 * M_Rd2 / sq(l));
     let mut out = LeafOutcome { label: state.form.words().to_owned(), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 && state.judged {
         let M_Ed2 = span::horizontal(s, W_Ed, l);
@@ -228,9 +230,9 @@ fn upright(s: &mut Sheet, state: State<'_>, strength: &Strength) -> Result<LeafO
     let above = m.strength_from();
     given!(s, "resistance per unit length, parallel to the bed joints", &above, M_Rd1 = strength.M_Rd1);
     let w_Rd = if form == Form::Cantilever {
-        by_leaf!(s, m, "statics, 6.3.1", 2.0 * M_Rd1 / sq(h))
+        by_leaf!(s, state, "statics, 6.3.1", 2.0 * M_Rd1 / sq(h))
     } else {
-        by_leaf!(s, m, "statics, 6.3.1", 8.0 * M_Rd1 / sq(h))
+        by_leaf!(s, state, "statics, 6.3.1", 8.0 * M_Rd1 / sq(h))
     };
     let mut out = LeafOutcome { label: form.words().to_owned(), w_Rd, ..Default::default() };
     if m.leaves.len() == 1 && state.judged {

@@ -27,4 +27,6 @@ mod properties;
 #[cfg(test)]
 mod tests;
 #[cfg(test)]
+mod tests_bracket;
+#[cfg(test)]
 mod tests_model;

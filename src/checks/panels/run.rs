@@ -209,7 +209,7 @@ fn bend(
     if phase == "after" {
         remarks(s, span, form);
     }
-    let state = State { m, edges, form, l, W_Ed, phase, judged: true };
+    let state = State { m, edges, form, l, W_Ed, phase, judged: true, beside: false };
     let first = s.verdicts.len();
     let openings = &span.openings;
     let by_hand = form != Form::Limit && !openings.is_empty();

@@ -1,5 +1,6 @@
 //! Panels through the whole check: published figures, hand numbers, remedies, and the sheet's locks.
 
+use super::bracket::Effort;
 use super::model::{PanelLeaf, PanelModel};
 use super::remedy::{self, passes};
 use super::run::{check, hold_points};
@@ -46,6 +47,7 @@ pub(super) fn span(length: f64, [top, base, left, right]: [Edge; 4]) -> Span {
 /// One 102.5 mm leaf, 2.4 m high; `q` in kN/m², `g` in kN/m.
 pub(super) fn single(length: f64, edges: [Edge; 4], q: f64, g: f64) -> PanelModel {
     PanelModel {
+        effort: Effort::default(),
         strengths_on: None,
         mark: "P1".to_owned(),
         h: Length::new(2400.0),

@@ -87,8 +87,16 @@ fn one(s: &mut Sheet, p: &PierModel, w: &Wind, annex: &Annex, ready: Ready, W_Ed
     let loaded = w.panel.leaves[k].loaded;
     let strength = if loaded { strength_loaded(s, p, annex, ready) } else { strength_other(s, p) };
     given!(s, "length of the bay", "above", l = w.bay.l);
-    let state =
-        |form| State { m: &w.panel, edges: w.bay.edges, form, l, W_Ed, phase: "after", judged: false };
+    let state = |form| State {
+        m: &w.panel,
+        edges: w.bay.edges,
+        form,
+        l,
+        W_Ed,
+        phase: "after",
+        judged: false,
+        beside: false,
+    };
     let both_ways = Form::of(w.panel.route, w.bay.edges, "pier-flexure")
         .is_ok_and(|form| form == Form::Plate)
         && limits(p, w, annex)

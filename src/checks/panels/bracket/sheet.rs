@@ -276,7 +276,7 @@ pub fn hand_beside(s: &mut Sheet, state: State<'_>, span: &Span, strengths: &[St
             return None;
         }
     };
-    let by_hand = State { form, judged: false, ..state };
+    let by_hand = State { form, judged: false, beside: true, ..state };
     let leaves = s.columns(&state.m.leaf_names(), |s, i| match span.openings.as_slice() {
         [] => super::super::form::leaf(s, by_hand, span, &strengths[i]),
         some => opened::leaf(s, by_hand, &strengths[i], some, state.m.leaf_name(i)),

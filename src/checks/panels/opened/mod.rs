@@ -71,7 +71,7 @@ pub fn leaf(
     };
     let words = format!("pressure that it can take, the least of these: {words}");
     let single = state.m.leaves.len() == 1;
-    let w_Rd = if single {
+    let w_Rd = if single && !state.beside {
         given!(s, &words, "above", w_Rd = pressure);
         w_Rd
     } else {

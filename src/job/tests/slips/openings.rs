@@ -2,6 +2,7 @@
 
 use super::{Slip, slip};
 
+const FREE: &str = "right = { edge = \"simple\", reason = \"Nib R1, bonded; counted against moving only.\" }";
 const BEFORE: &str = "sharing = \"strength\"\n\n[panels.before]";
 
 pub const SLIPS: &[Slip] = &[
@@ -50,5 +51,33 @@ pub const SLIPS: &[Slip] = &[
         "sharing = \"strength\"\nopenings = [{ at = \"1.0 m\", width = \"0.8 m\", height = \"2.0 m\", frame = \"jamb\" }]\n\n[panels.before]",
         "\"jamb\"",
         &["\"jambs\"", "\"head and sill\""],
+    ),
+    slip(
+        "lintel that bears on more than there is",
+        BEFORE,
+        "sharing = \"strength\"\nopenings = [{ at = \"0.2 m\", width = \"0.8 m\", height = \"2.0 m\", lintel = \"300 mm\" }]\n\n[panels.before]",
+        "[{ at = \"0.2 m\", width = \"0.8 m\", height = \"2.0 m\", lintel = \"300 mm\" }]",
+        &["the lintel of opening 1 bears 300 mm at either end", "at most 200 mm", "under one lintel as one"],
+    ),
+    slip(
+        "stretch of an edge that is free",
+        FREE,
+        "right = { edge = \"free\", reason = \"x\", from = \"0 m\", to = \"1 m\" }",
+        "\"free\"",
+        &["a stretch is given of an edge that is free", "the rest is free"],
+    ),
+    slip(
+        "stretch with one end",
+        FREE,
+        "right = { edge = \"simple\", reason = \"x\", from = \"0 m\" }",
+        "{ edge = \"simple\", reason = \"x\", from = \"0 m\" }",
+        &["`to`"],
+    ),
+    slip(
+        "stretch beyond its edge",
+        FREE,
+        "right = { edge = \"simple\", reason = \"x\", from = \"0 m\", to = \"9 m\" }",
+        "{ edge = \"simple\", reason = \"x\", from = \"0 m\", to = \"9 m\" }",
+        &["`right` is held from 0 mm to 9000 mm", "a stretch of at least 200 mm", "correct the stretch"],
     ),
 ];
