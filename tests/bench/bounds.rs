@@ -1,6 +1,7 @@
 //! The limit analyses of a panel of 4.0 x 2.6 m with a window and a door, by the fineness of their grids.
 
 use divan::{Bencher, black_box};
+use perpend::solve::plate::elastic::{PATCH, first_crack};
 use perpend::solve::plate::safe::safe;
 use perpend::solve::plate::upper::{pattern, upper};
 use perpend::solve::plate::{Carry, Held, Opening, Plate, Stretch};
@@ -40,4 +41,12 @@ fn upper_side(bencher: Bencher<'_, '_>, parts: u32) {
 fn crack_pattern(bencher: Bencher<'_, '_>, parts: u32) {
     let plate = panel();
     bencher.bench_local(|| pattern(black_box(&plate), 4000.0 / f64::from(parts)).expect("it is held").len());
+}
+
+/// The elastic first crack, parts of the longer side.
+#[divan::bench(args = [16, 32, 64], max_time = 10)]
+fn elastic(bencher: Bencher<'_, '_>, parts: u32) {
+    let plate = panel();
+    let at = |parts| first_crack(black_box(&plate), 4000.0 / f64::from(parts), PATCH);
+    bencher.bench_local(|| at(parts).expect("it is held").pressure);
 }

@@ -2,5 +2,7 @@
 
 mod both;
 mod by_hand;
+mod first_crack;
+mod first_crack_laws;
 mod moment_field;
 mod weakest_pattern;

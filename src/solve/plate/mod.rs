@@ -2,10 +2,12 @@
 //!
 //! * [`safe`]: a pressure that moments in equilibrium carry, a second-order cone programme
 //! * [`upper`]: the pressure of the weakest crack pattern, by discontinuity layout optimisation
+//! * [`elastic`]: the pressure at the first crack, elastic; information, never a verdict
 //!
 //! x runs to the right and y up, from the lower left corner, the panel seen from outside. A bed joint cracks
 //! where the moment `m_V` per length of joint is reached, a vertical crack where `m_H` per height is reached.
 
+pub mod elastic;
 pub mod safe;
 pub mod upper;
 

@@ -12,24 +12,24 @@
 //! * `programme`, `rows`, `solver`: the cone programme
 
 mod lines;
-mod loads;
-mod mesh;
+pub(super) mod loads;
+pub(super) mod mesh;
 mod pieces;
 mod programme;
-mod rows;
-mod solver;
-mod statics;
-mod strengths;
+pub(super) mod rows;
+pub(super) mod solver;
+pub(super) mod statics;
+pub(super) mod strengths;
 mod strips;
 
 use crate::solve::plate::{Plate, Trouble};
 use loads::loads;
 use mesh::{Mesh, Rim, Triangle, mesh};
-use pieces::{floats, middle, pieces};
+use pieces::{Piece, floats, middle, pieces};
 use programme::{Found, Problem};
 pub use statics::Moments;
-use statics::{fields, forces};
-use strengths::strengths;
+use statics::{even, forces};
+use strengths::{Strengths, strengths};
 use strips::{add_forces, move_loads, strips};
 
 /// A factor below this part of its scale, `m_H / max(l, h)^2`, is nought: the panel is a mechanism.
@@ -77,22 +77,10 @@ pub struct Safe {
 ///
 /// # Errors
 /// [`Trouble::Floating`] where a piece of the panel falls at no pressure at all, [`Trouble::NotSolved`] where
-/// the solver did not converge or where spacing, size or `m_H` is not above 0.
+/// the solver did not converge, where there is no wall, or where spacing, size or `m_H` is not above 0.
 pub fn safe(plate: &Plate<'_>, spacing: f64) -> Result<Safe, Trouble> {
-    if ![spacing, plate.l, plate.h, plate.m_H].iter().all(|&v| v > 0.0 && v.is_finite()) {
-        return Err(Trouble::NotSolved("sizes, spacing and m_H must be above 0".to_owned()));
-    }
+    let Meshed { mesh, strengths, pieces } = meshed(plate, spacing)?;
     let size = plate.l.max(plate.h);
-    let mesh = mesh(plate, spacing);
-    let strengths = strengths(plate, &mesh);
-    let pieces = pieces(&mesh);
-    let middle_of = |piece: &Vec<usize>| {
-        let (x, y) = middle(&mesh, piece);
-        Trouble::Floating(x, y)
-    };
-    if let Some(piece) = pieces.iter().find(|p| floats(&mesh, p, |s| strengths.clamp[s] > 0.0)) {
-        return Err(middle_of(piece));
-    }
     let strips = strips(&mesh, &strengths);
     let mut forces = forces(&mesh);
     add_forces(&mesh, &strips, &mut forces);
@@ -104,7 +92,7 @@ pub fn safe(plate: &Plate<'_>, spacing: f64) -> Result<Safe, Trouble> {
     if found.factor < NOUGHT {
         for piece in &pieces {
             if problem.greatest(&alone(&mesh, piece, &loads))?.factor < NOUGHT {
-                return Err(middle_of(piece));
+                return Err(floating(&mesh, piece));
             }
         }
     }
@@ -119,6 +107,42 @@ pub fn safe(plate: &Plate<'_>, spacing: f64) -> Result<Safe, Trouble> {
     })
 }
 
+/// A panel in triangles, every piece of it held.
+pub(super) struct Meshed {
+    /// The mesh.
+    pub mesh: Mesh,
+    /// What it bears.
+    pub strengths: Strengths,
+    /// Its pieces.
+    pub pieces: Vec<Piece>,
+}
+
+/// Cuts a panel into triangles.
+///
+/// # Errors
+/// [`Trouble::Floating`] where a piece can move without bending, [`Trouble::NotSolved`] where there is no
+/// wall or where spacing, size or `m_H` is not above 0.
+pub(super) fn meshed(plate: &Plate<'_>, spacing: f64) -> Result<Meshed, Trouble> {
+    if ![spacing, plate.l, plate.h, plate.m_H].iter().all(|&v| v > 0.0 && v.is_finite()) {
+        return Err(Trouble::NotSolved("sizes, spacing and m_H must be above 0".to_owned()));
+    }
+    let mesh = mesh(plate, spacing);
+    if mesh.triangles.is_empty() {
+        return Err(Trouble::NotSolved("there is no wall".to_owned()));
+    }
+    let strengths = strengths(plate, &mesh);
+    let pieces = pieces(&mesh);
+    match pieces.iter().find(|p| floats(&mesh, p, |s| strengths.clamp[s] > 0.0)) {
+        Some(piece) => Err(floating(&mesh, piece)),
+        None => Ok(Meshed { mesh, strengths, pieces }),
+    }
+}
+
+fn floating(mesh: &Mesh, piece: &Piece) -> Trouble {
+    let (x, y) = middle(mesh, piece);
+    Trouble::Floating(x, y)
+}
+
 /// The loads of one piece and none elsewhere.
 fn alone(mesh: &Mesh, piece: &[usize], loads: &[f64]) -> Vec<f64> {
     let mut alone = vec![0.0; loads.len()];
@@ -131,13 +155,7 @@ fn alone(mesh: &Mesh, piece: &[usize], loads: &[f64]) -> Vec<f64> {
 fn field(problem: &Problem<'_>, found: &Found, m_H: f64) -> Vec<Field> {
     let mesh = problem.mesh;
     let one = |(t, triangle): (usize, &Triangle)| {
-        let mut even = Moments::default();
-        for (unit, &side) in fields(mesh, triangle).iter().zip(&triangle.sides) {
-            let times = found.moments[side] * m_H;
-            even.x += times * unit.x;
-            even.y += times * unit.y;
-            even.xy += times * unit.xy;
-        }
+        let even = even(mesh, triangle, &found.moments, m_H);
         let corners = triangle.nodes.map(|n| mesh.nodes[n]);
         let strip = |x| problem.strips[t / 4].iter().flat_map(move |s| s.terms(x, mesh.sides.len()));
         let moments = corners.map(|c| {

@@ -31,7 +31,39 @@ pub fn solved(
         *factor = -1.0;
     }
     let flat = CscMatrix::zeros((matrix.n, matrix.n));
-    let mut solver = DefaultSolver::new(&flat, &aim, matrix, right, kinds, settings)
+    run((&flat, &aim), (matrix, right, kinds), settings)
+}
+
+/// Hands a quadratic programme over: half of `x P x` as small as the rows, all of them equalities, allow.
+pub fn least(
+    half: &CscMatrix<f64>,
+    matrix: &CscMatrix<f64>,
+    right: &[f64],
+) -> Result<(Vec<f64>, String), Trouble> {
+    let settings = DefaultSettings {
+        verbose: false,
+        max_threads: 1,
+        direct_solve_method: "qdldl".to_owned(),
+        // There is no cone to approach: one linear system, refined as far as numbers go.
+        tol_feas: 1e-10,
+        tol_gap_rel: 1e-10,
+        tol_gap_abs: 1e-10,
+        presolve_enable: false,
+        iterative_refinement_max_iter: 50,
+        ..DefaultSettings::default()
+    };
+    let kinds = [SupportedConeT::ZeroConeT(right.len())];
+    run((half, &vec![0.0; matrix.n]), (matrix, right, &kinds), settings)
+}
+
+type Rows<'a> = (&'a CscMatrix<f64>, &'a [f64], &'a [SupportedConeT<f64>]);
+
+fn run(
+    (quadratic, linear): (&CscMatrix<f64>, &[f64]),
+    (matrix, right, kinds): Rows<'_>,
+    settings: DefaultSettings<f64>,
+) -> Result<(Vec<f64>, String), Trouble> {
+    let mut solver = DefaultSolver::new(quadratic, linear, matrix, right, kinds, settings)
         .map_err(|e| Trouble::NotSolved(e.to_string()))?;
     solver.solve();
     match solver.solution.status {

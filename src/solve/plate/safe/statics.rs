@@ -41,6 +41,18 @@ pub fn fields(mesh: &Mesh, triangle: &Triangle) -> [Moments; 3] {
     })
 }
 
+/// The moments of a triangle where the normal moments of all sides are `normal`, times `unit`.
+pub fn even(mesh: &Mesh, triangle: &Triangle, normal: &[f64], unit: f64) -> Moments {
+    let mut even = Moments::default();
+    for (one, &side) in fields(mesh, triangle).iter().zip(&triangle.sides) {
+        let times = normal[side] * unit;
+        even.x += times * one.x;
+        even.y += times * one.y;
+        even.xy += times * one.xy;
+    }
+    even
+}
+
 /// For every node the sides whose moments carry load from it, with the force for a moment of 1.
 ///
 /// The force is side length times the turn across the side when the node alone moves by 1 with the

@@ -4,7 +4,7 @@ use super::mesh::{Mesh, Rim};
 use crate::solve::plate::{Held, Plate};
 
 /// Bed joints with less than this part of `m_H` count as cracked: their cones would have no inside.
-const NIL: f64 = 1e-4;
+pub const NIL: f64 = 1e-4;
 
 /// Strengths as parts of `m_H`.
 pub struct Strengths {
