@@ -450,6 +450,7 @@ pub const GLOSSARY: &[(&str, &str)] = &[
     ("w_A", "width pressed by a concentrated load"),
     ("w_a", "line load on the whole return"),
     ("w_b", "width of the bearing, across the wall"),
+    ("w_cr", "pressure at the first crack of an elastic panel"),
     ("w_dry", "safe side with the bed joints cracked"),
     ("W_Ed", "design pressure of the wind on a panel"),
     ("w_Ed", "line load, design"),

@@ -13,6 +13,7 @@ use super::wall::Wall;
 use crate::building::{Frame, Span};
 use crate::checks::panels::model::PanelModel;
 use crate::checks::panels::strength::Strength;
+use crate::solve::plate::elastic::{FirstCrack, PATCH, first_crack};
 use crate::solve::plate::safe::{LOWERED, Safe, safe};
 use crate::solve::plate::upper::{Crack, Upper, pattern, upper};
 use crate::solve::plate::{Plate, Trouble};
@@ -104,6 +105,8 @@ pub struct Aside {
     pub cracked: Option<f64>,
     /// The same wall without openings, N/mm², lowered as the safe side.
     pub solid: Option<f64>,
+    /// The first crack of the leaf while it is elastic.
+    pub first: Option<FirstCrack>,
 }
 
 /// What was found of one leaf.
@@ -250,8 +253,10 @@ fn mechanism(plate: &Plate<'_>, parts: f64) -> Result<Upper, Trouble> {
 
 fn beside(wall: &Wall) -> Aside {
     let counted = |w: &Wall| field(w, FIELD.1, LOWERED).ok().map(|low| low.pressure());
-    let (cracked, solid) = rayon::join(|| counted(&wall.cracked()), || counted(&wall.solid()));
-    Aside { cracked, solid }
+    let first = || wall.with(|p| first_crack(p, longer(p) / FIELD.1, PATCH)).ok();
+    let (cracked, (solid, first)) =
+        rayon::join(|| counted(&wall.cracked()), || (counted(&wall.solid()), first()));
+    Aside { cracked, solid, first }
 }
 
 /// Cells of the solid with how far each moves.

@@ -9,7 +9,7 @@ use crate::checks::panels::{opened, sharing};
 use crate::quantity::functions::min;
 use crate::quantity::print::show;
 use crate::quantity::{Num, Stress};
-use crate::solve::plate::Trouble;
+use crate::solve::plate::{Trouble, elastic as first_crack};
 use crate::standards::masonry::Edge;
 use crate::trace::{Outside, Sheet, Unshown};
 use crate::{calc, found, given, verify};
@@ -99,6 +99,15 @@ fn write(s: &mut Sheet, state: State<'_>, f: &Found, strength: &Strength) -> Bou
         s.fault("bracket".to_owned(), format!("upper side {w_u:?} below safe side {w_s:?}"));
     }
     if let Some(aside) = &f.aside {
+        if let Some(first) = &aside.first {
+            found!(
+                s,
+                "elastic plate",
+                "pressure at the first crack, moments averaged over 250 mm",
+                w_cr = Stress::new(first.pressure)
+            );
+            let _ = w_cr;
+        }
         if let Some(cracked) = aside.cracked {
             found!(s, CLAUSE, "the same, bed joints cracked: weight alone", w_dry = Stress::new(cracked));
             let _ = w_dry;
@@ -233,6 +242,17 @@ pub fn remarks(s: &mut Sheet, state: State<'_>, span: &Span, all: &[Found]) {
     }
     if [&span.top, &span.base, &span.left, &span.right].iter().any(|e| e.kind == Edge::Continuous) {
         s.note("Cracks may fan out at the corners of continuous edges here; those of Annex E do not.");
+    }
+    if let Some(first) = all.iter().filter_map(|f| f.aside.as_ref()?.first).next() {
+        s.note(format!(
+            "First cracks, bed joints without strength and the wall without its openings are information: they say how \
+             brittle the panel is, and what the openings take. The first crack, by elastic bending with Poisson's ratio \
+             {}, opens about {:.0} mm from the left end and {:.0} mm above the foot{}.",
+            first_crack::POISSON,
+            first.at.0,
+            first.at.1,
+            if all.len() > 1 { " of the outer leaf" } else { "" }
+        ));
     }
     if all.iter().any(|f| f.refined) {
         s.note("The bracket was wider than 10 % at first: both grids were refined once.");
