@@ -50,6 +50,7 @@ fn opening(o: &PanelOpening) -> sketch::Opening {
         width: o.width.base(),
         height: o.height.base(),
         words: words.to_owned(),
+        bearing: None,
     }
 }
 
@@ -60,7 +61,7 @@ fn edge(e: &Edge) -> sketch::Edge {
         Kind::Continuous => Support::Continuous,
     };
     // The reason stands in the table of the sheet; the drawing has the key.
-    sketch::Edge { support, why: String::new() }
+    sketch::Edge { support, why: String::new(), held: None }
 }
 
 fn elevation(

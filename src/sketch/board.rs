@@ -89,14 +89,24 @@ impl Board {
 
     /// Puts hatch lines that fill `ring`; labels standing on them get a mask.
     pub fn hatching(&mut self, lines: Vec<Line>, ring: &[Point]) {
+        self.hatching_over(Pen::Hatch, lines, [ring]);
+    }
+
+    /// Puts hatch lines that fill several areas, each a closed ring.
+    pub fn hatching_over<R: AsRef<[Point]>>(
+        &mut self,
+        pen: Pen,
+        lines: Vec<Line>,
+        rings: impl IntoIterator<Item = R>,
+    ) {
         let mut path = BezPath::new();
         for line in lines {
             path.move_to(line.p0);
             path.line_to(line.p1);
         }
         if !path.elements().is_empty() {
-            self.ground.hatch(ring);
-            self.items.push(Item::Stroke { pen: Pen::Hatch, path: Path(path) });
+            rings.into_iter().for_each(|ring| self.ground.hatch(ring.as_ref()));
+            self.items.push(Item::Stroke { pen, path: Path(path) });
         }
     }
 

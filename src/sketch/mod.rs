@@ -10,6 +10,7 @@
 //! * [`note`], [`ground`], [`place`]: labels, what they keep off, and where they go
 //! * [`board`]: strokes, fills and wishes for labels, until the drawing is finished
 //! * [`dimension`], [`hatch`], [`load`], [`view`]: what drawings are made of
+//! * [`panel_edges`], [`panel_opening`]: what both drawings of a panel's face are made of
 //! * the drawings: one file each; `return_elevation` and `return_section` have a second for their actions
 
 pub mod around;
@@ -29,8 +30,15 @@ pub mod key_plan;
 pub mod load;
 pub mod load_stack;
 pub mod note;
+pub mod panel_cracks;
+#[cfg(test)]
+mod panel_cracks_tests;
+mod panel_cracks_words;
+mod panel_deflection;
+pub mod panel_edges;
 pub mod panel_elevation;
 mod panel_lines;
+pub mod panel_opening;
 pub mod panel_section;
 pub mod pen;
 pub mod place;
@@ -65,7 +73,10 @@ pub use footing::{FootingSketch, Pressure, footing_sketch};
 pub use ground_profile::{GroundProfile, ground_profile};
 pub use key_plan::{KeyPlan, PlanMark, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
-pub use panel_elevation::{Edge, Opening, PanelElevation, Support, WallBehind, panel_elevation, panel_pair};
+pub use panel_cracks::{Cell, Crack, CrackKind, PanelCracks, cracks_pair, panel_cracks};
+pub use panel_edges::{Edge, Support};
+pub use panel_elevation::{PanelElevation, WallBehind, panel_elevation, panel_pair};
+pub use panel_opening::Opening;
 pub use panel_section::{Floor, PanelSection, panel_section};
 pub use plan::{Fate, Gap, PlanWall, When};
 pub use return_actions::{Curve, ReturnActions, return_actions};

@@ -148,7 +148,7 @@ prop_compose! {
         PanelElevation {
             mark: "P1".into(), state: "after".into(), length, height, left, right, top, base,
             openings: opening.map(|(x, w)| Opening {
-                x: (x * length).round(), y: (0.3 * height).round(), width: (w * length).round(), height: (0.4 * height).round(), words: "window".into(),
+                x: (x * length).round(), y: (0.3 * height).round(), width: (w * length).round(), height: (0.4 * height).round(), words: "window".into(), bearing: None,
             }).into_iter().collect(),
             walls: walls.into_iter().enumerate().map(|(i, (x, removed))| WallBehind {
                 x: (x * length).round(), thickness: 100.0, words: format!("W{i}"), removed,

@@ -149,7 +149,7 @@ pub fn footing() -> FootingSketch {
 }
 
 pub fn edge(support: Support, why: &str) -> Edge {
-    Edge { support, why: why.into() }
+    Edge { support, why: why.into(), held: None }
 }
 
 pub fn panels() -> [PanelElevation; 2] {
@@ -168,6 +168,7 @@ pub fn panels() -> [PanelElevation; 2] {
             width: 1200.0,
             height: 1050.0,
             words: "window".into(),
+            bearing: None,
         }],
         walls: vec![WallBehind { x: 2600.0, thickness: 100.0, words: "W2".into(), removed: false }],
         yield_lines: vec![],

@@ -78,6 +78,21 @@ pub fn fit_row<const N: usize>(
     fit_by(from, draw, |drawings| over_row(drawings, frame, gap))
 }
 
+/// Drawings to be compared, at one scale: side by side as by [`fit_row`]; where that is smaller than `1:least`, one
+/// below the other at that scale if each of them fits the frame.
+pub fn fit_row_or_column<const N: usize>(
+    frame: Frame,
+    gap: f64,
+    (from, least): (f64, f64),
+    draw: impl Fn(Scale) -> [Drawing; N],
+) -> [Drawing; N] {
+    let drawings = draw(Scale(least));
+    if over_row(&drawings, frame, gap) > 0.0 && drawings.iter().all(|d| frame.holds(d)) {
+        return drawings;
+    }
+    fit_row(frame, gap, from, draw)
+}
+
 /// Clear space that the page leaves between drawings side by side, mm.
 pub const APART: f64 = 8.0;
 
