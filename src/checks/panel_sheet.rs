@@ -2,7 +2,7 @@
 
 use super::panels::bracket::Effort;
 use super::panels::{self, PanelModel};
-use super::{Job, Section, masonry, panel_views};
+use super::{Job, Section, masonry, panel_cracks, panel_views};
 use crate::building::{Building, Panel, Path, Return};
 use crate::quantity::LineLoad;
 use crate::quantity::print::show;
@@ -30,14 +30,17 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
     match model(job, p) {
         Ok(m) => {
             let name = |kind: &str| format!("{}-{kind}", p.mark);
+            let cracks = job.drawings(|| panel_cracks::drawings(p, &m, &job.annex));
             sheet.drawings(&[&name("before"), &name("after")]);
             leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
             passed_on(job, p, &m, &mut sheet);
+            super::named(&mut sheet, &cracks);
             sheet.drawings(&[&name("section")]);
             let off = p.wind.is_none() && job.wind.as_ref().is_ok_and(|w| w.off_panel(p));
             let wind = if off { Wind::Away } else { Wind::Toward };
             drawings = job.drawings(|| panel_views::drawings(job.building, p, &m, wind));
+            drawings.extend(cracks);
         }
         Err(outside) => sheet.leave(outside),
     }

@@ -42,7 +42,7 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel, wind: Wind) -> Vec<Draw
     vec![first, second, third]
 }
 
-fn opening(o: &PanelOpening) -> sketch::Opening {
+pub(super) fn opening(o: &PanelOpening) -> sketch::Opening {
     let words = if o.sill == Length::ZERO { "door" } else { "window" };
     sketch::Opening {
         x: o.at.base(),
@@ -50,18 +50,18 @@ fn opening(o: &PanelOpening) -> sketch::Opening {
         width: o.width.base(),
         height: o.height.base(),
         words: words.to_owned(),
-        bearing: None,
+        bearing: o.bearing.map(Length::base),
     }
 }
 
-fn edge(e: &Edge) -> sketch::Edge {
+pub(super) fn edge(e: &Edge) -> sketch::Edge {
     let support = match e.kind {
         Kind::Free => Support::Free,
         Kind::Simple => Support::Simple,
         Kind::Continuous => Support::Continuous,
     };
     // The reason stands in the table of the sheet; the drawing has the key.
-    sketch::Edge { support, why: String::new(), held: None }
+    sketch::Edge { support, why: String::new(), held: e.stretch.map(|(a, z)| (a.base(), z.base())) }
 }
 
 fn elevation(

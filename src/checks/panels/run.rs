@@ -78,12 +78,8 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
 fn at_hand(m: &PanelModel, strengths: &[Strength]) {
     let all = [&m.after, &m.before];
     let spans = if m.effort == Effort::Read { &all[..] } else { &all[..1] };
-    let decides = m.route == PanelRoute::LimitAnalysis;
-    let shown = |span: &&&Span| decides || m.effort != Effort::Search && !span.openings.is_empty();
-    let wanted: Vec<&Span> = spans.iter().filter(shown).copied().collect();
-    if m.route != PanelRoute::Arching {
-        bracket::prepare(m, &wanted, strengths, m.effort);
-    }
+    let wanted: Vec<&Span> = spans.iter().filter(|span| bracket::found::worked(m, span)).copied().collect();
+    bracket::prepare(m, &wanted, strengths, m.effort);
 }
 
 /// What must be closed before the wall comes down for this panel's result to hold, as sentences.
@@ -245,7 +241,7 @@ fn bend(
     let bounds = if form == Form::Limit {
         let all: Option<Vec<Bounds>> = leaves.iter().map(|l| l.bounds).collect();
         hand = bracket::sheet::hand_beside(s, state, span, strengths);
-        all.and_then(|all| bracket::sheet::of_wall(&mut Sheet::silent(), state, &all))
+        all.and_then(|all| bracket::sheet::of_wall(&mut Sheet::silent(), m, &all))
     } else if bracket::sheet::wanted(state, span) {
         bracket::sheet::beside(s, state, span, strengths, Some(w_Rd))
     } else {

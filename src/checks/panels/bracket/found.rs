@@ -10,13 +10,15 @@ use std::sync::{Arc, LazyLock, Mutex, PoisonError};
 use rayon::prelude::*;
 
 use super::wall::Wall;
-use crate::building::{Frame, Span};
+use crate::building::{Frame, PanelRoute, Span};
 use crate::checks::panels::model::PanelModel;
-use crate::checks::panels::strength::Strength;
+use crate::checks::panels::strength::{self, Strength};
 use crate::solve::plate::elastic::{FirstCrack, PATCH, first_crack};
 use crate::solve::plate::safe::{LOWERED, Safe, safe};
 use crate::solve::plate::upper::{Crack, Upper, pattern, upper};
 use crate::solve::plate::{Plate, Trouble};
+use crate::standards::annex::Annex;
+use crate::trace::Sheet;
 
 /// How much is worked.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Eq, Hash)]
@@ -160,6 +162,23 @@ pub fn leaf(
     }
     all.insert(key, Arc::clone(&found));
     Some(found)
+}
+
+/// What is found of every leaf of a span, outer first; none where one of them has no answer. The leaves are those of
+/// the sheet: where that was written, all of it is remembered.
+pub fn leaves(m: &PanelModel, annex: &Annex, span: &Span) -> Option<Vec<Found>> {
+    let of_leaf = |i: usize| strength::of_leaf(&mut Sheet::silent(), m, annex, i);
+    let strengths = (0..m.leaves.len()).map(of_leaf);
+    strengths.map(|x| leaf(m, span, &x, m.effort)?.as_ref().as_ref().ok().cloned()).collect()
+}
+
+/// Whether limit analysis is worked for a span, beside the hand route or deciding.
+pub fn worked(m: &PanelModel, span: &Span) -> bool {
+    match m.route {
+        PanelRoute::LimitAnalysis => true,
+        PanelRoute::Arching => false,
+        PanelRoute::Flexure | PanelRoute::OneWay => m.effort != Effort::Search && !span.openings.is_empty(),
+    }
 }
 
 /// Works leaves of several spans on all cores, so that they are at hand when their sheet is written.

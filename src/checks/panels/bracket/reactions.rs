@@ -1,10 +1,9 @@
 //! What the wind on a panel brings to its edges, by the moment field of the safe side.
 
-use super::found::{Effort, Found, leaf};
-use crate::building::{Edge, PanelRoute, Span};
+use super::found::{Effort, Found, leaves, worked};
+use crate::building::{Edge, Span};
 use crate::checks::panels::form::State;
 use crate::checks::panels::model::PanelModel;
-use crate::checks::panels::strength::{self, Strength};
 use crate::quantity::print::show;
 use crate::quantity::{Force, LineLoad, Stress};
 use crate::standards::annex::Annex;
@@ -27,18 +26,10 @@ pub struct Reaction {
 /// What comes to the edges of a panel after the removal, where limit analysis was worked beside its own check or for
 /// it; the other sheets that carry it on ask for it here.
 pub fn of(m: &PanelModel, annex: &Annex) -> Option<Vec<Reaction>> {
-    let worked = match m.route {
-        PanelRoute::LimitAnalysis => true,
-        PanelRoute::Arching => false,
-        PanelRoute::Flexure | PanelRoute::OneWay => !m.after.openings.is_empty(),
-    };
-    if !worked || m.effort == Effort::Search {
+    if m.effort == Effort::Search || !worked(m, &m.after) {
         return None;
     }
-    let of_leaf = |i: usize| strength::of_leaf(&mut Sheet::silent(), m, annex, i);
-    let strengths: Vec<Strength> = (0..m.leaves.len()).map(of_leaf).collect();
-    let found = strengths.iter().map(|x| leaf(m, &m.after, x, m.effort)?.as_ref().as_ref().ok().cloned());
-    let all: Vec<Found> = found.collect::<Option<_>>()?;
+    let all = leaves(m, annex, &m.after)?;
     Some(at_design(&m.after, m.h.base(), m.q_net * annex.gamma_Q, &all))
 }
 

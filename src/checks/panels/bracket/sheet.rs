@@ -4,6 +4,7 @@ use super::found::{Effort, Found, leaf as find};
 use super::reactions;
 use crate::building::{Frame, PanelRoute, Sharing, Span};
 use crate::checks::panels::form::{Form, LeafOutcome, State};
+use crate::checks::panels::model::PanelModel;
 use crate::checks::panels::strength::Strength;
 use crate::checks::panels::{opened, sharing};
 use crate::quantity::functions::min;
@@ -123,12 +124,12 @@ fn write(s: &mut Sheet, state: State<'_>, f: &Found, strength: &Strength) -> Bou
 
 /// The bracket of the wall from those of its leaves, as [`sharing`] adds what they take; none where they share by
 /// stiffness, since each then stands against its own part.
-pub fn of_wall(s: &mut Sheet, state: State<'_>, leaves: &[Bounds]) -> Option<Bounds> {
+pub fn of_wall(s: &mut Sheet, m: &PanelModel, leaves: &[Bounds]) -> Option<Bounds> {
     let [outer, inner] = leaves else { return leaves.first().copied() };
-    if state.m.sharing == Sharing::Stiffness {
+    if m.sharing == Sharing::Stiffness {
         return None;
     }
-    let tied = sharing::counted(&mut Sheet::silent(), state.m.ties, "before");
+    let tied = sharing::counted(&mut Sheet::silent(), m.ties, "before");
     given!(s, "safe side, outer leaf", "above", w_s_o = outer.low);
     given!(s, "safe side, inner leaf", "above", w_s_i = inner.low);
     let low = if tied {
@@ -179,7 +180,7 @@ pub fn beside(
     );
     remarks(s, state, span, &all);
     let leaves = s.columns(&state.m.leaf_names(), |s, i| write(s, state, &all[i], &strengths[i]));
-    let wall = of_wall(s, state, &leaves)?;
+    let wall = of_wall(s, state.m, &leaves)?;
     against(s, state, wall, by_hand);
     reactions::table(s, state, span, &all);
     Some(wall)
@@ -311,7 +312,7 @@ pub fn hand_beside(s: &mut Sheet, state: State<'_>, span: &Span, strengths: &[St
             }
         }
     }
-    let wall = of_wall(&mut Sheet::silent(), state, &takes)?.low;
+    let wall = of_wall(&mut Sheet::silent(), state.m, &takes)?.low;
     let print = |w: Stress| show("w_Rd", w.dynamic()).to_string();
     let verdict = if state.W_Ed <= wall { "no less than" } else { "less than" };
     s.note(format!(
