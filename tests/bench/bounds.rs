@@ -23,14 +23,14 @@ fn panel() -> Plate<'static> {
 }
 
 /// The safe side, parts of the longer side.
-#[divan::bench(args = [16, 32, 64], max_time = 10)]
+#[divan::bench(args = [8, 12, 16, 24, 32, 48, 64], max_time = 10)]
 fn safe_side(bencher: Bencher<'_, '_>, parts: u32) {
     let plate = panel();
     bencher.bench_local(|| safe(black_box(&plate), 4000.0 / f64::from(parts)).expect("it is held").pressure);
 }
 
 /// The upper side.
-#[divan::bench(args = [12, 16, 20], max_time = 10)]
+#[divan::bench(args = [8, 10, 12, 16, 20], max_time = 10)]
 fn upper_side(bencher: Bencher<'_, '_>, parts: u32) {
     let plate = panel();
     bencher.bench_local(|| upper(black_box(&plate), 4000.0 / f64::from(parts)).expect("it is held").pressure);

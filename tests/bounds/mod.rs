@@ -1,8 +1,12 @@
 //! The limit analyses of panels: against exact values, against other solvers, and against each other.
 
+mod annex_e;
 mod both;
 mod by_hand;
 mod first_crack;
 mod first_crack_laws;
+mod laws;
 mod moment_field;
+mod openings;
+mod random;
 mod weakest_pattern;

@@ -45,14 +45,17 @@ impl Loads {
 
 /// The line loads on the edges of an opening.
 ///
-/// An edge that lies on the edge of the panel has no wall to load: its share goes to the others. Where none of the
-/// named edges has a wall (head and sill of an opening over the full height) the wind is left out.
+/// An edge that lies on the edge of the panel has no wall to load: its share goes to the others. An opening from base
+/// to top has neither head nor sill, and its wind goes to the jambs.
 fn frame(plate: &Plate<'_>, opening: &Opening) -> Vec<Part> {
     let (x, y) = (opening.x, opening.y);
     let (width, rise) = (x.1 - x.0, y.1 - y.0);
     let near = 1e-9 * plate.l.max(plate.h);
+    let whole = y.0 <= near && y.1 >= plate.h - near;
     let mut edges = Vec::new();
-    if matches!(opening.carry, Carry::Jambs | Carry::AllRound) {
+    if matches!(opening.carry, Carry::Jambs | Carry::AllRound)
+        || (opening.carry == Carry::HeadAndSill && whole)
+    {
         let jambs = [(x.0, false, x.0 > near), (x.1, true, x.1 < plate.l - near)];
         let real = jambs.into_iter().filter(|jamb| jamb.2);
         edges.extend(real.map(|(x, right, _)| (rise, Part::Upright { x, y, q: 1.0, right })));
