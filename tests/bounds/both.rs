@@ -1,7 +1,7 @@
 //! The two sides against each other: the weakest pattern is never below what moments in equilibrium carry.
 
 use perpend::solve::plate::Trouble;
-use perpend::solve::plate::safe::LOWERED;
+use perpend::solve::plate::safe::{LOWERED, counts};
 
 use super::random::{Panel, each};
 
@@ -42,6 +42,26 @@ fn the_upper_side_is_never_below_the_safe_side() {
     // On meshes as coarse as these few brackets are wide, the widest where bed joints are weak.
     assert!(mean < 0.07 && parts[parts.len() / 2] < 0.05, "mean {mean}, middle {}", parts[parts.len() / 2]);
     assert!(parts.iter().filter(|p| **p > 0.25).count() <= 6, "{:?}", &parts[parts.len() - 10..]);
+}
+
+/// What a sheet counts is no more than a mesh twice as fine gives, on the panels for which the usual mesh is least
+/// good: narrow piers that span upwards, with weak bed joints (numbers 181 and 82), and some others.
+#[test]
+fn what_counts_holds_on_a_finer_mesh() {
+    let all = each([181, 82, 101, 2, 7, 198], |seed| {
+        let panel = Panel::random(seed);
+        let [coarse, usual, fine] = [16.0, 32.0, 64.0].map(|parts| panel.safe(parts).map(|s| s.pressure));
+        Ok::<_, Trouble>((coarse?, usual?, fine?))
+    });
+    let mut lowered = 0;
+    for (seed, found) in all {
+        let Ok((coarse, usual, fine)) = found else { panic!("panel {seed}: {found:?}") };
+        let part = counts(coarse, usual, (16.0, 32.0));
+        assert!(part * usual <= fine, "panel {seed}: {part} of {usual} against {fine}");
+        assert!(part > 0.95, "panel {seed}: {part}");
+        lowered += usize::from(part < LOWERED);
+    }
+    assert!(lowered >= 2, "the coarser mesh shows the bad ones");
 }
 
 /// The spacings that a sheet takes, with the safe side lowered as a sheet does.

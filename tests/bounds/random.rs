@@ -186,8 +186,9 @@ fn edge(dice: &mut Dice, to: f64) -> Vec<Stretch> {
 }
 
 /// `f` of every seed, worked on two threads, in the order of the seeds.
-pub fn each<T: Send>(seeds: std::ops::RangeInclusive<u64>, f: impl Fn(u64) -> T + Sync) -> Vec<(u64, T)> {
-    let every_other = |first| seeds.clone().skip(first).step_by(2).map(|s| (s, f(s))).collect::<Vec<_>>();
+pub fn each<T: Send>(seeds: impl IntoIterator<Item = u64>, f: impl Fn(u64) -> T + Sync) -> Vec<(u64, T)> {
+    let seeds: Vec<u64> = seeds.into_iter().collect();
+    let every_other = |first| seeds.iter().skip(first).step_by(2).map(|&s| (s, f(s))).collect::<Vec<_>>();
     let mut all = std::thread::scope(|scope| {
         let other = scope.spawn(|| every_other(1));
         let mut all = every_other(0);

@@ -149,7 +149,9 @@ fn an_unknown_frame_is_the_worst() {
     check(&mut s, &panel(&[window(1000.0, 1200.0, 900.0, 1200.0, Frame::Unknown)]), &Annex::UK);
     let notes = s.entries.iter().flat_map(Entry::flat);
     assert!(
-        notes.into_iter().any(|e| matches!(e, Entry::Note(n) if n.contains("is the worst, and worked here")))
+        notes
+            .into_iter()
+            .any(|e| matches!(e, Entry::Note(n) if n.contains("is the worst for the wall, and worked here")))
     );
 }
 

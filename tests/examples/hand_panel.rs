@@ -59,7 +59,8 @@ pub fn brick_leaf() -> PanelModel {
         arching: None,
         before: span(2000.0),
         after: span(4000.0),
-        effort: Effort::default(),
+        // The hand route alone.
+        effort: Effort::Search,
         strengths_on: None,
     }
 }

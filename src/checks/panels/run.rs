@@ -360,7 +360,7 @@ fn held(m: &PanelModel) -> Table {
 /// How far each thing may move before the panel fails, the others as they are.
 fn moves(m: &PanelModel, annex: &Annex) -> Table {
     let caption = "Up to where the panel passes by the route that decides, one thing at a time; rounded down";
-    let coarse = "; by limit analysis on a coarse grid, lowered for it by 1 %";
+    let coarse = "; by limit analysis on a coarse grid, lowered for it by 2.5 % and more";
     let limit = m.route == PanelRoute::LimitAnalysis;
     Table {
         caption: format!("{caption}{}", if limit { coarse } else { "" }),

@@ -14,7 +14,7 @@ use crate::building::{Frame, PanelRoute, Span};
 use crate::checks::panels::model::PanelModel;
 use crate::checks::panels::strength::{self, Strength};
 use crate::solve::plate::elastic::{FirstCrack, PATCH, first_crack};
-use crate::solve::plate::safe::{LOWERED, Safe, safe};
+use crate::solve::plate::safe::{Safe, counts, safe};
 use crate::solve::plate::upper::{Crack, Upper, pattern, upper};
 use crate::solve::plate::{Plate, Trouble};
 use crate::standards::annex::Annex;
@@ -32,12 +32,23 @@ pub enum Effort {
     Read,
 }
 
-/// Parts of the longer side: grid of the moment field, in a search and in earnest, and where the bracket is wide.
-const FIELD: (f64, f64, f64) = (16.0, 32.0, 48.0);
+/// What is worked of one leaf.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
+struct Asked {
+    effort: Effort,
+    /// What is printed as information: of the panel as it will be.
+    aside: bool,
+}
+
+/// Steps along the longer side: grids of the moment field, in a search, in earnest, and where the bracket is wide. With
+/// each goes a coarser one, which shows what the grid is worth.
+const SEARCHED: (f64, f64) = (12.0, 16.0);
+const FIELD: (f64, f64) = (16.0, 32.0);
+const REFINED: (f64, f64) = (32.0, 48.0);
 /// The same of the crack pattern; there is none in a search.
 const PATTERN: (f64, f64) = (16.0, 20.0);
-/// What a field on the coarse grid is lowered by. The worst of 54 panels lay 0.39 % above; see `LOWERED`.
-pub const COARSE: f64 = 0.99;
+/// What a field on the grid of a search is lowered by at least; see `safe::LOWERED` for that of the usual grid.
+const COARSE: f64 = 0.975;
 /// Width of the bracket, part of the safe side, from which both grids are refined once.
 pub const WIDE: f64 = 0.10;
 /// Frames that are tried where nobody knows how they pass their wind on.
@@ -103,9 +114,9 @@ pub struct Picture {
 /// What is printed beside the bounds.
 #[derive(Clone, Debug)]
 pub struct Aside {
-    /// With bed joints that have only the strength of the weight on them, N/mm², lowered as the safe side.
+    /// With bed joints that have only the strength of the weight on them, N/mm², on the grid of a search.
     pub cracked: Option<f64>,
-    /// The same wall without openings, N/mm², lowered as the safe side.
+    /// The same wall without openings, N/mm², on the grid of a search.
     pub solid: Option<f64>,
     /// The first crack of the leaf while it is elastic.
     pub first: Option<FirstCrack>,
@@ -136,7 +147,7 @@ impl Found {
     }
 }
 
-type Kept = HashMap<(Vec<u64>, Effort), Arc<Result<Found, Trouble>>>;
+type Kept = HashMap<(Vec<u64>, Asked), Arc<Result<Found, Trouble>>>;
 static KEPT_HERE: LazyLock<Mutex<Kept>> = LazyLock::new(Mutex::default);
 
 /// What is found of leaf `i` of a span; none where it has no strength across the bed joints.
@@ -150,12 +161,14 @@ pub fn leaf(
     let tried: &[Frame] = if unknown { &TRIED } else { &TRIED[..1] };
     let walls: Vec<(Frame, Wall)> =
         tried.iter().map(|&f| Some((f, Wall::new(span, m.h, strength, f)?))).collect::<Option<_>>()?;
-    let key = (walls.iter().flat_map(|(_, w)| w.key()).collect::<Vec<u64>>(), effort);
+    let same = |a: &Span, b: &Span| std::ptr::eq(a, b) || a.length == b.length;
+    let asked = Asked { effort, aside: effort == Effort::Read && same(span, &m.after) };
+    let key = (walls.iter().flat_map(|(_, w)| w.key()).collect::<Vec<u64>>(), asked);
     let kept = || KEPT_HERE.lock().unwrap_or_else(PoisonError::into_inner);
     if let Some(found) = kept().get(&key) {
         return Some(Arc::clone(found));
     }
-    let found = Arc::new(work(&walls, effort));
+    let found = Arc::new(work(&walls, asked));
     let mut all = kept();
     if all.len() >= KEPT {
         all.clear();
@@ -190,49 +203,34 @@ pub fn prepare(m: &PanelModel, spans: &[&Span], strengths: &[Strength], effort: 
     });
 }
 
-fn work(walls: &[(Frame, Wall)], effort: Effort) -> Result<Found, Trouble> {
-    let coarse = || walls.par_iter().map(|(_, w)| field(w, FIELD.0, COARSE)).collect::<Vec<_>>();
-    if effort == Effort::Search {
-        let (frame, low) = worst(walls.iter().zip(coarse()))?;
+fn work(walls: &[(Frame, Wall)], asked: Asked) -> Result<Found, Trouble> {
+    if asked.effort == Effort::Search {
+        let tried = walls.par_iter().map(|(_, w)| searched(w)).collect::<Vec<_>>();
+        let (frame, low) = worst(walls.iter().zip(tried))?;
         return Ok(Found { frame, low, high: None, refined: false, picture: None, aside: None });
     }
     let near: Vec<&(Frame, Wall)> = match walls {
         [only] => vec![only],
         _ => {
-            let all = coarse();
+            let all = walls.par_iter().map(|(_, w)| field(w, FIELD.0)).collect::<Vec<_>>();
             let least = all.iter().flatten().map(|l| l.field).fold(f64::INFINITY, f64::min);
             let counts = |low: &Result<Low, Trouble>| low.as_ref().map_or(true, |l| l.field <= CLOSE * least);
             walls.iter().zip(&all).filter(|(_, low)| counts(low)).map(|(w, _)| w).collect()
         }
     };
-    let fine: Vec<_> = near.par_iter().map(|(_, w)| field(w, FIELD.1, LOWERED)).collect();
+    let fine: Vec<_> = near.par_iter().map(|(_, w)| counted(w, FIELD)).collect();
     let (frame, mut low) = worst(near.iter().copied().zip(fine))?;
     let Some((_, wall)) = near.iter().find(|(f, _)| *f == frame) else {
         return Err(Trouble::NotSolved("no frame was tried".to_owned()));
     };
-    let (mut high, aside) = rayon::join(
-        || wall.with(|p| mechanism(p, PATTERN.0)),
-        || (effort == Effort::Read).then(|| beside(wall)),
-    );
-    let wide = |low: &Low, high: &Upper| high.pressure > (1.0 + WIDE) * low.pressure();
-    let refined = high.as_ref().is_ok_and(|h| wide(&low, h));
+    let (mut high, aside) =
+        rayon::join(|| wall.with(|p| mechanism(p, PATTERN.0)), || asked.aside.then(|| beside(wall)));
+    let refined = high.as_ref().is_ok_and(|h| h.pressure > (1.0 + WIDE) * low.pressure());
     if refined {
-        let (finer, weaker) =
-            rayon::join(|| field(wall, FIELD.2, LOWERED), || wall.with(|p| mechanism(p, PATTERN.1)));
-        // Each is a bound by itself, so the better one of either side counts.
-        if let Ok(finer) = finer
-            && finer.pressure() > low.pressure()
-        {
-            low = finer;
-        }
-        if let (Ok(first), Ok(weaker)) = (&high, weaker)
-            && weaker.pressure < first.pressure
-        {
-            high = Ok(weaker);
-        }
+        (low, high) = finer(wall, low, high);
     }
     let upper = high?;
-    let picture = match effort {
+    let picture = match asked.effort {
         Effort::Read => Some(Picture {
             cracks: wall.with(|p| pattern(p, longer(p) / PATTERN.0))?,
             cells: wall.with(|p| cells(p, &upper)),
@@ -241,6 +239,17 @@ fn work(walls: &[(Frame, Wall)], effort: Effort) -> Result<Found, Trouble> {
     };
     let high = Some(High { pressure: upper.pressure, lines: upper.potential });
     Ok(Found { frame, low, high, refined, picture, aside })
+}
+
+/// Both bounds on finer grids. Each is a bound by itself, so the better one of either side counts.
+fn finer(wall: &Wall, low: Low, high: Result<Upper, Trouble>) -> (Low, Result<Upper, Trouble>) {
+    let (finer, weaker) = rayon::join(|| counted(wall, REFINED), || wall.with(|p| mechanism(p, PATTERN.1)));
+    let low = finer.ok().filter(|finer| finer.pressure() > low.pressure()).unwrap_or(low);
+    let high = match (high, weaker) {
+        (Ok(first), Ok(weaker)) if weaker.pressure < first.pressure => Ok(weaker),
+        (first, _) => first,
+    };
+    (low, high)
 }
 
 /// The least of several.
@@ -261,9 +270,22 @@ fn longer(plate: &Plate<'_>) -> f64 {
     plate.l.max(plate.h)
 }
 
-fn field(wall: &Wall, parts: f64, lowered: f64) -> Result<Low, Trouble> {
+/// The field on one grid; nothing is taken off it.
+fn field(wall: &Wall, parts: f64) -> Result<Low, Trouble> {
     let Safe { pressure, reactions, lengths, triangles, .. } = wall.with(|p| safe(p, longer(p) / parts))?;
-    Ok(Low { field: pressure, lowered, triangles, reactions, lengths })
+    Ok(Low { field: pressure, lowered: 1.0, triangles, reactions, lengths })
+}
+
+/// The field on the finer of two grids, and what counts of it.
+fn counted(wall: &Wall, parts: (f64, f64)) -> Result<Low, Trouble> {
+    let (coarse, fine) = rayon::join(|| field(wall, parts.0), || field(wall, parts.1));
+    let (coarse, fine) = (coarse?, fine?);
+    Ok(Low { lowered: counts(coarse.field, fine.field, parts), ..fine })
+}
+
+fn searched(wall: &Wall) -> Result<Low, Trouble> {
+    let low = counted(wall, SEARCHED)?;
+    Ok(Low { lowered: low.lowered.min(COARSE), ..low })
 }
 
 fn mechanism(plate: &Plate<'_>, parts: f64) -> Result<Upper, Trouble> {
@@ -271,10 +293,10 @@ fn mechanism(plate: &Plate<'_>, parts: f64) -> Result<Upper, Trouble> {
 }
 
 fn beside(wall: &Wall) -> Aside {
-    let counted = |w: &Wall| field(w, FIELD.1, LOWERED).ok().map(|low| low.pressure());
+    let taken = |w: &Wall| searched(w).ok().map(|low| low.pressure());
     let first = || wall.with(|p| first_crack(p, longer(p) / FIELD.1, PATCH)).ok();
     let (cracked, (solid, first)) =
-        rayon::join(|| counted(&wall.cracked()), || (counted(&wall.solid()), first()));
+        rayon::join(|| taken(&wall.cracked()), || (taken(&wall.solid()), first()));
     Aside { cracked, solid, first }
 }
 

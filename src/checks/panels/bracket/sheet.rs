@@ -90,7 +90,12 @@ fn write(s: &mut Sheet, state: State<'_>, f: &Found, strength: &Strength) -> Bou
     let _ = (M_Rt, M_Rb);
     let words = format!("greatest pressure with moments in balance, {} triangles", f.low.triangles);
     found!(s, CLAUSE, &words, w_mf = Stress::new(f.low.field));
-    given!(s, "part of it that counts, for its mesh", "own study of meshes", k_mf = Num::new(f.low.lowered));
+    given!(
+        s,
+        "part of it that counts, by a coarser mesh beside it",
+        "own study",
+        k_mf = Num::new(f.low.lowered)
+    );
     calc!(s, CLAUSE, "safe side", w_s = k_mf * w_mf);
     let Some(high) = &f.high else { return Bounds { low: w_s, high: None } };
     let words = format!("pressure of the weakest crack pattern, {} lines", high.lines);
@@ -110,11 +115,16 @@ fn write(s: &mut Sheet, state: State<'_>, f: &Found, strength: &Strength) -> Bou
             let _ = w_cr;
         }
         if let Some(cracked) = aside.cracked {
-            found!(s, CLAUSE, "the same, bed joints cracked: weight alone", w_dry = Stress::new(cracked));
+            found!(
+                s,
+                CLAUSE,
+                "with the bed joints cracked: weight alone, coarser grid",
+                w_dry = Stress::new(cracked)
+            );
             let _ = w_dry;
         }
         if let Some(solid) = aside.solid.filter(|_| !state.m.after.openings.is_empty()) {
-            found!(s, CLAUSE, "the same without the openings", w_sol = Stress::new(solid));
+            found!(s, CLAUSE, "without the openings, coarser grid", w_sol = Stress::new(solid));
             calc!(s, "limit analysis", "part that the openings leave", k_op = w_s / w_sol);
             let _ = k_op;
         }

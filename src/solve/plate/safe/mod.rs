@@ -40,9 +40,22 @@ const NOUGHT: f64 = 1e-6;
 /// The load stands at the nodes, so a coarse mesh can miss a peak between them and lie above the exact value.
 /// Against a spacing of `max(l, h) / 64`, 54 panels (three shapes, edges and strengths, with and without a
 /// window, own trial) came out between 0.99 % below and 0.094 % above; the worst, 4.0 x 2.6 m on simple
-/// edges, lies about 0.13 % above its limit. The factor is twice that and a little more. At
-/// `max(l, h) / 16` the worst is 0.39 % above and the factor is not enough.
-pub const LOWERED: f64 = 0.997;
+/// edges, lies about 0.13 % above its limit. With bed joints of a twelfth of `m_H` or less a panel was 0.57 % above;
+/// the factor is a little less than twice that. Of 107 random ones one lay more than
+/// 0.1 % above a mesh of 48 steps, by 0.25 %. At `max(l, h) / 16` it is not enough.
+pub const LOWERED: f64 = 0.99;
+
+/// What counts of a pressure found on a mesh of `parts.1` steps along the longer side, where one of `parts.0`, fewer,
+/// gives `coarse`: [`LOWERED`] at most, and less where the coarser mesh lies above.
+///
+/// Loads stand at nodes, so a narrow pier that spans upwards with few of them misses part of its largest moment, by a
+/// part that falls with the square of the step. Two meshes show it; it is taken off one and a half times. Own trial: a
+/// pier of 0.2 m beside an opening of 5.1 m lies 5.2 % higher on 16 steps than on 32, which are 1.3 % too high.
+pub fn counts(coarse: f64, fine: f64, parts: (f64, f64)) -> f64 {
+    let (few, many) = (parts.0.powi(2), parts.1.powi(2));
+    let above = (coarse / fine - 1.0).max(0.0) * few / (many - few);
+    LOWERED.min(1.0 - 1.5 * above)
+}
 
 /// A triangle of the moment field.
 #[derive(Clone, Copy, Debug)]
