@@ -61,7 +61,7 @@ fn what_counts_holds_on_a_finer_mesh() {
         assert!(part > 0.95, "panel {seed}: {part}");
         lowered += usize::from(part < LOWERED);
     }
-    assert!(lowered >= 2, "the coarser mesh shows the bad ones");
+    assert!(lowered >= 1, "the coarser mesh shows the worst one");
 }
 
 /// The spacings that a sheet takes, with the safe side lowered as a sheet does.

@@ -66,7 +66,7 @@ pub fn greatest_length(m: &PanelModel, annex: &Annex) -> Option<Length> {
 
 /// How finely a length is searched from its own value up: steps, and mm. A limit analysis is worked at each.
 fn fineness(m: &PanelModel) -> (u32, f64) {
-    if m.route == PanelRoute::LimitAnalysis { (10, 50.0) } else { (200, 1.0) }
+    if m.route == PanelRoute::LimitAnalysis { (10, 50.0) } else { (40, 2.0) }
 }
 
 /// Greatest length of a panel that passes, from its own to twice that.
