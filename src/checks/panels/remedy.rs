@@ -82,7 +82,7 @@ pub fn longest(m: &PanelModel, annex: &Annex) -> Option<Length> {
 }
 
 /// Greatest width of opening `i` of a panel that passes, widened evenly to both sides, and the width at which only
-/// [`NARROWEST`] is left beside it.
+/// 100 mm of wall are left beside it.
 pub fn widest(m: &PanelModel, annex: &Annex, i: usize) -> Option<(Length, Length)> {
     let all = &m.after.openings;
     let o = all.get(i)?;

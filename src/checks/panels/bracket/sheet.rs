@@ -64,7 +64,7 @@ fn of(state: State<'_>, span: &Span, strength: &Strength, id: &str) -> Result<Fo
     })?;
     match found.as_ref() {
         Ok(found) => Ok(found.clone()),
-        Err(trouble) => Err(Outside::new(id, "limit analysis", &words(trouble))),
+        Err(trouble) => Err(Outside::new(id, "limit analysis", words(trouble))),
     }
 }
 
