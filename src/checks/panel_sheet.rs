@@ -30,11 +30,12 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
     match model(job, p) {
         Ok(m) => {
             let name = |kind: &str| format!("{}-{kind}", p.mark);
-            let cracks = job.drawings(|| panel_cracks::drawings(p, &m, &job.annex));
             sheet.drawings(&[&name("before"), &name("after")]);
             leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
             passed_on(job, p, &m, &mut sheet);
+            // After the check, which has the leaves analysed on all cores: here they are only remembered.
+            let cracks = job.drawings(|| panel_cracks::drawings(p, &m, &job.annex));
             super::named(&mut sheet, &cracks);
             sheet.drawings(&[&name("section")]);
             let off = p.wind.is_none() && job.wind.as_ref().is_ok_and(|w| w.off_panel(p));

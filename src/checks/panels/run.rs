@@ -398,7 +398,7 @@ fn side_by_side(m: &PanelModel, before: Option<&Outcome>, after: Option<&Outcome
         let force = |name: &'static str, x: crate::quantity::Force| show(name, x.dynamic()).to_string();
         // Both leaves have the same edges, so the same case.
         if i == 0 {
-            row("case of Annex E".to_owned(), &|o| o.leaves.get(i).map(|x| x.label.clone()));
+            row("case of Annex E, or how worked".to_owned(), &|o| o.leaves.get(i).map(|x| x.label.clone()));
         }
         row(format!("coefficient{of}"), &|o| o.leaves.get(i)?.alpha_2.map(|x| print::significant(x.base())));
         row(format!("moment, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Ed1", x.0)));

@@ -45,7 +45,7 @@ pub fn leaf(
     let w_Rd = if state.m.leaves.len() == 1 {
         given!(s, "pressure that the wall can take, the safe side", "above", w_Rd = bounds.low);
         if state.judged {
-            verify!(s, &id, "6.3.1, by limit analysis", "wind on the panel with its openings", W_Ed <= w_Rd);
+            verify!(s, &id, "6.3.1, by limit analysis", "wind on the panel as a whole", W_Ed <= w_Rd);
         }
         w_Rd
     } else {
