@@ -83,7 +83,6 @@ fn elevation(
         base: edge(&span.base),
         openings: span.openings.iter().map(opening).collect(),
         walls: inside.into_iter().collect(),
-        yield_lines: Vec::new(),
         values: vec![Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), "")],
     }
 }

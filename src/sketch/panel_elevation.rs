@@ -36,8 +36,6 @@ pub struct PanelElevation {
     pub openings: Vec<Opening>,
     /// Walls that meet the panel from behind: returns, and the wall that goes.
     pub walls: Vec<WallBehind>,
-    /// Yield lines, as ends in mm from the lower left corner.
-    pub yield_lines: Vec<[(f64, f64); 2]>,
     /// Load or result written on the panel.
     pub values: Vec<Action>,
 }
@@ -76,10 +74,6 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     edges.draw(&mut board, ruler);
     walls(&mut board, view, ruler);
     openings(&mut board, view, ruler);
-    for line in &view.yield_lines {
-        let [from, to] = line.map(|(x, y)| ruler.at(x, y));
-        board.line(Pen::Axis, from, to);
-    }
     words(&mut board, view, panel);
     edges.dimensions(&mut board, ruler, &stations(view));
     let (state, dash) = (&view.state, if view.state.is_empty() { "" } else { "-" });
@@ -174,9 +168,6 @@ fn key(view: &PanelElevation) -> String {
     if view.walls.iter().any(|wall| wall.removed) {
         parts.push("dashed: removed".to_owned());
     }
-    if !view.yield_lines.is_empty() {
-        parts.push("chain lines: yield lines".to_owned());
-    }
     let key = parts.join("; ");
     key[..1].to_uppercase() + &key[1..]
 }
@@ -200,9 +191,6 @@ fn alt(view: &PanelElevation) -> String {
     let steps = steps(&stations(view));
     if steps.len() > 1 {
         alt += &format!("Along the base from the left: {} mm. ", list(&steps));
-    }
-    if !view.yield_lines.is_empty() {
-        alt += &format!("{} yield lines are drawn. ", view.yield_lines.len());
     }
     let values: Vec<String> = view.values.iter().map(Action::spoken).collect();
     if !values.is_empty() {

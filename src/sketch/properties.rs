@@ -153,7 +153,6 @@ prop_compose! {
             walls: walls.into_iter().enumerate().map(|(i, (x, removed))| WallBehind {
                 x: (x * length).round(), thickness: 100.0, words: format!("W{i}"), removed,
             }).collect(),
-            yield_lines: vec![],
             values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
         }
     }

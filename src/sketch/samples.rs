@@ -171,7 +171,6 @@ pub fn panels() -> [PanelElevation; 2] {
             bearing: None,
         }],
         walls: vec![WallBehind { x: 2600.0, thickness: 100.0, words: "W2".into(), removed: false }],
-        yield_lines: vec![],
         values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
     };
     let mut after = before.clone();
@@ -181,7 +180,6 @@ pub fn panels() -> [PanelElevation; 2] {
         WallBehind { x: 2600.0, thickness: 100.0, words: "R1".into(), removed: false },
         WallBehind { x: 900.0, thickness: 100.0, words: "W3".into(), removed: true },
     ];
-    after.yield_lines = vec![[(0.0, 0.0), (1200.0, 1200.0)], [(0.0, 2400.0), (1200.0, 1200.0)]];
     [before, after]
 }
 

@@ -28,3 +28,21 @@ fn by_hand_no_demo_panel_takes_more_than_its_weakest_crack_pattern() {
     }
     assert!(seen.len() >= 2, "{seen:?}");
 }
+
+/// What the terminal says and what the pack says is one outcome: the two work limit analysis to different depths.
+#[test]
+fn results_and_pack_have_one_outcome() {
+    for (name, text) in demos().into_iter().filter(|(_, text)| text.contains("openings")) {
+        let building = perpend::job::read(&name, &text).unwrap_or_else(|e| panic!("{}", e.render(false)));
+        let (quick, whole) = (checks::results(&building), checks::run(&building));
+        assert_eq!(format!("{:?}", quick.outcome), format!("{:?}", whole.outcome), "{name}");
+        let verdicts = |all: &checks::Results| {
+            let sheets = all
+                .sections
+                .iter()
+                .map(|s| (s.id.clone(), s.sheet.verdicts.clone(), s.sheet.unshown.clone()));
+            sheets.collect::<Vec<_>>()
+        };
+        assert_eq!(verdicts(&quick), verdicts(&whole), "{name}");
+    }
+}

@@ -11,6 +11,7 @@ mod hand_frame;
 pub mod hand_openings;
 mod hand_panel;
 mod hand_pier;
+mod hand_reactions;
 mod hand_return;
 mod hand_slenderness;
 mod hand_stability;

@@ -1,7 +1,7 @@
 //! What each leaf resists per unit width: the same before and after.
 
 use super::model::{PanelLeaf, PanelModel};
-use crate::quantity::functions::{max, min};
+use crate::quantity::functions::max;
 use crate::quantity::{Area, Force, Length, LineLoad, Num, Stress, Weight};
 use crate::standards::annex::Annex;
 use crate::standards::en1990::Combination;
@@ -34,15 +34,6 @@ pub struct Strength {
     pub M_Rd1: Force,
     /// Across the bed joints, where there is such a strength: resistance per unit height and orthogonal ratio.
     pub across: Option<(Force, Num)>,
-}
-
-impl Strength {
-    /// Apparent strength of a bed joint of a full-height pier at the height `part` of `h`: its own dead load in place of
-    /// that at mid-height, capped as that is. 6.3.1(4).
-    pub fn bed_stress(&self, part: f64, h: Length) -> Stress {
-        let helps = self.sigma_top + self.sigma_own * (1.0 - part) * h;
-        self.f_xd1 + min(helps, 0.2 * self.f_d)
-    }
 }
 
 /// Strengths of leaf `i`, written on the sheet.

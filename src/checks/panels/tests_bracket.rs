@@ -64,6 +64,19 @@ fn both_routes_stand_on_the_sheet_whichever_decides() {
     assert!(note, "what the hand route gives is said");
 }
 
+/// 6.5: where ties are too few to count, the wind may stay on either leaf, in limit analysis as by hand.
+#[test]
+fn without_ties_enough_the_weaker_leaf_decides() {
+    let mut m = with_window(cavity(4000.0, HELD, 0.3), Frame::Jambs);
+    let tied = run(&m);
+    m.ties = Some(crate::quantity::PerArea::new(1.0e-6));
+    let loose = run(&m);
+    let leaves = [value(&tied, "w_s_o"), value(&tied, "w_s_i")];
+    assert_eq!(value(&tied, "w_S"), leaves[0] + leaves[1]);
+    assert_eq!(value(&loose, "w_S"), leaves[0].min(leaves[1]));
+    assert_eq!(value(&loose, "w_U"), value(&loose, "w_u_o").min(value(&loose, "w_u_i")));
+}
+
 #[test]
 fn what_nobody_knows_of_a_frame_is_the_worst_of_three() {
     let takes = |frame| value(&run(&by_limit(with_window(single(4000.0, HELD, 0.3, 0.0), frame))), "w_Rd");

@@ -127,6 +127,8 @@ pub struct Aside {
 pub struct Found {
     /// The frame that is worst where some are unknown.
     pub frame: Frame,
+    /// Moment per length at which a bed joint of a pier opens, at the top and at the foot, N.
+    pub pier: (f64, f64),
     /// The safe side.
     pub low: Low,
     /// The weakest pattern; none in a search.
@@ -204,10 +206,11 @@ pub fn prepare(m: &PanelModel, spans: &[&Span], strengths: &[Strength], effort: 
 }
 
 fn work(walls: &[(Frame, Wall)], asked: Asked) -> Result<Found, Trouble> {
+    let pier = walls.first().map_or((0.0, 0.0), |(_, w)| w.pier());
     if asked.effort == Effort::Search {
         let tried = walls.par_iter().map(|(_, w)| searched(w)).collect::<Vec<_>>();
         let (frame, low) = worst(walls.iter().zip(tried))?;
-        return Ok(Found { frame, low, high: None, refined: false, picture: None, aside: None });
+        return Ok(Found { frame, pier, low, high: None, refined: false, picture: None, aside: None });
     }
     let near: Vec<&(Frame, Wall)> = match walls {
         [only] => vec![only],
@@ -238,7 +241,7 @@ fn work(walls: &[(Frame, Wall)], asked: Asked) -> Result<Found, Trouble> {
         _ => None,
     };
     let high = Some(High { pressure: upper.pressure, lines: upper.potential });
-    Ok(Found { frame, low, high, refined, picture, aside })
+    Ok(Found { frame, pier, low, high, refined, picture, aside })
 }
 
 /// Both bounds on finer grids. Each is a bound by itself, so the better one of either side counts.

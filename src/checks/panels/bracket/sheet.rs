@@ -9,7 +9,7 @@ use crate::checks::panels::strength::Strength;
 use crate::checks::panels::{opened, sharing};
 use crate::quantity::functions::min;
 use crate::quantity::print::show;
-use crate::quantity::{Num, Stress};
+use crate::quantity::{Force, Num, Stress};
 use crate::solve::plate::{Trouble, elastic as first_crack};
 use crate::standards::masonry::Edge;
 use crate::trace::{Outside, Sheet, Unshown};
@@ -84,9 +84,9 @@ fn write(s: &mut Sheet, state: State<'_>, f: &Found, strength: &Strength) -> Bou
         given!(s, "resistance per unit height, across the bed joints", &from, M_Rd2 = across);
         let _ = M_Rd2;
     }
-    let bed = |y: f64| strength.bed_stress(y, state.m.h) * strength.Z;
-    given!(s, "resistance along a bed joint of a pier, at the top", "6.3.1(4), own height", M_Rt = bed(1.0));
-    given!(s, "resistance along a bed joint of a pier, at the foot", "6.3.1(4), own height", M_Rb = bed(0.0));
+    let (top, foot) = (Force::new(f.pier.0), Force::new(f.pier.1));
+    given!(s, "resistance along a bed joint of a pier, at the top", "6.3.1(4), own height", M_Rt = top);
+    given!(s, "resistance along a bed joint of a pier, at the foot", "6.3.1(4), own height", M_Rb = foot);
     let _ = (M_Rt, M_Rb);
     let words = format!("greatest pressure with moments in balance, {} triangles", f.low.triangles);
     found!(s, CLAUSE, &words, w_mf = Stress::new(f.low.field));

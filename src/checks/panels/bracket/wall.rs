@@ -94,9 +94,10 @@ impl Wall {
         cracked
     }
 
-    /// Moment per length at which the bed joint at (x, y) opens, N.
-    pub fn joint(&self, x: f64, y: f64) -> f64 {
-        self.joints.moment(x, y)
+    /// Moment per length at which a bed joint of a pier opens, at the top and at the foot of the wall, N.
+    pub fn pier(&self) -> (f64, f64) {
+        let pier = Joints { columns: Vec::new(), ..self.joints.clone() };
+        (pier.moment(0.0, self.size.1), pier.moment(0.0, 0.0))
     }
 
     /// What the analyses take.
