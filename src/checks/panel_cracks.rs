@@ -1,6 +1,6 @@
 //! What the drawings of a panel at collapse show: the weakest crack pattern before and after the removal.
 
-use super::panel_views::{edge, opening};
+use super::panel_views::face;
 use super::panels::PanelModel;
 use super::panels::bracket::found::{leaves, worked};
 use super::panels::bracket::sheet::of_wall;
@@ -8,7 +8,9 @@ use super::panels::bracket::{Bounds, Found};
 use crate::building::{Panel, Span};
 use crate::quantity::Stress;
 use crate::quantity::print::show;
-use crate::sketch::{Action, Cell, Crack, CrackKind, Drawing, Frame, PanelCracks, cracks_pair, panel_cracks};
+use crate::sketch::{
+    Action, Cell, Crack, CrackKind, Drawing, Frame, PanelCracks, PanelFace, cracks_pair, panel_cracks,
+};
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
 
@@ -19,7 +21,7 @@ const FRAME: Frame = Frame::new(168.0, 76.0);
 pub fn drawings(p: &Panel, m: &PanelModel, annex: &Annex) -> Vec<Drawing> {
     let before = view(p, m, annex, &m.before, "before");
     let after = view(p, m, annex, &m.after, "after");
-    let states = [&before, &after].map(|v| v.as_ref().map(|v| v.state.clone()));
+    let states = [&before, &after].map(|v| v.as_ref().map(|v| v.face.state.clone()));
     let mut all: Vec<Drawing> = match (before, after) {
         (Some(before), Some(after)) => cracks_pair(&before, &after, FRAME).into(),
         (before, after) => before.or(after).iter().map(|one| panel_cracks(one, FRAME)).collect(),
@@ -52,16 +54,9 @@ fn view(p: &Panel, m: &PanelModel, annex: &Annex, span: &Span, state: &str) -> O
     if let Some(high) = wall.high {
         values.push(written("w_U", high, "weakest pattern"));
     }
+    let mark = if all.len() > 1 { format!("{}, {}", p.mark, m.leaf_name(i)) } else { p.mark.clone() };
     Some(PanelCracks {
-        mark: if all.len() > 1 { format!("{}, {}", p.mark, m.leaf_name(i)) } else { p.mark.clone() },
-        state: state.to_owned(),
-        length: span.length.base(),
-        height: m.h.base(),
-        left: edge(&span.left),
-        right: edge(&span.right),
-        top: edge(&span.top),
-        base: edge(&span.base),
-        openings: span.openings.iter().map(opening).collect(),
+        face: PanelFace { mark, ..face(p, span, state) },
         cracks: picture.cracks.iter().map(crack).collect(),
         deflection: picture.cells.iter().map(|c| Cell { x: c.x, y: c.y, share: c.share }).collect(),
         takes: written("w_S", wall.low, "takes"),

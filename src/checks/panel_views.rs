@@ -6,8 +6,8 @@ use super::shapes::layers;
 use crate::building::{BuildUp, Building, Edge, FloorKind, Panel, PanelOpening, Span, StrapsKnown};
 use crate::quantity::{Length, LineLoad, print};
 use crate::sketch::{
-    self, Action, Drawing, Floor, Frame, PanelElevation, PanelSection, Support, WallBehind, Wind, panel_pair,
-    panel_section,
+    self, Action, Drawing, Floor, Frame, PanelElevation, PanelFace, PanelSection, Support, WallBehind, Wind,
+    panel_pair, panel_section,
 };
 use crate::standards::masonry::Edge as Kind;
 
@@ -42,7 +42,7 @@ pub fn drawings(b: &Building, p: &Panel, m: &PanelModel, wind: Wind) -> Vec<Draw
     vec![first, second, third]
 }
 
-pub(super) fn opening(o: &PanelOpening) -> sketch::Opening {
+fn opening(o: &PanelOpening) -> sketch::Opening {
     let words = if o.sill == Length::ZERO { "door" } else { "window" };
     sketch::Opening {
         x: o.at.base(),
@@ -54,7 +54,7 @@ pub(super) fn opening(o: &PanelOpening) -> sketch::Opening {
     }
 }
 
-pub(super) fn edge(e: &Edge) -> sketch::Edge {
+fn edge(e: &Edge) -> sketch::Edge {
     let support = match e.kind {
         Kind::Free => Support::Free,
         Kind::Simple => Support::Simple,
@@ -62,6 +62,21 @@ pub(super) fn edge(e: &Edge) -> sketch::Edge {
     };
     // The reason stands in the table of the sheet; the drawing has the key.
     sketch::Edge { support, why: String::new(), held: e.stretch.map(|(a, z)| (a.base(), z.base())) }
+}
+
+/// A state of the panel as both drawings of it show it.
+pub(super) fn face(p: &Panel, span: &Span, state: &str) -> PanelFace {
+    PanelFace {
+        mark: p.mark.clone(),
+        state: state.to_owned(),
+        length: span.length.base(),
+        height: p.height.base(),
+        left: edge(&span.left),
+        right: edge(&span.right),
+        top: edge(&span.top),
+        base: edge(&span.base),
+        openings: span.openings.iter().map(opening).collect(),
+    }
 }
 
 fn elevation(
@@ -73,15 +88,7 @@ fn elevation(
 ) -> PanelElevation {
     let inside = wall.filter(|w| w.x >= 0.0 && w.x <= span.length.base());
     PanelElevation {
-        mark: p.mark.clone(),
-        state: state.to_owned(),
-        length: span.length.base(),
-        height: p.height.base(),
-        left: edge(&span.left),
-        right: edge(&span.right),
-        top: edge(&span.top),
-        base: edge(&span.base),
-        openings: span.openings.iter().map(opening).collect(),
+        face: face(p, span, state),
         walls: inside.into_iter().collect(),
         values: vec![Action::new("q_net", &print::show("q_net", m.q_net.dynamic()).to_string(), "")],
     }

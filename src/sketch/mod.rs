@@ -74,7 +74,7 @@ pub use ground_profile::{GroundProfile, ground_profile};
 pub use key_plan::{KeyPlan, PlanMark, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
 pub use panel_cracks::{Cell, Crack, CrackKind, PanelCracks, cracks_pair, panel_cracks};
-pub use panel_edges::{Edge, Support};
+pub use panel_edges::{Edge, PanelFace, Support};
 pub use panel_elevation::{PanelElevation, WallBehind, panel_elevation, panel_pair};
 pub use panel_opening::Opening;
 pub use panel_section::{Floor, PanelSection, panel_section};

@@ -12,8 +12,7 @@ use super::load;
 use super::note::{Note, Spot};
 use super::panel_cracks_words as words;
 use super::panel_deflection::Deflection;
-use super::panel_edges::{BAND, Edge, Edges};
-use super::panel_opening::Opening;
+use super::panel_edges::{BAND, Edges, PanelFace};
 use super::pen::{Ink, Pen};
 use super::scale::{APART, Frame, Scale, fit, fit_row_or_column};
 use super::view::{Action, Ruler, Side};
@@ -21,24 +20,8 @@ use super::view::{Action, Ruler, Side};
 /// What the drawing of a panel at collapse shows.
 #[derive(Clone, Debug)]
 pub struct PanelCracks {
-    /// Mark of the panel.
-    pub mark: String,
-    /// `before` or `after`, or empty where there is one state only.
-    pub state: String,
-    /// Length between the supports, mm.
-    pub length: f64,
-    /// Height between the supports, mm.
-    pub height: f64,
-    /// Left edge.
-    pub left: Edge,
-    /// Right edge.
-    pub right: Edge,
-    /// Top edge.
-    pub top: Edge,
-    /// Base.
-    pub base: Edge,
-    /// Openings.
-    pub openings: Vec<Opening>,
+    /// The panel.
+    pub face: PanelFace,
     /// Cracks and hinges of the pattern.
     pub cracks: Vec<Crack>,
     /// How far the panel moves, cell by cell; cells do not overlap and none lie in an opening. May be empty.
@@ -117,19 +100,19 @@ fn draw(view: &PanelCracks, scale: Scale) -> Drawing {
     let mut board = Board::default();
     let ruler = Ruler::new(scale, Side::Left);
     let deflection = Deflection::new(&view.deflection);
-    deflection.draw(&mut board, view.height, ruler);
+    deflection.draw(&mut board, view.face.height, ruler);
     let lines = || {
         let real = view.cracks.iter().filter(|crack| crack.from != crack.to);
         real.map(|c| (c.kind, Line::new(ruler.at(c.from.0, c.from.1), ruler.at(c.to.0, c.to.1))))
     };
     lines().for_each(|(_, line)| clear(&mut board, line));
-    let edges = edges(view);
+    let edges = Edges { face: &view.face, worded: false };
     // Before and after hang from one line, with a band at the top or without.
-    let panel = Rect::from_points(ruler.at(0.0, 0.0), ruler.at(view.length, view.height));
+    let panel = Rect::from_points(ruler.at(0.0, 0.0), ruler.at(view.face.length, view.face.height));
     board.keep(panel.inflate(BAND, BAND));
     edges.draw(&mut board, ruler);
-    for opening in &view.openings {
-        opening.draw(&mut board, ruler, Pen::Beyond, (view.length, view.height));
+    for opening in &view.face.openings {
+        opening.draw(&mut board, ruler, Pen::Beyond, (view.face.length, view.face.height));
     }
     // Rings last: a crack that meets a hinge runs below them.
     for kind in [CrackKind::Sagging, CrackKind::Hogging, CrackKind::Hinge] {
@@ -143,26 +126,13 @@ fn draw(view: &PanelCracks, scale: Scale) -> Drawing {
     }
     edges.dimensions(&mut board, ruler, &[]);
     results(&mut board, view, ruler, &deflection);
-    let dash = if view.state.is_empty() { "" } else { "-" };
+    let dash = if view.face.state.is_empty() { "" } else { "-" };
     board.finish(Words {
-        name: format!("{}-cracks{dash}{}", view.mark, view.state),
+        name: format!("{}-cracks{dash}{}", view.face.mark, view.face.state),
         caption: words::caption(view, &edges, deflection.is_seen()),
         scale: scale.text(),
         alt: words::alt(view, &edges),
     })
-}
-
-fn edges(view: &PanelCracks) -> Edges<'_> {
-    Edges {
-        length: view.length,
-        height: view.height,
-        left: &view.left,
-        right: &view.right,
-        top: &view.top,
-        base: &view.base,
-        openings: &view.openings,
-        worded: false,
-    }
 }
 
 /// Clears the hatching beside a crack, so that the two do not run together on a poor copy.
@@ -200,7 +170,7 @@ fn rings(board: &mut Board, line: Line) {
 /// What the panel takes and the wind on it: where the panel is clear, else above everything; on hatching or in an
 /// opening only where words of edges leave no room there.
 fn results(board: &mut Board, view: &PanelCracks, ruler: Ruler, deflection: &Deflection) {
-    let middle = ruler.at(view.length / 2.0, view.height / 2.0);
+    let middle = ruler.at(view.face.length / 2.0, view.face.height / 2.0);
     let mut note = Note::new(Role::Load, middle, words::led_by(&view.takes)).line(words::led_by(&view.wind));
     for value in &view.values {
         note = note.line(value.text());
@@ -217,17 +187,17 @@ fn results(board: &mut Board, view: &PanelCracks, ruler: Ruler, deflection: &Def
     for row in 1..rows {
         for column in 1..columns {
             let share = |n: usize, of: usize| n as f64 / of as f64;
-            let (x, y) = (view.length * share(column, columns), view.height * share(row, rows));
+            let (x, y) = (view.face.length * share(column, columns), view.face.height * share(row, rows));
             // Of places alike, the one nearer the middle; of hatched ones, the one that hides less.
             let off = (share(column, columns) - 0.5).abs() + (share(row, rows) - 0.5).abs();
             let cost = off + 2.0 * deflection.at(x, y);
-            if !view.openings.iter().any(|o| o.holds(x, y)) {
+            if !view.face.openings.iter().any(|o| o.holds(x, y)) {
                 spot(Spot::new(ruler.at(x, y), 0.0, 0.0), cost);
                 spot(Spot::upwards(ruler.at(x, y), 0.0, 0.0), cost + 3.0);
             }
         }
     }
-    for opening in &view.openings {
+    for opening in &view.face.openings {
         let centre = opening.area(ruler).center();
         spot(Spot::new(centre, 0.0, 0.0), 11.0);
         spot(Spot::upwards(centre, 0.0, 0.0), 13.0);
@@ -245,8 +215,8 @@ fn barriers(view: &PanelCracks, ruler: Ruler) -> Vec<Line> {
         let corners = [(x0, y0), (x1, y0), (x1, y1), (x0, y1)].map(|(x, y)| ruler.at(x, y));
         (0..4).map(move |n| Line::new(corners[n], corners[(n + 1) % 4]))
     };
-    let openings = view.openings.iter().flat_map(|o| ring((o.x, o.y), (o.x + o.width, o.y + o.height)));
+    let openings = view.face.openings.iter().flat_map(|o| ring((o.x, o.y), (o.x + o.width, o.y + o.height)));
     let cracks =
         view.cracks.iter().map(|c| Line::new(ruler.at(c.from.0, c.from.1), ruler.at(c.to.0, c.to.1)));
-    ring((0.0, 0.0), (view.length, view.height)).chain(openings).chain(cracks).collect()
+    ring((0.0, 0.0), (view.face.length, view.face.height)).chain(openings).chain(cracks).collect()
 }

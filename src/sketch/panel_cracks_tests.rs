@@ -50,15 +50,17 @@ fn pair() -> [PanelCracks; 2] {
     let simple = || edge(Support::Simple, "");
     let (l, h) = (3600.0, 2400.0);
     let before = PanelCracks {
-        mark: "P1".into(),
-        state: "before".into(),
-        length: l,
-        height: h,
-        left: simple(),
-        right: simple(),
-        top: simple(),
-        base: simple(),
-        openings: vec![],
+        face: PanelFace {
+            mark: "P1".into(),
+            state: "before".into(),
+            length: l,
+            height: h,
+            left: simple(),
+            right: simple(),
+            top: simple(),
+            base: simple(),
+            openings: vec![],
+        },
         cracks: vec![
             crack((0.0, 0.0), (1400.0, 1200.0), Sagging),
             crack((0.0, h), (1400.0, 1200.0), Sagging),
@@ -87,11 +89,15 @@ fn pair() -> [PanelCracks; 2] {
         bearing: Some(150.0),
     };
     let after = PanelCracks {
-        state: "after".into(),
-        length: l,
-        left: edge(Support::Continuous, ""),
-        right: Edge { held: Some((0.0, 1300.0)), ..edge(Support::Continuous, "bonded to R1") },
-        top: edge(Support::Free, ""),
+        face: PanelFace {
+            state: "after".into(),
+            length: l,
+            left: edge(Support::Continuous, ""),
+            right: Edge { held: Some((0.0, 1300.0)), ..edge(Support::Continuous, "bonded to R1") },
+            top: edge(Support::Free, ""),
+            openings: vec![window.clone()],
+            ..before.face.clone()
+        },
         cracks: vec![
             crack((0.0, 0.0), (2300.0, 1400.0), Sagging),
             crack((2300.0, 1400.0), (2300.0, h), Sagging),
@@ -104,7 +110,6 @@ fn pair() -> [PanelCracks; 2] {
         deflection: cells((l, h), (26, 12), std::slice::from_ref(&window), |x, y| {
             (x / 2300.0).min(y / h).min(1.0)
         }),
-        openings: vec![window],
         takes: Action::new("w", "0.88 kN/m²", "takes"),
         values: vec![Action::new("gamma_M", "2.7", "")],
         ..before.clone()
@@ -130,7 +135,7 @@ fn ruler(drawing: &Drawing, size: (f64, f64)) -> impl Fn((f64, f64)) -> Point {
 
 /// Asserts that each crack is drawn with its pen from end to end, and nothing but the cracks.
 fn all_drawn(view: &PanelCracks, drawing: &Drawing) {
-    let at = ruler(drawing, (view.length, view.height));
+    let at = ruler(drawing, (view.face.length, view.face.height));
     let of = |kind: CrackKind| {
         let these = view.cracks.iter().filter(move |c| c.kind == kind);
         these.map(|c| Line::new(at(c.from), at(c.to))).collect::<Vec<_>>()
@@ -225,7 +230,7 @@ fn the_pattern_is_told_in_words() {
 #[test]
 fn cracks_that_would_be_too_small_beside_each_other_stand_one_above_the_other() {
     let [mut before, mut after] = pair();
-    (before.length, after.length) = (6800.0, 9000.0);
+    (before.face.length, after.face.length) = (6800.0, 9000.0);
     (before.cracks, after.cracks) = (vec![], vec![]);
     let drawings = cracks_pair(&before, &after, ROW);
     assert!(drawings.iter().all(|d| d.scale == "1:100" && ROW.holds(d)));
@@ -236,13 +241,13 @@ fn cracks_that_would_be_too_small_beside_each_other_stand_one_above_the_other() 
 #[test]
 fn an_edge_held_in_part_has_its_band_there_alone() {
     let [_, mut view] = panels();
-    view.right.held = Some((600.0, 1800.0));
-    view.openings[0].bearing = Some(150.0);
+    view.face.right.held = Some((600.0, 1800.0));
+    view.face.openings[0].bearing = Some(150.0);
     let drawing = panel_elevation(&view, ROW);
     show(&drawing, "-part");
     sound(&drawing);
-    let at = ruler(&drawing, (view.length, view.height));
-    let (low, high) = (at((view.length, 600.0)), at((view.length, 1800.0)));
+    let at = ruler(&drawing, (view.face.length, view.face.height));
+    let (low, high) = (at((view.face.length, 600.0)), at((view.face.length, 1800.0)));
     // Crossed hatching beside the right edge fills the stretch and no more.
     let beside = drawing.strokes(Pen::Hatch).map(|path| path.bounding_box()).filter(|b| b.x0 > low.x - 1e-6);
     let band = beside.reduce(|a, b| a.union(b)).expect("a band");
@@ -267,10 +272,10 @@ fn an_edge_held_in_part_has_its_band_there_alone() {
 #[test]
 fn a_door_interrupts_the_band_below_it() {
     let [mut view, _] = pair();
-    view.openings =
+    view.face.openings =
         vec![Opening { x: 0.0, y: 0.0, width: 900.0, height: 2100.0, words: "door".into(), bearing: None }];
     let drawing = panel_cracks(&view, ROW);
-    let at = ruler(&drawing, (view.length, view.height));
+    let at = ruler(&drawing, (view.face.length, view.face.height));
     let base = lines(&drawing, Pen::Outline)
         .into_iter()
         .find(|l| l.p0.y == l.p1.y && (l.p0.y - at((0.0, 0.0)).y).abs() < 1e-6);
@@ -306,9 +311,10 @@ prop_compose! {
         let cracks = cracks.into_iter().map(|(a, b, c, d, kind)| crack(at(a, b), at(c, d), KINDS[kind]));
         let shape = |x: f64, y: f64| (bend * (x / l).min(1.0 - x / l) * (y / h)).min(1.0);
         let [sample, _] = pair();
+        let deflection = cells((l, h), parts, &openings, shape);
         PanelCracks {
-            length: l, height: h, left, right, top, base, cracks: cracks.filter(|c| c.from != c.to).collect(),
-            deflection: cells((l, h), parts, &openings, shape), openings,
+            face: PanelFace { length: l, height: h, left, right, top, base, openings, ..sample.face }, cracks: cracks.filter(|c| c.from != c.to).collect(),
+            deflection,
             values: vec![Action::new("W_Ed", "0.90 kN/m²", ""); more], ..sample
         }
     }

@@ -26,7 +26,7 @@ fn led_by_spoken(action: &Action) -> String {
 
 /// What it shows, and the key in words, for what is there.
 pub(super) fn caption(view: &PanelCracks, edges: &Edges<'_>, moves: bool) -> String {
-    let state = if view.state.is_empty() { String::new() } else { format!(", {}", view.state) };
+    let state = if view.face.state.is_empty() { String::new() } else { format!(", {}", view.face.state) };
     let has = |kind| view.cracks.iter().any(|crack| crack.kind == kind);
     let kinds = [
         (has(CrackKind::Sagging), "heavy line: crack on the face away from the wind"),
@@ -36,20 +36,21 @@ pub(super) fn caption(view: &PanelCracks, edges: &Edges<'_>, moves: bool) -> Str
     ];
     let kinds = kinds.into_iter().filter(|(there, _)| *there).map(|(_, words)| words.to_owned());
     let key: Vec<String> = kinds.chain(edges.key()).collect();
-    format!("{} at collapse{state}. {}", view.mark, capital(&key.join("; ")))
+    format!("{} at collapse{state}. {}", view.face.mark, capital(&key.join("; ")))
 }
 
 /// The drawing in words.
 pub(super) fn alt(view: &PanelCracks, edges: &Edges<'_>) -> String {
-    let state = if view.state.is_empty() { String::new() } else { format!(" {} the removal", view.state) };
+    let state =
+        if view.face.state.is_empty() { String::new() } else { format!(" {} the removal", view.face.state) };
     let mut alt = format!(
         "Crack pattern of panel {} at collapse{state}, {} mm long and {} mm high. ",
-        view.mark,
-        mm(view.length),
-        mm(view.height)
+        view.face.mark,
+        mm(view.face.length),
+        mm(view.face.height)
     );
     alt += &edges.spoken();
-    for opening in &view.openings {
+    for opening in &view.face.openings {
         alt += &opening.spoken();
     }
     alt += &cracks(view, CrackKind::Sagging, "away from");
@@ -97,11 +98,11 @@ fn hinges(view: &PanelCracks) -> String {
 /// The edges on which points lie, and whether one lies on an opening.
 fn reached(view: &PanelCracks, points: &[(f64, f64)]) -> Vec<String> {
     let on = |at: &dyn Fn((f64, f64)) -> f64| points.iter().any(|p| at(*p).abs() < REACHED);
-    let opening = points.iter().any(|p| view.openings.iter().any(|o| o.edge_holds(*p, REACHED)));
+    let opening = points.iter().any(|p| view.face.openings.iter().any(|o| o.edge_holds(*p, REACHED)));
     [
         (on(&|p| p.0), "the left edge"),
-        (on(&|p| p.0 - view.length), "the right edge"),
-        (on(&|p| p.1 - view.height), "the top"),
+        (on(&|p| p.0 - view.face.length), "the right edge"),
+        (on(&|p| p.1 - view.face.height), "the top"),
         (on(&|p| p.1), "the base"),
         (opening, "an opening"),
     ]
@@ -115,7 +116,7 @@ fn reached(view: &PanelCracks, points: &[(f64, f64)]) -> Vec<String> {
 fn furthest(view: &PanelCracks) -> Option<&Cell> {
     let largest = view.deflection.iter().map(|cell| cell.share).fold(0.0, f64::max);
     let off = |cell: &&Cell| {
-        let (x, y) = (cell.x.0 + cell.x.1 - view.length, cell.y.0 + cell.y.1 - view.height);
+        let (x, y) = (cell.x.0 + cell.x.1 - view.face.length, cell.y.0 + cell.y.1 - view.face.height);
         x.hypot(y)
     };
     let far = view.deflection.iter().filter(|cell| cell.share > 0.0 && cell.share >= 0.995 * largest);

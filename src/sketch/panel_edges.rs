@@ -62,15 +62,32 @@ const BESIDE_WORDS: f64 = 8.5;
 const SECOND_LINE: f64 = 3.5;
 const CLOSE: f64 = 5.2;
 
+/// A panel looked at on its face: its size, how it is held, its openings.
+#[derive(Clone, Debug)]
+pub struct PanelFace {
+    /// Mark of the panel.
+    pub mark: String,
+    /// `before` or `after`, or empty where there is one state only.
+    pub state: String,
+    /// Length between the supports, mm.
+    pub length: f64,
+    /// Height between the supports, mm.
+    pub height: f64,
+    /// Left edge.
+    pub left: Edge,
+    /// Right edge.
+    pub right: Edge,
+    /// Top edge.
+    pub top: Edge,
+    /// Base.
+    pub base: Edge,
+    /// Openings.
+    pub openings: Vec<Opening>,
+}
+
 /// The outline of a panel.
 pub(super) struct Edges<'a> {
-    pub length: f64,
-    pub height: f64,
-    pub left: &'a Edge,
-    pub right: &'a Edge,
-    pub top: &'a Edge,
-    pub base: &'a Edge,
-    pub openings: &'a [Opening],
+    pub face: &'a PanelFace,
     /// Whether edges have their words even without a reason.
     pub worded: bool,
 }
@@ -161,21 +178,21 @@ impl Side<'_> {
 
 impl<'a> Edges<'a> {
     fn sides(&self) -> [Side<'a>; 4] {
-        let (l, h) = (self.length, self.height);
+        let (l, h) = (self.face.length, self.face.height);
         let level = |edge, y, out| Side { edge, length: l, start: (0.0, y), upright: false, out };
         let upright = |edge, x, out| Side { edge, length: h, start: (x, 0.0), upright: true, out };
         [
-            level(self.top, h, Vec2::new(0.0, -1.0)),
-            level(self.base, 0.0, Vec2::new(0.0, 1.0)),
-            upright(self.left, 0.0, Vec2::new(-1.0, 0.0)),
-            upright(self.right, l, Vec2::new(1.0, 0.0)),
+            level(&self.face.top, h, Vec2::new(0.0, -1.0)),
+            level(&self.face.base, 0.0, Vec2::new(0.0, 1.0)),
+            upright(&self.face.left, 0.0, Vec2::new(-1.0, 0.0)),
+            upright(&self.face.right, l, Vec2::new(1.0, 0.0)),
         ]
     }
 
     /// Bands and outlines of the edges, and their reasons.
     pub fn draw(&self, board: &mut Board, ruler: Ruler) {
         for side in self.sides() {
-            let banded = side.banded(self.openings);
+            let banded = side.banded(&self.face.openings);
             if banded != [(0.0, side.length)] {
                 let (from, to) = side.on_paper(ruler, (0.0, side.length));
                 board.line(Pen::Beyond, from, to);
@@ -217,9 +234,9 @@ impl<'a> Edges<'a> {
             }
             let (from, to) = (side.at(ruler, 0.0), side.at(ruler, side.length));
             if is_base {
-                dimension::across(board, (from.x, to.x), line.y, band.y, mm(self.length));
+                dimension::across(board, (from.x, to.x), line.y, band.y, mm(self.face.length));
             } else if side.out.x < 0.0 {
-                dimension::up(board, (from.y, to.y), line.x, band.x, mm(self.height));
+                dimension::up(board, (from.y, to.y), line.x, band.x, mm(self.face.height));
             }
         }
     }

@@ -6,8 +6,7 @@ use super::board::{Board, Words};
 use super::dimension::mm;
 use super::drawing::{Drawing, Role};
 use super::note::{Note, Spot};
-use super::panel_edges::{Edge, Edges, steps};
-use super::panel_opening::Opening;
+use super::panel_edges::{Edges, PanelFace, steps};
 use super::pen::Pen;
 use super::scale::{Frame, Scale, fit, fit_row};
 use super::text::Text;
@@ -16,24 +15,8 @@ use super::view::{Action, Ruler, Side, list};
 /// What the elevation of a panel shows.
 #[derive(Clone, Debug)]
 pub struct PanelElevation {
-    /// Mark of the panel.
-    pub mark: String,
-    /// `before` or `after`, or empty where there is one state only.
-    pub state: String,
-    /// Length between the supports, mm.
-    pub length: f64,
-    /// Height between the supports, mm.
-    pub height: f64,
-    /// Left edge.
-    pub left: Edge,
-    /// Right edge.
-    pub right: Edge,
-    /// Top edge.
-    pub top: Edge,
-    /// Base.
-    pub base: Edge,
-    /// Openings.
-    pub openings: Vec<Opening>,
+    /// The panel.
+    pub face: PanelFace,
     /// Walls that meet the panel from behind: returns, and the wall that goes.
     pub walls: Vec<WallBehind>,
     /// Load or result written on the panel.
@@ -69,18 +52,18 @@ pub fn panel_pair(before: &PanelElevation, after: &PanelElevation, frame: Frame)
 fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
     let mut board = Board::default();
     let ruler = Ruler::new(scale, Side::Left);
-    let panel = Rect::from_points(ruler.at(0.0, 0.0), ruler.at(view.length, view.height));
-    let edges = edges(view);
+    let panel = Rect::from_points(ruler.at(0.0, 0.0), ruler.at(view.face.length, view.face.height));
+    let edges = Edges { face: &view.face, worded: true };
     edges.draw(&mut board, ruler);
     walls(&mut board, view, ruler);
     openings(&mut board, view, ruler);
     words(&mut board, view, panel);
     edges.dimensions(&mut board, ruler, &stations(view));
-    let (state, dash) = (&view.state, if view.state.is_empty() { "" } else { "-" });
+    let (state, dash) = (&view.face.state, if view.face.state.is_empty() { "" } else { "-" });
     let title = if state.is_empty() { String::new() } else { format!(", {state}") };
     board.finish(Words {
-        name: format!("{}-panel{dash}{state}", view.mark),
-        caption: format!("{} elevation{title}. {}", view.mark, key(view)),
+        name: format!("{}-panel{dash}{state}", view.face.mark),
+        caption: format!("{} elevation{title}. {}", view.face.mark, key(view)),
         scale: scale.text(),
         alt: alt(view),
     })
@@ -88,25 +71,12 @@ fn draw(view: &PanelElevation, scale: Scale) -> Drawing {
 
 /// Places along the base that are dimensioned: ends, sides of openings, centre lines of walls.
 fn stations(view: &PanelElevation) -> Vec<f64> {
-    let openings = view.openings.iter().flat_map(|o| [o.x, o.x + o.width]);
+    let openings = view.face.openings.iter().flat_map(|o| [o.x, o.x + o.width]);
     let walls = view.walls.iter().map(|wall| wall.x);
-    let mut places: Vec<f64> = [0.0, view.length].into_iter().chain(openings).chain(walls).collect();
+    let mut places: Vec<f64> = [0.0, view.face.length].into_iter().chain(openings).chain(walls).collect();
     places.sort_by(f64::total_cmp);
     places.dedup_by(|a, b| (*a - *b).abs() < 0.5);
     places
-}
-
-fn edges(view: &PanelElevation) -> Edges<'_> {
-    Edges {
-        length: view.length,
-        height: view.height,
-        left: &view.left,
-        right: &view.right,
-        top: &view.top,
-        base: &view.base,
-        openings: &view.openings,
-        worded: true,
-    }
 }
 
 fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
@@ -114,12 +84,12 @@ fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
         let (pen, word) = if wall.removed { (Pen::Removed, " removed") } else { (Pen::Beyond, "") };
         let half = wall.thickness / 2.0;
         for x in [wall.x - half, wall.x + half] {
-            board.line(pen, ruler.at(x, 0.0), ruler.at(x, view.height));
+            board.line(pen, ruler.at(x, 0.0), ruler.at(x, view.face.height));
         }
         let text = format!("{}{word}", wall.words);
-        let at = |share: f64| ruler.at(wall.x, share * view.height);
-        let right = ruler.at(wall.x + half, 0.5 * view.height).x + 1.2;
-        let left = ruler.at(wall.x - half, 0.5 * view.height).x - 1.2;
+        let at = |share: f64| ruler.at(wall.x, share * view.face.height);
+        let right = ruler.at(wall.x + half, 0.5 * view.face.height).x + 1.2;
+        let left = ruler.at(wall.x - half, 0.5 * view.face.height).x - 1.2;
         let mut note = Note::new(Role::Mark, at(0.7), Text::mark(&text));
         for share in [0.75, 0.25, 0.9, 0.12] {
             note = note.spot(Spot::upwards((right, at(share).y), 1.0, 0.0)).spot(Spot::upwards(
@@ -133,8 +103,8 @@ fn walls(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
 }
 
 fn openings(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
-    for opening in &view.openings {
-        opening.draw(board, ruler, Pen::Outline, (view.length, view.height));
+    for opening in &view.face.openings {
+        opening.draw(board, ruler, Pen::Outline, (view.face.length, view.face.height));
         let area = opening.area(ruler);
         let size = format!("{} × {}", mm(opening.width), mm(opening.height));
         board.note(
@@ -149,7 +119,7 @@ fn openings(board: &mut Board, view: &PanelElevation, ruler: Ruler) {
 /// Mark and values, in the middle or wherever the panel is clear.
 fn words(board: &mut Board, view: &PanelElevation, panel: Rect) {
     let target = panel.origin() + Vec2::new(0.3 * panel.width(), 0.45 * panel.height());
-    let mut note = Note::new(Role::Mark, target, Text::mark(&view.mark));
+    let mut note = Note::new(Role::Mark, target, Text::mark(&view.face.mark));
     for value in &view.values {
         note = note.line(value.text());
     }
@@ -164,7 +134,7 @@ fn words(board: &mut Board, view: &PanelElevation, panel: Rect) {
 
 /// The key in words, for what is there.
 fn key(view: &PanelElevation) -> String {
-    let mut parts = edges(view).key();
+    let mut parts = Edges { face: &view.face, worded: true }.key();
     if view.walls.iter().any(|wall| wall.removed) {
         parts.push("dashed: removed".to_owned());
     }
@@ -173,15 +143,16 @@ fn key(view: &PanelElevation) -> String {
 }
 
 fn alt(view: &PanelElevation) -> String {
-    let state = if view.state.is_empty() { String::new() } else { format!(" {} the removal", view.state) };
+    let state =
+        if view.face.state.is_empty() { String::new() } else { format!(" {} the removal", view.face.state) };
     let mut alt = format!(
         "Elevation of panel {}{state}, {} mm long and {} mm high. ",
-        view.mark,
-        mm(view.length),
-        mm(view.height)
+        view.face.mark,
+        mm(view.face.length),
+        mm(view.face.height)
     );
-    alt += &edges(view).spoken();
-    for opening in &view.openings {
+    alt += &Edges { face: &view.face, worded: true }.spoken();
+    for opening in &view.face.openings {
         alt += &opening.spoken();
     }
     for wall in &view.walls {

@@ -145,11 +145,14 @@ prop_compose! {
     ) -> PanelElevation {
         let (length, height) = (f64::from(length), f64::from(height));
         let [left, right, top, base] = edges;
-        PanelElevation {
+        let face = PanelFace {
             mark: "P1".into(), state: "after".into(), length, height, left, right, top, base,
             openings: opening.map(|(x, w)| Opening {
                 x: (x * length).round(), y: (0.3 * height).round(), width: (w * length).round(), height: (0.4 * height).round(), words: "window".into(), bearing: None,
             }).into_iter().collect(),
+        };
+        PanelElevation {
+            face,
             walls: walls.into_iter().enumerate().map(|(i, (x, removed))| WallBehind {
                 x: (x * length).round(), thickness: 100.0, words: format!("W{i}"), removed,
             }).collect(),
@@ -295,14 +298,15 @@ proptest! {
     #[test]
     fn any_panel_is_sound_and_true(view in any_panel(), other in any_panel()) {
         let frame = Frame::new(165.0, 130.0);
-        let other = PanelElevation { length: view.length, height: view.height, openings: vec![], walls: vec![], ..other };
+        let face = PanelFace { length: view.face.length, height: view.face.height, openings: vec![], ..other.face.clone() };
+        let other = PanelElevation { face, walls: vec![], ..other };
         let pair = panel_pair(&other, &view, frame);
         prop_assert_eq!(&pair[0].scale, &pair[1].scale);
         for drawing in &pair {
             sound(drawing);
             prop_assert!(frame.holds(drawing), "{} x {}", drawing.width, drawing.height);
-            prop_assert!(has_length(drawing, Pen::Dimension, view.length));
-            prop_assert!(has_length(drawing, Pen::Dimension, view.height));
+            prop_assert!(has_length(drawing, Pen::Dimension, view.face.length));
+            prop_assert!(has_length(drawing, Pen::Dimension, view.face.height));
         }
     }
 

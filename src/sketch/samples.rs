@@ -153,7 +153,7 @@ pub fn edge(support: Support, why: &str) -> Edge {
 }
 
 pub fn panels() -> [PanelElevation; 2] {
-    let before = PanelElevation {
+    let face = PanelFace {
         mark: "P1".into(),
         state: "before".into(),
         length: 5200.0,
@@ -170,12 +170,15 @@ pub fn panels() -> [PanelElevation; 2] {
             words: "window".into(),
             bearing: None,
         }],
+    };
+    let before = PanelElevation {
+        face,
         walls: vec![WallBehind { x: 2600.0, thickness: 100.0, words: "W2".into(), removed: false }],
         values: vec![Action::new("W_Ed", "0.90 kN/m²", "")],
     };
     let mut after = before.clone();
-    after.state = "after".into();
-    after.top = edge(Support::Simple, "straps at 2 m");
+    after.face.state = "after".into();
+    after.face.top = edge(Support::Simple, "straps at 2 m");
     after.walls = vec![
         WallBehind { x: 2600.0, thickness: 100.0, words: "R1".into(), removed: false },
         WallBehind { x: 900.0, thickness: 100.0, words: "W3".into(), removed: true },

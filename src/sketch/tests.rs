@@ -156,10 +156,10 @@ fn awkward_cases_are_sound() {
     let mut gone = footing();
     (gone.mark, gone.after, gone.beyond_junction) = ("F4".into(), None, 75.0);
     let [mut narrow, mut wide] = panels();
-    (narrow.mark, narrow.length, narrow.height) = ("P2".into(), 800.0, 4000.0);
-    narrow.openings.clear();
+    (narrow.face.mark, narrow.face.length, narrow.face.height) = ("P2".into(), 800.0, 4000.0);
+    narrow.face.openings.clear();
     narrow.walls[0].x = 400.0;
-    (wide.mark, wide.length) = ("P3".into(), 9000.0);
+    (wide.face.mark, wide.face.length) = ("P3".into(), 9000.0);
     let mut crowded = plans();
     for view in &mut crowded {
         view.name = format!("crowded-{}", view.name);
