@@ -270,6 +270,9 @@ pub struct Edge {
     pub kind: crate::standards::masonry::Edge,
     /// The stretch of the edge that is held so, from the left end or the foot; none where all of it is.
     pub stretch: Option<(Length, Length)>,
+    /// Whether a damp-proof course runs along it: simple by hand, held against turning by the weight on it alone in
+    /// limit analysis.
+    pub dpc: bool,
     /// Why.
     pub reason: String,
 }

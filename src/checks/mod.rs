@@ -24,6 +24,7 @@ pub mod wind;
 mod bearing_sheet;
 mod bearing_views;
 mod panel_cracks;
+mod panel_passes;
 mod panel_sheet;
 mod panel_views;
 mod place;

@@ -1,11 +1,11 @@
 //! What the drawings of a panel at collapse show: the weakest crack pattern before and after the removal.
 
 use super::panel_views::face;
-use super::panels::PanelModel;
 use super::panels::bracket::found::{leaves, worked};
 use super::panels::bracket::sheet::of_wall;
 use super::panels::bracket::{Bounds, Found};
-use crate::building::{Panel, Span};
+use super::panels::{self, PanelModel};
+use crate::building::{Panel, PanelRoute, Span};
 use crate::quantity::Stress;
 use crate::quantity::print::show;
 use crate::sketch::{
@@ -52,7 +52,11 @@ fn view(p: &Panel, m: &PanelModel, annex: &Annex, span: &Span, state: &str) -> O
     };
     let mut values = Vec::new();
     if let Some(high) = wall.high {
-        values.push(written("w_U", high, "weakest pattern"));
+        values.push(written("w_U", high, "weakest"));
+    }
+    if let Some(hand) = panels::by_hand(m, annex, span) {
+        let words = if m.route == PanelRoute::LimitAnalysis { "by hand" } else { "by hand (decides)" };
+        values.push(written("w_Rd", hand, words));
     }
     let mark = if all.len() > 1 { format!("{}, {}", p.mark, m.leaf_name(i)) } else { p.mark.clone() };
     Some(PanelCracks {

@@ -2,10 +2,8 @@
 
 use super::panels::bracket::Effort;
 use super::panels::{self, PanelModel};
-use super::{Job, Section, masonry, panel_cracks, panel_views};
-use crate::building::{Building, Panel, Path, Return};
-use crate::quantity::LineLoad;
-use crate::quantity::print::show;
+use super::{Job, Section, masonry, panel_cracks, panel_passes, panel_views};
+use crate::building::{Building, Edge as Held, Panel, Return};
 use crate::sketch::Wind;
 use crate::standards::masonry::Edge;
 use crate::trace::{Outside, Sheet, Unshown};
@@ -33,7 +31,7 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             sheet.drawings(&[&name("before"), &name("after")]);
             leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
-            passed_on(job, p, &m, &mut sheet);
+            panel_passes::on(job, p, &m, &mut sheet);
             // After the check, which has the leaves analysed on all cores: here they are only remembered.
             let cracks = job.drawings(|| panel_cracks::drawings(p, &m, &job.annex));
             super::named(&mut sheet, &cracks);
@@ -49,14 +47,16 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
     Section { id: p.mark.clone(), mark: p.mark.clone(), title: p.title.clone(), sheet, drawings, leans }
 }
 
-/// Returns that the edges of a panel name after the removal.
-fn named<'a>(job: &'a Job<'_>, p: &'a Panel) -> impl Iterator<Item = &'a Return> {
-    let edges = [&p.after.top, &p.after.base, &p.after.left, &p.after.right];
+/// Whether the edge is held, and its reason names `mark`.
+pub(super) fn names(e: &Held, mark: &str) -> bool {
     let word = |c: char| !c.is_alphanumeric() && c != '-' && c != '_';
-    let names = move |mark: &str| {
-        edges.iter().any(|e| e.kind != Edge::Free && e.reason.split(word).any(|word| word == mark))
-    };
-    job.building.returns.iter().filter(move |r| names(&r.mark))
+    e.kind != Edge::Free && e.reason.split(word).any(|word| word == mark)
+}
+
+/// Returns that the edges of a panel name after the removal.
+pub(super) fn named<'a>(job: &'a Job<'_>, p: &'a Panel) -> impl Iterator<Item = &'a Return> {
+    let edges = [&p.after.top, &p.after.base, &p.after.left, &p.after.right];
+    job.building.returns.iter().filter(move |r| edges.iter().any(|e| names(e, &r.mark)))
 }
 
 /// A panel is held no better than the returns that its edges name.
@@ -80,43 +80,6 @@ fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
             r.mark
         );
         s.leave(Outside::new(&format!("leans-{}", r.mark), "statics", words));
-    }
-}
-
-/// What the panel's limit analysis brings to returns that hold its ends, against what their own sheets count.
-fn passed_on(job: &Job<'_>, p: &Panel, m: &PanelModel, s: &mut Sheet) {
-    let (Some(all), Ok(wind)) = (panels::bracket::reactions::of(m, &job.annex), &job.wind) else { return };
-    for (side, edge) in [("left", &p.after.left), ("right", &p.after.right)] {
-        let Some(reaction) = all.iter().find(|r| r.edge == side) else { continue };
-        let named = named(job, p).filter(|r| r.path != Path::UpAndDown && edge.reason.contains(&r.mark));
-        for r in named {
-            let brings = LineLoad::new(reaction.total / reaction.length);
-            let counts = wind.of_return(job.building, r).overall * r.tributary_width * job.annex.gamma_Q;
-            let line = |x: LineLoad| show("w_Ed", x.dynamic()).to_string();
-            if brings <= counts {
-                s.note(format!(
-                    "To {} the panel brings {} over the height; the sheet of {} counts {} for its whole strip.",
-                    r.mark,
-                    line(brings),
-                    r.mark,
-                    line(counts)
-                ));
-            } else {
-                s.unshown(Unshown {
-                    id: format!("brings-{}", r.mark),
-                    clause: "limit analysis".to_owned(),
-                    words: format!("wind passed on to {}", r.mark),
-                    finding: format!(
-                        "By limit analysis the panel brings {} to {}, more than the {} that its sheet counts.",
-                        line(brings),
-                        r.mark,
-                        line(counts)
-                    ),
-                    ratio: Some(brings.base() / counts.base()),
-                    hold: None,
-                });
-            }
-        }
     }
 }
 

@@ -2,7 +2,7 @@
 
 use super::limits::Limits;
 use super::reader::Table;
-use super::words::EDGES;
+use super::words::{EDGES, EdgeWord};
 use crate::building::{Edge, Span};
 use crate::error::Kind;
 use crate::quantity::Length;
@@ -13,7 +13,8 @@ const PLACE: Limits = Limits::new(0.0, 20.0, "m");
 /// A stretch shorter than this holds nothing that anybody would count on, mm. Common practice, no published source.
 const SHORTEST: f64 = 200.0;
 
-/// Reads one edge: its kind and the reason, and from where to where it is held where that is not all of it.
+/// Reads one edge: its kind and the reason, and from where to where it is held where that is not all of it. A damp-proof
+/// course can run along the base alone.
 pub fn read(t: &Table<'_>, key: &'static str) -> Option<Edge> {
     let entry = t.need(key);
     let wanted = "{ edge = \"simple\", reason = \"...\" }";
@@ -26,6 +27,16 @@ pub fn read(t: &Table<'_>, key: &'static str) -> Option<Edge> {
     }
     let table = entry.table(&format!("{}, {key}", t.name))?;
     let kind = table.need("edge").pick(EDGES);
+    if kind == Some(EdgeWord::Dpc) && key != "base" {
+        table
+            .fault(Kind::NotAllowed, format_args!("`{key}` is held at a dpc"))
+            .at(table.place("edge"), "only the base can be")
+            .allowed("\"free\", \"simple\" or \"continuous\"; \"dpc\" for the base")
+            .help("say how this edge is held");
+        return None;
+    }
+    let dpc = kind == Some(EdgeWord::Dpc);
+    let kind = kind.map(EdgeWord::kind);
     let reason = table.need("reason").text();
     let part = table.has("from") || table.has("to");
     let stretch = if part {
@@ -46,7 +57,7 @@ pub fn read(t: &Table<'_>, key: &'static str) -> Option<Edge> {
             .help("say how the stretch is held, or take `from` and `to` out");
         return None;
     }
-    Some(Edge { kind: kind?, stretch: stretch?, reason: reason? })
+    Some(Edge { kind: kind?, stretch: stretch?, dpc, reason: reason? })
 }
 
 /// Whether the stretches held lie on their edges.

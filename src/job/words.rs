@@ -46,8 +46,36 @@ pub const ROOFS: &[(&str, RoofForm)] =
     &[("duopitch", RoofForm::Duopitch), ("monopitch", RoofForm::Monopitch), ("flat", RoofForm::Flat)];
 
 /// Edges of a panel.
-pub const EDGES: &[(&str, Edge)] =
-    &[("free", Edge::Free), ("simple", Edge::Simple), ("continuous", Edge::Continuous)];
+pub const EDGES: &[(&str, EdgeWord)] = &[
+    ("free", EdgeWord::Free),
+    ("simple", EdgeWord::Simple),
+    ("continuous", EdgeWord::Continuous),
+    ("dpc", EdgeWord::Dpc),
+];
+
+/// How a job file says that an edge is held.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum EdgeWord {
+    /// Not at all.
+    Free,
+    /// Against moving.
+    Simple,
+    /// Against moving and turning.
+    Continuous,
+    /// Against moving at a damp-proof course, and against turning by the weight on it alone.
+    Dpc,
+}
+
+impl EdgeWord {
+    /// As the clauses know it: 5.5.5(5) takes an edge at a dpc as simple.
+    pub const fn kind(self) -> Edge {
+        match self {
+            Self::Free => Edge::Free,
+            Self::Simple | Self::Dpc => Edge::Simple,
+            Self::Continuous => Edge::Continuous,
+        }
+    }
+}
 
 /// Links of the chain from the wind face to the ground, in its order.
 pub const LINKS: &[&str] =

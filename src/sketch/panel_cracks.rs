@@ -173,7 +173,7 @@ fn results(board: &mut Board, view: &PanelCracks, ruler: Ruler, deflection: &Def
     let middle = ruler.at(view.face.length / 2.0, view.face.height / 2.0);
     let mut note = Note::new(Role::Load, middle, words::led_by(&view.takes)).line(words::led_by(&view.wind));
     for value in &view.values {
-        note = note.line(value.text());
+        note = note.line(words::led_by(value));
     }
     let lines = barriers(view, ruler);
     let size = (note.width(), note.height());

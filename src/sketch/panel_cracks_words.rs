@@ -62,8 +62,8 @@ pub(super) fn alt(view: &PanelCracks, edges: &Edges<'_>) -> String {
         alt +=
             &format!("The panel moves furthest near {x} mm from the left edge and {y} mm above the base. ");
     }
-    let results = [led_by_spoken(&view.takes), led_by_spoken(&view.wind)];
-    let all: Vec<String> = results.into_iter().chain(view.values.iter().map(Action::spoken)).collect();
+    let all: Vec<String> =
+        [&view.takes, &view.wind].into_iter().chain(&view.values).map(led_by_spoken).collect();
     alt + &format!("Results: {}.", all.join("; "))
 }
 

@@ -79,7 +79,8 @@ fn twice_the_strength_and_twice_the_size() {
 fn raised(held: Held) -> Option<Held> {
     match held {
         Held::Free => Some(Held::Simple),
-        Held::Simple => Some(Held::Continuous(0.3)),
+        Held::Simple => Some(Held::Weight(0.3)),
+        Held::Weight(_) => Some(Held::Continuous(0.6)),
         Held::Continuous(m) if m < 1.0 => Some(Held::Continuous(9.0)),
         Held::Continuous(_) => None,
     }

@@ -4,6 +4,7 @@ mod annex_e;
 mod both;
 mod by_hand;
 mod demos;
+mod dpc;
 mod first_crack;
 mod first_crack_laws;
 mod laws;

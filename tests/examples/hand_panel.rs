@@ -35,7 +35,7 @@ pub fn brick_leaf() -> PanelModel {
         perpends_filled: true,
     };
     let span = |length| {
-        let held = |kind| Held { kind, stretch: None, reason: "as the example says".to_owned() };
+        let held = |kind| Held { kind, stretch: None, dpc: false, reason: "as the example says".to_owned() };
         let (top, base, left, right) = (held(Simple), held(Simple), held(Continuous), held(Simple));
         Span { length: Length::new(length), ends: None, top, base, left, right, openings: Vec::new() }
     };

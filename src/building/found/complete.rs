@@ -88,12 +88,13 @@ pub fn title_of_panel(p: &FoundPanel) -> String {
 
 /// How a panel is held where the job file does not say: against moving, never against turning.
 pub fn span(of: &FoundSpan, storey: &Storey) -> Span {
-    let simple = |reason: String| Edge { kind: masonry::Edge::Simple, stretch: None, reason };
+    let simple = |reason: String| Edge { kind: masonry::Edge::Simple, stretch: None, dpc: false, reason };
     let side = |held: &Option<String>| match held {
         Some(mark) => simple(format!("Taken from the plan: {mark} holds it against moving.")),
         None => Edge {
             kind: masonry::Edge::Free,
             stretch: None,
+            dpc: false,
             reason: "Nothing on the plan holds this end.".to_owned(),
         },
     };

@@ -8,6 +8,7 @@
 //! * [`sharing`]: two leaves and their ties
 //! * [`run`]: the check: before as information, after as the verdict, both side by side
 //! * [`remedy`]: what would make it pass
+//! * [`tables`]: before and after side by side, and other tables of the sheet
 
 pub mod bracket;
 pub mod form;
@@ -17,10 +18,11 @@ pub mod remedy;
 pub mod run;
 pub mod sharing;
 pub mod strength;
+pub mod tables;
 
 pub use model::{PanelLeaf, PanelModel, model};
 pub use remedy::{Remedy, remedies};
-pub use run::{check, hold_points};
+pub use run::{by_hand, check, hold_points};
 
 #[cfg(test)]
 mod properties;

@@ -4,14 +4,13 @@ use super::bracket::{Bounds, Effort};
 use super::form::{Form, LeafOutcome, State, leaf};
 use super::model::{PanelModel, edges};
 use super::strength::{self, Strength};
-use super::{bracket, opened, remedy, sharing};
+use super::{bracket, opened, remedy, sharing, tables};
 use crate::building::{PanelRoute, Span};
-use crate::quantity::print::{self, show};
 use crate::quantity::{Length, Num, Stress};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::lateral::{arching, size};
 use crate::standards::tables::annex_e::Edge;
-use crate::trace::{Column, Outside, Sheet, Table};
+use crate::trace::{Outside, Sheet};
 use crate::{calc, given, verify};
 
 /// What a panel does in one state.
@@ -40,7 +39,7 @@ pub struct Outcome {
 /// `flexure-parallel-after` (or `vertical-`, `horizontal-`, `cantilever-`, `arching-after`), `ties`. A
 /// limit that is left is noted as outside under `size` or the check's id.
 pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
-    s.table(|| held(m));
+    s.table(|| tables::held(m));
     let W_Ed = wind(s, m, annex);
     let strengths = strengths(s, m, annex);
     at_hand(m, &strengths);
@@ -55,7 +54,7 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
     let after = state(s, m, annex, &m.after, W_Ed, &strengths, "after");
     if let Some((before, left)) = before {
         s.heading(1, "Before and after");
-        s.table(|| side_by_side(m, before.as_ref(), after.as_ref()));
+        s.table(|| tables::side_by_side(m, before.as_ref(), after.as_ref()));
         for o in left {
             s.note(format!("Before the removal: outside the method, {} [{}].", o.words, o.clause));
         }
@@ -63,7 +62,7 @@ pub fn check(s: &mut Sheet, m: &PanelModel, annex: &Annex) {
         let limit = m.route == PanelRoute::LimitAnalysis || !m.after.openings.is_empty();
         if holds && limit && m.effort == Effort::Read {
             s.heading(1, "How far it may move");
-            s.table(|| moves(m, annex));
+            s.table(|| tables::moves(m, annex));
         }
         if s.verdicts[v..].iter().any(|v| !v.holds) && s.outside.len() == o {
             s.heading(1, "What would make it pass");
@@ -80,6 +79,16 @@ fn at_hand(m: &PanelModel, strengths: &[Strength]) {
     let spans = if m.effort == Effort::Read { &all[..] } else { &all[..1] };
     let wanted: Vec<&Span> = spans.iter().filter(|span| bracket::found::worked(m, span)).copied().collect();
     bracket::prepare(m, &wanted, strengths, m.effort);
+}
+
+/// What the panel takes by hand in one state, whichever route decides; none where the hand route has no answer.
+pub fn by_hand(m: &PanelModel, annex: &Annex, span: &Span) -> Option<Stress> {
+    let route = if m.route == PanelRoute::LimitAnalysis { PanelRoute::Flexure } else { m.route };
+    let m = PanelModel { route, effort: Effort::Search, ..m.clone() };
+    let mut s = Sheet::silent();
+    let W_Ed = wind(&mut s, &m, annex);
+    let strengths = strengths(&mut s, &m, annex);
+    state(&mut s, &m, annex, span, W_Ed, &strengths, "after").map(|o| o.w_Rd)
 }
 
 /// What must be closed before the wall comes down for this panel's result to hold, as sentences.
@@ -335,96 +344,4 @@ fn arch(
     }
     let leaves = vec![LeafOutcome { label: "arching".to_owned(), w_Rd: q_lat_d, ..Default::default() }];
     Ok(Outcome { l, leaves, W_Ed, w_Rd: q_lat_d, ratio, bounds: None, hand: None })
-}
-
-/// How the edges are held before and after, and why.
-fn held(m: &PanelModel) -> Table {
-    let (b, a) = (&m.before, &m.after);
-    let row = |name: &str, b: &crate::building::Edge, a: &crate::building::Edge| {
-        let why = if b.reason == a.reason { "the same".to_owned() } else { a.reason.clone() };
-        vec![name.to_owned(), how(b), b.reason.clone(), how(a), why]
-    };
-    Table {
-        caption: "Edges, seen from outside".to_owned(),
-        columns: ["edge", "before", "why", "after", "why"].map(Column::words).to_vec(),
-        rows: vec![
-            row("top", &b.top, &a.top),
-            row("base", &b.base, &a.base),
-            row("left", &b.left, &a.left),
-            row("right", &b.right, &a.right),
-        ],
-        strong: Vec::new(),
-    }
-}
-
-/// How far each thing may move before the panel fails, the others as they are.
-fn moves(m: &PanelModel, annex: &Annex) -> Table {
-    let caption = "Up to where the panel passes by the route that decides, one thing at a time; rounded down";
-    let coarse = "; by limit analysis on a coarse grid, lowered for it by 2.5 % and more";
-    let limit = m.route == PanelRoute::LimitAnalysis;
-    Table {
-        caption: format!("{caption}{}", if limit { coarse } else { "" }),
-        columns: ["", "as it is", "passes up to"].map(Column::words).to_vec(),
-        rows: remedy::margins(m, annex).into_iter().map(Vec::from).collect(),
-        strong: Vec::new(),
-    }
-}
-
-/// How an edge is held, with its stretch where that is not all of it.
-fn how(e: &crate::building::Edge) -> String {
-    let mm = |l: Length| show("l", l.dynamic()).to_string();
-    match e.stretch {
-        None => e.kind.to_string(),
-        Some((from, to)) => format!("{} from {} to {}, else free", e.kind, mm(from), mm(to)),
-    }
-}
-
-/// Before and after in two columns.
-fn side_by_side(m: &PanelModel, before: Option<&Outcome>, after: Option<&Outcome>) -> Table {
-    let cell = |o: Option<&Outcome>, f: &dyn Fn(&Outcome) -> Option<String>| {
-        o.map_or_else(|| "outside the method".to_owned(), |o| f(o).unwrap_or_else(|| "–".to_owned()))
-    };
-    let mut rows = Vec::new();
-    let mut row = |name: String, f: &dyn Fn(&Outcome) -> Option<String>| {
-        let cells = [cell(before, f), cell(after, f)];
-        if cells.iter().any(|c| c != "–") {
-            let [b, a] = cells;
-            rows.push(vec![name, b, a]);
-        }
-    };
-    row("length".to_owned(), &|o| Some(show("l", o.l.dynamic()).to_string()));
-    for i in 0..m.leaves.len() {
-        let of = if m.leaves.len() == 1 { String::new() } else { format!(", {}", m.leaf_name(i)) };
-        let force = |name: &'static str, x: crate::quantity::Force| show(name, x.dynamic()).to_string();
-        // Both leaves have the same edges, so the same case.
-        if i == 0 {
-            row("case of Annex E, or how worked".to_owned(), &|o| o.leaves.get(i).map(|x| x.label.clone()));
-        }
-        row(format!("coefficient{of}"), &|o| o.leaves.get(i)?.alpha_2.map(|x| print::significant(x.base())));
-        row(format!("moment, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Ed1", x.0)));
-        row(format!("resistance, parallel{of}"), &|o| o.leaves.get(i)?.parallel.map(|x| force("M_Rd1", x.1)));
-        row(format!("moment, across{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Ed2", x.0)));
-        row(format!("resistance, across{of}"), &|o| o.leaves.get(i)?.across.map(|x| force("M_Rd2", x.1)));
-        if m.leaves.len() > 1 {
-            row(format!("pressure it can take{of}"), &|o| {
-                o.leaves.get(i).map(|x| show("w_Rd", x.w_Rd.dynamic()).to_string())
-            });
-        }
-    }
-    row("design pressure".to_owned(), &|o| Some(show("W_Ed", o.W_Ed.dynamic()).to_string()));
-    row("pressure the panel can take".to_owned(), &|o| Some(show("w_Rd", o.w_Rd.dynamic()).to_string()));
-    let deciding = m.route == PanelRoute::LimitAnalysis;
-    let low = if deciding { "limit analysis, safe side (decides)" } else { "limit analysis, safe side" };
-    let pressure = |w: Stress| show("w_Rd", w.dynamic()).to_string();
-    row(low.to_owned(), &|o| o.bounds.map(|b| pressure(b.low)));
-    row("limit analysis, weakest crack pattern".to_owned(), &|o| o.bounds?.high.map(pressure));
-    row("by hand".to_owned(), &|o| o.hand.map(pressure));
-    row("use".to_owned(), &|o| Some(print::ratio(o.ratio)));
-    let strong = vec![rows.len() - 1];
-    Table {
-        caption: "Before and after, side by side; after decides".to_owned(),
-        columns: vec![Column::words(""), Column::numbers("before"), Column::numbers("after")],
-        rows,
-        strong,
-    }
 }

@@ -4,7 +4,7 @@ use super::form::{LeafOutcome, State};
 use super::strength::Strength;
 use crate::building::{Cause, Sharing};
 use crate::quantity::functions::{cube, max, min};
-use crate::quantity::{Force, Num, PerArea, Stress, print};
+use crate::quantity::{Area, Force, Num, PerArea, Stress, print};
 use crate::standards::annex::Annex;
 use crate::standards::en1996::lateral::ties as clause;
 use crate::trace::Sheet;
@@ -72,9 +72,30 @@ pub fn cavity(
     if phase == "before" {
         return (w_Rd, ratio);
     }
-    calc!(s, "6.5", "what the ties pass, either leaf first", W_t = max(W_o, W_i));
+    let W_t = passed(s, state, W_o, W_i);
     ties(s, annex, m.ties, m.tie_strength.as_ref(), W_t);
     (w_Rd, ratio)
+}
+
+/// What the ties pass, either leaf first: there are none in openings, whose wind they pass all the same, all that comes to
+/// the edges of the leaf. `W_o` and `W_i` stand on the sheet.
+fn passed(s: &mut Sheet, state: State<'_>, W_o: Stress, W_i: Stress) -> Stress {
+    let span = &state.m.after;
+    if span.openings.is_empty() {
+        calc!(s, "6.5", "what the ties pass, either leaf first", W_t = max(W_o, W_i));
+        return W_t;
+    }
+    calc!(s, "6.5", "larger part of a leaf, either first", W_lf = max(W_o, W_i));
+    given!(s, "panel with its openings", "job file", A_w = span.length * state.m.h);
+    let open = span.openings.iter().fold(Area::ZERO, |sum, o| sum + o.width * o.height);
+    given!(s, "openings, where no ties are", "job file", A_os = open);
+    calc!(
+        s,
+        "equilibrium",
+        "what the ties pass, on the wall beside the openings",
+        W_t = W_lf * (A_w / (A_w - A_os))
+    );
+    W_t
 }
 
 /// Both leaves in proportion to their strength: what they take together, and the part of each, outer first.

@@ -32,7 +32,7 @@ pub(super) fn masonry(f_k: f64, f_xk1: f64, f_xk2: Option<f64>) -> Masonry {
 }
 
 pub(super) fn span(length: f64, [top, base, left, right]: [Edge; 4]) -> Span {
-    let held = |kind| Held { kind, stretch: None, reason: "as the test says".to_owned() };
+    let held = |kind| Held { kind, stretch: None, dpc: false, reason: "as the test says".to_owned() };
     Span {
         length: Length::new(length),
         ends: None,

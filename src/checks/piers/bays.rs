@@ -119,7 +119,7 @@ fn panel(p: &PierModel, build_up: &BuildUp, q_net: Stress) -> PanelModel {
         Some(o) => vec![own, leaf(o.t, &o.masonry, false)],
         None => vec![own],
     };
-    let held = Held { kind: Edge::Simple, stretch: None, reason: String::new() };
+    let held = Held { kind: Edge::Simple, stretch: None, dpc: false, reason: String::new() };
     let span = Span {
         length: p.m.l,
         ends: None,

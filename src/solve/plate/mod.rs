@@ -44,6 +44,9 @@ pub enum Held {
     Simple,
     /// Against both; the moment per length that it can bring, N (N mm/mm).
     Continuous(f64),
+    /// Against moving, and against turning as far as the weight on the joint brings a moment per length, N; once that is
+    /// overcome the joint is open. While the wall is uncracked it counts as [`Held::Simple`].
+    Weight(f64),
 }
 
 /// A stretch of one edge.

@@ -236,10 +236,17 @@ fn against(s: &mut Sheet, state: State<'_>, wall: Bounds, by_hand: Option<Stress
 
 /// What is taken for granted, and what the theory leaves out.
 pub fn remarks(s: &mut Sheet, state: State<'_>, span: &Span, all: &[Found]) {
-    s.note(
-        "Bed joints are pressed by the dead load at their own height, at most a fifth of the design strength; over and under an opening by the \
-         masonry above the joint alone. An edge at a damp-proof course is a simple support.",
-    );
+    let dpc = match span.base.dpc {
+        true => {
+            "The base turns at its damp-proof course against the moment of the weight on it alone, sigma Z of 6.3.1(4) \
+             without flexural strength; by hand it is a simple support."
+        }
+        false => "No edge is held against turning by weight alone.",
+    };
+    s.note(format!(
+        "Bed joints are pressed by the dead load at their own height, at most a fifth of the design strength; over and \
+         under an opening by the masonry above the joint alone. {dpc}"
+    ));
     if span.openings.iter().any(|o| o.frame == Frame::Unknown) {
         let of = |i: usize| match all.len() {
             1 => format!("\"{}\"", all[i].frame.word()),

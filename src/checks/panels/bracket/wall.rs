@@ -74,7 +74,12 @@ impl Wall {
             columns: openings.iter().map(|o| (o.x.0, o.x.1, o.y.0)).collect(),
         };
         let upright = |e: &Edge| stretches(e, h, &[], |_| m_H);
-        let level = |e: &Edge, y: f64| stretches(e, l, &joints.columns, |x| joints.moment(x, y));
+        // A joint without strength is held by the weight on it alone: 6.3.1(4) with no flexural strength.
+        let dry = Joints { f_xd1: 0.0, ..joints.clone() };
+        let level = |e: &Edge, y: f64| {
+            let joints = if e.dpc { &dry } else { &joints };
+            stretches(e, l, &joints.columns, |x| joints.moment(x, y))
+        };
         let edges = [upright(&span.left), upright(&span.right), level(&span.base, 0.0), level(&span.top, h)];
         Some(Self { size: (l, h), openings, edges, m_H, joints })
     }
@@ -128,6 +133,8 @@ impl Wall {
                     Held::Free => -2.0,
                     Held::Simple => -1.0,
                     Held::Continuous(m) => m,
+                    // A moment never reaches this.
+                    Held::Weight(m) => 1e12 + m,
                 };
                 all.extend([s.from, s.to, held]);
             }
@@ -148,7 +155,7 @@ fn opening(o: &PanelOpening, unknown: Frame) -> Opening {
 }
 
 /// An edge as stretches: free beside the stretch held, and parted at openings, over and under which a bed joint bears
-/// less. `bears` is what the wall itself bears at a place on the edge, N.
+/// less. `bears` is what the wall itself bears at a place on the edge, or at a dpc the weight on it, N.
 fn stretches(
     edge: &Edge,
     length: f64,
@@ -166,6 +173,7 @@ fn stretches(
         let held = match edge.kind {
             _ if middle < from || middle > to => Held::Free,
             Kind::Free => Held::Free,
+            Kind::Simple if edge.dpc => Held::Weight(bears(middle)),
             Kind::Simple => Held::Simple,
             Kind::Continuous => Held::Continuous(bears(middle)),
         };
@@ -183,7 +191,7 @@ mod tests {
 
     fn edge(kind: Kind, stretch: Option<(f64, f64)>) -> Edge {
         let stretch = stretch.map(|(a, z)| (Length::new(a), Length::new(z)));
-        Edge { kind, stretch, reason: String::new() }
+        Edge { kind, stretch, dpc: false, reason: String::new() }
     }
 
     #[test]
@@ -203,6 +211,15 @@ mod tests {
         let held: Vec<Held> = all.iter().map(|s| s.held).collect();
         assert_eq!(held, [Held::Continuous(5.0), Held::Continuous(2.0), Held::Continuous(5.0)]);
         assert_eq!((all[1].from, all[1].to), (1000.0, 2000.0));
+    }
+
+    #[test]
+    fn a_dpc_is_held_by_weight_alone() {
+        let base = Edge { dpc: true, ..edge(Kind::Simple, None) };
+        let all =
+            stretches(&base, 4000.0, &[(1000.0, 2000.0, 900.0)], |x| if x < 1000.0 { 3.0 } else { 1.0 });
+        let held: Vec<Held> = all.iter().map(|s| s.held).collect();
+        assert_eq!(held, [Held::Weight(3.0), Held::Weight(1.0)]);
     }
 
     #[test]

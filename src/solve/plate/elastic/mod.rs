@@ -21,7 +21,7 @@ use super::safe::mesh::Mesh;
 use super::safe::statics::{Moments, even};
 use super::safe::strengths::Strengths;
 use super::safe::{Field, Meshed, meshed};
-use crate::solve::plate::{Plate, Trouble};
+use crate::solve::plate::{Held, Plate, Stretch, Trouble};
 use criterion::Use;
 
 /// Poisson's ratio of masonry: common practice, no published source.
@@ -107,11 +107,21 @@ struct Solved {
     fields: Vec<Moments>,
 }
 
+/// The plate while every joint is closed: what the weight alone holds against turning is a hinge.
+fn uncracked<'a>(plate: &Plate<'a>) -> Plate<'a> {
+    let simple = |s: &Stretch| match s.held {
+        Held::Weight(_) => Stretch { held: Held::Simple, ..*s },
+        Held::Free | Held::Simple | Held::Continuous(_) => *s,
+    };
+    let edges = plate.edges.each_ref().map(|edge| edge.iter().map(simple).collect());
+    Plate { edges, openings: plate.openings.clone(), ..*plate }
+}
+
 fn solve(plate: &Plate<'_>, spacing: f64, poisson: f64) -> Result<Solved, Trouble> {
     if !(poisson > -1.0 && poisson <= 0.5) {
         return Err(Trouble::NotSolved("Poisson's ratio must be above -1 and at most 1/2".to_owned()));
     }
-    let Meshed { mesh, strengths, .. } = meshed(plate, spacing)?;
+    let Meshed { mesh, strengths, .. } = meshed(&uncracked(plate), spacing)?;
     let normal = energy::normal_moments(&mesh, &strengths.clamp, &loads(plate, &mesh), poisson)?;
     let fields = mesh.triangles.iter().map(|t| even(&mesh, t, &normal, 1.0)).collect();
     Ok(Solved { mesh, strengths, normal, fields })

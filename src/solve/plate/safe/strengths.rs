@@ -41,7 +41,7 @@ pub fn strengths(plate: &Plate<'_>, mesh: &Mesh) -> Strengths {
 fn continuous(plate: &Plate<'_>, rim: Rim) -> Option<(usize, f64)> {
     let Rim::Held { edge, stretch } = rim else { return None };
     match plate.edges.get(edge)?.get(stretch)?.held {
-        Held::Continuous(moment) => Some((edge, moment)),
+        Held::Continuous(moment) | Held::Weight(moment) => Some((edge, moment)),
         Held::Simple | Held::Free => None,
     }
 }

@@ -9,7 +9,7 @@ pub fn cost(plate: &Plate<'_>, grid: &Grid, (p, q): (Point, Point), held: Option
         None => dissipation(plate, grid, p, q),
         Some(Held::Free | Held::Simple) => 0.0,
         // The wall itself cracks beside a support that is stronger than the wall.
-        Some(Held::Continuous(m)) => {
+        Some(Held::Continuous(m) | Held::Weight(m)) => {
             (m.max(0.0) * (q.0 - p.0).hypot(q.1 - p.1)).min(dissipation(plate, grid, p, q))
         }
     }
