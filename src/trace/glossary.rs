@@ -29,6 +29,7 @@ pub const GLOSSARY: &[(&str, &str)] = &[
     ("A_rest", "area of openings in the other faces"),
     ("A_s", "coefficient A of the location factor"),
     ("A_sl", "area of a slope on plan"),
+    ("A_w", "area of a panel with its openings"),
     ("alpha_2", "bending moment coefficient"),
     ("alpha_cc", "coefficient of the strength of plain concrete"),
     ("B", "width of the footing"),

@@ -67,5 +67,5 @@ fn a_return_that_counts_less_than_a_panel_brings_fails_the_panel() {
     assert!(row.hold.is_none() && row.ratio.is_some_and(|r| r > 1.0), "{row:?}");
     let wide = section(&job("4 m", HELD), "P1");
     assert!(wide.sheet.unshown.iter().all(|u| u.id != "brings-R1"), "{:?}", wide.sheet.unshown);
-    assert!(format!("{:?}", wide.sheet.entries).contains("To R1 the panel brings"));
+    assert!(format!("{:?}", wide.sheet.entries).contains("To R1 by limit analysis: P1 brings"));
 }

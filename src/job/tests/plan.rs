@@ -226,7 +226,9 @@ fn what_the_job_leaves_out_comes_from_the_plan() {
     assert_eq!((r.length.base(), r.tributary_width.base(), r.height.base()), (1117.5, 4000.0, 2450.0));
     assert_eq!((r.junction.to.as_str(), r.junction.thickness.base()), ("flank wall", 102.5));
     // Two storeys of wall are met, 2.70 and 2.40 m.
-    assert_eq!((r.supported_wall_height.base(), r.nearest_opening), (5100.0, None));
+    assert_eq!(r.supported_wall_height.base(), 5100.0);
+    // From 3.4 m plus half of 215 mm to the window at 5.2 m.
+    assert_eq!(r.nearest_opening.map(|l| l.base()), Some(1692.5));
     // The flank wall carries no floor: 12.5 kN/m would be the two leaves, the loaded one has its own weight.
     assert!(r.junction.dead.base() > 5.0 && r.junction.dead.base() < 14.0, "{}", r.junction.dead.base());
     let of = |p: &crate::building::Panel| (p.mark.clone(), p.before.length.base(), p.after.length.base());

@@ -67,6 +67,13 @@ pub const SLIPS: &[Slip] = &[
         &["a stretch is given of an edge that is free", "the rest is free"],
     ),
     slip(
+        "dpc at the side",
+        FREE,
+        "right = { edge = \"dpc\", reason = \"x\" }",
+        "\"dpc\"",
+        &["`right` is held at a dpc", "only the base can be"],
+    ),
+    slip(
         "stretch with one end",
         FREE,
         "right = { edge = \"simple\", reason = \"x\", from = \"0 m\" }",
