@@ -42,6 +42,40 @@ pub fn read(file: &Path) -> Result<String, Error> {
         .map_err(|_| content(file, "it is not UTF-8 text", "Save the job file as UTF-8 in a text editor."))
 }
 
+/// Largest pack that is read, bytes.
+const LARGEST_PACK: u64 = 512 << 20;
+
+/// The bytes of a pack.
+///
+/// # Errors
+/// [`Error::File`] where it is not there, a folder, or too large.
+pub fn read_pack(file: &Path) -> Result<Vec<u8>, Error> {
+    const HELP: &str = "Name a pack that 'perpend sheet' wrote.";
+    if file.is_dir() {
+        return Err(content(file, "it is a folder", HELP));
+    }
+    let mut bytes = Vec::new();
+    std::fs::File::open(file)
+        .and_then(|open| open.take(LARGEST_PACK + 1).read_to_end(&mut bytes))
+        .map_err(|why| trouble(file, Trouble::Read(why), HELP))?;
+    if bytes.len() as u64 > LARGEST_PACK {
+        return Err(content(file, "it is larger than any pack", HELP));
+    }
+    Ok(bytes)
+}
+
+/// Whether a file says that it is a PDF, by its name or by how it begins.
+pub fn is_pdf(file: &Path) -> bool {
+    let named = file.extension().is_some_and(|e| e.eq_ignore_ascii_case("pdf"));
+    let begins = || {
+        let mut head = [0; 5];
+        std::fs::File::open(file)
+            .and_then(|mut open| open.read_exact(&mut head))
+            .is_ok_and(|()| &head == b"%PDF-")
+    };
+    named || begins()
+}
+
 /// Makes the folder for packs where it is not there yet.
 ///
 /// # Errors

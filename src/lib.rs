@@ -8,10 +8,11 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity solve trace standards building wind job sketch checks pack report files many cli`.
+//! this order: `error quantity solve trace standards building wind job sketch checks pack report archive files many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
+pub mod archive;
 pub mod building;
 pub mod checks;
 pub mod cli;

@@ -1,5 +1,6 @@
 //! The command line: flags in, files and lines out, an exit code back. The only file that knows clap.
 
+mod again;
 mod child;
 
 use std::io::Write as _;
@@ -59,6 +60,23 @@ Examples:
 
 A pack that is there already is replaced as soon as the new one is whole.";
 
+const RECHECK_EXAMPLES: &str = "\
+Examples:
+  perpend recheck '2419 Calculations (A).pdf'
+  perpend recheck --working packs/*.pdf
+
+A pack carries its job file and all that it prints as data; the job is worked again from there. What stands on paper
+is the same while the digest at the foot of its sheets is the one that this command prints.
+
+Exit codes: 0 everything stands; 1 something does not; 2 a file is no pack, or cannot be worked.";
+
+const COMPARE_EXAMPLES: &str = "\
+Examples:
+  perpend compare '2419 Calculations (A).pdf' rear-opening.toml    since revision A was issued
+  perpend compare rear-opening.toml rear-opening-2.toml
+
+Exit codes: 0 alike; 1 something changed; 2 error.";
+
 #[derive(Subcommand)]
 enum Command {
     /// Write a commented job file that is already a complete invented job
@@ -93,6 +111,27 @@ enum Command {
         #[arg(long)]
         times: bool,
     },
+    /// Work the jobs inside packs again and say whether every printed result still stands
+    #[command(after_help = RECHECK_EXAMPLES)]
+    Recheck {
+        /// Packs, as `sheet` wrote them
+        #[arg(required = true)]
+        packs: Vec<PathBuf>,
+        /// Print every line of working that changed, not only how many did
+        #[arg(long)]
+        working: bool,
+    },
+    /// Say what changed between two job files or packs
+    #[command(after_help = COMPARE_EXAMPLES)]
+    Compare {
+        /// The earlier one, a job file or a pack
+        old: PathBuf,
+        /// The later one
+        new: PathBuf,
+        /// Print every line of working that changed, not only how many did
+        #[arg(long)]
+        working: bool,
+    },
     /// Set one job and hand the pack back on standard output; `sheet` of several files starts these
     #[command(hide = true)]
     Set {
@@ -115,6 +154,8 @@ pub fn run() -> u8 {
         Command::Start { file, plan } => start(&file, plan),
         Command::Check { files, json } => check_all(&files, json),
         Command::Sheet { files, into, times } => sheet_all(&files, into.as_deref(), times),
+        Command::Recheck { packs, working } => again::recheck_all(&packs, working),
+        Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
         Command::Set { file } => child::hand_back(&file),
     }
 }

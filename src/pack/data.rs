@@ -61,6 +61,8 @@ pub struct Pack {
     pub photographs: Vec<Photograph>,
     /// The whole job file, to be attached.
     pub inputs: String,
+    /// What the pack prints, as JSON: it travels inside the PDF.
+    pub record: String,
     /// The lines of the job file that say something, with their numbers.
     pub listing: Vec<(usize, String)>,
     /// The symbols of the pack.

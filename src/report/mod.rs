@@ -3,6 +3,7 @@
 //! * [`pack`]: the data that the templates read
 //! * [`lines`]: the same results as plain text
 //! * [`machine`]: the same results as JSON
+//! * [`record`]: all that a pack prints, to travel inside it
 
 mod blocks;
 mod front;
@@ -10,6 +11,7 @@ pub mod lines;
 mod listing;
 pub mod machine;
 pub mod notation;
+pub mod record;
 
 use crate::building::Building;
 use crate::checks::outcome::{self, Outcome};
@@ -109,6 +111,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
             })
             .collect(),
         inputs: text.to_owned(),
+        record: serde_json::to_string_pretty(&record::of_job(b, results, digest)).unwrap_or_default(),
         listing: listing::of(text),
         notation: notation::used(&results.sections),
     }
@@ -119,7 +122,8 @@ pub fn photograph_path(n: usize) -> String {
     format!("/photo/{n}.jpg")
 }
 
-fn grouped(hex: &str) -> String {
+/// Hexadecimal digits in groups of four.
+pub fn grouped(hex: &str) -> String {
     hex.as_bytes().chunks(4).map(|c| String::from_utf8_lossy(c).into_owned()).collect::<Vec<_>>().join(" ")
 }
 
