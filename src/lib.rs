@@ -76,6 +76,30 @@ pub struct Sheeted {
     pub file_name: String,
 }
 
+/// A summary for the client.
+pub struct Summarised {
+    /// The PDF.
+    pub typeset: Typeset,
+    /// The file name that it wants.
+    pub file_name: String,
+    /// Sentences that are hard to read, with why.
+    pub hard: Vec<(String, report::plain::Hard)>,
+}
+
+/// Sets the summary for the client of a job that was checked; `text` is its job file.
+///
+/// # Errors
+/// [`Error::Internal`] where it cannot be set.
+pub fn summarise(building: &Building, results: &Results, text: &str) -> Result<Summarised, Error> {
+    let digest = digest(text);
+    let data = report::client::of_job(building, results, &digest);
+    let words = data.parts.iter().flat_map(|p| p.lines.iter().chain(&p.steps));
+    let hard = words.flat_map(|line| report::plain::hard(line)).collect();
+    let typeset = pack::typeset_client(&data, &format!("{digest}-summary"))
+        .map_err(|e| Error::Internal { step: e.to_string() })?;
+    Ok(Summarised { typeset, file_name: named(building, "Summary"), hard })
+}
+
 /// Checks a job file and sets its pack. Photographs are looked for beside the job file, in `folder`.
 ///
 /// # Errors
@@ -124,9 +148,13 @@ pub fn digest(text: &str) -> String {
 
 /// `2419 Calculations (A).pdf`: letters, digits, space, - _ ( ) and one full stop only.
 pub fn file_name(b: &Building) -> String {
+    named(b, "Calculations")
+}
+
+fn named(b: &Building, what: &str) -> String {
     let letter = b.revisions.last().map_or("-", |r| r.letter.as_str());
     let clean = |text: &str| -> String {
         text.chars().map(|c| if c.is_ascii_alphanumeric() || "-_".contains(c) { c } else { '-' }).collect()
     };
-    format!("{} Calculations ({}).pdf", clean(&b.identity.number), clean(letter))
+    format!("{} {what} ({}).pdf", clean(&b.identity.number), clean(letter))
 }

@@ -2,6 +2,7 @@
 //!
 //! * `trace`: the three locks and the three renderings
 //! * `examples`: one file a published source, and two hand calculations
+//! * `archive`: packs worked again and compared
 //! * `bounds`: the limit analyses of panels
 //! * `properties`: what must be monotone, symmetric or continuous
 //! * `sheets`: every demo job as text
@@ -12,6 +13,7 @@
 
 #![allow(non_snake_case, missing_docs, reason = "symbols as the standards write them; tests need no docs")]
 
+mod archive;
 mod bounds;
 mod cli;
 mod conventions;

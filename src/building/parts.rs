@@ -45,6 +45,8 @@ pub struct Person {
     pub letters: String,
     /// Letters after the name.
     pub qualification: Option<String>,
+    /// How the client reaches them.
+    pub contact: Option<String>,
     /// ISO date.
     pub date: String,
 }

@@ -387,6 +387,8 @@ pub struct Assumption {
 pub struct HoldPoint {
     /// Text.
     pub text: String,
+    /// The same in plain words, for the client.
+    pub plain: Option<String>,
     /// Marks it concerns; empty for all.
     pub of: Vec<String>,
     /// Who closed it and when.

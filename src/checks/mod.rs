@@ -38,7 +38,7 @@ use crate::sketch::Drawing;
 use crate::standards::annex::Annex;
 use crate::trace::{Fault, Outside, Sheet};
 use crate::wind::{Wind, pressures};
-use outcome::{Hold, Outcome};
+use outcome::{About, Hold, Outcome};
 use stability::Storey;
 
 /// One section of the pack: a sheet with its drawings.
@@ -128,13 +128,13 @@ impl<'a> Job<'a> {
         };
         job.whole = whole::of(&job);
         let found = whole::holds(&job);
-        outcome::add(&mut job.holds, found);
+        outcome::add(&mut job.holds, found, &About::House);
         job.piers = piers::of(&job);
         let found = piers::holds(&job);
-        outcome::add(&mut job.holds, found);
+        outcome::add(&mut job.holds, found, &About::BeamEnds);
         let found = panel_sheet::holds(&job);
-        outcome::add(&mut job.holds, found);
-        outcome::add(&mut job.holds, found::holds(building));
+        outcome::add(&mut job.holds, found, &About::Panel);
+        outcome::add(&mut job.holds, found::holds(building), &About::Plan);
         job
     }
 

@@ -51,6 +51,33 @@ pub struct Hold {
     pub of: Vec<String>,
     /// Who closed it and when.
     pub closed: Option<String>,
+    /// What kind of thing it asks for.
+    pub about: About,
+}
+
+/// What a hold point asks for, for those who say it in other words.
+#[derive(Clone, Debug, PartialEq, Eq)]
+pub enum About {
+    /// What the job file says, with its own words for the client where it has some.
+    Given(Option<String>),
+    /// A link of the load path that is assumed, by its name.
+    Link(String),
+    /// A junction that is counted on and was not seen.
+    Junction,
+    /// A footing that nobody saw.
+    Footing,
+    /// A floor and how it holds the outer walls.
+    Floor,
+    /// The class for disproportionate collapse.
+    Class,
+    /// The building as a whole.
+    House,
+    /// Ends of beams that are not worked.
+    BeamEnds,
+    /// A panel: its ties, its supports against an arch.
+    Panel,
+    /// What was taken from the plan.
+    Plan,
 }
 
 /// Marks with those of the footings under them, and those of the returns above them.
@@ -71,13 +98,16 @@ fn with_footings(b: &Building, mut of: Vec<String>) -> Vec<String> {
 /// straps that were seen, one for the class.
 pub fn holds(b: &Building) -> Vec<Hold> {
     let floors = links::floors(b);
-    let given = b.hold_points.iter().map(|h| (h.text.clone(), h.of.clone(), h.closed.clone()));
+    let given = b
+        .hold_points
+        .iter()
+        .map(|h| (h.text.clone(), h.of.clone(), h.closed.clone(), About::Given(h.plain.clone())));
     let assumed = links::links(b).into_iter().filter(|l| l.proof == Proof::Assumed).map(|l| {
         let text = links::hold_text(&l);
         let of = if l.link == "footing" { with_footings(b, l.of) } else { l.of };
         // A floor edge stands in the way of everything behind it, not of its panel alone.
         let of = floors.iter().find(|f| f.0 == text).map_or(of, |f| f.1.clone());
-        (text, of, None)
+        (text, of, None, About::Link(l.link))
     });
     let told = |link: &str, marks: [&str; 2]| {
         b.links.iter().any(|l| {
@@ -94,32 +124,38 @@ pub fn holds(b: &Building) -> Vec<Hold> {
             "Before the wall comes down: open up the junction of {} with {} and show that it is bonded. {}",
             r.mark, r.junction.to, r.junction.words
         );
-        (text, vec![r.mark.clone()], None)
+        (text, vec![r.mark.clone()], None, About::Junction)
     });
     let buried =
         b.footings().filter(|(r, f)| f.proof == Proof::Assumed && !told("footing", [&r.mark, &f.mark]));
-    let footings = buried.map(|(r, f)| (links::dig(r, f), vec![r.mark.clone(), f.mark.clone()], None));
-    let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None));
-    let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None));
-    let mut all: Vec<(String, Vec<String>, Option<String>)> = Vec::new();
-    for hold in given.chain(assumed).chain(junctions).chain(footings).chain(floor).chain(class) {
+    let footings =
+        buried.map(|(r, f)| (links::dig(r, f), vec![r.mark.clone(), f.mark.clone()], None, About::Footing));
+    let floor = floors.iter().map(|(text, of)| (text.clone(), of.clone(), None, About::Floor));
+    let class = links::class(b).into_iter().map(|text| (text, Vec::new(), None, About::Class));
+    let mut all: Vec<Hold> = Vec::new();
+    for (text, of, closed, about) in
+        given.chain(assumed).chain(junctions).chain(footings).chain(floor).chain(class)
+    {
         // A link and the floor edge that it is about may ask for the same.
-        if !all.contains(&hold) {
-            all.push(hold);
+        if !all.iter().any(|h| h.text == text && h.of == of && h.closed == closed) {
+            all.push(Hold { mark: format!("H{}", all.len() + 1), text, of, closed, about });
         }
     }
-    all.into_iter()
-        .enumerate()
-        .map(|(n, (text, of, closed))| Hold { mark: format!("H{}", n + 1), text, of, closed })
-        .collect()
+    all
 }
 
 /// Adds hold points found by the checks, each with the mark it concerns, numbered on.
-pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>) {
+pub fn add(holds: &mut Vec<Hold>, found: Vec<(String, String)>, about: &About) {
     for (mark, text) in found {
         // Without a mark it concerns the whole job.
         let of = if mark.is_empty() { Vec::new() } else { vec![mark] };
-        holds.push(Hold { mark: format!("H{}", holds.len() + 1), text, of, closed: None });
+        holds.push(Hold {
+            mark: format!("H{}", holds.len() + 1),
+            text,
+            of,
+            closed: None,
+            about: about.clone(),
+        });
     }
 }
 

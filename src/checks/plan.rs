@@ -3,7 +3,9 @@
 use super::{Job, Section, named, place, spans};
 use crate::building::{Along, At, Building, PlanOpening, PlanWall, Return, stands_in};
 use crate::quantity::Length;
-use crate::sketch::{self, Fate, Frame, Gap, KeyPlan, PlanMark, PlanWind, When, key_plans};
+use crate::sketch::{
+    self, Drawing, Fate, Frame, Gap, KeyPlan, PlanMark, PlanWind, When, key_plan, key_plans,
+};
 use crate::trace::Sheet;
 
 /// Frame on the sheet of two plans side by side, and of one that stands alone, mm.
@@ -23,6 +25,46 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     let mut section = Section::plain("plan", "Key plan", sheet);
     section.drawings.extend(plans);
     vec![section]
+}
+
+/// Frame of the plan for the client, mm; it is set larger there.
+const CLIENT: Frame = Frame::new(100.0, 58.0);
+
+/// The walls of the storey after the removal with the marks of what must stay, and nothing else: for the client.
+/// `None` without walls on a plan.
+pub fn what_stays(b: &Building) -> Option<Drawing> {
+    if b.plan.is_empty() {
+        return None;
+    }
+    let storey = &b.removed.storey;
+    let marks: Vec<PlanMark> = b
+        .returns
+        .iter()
+        .filter_map(|r| place::of_return(b, r).map(|(from, to)| PlanMark { mark: r.mark.clone(), from, to }))
+        .collect();
+    let mut walls = walls(b, storey, When::After);
+    walls.iter_mut().for_each(|wall| wall.name.clear());
+    let view = KeyPlan {
+        name: "what-stays".to_owned(),
+        title: storey.clone(),
+        when: When::After,
+        walls,
+        marks,
+        panels: Vec::new(),
+        beams: Vec::new(),
+        spans: Vec::new(),
+        north: b.north,
+        winds: Vec::new(),
+    };
+    let named: Vec<&str> = view.marks.iter().map(|m| m.mark.as_str()).collect();
+    let stay = match named.as_slice() {
+        [] => String::new(),
+        [one] => format!("{one} must stay. "),
+        [first @ .., last] => format!("{} and {last} must stay. ", first.join(", ")),
+    };
+    let caption = format!("The house seen from above. {stay}Broken lines show the {}.", b.removed.wall);
+    let drawing = key_plan(&view, CLIENT);
+    Some(Drawing { alt: format!("{caption} {}", drawing.alt), caption, ..drawing })
 }
 
 /// One of the two plans. Returns, beams and panels as they are afterwards have their marks on the plan after.

@@ -12,8 +12,8 @@ use clap::{CommandFactory as _, Parser, Subcommand};
 
 use crate::checks::outcome::Outcome;
 use crate::error::Error;
-use crate::report::{lines, machine};
-use crate::{check, files, job, many, pack, sheet};
+use crate::report::{lines, machine, plain};
+use crate::{check, draw, files, job, many, pack, sheet, summarise};
 
 /// Everything of every job is adequate.
 pub const ADEQUATE: u8 = 0;
@@ -98,7 +98,7 @@ enum Command {
         #[arg(long)]
         json: bool,
     },
-    /// Check jobs and write their packs as PDF
+    /// Check jobs and write their packs and a summary for the client as PDF
     #[command(after_help = SHEET_EXAMPLES)]
     Sheet {
         /// Job files
@@ -107,6 +107,9 @@ enum Command {
         /// Folder for the packs, made where it is not there; beside each job file without it
         #[arg(long, value_name = "FOLDER")]
         into: Option<PathBuf>,
+        /// Write only one of the two: the pack, or the summary for the client
+        #[arg(long, value_name = "WHICH")]
+        only: Option<Only>,
         /// Say where the time went
         #[arg(long)]
         times: bool,
@@ -137,7 +140,19 @@ enum Command {
     Set {
         /// Job file
         file: PathBuf,
+        /// Only one of the two
+        #[arg(long)]
+        only: Option<Only>,
     },
+}
+
+/// One of the two documents.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, clap::ValueEnum)]
+enum Only {
+    /// The calculation pack
+    Pack,
+    /// The summary for the client
+    Summary,
 }
 
 /// Runs the tool with the process's arguments and yields its exit code.
@@ -153,10 +168,10 @@ pub fn run() -> u8 {
     match flags.command {
         Command::Start { file, plan } => start(&file, plan),
         Command::Check { files, json } => check_all(&files, json),
-        Command::Sheet { files, into, times } => sheet_all(&files, into.as_deref(), times),
+        Command::Sheet { files, into, only, times } => sheet_all(&files, into.as_deref(), only, times),
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
         Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
-        Command::Set { file } => child::hand_back(&file),
+        Command::Set { file, only } => child::hand_back(&file, only),
     }
 }
 
@@ -249,7 +264,7 @@ fn print_lines(all: &[lines::Line]) {
     }
 }
 
-fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
+fn sheet_all(paths: &[PathBuf], into: Option<&Path>, only: Option<Only>, times: bool) -> u8 {
     if let Some(Err(e)) = into.map(files::folder) {
         complain(&e);
         return FAILED;
@@ -260,20 +275,26 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
     let work = |file: &PathBuf| {
         // Several packs in one process would share the typesetter's memory of work done, which makes
         // each slower and all together larger: each of several has a process of its own.
-        let made = if paths.len() > 1 { child::ask(file)? } else { Made::here(file)? };
+        let made = if paths.len() > 1 { child::ask(file, only)? } else { Made::here(file, only)? };
         made.staged(file, into).map_err(Stopped::from)
     };
-    let take = |file: &PathBuf, result: Result<Result<(Made, files::Staged), Stopped>, String>| {
+    let take = |file: &PathBuf, result: Result<Result<(Made, Vec<files::Staged>), Stopped>, String>| {
         let ended = result.unwrap_or_else(|panic| Err(Error::Internal { step: panic }.into()));
         let placed = ended.and_then(|(made, staged)| {
-            taken.take(&staged.path, file)?;
-            Ok((staged.place()?, made))
+            staged.iter().try_for_each(|one| taken.take(&one.path, file))?;
+            let placed: Result<Vec<PathBuf>, Error> = staged.into_iter().map(files::Staged::place).collect();
+            Ok((placed?, made))
         });
         progress.aside(|| match placed {
-            Ok((path, made)) => {
+            Ok((paths, made)) => {
                 worst = worst.max(made.code);
                 let mut out = anstream::stdout();
-                let _ = writeln!(out, "{}: {} sheets: {}", path.display(), made.pages, made.outcome);
+                for (path, document) in paths.iter().zip(&made.documents) {
+                    let _ = writeln!(out, "{}: {}", path.display(), document.said);
+                }
+                for remark in &made.remarks {
+                    let _ = writeln!(out, "  {remark}");
+                }
                 if times {
                     let _ = writeln!(out, "  {}", made.times);
                 }
@@ -293,40 +314,86 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, times: bool) -> u8 {
 /// A pack that is set, and what is said of it.
 #[derive(serde::Serialize, serde::Deserialize)]
 struct Made {
-    file_name: String,
-    pages: usize,
-    /// The outcome in words.
-    outcome: String,
+    documents: Vec<Document>,
     /// The exit code it asks for.
     code: u8,
+    /// What its author should see.
+    remarks: Vec<String>,
     times: String,
+}
+
+/// One PDF of it.
+#[derive(serde::Serialize, serde::Deserialize)]
+struct Document {
+    file_name: String,
+    /// What is said of it: pages and outcome.
+    said: String,
+    /// Bytes of the PDF.
+    size: usize,
     #[serde(skip)]
     pdf: Vec<u8>,
 }
 
+impl Document {
+    fn new(file_name: String, said: String, pdf: Vec<u8>) -> Self {
+        Self { file_name, said, size: pdf.len(), pdf }
+    }
+}
+
 impl Made {
     /// Sets a job in this process.
-    fn here(file: &Path) -> Result<Self, Error> {
+    fn here(file: &Path, only: Option<Only>) -> Result<Self, Error> {
         let begin = Instant::now();
         let text = files::read(file)?;
-        let made = sheet(&files::name(file), &text, file.parent().unwrap_or(Path::new("")))?;
-        let spent = Spent { all: begin.elapsed(), setting: made.typeset.times };
-        Ok(Self {
-            file_name: made.file_name,
-            pages: made.typeset.pages,
-            outcome: made.results.outcome.words(),
-            code: code(made.results.outcome),
-            times: spent.to_string(),
-            pdf: made.typeset.pdf,
-        })
+        let folder = file.parent().unwrap_or(Path::new(""));
+        let mut documents = Vec::new();
+        let mut setting = pack::Times::default();
+        let (building, results) = match only {
+            Some(Only::Summary) => draw(&files::name(file), &text)?,
+            Some(Only::Pack) | None => {
+                let made = sheet(&files::name(file), &text, folder)?;
+                let said = format!("{} sheets: {}", made.typeset.pages, made.results.outcome.words());
+                setting = made.typeset.times;
+                documents.push(Document::new(made.file_name, said, made.typeset.pdf));
+                (made.building, made.results)
+            }
+        };
+        let mut remarks = Vec::new();
+        if only != Some(Only::Pack) {
+            let made = summarise(&building, &results, &text)?;
+            let pages = made.typeset.pages;
+            let said = format!("{pages} {} for the client", if pages == 1 { "page" } else { "pages" });
+            remarks.extend(made.hard.iter().map(|(words, why)| hard(words, why)));
+            setting += made.typeset.times;
+            documents.push(Document::new(made.file_name, said, made.typeset.pdf));
+        }
+        let spent = Spent { all: begin.elapsed(), setting };
+        Ok(Self { documents, code: code(results.outcome), remarks, times: spent.to_string() })
     }
 
-    /// Writes the pack beside its place, so that it only has to be moved there.
-    fn staged(mut self, file: &Path, into: Option<&Path>) -> Result<(Self, files::Staged), Error> {
+    /// Writes each document beside its place, so that it only has to be moved there.
+    fn staged(mut self, file: &Path, into: Option<&Path>) -> Result<(Self, Vec<files::Staged>), Error> {
         let folder = into.or(file.parent()).unwrap_or(Path::new(""));
-        let pdf = std::mem::take(&mut self.pdf);
-        let staged = files::Staged::new(folder.join(&self.file_name), &pdf)?;
+        let one = |d: &mut Document| {
+            let pdf = std::mem::take(&mut d.pdf);
+            files::Staged::new(folder.join(&d.file_name), &pdf)
+        };
+        let staged = self.documents.iter_mut().map(one).collect::<Result<Vec<_>, Error>>()?;
         Ok((self, staged))
+    }
+}
+
+/// What the author of a job can do about a sentence that the client will find hard.
+fn hard(words: &str, why: &plain::Hard) -> String {
+    match why {
+        plain::Hard::Long(n) => {
+            format!("note: a sentence of the summary has {n} words, {} is plain: \"{words}\"", plain::WORDS)
+        }
+        plain::Hard::Sign(sign) => {
+            format!(
+                "note: a sentence of the summary has the sign {sign}, which the client may not know: \"{words}\""
+            )
+        }
     }
 }
 

@@ -63,10 +63,11 @@ pub fn assumption(t: &Table<'_>) -> Option<Assumption> {
 /// Reads one hold point.
 pub fn hold_point(t: &Table<'_>, names: &[&str]) -> Option<HoldPoint> {
     let text = t.need("text").text();
+    let plain = t.may("plain").line();
     let of = marks(&t.may("for"), names);
     let closed = t.may("closed").line();
     t.finish();
-    Some(HoldPoint { text: text?, of: of?, closed })
+    Some(HoldPoint { text: text?, plain, of: of?, closed })
 }
 
 /// Reads one photograph; its path stays beside the job file.

@@ -88,9 +88,10 @@ fn person(t: &Table<'_>) -> Option<Person> {
     let name = t.need("name").line();
     let letters = t.need("letters").mark(LETTER);
     let qualification = t.may("qualification").line();
+    let contact = t.may("contact").line();
     let date = t.need("date").date();
     t.finish();
-    Some(Person { name: name?, letters: letters?, qualification, date: date? })
+    Some(Person { name: name?, letters: letters?, qualification, contact, date: date? })
 }
 
 /// Reads `[[revisions]]`, oldest first.

@@ -18,6 +18,52 @@ pub fn ready(value: &impl Serialize) -> Result<Ready, super::PackError> {
     serde_json::to_value(value).map_err(|error| super::PackError::Data(error.to_string()))
 }
 
+/// Everything a summary for the client prints.
+#[derive(Debug, Clone, Serialize)]
+pub struct Client {
+    /// The program that made it.
+    pub program: Program,
+    /// The first 16 hexadecimal digits of the job file's SHA-256, in groups of four.
+    pub digest: String,
+    /// Number of the job.
+    pub number: String,
+    /// Title of the job.
+    pub title: String,
+    /// Address lines.
+    pub address: Vec<String>,
+    /// Whom it is for.
+    pub client: String,
+    /// Who made the calculations.
+    pub author: String,
+    /// When, in words.
+    pub date: String,
+    /// Letter of the revision.
+    pub revision: String,
+    /// The words on every page.
+    pub unsigned_text: String,
+    /// Whether nothing stands in the way but a signature and its acceptance.
+    pub may_start: bool,
+    /// The outcome in one or two sentences.
+    pub headline: String,
+    /// Its parts in order.
+    pub parts: Vec<Part>,
+}
+
+/// A part of a summary.
+#[derive(Debug, Clone, Serialize)]
+pub struct Part {
+    /// Its title.
+    pub title: String,
+    /// Paragraphs.
+    pub lines: Vec<String>,
+    /// Items of a list, below.
+    pub steps: Vec<String>,
+    /// Whether the items come in turn.
+    pub numbered: bool,
+    /// A drawing, below.
+    pub drawing: Option<Ready>,
+}
+
 /// Everything a pack prints.
 #[derive(Debug, Clone, Serialize)]
 pub struct Pack {

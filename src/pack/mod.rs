@@ -26,6 +26,7 @@ use serde::Serialize;
 
 pub use audit::{Finding, Flaw};
 pub use pdf::evict;
+use world::Kind;
 
 /// A typeset pack.
 #[derive(Debug, Clone)]
@@ -49,6 +50,14 @@ pub struct Times {
     pub compile: Duration,
     /// Writing the PDF.
     pub export: Duration,
+}
+
+impl std::ops::AddAssign for Times {
+    fn add_assign(&mut self, more: Self) {
+        self.fonts += more.fonts;
+        self.compile += more.compile;
+        self.export += more.export;
+    }
 }
 
 /// Why a pack could not be typeset.
@@ -87,7 +96,26 @@ pub fn typeset(data: impl Serialize, files: &[(String, Vec<u8>)], ident: &str) -
     let json = serde_json::to_vec(&data).map_err(|error| PackError::Data(error.to_string()))?;
     // Its trees are as large as the sheets to come: while those are set, only the text is kept.
     drop(data);
-    pdf::typeset(json, files, ident)
+    pdf::typeset(Kind::Pack, json, files, ident)
+}
+
+/// The PDF of a summary for the client; otherwise as [`typeset`].
+///
+/// # Errors
+/// As [`typeset`].
+pub fn typeset_client(data: &data::Client, ident: &str) -> Result<Typeset, PackError> {
+    let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
+    pdf::typeset(Kind::Client, json, &[], ident)
+}
+
+/// The flaws of a summary's pages, as [`inspect`].
+///
+/// # Errors
+/// As [`typeset`].
+pub fn inspect_client(data: &data::Client) -> Result<Vec<Finding>, PackError> {
+    let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
+    let (document, _) = pdf::compile(&world::World::new(Kind::Client, json, &[]))?;
+    Ok(audit::audit(&document))
 }
 
 /// The PDF of a pack from its data as JSON text; otherwise as [`typeset`].
@@ -95,7 +123,7 @@ pub fn typeset(data: impl Serialize, files: &[(String, Vec<u8>)], ident: &str) -
 /// # Errors
 /// As [`typeset`].
 pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
-    pdf::typeset(json.as_bytes().to_vec(), files, ident)
+    pdf::typeset(Kind::Pack, json.as_bytes().to_vec(), files, ident)
 }
 
 /// The flaws of the finished sheets: text over text, text over the margins, missing signs.
@@ -106,7 +134,7 @@ pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Res
 /// As [`typeset`].
 pub fn inspect(data: &impl Serialize, files: &[(String, Vec<u8>)]) -> Result<Vec<Finding>, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    let world = world::World::new(json, files);
+    let world = world::World::new(Kind::Pack, json, files);
     let (document, _) = pdf::compile(&world)?;
     Ok(audit::audit(&document))
 }

@@ -8,7 +8,7 @@ use typst::{World as _, WorldExt};
 use typst_layout::PagedDocument;
 use typst_pdf::{PdfOptions, PdfStandard, PdfStandards};
 
-use super::world::World;
+use super::world::{Kind, World};
 use super::{PackError, Times, Typeset};
 
 /// The sheets of a pack laid out, with the typesetter's warnings.
@@ -19,9 +19,14 @@ pub(super) fn compile(world: &World) -> Result<(PagedDocument, Vec<String>), Pac
 }
 
 /// The PDF from JSON text: compile, then write.
-pub(super) fn typeset(json: Vec<u8>, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
+pub(super) fn typeset(
+    kind: Kind,
+    json: Vec<u8>,
+    files: &[(String, Vec<u8>)],
+    ident: &str,
+) -> Result<Typeset, PackError> {
     let start = Instant::now();
-    let world = World::new(json, files);
+    let world = World::new(kind, json, files);
     let fonts = start.elapsed();
 
     let start = Instant::now();

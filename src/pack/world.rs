@@ -11,8 +11,27 @@ use typst::text::{Font, FontBook};
 use typst::utils::LazyHash;
 use typst::{Library, LibraryExt};
 
-/// The templates by their virtual paths; the first is the main one.
+/// What is set: each from a main template of its own.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub(super) enum Kind {
+    /// The calculation pack.
+    Pack,
+    /// The summary for the client.
+    Client,
+}
+
+impl Kind {
+    const fn main(self) -> &'static str {
+        match self {
+            Self::Pack => "/templates/pack.typ",
+            Self::Client => "/templates/client.typ",
+        }
+    }
+}
+
+/// The templates by their virtual paths.
 const TEMPLATES: &[(&str, &str)] = &[
+    ("/templates/client.typ", include_str!("../../templates/client.typ")),
     ("/templates/pack.typ", include_str!("../../templates/pack.typ")),
     ("/templates/parts/back.typ", include_str!("../../templates/parts/back.typ")),
     ("/templates/parts/source.typ", include_str!("../../templates/parts/source.typ")),
@@ -47,7 +66,6 @@ struct Fixed {
     library: LazyHash<Library>,
     book: LazyHash<FontBook>,
     fonts: Vec<Font>,
-    main: FileId,
     sources: HashMap<FileId, Source>,
 }
 
@@ -63,7 +81,6 @@ fn fixed() -> &'static Fixed {
             library: LazyHash::new(Library::builder().build()),
             book: LazyHash::new(FontBook::from_fonts(&fonts)),
             fonts,
-            main: id_of(TEMPLATES[0].0).expect("the main template has a plain path"),
             sources: TEMPLATES.iter().map(source).collect(),
         }
     })
@@ -78,20 +95,21 @@ fn id_of(path: &str) -> Option<FileId> {
 
 /// One pack's files: templates and fonts from the program, data and photographs from memory.
 pub(super) struct World {
+    main: FileId,
     files: HashMap<FileId, Bytes>,
 }
 
 impl World {
     /// The world of one pack. A file whose path is not a plain virtual path is left out, and
     /// a template that asks for it says that it was not found.
-    pub(super) fn new(json: Vec<u8>, files: &[(String, Vec<u8>)]) -> Self {
+    pub(super) fn new(kind: Kind, json: Vec<u8>, files: &[(String, Vec<u8>)]) -> Self {
         fixed();
         let mut held: HashMap<FileId, Bytes> = files
             .iter()
             .filter_map(|(path, bytes)| Some((id_of(path)?, Bytes::new(bytes.clone()))))
             .collect();
         held.insert(id_of(DATA).expect("the data has a plain path"), Bytes::new(json));
-        Self { files: held }
+        Self { main: id_of(kind.main()).expect("a main template has a plain path"), files: held }
     }
 }
 
@@ -105,7 +123,7 @@ impl typst::World for World {
     }
 
     fn main(&self) -> FileId {
-        fixed().main
+        self.main
     }
 
     fn source(&self, id: FileId) -> FileResult<Source> {

@@ -3,14 +3,17 @@
 //! * [`pack`]: the data that the templates read
 //! * [`lines`]: the same results as plain text
 //! * [`machine`]: the same results as JSON
+//! * [`client`]: the summary for the client, in plain English; [`plain`] says which sentences are not
 //! * [`record`]: all that a pack prints, to travel inside it
 
 mod blocks;
+pub mod client;
 mod front;
 pub mod lines;
 mod listing;
 pub mod machine;
 pub mod notation;
+pub mod plain;
 pub mod record;
 
 use crate::building::Building;

@@ -10,7 +10,7 @@ use super::note::{Note, Spot};
 use super::panel_lines::{ROW, rows, stretch};
 use super::pen::Pen;
 use super::plan::{self, Fate, PlanWall, When, paper, wall_note};
-use super::scale::{Frame, Scale, fit_pair};
+use super::scale::{Frame, Scale, fit, fit_pair};
 use super::text::Text;
 use super::view::list;
 
@@ -56,12 +56,18 @@ pub fn key_plans(views: &[KeyPlan; 2], row: Frame, alone: Frame) -> [Drawing; 2]
     let out = |view: &KeyPlan| rows(&view.panels).into_iter().max().unwrap_or(0);
     let clear = ROW * out(&views[0]).max(out(&views[1])) as f64;
     fit_pair((row, alone), plan::size(&views[0].walls), 50.0, |scale| {
-        views.each_ref().map(|view| draw(view, clear, scale))
+        views.each_ref().map(|view| draw(view, Some(clear), scale))
     })
 }
 
-/// One plan; what stands around it stands `clear` mm farther out than usual.
-fn draw(view: &KeyPlan, clear: f64, scale: Scale) -> Drawing {
+/// Draws one plan alone, without room for what stands beside another.
+pub fn key_plan(view: &KeyPlan, frame: Frame) -> Drawing {
+    fit(frame, 20.0, |scale| draw(view, None, scale))
+}
+
+/// One plan; of a pair what stands around it stands `pair` mm farther out than usual.
+fn draw(view: &KeyPlan, pair: Option<f64>, scale: Scale) -> Drawing {
+    let clear = pair.unwrap_or(0.0);
     let mut board = Board::default();
     plan::walls(&mut board, &view.walls, scale, view.when);
     let half = scale.paper(view.walls.iter().map(|wall| wall.thickness / 2.0).fold(0.0, f64::max));
@@ -97,8 +103,10 @@ fn draw(view: &KeyPlan, clear: f64, scale: Scale) -> Drawing {
     };
     surroundings(&mut board, &view.walls, &around, scale);
     // The north point stands over the one plan, wind over the other: both take as much.
-    let extent = plan::extent(&view.walls, scale);
-    board.keep(Rect { y0: extent.y0 - HEAD - clear, ..extent });
+    if pair.is_some() {
+        let extent = plan::extent(&view.walls, scale);
+        board.keep(Rect { y0: extent.y0 - HEAD - clear, ..extent });
+    }
     board.finish(Words {
         name: view.name.clone(),
         caption: format!(

@@ -71,7 +71,7 @@ pub use chain::{Branch, Chain, ChainLink, Known, chain};
 pub use drawing::{Drawing, Item};
 pub use footing::{FootingSketch, Pressure, footing_sketch};
 pub use ground_profile::{GroundProfile, ground_profile};
-pub use key_plan::{KeyPlan, PlanMark, key_plans};
+pub use key_plan::{KeyPlan, PlanMark, key_plan, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
 pub use panel_cracks::{Cell, Crack, CrackKind, PanelCracks, cracks_pair, panel_cracks};
 pub use panel_edges::{Edge, PanelFace, Support};

@@ -1,5 +1,6 @@
 //! The command as a person runs it.
 
+mod again;
 mod many;
 mod output;
 mod trouble;
@@ -96,6 +97,7 @@ fn expected(text: &str) -> i32 {
 }
 
 const PACK: &str = "2419 Calculations (A).pdf";
+const SUMMARY: &str = "2419 Summary (A).pdf";
 
 #[test]
 fn from_an_empty_folder_to_a_pack() {
@@ -113,8 +115,11 @@ fn from_an_empty_folder_to_a_pack() {
     let sheet = place.run(&["sheet", "house.toml"]);
     assert_eq!((sheet.code, sheet.err.as_str()), (expected(jobs::START), ""));
     assert!(sheet.out.starts_with(PACK), "{}", sheet.out);
-    assert_eq!(place.list(), [PACK, "house.toml"]);
-    assert!(place.get(PACK).starts_with(b"%PDF-1.7"));
+    assert_eq!(place.list(), [PACK, SUMMARY, "house.toml"]);
+    for pdf in [PACK, SUMMARY] {
+        assert!(place.get(pdf).starts_with(b"%PDF-1.7"));
+        assert!(sheet.out.contains(pdf), "{}", sheet.out);
+    }
 }
 
 #[test]

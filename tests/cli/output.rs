@@ -2,7 +2,7 @@
 
 use serde_json::Value;
 
-use super::{PACK, Place, demo, expected, names};
+use super::{PACK, Place, SUMMARY, demo, expected, names};
 use crate::jobs;
 
 fn json(text: &str) -> Vec<Value> {
@@ -78,14 +78,38 @@ fn a_missing_folder_is_made() {
     let place = Place::with(&[("house.toml", jobs::START)]);
     let ran = place.run(&["sheet", "house.toml", "--into", "packs/2026/für A"]);
     assert_eq!((ran.code, ran.err.as_str()), (expected(jobs::START), ""));
-    assert_eq!(names(&place.path().join("packs/2026/für A")), [PACK]);
+    assert_eq!(names(&place.path().join("packs/2026/für A")), [PACK, SUMMARY]);
 }
 
 #[test]
 fn the_pack_stands_beside_its_job() {
     let place = Place::with(&[("a folder/house.toml", jobs::START)]);
     place.run(&["sheet", "a folder/house.toml"]);
-    assert_eq!(names(&place.path().join("a folder")), [PACK, "house.toml"]);
+    assert_eq!(names(&place.path().join("a folder")), [PACK, SUMMARY, "house.toml"]);
+}
+
+#[test]
+fn either_document_alone() {
+    for (which, file) in [("pack", PACK), ("summary", SUMMARY)] {
+        let place = Place::with(&[("house.toml", jobs::START)]);
+        let ran = place.run(&["sheet", "--only", which, "house.toml"]);
+        assert_eq!((ran.code, ran.err.as_str()), (expected(jobs::START), ""));
+        assert_eq!(place.list(), [file, "house.toml"]);
+    }
+    let place = Place::with(&[("house.toml", jobs::START)]);
+    let ran = place.run(&["sheet", "--only", "both", "house.toml"]);
+    assert_eq!(ran.code, 2);
+    assert!(ran.err.contains("pack") && ran.err.contains("summary"), "{}", ran.err);
+}
+
+#[test]
+fn hard_words_of_the_job_are_told() {
+    let long = "Taking out the wall, and after that this, and that, and the other, and one more, and so on, until nobody who reads it knows what it was about.";
+    let text = jobs::START.replace("Taking out the wall between kitchen and dining room and putting in a steel beam on the two nibs that stay.", long);
+    assert_ne!(text, jobs::START);
+    let place = Place::with(&[("house.toml", &text)]);
+    let ran = place.run(&["sheet", "--only", "summary", "house.toml"]);
+    assert!(ran.out.contains("note: a sentence of the summary has 29 words, 25 is plain"), "{}", ran.out);
 }
 
 #[test]
@@ -97,7 +121,7 @@ fn file_names_keep_to_plain_signs() {
     let ran = place.run(&["sheet", "dëmo job.toml", "--times"]);
     assert_ne!(ran.code, 2, "{}", ran.err);
     assert!(ran.out.contains("layout") && ran.out.contains(" ms"), "{}", ran.out);
-    assert_eq!(place.list(), ["24-19_b Calculations (C1).pdf", "dëmo job.toml"]);
+    assert_eq!(place.list(), ["24-19_b Calculations (C1).pdf", "24-19_b Summary (C1).pdf", "dëmo job.toml"]);
     for number in ["../24", "24/19", "24 19", ""] {
         let text = jobs::START.replace("number = \"2419\"", &format!("number = \"{number}\""));
         let place = Place::with(&[("job.toml", &text)]);

@@ -1,6 +1,6 @@
 //! What goes wrong is said, and leaves nothing half done.
 
-use super::{PACK, Place, expected};
+use super::{PACK, Place, SUMMARY, expected};
 use crate::jobs;
 
 /// The command refuses `file` with these words, and leaves nothing new.
@@ -46,7 +46,7 @@ fn a_pack_is_replaced_whole_or_not_at_all() {
     assert_eq!(place.run(&["sheet", "job.toml"]).code, expected(jobs::START));
     let pack = place.get(PACK);
     assert!(pack.starts_with(b"%PDF-") && pack.trim_ascii_end().ends_with(b"%%EOF"));
-    assert_eq!(place.list(), [PACK, "job.toml"]);
+    assert_eq!(place.list(), [PACK, SUMMARY, "job.toml"]);
 
     // A job that cannot be used leaves the pack of before.
     place.put("job.toml", b"[job]\n");

@@ -25,6 +25,7 @@ fn hold(of: &[&str], closed: bool) -> Hold {
         text: "Before the wall comes down: look.".to_owned(),
         of: of.iter().map(|&m| m.to_owned()).collect(),
         closed: closed.then(|| "RH, 1 May 2026".to_owned()),
+        about: perpend::checks::outcome::About::House,
     }
 }
 

@@ -7,6 +7,8 @@
 //! git diff tests/sheets/snapshots
 //! ```
 
+mod summaries;
+
 use std::fmt::Write as _;
 
 use perpend::checks::Section;

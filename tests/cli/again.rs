@@ -1,0 +1,52 @@
+//! `recheck` and `compare` as a person runs them.
+
+use super::{PACK, Place};
+use crate::jobs;
+
+#[test]
+fn a_pack_is_worked_again_and_compared_with_its_job() {
+    let later = jobs::START.replacen("dead = \"18 kN\"", "dead = \"17 kN\"", 1);
+    assert_ne!(later, jobs::START);
+    let place = Place::with(&[("job.toml", jobs::START), ("later.toml", &later)]);
+    place.run(&["sheet", "job.toml"]);
+    let left = place.list();
+
+    let ran = place.run(&["recheck", PACK]);
+    assert_eq!((ran.code, ran.err.as_str()), (0, ""));
+    assert!(ran.out.contains("every printed result stands"), "{}", ran.out);
+    assert!(ran.out.contains(&format!("made by Perpend {}", env!("CARGO_PKG_VERSION"))), "{}", ran.out);
+
+    let ran = place.run(&["compare", PACK, "job.toml"]);
+    assert_eq!((ran.code, ran.out.trim()), (0, "alike: the same job, the same results"));
+
+    let ran = place.run(&["compare", PACK, "later.toml"]);
+    assert_eq!(ran.code, 1, "{}", ran.err);
+    for words in [
+        "Inputs: 1 line",
+        "was dead = \"18 kN\"",
+        "now dead = \"17 kN\"",
+        "R1 overturning",
+        "lines of working",
+    ] {
+        assert!(ran.out.contains(words), "{words} is not in {}", ran.out);
+    }
+    let working = place.run(&["compare", "--working", PACK, "later.toml"]);
+    assert!(working.out.lines().count() > ran.out.lines().count() + 20, "{}", working.out);
+    assert_eq!(place.list(), left, "nothing is written");
+}
+
+#[test]
+fn what_is_no_pack_is_refused_and_holds_up_no_other() {
+    let place = Place::with(&[("job.toml", jobs::START), ("x.pdf", "nothing")]);
+    place.run(&["sheet", "job.toml"]);
+    let half = place.get(PACK);
+    place.put("half.pdf", &half[..half.len() / 2]);
+    let ran = place.run(&["recheck", "x.pdf", "half.pdf", "none.pdf", PACK]);
+    assert_eq!(ran.code, 2);
+    assert!(ran.out.contains("every printed result stands"), "{}", ran.out);
+    for words in ["x.pdf: it does not read as a PDF", "half.pdf: it", "none.pdf cannot be read"] {
+        assert!(ran.err.contains(words), "{words} is not in {}", ran.err);
+    }
+    assert_eq!(ran.err.matches("help:").count(), 3, "{}", ran.err);
+    assert_eq!(place.run(&["compare", "x.pdf", "job.toml"]).code, 2);
+}
