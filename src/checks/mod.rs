@@ -2,6 +2,7 @@
 //! in the list is its place in the pack.
 
 pub mod bearings;
+pub mod catalogue;
 pub mod chain;
 pub mod diaphragm;
 pub mod floor_edge;

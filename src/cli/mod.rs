@@ -2,6 +2,7 @@
 
 mod again;
 mod child;
+mod teach;
 
 use std::io::Write as _;
 use std::path::{Path, PathBuf};
@@ -59,6 +60,11 @@ Examples:
   perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
 
 A pack that is there already is replaced as soon as the new one is whole.";
+
+const COMPLETIONS_EXAMPLES: &str = "\
+Examples:
+  perpend completions bash > ~/.local/share/bash-completion/completions/perpend
+  perpend completions zsh > ~/.zfunc/_perpend";
 
 const RECHECK_EXAMPLES: &str = "\
 Examples:
@@ -135,6 +141,17 @@ enum Command {
         #[arg(long)]
         working: bool,
     },
+    /// List every check with its clause
+    Checks,
+    /// Print completions for a shell
+    #[command(after_help = COMPLETIONS_EXAMPLES)]
+    Completions {
+        /// The shell
+        shell: clap_complete::Shell,
+    },
+    /// Print the manual in the format of `man`
+    #[command(after_help = "Example:\n  perpend manual > perpend.1 && man ./perpend.1")]
+    Manual,
     /// Set one job and hand the pack back on standard output; `sheet` of several files starts these
     #[command(hide = true)]
     Set {
@@ -171,6 +188,9 @@ pub fn run() -> u8 {
         Command::Sheet { files, into, only, times } => sheet_all(&files, into.as_deref(), only, times),
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
         Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
+        Command::Checks => teach::checks(),
+        Command::Completions { shell } => teach::completions(shell),
+        Command::Manual => teach::manual(),
         Command::Set { file, only } => child::hand_back(&file, only),
     }
 }

@@ -3,6 +3,7 @@
 mod again;
 mod many;
 mod output;
+mod teach;
 mod trouble;
 
 use std::path::Path;

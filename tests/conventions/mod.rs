@@ -2,6 +2,7 @@
 //! files, and a meaning for every symbol.
 
 mod arrows;
+mod catalogue;
 mod files;
 mod glossary;
 
