@@ -227,7 +227,8 @@ fn flexural_strengths(
 }
 
 /// Material factors: compression, flexure, shear, each with where it comes from.
-fn factors(s: &mut Sheet, b: &Building) -> [(Num, String); 3] {
+/// Material factors of compression, flexure and shear, each with its source.
+pub fn factors(s: &mut Sheet, b: &Building) -> [(Num, String); 3] {
     let category = if b.basis.unit_category == 1 { Category::One } else { Category::Two };
     let class = if b.basis.execution_class == 1 { ExecutionClass::One } else { ExecutionClass::Two };
     let source = |stated: &Option<Cause<f64>>| match stated {

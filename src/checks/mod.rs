@@ -24,6 +24,7 @@ pub mod wind;
 
 mod bearing_sheet;
 mod bearing_views;
+mod margins;
 mod panel_cracks;
 mod panel_passes;
 mod panel_sheet;
@@ -167,6 +168,7 @@ type Check = fn(&Job<'_>) -> Vec<Section>;
 
 /// Every check, in sheet order.
 pub const LIST: &[Check] = &[
+    margins::sections,
     plan::sections,
     found::sections,
     takedown::sections,

@@ -2,7 +2,7 @@
 
 use super::returns::build::Inputs;
 use super::returns::check;
-use super::{Job, Section, footings, return_views};
+use super::{Job, Section, footings, named, return_views};
 use crate::trace::Sheet;
 
 /// One section a return, and behind it one for its footing.
@@ -19,6 +19,12 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
                     let checked = check(&mut sheet, &inputs);
                     drawings =
                         job.drawings(|| return_views::drawings(job.building, ret, &checked, &job.annex));
+                    let plots = job.drawings(|| return_views::plots(&inputs));
+                    if !plots.is_empty() {
+                        sheet.heading(1, "How far it may move");
+                        named(&mut sheet, &plots);
+                    }
+                    drawings.extend(plots);
                 }
                 Err(outside) => sheet.leave(outside.clone()),
             }

@@ -2,16 +2,19 @@
 
 use super::returns::Checked;
 use super::returns::actions::{self, Case, Direction, Toe as Pressed};
+use super::returns::build::Inputs;
 use super::returns::check::Check;
 use super::returns::in_plane;
+use super::returns::margins;
 use super::returns::matrix::Matrix;
 use super::returns::model::{At, Model};
 use super::shapes::{layers, leaf_material};
 use crate::building::{BaseJoint, BuildUp, Building, Head, Path, Proof, Return, ShareBy};
-use crate::quantity::{Dyn, Force, Length, print};
+use crate::quantity::print::Shown;
+use crate::quantity::{Dyn, Force, Length, Stress as Pressure, print};
 use crate::sketch::{
-    Action, Curve, Drawing, Flange, Frame, Layer, PlacedLoad, ReturnActions, ReturnElevation, ReturnSection,
-    Side, Stress, Toe, Wind, return_actions, return_elevation, return_section,
+    Action, Curve, Drawing, Flange, Frame, Layer, MarginPlot, PlacedLoad, ReturnActions, ReturnElevation,
+    ReturnSection, Side, Stress, Toe, Wind, margin_plot, return_actions, return_elevation, return_section,
 };
 use crate::standards::annex::Annex;
 use crate::trace::Sheet;
@@ -46,6 +49,35 @@ pub fn drawings(b: &Building, r: &Return, checked: &Checked, annex: &Annex) -> V
         drawing.name = format!("{}-{kind}", r.mark);
     }
     out
+}
+
+/// Its largest use against its length and against the wind.
+pub fn plots(i: &Inputs<'_>) -> Vec<Drawing> {
+    let Some(course) = margins::course(i) else { return Vec::new() };
+    let used = print::ratio(course.here);
+    let mm = |l: f64| print::show("l", Length::new(l).dynamic());
+    let kn = |q: f64| print::show("q_net", Pressure::new(q).dynamic());
+    let plot = |kind: &str,
+                assumption: &str,
+                points: &[(f64, Option<f64>)],
+                here: f64,
+                print: &dyn Fn(f64) -> Shown| {
+        let middle = points.len() / 2;
+        let ticks = [0, middle, points.len().saturating_sub(1)];
+        margin_plot(&MarginPlot {
+            name: format!("{}-by-{kind}", i.ret.mark),
+            mark: i.ret.mark.clone(),
+            assumption: assumption.to_owned(),
+            points: points.to_vec(),
+            here: (here, course.here),
+            printed: (print(here).to_string(), used.clone()),
+            ticks: ticks.iter().filter_map(|&n| points.get(n)).map(|p| (p.0, print(p.0).value)).collect(),
+        })
+    };
+    vec![
+        plot("length", "length, mm", &course.by_length, i.ret.length.base(), &mm),
+        plot("wind", "net overall pressure, kN/m²", &course.by_wind, i.wind.overall.base(), &kn),
+    ]
 }
 
 fn worst(matrix: Option<&Matrix>, check: Check) -> Case {

@@ -29,6 +29,7 @@ pub mod hatch;
 pub mod key_plan;
 pub mod load;
 pub mod load_stack;
+mod margin_plot;
 pub mod note;
 pub mod panel_cracks;
 #[cfg(test)]
@@ -73,6 +74,7 @@ pub use footing::{FootingSketch, Pressure, footing_sketch};
 pub use ground_profile::{GroundProfile, ground_profile};
 pub use key_plan::{KeyPlan, PlanMark, key_plan, key_plans};
 pub use load_stack::{LoadStack, StackStorey, StackWall, load_stack};
+pub use margin_plot::{MarginPlot, margin_plot};
 pub use panel_cracks::{Cell, Crack, CrackKind, PanelCracks, cracks_pair, panel_cracks};
 pub use panel_edges::{Edge, PanelFace, Support};
 pub use panel_elevation::{PanelElevation, WallBehind, panel_elevation, panel_pair};

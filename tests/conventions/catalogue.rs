@@ -35,7 +35,7 @@ fn every_verdict_is_listed_with_its_clause() {
     }
 }
 
-/// Which demo jobs and their variations print; what they do not is listed here, with the test that does.
+/// By demo jobs or their variations; what those do not print is named here, and printed by tests of its own check.
 #[test]
 fn nothing_is_listed_that_is_never_printed() {
     let printed = printed();

@@ -10,6 +10,7 @@ mod found;
 mod honest;
 mod jobs;
 mod loads;
+mod margins;
 mod outcome;
 mod remedy;
 mod returns;

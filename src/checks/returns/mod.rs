@@ -5,7 +5,7 @@
 //! * [`statics`]: moment and shear of wind and tilt, once for design and once for characteristic values
 //! * [`actions`], [`in_plane`], [`sliding`], [`flexure`], [`vertical`]: the checks
 //! * [`rules`]: lengths by rule, as information
-//! * [`remedy`]: what would make it pass; [`frame`]: what a steel frame in its place would have to do
+//! * [`margins`]: how far its assumptions may move; [`remedy`]: what would make it pass; [`frame`]: what a steel frame in its place would have to do
 
 pub mod actions;
 pub mod build;
@@ -14,6 +14,7 @@ pub mod flexure;
 pub mod frame;
 pub mod in_plane;
 pub mod lateral;
+pub mod margins;
 pub mod matrix;
 pub mod model;
 pub mod remedy;

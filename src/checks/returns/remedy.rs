@@ -37,11 +37,14 @@ pub fn dead_needed(i: &Inputs<'_>) -> Option<Force> {
         .map(|kn| Force::new(kn * 1e3))
 }
 
+/// As many times the wind are tried.
+pub const MOST_WIND: f64 = 8.0;
+
 /// The largest net overall pressure that passes, rounded down to 0.01 kN/m².
 pub fn wind_taken(i: &Inputs<'_>) -> Option<Stress> {
     let blow = |factor: f64| passes(i, Change { wind: factor, ..Change::NONE });
     let q = i.wind.overall;
-    let factor = root::greatest(blow, 0.0, 8.0, 160, 1e-4)?;
+    let factor = root::greatest(blow, 0.0, MOST_WIND, 160, 1e-4)?;
     Some(Stress::new((q.base() * factor * 1e5).floor() / 1e5))
 }
 
