@@ -33,6 +33,7 @@ use std::path::Path;
 
 use sha2::{Digest, Sha256};
 
+use archive::{Held, Rechecked};
 use building::Building;
 use checks::Results;
 use error::{Error, Trouble};
@@ -74,6 +75,17 @@ pub struct Sheeted {
     pub typeset: Typeset,
     /// The file name that the pack wants.
     pub file_name: String,
+}
+
+/// Works the job inside a pack again and holds the outcome against what the pack prints.
+///
+/// # Errors
+/// As [`check`], where the attached job file cannot be used.
+pub fn recheck(name: &str, held: Held) -> Result<Rechecked, Error> {
+    let (building, results) = draw(name, &held.job)?;
+    let digest = digest(&held.job);
+    let now = report::record::of_job(&building, &results, &digest);
+    Ok(Rechecked::new(held.record, now, &digest))
 }
 
 /// A summary for the client.

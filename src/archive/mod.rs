@@ -12,9 +12,8 @@ pub mod pdf;
 
 use std::fmt;
 
+use crate::report::PROGRAM;
 use crate::report::record::{FORMAT, Record};
-use crate::report::{PROGRAM, record};
-use crate::{digest, draw, error};
 use compare::Differences;
 
 /// The job file inside a pack.
@@ -86,6 +85,12 @@ pub struct Rechecked {
 }
 
 impl Rechecked {
+    /// What a pack carries held against what its job yields now; `digest` is that of the job file inside.
+    pub fn new(was: Record, now: Record, digest: &str) -> Self {
+        let differences = compare::records(&was, &now);
+        Self { same_job: digest == was.job_digest, was, now, differences }
+    }
+
     /// Whether every printed figure stands.
     pub fn stands(&self) -> bool {
         self.same_job && self.differences.is_empty()
@@ -120,16 +125,4 @@ pub fn held(bytes: Vec<u8>) -> Result<Held, Unfit> {
     }
     let record = serde_json::from_value(json).map_err(|why| Unfit::Foreign(format!("{RECORD}: {why}")))?;
     Ok(Held { job, record })
-}
-
-/// Works the job inside a pack again and holds the outcome against what the pack prints.
-///
-/// # Errors
-/// [`error::Error`] where the attached job file cannot be used.
-pub fn recheck(name: &str, held: Held) -> error::Result<Rechecked> {
-    let (building, results) = draw(name, &held.job)?;
-    let digest = digest(&held.job);
-    let now = record::of_job(&building, &results, &digest);
-    let differences = compare::records(&held.record, &now);
-    Ok(Rechecked { same_job: digest == held.record.job_digest, was: held.record, now, differences })
 }

@@ -139,7 +139,8 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
         out.push(row("length, added at its right end", mm(m.after.length), format!("up to {}{more}", mm(l))));
     }
     let loaded = m.loaded();
-    if let Some(g) = of_panel::least_dead(&m, &job.annex) {
+    let given = m.leaves[loaded].G_above > crate::quantity::LineLoad::ZERO;
+    if let Some(g) = of_panel::least_dead(&m, &job.annex).filter(|_| given) {
         let line = |g: crate::quantity::LineLoad| show("g", g.dynamic()).to_string();
         let to =
             if g.base() == 0.0 { "without any of it".to_owned() } else { format!("down to {}", line(g)) };

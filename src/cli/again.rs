@@ -5,10 +5,10 @@ use std::path::{Path, PathBuf};
 
 use super::{ADEQUATE, FAILED, NOT_PLAINLY_ADEQUATE, complain, internal};
 use crate::archive::compare::{self, Change, Differences};
-use crate::archive::{Held, Rechecked, held, recheck};
+use crate::archive::{Held, Rechecked, held};
 use crate::error::{Error, Trouble};
 use crate::report::record::{self, Record};
-use crate::{digest, draw, files, many};
+use crate::{digest, draw, files, many, recheck};
 
 /// Works the jobs inside packs again. Yields the exit code.
 pub fn recheck_all(paths: &[PathBuf], working: bool) -> u8 {
@@ -108,7 +108,7 @@ pub fn compare_two(old: &Path, new: &Path, working: bool) -> u8 {
     NOT_PLAINLY_ADEQUATE
 }
 
-fn side(file: &PathBuf) -> Result<Side, Error> {
+fn side(file: &Path) -> Result<Side, Error> {
     if files::is_pdf(file) {
         let Held { job, record } = pack(file)?;
         return Ok(Side { job, record });

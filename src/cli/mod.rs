@@ -1,4 +1,4 @@
-//! The command line: flags in, files and lines out, an exit code back. The only file that knows clap.
+//! The command line: flags in, files and lines out, an exit code back. The only folder that knows clap.
 
 mod again;
 mod child;

@@ -138,7 +138,7 @@ fn long_words_keep_clear() {
 #[test]
 fn every_sheet_says_what_it_is() {
     let data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let world = world::World::new(SAMPLE.as_bytes().to_vec(), &[]);
+    let world = world::World::new(Kind::Pack, SAMPLE.as_bytes().to_vec(), &[]);
     let document = pdf::compile(&world).unwrap().0;
     let sheets = audit::sheets(&document);
     let digest = data["digest"].as_str().unwrap();
@@ -176,7 +176,7 @@ fn words_print_literally() {
 }
 
 fn printed(data: &serde_json::Value) -> String {
-    let world = world::World::new(serde_json::to_vec(data).unwrap(), &[]);
+    let world = world::World::new(Kind::Pack, serde_json::to_vec(data).unwrap(), &[]);
     audit::sheets(&pdf::compile(&world).unwrap().0).concat()
 }
 

@@ -8,6 +8,7 @@ use super::load;
 use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
 use super::text::Text;
+use super::view::list;
 
 /// What the plot shows.
 #[derive(Clone, Debug)]
@@ -31,6 +32,9 @@ pub struct MarginPlot {
 /// Paper of the field, mm; uses from 0 to the top.
 const SIZE: (f64, f64) = (58.0, 34.0);
 const TOP: f64 = 1.5;
+/// Uses printed along the axis, and that from which a use is only said to be large.
+const USES: [f64; 4] = [0.0, 0.5, 1.0, 1.5];
+const FAR: f64 = 10.0;
 /// Length of a tick, mm.
 const TICK: f64 = 1.2;
 
@@ -42,7 +46,7 @@ pub fn margin_plot(view: &MarginPlot) -> Drawing {
     let y = |used: f64| -used.min(TOP) / TOP * SIZE.1;
     board.line(Pen::Beyond, Point::new(0.0, y(0.0)), Point::new(SIZE.0, y(0.0)));
     board.line(Pen::Beyond, Point::new(0.0, y(0.0)), Point::new(0.0, y(TOP)));
-    for used in [0.0, 0.5, 1.0, 1.5] {
+    for used in USES {
         let at = Point::new(-TICK, y(used));
         board.line(Pen::Beyond, at, Point::new(0.0, y(used)));
         let text = Text::plain(&format!("{used:.1}"));
@@ -103,15 +107,19 @@ fn name_of(assumption: &str) -> &str {
 
 fn spoken(view: &MarginPlot) -> String {
     let of = |p: Option<&(f64, Option<f64>)>| match p.and_then(|p| p.1) {
+        Some(used) if used > FAR => "more than 10".to_owned(),
         Some(used) => format!("{used:.2}"),
         None => "outside the method".to_owned(),
     };
-    let ends = (view.ticks.first(), view.ticks.last());
-    let (first, last) = (ends.0.map_or("", |t| t.1.as_str()), ends.1.map_or("", |t| t.1.as_str()));
+    let ticks: Vec<&str> = view.ticks.iter().map(|t| t.1.as_str()).collect();
+    let (first, last) = (ticks.first().unwrap_or(&""), ticks.last().unwrap_or(&""));
     format!(
-        "Largest use of {} against {}: {} at {first}, {} at {last}; this job has {} with a use of {}.",
+        "Largest use of {}, on an axis of {}, against {}, on an axis of {}: {} at {first}, {} at {last}; this job has {} \
+         with a use of {}.",
         view.mark,
+        list(&USES.map(|u| format!("{u:.1}"))),
         view.assumption,
+        list(&ticks.iter().map(|t| (*t).to_owned()).collect::<Vec<_>>()),
         of(view.points.first()),
         of(view.points.last()),
         view.printed.0,

@@ -3,9 +3,9 @@
 use std::path::Path;
 
 use perpend::archive::compare::{self, Differences};
-use perpend::archive::{Held, Rechecked, Unfit, held, recheck};
+use perpend::archive::{Held, Rechecked, Unfit, held};
 use perpend::report::record::{self, Record};
-use perpend::{digest, draw, pack, report, sheet};
+use perpend::{digest, draw, pack, recheck, report, sheet};
 
 use crate::examples::job::{BLOCK_140, PLAIN_RETURN, with_return};
 use crate::jobs;

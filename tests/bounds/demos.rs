@@ -40,6 +40,8 @@ fn results_and_pack_have_one_outcome() {
             let sheets = all
                 .sections
                 .iter()
+                // What is searched for the pack alone judges nothing.
+                .filter(|s| s.id != "margins")
                 .map(|s| (s.id.clone(), s.sheet.verdicts.clone(), s.sheet.unshown.clone()));
             sheets.collect::<Vec<_>>()
         };

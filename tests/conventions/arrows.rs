@@ -3,7 +3,7 @@
 use super::sources;
 
 /// The modules, each of which may use those before it. [`perpend`]'s crate doc says the same.
-const ORDER: [&str; 15] = [
+const ORDER: [&str; 16] = [
     "error",
     "quantity",
     "solve",
@@ -16,6 +16,7 @@ const ORDER: [&str; 15] = [
     "checks",
     "pack",
     "report",
+    "archive",
     "files",
     "many",
     "cli",
@@ -158,7 +159,7 @@ fn outside_fence(names: &[&str], may: impl Fn(&str) -> bool) -> Vec<String> {
 fn fences_hold() {
     let none: [&str; 0] = [];
     assert_eq!(outside_fence(&["typst::", "typst_", "use typst"], |f| f.starts_with("pack/")), none);
-    assert_eq!(outside_fence(&["clap::", "use clap"], |f| f == "cli/mod.rs"), none);
+    assert_eq!(outside_fence(&["clap::", "use clap"], |f| f.starts_with("cli/")), none);
     assert_eq!(
         outside_fence(&[" toml::", "(toml::", "<toml::", "use toml"], |f| f.starts_with("job/")),
         none

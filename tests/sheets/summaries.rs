@@ -22,8 +22,12 @@ fn text(c: &Client) -> String {
         format!("Summary for {}\n{}. {}.\n\n{}\n", c.client, c.title, c.address.join(", "), c.headline);
     for part in &c.parts {
         let _ = writeln!(out, "\n{}", part.title);
-        part.lines.iter().for_each(|line| drop(writeln!(out, "  {line}")));
-        part.steps.iter().for_each(|step| drop(writeln!(out, "  - {step}")));
+        for line in &part.lines {
+            let _ = writeln!(out, "  {line}");
+        }
+        for step in &part.steps {
+            let _ = writeln!(out, "  - {step}");
+        }
         if let Some(drawing) = &part.drawing {
             let _ = writeln!(out, "  [{}]", drawing["alt"].as_str().unwrap_or_default());
         }

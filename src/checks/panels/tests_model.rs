@@ -19,7 +19,7 @@ fn house() -> Building {
         chase: Length::ZERO,
         loaded,
     };
-    let made = Person { name: text(), letters: text(), qualification: None, date: text() };
+    let made = Person { name: text(), letters: text(), qualification: None, contact: None, date: text() };
     Building {
         identity: Identity {
             number: text(),

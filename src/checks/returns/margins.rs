@@ -67,7 +67,8 @@ pub fn course(i: &Inputs<'_>) -> Option<Course> {
     let (l, q) = (i.ret.length.base(), i.wind.overall.base());
     let part = |from: f64, to: f64, n: u32| from + (to - from) * f64::from(n) / f64::from(STEPS);
     let by_length = (0..=STEPS).map(|n| {
-        let l = l * part(0.6, 1.4, n);
+        // Even centimetres read better along an axis.
+        let l = (l * part(0.6, 1.4, n) / 10.0).round() * 10.0;
         (l, largest(i, Change { length: Some(Length::new(l)), ..Change::NONE }))
     });
     let by_wind = (0..=STEPS).map(|n| {
