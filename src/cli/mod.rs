@@ -3,6 +3,7 @@
 mod again;
 mod child;
 mod teach;
+mod watch;
 
 use std::io::Write as _;
 use std::path::{Path, PathBuf};
@@ -60,6 +61,12 @@ Examples:
   perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
 
 A pack that is there already is replaced as soon as the new one is whole.";
+
+const WATCH_EXAMPLES: &str = "\
+Example:
+  perpend watch rear-opening.toml      beside an editor and a PDF reader that follows its file
+
+A file that has an error is told as `check` tells it; the documents of before stay. Ctrl-C ends.";
 
 const COMPLETIONS_EXAMPLES: &str = "\
 Examples:
@@ -119,6 +126,18 @@ enum Command {
         /// Say where the time went
         #[arg(long)]
         times: bool,
+    },
+    /// Check and set a job again whenever its file is saved, and tell in one line what that changed
+    #[command(after_help = WATCH_EXAMPLES)]
+    Watch {
+        /// Job file
+        file: PathBuf,
+        /// Folder for the documents; beside the job file without it
+        #[arg(long, value_name = "FOLDER")]
+        into: Option<PathBuf>,
+        /// Write only one of the two: the pack, or the summary for the client
+        #[arg(long, value_name = "WHICH")]
+        only: Option<Only>,
     },
     /// Work the jobs inside packs again and say whether every printed result still stands
     #[command(after_help = RECHECK_EXAMPLES)]
@@ -186,6 +205,13 @@ pub fn run() -> u8 {
         Command::Start { file, plan } => start(&file, plan),
         Command::Check { files, json } => check_all(&files, json),
         Command::Sheet { files, into, only, times } => sheet_all(&files, into.as_deref(), only, times),
+        Command::Watch { file, into, only } => {
+            if let Some(Err(e)) = into.as_deref().map(files::folder) {
+                complain(&e);
+                return FAILED;
+            }
+            watch::watch(&file, into.as_deref(), only)
+        }
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
         Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
         Command::Checks => teach::checks(),
@@ -302,8 +328,7 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, only: Option<Only>, times: 
         let ended = result.unwrap_or_else(|panic| Err(Error::Internal { step: panic }.into()));
         let placed = ended.and_then(|(made, staged)| {
             staged.iter().try_for_each(|one| taken.take(&one.path, file))?;
-            let placed: Result<Vec<PathBuf>, Error> = staged.into_iter().map(files::Staged::place).collect();
-            Ok((placed?, made))
+            Ok((place(staged)?, made))
         });
         progress.aside(|| match placed {
             Ok((paths, made)) => {
@@ -401,6 +426,11 @@ impl Made {
         let staged = self.documents.iter_mut().map(one).collect::<Result<Vec<_>, Error>>()?;
         Ok((self, staged))
     }
+}
+
+/// Moves what is written to its place. Yields where it stands.
+fn place(staged: Vec<files::Staged>) -> Result<Vec<PathBuf>, Error> {
+    staged.into_iter().map(files::Staged::place).collect()
 }
 
 /// What the author of a job can do about a sentence that the client will find hard.

@@ -5,6 +5,7 @@ mod many;
 mod output;
 mod teach;
 mod trouble;
+mod watch;
 
 use std::path::Path;
 use std::process::{Command, Output};
