@@ -6,6 +6,7 @@ mod by_hand;
 mod demos;
 mod dpc;
 mod first_crack;
+mod first_crack_clamps;
 mod first_crack_laws;
 mod laws;
 mod moment_field;

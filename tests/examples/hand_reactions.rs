@@ -58,8 +58,8 @@ fn straps_get_what_the_panel_brings_where_that_is_more() {
     assert!(top > 1.3125);
 }
 
-/// A return that counts 0.1 m of front, 0.1 x 1.5 x 0.60 = 0.09 kN/m, gets more from a panel of 4 m: not silent, and not
-/// adequate. One that counts 4 m, 3.6 kN/m, does not: no panel of 4.2 kN/m in all brings more than half of it to a side.
+/// A return that counts 0.1 m of front gets more from a panel of 4 m: not silent, and not adequate. One that counts 4 m
+/// does not: no panel of 4 m in all brings more than that to a side.
 #[test]
 fn a_return_that_counts_less_than_a_panel_brings_fails_the_panel() {
     let short = section(&job("0.1 m", HELD), "P1");

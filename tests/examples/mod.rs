@@ -8,6 +8,7 @@ pub mod hand_diaphragm;
 pub mod hand_floor_edge;
 mod hand_footing;
 mod hand_frame;
+mod hand_neighbours;
 pub mod hand_openings;
 mod hand_panel;
 mod hand_pier;

@@ -31,4 +31,6 @@ mod tests;
 #[cfg(test)]
 mod tests_bracket;
 #[cfg(test)]
+mod tests_bracket_hand;
+#[cfg(test)]
 mod tests_model;

@@ -10,9 +10,9 @@ use crate::standards::annex::Annex;
 use crate::standards::masonry::Edge::{self, Continuous as C, Free as F, Simple as S};
 use crate::trace::Sheet;
 
-const HELD: [Edge; 4] = [S, S, S, S];
+pub(super) const HELD: [Edge; 4] = [S, S, S, S];
 
-fn window(at: f64, width: f64, frame: Frame) -> PanelOpening {
+pub(super) fn window(at: f64, width: f64, frame: Frame) -> PanelOpening {
     PanelOpening {
         at: Length::new(at),
         width: Length::new(width),
@@ -23,17 +23,17 @@ fn window(at: f64, width: f64, frame: Frame) -> PanelOpening {
     }
 }
 
-fn with_window(mut m: PanelModel, frame: Frame) -> PanelModel {
+pub(super) fn with_window(mut m: PanelModel, frame: Frame) -> PanelModel {
     let middle = m.after.length.base() / 2.0;
     m.after.openings = vec![window(middle - 600.0, 1200.0, frame)];
     m
 }
 
-fn by_limit(m: PanelModel) -> PanelModel {
+pub(super) fn by_limit(m: PanelModel) -> PanelModel {
     PanelModel { route: PanelRoute::LimitAnalysis, ..m }
 }
 
-fn value(s: &Sheet, name: &str) -> f64 {
+pub(super) fn value(s: &Sheet, name: &str) -> f64 {
     s.standing(name).map_or(f64::NAN, |v| v.value)
 }
 
