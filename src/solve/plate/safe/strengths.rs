@@ -45,3 +45,47 @@ fn continuous(plate: &Plate<'_>, rim: Rim) -> Option<(usize, f64)> {
         Held::Simple | Held::Free => None,
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::solve::plate::Stretch;
+    use crate::solve::plate::safe::mesh::mesh;
+
+    /// Bed joints that fall from 0.6 at the foot to 0.2 at the top, m_H 2; a base that brings more than the wall, a top
+    /// that brings 0.1. No triangle bears more than its weakest corner, and no clamp more than the wall beside it.
+    #[test]
+    fn a_triangle_bears_what_its_weakest_corner_bears() {
+        let whole = |held| vec![Stretch { from: 0.0, to: 1.0, held }];
+        let m_V = |_: f64, y: f64| 0.6 - 0.4 * y;
+        let plate = Plate {
+            l: 1.0,
+            h: 1.0,
+            openings: Vec::new(),
+            edges: [
+                whole(Held::Continuous(9.0)),
+                whole(Held::Simple),
+                whole(Held::Continuous(9.0)),
+                whole(Held::Weight(0.1)),
+            ],
+            m_H: 2.0,
+            m_V: &m_V,
+        };
+        let mesh = mesh(&plate, 0.25);
+        let found = strengths(&plate, &mesh);
+        for (triangle, bed) in mesh.triangles.iter().zip(&found.bed) {
+            let corners = triangle.nodes.map(|n| m_V(0.0, mesh.nodes[n][1]) / 2.0);
+            let weakest = corners.into_iter().fold(f64::INFINITY, f64::min);
+            assert!((bed - weakest).abs() < 1e-12, "{bed} of {corners:?}");
+            for &s in &triangle.sides {
+                let wanted = match mesh.sides[s].rim {
+                    Rim::Held { edge: 0, .. } => 1.0,
+                    Rim::Held { edge: 2, .. } => weakest,
+                    Rim::Held { edge: 3, .. } => 0.05,
+                    _ => 0.0,
+                };
+                assert!((found.clamp[s] - wanted).abs() < 1e-12, "{} for {wanted}", found.clamp[s]);
+            }
+        }
+    }
+}
