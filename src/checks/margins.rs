@@ -17,7 +17,7 @@ use crate::trace::{Column, Sheet, Table};
 /// The factors on material factors that are tried: as they are to three times, and how finely.
 const FACTOR: (f64, u32, f64) = (3.0, 40, 1e-3);
 /// The same where every step is a limit analysis.
-const COARSE: (f64, u32, f64) = (2.0, 5, 0.05);
+const COARSE: (f64, u32, f64) = (1.6, 3, 0.05);
 
 /// Classes of mortar from strong to weak; what a lime mortar bears is no class.
 const CLASSES: [Mortar; 4] = [Mortar::M12, Mortar::M6, Mortar::M4, Mortar::M2];
@@ -110,11 +110,10 @@ fn return_rows(job: &Job<'_>, r: &Return) -> Vec<Row> {
         }
         None => {}
     }
-    let again = |b: &Building| {
-        let job = Job { drawn: false, ..Job::new(b) };
-        b.returns.iter().find(|own| own.mark == r.mark).is_some_and(|r| holds(&job, r))
+    let passes = |job: &Job<'_>| {
+        job.building.returns.iter().find(|own| own.mark == r.mark).is_some_and(|r| holds(job, r))
     };
-    out.extend(materials(job.building, &r.build_up, FACTOR, &again));
+    out.extend(materials(job, &r.build_up, FACTOR, &passes));
     out
 }
 
@@ -146,27 +145,44 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
             if g.base() == 0.0 { "without any of it".to_owned() } else { format!("down to {}", line(g)) };
         out.push(row("dead load on the loaded leaf", line(m.leaves[loaded].G_above), to));
     }
-    let again = |b: &Building| {
-        let job = Job { drawn: false, ..Job::new(b) };
-        let model = b.panels.iter().find(|own| own.mark == p.mark).map(|p| panel_sheet::model(&job, p));
-        matches!(model, Some(Ok(m)) if of_panel::passes(&m, &job.annex))
+    let passes = |job: &Job<'_>| {
+        let own = job.building.panels.iter().find(|own| own.mark == p.mark);
+        matches!(own.map(|p| panel_sheet::model(job, p)), Some(Ok(m)) if of_panel::passes(&m, &job.annex))
     };
     // A limit analysis is worked at every step.
     let tried = if m.route == PanelRoute::LimitAnalysis { COARSE } else { FACTOR };
-    out.extend(materials(job.building, &p.build_up, tried, &again));
+    out.extend(materials(job, &p.build_up, tried, &passes));
     out
+}
+
+/// A job with another building of the same loads, wind and shares; what a return or a panel does not ask for is left out.
+fn like<'a>(job: &Job<'_>, building: &'a Building) -> Job<'a> {
+    Job {
+        building,
+        annex: job.annex.clone(),
+        wind: job.wind.clone(),
+        down: None,
+        storey: job.storey.clone(),
+        whole: Vec::new(),
+        piers: Vec::new(),
+        holds: Vec::new(),
+        failing: Vec::new(),
+        outside: Vec::new(),
+        drawn: false,
+    }
 }
 
 /// Material factors and mortar, each tried on a building that differs in them alone.
 fn materials(
-    b: &Building,
+    job: &Job<'_>,
     build_up: &str,
     tried: (f64, u32, f64),
-    passes: &dyn Fn(&Building) -> bool,
+    passes: &dyn Fn(&Job<'_>) -> bool,
 ) -> Vec<Row> {
+    let b = job.building;
     let mut out = Vec::new();
     let now = masonry::factors(&mut Sheet::silent(), b);
-    let at = |factor: f64| passes(&with_factor(b, &now, factor));
+    let at = |factor: f64| passes(&like(job, &with_factor(b, &now, factor)));
     let print = |factor: f64| {
         let one = |n: usize| format!("{:.2}", (now[n].0.base() * factor * 100.0).floor() / 100.0);
         format!("{}, {}, {}", one(0), one(1), one(2))
@@ -195,7 +211,7 @@ fn with_factor(b: &Building, now: &[(Num, String); 3], factor: f64) -> Building 
 }
 
 /// The weakest class of mortar down to which it passes, of all leaves of a wall together.
-fn mortar(b: &Building, build_up: &str, passes: &dyn Fn(&Building) -> bool) -> Option<Row> {
+fn mortar(b: &Building, build_up: &str, passes: &dyn Fn(&Job<'_>) -> bool) -> Option<Row> {
     let wall = b.build_up(build_up)?;
     let of_wall = |name: &str| wall.leaves.iter().any(|leaf| leaf.material == name);
     let own = b.materials.iter().filter(|m| of_wall(&m.name));
@@ -221,7 +237,14 @@ fn mortar(b: &Building, build_up: &str, passes: &dyn Fn(&Building) -> bool) -> O
         }
         other
     };
-    let reached = CLASSES[weakest + 1..].iter().take_while(|class| passes(&with(**class))).last();
+    let reached = CLASSES[weakest + 1..]
+        .iter()
+        .take_while(|class| {
+            // Mortar changes stiffness, and with it shares of the wind: the whole job is worked again.
+            let other = with(**class);
+            passes(&Job { drawn: false, ..Job::new(&other) })
+        })
+        .last();
     let to = match (reached, weakest + 1 == CLASSES.len()) {
         (Some(class), _) => format!("down to {class}"),
         (None, true) => "no weaker class is known".to_owned(),
