@@ -42,6 +42,7 @@ pub fn records(was: &Record, now: &Record) -> Differences {
     head("job number", &was.number, &now.number);
     head("title", &was.title, &now.title);
     head("revision", &was.revision, &now.revision);
+    head("status", &was.status, &now.status);
     head("outcome", &was.outcome, &now.outcome);
     results.extend(paired(&was.results, &now.results, |r| r.id.clone(), name, printed));
     let hold = |h: &crate::report::record::Hold| match h.closed.as_str() {

@@ -11,6 +11,7 @@ pub mod compare;
 pub mod pdf;
 
 use std::fmt;
+use std::path::Path;
 
 use crate::report::PROGRAM;
 use crate::report::record::{FORMAT, Record};
@@ -95,6 +96,12 @@ impl Rechecked {
     pub fn stands(&self) -> bool {
         self.same_job && self.differences.is_empty()
     }
+}
+
+/// The issued pack of another job file that stands at `path`, where one does: it must stay.
+pub fn issued_at(path: &Path, digest: &str) -> Option<Record> {
+    let bytes = std::fs::read(path).ok()?;
+    held(bytes).ok().map(|held| held.record).filter(|r| r.issued && r.job_digest != digest)
 }
 
 /// What travels inside a pack, `bytes` its file.

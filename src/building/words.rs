@@ -38,6 +38,13 @@ Status {
     AsBuilt = "as built",
 });
 
+impl Status {
+    /// Whether it goes out with that: a draft does not.
+    pub const fn issued(self) -> bool {
+        !matches!(self, Self::Preliminary | Self::Comment)
+    }
+}
+
 choice!(/// Wind route.
 WindRoute {
     /// Route 1.

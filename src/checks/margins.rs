@@ -159,7 +159,7 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
 fn like<'a>(job: &Job<'_>, building: &'a Building) -> Job<'a> {
     Job {
         building,
-        annex: job.annex.clone(),
+        annex: job.annex,
         wind: job.wind.clone(),
         down: None,
         storey: job.storey.clone(),

@@ -80,7 +80,7 @@ mod tests {
     #[test]
     fn half_an_answer_is_no_pack() {
         let header = br#"{"documents":[{"file_name":"1 Calculations (A).pdf","said":"3 sheets","size":4},
-            {"file_name":"1 Summary (A).pdf","said":"1 page","size":5}],"code":0,"remarks":[],"times":""}"#;
+            {"file_name":"1 Summary (A).pdf","said":"1 page","size":5}],"pack":"","digest":"","code":0,"remarks":[],"times":""}"#;
         let mut whole = (header.len() as u64).to_le_bytes().to_vec();
         whole.extend(header);
         whole.extend(b"%PDF%PDF2");

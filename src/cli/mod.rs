@@ -12,10 +12,12 @@ use std::time::{Duration, Instant};
 use anstyle::{Effects, Style};
 use clap::{CommandFactory as _, Parser, Subcommand};
 
+use crate::archive;
 use crate::checks::outcome::Outcome;
-use crate::error::Error;
+use crate::error::{Error, Trouble};
+use crate::report::record::Record;
 use crate::report::{lines, machine, plain};
-use crate::{check, draw, files, job, many, pack, sheet, summarise};
+use crate::{check, digest, draw, file_name, files, job, many, pack, sheet, summarise};
 
 /// Everything of every job is adequate.
 pub const ADEQUATE: u8 = 0;
@@ -60,7 +62,8 @@ Examples:
   perpend sheet rear-opening.toml           the pack beside the job file
   perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
 
-A pack that is there already is replaced as soon as the new one is whole.";
+A draft that is there already is replaced as soon as the new one is whole. A pack that was issued (its status is
+neither preliminary nor for comment) is never replaced by one of a changed job: give that the next revision.";
 
 const WATCH_EXAMPLES: &str = "\
 Example:
@@ -360,6 +363,10 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, only: Option<Only>, times: 
 #[derive(serde::Serialize, serde::Deserialize)]
 struct Made {
     documents: Vec<Document>,
+    /// The file name of its pack, whether it was set or not.
+    pack: String,
+    /// SHA-256 of the job file.
+    digest: String,
     /// The exit code it asks for.
     code: u8,
     /// What its author should see.
@@ -413,18 +420,36 @@ impl Made {
             documents.push(Document::new(made.file_name, said, made.typeset.pdf));
         }
         let spent = Spent { all: begin.elapsed(), setting };
-        Ok(Self { documents, code: code(results.outcome), remarks, times: spent.to_string() })
+        let (pack, digest) = (file_name(&building), digest(&text));
+        Ok(Self { documents, pack, digest, code: code(results.outcome), remarks, times: spent.to_string() })
     }
 
     /// Writes each document beside its place, so that it only has to be moved there.
     fn staged(mut self, file: &Path, into: Option<&Path>) -> Result<(Self, Vec<files::Staged>), Error> {
         let folder = into.or(file.parent()).unwrap_or(Path::new(""));
+        if let Some(issued) = archive::issued_at(&folder.join(&self.pack), &self.digest) {
+            return Err(stays(&folder.join(&self.pack), &issued));
+        }
         let one = |d: &mut Document| {
             let pdf = std::mem::take(&mut d.pdf);
             files::Staged::new(folder.join(&d.file_name), &pdf)
         };
         let staged = self.documents.iter_mut().map(one).collect::<Result<Vec<_>, Error>>()?;
         Ok((self, staged))
+    }
+}
+
+/// An issued pack is never overwritten.
+fn stays(path: &Path, issued: &Record) -> Error {
+    Error::File {
+        path: files::name(path),
+        trouble: Trouble::Content(format!(
+            "it is revision {} as issued, {}, and the job file has changed since",
+            issued.revision, issued.status
+        )),
+        help:
+            "Add the next letter under [[revisions]]; `perpend compare` says what changed since this issue."
+                .to_owned(),
     }
 }
 

@@ -27,6 +27,10 @@ pub struct Record {
     pub title: String,
     /// Letter of the revision; empty where there is none.
     pub revision: String,
+    /// What it is issued for: `for building control`.
+    pub status: String,
+    /// Whether it went out with that status: then nothing may stand in its place.
+    pub issued: bool,
     /// The outcome of the whole job in words.
     pub outcome: String,
     /// The results schedule.
@@ -102,6 +106,8 @@ pub fn of_job(b: &Building, results: &Results, digest: &str) -> Record {
         number: b.identity.number.clone(),
         title: b.identity.title.clone(),
         revision: b.revisions.last().map_or(String::new(), |r| r.letter.clone()),
+        status: b.identity.status.word().to_owned(),
+        issued: b.identity.status.issued(),
         outcome: results.outcome.words(),
         results: results.sections.iter().flat_map(schedule).map(row).collect(),
         hold_points: results

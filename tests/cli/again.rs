@@ -1,6 +1,6 @@
 //! `recheck` and `compare` as a person runs them.
 
-use super::{PACK, Place};
+use super::{PACK, Place, SUMMARY};
 use crate::jobs;
 
 #[test]
@@ -49,4 +49,43 @@ fn what_is_no_pack_is_refused_and_holds_up_no_other() {
     }
     assert_eq!(ran.err.matches("help:").count(), 3, "{}", ran.err);
     assert_eq!(place.run(&["compare", "x.pdf", "job.toml"]).code, 2);
+}
+
+/// A draft is replaced; what was issued stays as it went out, whatever is asked for.
+#[test]
+fn an_issued_pack_is_never_overwritten() {
+    let draft = jobs::START.to_owned();
+    let issued = draft.replacen("status = \"preliminary\"", "status = \"for building control\"", 1);
+    assert_ne!(draft, issued);
+    let changed = |text: &str| text.replacen("dead = \"18 kN\"", "dead = \"17 kN\"", 1);
+    let place = Place::with(&[("job.toml", &draft)]);
+    for text in [&draft, &changed(&draft), &issued] {
+        place.put("job.toml", text.as_bytes());
+        assert_ne!(place.run(&["sheet", "job.toml"]).code, 2);
+    }
+    let (pack, summary) = (place.get(PACK), place.get(SUMMARY));
+    assert_eq!(place.run(&["sheet", "job.toml"]).code, 0, "the same job gives the same pack");
+
+    place.put("job.toml", changed(&issued).as_bytes());
+    for args in [
+        &["sheet", "job.toml"][..],
+        &["sheet", "--only", "summary", "job.toml"],
+        &["sheet", "job.toml", "job.toml"],
+    ] {
+        let ran = place.run(args);
+        assert_eq!(ran.code, 2, "{args:?}: {}", ran.out);
+        for words in ["is revision A as issued, for building control", "next letter under [[revisions]]"] {
+            assert!(ran.err.contains(words), "{words} is not in {}", ran.err);
+        }
+        assert!(place.get(PACK) == pack && place.get(SUMMARY) == summary, "{args:?}");
+    }
+    // Back to a draft in the job file does not free its place either.
+    place.put("job.toml", changed(&draft).as_bytes());
+    assert_eq!(place.run(&["sheet", "job.toml"]).code, 2);
+
+    let next = changed(&issued).replacen("letter = \"A\"", "letter = \"B\"", 1);
+    place.put("job.toml", next.as_bytes());
+    assert_eq!(place.run(&["sheet", "job.toml"]).code, 0);
+    assert!(place.get(PACK) == pack);
+    assert!(place.list().contains(&"2419 Calculations (B).pdf".to_owned()), "{:?}", place.list());
 }
