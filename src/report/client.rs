@@ -200,7 +200,7 @@ fn plainly(b: &Building, h: &Hold) -> String {
         About::Class => "your engineer must show that the house meets the rules against collapse.".to_owned(),
         About::House => "your engineer must show how the house as a whole stands against wind.".to_owned(),
         About::BeamEnds => "what the ends of the new beams rest on must still be worked out.".to_owned(),
-        About::Panel => "the outer wall must be opened up in places, and what is inside seen.".to_owned(),
+        About::Panel => "what the outer wall is made of, and what holds it, must be seen.".to_owned(),
         About::Plan => {
             "what holds the outer walls was taken from the plan. It must be seen on site.".to_owned()
         }
