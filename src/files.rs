@@ -22,28 +22,21 @@ fn content(file: &Path, what: &str, help: &str) -> Error {
     trouble(file, Trouble::Content(what.to_owned()), help)
 }
 
+/// Largest pack that is read, bytes.
+const LARGEST_PACK: u64 = 512 << 20;
+
 /// The text of a job file.
 ///
 /// # Errors
 /// [`Error::File`] where it is not there, a folder, not UTF-8 or too large.
 pub fn read(file: &Path) -> Result<String, Error> {
-    const HELP: &str = "Check the spelling of the path; 'perpend start' writes a job to begin from.";
-    if file.is_dir() {
-        return Err(content(file, "it is a folder", "Name the job files in it: folder/*.toml."));
-    }
-    let mut bytes = Vec::new();
-    std::fs::File::open(file)
-        .and_then(|open| open.take(LARGEST + 1).read_to_end(&mut bytes))
-        .map_err(|why| trouble(file, Trouble::Read(why), HELP))?;
-    if bytes.len() as u64 > LARGEST {
-        return Err(content(file, "it is larger than any job file", HELP));
-    }
-    String::from_utf8(bytes)
+    let helps = [
+        "Check the spelling of the path; 'perpend start' writes a job to begin from.",
+        "Name the job files in it: folder/*.toml.",
+    ];
+    String::from_utf8(whole(file, LARGEST, "job file", helps)?)
         .map_err(|_| content(file, "it is not UTF-8 text", "Save the job file as UTF-8 in a text editor."))
 }
-
-/// Largest pack that is read, bytes.
-const LARGEST_PACK: u64 = 512 << 20;
 
 /// The bytes of a pack.
 ///
@@ -51,15 +44,20 @@ const LARGEST_PACK: u64 = 512 << 20;
 /// [`Error::File`] where it is not there, a folder, or too large.
 pub fn read_pack(file: &Path) -> Result<Vec<u8>, Error> {
     const HELP: &str = "Name a pack that 'perpend sheet' wrote.";
+    whole(file, LARGEST_PACK, "pack", [HELP, HELP])
+}
+
+/// All bytes of a file of at most `largest`; `helps` says what to do about it, and about a folder of that name.
+fn whole(file: &Path, largest: u64, kind: &str, helps: [&str; 2]) -> Result<Vec<u8>, Error> {
     if file.is_dir() {
-        return Err(content(file, "it is a folder", HELP));
+        return Err(content(file, "it is a folder", helps[1]));
     }
     let mut bytes = Vec::new();
     std::fs::File::open(file)
-        .and_then(|open| open.take(LARGEST_PACK + 1).read_to_end(&mut bytes))
-        .map_err(|why| trouble(file, Trouble::Read(why), HELP))?;
-    if bytes.len() as u64 > LARGEST_PACK {
-        return Err(content(file, "it is larger than any pack", HELP));
+        .and_then(|open| open.take(largest + 1).read_to_end(&mut bytes))
+        .map_err(|why| trouble(file, Trouble::Read(why), helps[0]))?;
+    if bytes.len() as u64 > largest {
+        return Err(content(file, &format!("it is larger than any {kind}"), helps[0]));
     }
     Ok(bytes)
 }

@@ -119,13 +119,20 @@ pub fn summarise(building: &Building, results: &Results, text: &str) -> Result<S
 /// pack cannot be set.
 pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let (building, results) = draw(name, text)?;
-    let digest = digest(text);
-    let data = report::pack(&building, &results, text, &digest);
-    let files = photographs(&building, folder)?;
-    let typeset =
-        pack::typeset(data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })?;
+    let typeset = set(&building, &results, text, folder)?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
+}
+
+/// Sets the pack of a job that was checked and drawn; `text` is its job file.
+///
+/// # Errors
+/// As [`sheet`], where photographs or the pack are at fault.
+pub fn set(building: &Building, results: &Results, text: &str, folder: &Path) -> Result<Typeset, Error> {
+    let digest = digest(text);
+    let data = report::pack(building, results, text, &digest);
+    let files = photographs(building, folder)?;
+    pack::typeset(data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })
 }
 
 /// The photographs of a job, each with the name by which its pack calls it, turned upright and scaled to print.

@@ -98,10 +98,16 @@ impl Rechecked {
     }
 }
 
-/// The issued pack of another job file that stands at `path`, where one does: it must stay.
-pub fn issued_at(path: &Path, digest: &str) -> Option<Record> {
+/// The issued pack at `path` that is not the one about to be written: it must stay. `digest` is that of the job file,
+/// `pdf` the new pack; where only the summary is written there is none, and job and program must be the same.
+pub fn issued_at(path: &Path, digest: &str, pdf: Option<&[u8]>) -> Option<Record> {
     let bytes = std::fs::read(path).ok()?;
-    held(bytes).ok().map(|held| held.record).filter(|r| r.issued && r.job_digest != digest)
+    if pdf == Some(bytes.as_slice()) {
+        return None;
+    }
+    let record = held(bytes).ok()?.record;
+    let same = pdf.is_none() && record.job_digest == digest && record.version == PROGRAM.1;
+    (record.issued && !same).then_some(record)
 }
 
 /// What travels inside a pack, `bytes` its file.

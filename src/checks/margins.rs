@@ -4,12 +4,12 @@
 //! rounded to the side that fails first. What fails as it is has its remedies on its own sheet.
 
 use super::panels::remedy as of_panel;
-use super::returns::build::Inputs;
+use super::returns::build::{Change, Inputs};
 use super::returns::{margins as of_return, remedy as passes_of_return};
 use super::{Job, Section, masonry, panel_sheet};
 use crate::building::{Building, Cause, Panel, PanelRoute, Return};
 use crate::quantity::print::show;
-use crate::quantity::{Force, Length, Num, Stress};
+use crate::quantity::{Force, Length, LineLoad, Num, Stress};
 use crate::solve::root;
 use crate::standards::masonry::Mortar;
 use crate::trace::{Column, Sheet, Table};
@@ -71,8 +71,8 @@ fn all(why: &str) -> Vec<Row> {
 }
 
 fn holds(job: &Job<'_>, r: &Return) -> bool {
-    let none = super::returns::build::Change::NONE;
-    job.wind.as_ref().is_ok_and(|wind| passes_of_return::passes(&Inputs::new(job, r, wind), none))
+    let passes = |wind| passes_of_return::passes(&Inputs::new(job, r, wind), Change::NONE);
+    job.wind.as_ref().is_ok_and(passes)
 }
 
 fn return_rows(job: &Job<'_>, r: &Return) -> Vec<Row> {
@@ -137,13 +137,15 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
         let more = if end { " and more" } else { "" };
         out.push(row("length, added at its right end", mm(m.after.length), format!("up to {}{more}", mm(l))));
     }
-    let loaded = m.loaded();
-    let given = m.leaves[loaded].G_above > crate::quantity::LineLoad::ZERO;
-    if let Some(g) = of_panel::least_dead(&m, &job.annex).filter(|_| given) {
-        let line = |g: crate::quantity::LineLoad| show("g", g.dynamic()).to_string();
-        let to =
-            if g.base() == 0.0 { "without any of it".to_owned() } else { format!("down to {}", line(g)) };
-        out.push(row("dead load on the loaded leaf", line(m.leaves[loaded].G_above), to));
+    let given = m.leaves[m.loaded()].G_above;
+    if given > LineLoad::ZERO {
+        let line = |g: LineLoad| show("g", g.dynamic()).to_string();
+        let to = match of_panel::dead_down_to(&m, &job.annex) {
+            Some(LineLoad::ZERO) => "without any of it".to_owned(),
+            Some(g) => format!("down to {}", line(g)),
+            None => line(given),
+        };
+        out.push(row("dead load on the loaded leaf", line(given), to));
     }
     let passes = |job: &Job<'_>| {
         let own = job.building.panels.iter().find(|own| own.mark == p.mark);
@@ -184,7 +186,8 @@ fn materials(
     let now = masonry::factors(&mut Sheet::silent(), b);
     let at = |factor: f64| passes(&like(job, &with_factor(b, &now, factor)));
     let print = |factor: f64| {
-        let one = |n: usize| format!("{:.2}", (now[n].0.base() * factor * 100.0).floor() / 100.0);
+        // Rounded down, save what is a hundredth already.
+        let one = |n: usize| format!("{:.2}", (now[n].0.base() * factor * 100.0 + 1e-6).floor() / 100.0);
         format!("{}, {}, {}", one(0), one(1), one(2))
     };
     let (end, steps, precision) = tried;

@@ -2,7 +2,7 @@
 
 use super::panels::bracket::Effort;
 use super::panels::{self, PanelModel};
-use super::{Job, Section, masonry, panel_cracks, panel_passes, panel_views};
+use super::{Job, Section, masonry, panel_brings, panel_cracks, panel_views};
 use crate::building::{Building, Edge as Held, Panel, Return};
 use crate::sketch::Wind;
 use crate::standards::masonry::Edge;
@@ -31,7 +31,7 @@ fn section(job: &Job<'_>, p: &Panel) -> Section {
             sheet.drawings(&[&name("before"), &name("after")]);
             leaning(job, p, &mut sheet);
             panels::check(&mut sheet, &m, &job.annex);
-            panel_passes::on(job, p, &m, &mut sheet);
+            panel_brings::to_returns(job, p, &m, &mut sheet);
             // After the check, which has the leaves analysed on all cores: here they are only remembered.
             let cracks = job.drawings(|| panel_cracks::drawings(p, &m, &job.annex));
             super::named(&mut sheet, &cracks);
@@ -84,7 +84,7 @@ fn leaning(job: &Job<'_>, p: &Panel, s: &mut Sheet) {
 }
 
 /// The model of a panel, strengths derived silently: they stand on the materials sheet.
-pub(super) fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
+pub fn model(job: &Job<'_>, p: &Panel) -> Result<PanelModel, Outside> {
     let b = job.building;
     let wind = job.wind.clone()?;
     let missing = || Outside::new("build-up", "job file", "the build-up is not given");

@@ -77,19 +77,12 @@ struct Side {
 pub fn compare_two(old: &Path, new: &Path, working: bool) -> u8 {
     let paths = [old.to_owned(), new.to_owned()];
     let mut sides: Vec<Side> = Vec::new();
-    let mut failed = false;
     let take = |_: &PathBuf, result| match internal::<Side>(result) {
         Ok(side) => sides.push(side),
-        Err(e) => {
-            failed = true;
-            complain(&e);
-        }
+        Err(e) => complain(&e),
     };
     many::in_order(&paths, |file: &PathBuf| side(file), take, || {});
     let [was, now] = sides.as_slice() else { return FAILED };
-    if failed {
-        return FAILED;
-    }
     let inputs = compare::lines(&was.job, &now.job);
     let changed = compare::records(&was.record, &now.record);
     if inputs.is_empty() && changed.is_empty() {

@@ -7,7 +7,9 @@ use std::io::{IsTerminal as _, Write as _};
 use std::path::Path;
 use std::process::{Command, Stdio};
 
-use super::{FAILED, Made, Only, Stopped, complain};
+use super::flags::Only;
+use super::made::{Made, Stopped};
+use super::{FAILED, complain};
 use crate::error::Error;
 use crate::many;
 

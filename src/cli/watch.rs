@@ -3,9 +3,11 @@
 use std::io::Write as _;
 use std::path::Path;
 use std::thread;
-use std::time::{Duration, SystemTime};
+use std::time::{Duration, Instant, SystemTime};
 
-use super::{FAILED, Made, Only, complain, place};
+use super::flags::Only;
+use super::made::{Made, place};
+use super::{FAILED, complain};
 use crate::archive::compare::{self, Change, Differences};
 use crate::error::Error;
 use crate::report::record::{self, Record};
@@ -57,6 +59,7 @@ fn once(
     only: Option<Only>,
     before: Option<&Record>,
 ) -> Result<Record, Error> {
+    let begin = Instant::now();
     let text = files::read(file)?;
     let (building, results) = draw(&files::name(file), &text)?;
     let record = record::of_job(&building, &results, &digest(&text));
@@ -64,7 +67,7 @@ fn once(
         None => format!("{}; watching {}, Ctrl-C ends", record.outcome, file.display()),
         Some(before) => format!("{}; {}", record.outcome, told(&compare::records(before, &record))),
     });
-    let made = Made::here(file, only)?;
+    let made = Made::of(file, &text, (&building, &results), only, begin)?;
     let (made, staged) = made.staged(file, into)?;
     for (path, document) in place(staged)?.iter().zip(&made.documents) {
         say(&format!("  {}: {}", path.display(), document.said));

@@ -7,7 +7,7 @@ use super::front::list;
 use super::{PROGRAM, grouped};
 use crate::building::{Building, Return};
 use crate::checks::outcome::{About, Hold, Outcome};
-use crate::checks::{Results, outcome, plan};
+use crate::checks::{Results, Section, outcome, plan};
 use crate::job::date_in_words;
 use crate::pack::data::{self, Client, Part};
 use crate::sketch::text::capital;
@@ -97,18 +97,18 @@ fn does(b: &Building) -> Vec<String> {
 
 fn found(b: &Building, results: &Results) -> Vec<String> {
     let mut out = Vec::new();
-    let name = |s: &crate::checks::Section| if s.mark.is_empty() { s.title.clone() } else { s.mark.clone() };
-    let failing: Vec<String> =
-        results.sections.iter().filter(|s| !outcome::holds_all(&s.sheet)).map(name).collect();
-    let outside: Vec<String> =
-        results.sections.iter().filter(|s| !s.sheet.outside.is_empty()).map(name).collect();
+    let which = |chosen: &dyn Fn(&Section) -> bool| -> Vec<String> {
+        results.sections.iter().filter(|s| chosen(s)).map(named).collect()
+    };
+    let failing = which(&|s| !outcome::holds_all(&s.sheet));
+    let outside = which(&|s| !s.sheet.outside.is_empty());
     if !failing.is_empty() {
         out.push("Some parts do not pass our checks. They are these:".to_owned());
-        out.extend(failing.iter().map(|f| format!("Not enough: {}.", title(results, f))));
+        out.extend(failing.iter().map(|f| format!("Not enough: {f}.")));
     }
     if !outside.is_empty() {
         out.push("Some parts cannot be judged by the method that we use. They are these:".to_owned());
-        out.extend(outside.iter().map(|f| format!("Not judged: {}.", title(results, f))));
+        out.extend(outside.iter().map(|f| format!("Not judged: {f}.")));
     }
     match results.outcome {
         Outcome::Adequate => out.push(
@@ -129,10 +129,9 @@ fn found(b: &Building, results: &Results) -> Vec<String> {
     out
 }
 
-/// A thing by its mark and its title.
-fn title(results: &Results, mark: &str) -> String {
-    let section = results.sections.iter().find(|s| s.mark == mark);
-    section.map_or_else(|| mark.to_owned(), |s| format!("{mark}, {}", lower(&s.title)))
+/// A thing by its mark and its title, or by its title alone.
+fn named(s: &Section) -> String {
+    if s.mark.is_empty() { lower(&s.title) } else { format!("{}, {}", s.mark, lower(&s.title)) }
 }
 
 fn lower(words: &str) -> String {
@@ -248,6 +247,7 @@ fn steps(b: &Building, results: &Results) -> Vec<String> {
 
 fn not_covered() -> Vec<String> {
     [
+        "The new beam itself. It needs calculations of its own.",
         "Props and other temporary support while the work goes on.",
         "Cracks, damp, decay or other damage that could not be seen.",
         "Fire, escape, drains, wiring, gas and asbestos.",

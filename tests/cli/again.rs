@@ -89,3 +89,25 @@ fn an_issued_pack_is_never_overwritten() {
     assert!(place.get(PACK) == pack);
     assert!(place.list().contains(&"2419 Calculations (B).pdf".to_owned()), "{:?}", place.list());
 }
+
+/// Another version of the program may make another pack of the same job: it does not overwrite one that was issued either.
+#[test]
+fn another_version_does_not_overwrite_an_issued_pack() {
+    let text = jobs::START.replacen("status = \"preliminary\"", "status = \"for construction\"", 1);
+    let (b, results) = perpend::draw("job.toml", &text).expect("a valid job");
+    let mut data = perpend::report::pack(&b, &results, &text, &perpend::digest(&text));
+    data.record = data.record.replacen(
+        &format!("\"version\": \"{}\"", env!("CARGO_PKG_VERSION")),
+        "\"version\": \"0.0.9\"",
+        1,
+    );
+    let old = perpend::pack::typeset(data, &[], "another").expect("a pack").pdf;
+    let place = Place::with(&[("job.toml", &text)]);
+    place.put(PACK, &old);
+    for args in [&["sheet", "job.toml"][..], &["sheet", "--only", "summary", "job.toml"]] {
+        let ran = place.run(args);
+        assert_eq!(ran.code, 2, "{args:?}");
+        assert!(ran.err.contains("this version of the program"), "{}", ran.err);
+    }
+    assert!(place.get(PACK) == old && !place.list().contains(&SUMMARY.to_owned()));
+}

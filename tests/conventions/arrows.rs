@@ -26,8 +26,8 @@ const ORDER: [&str; 16] = [
 const MACROS: [&str; 8] = ["calc", "decide", "found", "given", "lookup", "require", "symbols", "verify"];
 
 /// `lib.rs` is the pipeline: above nothing but the command line.
-const PIPELINE: [&str; 8] =
-    ["check", "digest", "draw", "file_name", "recheck", "sheet", "Sheeted", "summarise"];
+const PIPELINE: [&str; 9] =
+    ["check", "digest", "draw", "file_name", "recheck", "set", "sheet", "Sheeted", "summarise"];
 
 fn place(module: &str) -> Option<usize> {
     ORDER.iter().position(|m| *m == module)

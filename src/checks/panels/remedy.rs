@@ -139,6 +139,23 @@ pub fn least_dead(m: &PanelModel, annex: &Annex) -> Option<LineLoad> {
         .map(|g| LineLoad::new((g / digits_step(g)).ceil() * digits_step(g)))
 }
 
+/// The dead load on the loaded leaf down to which a panel passes without a gap, from what it has; `None` where it does
+/// not pass with that.
+pub fn dead_down_to(m: &PanelModel, annex: &Annex) -> Option<LineLoad> {
+    let i = m.loaded();
+    let given = m.leaves[i].G_above.base();
+    let at = |less: f64| {
+        let mut lighter = m.clone();
+        lighter.leaves[i].G_above = LineLoad::new(given - less);
+        passes(&lighter, annex)
+    };
+    let (steps, part) = if m.route == PanelRoute::LimitAnalysis { (4, 20.0) } else { (40, 1000.0) };
+    let left = given - greatest(at, 0.0, given, steps, given / part)?;
+    // Rounded up: a little more load than the least that passes.
+    let step = digits_step(left);
+    Some(LineLoad::new(((left / step).ceil() * step).min(given)))
+}
+
 /// Simple edges that would do it if one of them alone were continuous, by name.
 pub fn continuous_edges(m: &PanelModel, annex: &Annex) -> Vec<&'static str> {
     let names = ["top", "base", "left", "right"];

@@ -6,14 +6,15 @@ use super::remedy;
 use super::run::prepare;
 use crate::quantity::{Force, Length, Stress};
 use crate::solve::root;
+use crate::trace::Sheet;
 
 /// The largest use of a return with `change` over every check and case; `None` outside a clause.
 pub fn largest(i: &Inputs<'_>, change: Change) -> Option<f64> {
-    let mut s = crate::trace::Sheet::silent();
+    let mut s = Sheet::silent();
     let all = models(&mut s, i, change).ok()?;
     let mut most: f64 = 0.0;
     for m in &all {
-        let mut s = crate::trace::Sheet::silent();
+        let mut s = Sheet::silent();
         let ready = prepare(&mut s, m, i.annex)?;
         if !s.outside.is_empty() {
             return None;
@@ -26,11 +27,14 @@ pub fn largest(i: &Inputs<'_>, change: Change) -> Option<f64> {
     Some(most)
 }
 
+/// Shorter lengths are not tried, mm.
+const SHORTEST: f64 = 100.0;
+
 /// The shortest length down to which it passes without a gap, to the millimetre, rounded up.
 pub fn shortest(i: &Inputs<'_>) -> Option<Length> {
     let own = i.ret.length.base();
     let at = |less: f64| remedy::passes(i, Change { length: Some(Length::new(own - less)), ..Change::NONE });
-    root::greatest(at, 0.0, own - 100.0, 160, 0.2).map(|less| Length::new((own - less).ceil()))
+    root::greatest(at, 0.0, (own - SHORTEST).max(0.0), 160, 0.2).map(|less| Length::new((own - less).ceil()))
 }
 
 /// The greatest net overall pressure up to which it passes, and whether that is merely the end of the search.

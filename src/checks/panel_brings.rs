@@ -24,7 +24,7 @@ struct Share {
 
 /// What limit analysis brings to the returns that hold the ends of panel `p`, with what its neighbour brings there, against
 /// the width that the sheets of the returns count: a note, or a row of the results where it is more.
-pub fn on(job: &Job<'_>, p: &Panel, m: &PanelModel, s: &mut Sheet) {
+pub fn to_returns(job: &Job<'_>, p: &Panel, m: &PanelModel, s: &mut Sheet) {
     let Some(all) = reactions::of(m, &job.annex) else { return };
     for r in named(job, p).filter(|r| r.path != Path::UpAndDown) {
         let own = shares(job, p, m, Some(&all), r);

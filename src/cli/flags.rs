@@ -1,0 +1,173 @@
+//! Commands and flags, with the help that teaches them.
+
+use std::path::PathBuf;
+
+use clap::{Parser, Subcommand};
+
+/// Calculation packs for masonry that stays when a load-bearing wall comes out.
+///
+/// Reads job files (TOML), checks the returns and panels that stay and the beams' bearings that
+/// the job gives, and typesets a calculation pack as PDF.
+#[derive(Parser)]
+#[command(name = "perpend", version, arg_required_else_help = true, after_help = EXAMPLES)]
+pub(super) struct Flags {
+    #[command(subcommand)]
+    pub(super) command: Command,
+}
+
+const EXAMPLES: &str = "\
+Examples:
+  perpend start rear-opening.toml        write a commented job to begin from
+  perpend check rear-opening.toml        print the results
+  perpend sheet rear-opening.toml        write the pack, '2419 Calculations (A).pdf'
+  perpend check --json jobs/*.toml       results of several jobs, for other programs
+
+Exit codes: 0 adequate; 1 not adequate, outside the method, or conditional on hold points; 2 error.
+A pack is worth nothing unsigned: read it, check it, sign it.";
+
+const START_EXAMPLES: &str = "\
+Examples:
+  perpend start rear-opening.toml      every entry, each with a remark
+  perpend start --plan kitchen.toml    walls, floors and beams as a plan; loads and spans found on it";
+
+const CHECK_EXAMPLES: &str = "\
+Examples:
+  perpend check rear-opening.toml
+  perpend check --json rear-opening.toml    the results for other programs";
+
+const SHEET_EXAMPLES: &str = "\
+Examples:
+  perpend sheet rear-opening.toml           the pack beside the job file
+  perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
+
+A draft that is there already is replaced as soon as the new one is whole. A pack that was issued (its status is
+neither preliminary nor for comment) is never replaced by one of a changed job: give that the next revision.";
+
+const WATCH_EXAMPLES: &str = "\
+Example:
+  perpend watch rear-opening.toml      beside an editor and a PDF reader that follows its file
+
+A file that has an error is told as `check` tells it; the documents of before stay. Ctrl-C ends.";
+
+const COMPLETIONS_EXAMPLES: &str = "\
+Examples:
+  perpend completions bash > ~/.local/share/bash-completion/completions/perpend
+  perpend completions zsh > ~/.zfunc/_perpend";
+
+const RECHECK_EXAMPLES: &str = "\
+Examples:
+  perpend recheck '2419 Calculations (A).pdf'
+  perpend recheck --working packs/*.pdf
+
+A pack carries its job file and all that it prints as data; the job is worked again from there. What stands on paper
+is the same while the digest at the foot of its sheets is the one that this command prints.
+
+Exit codes: 0 everything stands; 1 something does not; 2 a file is no pack, or cannot be worked.";
+
+const COMPARE_EXAMPLES: &str = "\
+Examples:
+  perpend compare '2419 Calculations (A).pdf' rear-opening.toml    since revision A was issued
+  perpend compare rear-opening.toml rear-opening-2.toml
+
+Exit codes: 0 alike; 1 something changed; 2 error.";
+
+#[derive(Subcommand)]
+pub(super) enum Command {
+    /// Write a commented job file that is already a complete invented job
+    #[command(after_help = START_EXAMPLES)]
+    Start {
+        /// Where to write it; an existing file is left alone
+        file: PathBuf,
+        /// A shorter job, worked from a plan of its walls, floors and beams, in place of one with every entry by hand
+        #[arg(long)]
+        plan: bool,
+    },
+    /// Check jobs and print the results
+    #[command(after_help = CHECK_EXAMPLES)]
+    Check {
+        /// Job files
+        #[arg(required = true)]
+        files: Vec<PathBuf>,
+        /// Print the results as JSON, one array entry a file
+        #[arg(long)]
+        json: bool,
+    },
+    /// Check jobs and write their packs and a summary for the client as PDF
+    #[command(after_help = SHEET_EXAMPLES)]
+    Sheet {
+        /// Job files
+        #[arg(required = true)]
+        files: Vec<PathBuf>,
+        /// Folder for the packs, made where it is not there; beside each job file without it
+        #[arg(long, value_name = "FOLDER")]
+        into: Option<PathBuf>,
+        /// Write only one of the two: the pack, or the summary for the client
+        #[arg(long, value_name = "WHICH")]
+        only: Option<Only>,
+        /// Say where the time went
+        #[arg(long)]
+        times: bool,
+    },
+    /// Check and set a job again whenever its file is saved, and tell in one line what that changed
+    #[command(after_help = WATCH_EXAMPLES)]
+    Watch {
+        /// Job file
+        file: PathBuf,
+        /// Folder for the documents; beside the job file without it
+        #[arg(long, value_name = "FOLDER")]
+        into: Option<PathBuf>,
+        /// Write only one of the two: the pack, or the summary for the client
+        #[arg(long, value_name = "WHICH")]
+        only: Option<Only>,
+    },
+    /// Work the jobs inside packs again and say whether every printed result still stands
+    #[command(after_help = RECHECK_EXAMPLES)]
+    Recheck {
+        /// Packs, as `sheet` wrote them
+        #[arg(required = true)]
+        packs: Vec<PathBuf>,
+        /// Print every line of working that changed, not only how many did
+        #[arg(long)]
+        working: bool,
+    },
+    /// Say what changed between two job files or packs
+    #[command(after_help = COMPARE_EXAMPLES)]
+    Compare {
+        /// The earlier one, a job file or a pack
+        old: PathBuf,
+        /// The later one
+        new: PathBuf,
+        /// Print every line of working that changed, not only how many did
+        #[arg(long)]
+        working: bool,
+    },
+    /// List every check with its clause
+    Checks,
+    /// Print completions for a shell
+    #[command(after_help = COMPLETIONS_EXAMPLES)]
+    Completions {
+        /// The shell
+        shell: clap_complete::Shell,
+    },
+    /// Print the manual in the format of `man`
+    #[command(after_help = "Example:\n  perpend manual > perpend.1 && man ./perpend.1")]
+    Manual,
+    /// Set one job and hand the pack back on standard output; `sheet` of several files starts these
+    #[command(hide = true)]
+    Set {
+        /// Job file
+        file: PathBuf,
+        /// Only one of the two
+        #[arg(long)]
+        only: Option<Only>,
+    },
+}
+
+/// One of the two documents.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, clap::ValueEnum)]
+pub(super) enum Only {
+    /// The calculation pack
+    Pack,
+    /// The summary for the client
+    Summary,
+}
