@@ -4,10 +4,17 @@ use std::collections::HashMap;
 use std::io::{Read as _, Write as _};
 use std::path::{Path, PathBuf};
 
+use sha2::{Digest as _, Sha256};
+
 use crate::error::{Error, Trouble};
 
 /// Largest job file, bytes: a thousand times a long one.
 const LARGEST: u64 = 16 << 20;
+
+/// SHA-256 of a file's text, in hexadecimal.
+pub fn digest(text: &str) -> String {
+    Sha256::digest(text.as_bytes()).iter().map(|b| format!("{b:02x}")).collect()
+}
 
 /// A path as it is shown.
 pub fn name(file: &Path) -> String {
@@ -34,8 +41,61 @@ pub fn read(file: &Path) -> Result<String, Error> {
         "Check the spelling of the path; 'perpend start' writes a job to begin from.",
         "Name the job files in it: folder/*.toml.",
     ];
-    String::from_utf8(whole(file, LARGEST, "job file", helps)?)
-        .map_err(|_| content(file, "it is not UTF-8 text", "Save the job file as UTF-8 in a text editor."))
+    text(file, "job file", helps)
+}
+
+/// The text of a practice file.
+///
+/// # Errors
+/// As [`read`].
+pub fn read_practice(file: &Path) -> Result<String, Error> {
+    const HELP: &str =
+        "Check the spelling of the path; 'perpend start --practice' writes a practice file to begin from.";
+    text(file, "practice file", [HELP, HELP])
+}
+
+fn text(file: &Path, kind: &str, helps: [&str; 2]) -> Result<String, Error> {
+    String::from_utf8(whole(file, LARGEST, kind, helps)?)
+        .map_err(|_| content(file, "it is not UTF-8 text", "Save it as UTF-8 in a text editor."))
+}
+
+/// The bytes of a file that a job or a practice names, at most `largest`.
+///
+/// # Errors
+/// [`Error::File`] where it is not there, a folder, or too large.
+pub fn read_named(file: &Path, largest: u64, kind: &str, help: &str) -> Result<Vec<u8>, Error> {
+    whole(file, largest, kind, [help, help])
+}
+
+/// Every file in a folder and below, its path with `/` between folders and its bytes, in the order of the paths.
+/// Hidden files are passed over; links are not followed.
+///
+/// # Errors
+/// [`Error::File`] where the folder cannot be read, or holds more than `most` files, or one larger than `largest`.
+pub fn folder_of(folder: &Path, most: usize, largest: u64, help: &str) -> Result<Vec<(String, Vec<u8>)>, Error> {
+    let mut out = Vec::new();
+    let mut waiting = vec![(folder.to_owned(), String::new())];
+    while let Some((here, path)) = waiting.pop() {
+        let listed = std::fs::read_dir(&here).and_then(Iterator::collect::<std::io::Result<Vec<_>>>);
+        for entry in listed.map_err(|why| trouble(&here, Trouble::Read(why), help))? {
+            let Ok(name) = entry.file_name().into_string() else { continue };
+            let kind = entry.file_type().map_err(|why| trouble(&entry.path(), Trouble::Read(why), help))?;
+            if name.starts_with('.') || kind.is_symlink() {
+                continue;
+            }
+            let path = if path.is_empty() { name } else { format!("{path}/{name}") };
+            if kind.is_dir() {
+                waiting.push((entry.path(), path));
+            } else {
+                out.push((path, whole(&entry.path(), largest, "file of a practice", [help, help])?));
+            }
+            if out.len() + waiting.len() > most {
+                return Err(content(folder, &format!("it holds more than {most} files"), help));
+            }
+        }
+    }
+    out.sort();
+    Ok(out)
 }
 
 /// The bytes of a pack.

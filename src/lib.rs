@@ -8,7 +8,7 @@
 //! ```
 //!
 //! [`check`] goes as far as the results, [`sheet`] to the PDF. Modules use only modules above them in
-//! this order: `error quantity solve trace standards building wind job sketch checks pack report archive files many cli`.
+//! this order: `error files quantity solve trace standards building wind job sketch checks pack house report archive many cli`.
 #![recursion_limit = "512"]
 #![allow(non_snake_case, reason = "symbols are written as the standards write them: N_Ed, gamma_M")]
 
@@ -18,6 +18,7 @@ pub mod checks;
 pub mod cli;
 pub mod error;
 pub mod files;
+pub mod house;
 pub mod job;
 pub mod many;
 pub mod pack;
@@ -31,13 +32,12 @@ pub mod wind;
 
 use std::path::Path;
 
-use sha2::{Digest, Sha256};
-
 use archive::{Held, Rechecked};
-use building::Building;
+use building::{Building, Practice};
 use checks::Results;
 use error::{Error, Trouble};
-use pack::{Typeset, photograph};
+pub use files::digest;
+use pack::{House, PackError, Typeset, photograph};
 
 /// The building of a job file and what its checks found, without drawings. `name` is the file's name for diagnostics.
 ///
@@ -45,7 +45,15 @@ use pack::{Typeset, photograph};
 /// [`Error::Job`] with every diagnostic of the file; [`Error::Internal`] where a sheet would print
 /// something that it did not compute.
 pub fn check(name: &str, text: &str) -> Result<(Building, Results), Error> {
-    work(name, text, checks::results)
+    check_for(name, text, None)
+}
+
+/// As [`check`], for a practice that has factors or padstones of its own.
+///
+/// # Errors
+/// As [`check`].
+pub fn check_for(name: &str, text: &str, practice: Option<&Practice>) -> Result<(Building, Results), Error> {
+    work(name, text, practice, checks::results)
 }
 
 /// As [`check`], with the drawings of every sheet.
@@ -53,16 +61,40 @@ pub fn check(name: &str, text: &str) -> Result<(Building, Results), Error> {
 /// # Errors
 /// As [`check`].
 pub fn draw(name: &str, text: &str) -> Result<(Building, Results), Error> {
-    work(name, text, checks::run)
+    draw_for(name, text, None)
 }
 
-fn work(name: &str, text: &str, run: fn(&Building) -> Results) -> Result<(Building, Results), Error> {
-    let building = checks::whole::complete(job::read(name, text)?);
+/// As [`check_for`], with the drawings of every sheet.
+///
+/// # Errors
+/// As [`check`].
+pub fn draw_for(name: &str, text: &str, practice: Option<&Practice>) -> Result<(Building, Results), Error> {
+    work(name, text, practice, checks::run)
+}
+
+fn work(
+    name: &str,
+    text: &str,
+    practice: Option<&Practice>,
+    run: fn(&Building) -> Results,
+) -> Result<(Building, Results), Error> {
+    let building = checks::whole::complete(job::read_for(name, text, practice)?);
     let results = run(&building);
     if let Some((sheet, fault)) = results.faults().next() {
         return Err(Error::Internal { step: format!("sheet {sheet}: {}: {}", fault.step, fault.what) });
     }
     Ok((building, results))
+}
+
+/// What a pack is set from besides its checks.
+#[derive(Clone, Copy)]
+pub struct Source<'a> {
+    /// The job file.
+    pub text: &'a str,
+    /// Where it lies: photographs are looked for there.
+    pub folder: &'a Path,
+    /// In whose style; the practice must be the one for which the job was checked.
+    pub house: Option<&'a House>,
 }
 
 /// A job file carried through to its pack.
@@ -80,12 +112,13 @@ pub struct Sheeted {
 /// Works the job inside a pack again and holds the outcome against what the pack prints.
 ///
 /// # Errors
-/// As [`check`], where the attached job file cannot be used.
+/// As [`check`], where the attached job file, or the practice file beside it, cannot be used.
 pub fn recheck(name: &str, held: Held) -> Result<Rechecked, Error> {
-    let (building, results) = draw(name, &held.job)?;
-    let digest = digest(&held.job);
-    let now = report::record::of_job(&building, &results, &digest);
-    Ok(Rechecked::new(held.record, now, &digest))
+    let practice = held.practice.as_ref().map(|text| job::practice::read(&format!("{name}, {}", archive::PRACTICE), text));
+    let practice = practice.transpose()?;
+    let (building, results) = draw_for(&format!("{name}, {}", archive::JOB), &held.job, practice.as_ref())?;
+    let now = report::record::of_job(&building, &results, &digest(&held.job));
+    Ok(Rechecked::new(held.record, now))
 }
 
 /// A summary for the client.
@@ -98,17 +131,17 @@ pub struct Summarised {
     pub hard: Vec<(String, report::plain::Hard)>,
 }
 
-/// Sets the summary for the client of a job that was checked; `text` is its job file.
+/// Sets the summary for the client of a job that was checked.
 ///
 /// # Errors
-/// [`Error::Internal`] where it cannot be set.
-pub fn summarise(building: &Building, results: &Results, text: &str) -> Result<Summarised, Error> {
-    let digest = digest(text);
+/// [`Error::Internal`] where it cannot be set; [`Error::File`] where that is for templates of the practice.
+pub fn summarise(building: &Building, results: &Results, from: &Source<'_>) -> Result<Summarised, Error> {
+    let digest = digest(from.text);
     let data = report::client::of_job(building, results, &digest);
     let words = data.parts.iter().flat_map(|p| p.lines.iter().chain(&p.steps));
     let hard = words.flat_map(|line| report::plain::hard(line)).collect();
-    let typeset = pack::typeset_client(&data, &format!("{digest}-summary"))
-        .map_err(|e| Error::Internal { step: e.to_string() })?;
+    let typeset = pack::typeset_client(&data, &format!("{digest}-summary"), from.house)
+        .map_err(|why| unset(&why, from.house))?;
     Ok(Summarised { typeset, file_name: named(building, "Summary"), hard })
 }
 
@@ -119,20 +152,33 @@ pub fn summarise(building: &Building, results: &Results, text: &str) -> Result<S
 /// pack cannot be set.
 pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
     let (building, results) = draw(name, text)?;
-    let typeset = set(&building, &results, text, folder)?;
+    let typeset = set(&building, &results, &Source { text, folder, house: None })?;
     let file_name = file_name(&building);
     Ok(Sheeted { building, results, typeset, file_name })
 }
 
-/// Sets the pack of a job that was checked and drawn; `text` is its job file.
+/// Sets the pack of a job that was checked and drawn.
 ///
 /// # Errors
-/// As [`sheet`], where photographs or the pack are at fault.
-pub fn set(building: &Building, results: &Results, text: &str, folder: &Path) -> Result<Typeset, Error> {
-    let digest = digest(text);
-    let data = report::pack(building, results, text, &digest);
-    let files = photographs(building, folder)?;
-    pack::typeset(data, &files, &digest).map_err(|e| Error::Internal { step: e.to_string() })
+/// As [`sheet`], where photographs or the pack are at fault; [`Error::File`] for templates of the practice.
+pub fn set(building: &Building, results: &Results, from: &Source<'_>) -> Result<Typeset, Error> {
+    let digest = digest(from.text);
+    let data = report::pack(building, results, from.text, &digest);
+    let files = photographs(building, from.folder)?;
+    pack::typeset(data, &files, &digest, from.house).map_err(|why| unset(&why, from.house))
+}
+
+/// Templates of a practice are its own; everything else that goes wrong in setting is the program's fault.
+fn unset(why: &PackError, house: Option<&House>) -> Error {
+    match house.filter(|h| h.own_templates()) {
+        Some(house) => Error::File {
+            path: house.practice.templates.clone().unwrap_or_default(),
+            trouble: Trouble::Content(why.to_string()),
+            help: "Mend the templates of the practice, or take `templates` out of its file: the pack is then set by ours."
+                .to_owned(),
+        },
+        None => Error::Internal { step: why.to_string() },
+    }
 }
 
 /// The photographs of a job, each with the name by which its pack calls it, turned upright and scaled to print.
@@ -158,11 +204,6 @@ pub fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Ve
         Ok((report::photograph_path(n), jpeg))
     };
     building.photographs.iter().enumerate().map(taken_in).collect()
-}
-
-/// SHA-256 of a job file's text, in hexadecimal.
-pub fn digest(text: &str) -> String {
-    Sha256::digest(text.as_bytes()).iter().map(|b| format!("{b:02x}")).collect()
 }
 
 /// `2419 Calculations (A).pdf`: letters, digits, space, - _ ( ) and one full stop only.

@@ -19,6 +19,8 @@ use compare::Differences;
 
 /// The job file inside a pack.
 pub const JOB: &str = "job.toml";
+/// The practice file inside a pack.
+pub const PRACTICE: &str = "practice.toml";
 /// The record inside a pack.
 pub const RECORD: &str = "results.json";
 
@@ -27,6 +29,8 @@ pub const RECORD: &str = "results.json";
 pub struct Held {
     /// The job file.
     pub job: String,
+    /// The practice file, where the pack was made by one.
+    pub practice: Option<String>,
     /// What was printed.
     pub record: Record,
 }
@@ -81,32 +85,45 @@ pub struct Rechecked {
     pub now: Record,
     /// Whether the job file is the one from which the pack was made, by its digest.
     pub same_job: bool,
+    /// Whether the practice file is, or there was and is none.
+    pub same_practice: bool,
     /// What changed.
     pub differences: Differences,
 }
 
 impl Rechecked {
-    /// What a pack carries held against what its job yields now; `digest` is that of the job file inside.
-    pub fn new(was: Record, now: Record, digest: &str) -> Self {
+    /// What a pack carries held against what the files inside it yield now.
+    pub fn new(was: Record, now: Record) -> Self {
         let differences = compare::records(&was, &now);
-        Self { same_job: digest == was.job_digest, was, now, differences }
+        let same_job = now.job_digest == was.job_digest;
+        let same_practice = now.practice_digest == was.practice_digest;
+        Self { same_job, same_practice, was, now, differences }
     }
 
     /// Whether every printed figure stands.
     pub fn stands(&self) -> bool {
-        self.same_job && self.differences.is_empty()
+        self.same_job && self.same_practice && self.differences.is_empty()
     }
 }
 
-/// The issued pack at `path` that is not the one about to be written: it must stay. `digest` is that of the job file,
-/// `pdf` the new pack; where only the summary is written there is none, and job and program must be the same.
-pub fn issued_at(path: &Path, digest: &str, pdf: Option<&[u8]>) -> Option<Record> {
+/// The digests of a job file and of the practice file by which it was worked; the second is empty where there is none.
+#[derive(Clone, Debug, PartialEq, Eq, serde::Serialize, serde::Deserialize)]
+#[allow(missing_docs, reason = "the fields are their names")]
+pub struct Digests {
+    pub job: String,
+    pub practice: String,
+}
+
+/// The issued pack at `path` that is not the one about to be written: it must stay. `pdf` is the new pack; where only the
+/// summary is written there is none, and job, practice and program must be the same.
+pub fn issued_at(path: &Path, digests: &Digests, pdf: Option<&[u8]>) -> Option<Record> {
     let bytes = std::fs::read(path).ok()?;
     if pdf == Some(bytes.as_slice()) {
         return None;
     }
     let record = held(bytes).ok()?.record;
-    let same = pdf.is_none() && record.job_digest == digest && record.version == PROGRAM.1;
+    let alike = record.job_digest == digests.job && record.practice_digest == digests.practice;
+    let same = pdf.is_none() && alike && record.version == PROGRAM.1;
     (record.issued && !same).then_some(record)
 }
 
@@ -116,11 +133,13 @@ pub fn issued_at(path: &Path, digest: &str, pdf: Option<&[u8]>) -> Option<Record
 /// [`Unfit`] where the file is no pack of this program, or of a later version.
 pub fn held(bytes: Vec<u8>) -> Result<Held, Unfit> {
     let mut files = pdf::attached(bytes).ok_or(Unfit::Broken)?;
-    let mut take = |name: &'static str| {
-        let at = files.iter().position(|(n, _)| n == name).ok_or(Unfit::Without(name))?;
-        String::from_utf8(files.swap_remove(at).1)
-            .map_err(|_| Unfit::Foreign(format!("{name} is not UTF-8 text")))
+    let mut may = |name: &'static str| {
+        let at = files.iter().position(|(n, _)| n == name)?;
+        let text = String::from_utf8(files.swap_remove(at).1);
+        Some(text.map_err(|_| Unfit::Foreign(format!("{name} is not UTF-8 text"))))
     };
+    let practice = may(PRACTICE).transpose()?;
+    let mut take = |name: &'static str| may(name).unwrap_or(Err(Unfit::Without(name)));
     let (job, text) = (take(JOB)?, take(RECORD)?);
     // The form first: a later one may not read as a whole.
     let json: serde_json::Value =
@@ -137,5 +156,5 @@ pub fn held(bytes: Vec<u8>) -> Result<Held, Unfit> {
         _ => return Err(Unfit::Foreign(format!("{RECORD} has no known form"))),
     }
     let record = serde_json::from_value(json).map_err(|why| Unfit::Foreign(format!("{RECORD}: {why}")))?;
-    Ok(Held { job, record })
+    Ok(Held { job, practice, record })
 }

@@ -9,6 +9,7 @@ pub mod found;
 mod heights;
 mod parts;
 mod plan;
+mod practice;
 mod site;
 mod things;
 mod words;
@@ -24,6 +25,7 @@ pub use parts::{
     UnitStrength,
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
+pub use practice::{Accent, Logo, Practice};
 pub use site::{
     Dominant, Feature, Orography, Readings, Roof, RoofForm, Sector, Site, StatedWind, Town, Wind,
 };
@@ -95,6 +97,8 @@ pub struct Building {
     pub photographs: Vec<Photograph>,
     /// Who is responsible for what, in the order given.
     pub responsible: Vec<(String, String)>,
+    /// The practice that makes the pack, where it has a file.
+    pub practice: Option<Practice>,
     /// What the plan shows of the removal, where it has floors.
     pub found: Found,
     /// Possible but odd values, as sentences.

@@ -3,17 +3,18 @@
 use std::io::Write as _;
 use std::path::{Path, PathBuf};
 
+use super::flags::Whose;
 use super::{ADEQUATE, FAILED, NOT_PLAINLY_ADEQUATE, complain, internal};
 use crate::archive::compare::{self, Change, Differences};
 use crate::archive::{Held, Rechecked, held};
 use crate::error::{Error, Trouble};
 use crate::report::record::{self, Record};
-use crate::{digest, draw, files, many, recheck};
+use crate::{digest, draw_for, files, many, recheck};
 
 /// Works the jobs inside packs again. Yields the exit code.
 pub fn recheck_all(paths: &[PathBuf], working: bool) -> u8 {
     let mut worst = ADEQUATE;
-    let work = |file: &PathBuf| recheck(&format!("{}, job.toml", files::name(file)), pack(file)?);
+    let work = |file: &PathBuf| recheck(&files::name(file), pack(file)?);
     let take = |file: &PathBuf, result| match internal::<Rechecked>(result) {
         Ok(found) => {
             worst = worst.max(if found.stands() { ADEQUATE } else { NOT_PLAINLY_ADEQUATE });
@@ -58,6 +59,12 @@ fn told(file: &Path, found: &Rechecked, working: bool) -> Vec<String> {
             grouped(&was.job_digest)
         )),
     }
+    if !found.same_practice {
+        out.push(
+            "  The practice file inside is not the one by which the pack was made, or one of the two is missing."
+                .to_owned(),
+        );
+    }
     out.extend(differences(&found.differences, working));
     out
 }
@@ -70,22 +77,24 @@ fn grouped(digest: &str) -> String {
 /// Two job files or packs held against each other.
 struct Side {
     job: String,
+    practice: String,
     record: Record,
 }
 
 /// Says what changed from one job file or pack to another. Yields the exit code.
-pub fn compare_two(old: &Path, new: &Path, working: bool) -> u8 {
+pub fn compare_two((old, new): (&Path, &Path), working: bool, whose: &Whose) -> u8 {
     let paths = [old.to_owned(), new.to_owned()];
     let mut sides: Vec<Side> = Vec::new();
     let take = |_: &PathBuf, result| match internal::<Side>(result) {
         Ok(side) => sides.push(side),
         Err(e) => complain(&e),
     };
-    many::in_order(&paths, |file: &PathBuf| side(file), take, || {});
+    many::in_order(&paths, |file: &PathBuf| side(file, whose), take, || {});
     let [was, now] = sides.as_slice() else { return FAILED };
     let inputs = compare::lines(&was.job, &now.job);
+    let house = compare::lines(&was.practice, &now.practice);
     let changed = compare::records(&was.record, &now.record);
-    if inputs.is_empty() && changed.is_empty() {
+    if inputs.is_empty() && house.is_empty() && changed.is_empty() {
         print(&["alike: the same job, the same results".to_owned()]);
         return ADEQUATE;
     }
@@ -95,21 +104,26 @@ pub fn compare_two(old: &Path, new: &Path, working: bool) -> u8 {
         n => format!("Inputs: {n} {} of the job file", lines_word(n)),
     });
     out.extend(inputs.iter().flat_map(one));
+    if !house.is_empty() {
+        out.push(format!("Practice file: {} {}", house.len(), lines_word(house.len())));
+        out.extend(house.iter().flat_map(one));
+    }
     out.push(if changed.is_empty() { "Results: the same" } else { "Results" }.to_owned());
     out.extend(differences(&changed, working));
     print(&out);
     NOT_PLAINLY_ADEQUATE
 }
 
-fn side(file: &Path) -> Result<Side, Error> {
+fn side(file: &Path, whose: &Whose) -> Result<Side, Error> {
     if files::is_pdf(file) {
-        let Held { job, record } = pack(file)?;
-        return Ok(Side { job, record });
+        let Held { job, practice, record } = pack(file)?;
+        return Ok(Side { job, practice: practice.unwrap_or_default(), record });
     }
     let job = files::read(file)?;
-    let (building, results) = draw(&files::name(file), &job)?;
+    let practice = whose.practice(file)?;
+    let (building, results) = draw_for(&files::name(file), &job, practice.as_ref())?;
     let record = record::of_job(&building, &results, &digest(&job));
-    Ok(Side { job, record })
+    Ok(Side { job, practice: practice.map_or_else(String::new, |p| p.text), record })
 }
 
 const fn lines_word(n: usize) -> &'static str {

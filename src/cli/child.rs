@@ -9,13 +9,13 @@ use std::process::{Command, Stdio};
 
 use super::flags::Only;
 use super::made::{Made, Stopped};
-use super::{FAILED, complain};
+use super::{FAILED, How, complain};
 use crate::error::Error;
 use crate::many;
 
 /// Sets one job and writes the pack to standard output. Yields the exit code.
-pub fn hand_back(file: &Path, only: Option<Only>) -> u8 {
-    let made = match many::guarded(|| Made::here(file, only)) {
+pub fn hand_back(file: &Path, how: How<'_>) -> u8 {
+    let made = match many::guarded(|| Made::here(file, how)) {
         Ok(Ok(made)) => made,
         Ok(Err(e)) => {
             complain(&e);
@@ -37,11 +37,14 @@ pub fn hand_back(file: &Path, only: Option<Only>) -> u8 {
 }
 
 /// Has another process set `file`. Where none can be started this one does it.
-pub fn ask(file: &Path, only: Option<Only>) -> Result<Made, Stopped> {
-    let Ok(program) = std::env::current_exe() else { return Ok(Made::here(file, only)?) };
+pub fn ask(file: &Path, how: How<'_>) -> Result<Made, Stopped> {
+    let Ok(program) = std::env::current_exe() else { return Ok(Made::here(file, how)?) };
     let mut command = Command::new(program);
     command.arg("set").arg(file).stdin(Stdio::null());
-    match only {
+    if let Some(practice) = &how.1.practice {
+        command.arg("--practice").arg(practice);
+    }
+    match how.0 {
         Some(Only::Pack) => drop(command.args(["--only", "pack"])),
         Some(Only::Summary) => drop(command.args(["--only", "summary"])),
         None => {}
@@ -51,7 +54,7 @@ pub fn ask(file: &Path, only: Option<Only>) -> Result<Made, Stopped> {
     if std::io::stderr().is_terminal() && std::env::var_os("NO_COLOR").is_none() {
         command.env("CLICOLOR_FORCE", "1");
     }
-    let Ok(answer) = command.output() else { return Ok(Made::here(file, only)?) };
+    let Ok(answer) = command.output() else { return Ok(Made::here(file, how)?) };
     let words = String::from_utf8_lossy(&answer.stderr).into_owned();
     match unpack(&answer.stdout) {
         Some(made) if answer.status.code() == Some(i32::from(made.code)) => Ok(made),
@@ -82,7 +85,7 @@ mod tests {
     #[test]
     fn half_an_answer_is_no_pack() {
         let header = br#"{"documents":[{"file_name":"1 Calculations (A).pdf","said":"3 sheets","size":4},
-            {"file_name":"1 Summary (A).pdf","said":"1 page","size":5}],"pack":"","digest":"","code":0,"remarks":[],"times":""}"#;
+            {"file_name":"1 Summary (A).pdf","said":"1 page","size":5}],"pack":"","digests":{"job":"","practice":""},"code":0,"remarks":[],"times":""}"#;
         let mut whole = (header.len() as u64).to_le_bytes().to_vec();
         whole.extend(header);
         whole.extend(b"%PDF%PDF2");

@@ -1,8 +1,13 @@
 //! Commands and flags, with the help that teaches them.
 
-use std::path::PathBuf;
+use std::path::{Path, PathBuf};
 
 use clap::{Parser, Subcommand};
+
+use crate::building::Practice;
+use crate::error::Error;
+use crate::house;
+use crate::pack::House;
 
 /// Calculation packs for masonry that stays when a load-bearing wall comes out.
 ///
@@ -28,7 +33,8 @@ A pack is worth nothing unsigned: read it, check it, sign it.";
 const START_EXAMPLES: &str = "\
 Examples:
   perpend start rear-opening.toml      every entry, each with a remark
-  perpend start --plan kitchen.toml    walls, floors and beams as a plan; loads and spans found on it";
+  perpend start --plan kitchen.toml    walls, floors and beams as a plan; loads and spans found on it
+  perpend start --practice practice.toml    the house style, beside the jobs that it is for";
 
 const CHECK_EXAMPLES: &str = "\
 Examples:
@@ -39,6 +45,7 @@ const SHEET_EXAMPLES: &str = "\
 Examples:
   perpend sheet rear-opening.toml           the pack beside the job file
   perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
+  perpend sheet --practice style.toml a.toml    in the house style of that practice file
 
 A draft that is there already is replaced as soon as the new one is whole. A pack that was issued (its status is
 neither preliminary nor for comment) is never replaced by one of a changed job: give that the next revision.";
@@ -81,6 +88,9 @@ pub(super) enum Command {
         /// A shorter job, worked from a plan of its walls, floors and beams, in place of one with every entry by hand
         #[arg(long)]
         plan: bool,
+        /// A practice file in place of a job: whose packs they are and how they look
+        #[arg(long, conflicts_with = "plan")]
+        practice: bool,
     },
     /// Check jobs and print the results
     #[command(after_help = CHECK_EXAMPLES)]
@@ -91,6 +101,8 @@ pub(super) enum Command {
         /// Print the results as JSON, one array entry a file
         #[arg(long)]
         json: bool,
+        #[command(flatten)]
+        whose: Whose,
     },
     /// Check jobs and write their packs and a summary for the client as PDF
     #[command(after_help = SHEET_EXAMPLES)]
@@ -107,6 +119,8 @@ pub(super) enum Command {
         /// Say where the time went
         #[arg(long)]
         times: bool,
+        #[command(flatten)]
+        whose: Whose,
     },
     /// Check and set a job again whenever its file is saved, and tell in one line what that changed
     #[command(after_help = WATCH_EXAMPLES)]
@@ -119,6 +133,8 @@ pub(super) enum Command {
         /// Write only one of the two: the pack, or the summary for the client
         #[arg(long, value_name = "WHICH")]
         only: Option<Only>,
+        #[command(flatten)]
+        whose: Whose,
     },
     /// Work the jobs inside packs again and say whether every printed result still stands
     #[command(after_help = RECHECK_EXAMPLES)]
@@ -140,6 +156,8 @@ pub(super) enum Command {
         /// Print every line of working that changed, not only how many did
         #[arg(long)]
         working: bool,
+        #[command(flatten)]
+        whose: Whose,
     },
     /// List every check with its clause
     Checks,
@@ -160,7 +178,36 @@ pub(super) enum Command {
         /// Only one of the two
         #[arg(long)]
         only: Option<Only>,
+        #[command(flatten)]
+        whose: Whose,
     },
+}
+
+/// Whose packs they are.
+#[derive(clap::Args, Clone, Debug, Default)]
+pub(super) struct Whose {
+    /// Practice file: name, logo, colour, type, standing notes, padstones and factors of the practice. Without it
+    /// practice.toml beside the job file, else the file that PERPEND_PRACTICE names
+    #[arg(long, value_name = "FILE")]
+    pub(super) practice: Option<PathBuf>,
+}
+
+impl Whose {
+    /// The practice file of a job, where it has one.
+    pub(super) fn of(&self, job: &Path) -> Option<PathBuf> {
+        let usual = std::env::var_os("PERPEND_PRACTICE").filter(|p| !p.is_empty()).map(PathBuf::from);
+        house::find(self.practice.as_deref(), job, usual)
+    }
+
+    /// That practice, without the files that it names.
+    pub(super) fn practice(&self, job: &Path) -> Result<Option<Practice>, Error> {
+        self.of(job).map(|file| house::read(&file)).transpose()
+    }
+
+    /// That practice, ready to set packs.
+    pub(super) fn house(&self, job: &Path) -> Result<Option<House>, Error> {
+        self.of(job).map(|file| house::open(&file)).transpose()
+    }
 }
 
 /// One of the two documents.

@@ -5,15 +5,15 @@ use std::path::{Path, PathBuf};
 use std::time::{Duration, Instant};
 
 use super::flags::Only;
-use super::{ADEQUATE, NOT_PLAINLY_ADEQUATE, complain};
-use crate::archive;
+use super::{ADEQUATE, How, NOT_PLAINLY_ADEQUATE, complain};
+use crate::archive::{self, Digests};
 use crate::building::Building;
 use crate::checks::Results;
 use crate::checks::outcome::Outcome;
 use crate::error::{Error, Trouble};
 use crate::report::plain;
 use crate::report::record::Record;
-use crate::{digest, draw, file_name, files, pack, set, summarise};
+use crate::{Source, digest, draw_for, file_name, files, pack, set, summarise};
 
 /// A pack that is set, and what is said of it.
 #[derive(serde::Serialize, serde::Deserialize)]
@@ -21,8 +21,7 @@ pub(super) struct Made {
     pub(super) documents: Vec<Document>,
     /// The file name of its pack, whether it was set or not.
     pack: String,
-    /// SHA-256 of the job file.
-    digest: String,
+    digests: Digests,
     /// The exit code it asks for.
     pub(super) code: u8,
     /// What its author should see.
@@ -50,17 +49,18 @@ impl Document {
 
 impl Made {
     /// Reads a job and sets it in this process.
-    pub(super) fn here(file: &Path, only: Option<Only>) -> Result<Self, Error> {
+    pub(super) fn here(file: &Path, (only, whose): How<'_>) -> Result<Self, Error> {
         let begin = Instant::now();
         let text = files::read(file)?;
-        let (building, results) = draw(&files::name(file), &text)?;
-        Self::of(file, &text, (&building, &results), only, begin)
+        let house = whose.house(file)?;
+        let (building, results) = draw_for(&files::name(file), &text, house.as_ref().map(|h| &h.practice))?;
+        let from = Source { text: &text, folder: folder_of(file), house: house.as_ref() };
+        Self::of(&from, (&building, &results), only, begin)
     }
 
     /// Sets a job that was checked and drawn since `begin`.
     pub(super) fn of(
-        file: &Path,
-        text: &str,
+        from: &Source<'_>,
         (building, results): (&Building, &Results),
         only: Option<Only>,
         begin: Instant,
@@ -69,15 +69,17 @@ impl Made {
         let mut setting = pack::Times::default();
         let name = file_name(building);
         if only != Some(Only::Summary) {
-            let made = set(building, results, text, file.parent().unwrap_or(Path::new("")))?;
+            let made = set(building, results, from)?;
             let said = format!("{} sheets: {}", made.pages, results.outcome.words());
+            remarks.extend(made.warnings.iter().map(|w| format!("note: the pack: {w}")));
             setting += made.times;
             documents.push(Document::new(name.clone(), said, made.pdf));
         }
         if only != Some(Only::Pack) {
-            let made = summarise(building, results, text)?;
+            let made = summarise(building, results, from)?;
             let pages = made.typeset.pages;
             let said = format!("{pages} {} for the client", if pages == 1 { "page" } else { "pages" });
+            remarks.extend(made.typeset.warnings.iter().map(|w| format!("note: the summary: {w}")));
             remarks.extend(made.hard.iter().map(|(words, why)| hard(words, why)));
             setting += made.typeset.times;
             documents.push(Document::new(made.file_name, said, made.typeset.pdf));
@@ -86,7 +88,10 @@ impl Made {
         Ok(Self {
             documents,
             pack: name,
-            digest: digest(text),
+            digests: Digests {
+                job: digest(from.text),
+                practice: building.practice.as_ref().map_or_else(String::new, |p| p.digest.clone()),
+            },
             code: code(results.outcome),
             remarks,
             times: spent.to_string(),
@@ -102,8 +107,8 @@ impl Made {
         let folder = into.or(file.parent()).unwrap_or(Path::new(""));
         let pack = folder.join(&self.pack);
         let set = self.documents.iter().find(|d| d.file_name == self.pack);
-        if let Some(issued) = archive::issued_at(&pack, &self.digest, set.map(|d| d.pdf.as_slice())) {
-            return Err(stays(&pack, &issued, &self.digest));
+        if let Some(issued) = archive::issued_at(&pack, &self.digests, set.map(|d| d.pdf.as_slice())) {
+            return Err(stays(&pack, &issued, &self.digests));
         }
         let one = |d: &mut Document| {
             let pdf = std::mem::take(&mut d.pdf);
@@ -114,9 +119,15 @@ impl Made {
     }
 }
 
+/// Where a file lies.
+pub(super) fn folder_of(file: &Path) -> &Path {
+    file.parent().unwrap_or(Path::new(""))
+}
+
 /// An issued pack is never overwritten.
-fn stays(path: &Path, issued: &Record, digest: &str) -> Error {
-    let why = match issued.job_digest == digest {
+fn stays(path: &Path, issued: &Record, now: &Digests) -> Error {
+    let why = match issued.job_digest == now.job {
+        true if issued.practice_digest != now.practice => "the practice file is another",
         true => "this version of the program, or a photograph, makes another pack of the same job file",
         false => "the job file has changed since",
     };

@@ -14,14 +14,14 @@ use std::path::{Path, PathBuf};
 use anstyle::{Effects, Style};
 use clap::{CommandFactory as _, Parser as _};
 
-use flags::{Command, Flags, Only};
+use flags::{Command, Flags, Only, Whose};
 use made::{Made, Stopped, code, place};
 use progress::Progress;
 
 use crate::checks::outcome::Outcome;
 use crate::error::Error;
 use crate::report::{lines, machine};
-use crate::{check, files, job, many};
+use crate::{check_for, files, job, many};
 
 /// Everything of every job is adequate.
 pub const ADEQUATE: u8 = 0;
@@ -29,6 +29,9 @@ pub const ADEQUATE: u8 = 0;
 pub const NOT_PLAINLY_ADEQUATE: u8 = 1;
 /// A file could not be read or used, or a flag was wrong.
 pub const FAILED: u8 = 2;
+
+/// Which documents, and in whose style.
+type How<'a> = (Option<Only>, &'a Whose);
 
 /// Runs the tool with the process's arguments and yields its exit code.
 pub fn run() -> u8 {
@@ -41,34 +44,41 @@ pub fn run() -> u8 {
     };
     many::hush();
     match flags.command {
-        Command::Start { file, plan } => start(&file, plan),
-        Command::Check { files, json } => check_all(&files, json),
-        Command::Sheet { files, into, only, times } => sheet_all(&files, into.as_deref(), only, times),
-        Command::Watch { file, into, only } => {
+        Command::Start { file, plan, practice } => {
+            let text = match (plan, practice) {
+                (true, _) => job::start::FROM_PLAN,
+                (_, true) => job::start::PRACTICE,
+                _ => job::start::TEMPLATE,
+            };
+            start(&file, text, practice)
+        }
+        Command::Check { files, json, whose } => check_all(&files, json, &whose),
+        Command::Sheet { files, into, only, times, whose } => sheet_all(&files, into.as_deref(), (only, &whose), times),
+        Command::Watch { file, into, only, whose } => {
             if let Some(Err(e)) = into.as_deref().map(files::folder) {
                 complain(&e);
                 return FAILED;
             }
-            watch::watch(&file, into.as_deref(), only)
+            watch::watch(&file, into.as_deref(), (only, &whose))
         }
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
-        Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
+        Command::Compare { old, new, working, whose } => again::compare_two((&old, &new), working, &whose),
         Command::Checks => teach::checks(),
         Command::Completions { shell } => teach::completions(shell),
         Command::Manual => teach::manual(),
-        Command::Set { file, only } => child::hand_back(&file, only),
+        Command::Set { file, only, whose } => child::hand_back(&file, (only, &whose)),
     }
 }
 
-fn start(file: &Path, plan: bool) -> u8 {
-    let text = if plan { job::start::FROM_PLAN } else { job::start::TEMPLATE };
+fn start(file: &Path, text: &str, practice: bool) -> u8 {
     match files::write_new(file, text.as_bytes()) {
         Ok(()) => {
-            let _ = writeln!(
-                anstream::stdout(),
-                "{file} written: a complete invented job. Edit it, then run\n  perpend check {file}",
-                file = file.display()
-            );
+            let file = file.display();
+            let next = match practice {
+                true => format!("a complete invented practice. Edit it, then run\n  perpend sheet --practice {file} job.toml"),
+                false => format!("a complete invented job. Edit it, then run\n  perpend check {file}"),
+            };
+            let _ = writeln!(anstream::stdout(), "{file} written: {next}");
             ADEQUATE
         }
         Err(e) => {
@@ -88,12 +98,12 @@ enum Said {
     Record(serde_json::Value),
 }
 
-fn check_all(paths: &[PathBuf], json: bool) -> u8 {
+fn check_all(paths: &[PathBuf], json: bool, whose: &Whose) -> u8 {
     let mut worst = ADEQUATE;
     let mut records = Vec::new();
     let work = |file: &PathBuf| -> Result<(Outcome, Said), Error> {
         let name = files::name(file);
-        let (building, results) = check(&name, &files::read(file)?)?;
+        let (building, results) = check_for(&name, &files::read(file)?, whose.practice(file)?.as_ref())?;
         let said = if json {
             Said::Record(machine::of_job(&name, &building, &results))
         } else {
@@ -145,7 +155,7 @@ fn print_lines(all: &[lines::Line]) {
     }
 }
 
-fn sheet_all(paths: &[PathBuf], into: Option<&Path>, only: Option<Only>, times: bool) -> u8 {
+fn sheet_all(paths: &[PathBuf], into: Option<&Path>, how: How<'_>, times: bool) -> u8 {
     if let Some(Err(e)) = into.map(files::folder) {
         complain(&e);
         return FAILED;
@@ -156,7 +166,7 @@ fn sheet_all(paths: &[PathBuf], into: Option<&Path>, only: Option<Only>, times: 
     let work = |file: &PathBuf| {
         // Several packs in one process would share the typesetter's memory of work done, which makes
         // each slower and all together larger: each of several has a process of its own.
-        let made = if paths.len() > 1 { child::ask(file, only)? } else { Made::here(file, only)? };
+        let made = if paths.len() > 1 { child::ask(file, how)? } else { Made::here(file, how)? };
         made.staged(file, into).map_err(Stopped::from)
     };
     let take = |file: &PathBuf, result: Result<Result<(Made, Vec<files::Staged>), Stopped>, String>| {

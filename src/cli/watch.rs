@@ -5,13 +5,12 @@ use std::path::Path;
 use std::thread;
 use std::time::{Duration, Instant, SystemTime};
 
-use super::flags::Only;
-use super::made::{Made, place};
-use super::{FAILED, complain};
+use super::made::{Made, folder_of, place};
+use super::{FAILED, How, complain};
 use crate::archive::compare::{self, Change, Differences};
 use crate::error::Error;
 use crate::report::record::{self, Record};
-use crate::{digest, draw, files};
+use crate::{Source, digest, draw_for, files};
 
 /// How often the file is looked at.
 const LOOK: Duration = Duration::from_millis(150);
@@ -29,21 +28,21 @@ impl Saved {
 }
 
 /// Watches until the process is ended. Yields only where the file is not there to begin with.
-pub fn watch(file: &Path, into: Option<&Path>, only: Option<Only>) -> u8 {
+pub fn watch(file: &Path, into: Option<&Path>, how: How<'_>) -> u8 {
     if let Err(e) = files::read(file) {
         complain(&e);
         return FAILED;
     }
     let mut before: Option<Record> = None;
-    let mut seen = Saved(None);
+    let mut seen: Option<[Saved; 2]> = None;
     loop {
-        let now = Saved::of(file);
-        if now == seen || now.0.is_none() {
+        let now = [Saved::of(file), how.1.of(file).map_or(Saved(None), |p| Saved::of(&p))];
+        if seen.as_ref() == Some(&now) || now[0].0.is_none() {
             thread::sleep(LOOK);
             continue;
         }
-        seen = now;
-        match once(file, into, only, before.as_ref()) {
+        seen = Some(now);
+        match once(file, into, how, before.as_ref()) {
             Ok(record) => before = Some(record),
             Err(e) => complain(&e),
         }
@@ -56,18 +55,20 @@ pub fn watch(file: &Path, into: Option<&Path>, only: Option<Only>) -> u8 {
 fn once(
     file: &Path,
     into: Option<&Path>,
-    only: Option<Only>,
+    (only, whose): How<'_>,
     before: Option<&Record>,
 ) -> Result<Record, Error> {
     let begin = Instant::now();
     let text = files::read(file)?;
-    let (building, results) = draw(&files::name(file), &text)?;
+    let house = whose.house(file)?;
+    let (building, results) = draw_for(&files::name(file), &text, house.as_ref().map(|h| &h.practice))?;
     let record = record::of_job(&building, &results, &digest(&text));
     say(&match before {
         None => format!("{}; watching {}, Ctrl-C ends", record.outcome, file.display()),
         Some(before) => format!("{}; {}", record.outcome, told(&compare::records(before, &record))),
     });
-    let made = Made::of(file, &text, (&building, &results), only, begin)?;
+    let from = Source { text: &text, folder: folder_of(file), house: house.as_ref() };
+    let made = Made::of(&from, (&building, &results), only, begin)?;
     let (made, staged) = made.staged(file, into)?;
     for (path, document) in place(staged)?.iter().zip(&made.documents) {
         say(&format!("  {}: {}", path.display(), document.said));

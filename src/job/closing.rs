@@ -2,6 +2,7 @@
 
 use super::entry::quoted;
 use super::ground::marks;
+use super::limits::one_of;
 use super::names::known;
 use super::reader::{Reader, Table};
 use super::words::LINKS;
@@ -83,29 +84,40 @@ pub fn photograph(t: &Table<'_>, names: &[&str]) -> Option<Photograph> {
 }
 
 fn beside(t: &Table<'_>, path: &str) -> bool {
-    let lower = path.to_lowercase();
-    let wrong = if path.contains('\\') {
-        Some(("has a backslash", "write / between folders"))
+    inside(t, "file", path, "photograph") && ends(t, "file", path, IMAGES)
+}
+
+/// Whether the path under `key` leads to a thing beside the job or practice file, or below; records what is wrong with it.
+pub fn inside(t: &Table<'_>, key: &'static str, path: &str, thing: &str) -> bool {
+    let (what, help) = if path.contains('\\') {
+        ("has a backslash", "write / between folders".to_owned())
     } else if path.starts_with('/') || path.contains(':') {
-        Some((
-            "does not begin beside the job file",
-            "put the photograph beside the job file and write photos/name.jpg",
-        ))
+        ("does not begin beside this file", format!("put the {thing} beside this file and write folder/name"))
     } else if path.split('/').any(|part| matches!(part, ".." | "." | "")) {
-        Some((
+        (
             "leaves its folder or has an empty part",
-            "put the photograph beside the job file and write photos/name.jpg",
-        ))
-    } else if !IMAGES.iter().any(|ending| lower.ends_with(ending)) {
-        Some(("is not an image that the pack can hold", "save it as .jpg or .png"))
+            format!("put the {thing} beside this file and write folder/name"),
+        )
     } else {
-        None
+        return true;
     };
-    let Some((what, help)) = wrong else { return true };
     t.fault(Kind::NotAllowed, format_args!("the path {} {what}", quoted(path)))
-        .at(t.place("file"), "path")
-        .allowed("a path beside the job file, with / between folders, to a .jpg, .jpeg or .png")
+        .at(t.place(key), "path")
+        .allowed("a path beside this file, with / between folders")
         .help(help);
+    false
+}
+
+/// Whether the path under `key` has one of the endings; records where it does not.
+pub fn ends(t: &Table<'_>, key: &'static str, path: &str, endings: &[&str]) -> bool {
+    let lower = path.to_lowercase();
+    if endings.iter().any(|ending| lower.ends_with(ending)) {
+        return true;
+    }
+    t.fault(Kind::NotAllowed, format_args!("the path {} is not an image that the pack can hold", quoted(path)))
+        .at(t.place(key), "path")
+        .allowed(format!("a file that ends in {}", one_of(endings)))
+        .help(format!("save it as {}", one_of(endings)));
     false
 }
 

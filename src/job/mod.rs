@@ -9,6 +9,7 @@
 //! * `names`: marks and names, and references to them
 //! * `identity basis wind sectors materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
 //!   the file's order
+//! * [`practice`]: the practice file, read the same way
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -29,6 +30,7 @@ mod names;
 mod openings;
 mod panels;
 mod plan;
+pub mod practice;
 mod reader;
 mod returns;
 mod sectors;
@@ -45,7 +47,7 @@ use toml::de::DeTable;
 pub use date::in_words as date_in_words;
 
 use crate::building::found::{self, Found};
-use crate::building::{Building, Led, PlanWall};
+use crate::building::{Basis, Building, Led, PlanWall, Practice};
 use crate::error::{Kind, Report};
 use names::Names;
 use reader::{Reader, Table};
@@ -57,24 +59,36 @@ use returns::Around;
 /// # Errors
 /// A [`Report`] with every diagnostic of the file: faults of the TOML, or else faults of its entries.
 pub fn read(name: &str, text: &str) -> Result<Building, Report> {
+    read_for(name, text, None)
+}
+
+/// As [`read`], for a practice: what it has in every pack stands where the job says nothing.
+///
+/// # Errors
+/// As [`read`].
+pub fn read_for(name: &str, text: &str, practice: Option<&Practice>) -> Result<Building, Report> {
     let reader = Reader::default();
     let (tree, errors) = DeTable::parse_recoverable(text);
     // A tree that was mended by guessing would give faults that are not there.
     let building = if errors.is_empty() {
         let root = Table::new(&reader, "job file".to_owned(), tree.get_ref(), 0..0);
-        whole(&root)
+        whole(&root, practice)
     } else {
         syntax::record(&reader, text, &errors);
         None
     };
     let (diagnostics, warnings) = reader.into_parts();
     match building {
-        Some(building) if diagnostics.is_empty() => Ok(Building { warnings, ..building }),
+        Some(building) if diagnostics.is_empty() => {
+            let of_practice = practice.iter().flat_map(|p| &p.warnings).map(|w| format!("practice file: {w}"));
+            let warnings = warnings.into_iter().chain(of_practice).collect();
+            Ok(Building { warnings, practice: practice.cloned(), ..building })
+        }
         _ => Err(Report::new(name, text, diagnostics)),
     }
 }
 
-fn whole(root: &Table<'_>) -> Option<Building> {
+fn whole(root: &Table<'_>, practice: Option<&Practice>) -> Option<Building> {
     let reader = root.reader;
     let job_table = root.need("job").table("job");
     let identity = job_table.as_ref().and_then(identity::identity);
@@ -82,7 +96,8 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let signatures = signature_table.as_ref().and_then(identity::signatures);
     let revision_tables = root.need("revisions").tables("revision", "letter");
     let revisions = identity::revisions(&revision_tables);
-    let basis = basis::basis(root.may("basis").table("basis").as_ref());
+    let house = practice.and_then(|p| p.basis.clone()).unwrap_or_else(Basis::usual);
+    let basis = basis::basis(root.may("basis").table("basis").as_ref(), &house);
 
     let materials =
         materials::by_name("material", root.need("materials").named("material"), materials::material);
@@ -212,7 +227,10 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     }
     bearings::together(&bearings, &returns);
     let stone_tables = root.may("padstones").tables("padstone", "name");
-    let padstones = all(&stone_tables, bearings::padstone);
+    let padstones = all(&stone_tables, bearings::padstone).map(|own| match practice {
+        Some(practice) if own.is_empty() => practice.padstones.clone(),
+        _ => own,
+    });
     bearings::named_once(&stone_tables);
     if bearings.is_empty() && !stone_tables.is_empty() && !root.has("bearings") {
         reader.warn("padstones: there are no [[bearings]] that could use them");
@@ -289,6 +307,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
         hold_points: hold_points?,
         photographs: photographs?,
         responsible: responsible?,
+        practice: None,
         found: Found::default(),
         warnings: Vec::new(),
     };

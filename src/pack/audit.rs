@@ -59,6 +59,22 @@ impl fmt::Display for Finding {
     }
 }
 
+/// Flaws as lines; one that stands on every sheet is told once.
+pub(super) fn told(findings: &[Finding]) -> Vec<String> {
+    let mut out: Vec<(&Finding, usize)> = Vec::new();
+    for finding in findings {
+        match out.iter_mut().find(|(first, _)| first.flaw == finding.flaw) {
+            Some((_, more)) => *more += 1,
+            None => out.push((finding, 0)),
+        }
+    }
+    let line = |(finding, more): (&Finding, usize)| match more {
+        0 => finding.to_string(),
+        more => format!("{finding}, and {more} times more"),
+    };
+    out.into_iter().map(line).collect()
+}
+
 /// Every flaw of a laid-out document, sheet by sheet.
 pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
     let mut findings = Vec::new();
@@ -88,7 +104,6 @@ pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
 }
 
 /// The text of each sheet of a laid-out document, in the order in which it prints.
-#[cfg(test)]
 pub(super) fn sheets(document: &PagedDocument) -> Vec<String> {
     let words = |sheet: Sheet| sheet.inks.into_iter().map(|ink| ink.text).collect::<String>();
     document.pages().iter().map(|page| words(Sheet::of(&page.frame))).collect()

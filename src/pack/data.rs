@@ -107,6 +107,8 @@ pub struct Pack {
     pub photographs: Vec<Photograph>,
     /// The whole job file, to be attached.
     pub inputs: String,
+    /// The practice that makes the pack, where it has a file.
+    pub practice: Option<Practice>,
     /// What the pack prints, as JSON: it travels inside the PDF.
     pub record: String,
     /// The lines of the job file that say something, with their numbers.
@@ -168,6 +170,17 @@ pub struct Checked {
     pub letters: String,
     /// Date, or empty.
     pub date: String,
+}
+
+/// What a pack prints of its practice besides its name.
+#[derive(Debug, Clone, Serialize)]
+pub struct Practice {
+    /// The practice file, to be attached.
+    pub text: String,
+    /// Its SHA-256.
+    pub digest: String,
+    /// Its standing notes.
+    pub notes: Vec<String>,
 }
 
 /// A revision of the pack.

@@ -7,6 +7,8 @@
 //! | `pdf` | compiling the templates and writing the PDF |
 //! | [`audit`] | looking over the finished sheets for overlaps, overflow and missing signs |
 //! | `ink` | what a finished sheet prints and where |
+//! | [`house`] | how the packs of a practice look, and whether its files can be used |
+//! | `said` | what must stand on the pages whatever templates set them |
 //!
 //! The templates in `templates/` hold no engineering: every number arrives as text, formulas
 //! arrive as trees, drawings as positions in millimetres on paper. Nothing here reads a disk,
@@ -14,9 +16,11 @@
 
 pub mod audit;
 pub mod data;
+pub mod house;
 mod ink;
 mod pdf;
 pub mod photograph;
+mod said;
 mod world;
 
 use std::fmt;
@@ -25,6 +29,7 @@ use std::time::Duration;
 use serde::Serialize;
 
 pub use audit::{Finding, Flaw};
+pub use house::House;
 pub use pdf::evict;
 use world::Kind;
 
@@ -69,6 +74,8 @@ pub enum PackError {
     Template(Vec<String>),
     /// The PDF could not be written: a sign that no embedded face has, mostly.
     Export(Vec<String>),
+    /// Templates of a practice leave out what every pack must say.
+    Unsaid(Vec<String>),
 }
 
 impl fmt::Display for PackError {
@@ -77,6 +84,7 @@ impl fmt::Display for PackError {
             Self::Data(line) => ("the pack's data cannot be written", std::slice::from_ref(line)),
             Self::Template(lines) => ("the pack cannot be set", lines.as_slice()),
             Self::Export(lines) => ("the PDF cannot be written", lines.as_slice()),
+            Self::Unsaid(lines) => ("the templates leave out what every pack must say", lines.as_slice()),
         };
         write!(f, "{what}: {}", lines.join("; "))
     }
@@ -86,35 +94,45 @@ impl std::error::Error for PackError {}
 
 /// The PDF of a pack from its data.
 ///
-/// `data` serialises to the fields of [`data::Pack`]. `files` are the photographs, each with
+/// `house` is the practice in whose style it is set. `data` serialises to the fields of [`data::Pack`]. `files` are the photographs, each with
 /// the path by which the data names it (`/photo/0.jpg`). `ident` fixes the file's identifier:
 /// give the digest of the job file, so that the same job gives the same bytes.
 ///
 /// # Errors
-/// [`PackError`] where the data does not serialise, a template stops, or a sign has no glyph.
-pub fn typeset(data: impl Serialize, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
+/// [`PackError`] where the data does not serialise, a template stops, a sign has no glyph, or templates of the practice
+/// leave out what must be said.
+pub fn typeset(
+    data: impl Serialize,
+    files: &[(String, Vec<u8>)],
+    ident: &str,
+    house: Option<&House>,
+) -> Result<Typeset, PackError> {
     let json = serde_json::to_vec(&data).map_err(|error| PackError::Data(error.to_string()))?;
     // Its trees are as large as the sheets to come: while those are set, only the text is kept.
     drop(data);
-    pdf::typeset(Kind::Pack, json, files, ident)
+    pdf::typeset(Kind::Pack, json, files, ident, house)
 }
 
 /// The PDF of a summary for the client; otherwise as [`typeset`].
 ///
 /// # Errors
 /// As [`typeset`].
-pub fn typeset_client(data: &data::Client, ident: &str) -> Result<Typeset, PackError> {
+pub fn typeset_client(
+    data: &data::Client,
+    ident: &str,
+    house: Option<&House>,
+) -> Result<Typeset, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    pdf::typeset(Kind::Client, json, &[], ident)
+    pdf::typeset(Kind::Client, json, &[], ident, house)
 }
 
 /// The flaws of a summary's pages, as [`inspect`].
 ///
 /// # Errors
 /// As [`typeset`].
-pub fn inspect_client(data: &data::Client) -> Result<Vec<Finding>, PackError> {
+pub fn inspect_client(data: &data::Client, house: Option<&House>) -> Result<Vec<Finding>, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    let (document, _) = pdf::compile(&world::World::new(Kind::Client, json, &[]))?;
+    let (document, _) = pdf::compile(&world::World::new(Kind::Client, json, &[], house))?;
     Ok(audit::audit(&document))
 }
 
@@ -123,7 +141,7 @@ pub fn inspect_client(data: &data::Client) -> Result<Vec<Finding>, PackError> {
 /// # Errors
 /// As [`typeset`].
 pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Result<Typeset, PackError> {
-    pdf::typeset(Kind::Pack, json.as_bytes().to_vec(), files, ident)
+    pdf::typeset(Kind::Pack, json.as_bytes().to_vec(), files, ident, None)
 }
 
 /// The flaws of the finished sheets: text over text, text over the margins, missing signs.
@@ -132,9 +150,13 @@ pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Res
 ///
 /// # Errors
 /// As [`typeset`].
-pub fn inspect(data: &impl Serialize, files: &[(String, Vec<u8>)]) -> Result<Vec<Finding>, PackError> {
+pub fn inspect(
+    data: &impl Serialize,
+    files: &[(String, Vec<u8>)],
+    house: Option<&House>,
+) -> Result<Vec<Finding>, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    let world = world::World::new(Kind::Pack, json, files);
+    let world = world::World::new(Kind::Pack, json, files, house);
     let (document, _) = pdf::compile(&world)?;
     Ok(audit::audit(&document))
 }

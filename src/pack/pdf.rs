@@ -8,8 +8,9 @@ use typst::{World as _, WorldExt};
 use typst_layout::PagedDocument;
 use typst_pdf::{PdfOptions, PdfStandard, PdfStandards};
 
+use super::house::House;
 use super::world::{Kind, World};
-use super::{PackError, Times, Typeset};
+use super::{PackError, Times, Typeset, audit, said};
 
 /// The sheets of a pack laid out, with the typesetter's warnings.
 pub(super) fn compile(world: &World) -> Result<(PagedDocument, Vec<String>), PackError> {
@@ -24,14 +25,21 @@ pub(super) fn typeset(
     json: Vec<u8>,
     files: &[(String, Vec<u8>)],
     ident: &str,
+    house: Option<&House>,
 ) -> Result<Typeset, PackError> {
     let start = Instant::now();
-    let world = World::new(kind, json, files);
+    let must = if house.is_some_and(House::own_templates) { said::required(kind, &json) } else { Vec::new() };
+    let world = World::new(kind, json, files, house);
     let fonts = start.elapsed();
 
     let start = Instant::now();
-    let (document, warnings) = compile(&world)?;
+    let (document, mut warnings) = compile(&world)?;
     let compile = start.elapsed();
+    said::all(&must, &document)?;
+    // Our own sheets are looked over by tests; those in another face or by other templates here.
+    if house.is_some_and(|h| h.own_templates() || !h.fonts.is_empty()) {
+        warnings.extend(audit::told(&audit::audit(&document)));
+    }
 
     let start = Instant::now();
     let pdf = typst_pdf::pdf(&document, &options(ident)?)

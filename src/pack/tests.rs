@@ -15,7 +15,7 @@ fn the_sample_is_set_without_a_warning() {
 #[test]
 fn the_sample_has_no_flaw() {
     let data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    let flaws: Vec<String> = inspect(&data, &[], None).unwrap().iter().map(ToString::to_string).collect();
     assert!(flaws.is_empty(), "{}", flaws.join("\n"));
 }
 
@@ -59,7 +59,7 @@ fn the_audit_finds_flaws() {
     let drawing = serde_json::json!({"name": "flawed", "caption": "flawed", "scale": "1:20", "alt": "flawed",
         "width": 60.0, "height": 40.0, "items": items});
     data["sections"][0]["blocks"] = serde_json::json!([{"kind": "drawing", "drawing": drawing}]);
-    let mut flaws: Vec<Flaw> = inspect(&data, &[]).unwrap().into_iter().map(|finding| finding.flaw).collect();
+    let mut flaws: Vec<Flaw> = inspect(&data, &[], None).unwrap().into_iter().map(|finding| finding.flaw).collect();
     flaws.sort_by_key(|flaw| format!("{flaw:?}"));
     let expected = [
         Flaw::Crossed("covered".into()),
@@ -76,9 +76,9 @@ fn the_audit_finds_flaws() {
 fn a_sign_without_a_glyph_is_refused() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
     data["cautions"][0] = "The lintel is marked \u{6881}.".into();
-    let error = typeset(&data, &[], "sample").unwrap_err();
+    let error = typeset(&data, &[], "sample", None).unwrap_err();
     assert!(matches!(&error, PackError::Export(_)), "{error}");
-    let flaws = inspect(&data, &[]).unwrap();
+    let flaws = inspect(&data, &[], None).unwrap();
     assert!(flaws.iter().any(|finding| matches!(finding.flaw, Flaw::Missing(_))), "{flaws:?}");
 }
 
@@ -87,7 +87,7 @@ fn a_photograph_that_is_not_there_is_named() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
     data["photographs"] =
         serde_json::json!([{"path": "/photo/0.jpg", "caption": "R1 from the garden", "mark": "R1"}]);
-    let error = typeset(&data, &[], "sample").unwrap_err();
+    let error = typeset(&data, &[], "sample", None).unwrap_err();
     let PackError::Template(lines) = &error else { panic!("{error}") };
     assert!(lines.iter().any(|line| line.contains("photo/0.jpg")), "{error}");
 }
@@ -127,9 +127,9 @@ fn long_words_keep_clear() {
             }
         }
     }
-    let pack = typeset(&data, &[], "sample").unwrap();
+    let pack = typeset(&data, &[], "sample", None).unwrap();
     assert_eq!(pack.warnings, Vec::<String>::new());
-    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    let flaws: Vec<String> = inspect(&data, &[], None).unwrap().iter().map(ToString::to_string).collect();
     assert!(flaws.is_empty(), "{}", flaws.join("\n"));
 }
 
@@ -138,7 +138,7 @@ fn long_words_keep_clear() {
 #[test]
 fn every_sheet_says_what_it_is() {
     let data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let world = world::World::new(Kind::Pack, SAMPLE.as_bytes().to_vec(), &[]);
+    let world = world::World::new(Kind::Pack, SAMPLE.as_bytes().to_vec(), &[], None);
     let document = pdf::compile(&world).unwrap().0;
     let sheets = audit::sheets(&document);
     let digest = data["digest"].as_str().unwrap();
@@ -169,14 +169,14 @@ fn words_print_literally() {
     data["cautions"][0] = words.into();
     data["job"]["title"] = words.into();
     data["inputs"] = words.into();
-    let pack = typeset(&data, &[], "sample").unwrap();
+    let pack = typeset(&data, &[], "sample", None).unwrap();
     assert_eq!(pack.warnings, Vec::<String>::new());
     let all = printed(&data);
     assert!(all.contains("#panic(1) *bold* _it_ $x$ <b> @ref [a]"), "{all}");
 }
 
 fn printed(data: &serde_json::Value) -> String {
-    let world = world::World::new(Kind::Pack, serde_json::to_vec(data).unwrap(), &[]);
+    let world = world::World::new(Kind::Pack, serde_json::to_vec(data).unwrap(), &[], None);
     audit::sheets(&pdf::compile(&world).unwrap().0).concat()
 }
 
@@ -184,7 +184,7 @@ fn printed(data: &serde_json::Value) -> String {
 #[test]
 fn a_long_job_file_takes_three_sheets() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    let pages = |data: &serde_json::Value| typeset(data, &[], "sample").unwrap().pages;
+    let pages = |data: &serde_json::Value| typeset(data, &[], "sample", None).unwrap().pages;
     data["inputs"] = "".into();
     let without = pages(&data);
     let line = |n: usize| match n % 5 {
@@ -194,7 +194,7 @@ fn a_long_job_file_takes_three_sheets() {
     };
     data["inputs"] = (1..=420).map(line).collect::<Vec<_>>().join("\n").into();
     assert!(pages(&data) <= without + 3);
-    assert_eq!(inspect(&data, &[]).unwrap(), vec![]);
+    assert_eq!(inspect(&data, &[], None).unwrap(), vec![]);
 }
 
 /// Words in a column of numbers, and a first column of words, have room in a table of many columns.
@@ -215,7 +215,7 @@ fn words_in_a_table_have_room() {
     ];
     data["sections"][0]["blocks"] = serde_json::json!([
         {"kind": "table", "caption": "cases", "columns": columns, "rows": rows, "strong": [1]}]);
-    let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+    let flaws: Vec<String> = inspect(&data, &[], None).unwrap().iter().map(ToString::to_string).collect();
     assert!(flaws.is_empty(), "{}", flaws.join("\n"));
 }
 
@@ -235,7 +235,7 @@ fn captions_of_neighbours_stay_apart() {
             {"kind": "drawings", "drawings": [drawing(first, 76.0), drawing(second, 58.0)]},
             {"kind": "note", "text": "between"},
             {"kind": "drawings", "drawings": [drawing(third, 35.0)]}]);
-        let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+        let flaws: Vec<String> = inspect(&data, &[], None).unwrap().iter().map(ToString::to_string).collect();
         assert!(flaws.is_empty(), "{first} {second} {third}: {}", flaws.join("\n"));
     }
 }
@@ -252,7 +252,7 @@ fn a_long_formula_keeps_to_the_sheet() {
         let step = serde_json::json!({"kind": "step", "clause": "6.1.2.1(2)", "words": "a long sum", "symbol": ["sym", "N", "Ed"],
             "formula": ["sym", "x"], "substitution": sum, "spoken": "a long sum", "result": {"value": "1", "unit": "kN"}});
         data["sections"][0]["blocks"] = serde_json::json!([step]);
-        let flaws: Vec<String> = inspect(&data, &[]).unwrap().iter().map(ToString::to_string).collect();
+        let flaws: Vec<String> = inspect(&data, &[], None).unwrap().iter().map(ToString::to_string).collect();
         assert!(flaws.is_empty(), "{parts}: {}", flaws.join("\n"));
     }
 }

@@ -11,6 +11,8 @@ use typst::text::{Font, FontBook};
 use typst::utils::LazyHash;
 use typst::{Library, LibraryExt};
 
+use super::house::{House, Style};
+
 /// What is set: each from a main template of its own.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
 pub(super) enum Kind {
@@ -30,7 +32,7 @@ impl Kind {
 }
 
 /// The templates by their virtual paths.
-const TEMPLATES: &[(&str, &str)] = &[
+pub(super) const TEMPLATES: &[(&str, &str)] = &[
     ("/templates/client.typ", include_str!("../../templates/client.typ")),
     ("/templates/pack.typ", include_str!("../../templates/pack.typ")),
     ("/templates/parts/back.typ", include_str!("../../templates/parts/back.typ")),
@@ -60,6 +62,8 @@ const FONTS: &[&[u8]] = &[
 ];
 
 const DATA: &str = "/data.json";
+/// What the templates read of the practice.
+const STYLE: &str = "/house.json";
 
 /// What never changes between packs, made once in a process.
 struct Fixed {
@@ -93,23 +97,67 @@ fn id_of(path: &str) -> Option<FileId> {
     Some(RootedPath::new(VirtualRoot::Project, path).intern())
 }
 
-/// One pack's files: templates and fonts from the program, data and photographs from memory.
+/// The faces that are in the program.
+pub(super) fn own_faces() -> &'static [Font] {
+    &fixed().fonts
+}
+
+/// One pack's files: templates and fonts from the program, data and photographs from memory, and what a practice has
+/// in place of ours.
 pub(super) struct World {
     main: FileId,
     files: HashMap<FileId, Bytes>,
+    /// Templates of the practice.
+    sources: HashMap<FileId, Source>,
+    /// Faces of the practice, behind ours in the book that names them all.
+    faces: Option<(LazyHash<FontBook>, Vec<Font>)>,
 }
 
 impl World {
     /// The world of one pack. A file whose path is not a plain virtual path is left out, and
     /// a template that asks for it says that it was not found.
-    pub(super) fn new(kind: Kind, json: Vec<u8>, files: &[(String, Vec<u8>)]) -> Self {
+    pub(super) fn new(kind: Kind, json: Vec<u8>, files: &[(String, Vec<u8>)], house: Option<&House>) -> Self {
         fixed();
-        let mut held: HashMap<FileId, Bytes> = files
-            .iter()
-            .filter_map(|(path, bytes)| Some((id_of(path)?, Bytes::new(bytes.clone()))))
-            .collect();
-        held.insert(id_of(DATA).expect("the data has a plain path"), Bytes::new(json));
-        Self { main: id_of(kind.main()).expect("a main template has a plain path"), files: held }
+        let mut world = Self {
+            main: id_of(kind.main()).expect("a main template has a plain path"),
+            files: HashMap::new(),
+            sources: HashMap::new(),
+            faces: None,
+        };
+        for (path, bytes) in files {
+            world.hold(path, bytes.clone());
+        }
+        let style = house.map_or_else(Style::default, |h| h.style.clone());
+        world.hold(STYLE, serde_json::to_vec(&style).unwrap_or_default());
+        world.hold(DATA, json);
+        if let Some(house) = house {
+            world.furnish(house);
+        }
+        world
+    }
+
+    fn hold(&mut self, path: &str, bytes: Vec<u8>) {
+        if let Some(id) = id_of(path) {
+            self.files.insert(id, Bytes::new(bytes));
+        }
+    }
+
+    fn furnish(&mut self, house: &House) {
+        if let (Some(mark), Some(bytes)) = (&house.style.logo, &house.logo) {
+            self.hold(&mark.path, bytes.clone());
+        }
+        for (path, bytes) in &house.templates {
+            let path = format!("/templates/{path}");
+            let source = std::str::from_utf8(bytes).ok().filter(|_| path.ends_with(".typ")).zip(id_of(&path));
+            match source {
+                Some((text, id)) => drop(self.sources.insert(id, Source::new(id, text.to_owned()))),
+                None => self.hold(&path, bytes.clone()),
+            }
+        }
+        if !house.fonts.is_empty() {
+            let book = FontBook::from_fonts(own_faces().iter().chain(&house.fonts));
+            self.faces = Some((LazyHash::new(book), house.fonts.clone()));
+        }
     }
 }
 
@@ -119,7 +167,7 @@ impl typst::World for World {
     }
 
     fn book(&self) -> &LazyHash<FontBook> {
-        &fixed().book
+        self.faces.as_ref().map_or(&fixed().book, |(book, _)| book)
     }
 
     fn main(&self) -> FileId {
@@ -127,7 +175,7 @@ impl typst::World for World {
     }
 
     fn source(&self, id: FileId) -> FileResult<Source> {
-        fixed().sources.get(&id).cloned().ok_or_else(|| missing(id))
+        self.sources.get(&id).or_else(|| fixed().sources.get(&id)).cloned().ok_or_else(|| missing(id))
     }
 
     fn file(&self, id: FileId) -> FileResult<Bytes> {
@@ -135,7 +183,8 @@ impl typst::World for World {
     }
 
     fn font(&self, index: usize) -> Option<Font> {
-        fixed().fonts.get(index).cloned()
+        let behind = || self.faces.as_ref()?.1.get(index.checked_sub(own_faces().len())?);
+        own_faces().get(index).or_else(behind).cloned()
     }
 
     /// No clock: a pack's dates come from its data alone.

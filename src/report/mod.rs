@@ -114,6 +114,11 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
             })
             .collect(),
         inputs: text.to_owned(),
+        practice: b.practice.as_ref().map(|p| data::Practice {
+            text: p.text.clone(),
+            digest: p.digest.clone(),
+            notes: p.notes.clone(),
+        }),
         record: serde_json::to_string_pretty(&record::of_job(b, results, digest)).unwrap_or_default(),
         listing: listing::of(text),
         notation: notation::used(&results.sections),

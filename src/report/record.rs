@@ -21,6 +21,9 @@ pub struct Record {
     pub format: u32,
     /// SHA-256 of the job file, in hexadecimal.
     pub job_digest: String,
+    /// SHA-256 of the practice file; empty where there is none.
+    #[serde(default, skip_serializing_if = "String::is_empty")]
+    pub practice_digest: String,
     /// Number of the job.
     pub number: String,
     /// Title of the job.
@@ -103,6 +106,7 @@ pub fn of_job(b: &Building, results: &Results, digest: &str) -> Record {
         version: PROGRAM.1.to_owned(),
         format: FORMAT,
         job_digest: digest.to_owned(),
+        practice_digest: b.practice.as_ref().map_or(String::new(), |p| p.digest.clone()),
         number: b.identity.number.clone(),
         title: b.identity.title.clone(),
         revision: b.revisions.last().map_or(String::new(), |r| r.letter.clone()),

@@ -20,7 +20,7 @@ fn pack_with(change: impl Fn(&mut pack::data::Pack)) -> Vec<u8> {
     let (building, results) = draw("job.toml", &text).expect("a valid job");
     let mut data = report::pack(&building, &results, &text, &digest(&text));
     change(&mut data);
-    pack::typeset(data, &[], &digest(&text)).expect("a pack").pdf
+    pack::typeset(data, &[], &digest(&text), None).expect("a pack").pdf
 }
 
 fn again(pdf: Vec<u8>) -> Rechecked {
@@ -30,7 +30,8 @@ fn again(pdf: Vec<u8>) -> Rechecked {
 #[test]
 fn a_pack_rechecks() {
     let made = sheet("job.toml", &job(), Path::new("")).expect("a pack");
-    let Held { job: inside, record } = held(made.typeset.pdf.clone()).expect("a pack");
+    let Held { job: inside, practice, record } = held(made.typeset.pdf.clone()).expect("a pack");
+    assert_eq!(practice, None);
     assert_eq!(inside, job());
     assert_eq!(record.outcome, made.results.outcome.words());
     assert!(record.results.len() > 3 && record.sheets.iter().all(|s| !s.lines.is_empty()));
@@ -56,7 +57,7 @@ fn one_digit_of_the_results_is_seen() {
     let (building, results) = draw("job.toml", &text).expect("a valid job");
     let true_one = record::of_job(&building, &results, &digest(&text));
     let found = |record: Record| {
-        let held = Held { job: text.clone(), record };
+        let held = Held { job: text.clone(), practice: None, record };
         recheck("job.toml", held).expect("a valid job")
     };
     assert!(found(true_one.clone()).stands());

@@ -101,7 +101,7 @@ fn another_version_does_not_overwrite_an_issued_pack() {
         "\"version\": \"0.0.9\"",
         1,
     );
-    let old = perpend::pack::typeset(data, &[], "another").expect("a pack").pdf;
+    let old = perpend::pack::typeset(data, &[], "another", None).expect("a pack").pdf;
     let place = Place::with(&[("job.toml", &text)]);
     place.put(PACK, &old);
     for args in [&["sheet", "job.toml"][..], &["sheet", "--only", "summary", "job.toml"]] {

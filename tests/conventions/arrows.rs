@@ -3,8 +3,9 @@
 use super::sources;
 
 /// The modules, each of which may use those before it. [`perpend`]'s crate doc says the same.
-const ORDER: [&str; 16] = [
+const ORDER: [&str; 17] = [
     "error",
+    "files",
     "quantity",
     "solve",
     "trace",
@@ -15,9 +16,9 @@ const ORDER: [&str; 16] = [
     "sketch",
     "checks",
     "pack",
+    "house",
     "report",
     "archive",
-    "files",
     "many",
     "cli",
 ];
@@ -26,8 +27,9 @@ const ORDER: [&str; 16] = [
 const MACROS: [&str; 8] = ["calc", "decide", "found", "given", "lookup", "require", "symbols", "verify"];
 
 /// `lib.rs` is the pipeline: above nothing but the command line.
-const PIPELINE: [&str; 9] =
-    ["check", "digest", "draw", "file_name", "recheck", "set", "sheet", "Sheeted", "summarise"];
+const PIPELINE: [&str; 12] = [
+    "check", "check_for", "digest", "draw", "draw_for", "file_name", "recheck", "set", "sheet", "Sheeted", "Source", "summarise",
+];
 
 fn place(module: &str) -> Option<usize> {
     ORDER.iter().position(|m| *m == module)

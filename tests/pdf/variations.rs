@@ -10,7 +10,7 @@ fn flaws(name: &str, text: &str) -> Vec<String> {
     let (building, results) = draw(name, text).unwrap_or_else(|e| panic!("{name}: {e}\n{text}"));
     let data = report::pack(&building, &results, text, &perpend::digest(text));
     let files = photographs(&building, Path::new("jobs")).unwrap_or_else(|e| panic!("{name}: {e}"));
-    let found = pack::inspect(&data, &files).unwrap_or_else(|e| panic!("{name}: {e}"));
+    let found = pack::inspect(&data, &files, None).unwrap_or_else(|e| panic!("{name}: {e}"));
     pack::evict(2);
     found.iter().map(|flaw| format!("{name}: {flaw}")).collect()
 }

@@ -1,11 +1,12 @@
 //! The summary for the client of every demo job: as text, and what must hold of each.
 
 use std::fmt::Write as _;
+use std::path::Path;
 
 use perpend::checks::outcome::Outcome;
 use perpend::pack::data::Client;
 use perpend::report::{client, plain};
-use perpend::{digest, draw, pack, summarise};
+use perpend::{Source, digest, draw, pack, summarise};
 
 use crate::jobs;
 
@@ -94,13 +95,14 @@ fn nothing_is_softened() {
 fn two_pages_at_most_and_nothing_overlaps() {
     for (name, text) in jobs::demos() {
         let (b, results) = draw(&name, &text).expect("a valid job");
-        let made = summarise(&b, &results, &text).expect("a summary");
+        let from = Source { text: &text, folder: Path::new(""), house: None };
+        let made = summarise(&b, &results, &from).expect("a summary");
         assert!(made.typeset.pages <= 2, "{name}: {} pages", made.typeset.pages);
         assert_eq!(made.typeset.warnings, [] as [String; 0], "{name}");
         assert_eq!(made.hard, [], "{name}");
-        let flaws = pack::inspect_client(&client::of_job(&b, &results, &digest(&text))).expect("a summary");
+        let flaws = pack::inspect_client(&client::of_job(&b, &results, &digest(&text)), None).expect("a summary");
         assert_eq!(flaws, [], "{name}");
-        let again = summarise(&b, &results, &text).expect("a summary");
+        let again = summarise(&b, &results, &from).expect("a summary");
         assert!(again.typeset.pdf == made.typeset.pdf, "{name}: the same bytes");
     }
 }

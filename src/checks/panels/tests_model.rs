@@ -81,6 +81,7 @@ fn house() -> Building {
         padstones: Vec::new(),
         responsible: Vec::new(),
         found: Found::default(),
+        practice: None,
         warnings: Vec::new(),
     }
 }

@@ -1,0 +1,105 @@
+//! The practice that makes the packs: who it is, how its pages look, what it puts in every pack.
+
+use super::parts::Basis;
+use super::things::Padstone;
+use crate::quantity::Length;
+
+/// A practice as its file describes it. Paths are relative to that file.
+#[derive(Clone, Debug)]
+pub struct Practice {
+    /// Name, as on its letters.
+    pub name: String,
+    /// Address, line by line; may be empty.
+    pub address: Vec<String>,
+    /// How a client reaches it.
+    pub contact: Option<String>,
+    /// Sentences that stand with the limits of every pack.
+    pub notes: Vec<String>,
+    /// Colour of headings.
+    pub accent: Option<Accent>,
+    /// Its mark.
+    pub logo: Option<Logo>,
+    /// Family of the running text, in the folder `fonts`.
+    pub face: Option<String>,
+    /// Folder of faces.
+    pub fonts: Option<String>,
+    /// Folder of templates that take the place of ours.
+    pub templates: Option<String>,
+    /// Padstones that it keeps, for jobs that give none.
+    pub padstones: Vec<Padstone>,
+    /// Factors for jobs that do not state them; `None` where it has none of its own.
+    pub basis: Option<Basis>,
+    /// The file itself, as it travels inside the packs.
+    pub text: String,
+    /// SHA-256 of the file, in hexadecimal.
+    pub digest: String,
+    /// Possible but odd values, as sentences.
+    pub warnings: Vec<String>,
+}
+
+/// A practice's mark.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Logo {
+    /// File, SVG or PNG.
+    pub file: String,
+    /// What it shows, read aloud.
+    pub words: String,
+    /// Height on a first page.
+    pub height: Length,
+}
+
+/// A colour for headings on white paper.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct Accent {
+    /// Red, green and blue, each 0 to 255.
+    pub rgb: [u8; 3],
+}
+
+impl Accent {
+    /// The colour of `#1f3d52`; `None` for anything but a # and six hexadecimal digits.
+    pub fn from_hex(text: &str) -> Option<Self> {
+        let digits = text.strip_prefix('#').filter(|d| d.len() == 6 && d.bytes().all(|b| b.is_ascii_hexdigit()))?;
+        let part = |at: usize| u8::from_str_radix(digits.get(at..at + 2)?, 16).ok();
+        Some(Self { rgb: [part(0)?, part(2)?, part(4)?] })
+    }
+
+    /// `#1f3d52`.
+    pub fn hex(self) -> String {
+        let [r, g, b] = self.rgb;
+        format!("#{r:02x}{g:02x}{b:02x}")
+    }
+
+    /// Contrast with white paper, 1 for white to 21 for black: relative luminance and contrast ratio as defined in
+    /// W3C, Web Content Accessibility Guidelines (WCAG) 2.1, 2018, section 5 (formulas entered from memory).
+    pub fn contrast(self) -> f64 {
+        let linear = |c: u8| {
+            let c = f64::from(c) / 255.0;
+            if c <= 0.03928 { c / 12.92 } else { ((c + 0.055) / 1.055).powf(2.4) }
+        };
+        let [r, g, b] = self.rgb.map(linear);
+        1.05 / (0.2126 * r + 0.7152 * g + 0.0722 * b + 0.05)
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::Accent;
+
+    #[test]
+    fn contrast_runs_from_white_to_black() {
+        let of = |hex: &str| Accent::from_hex(hex).expect("a colour").contrast();
+        assert!((of("#ffffff") - 1.0).abs() < 1e-9 && (of("#000000") - 21.0).abs() < 1e-9);
+        // By hand: 0x80/255 = 0.50196, ((0.50196 + 0.055)/1.055)^2.4 = 0.21586; 1.05/0.26586 = 3.949.
+        assert!((of("#808080") - 3.949).abs() < 1e-3, "{}", of("#808080"));
+        // Pure red: luminance 0.2126, 1.05/0.2626 = 3.998.
+        assert!((of("#ff0000") - 3.998).abs() < 1e-3, "{}", of("#ff0000"));
+    }
+
+    #[test]
+    fn only_six_digits_are_a_colour() {
+        for wrong in ["", "#", "1f3d52", "#1f3d5", "#1f3d522", "#1f3d5g", "#1f3d+2", "red", "#é3d52"] {
+            assert_eq!(Accent::from_hex(wrong), None, "{wrong}");
+        }
+        assert_eq!(Accent::from_hex("#1F3d52").map(Accent::hex).as_deref(), Some("#1f3d52"));
+    }
+}

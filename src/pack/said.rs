@@ -1,0 +1,69 @@
+//! What must stand on the pages whatever templates set them: a practice may change how a pack looks, not what it says.
+
+use serde_json::Value;
+use typst_layout::PagedDocument;
+
+use super::world::Kind;
+use super::{PackError, audit};
+
+/// Words that must be found: on every page, or anywhere.
+pub(super) enum Must {
+    EveryPage(String),
+    Somewhere(String),
+}
+
+/// What the data demands. Whole sentences, so that a page may end between two.
+pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
+    let data: Value = serde_json::from_slice(json).unwrap_or_default();
+    let text = |path: &str| data.pointer(path).and_then(Value::as_str).unwrap_or_default().to_owned();
+    let each = |path: &str, inner: &str| -> Vec<String> {
+        let items = data.pointer(path).and_then(Value::as_array).into_iter().flatten();
+        items.filter_map(|item| item.pointer(inner).and_then(Value::as_str)).map(str::to_owned).collect()
+    };
+    let words = match kind {
+        Kind::Pack => [
+            vec![text("/outcome/words"), text("/outcome/sentence")],
+            each("/warnings", ""),
+            each("/holds", "/text"),
+            each("/assumptions", "/text"),
+            each("/schedule", "/check"),
+            each("/cautions", ""),
+        ]
+        .concat(),
+        Kind::Client => {
+            let parts = data.pointer("/parts").and_then(Value::as_array).cloned().unwrap_or_default();
+            let lines = ["lines", "steps"].iter().flat_map(|key| {
+                parts.iter().filter_map(|p| p.get(*key)?.as_array()).flatten().filter_map(Value::as_str).map(str::to_owned)
+            });
+            std::iter::once(text("/headline")).chain(lines).collect()
+        }
+    };
+    let sentences = words.iter().flat_map(|w| w.split_inclusive(". ")).map(|s| Must::Somewhere(s.trim().to_owned()));
+    std::iter::once(Must::EveryPage(text("/unsigned_text"))).chain(sentences).collect()
+}
+
+/// Holds the pages against what must stand on them.
+///
+/// # Errors
+/// [`PackError::Unsaid`] with what is not there.
+pub(super) fn all(must: &[Must], document: &PagedDocument) -> Result<(), PackError> {
+    if must.is_empty() {
+        return Ok(());
+    }
+    let pages: Vec<String> = audit::sheets(document).iter().map(|page| letters(page)).collect();
+    let whole = pages.concat();
+    let lacking = |one: &Must| match one {
+        Must::Somewhere(words) => (!whole.contains(&letters(words))).then(|| words.clone()),
+        Must::EveryPage(words) => {
+            let page = pages.iter().position(|page| !page.contains(&letters(words)))?;
+            Some(format!("{words} (page {})", page + 1))
+        }
+    };
+    let unsaid: Vec<String> = must.iter().filter_map(lacking).collect();
+    if unsaid.is_empty() { Ok(()) } else { Err(PackError::Unsaid(unsaid)) }
+}
+
+/// The text without what varies in setting: spaces of any width, joiners.
+fn letters(text: &str) -> String {
+    text.chars().filter(|c| !c.is_whitespace() && !matches!(c, '\u{2060}' | '\u{00ad}' | '\u{200b}')).collect()
+}
