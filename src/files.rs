@@ -72,7 +72,12 @@ pub fn read_named(file: &Path, largest: u64, kind: &str, help: &str) -> Result<V
 ///
 /// # Errors
 /// [`Error::File`] where the folder cannot be read, or holds more than `most` files, or one larger than `largest`.
-pub fn folder_of(folder: &Path, most: usize, largest: u64, help: &str) -> Result<Vec<(String, Vec<u8>)>, Error> {
+pub fn folder_of(
+    folder: &Path,
+    most: usize,
+    largest: u64,
+    help: &str,
+) -> Result<Vec<(String, Vec<u8>)>, Error> {
     let mut out = Vec::new();
     let mut waiting = vec![(folder.to_owned(), String::new())];
     while let Some((here, path)) = waiting.pop() {

@@ -4,10 +4,47 @@ use std::path::{Path, PathBuf};
 
 use crate::building::Practice;
 use crate::error::{Error, Trouble};
-use crate::job::practice;
-use crate::pack::House;
-use crate::pack::house::{Assets, Unusable};
 use crate::files;
+use crate::job::practice;
+use crate::pack::Look;
+use crate::pack::look::{Assets, Logo, Unusable, Wanted};
+
+/// A practice ready to set packs.
+#[derive(Clone, Debug)]
+pub struct House {
+    /// The practice.
+    pub practice: Practice,
+    /// How its pages look.
+    pub look: Look,
+}
+
+impl House {
+    /// A practice with its files.
+    ///
+    /// # Errors
+    /// [`Unusable`] for the first file that cannot be used.
+    pub fn new(practice: Practice, assets: Assets) -> Result<Self, Unusable> {
+        let look = Look::new(&wanted(&practice), assets)?;
+        Ok(Self { practice, look })
+    }
+}
+
+fn wanted(p: &Practice) -> Wanted {
+    Wanted {
+        name: p.name.clone(),
+        address: p.address.clone(),
+        contact: p.contact.clone().unwrap_or_default(),
+        notes: p.notes.clone(),
+        accent: p.accent.map(|a| a.hex()),
+        logo: p.logo.as_ref().map(|l| Logo {
+            file: l.file.clone(),
+            words: l.words.clone(),
+            height: l.height.base(),
+        }),
+        face: p.face.clone().zip(p.fonts.clone()),
+        templates: p.templates.clone(),
+    }
+}
 
 /// The name of a practice file beside a job file.
 pub const FILE: &str = "practice.toml";

@@ -33,11 +33,12 @@ pub mod wind;
 use std::path::Path;
 
 use archive::{Held, Rechecked};
-use building::{Building, Practice};
+use building::{Building, Practice, Revision};
 use checks::Results;
 use error::{Error, Trouble};
 pub use files::digest;
-use pack::{House, PackError, Typeset, photograph};
+use house::House;
+use pack::{PackError, Typeset, photograph};
 
 /// The building of a job file and what its checks found, without drawings. `name` is the file's name for diagnostics.
 ///
@@ -114,7 +115,10 @@ pub struct Sheeted {
 /// # Errors
 /// As [`check`], where the attached job file, or the practice file beside it, cannot be used.
 pub fn recheck(name: &str, held: Held) -> Result<Rechecked, Error> {
-    let practice = held.practice.as_ref().map(|text| job::practice::read(&format!("{name}, {}", archive::PRACTICE), text));
+    let practice = held
+        .practice
+        .as_ref()
+        .map(|text| job::practice::read(&format!("{name}, {}", archive::PRACTICE), text));
     let practice = practice.transpose()?;
     let (building, results) = draw_for(&format!("{name}, {}", archive::JOB), &held.job, practice.as_ref())?;
     let now = report::record::of_job(&building, &results, &digest(&held.job));
@@ -140,7 +144,7 @@ pub fn summarise(building: &Building, results: &Results, from: &Source<'_>) -> R
     let data = report::client::of_job(building, results, &digest);
     let words = data.parts.iter().flat_map(|p| p.lines.iter().chain(&p.steps));
     let hard = words.flat_map(|line| report::plain::hard(line)).collect();
-    let typeset = pack::typeset_client(&data, &format!("{digest}-summary"), from.house)
+    let typeset = pack::typeset_client(&data, &format!("{digest}-summary"), from.house.map(|h| &h.look))
         .map_err(|why| unset(&why, from.house))?;
     Ok(Summarised { typeset, file_name: named(building, "Summary"), hard })
 }
@@ -163,14 +167,40 @@ pub fn sheet(name: &str, text: &str, folder: &Path) -> Result<Sheeted, Error> {
 /// As [`sheet`], where photographs or the pack are at fault; [`Error::File`] for templates of the practice.
 pub fn set(building: &Building, results: &Results, from: &Source<'_>) -> Result<Typeset, Error> {
     let digest = digest(from.text);
-    let data = report::pack(building, results, from.text, &digest);
+    let mut data = report::pack(building, results, from.text, &digest);
+    if let Some((revision, held)) = earlier(building, from.folder)? {
+        let now = report::record::of_job(building, results, &digest);
+        let practice = building.practice.as_ref().map_or("", |p| p.text.as_str());
+        archive::since::mark(&mut data, revision, &held, &now, practice);
+    }
     let files = photographs(building, from.folder)?;
-    pack::typeset(data, &files, &digest, from.house).map_err(|why| unset(&why, from.house))
+    pack::typeset(data, &files, &digest, from.house.map(|h| &h.look)).map_err(|why| unset(&why, from.house))
+}
+
+/// The latest issue before the current one whose pack is at hand, with what travels inside it.
+fn earlier<'b>(b: &'b Building, folder: &Path) -> Result<Option<(&'b Revision, Held)>, Error> {
+    let before = b.revisions.len().saturating_sub(1);
+    let named = b.revisions[..before].iter().rev().find_map(|r| Some((r, folder.join(r.pack.as_ref()?))));
+    let Some((revision, path)) = named else { return Ok(None) };
+    let unfit = |what: String, help: &str| Error::File {
+        path: files::name(&path),
+        trouble: Trouble::Content(what),
+        help: help.to_owned(),
+    };
+    let held = archive::held(files::read_pack(&path)?).map_err(|why| unfit(why.to_string(), why.help()))?;
+    let (number, letter) = (&held.record.number, &held.record.revision);
+    if *number != b.identity.number || *letter != revision.letter {
+        return Err(unfit(
+            format!("it is the pack of job {number}, revision {letter}"),
+            "Under [[revisions]] name the pack of this job with that letter, or take `pack` out.",
+        ));
+    }
+    Ok(Some((revision, held)))
 }
 
 /// Templates of a practice are its own; everything else that goes wrong in setting is the program's fault.
 fn unset(why: &PackError, house: Option<&House>) -> Error {
-    match house.filter(|h| h.own_templates()) {
+    match house.filter(|h| h.look.own_templates()) {
         Some(house) => Error::File {
             path: house.practice.templates.clone().unwrap_or_default(),
             trouble: Trouble::Content(why.to_string()),

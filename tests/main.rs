@@ -7,6 +7,7 @@
 //! * `properties`: what must be monotone, symmetric or continuous
 //! * `sheets`: every demo job as text
 //! * `pdf`: the packs, read back
+//! * `house`: the house style of a practice
 //! * `cli`: the command as a person runs it
 //! * `jobs`: job files for tests and benchmarks
 //! * `conventions`: arrows between modules, coverage files, the glossary
@@ -18,6 +19,7 @@ mod bounds;
 mod cli;
 mod conventions;
 mod examples;
+mod house;
 mod jobs;
 mod pdf;
 mod properties;

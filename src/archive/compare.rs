@@ -20,8 +20,19 @@ pub struct Change {
 pub struct Differences {
     /// Outcome, results and hold points.
     pub results: Vec<Change>,
-    /// Lines of working: title of the sheet, and its lines that changed.
-    pub sheets: Vec<(String, Vec<Change>)>,
+    /// Sheets with lines of working that changed.
+    pub sheets: Vec<Altered>,
+}
+
+/// A sheet that changed.
+#[derive(Clone, Debug, PartialEq, Eq)]
+pub struct Altered {
+    /// Which sheet it is, the same from run to run.
+    pub id: String,
+    /// Its title; the earlier one where it changed.
+    pub title: String,
+    /// Its lines that changed.
+    pub changes: Vec<Change>,
 }
 
 impl Differences {
@@ -131,7 +142,7 @@ fn printed(r: &Row) -> String {
         .join(", ")
 }
 
-fn sheets(was: &[Sheet], now: &[Sheet]) -> Vec<(String, Vec<Change>)> {
+fn sheets(was: &[Sheet], now: &[Sheet]) -> Vec<Altered> {
     let text = |s: &Sheet| s.lines.iter().map(|l| format!("{l}\n")).collect::<String>();
     let mut out = Vec::new();
     for old in was {
@@ -141,10 +152,14 @@ fn sheets(was: &[Sheet], now: &[Sheet]) -> Vec<(String, Vec<Change>)> {
             Some(new) if new.lines == old.lines => vec![change("title", Some(&old.title), Some(&new.title))],
             Some(new) => lines(&text(old), &text(new)),
         };
-        out.push((old.title.clone(), changes));
+        out.push(Altered { id: old.id.clone(), title: old.title.clone(), changes });
     }
     let fresh = now.iter().filter(|n| !was.iter().any(|w| w.id == n.id));
-    out.extend(fresh.map(|n| (n.title.clone(), vec![change("the sheet", None, Some(&n.title))])));
+    out.extend(fresh.map(|n| Altered {
+        id: n.id.clone(),
+        title: n.title.clone(),
+        changes: vec![change("the sheet", None, Some(&n.title))],
+    }));
     out
 }
 

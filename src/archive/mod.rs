@@ -2,6 +2,7 @@
 //!
 //! * [`pdf`]: the files that travel inside a pack
 //! * [`compare`]: what changed between two records or two job files
+//! * [`since`]: the same on the sheets of a new issue
 //!
 //! A pack carries its job file and a [`Record`] of all that it prints. Working the job again and comparing the two
 //! records tells whether every figure still stands. What is read are the attached files: whether the paper says the same
@@ -9,6 +10,7 @@
 
 pub mod compare;
 pub mod pdf;
+pub mod since;
 
 use std::fmt;
 use std::path::Path;

@@ -69,6 +69,8 @@ pub struct Revision {
     pub date: String,
     /// What changed.
     pub note: String,
+    /// The pack as it was issued, relative to the job file: a later issue lists what changed since.
+    pub pack: Option<String>,
 }
 
 /// Safety basis. A material factor left `None` follows UK NA Table NA.1 from class and category.

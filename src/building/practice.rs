@@ -58,7 +58,8 @@ pub struct Accent {
 impl Accent {
     /// The colour of `#1f3d52`; `None` for anything but a # and six hexadecimal digits.
     pub fn from_hex(text: &str) -> Option<Self> {
-        let digits = text.strip_prefix('#').filter(|d| d.len() == 6 && d.bytes().all(|b| b.is_ascii_hexdigit()))?;
+        let digits =
+            text.strip_prefix('#').filter(|d| d.len() == 6 && d.bytes().all(|b| b.is_ascii_hexdigit()))?;
         let part = |at: usize| u8::from_str_radix(digits.get(at..at + 2)?, 16).ok();
         Some(Self { rgb: [part(0)?, part(2)?, part(4)?] })
     }

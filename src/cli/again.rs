@@ -5,7 +5,7 @@ use std::path::{Path, PathBuf};
 
 use super::flags::Whose;
 use super::{ADEQUATE, FAILED, NOT_PLAINLY_ADEQUATE, complain, internal};
-use crate::archive::compare::{self, Change, Differences};
+use crate::archive::compare::{self, Altered, Change, Differences};
 use crate::archive::{Held, Rechecked, held};
 use crate::error::{Error, Trouble};
 use crate::report::record::{self, Record};
@@ -133,7 +133,7 @@ const fn lines_word(n: usize) -> &'static str {
 /// Results in full; of the working how many lines changed, or each of them.
 fn differences(all: &Differences, working: bool) -> Vec<String> {
     let mut out: Vec<String> = all.results.iter().flat_map(one).collect();
-    for (title, changes) in &all.sheets {
+    for Altered { title, changes, .. } in &all.sheets {
         out.push(format!("  sheet {title}: {} {} of working", changes.len(), lines_word(changes.len())));
         if working {
             out.extend(changes.iter().flat_map(one));

@@ -6,8 +6,7 @@ use clap::{Parser, Subcommand};
 
 use crate::building::Practice;
 use crate::error::Error;
-use crate::house;
-use crate::pack::House;
+use crate::house::{self, House};
 
 /// Calculation packs for masonry that stays when a load-bearing wall comes out.
 ///

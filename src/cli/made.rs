@@ -84,6 +84,7 @@ impl Made {
             setting += made.typeset.times;
             documents.push(Document::new(made.file_name, said, made.typeset.pdf));
         }
+        remarks.extend(unlisted(building));
         let spent = Spent { all: begin.elapsed(), setting };
         Ok(Self {
             documents,
@@ -122,6 +123,16 @@ impl Made {
 /// Where a file lies.
 pub(super) fn folder_of(file: &Path) -> &Path {
     file.parent().unwrap_or(Path::new(""))
+}
+
+/// An earlier issue of which no pack is named: nothing can be listed against it.
+fn unlisted(b: &Building) -> Option<String> {
+    let earlier = &b.revisions[..b.revisions.len().saturating_sub(1)];
+    let last = earlier.last().filter(|_| earlier.iter().all(|r| r.pack.is_none()))?;
+    Some(format!(
+        "note: what changed since revision {letter} is not listed: name its pack, `pack = \"...\"`, with that issue under [[revisions]]",
+        letter = last.letter
+    ))
 }
 
 /// An issued pack is never overwritten.

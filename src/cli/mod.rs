@@ -53,7 +53,9 @@ pub fn run() -> u8 {
             start(&file, text, practice)
         }
         Command::Check { files, json, whose } => check_all(&files, json, &whose),
-        Command::Sheet { files, into, only, times, whose } => sheet_all(&files, into.as_deref(), (only, &whose), times),
+        Command::Sheet { files, into, only, times, whose } => {
+            sheet_all(&files, into.as_deref(), (only, &whose), times)
+        }
         Command::Watch { file, into, only, whose } => {
             if let Some(Err(e)) = into.as_deref().map(files::folder) {
                 complain(&e);
@@ -75,7 +77,9 @@ fn start(file: &Path, text: &str, practice: bool) -> u8 {
         Ok(()) => {
             let file = file.display();
             let next = match practice {
-                true => format!("a complete invented practice. Edit it, then run\n  perpend sheet --practice {file} job.toml"),
+                true => format!(
+                    "a complete invented practice. Edit it, then run\n  perpend sheet --practice {file} job.toml"
+                ),
                 false => format!("a complete invented job. Edit it, then run\n  perpend check {file}"),
             };
             let _ = writeln!(anstream::stdout(), "{file} written: {next}");

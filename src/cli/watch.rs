@@ -86,7 +86,7 @@ fn told(changed: &Differences) -> String {
     if more > 0 {
         parts.push(format!("{more} more {}", if more == 1 { "result" } else { "results" }));
     }
-    let lines: usize = changed.sheets.iter().map(|s| s.1.len()).sum();
+    let lines: usize = changed.sheets.iter().map(|s| s.changes.len()).sum();
     parts.push(format!("{lines} {} of working", if lines == 1 { "line" } else { "lines" }));
     parts.join("; ")
 }
@@ -108,6 +108,7 @@ fn say(line: &str) {
 #[cfg(test)]
 mod tests {
     use super::{Change, Differences, told};
+    use crate::archive::compare::Altered;
 
     #[test]
     fn one_line_tells_what_changed() {
@@ -118,7 +119,7 @@ mod tests {
         };
         let changed = Differences {
             results: (1..=5).map(change).collect(),
-            sheets: vec![(String::new(), vec![change(1)])],
+            sheets: vec![Altered { id: String::new(), title: String::new(), changes: vec![change(1)] }],
         };
         let line = told(&changed);
         assert_eq!(

@@ -114,10 +114,13 @@ pub fn ends(t: &Table<'_>, key: &'static str, path: &str, endings: &[&str]) -> b
     if endings.iter().any(|ending| lower.ends_with(ending)) {
         return true;
     }
-    t.fault(Kind::NotAllowed, format_args!("the path {} is not an image that the pack can hold", quoted(path)))
-        .at(t.place(key), "path")
-        .allowed(format!("a file that ends in {}", one_of(endings)))
-        .help(format!("save it as {}", one_of(endings)));
+    t.fault(
+        Kind::NotAllowed,
+        format_args!("the path {} is not an image that the pack can hold", quoted(path)),
+    )
+    .at(t.place(key), "path")
+    .allowed(format!("a file that ends in {}", one_of(endings)))
+    .help(format!("save it as {}", one_of(endings)));
     false
 }
 

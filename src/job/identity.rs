@@ -1,5 +1,6 @@
 //! `[job]`, `[signatures]` and `[[revisions]]`: who, where, what for.
 
+use super::closing::inside;
 use super::date::in_words;
 use super::reader::Table;
 use crate::building::{Identity, Person, Revision, Signatures, Status};
@@ -116,6 +117,12 @@ pub fn revisions(tables: &[Table<'_>]) -> Option<Vec<Revision>> {
                 .help("correct the date, or put the issues in order");
         }
     }
+    if let Some(last) = tables.last().filter(|t| t.has("pack")) {
+        last.fault(Kind::Contradiction, "the current issue has no earlier pack: it is what is being made")
+            .at(last.place("pack"), "on the last of the issues")
+            .allowed("`pack` on an earlier issue: what was sent then")
+            .help("add the next issue below, or take `pack` out");
+    }
     all.into_iter().collect()
 }
 
@@ -123,8 +130,9 @@ fn revision(t: &Table<'_>) -> Option<Revision> {
     let letter = t.need("letter").mark(LETTER);
     let date = t.need("date").date();
     let note = t.need("note").line();
+    let pack = t.may("pack").line().filter(|path| inside(t, "pack", path, "pack"));
     t.finish();
-    Some(Revision { letter: letter?, date: date?, note: note? })
+    Some(Revision { letter: letter?, date: date?, note: note?, pack })
 }
 
 /// Holds the dates of visit, signature and current issue against each other.

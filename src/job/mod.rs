@@ -80,7 +80,8 @@ pub fn read_for(name: &str, text: &str, practice: Option<&Practice>) -> Result<B
     let (diagnostics, warnings) = reader.into_parts();
     match building {
         Some(building) if diagnostics.is_empty() => {
-            let of_practice = practice.iter().flat_map(|p| &p.warnings).map(|w| format!("practice file: {w}"));
+            let of_practice =
+                practice.iter().flat_map(|p| &p.warnings).map(|w| format!("practice file: {w}"));
             let warnings = warnings.into_iter().chain(of_practice).collect();
             Ok(Building { warnings, practice: practice.cloned(), ..building })
         }

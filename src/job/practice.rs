@@ -184,7 +184,10 @@ fn accent(t: &Table<'_>) -> Option<Accent> {
         // Rounded down: a contrast just under the limit must not print as the limit.
         let contrast = (accent.contrast() * 10.0).floor() / 10.0;
         entry
-            .fault(Kind::NotAllowed, format_args!("the contrast of {} with white is {contrast:.1} to 1", accent.hex()))
+            .fault(
+                Kind::NotAllowed,
+                format_args!("the contrast of {} with white is {contrast:.1} to 1", accent.hex()),
+            )
             .at(entry.place(), "too pale to be read on paper")
             .allowed(format!("a contrast of {CONTRAST} to 1 or more (WCAG 2.1, 1.4.3)"))
             .help("take a darker shade of it");

@@ -85,6 +85,8 @@ pub struct Pack {
     pub unsigned_text: String,
     /// Revisions, oldest first.
     pub revisions: Vec<Revision>,
+    /// What changed since an earlier issue, where its pack is at hand.
+    pub changes: Option<Changes>,
     /// What the pack finds.
     pub outcome: FrontOutcome,
     /// The design summary of the front sheet.
@@ -192,6 +194,32 @@ pub struct Revision {
     pub note: String,
 }
 
+/// What changed since an earlier issue.
+#[derive(Debug, Clone, Serialize)]
+pub struct Changes {
+    /// Letter of that issue.
+    pub since: String,
+    /// Its date in words.
+    pub date: String,
+    /// Lines of the job file.
+    pub inputs: Vec<Change>,
+    /// Lines of the practice file.
+    pub practice: Vec<Change>,
+    /// Outcome, results and hold points.
+    pub results: Vec<Change>,
+    /// Sheets whose working changed: the section's id where it still stands, its title, and how many lines.
+    pub sheets: Vec<(String, String, usize)>,
+}
+
+/// One thing that changed; an empty text was or is not there.
+#[derive(Debug, Clone, Serialize)]
+#[allow(missing_docs, reason = "the fields are their names")]
+pub struct Change {
+    pub what: String,
+    pub was: String,
+    pub now: String,
+}
+
 /// The four outcomes; anything but adequate is set with weight and a heavy rule.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Serialize)]
 #[serde(rename_all = "kebab-case")]
@@ -276,6 +304,8 @@ pub struct Scheduled {
     pub verdict: String,
     /// The block where it is worked out, or empty.
     pub anchor: String,
+    /// Whether it changed since the issue that [`Changes`] names.
+    pub changed: bool,
 }
 
 /// A link of the load path.
@@ -304,6 +334,8 @@ pub struct Section {
     pub blocks: Vec<Ready>,
     /// Whether it opens a sheet.
     pub new_page: bool,
+    /// Whether its working changed since the issue that [`Changes`] names.
+    pub changed: bool,
 }
 
 /// A photograph.

@@ -7,7 +7,7 @@
 //! | `pdf` | compiling the templates and writing the PDF |
 //! | [`audit`] | looking over the finished sheets for overlaps, overflow and missing signs |
 //! | `ink` | what a finished sheet prints and where |
-//! | [`house`] | how the packs of a practice look, and whether its files can be used |
+//! | [`look`] | how the packs of a practice look, and whether its files can be used |
 //! | `said` | what must stand on the pages whatever templates set them |
 //!
 //! The templates in `templates/` hold no engineering: every number arrives as text, formulas
@@ -16,8 +16,8 @@
 
 pub mod audit;
 pub mod data;
-pub mod house;
 mod ink;
+pub mod look;
 mod pdf;
 pub mod photograph;
 mod said;
@@ -29,7 +29,7 @@ use std::time::Duration;
 use serde::Serialize;
 
 pub use audit::{Finding, Flaw};
-pub use house::House;
+pub use look::Look;
 pub use pdf::evict;
 use world::Kind;
 
@@ -94,7 +94,7 @@ impl std::error::Error for PackError {}
 
 /// The PDF of a pack from its data.
 ///
-/// `house` is the practice in whose style it is set. `data` serialises to the fields of [`data::Pack`]. `files` are the photographs, each with
+/// `look` is the practice in whose style it is set. `data` serialises to the fields of [`data::Pack`]. `files` are the photographs, each with
 /// the path by which the data names it (`/photo/0.jpg`). `ident` fixes the file's identifier:
 /// give the digest of the job file, so that the same job gives the same bytes.
 ///
@@ -105,34 +105,30 @@ pub fn typeset(
     data: impl Serialize,
     files: &[(String, Vec<u8>)],
     ident: &str,
-    house: Option<&House>,
+    look: Option<&Look>,
 ) -> Result<Typeset, PackError> {
     let json = serde_json::to_vec(&data).map_err(|error| PackError::Data(error.to_string()))?;
     // Its trees are as large as the sheets to come: while those are set, only the text is kept.
     drop(data);
-    pdf::typeset(Kind::Pack, json, files, ident, house)
+    pdf::typeset(Kind::Pack, json, files, ident, look)
 }
 
 /// The PDF of a summary for the client; otherwise as [`typeset`].
 ///
 /// # Errors
 /// As [`typeset`].
-pub fn typeset_client(
-    data: &data::Client,
-    ident: &str,
-    house: Option<&House>,
-) -> Result<Typeset, PackError> {
+pub fn typeset_client(data: &data::Client, ident: &str, look: Option<&Look>) -> Result<Typeset, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    pdf::typeset(Kind::Client, json, &[], ident, house)
+    pdf::typeset(Kind::Client, json, &[], ident, look)
 }
 
 /// The flaws of a summary's pages, as [`inspect`].
 ///
 /// # Errors
 /// As [`typeset`].
-pub fn inspect_client(data: &data::Client, house: Option<&House>) -> Result<Vec<Finding>, PackError> {
+pub fn inspect_client(data: &data::Client, look: Option<&Look>) -> Result<Vec<Finding>, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    let (document, _) = pdf::compile(&world::World::new(Kind::Client, json, &[], house))?;
+    let (document, _) = pdf::compile(&world::World::new(Kind::Client, json, &[], look))?;
     Ok(audit::audit(&document))
 }
 
@@ -153,10 +149,10 @@ pub fn typeset_json(json: &str, files: &[(String, Vec<u8>)], ident: &str) -> Res
 pub fn inspect(
     data: &impl Serialize,
     files: &[(String, Vec<u8>)],
-    house: Option<&House>,
+    look: Option<&Look>,
 ) -> Result<Vec<Finding>, PackError> {
     let json = serde_json::to_vec(data).map_err(|error| PackError::Data(error.to_string()))?;
-    let world = world::World::new(Kind::Pack, json, files, house);
+    let world = world::World::new(Kind::Pack, json, files, look);
     let (document, _) = pdf::compile(&world)?;
     Ok(audit::audit(&document))
 }

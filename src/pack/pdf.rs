@@ -8,7 +8,7 @@ use typst::{World as _, WorldExt};
 use typst_layout::PagedDocument;
 use typst_pdf::{PdfOptions, PdfStandard, PdfStandards};
 
-use super::house::House;
+use super::look::Look;
 use super::world::{Kind, World};
 use super::{PackError, Times, Typeset, audit, said};
 
@@ -25,11 +25,11 @@ pub(super) fn typeset(
     json: Vec<u8>,
     files: &[(String, Vec<u8>)],
     ident: &str,
-    house: Option<&House>,
+    look: Option<&Look>,
 ) -> Result<Typeset, PackError> {
     let start = Instant::now();
-    let must = if house.is_some_and(House::own_templates) { said::required(kind, &json) } else { Vec::new() };
-    let world = World::new(kind, json, files, house);
+    let must = if look.is_some_and(Look::own_templates) { said::required(kind, &json) } else { Vec::new() };
+    let world = World::new(kind, json, files, look);
     let fonts = start.elapsed();
 
     let start = Instant::now();
@@ -37,7 +37,7 @@ pub(super) fn typeset(
     let compile = start.elapsed();
     said::all(&must, &document)?;
     // Our own sheets are looked over by tests; those in another face or by other templates here.
-    if house.is_some_and(|h| h.own_templates() || !h.fonts.is_empty()) {
+    if look.is_some_and(|h| h.own_templates() || !h.fonts.is_empty()) {
         warnings.extend(audit::told(&audit::audit(&document)));
     }
 

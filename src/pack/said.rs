@@ -33,12 +33,18 @@ pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
         Kind::Client => {
             let parts = data.pointer("/parts").and_then(Value::as_array).cloned().unwrap_or_default();
             let lines = ["lines", "steps"].iter().flat_map(|key| {
-                parts.iter().filter_map(|p| p.get(*key)?.as_array()).flatten().filter_map(Value::as_str).map(str::to_owned)
+                parts
+                    .iter()
+                    .filter_map(|p| p.get(*key)?.as_array())
+                    .flatten()
+                    .filter_map(Value::as_str)
+                    .map(str::to_owned)
             });
             std::iter::once(text("/headline")).chain(lines).collect()
         }
     };
-    let sentences = words.iter().flat_map(|w| w.split_inclusive(". ")).map(|s| Must::Somewhere(s.trim().to_owned()));
+    let sentences =
+        words.iter().flat_map(|w| w.split_inclusive(". ")).map(|s| Must::Somewhere(s.trim().to_owned()));
     std::iter::once(Must::EveryPage(text("/unsigned_text"))).chain(sentences).collect()
 }
 
@@ -65,5 +71,7 @@ pub(super) fn all(must: &[Must], document: &PagedDocument) -> Result<(), PackErr
 
 /// The text without what varies in setting: spaces of any width, joiners.
 fn letters(text: &str) -> String {
-    text.chars().filter(|c| !c.is_whitespace() && !matches!(c, '\u{2060}' | '\u{00ad}' | '\u{200b}')).collect()
+    text.chars()
+        .filter(|c| !c.is_whitespace() && !matches!(c, '\u{2060}' | '\u{00ad}' | '\u{200b}'))
+        .collect()
 }

@@ -59,7 +59,8 @@ fn the_audit_finds_flaws() {
     let drawing = serde_json::json!({"name": "flawed", "caption": "flawed", "scale": "1:20", "alt": "flawed",
         "width": 60.0, "height": 40.0, "items": items});
     data["sections"][0]["blocks"] = serde_json::json!([{"kind": "drawing", "drawing": drawing}]);
-    let mut flaws: Vec<Flaw> = inspect(&data, &[], None).unwrap().into_iter().map(|finding| finding.flaw).collect();
+    let mut flaws: Vec<Flaw> =
+        inspect(&data, &[], None).unwrap().into_iter().map(|finding| finding.flaw).collect();
     flaws.sort_by_key(|flaw| format!("{flaw:?}"));
     let expected = [
         Flaw::Crossed("covered".into()),

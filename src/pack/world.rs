@@ -11,7 +11,7 @@ use typst::text::{Font, FontBook};
 use typst::utils::LazyHash;
 use typst::{Library, LibraryExt};
 
-use super::house::{House, Style};
+use super::look::{Look, Style};
 
 /// What is set: each from a main template of its own.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -116,7 +116,7 @@ pub(super) struct World {
 impl World {
     /// The world of one pack. A file whose path is not a plain virtual path is left out, and
     /// a template that asks for it says that it was not found.
-    pub(super) fn new(kind: Kind, json: Vec<u8>, files: &[(String, Vec<u8>)], house: Option<&House>) -> Self {
+    pub(super) fn new(kind: Kind, json: Vec<u8>, files: &[(String, Vec<u8>)], look: Option<&Look>) -> Self {
         fixed();
         let mut world = Self {
             main: id_of(kind.main()).expect("a main template has a plain path"),
@@ -127,11 +127,11 @@ impl World {
         for (path, bytes) in files {
             world.hold(path, bytes.clone());
         }
-        let style = house.map_or_else(Style::default, |h| h.style.clone());
+        let style = look.map_or_else(Style::default, |h| h.style.clone());
         world.hold(STYLE, serde_json::to_vec(&style).unwrap_or_default());
         world.hold(DATA, json);
-        if let Some(house) = house {
-            world.furnish(house);
+        if let Some(look) = look {
+            world.furnish(look);
         }
         world
     }
@@ -142,11 +142,11 @@ impl World {
         }
     }
 
-    fn furnish(&mut self, house: &House) {
-        if let (Some(mark), Some(bytes)) = (&house.style.logo, &house.logo) {
+    fn furnish(&mut self, look: &Look) {
+        if let (Some(mark), Some(bytes)) = (&look.style.logo, &look.logo) {
             self.hold(&mark.path, bytes.clone());
         }
-        for (path, bytes) in &house.templates {
+        for (path, bytes) in &look.templates {
             let path = format!("/templates/{path}");
             let source = std::str::from_utf8(bytes).ok().filter(|_| path.ends_with(".typ")).zip(id_of(&path));
             match source {
@@ -154,9 +154,9 @@ impl World {
                 None => self.hold(&path, bytes.clone()),
             }
         }
-        if !house.fonts.is_empty() {
-            let book = FontBook::from_fonts(own_faces().iter().chain(&house.fonts));
-            self.faces = Some((LazyHash::new(book), house.fonts.clone()));
+        if !look.fonts.is_empty() {
+            let book = FontBook::from_fonts(own_faces().iter().chain(&look.fonts));
+            self.faces = Some((LazyHash::new(book), look.fonts.clone()));
         }
     }
 }

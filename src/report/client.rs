@@ -264,7 +264,9 @@ fn whom(b: &Building) -> Vec<String> {
         match &made.contact {
             Some(contact) => format!("Call {}, who made the calculations: {contact}.", made.name),
             None => match b.practice.as_ref().and_then(|p| Some((p, p.contact.as_ref()?))) {
-                Some((p, contact)) => format!("Call {} at {}, who made the calculations: {contact}.", made.name, p.name),
+                Some((p, contact)) => {
+                    format!("Call {} at {}, who made the calculations: {contact}.", made.name, p.name)
+                }
                 None => format!("Call {}, who made the calculations.", made.name),
             },
         },

@@ -80,6 +80,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
                 note: r.note.clone(),
             })
             .collect(),
+        changes: None,
         outcome: data::FrontOutcome {
             kind: kind(results.outcome),
             words: results.outcome.words(),
@@ -159,6 +160,7 @@ fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
         blocks: blocks::of_section(s),
         // Returns and panels open a sheet; what belongs to them follows where there is room.
         new_page: b.returns.iter().any(|r| r.mark == s.mark) || b.panels.iter().any(|p| p.mark == s.mark),
+        changed: false,
     }
 }
 
@@ -207,6 +209,7 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
         bar: bar(v.ratio),
         verdict: verdict_words(v.holds).to_owned(),
         anchor: anchor(s, &v.id),
+        changed: false,
     };
     let outside = s.sheet.outside.iter().map(|o| data::Scheduled {
         mark: mark.clone(),
@@ -217,6 +220,7 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
         bar: 0.0,
         verdict: "outside the method".to_owned(),
         anchor: anchor(s, &o.id),
+        changed: false,
     });
     let unshown = s.sheet.unshown.iter().map(|u| data::Scheduled {
         mark: own(&u.words).0,
@@ -228,6 +232,7 @@ pub fn schedule(s: &Section) -> Vec<data::Scheduled> {
         bar: bar(u.ratio.unwrap_or(0.0)),
         verdict: unshown_words(u),
         anchor: anchor(s, &u.id),
+        changed: false,
     });
     s.sheet.verdicts.iter().map(verdict).chain(outside).chain(unshown).collect()
 }

@@ -1,5 +1,7 @@
 //! Packs made before: worked again, and held against each other.
 
+mod revisions;
+
 use std::path::Path;
 
 use perpend::archive::compare::{self, Differences};

@@ -28,7 +28,18 @@ const MACROS: [&str; 8] = ["calc", "decide", "found", "given", "lookup", "requir
 
 /// `lib.rs` is the pipeline: above nothing but the command line.
 const PIPELINE: [&str; 12] = [
-    "check", "check_for", "digest", "draw", "draw_for", "file_name", "recheck", "set", "sheet", "Sheeted", "Source", "summarise",
+    "check",
+    "check_for",
+    "digest",
+    "draw",
+    "draw_for",
+    "file_name",
+    "recheck",
+    "set",
+    "sheet",
+    "Sheeted",
+    "Source",
+    "summarise",
 ];
 
 fn place(module: &str) -> Option<usize> {

@@ -1,7 +1,7 @@
 //! The packs, read back from their PDF.
 
 mod photographs;
-mod reader;
+pub mod reader;
 mod same_bytes;
 mod variations;
 

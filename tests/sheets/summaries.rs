@@ -100,7 +100,8 @@ fn two_pages_at_most_and_nothing_overlaps() {
         assert!(made.typeset.pages <= 2, "{name}: {} pages", made.typeset.pages);
         assert_eq!(made.typeset.warnings, [] as [String; 0], "{name}");
         assert_eq!(made.hard, [], "{name}");
-        let flaws = pack::inspect_client(&client::of_job(&b, &results, &digest(&text)), None).expect("a summary");
+        let flaws =
+            pack::inspect_client(&client::of_job(&b, &results, &digest(&text)), None).expect("a summary");
         assert_eq!(flaws, [], "{name}");
         let again = summarise(&b, &results, &from).expect("a summary");
         assert!(again.typeset.pdf == made.typeset.pdf, "{name}: the same bytes");

@@ -10,7 +10,6 @@ use typst::text::{Font, FontStyle};
 use usvg::roxmltree;
 
 use super::world;
-use crate::building::{Logo, Practice};
 
 /// The files of a practice, read but not yet looked at. Names are relative to the practice file.
 #[derive(Debug, Clone, Default)]
@@ -23,11 +22,41 @@ pub struct Assets {
     pub templates: Vec<(String, Vec<u8>)>,
 }
 
-/// A practice ready to set packs: every file of it can be used.
+/// What a practice wants of its pages. Paths are relative to the practice file.
+#[derive(Debug, Clone, Default)]
+pub struct Wanted {
+    /// Name, as on its letters.
+    pub name: String,
+    /// Address, line by line.
+    pub address: Vec<String>,
+    /// How a client reaches it, or empty.
+    pub contact: String,
+    /// Sentences that stand with the limits of every pack: they must have glyphs.
+    pub notes: Vec<String>,
+    /// Colour of headings, `#1f3d52`.
+    pub accent: Option<String>,
+    /// Its mark.
+    pub logo: Option<Logo>,
+    /// Family of the running text, and the folder that holds it.
+    pub face: Option<(String, String)>,
+    /// Folder of templates.
+    pub templates: Option<String>,
+}
+
+/// A mark as it is wanted.
 #[derive(Debug, Clone)]
-pub struct House {
-    /// The practice.
-    pub practice: Practice,
+pub struct Logo {
+    /// File, SVG or PNG.
+    pub file: String,
+    /// What it shows, read aloud.
+    pub words: String,
+    /// Height on a first page, mm.
+    pub height: f64,
+}
+
+/// The look of a practice's packs: every file of it can be used.
+#[derive(Debug, Clone)]
+pub struct Look {
     pub(super) style: Style,
     pub(super) logo: Option<Vec<u8>>,
     pub(super) fonts: Vec<Font>,
@@ -104,26 +133,26 @@ impl fmt::Display for Unusable {
     }
 }
 
-impl House {
-    /// A practice with its files.
+impl Look {
+    /// What is wanted, with its files.
     ///
     /// # Errors
     /// [`Unusable`] for the first file that cannot be used.
-    pub fn new(practice: Practice, assets: Assets) -> Result<Self, Unusable> {
+    pub fn new(wanted: &Wanted, assets: Assets) -> Result<Self, Unusable> {
         let mut style = Style {
-            name: practice.name.clone(),
-            address: practice.address.clone(),
-            contact: practice.contact.clone().unwrap_or_default(),
+            name: wanted.name.clone(),
+            address: wanted.address.clone(),
+            contact: wanted.contact.clone(),
             ..Style::default()
         };
-        if let Some(accent) = practice.accent {
-            style.accent = accent.hex();
+        if let Some(accent) = &wanted.accent {
+            style.accent.clone_from(accent);
         }
-        if let (Some(logo), Some(bytes)) = (&practice.logo, &assets.logo) {
+        if let (Some(logo), Some(bytes)) = (&wanted.logo, &assets.logo) {
             style.logo = Some(mark(logo, bytes)?);
         }
         let mut fonts = Vec::new();
-        if let (Some(family), Some(folder)) = (&practice.face, &practice.fonts) {
+        if let Some((family, folder)) = &wanted.face {
             fonts = faces(&assets.fonts)?;
             let regular = regular(family, folder, &fonts)?;
             let ours = world::own_faces().iter().find(|f| f.info().family == TEXT_FACE);
@@ -131,14 +160,12 @@ impl House {
             style.digit = (run(regular, FIGURES) / 10.0 * 1000.0).round() / 1000.0;
             style.face.clone_from(family);
         }
-        written(&practice, &style.face, &fonts)?;
-        Ok(Self {
-            templates: templates(&practice, assets.templates)?,
-            practice,
-            style,
-            logo: assets.logo,
-            fonts,
-        })
+        written(wanted, &style.face, &fonts)?;
+        let templates = match &wanted.templates {
+            Some(folder) => templates(folder, assets.templates)?,
+            None => Vec::new(),
+        };
+        Ok(Self { templates, style, logo: assets.logo, fonts })
     }
 
     /// Whether its sheets are set by templates of its own.
@@ -158,7 +185,8 @@ const LOGO_ASPECT: f64 = 6.0;
 /// Most nodes of a drawing.
 const NODES: u32 = 100_000;
 
-const LOGO_HELP: &str = "Give an SVG whose letters are outlines, or a PNG; up to six times as wide as high, 2 MB or less.";
+const LOGO_HELP: &str =
+    "Give an SVG whose letters are outlines, or a PNG; up to six times as wide as high, 2 MB or less.";
 
 fn mark(logo: &Logo, bytes: &[u8]) -> Result<Mark, Unusable> {
     let refuse = |what: String| unusable(&logo.file, what, LOGO_HELP);
@@ -174,7 +202,7 @@ fn mark(logo: &Logo, bytes: &[u8]) -> Result<Mark, Unusable> {
     Ok(Mark {
         path: format!("/house/logo.{}", if svg { "svg" } else { "png" }),
         words: logo.words.clone(),
-        height: logo.height.base(),
+        height: logo.height,
         aspect,
     })
 }
@@ -196,7 +224,11 @@ fn svg_size(bytes: &[u8]) -> Result<(f64, f64), String> {
     let broken = |why: &dyn fmt::Display| format!("the logo does not read as an SVG: {why}");
     let how = roxmltree::ParsingOptions { allow_dtd: true, nodes_limit: NODES, ..Default::default() };
     let tree = roxmltree::Document::parse_with_options(text, how).map_err(|why| broken(&why))?;
-    for (name, what) in [("text", "letters that are not outlines"), ("foreignObject", "foreign content"), ("image", "a picture")] {
+    for (name, what) in [
+        ("text", "letters that are not outlines"),
+        ("foreignObject", "foreign content"),
+        ("image", "a picture"),
+    ] {
         if tree.descendants().any(|node| node.tag_name().name() == name) {
             return Err(format!("the logo holds {what}"));
         }
@@ -213,7 +245,11 @@ fn faces(files: &[(String, Vec<u8>)]) -> Result<Vec<Font>, Unusable> {
         let face = ttf_parser::Face::parse(bytes, 0)
             .map_err(|why| unusable(name, format!("it does not read as a face: {why}"), FONT_HELP))?;
         if face.permissions() == Some(ttf_parser::Permissions::Restricted) {
-            return Err(unusable(name, "its maker does not allow it to be embedded in a document", FONT_HELP));
+            return Err(unusable(
+                name,
+                "its maker does not allow it to be embedded in a document",
+                FONT_HELP,
+            ));
         }
         fonts.extend(Font::iter(Bytes::new(bytes.clone())));
     }
@@ -221,7 +257,8 @@ fn faces(files: &[(String, Vec<u8>)]) -> Result<Vec<Font>, Unusable> {
 }
 
 /// Signs that every pack prints as text. What else a face lacks comes from ours.
-const NEEDED: &str = "ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789 .,:;!?'\"()[]/%&+-=*#_@£°²³·×–’";
+const NEEDED: &str =
+    "ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789 .,:;!?'\"()[]/%&+-=*#_@£°²³·×–’";
 /// A sample by which the width of letters is compared.
 const SAMPLE: &str = "the wind on the length of wall that stays is taken by its foot; 0.84 of 1.00 kN/m2";
 const FIGURES: &str = "0123456789";
@@ -278,10 +315,11 @@ fn run(font: &Font, text: &str) -> f64 {
 }
 
 /// What the practice has printed of itself must have glyphs in its face or in ours.
-fn written(practice: &Practice, family: &str, fonts: &[Font]) -> Result<(), Unusable> {
+fn written(wanted: &Wanted, family: &str, fonts: &[Font]) -> Result<(), Unusable> {
     let own = fonts.iter().filter(|f| f.info().family.eq_ignore_ascii_case(family));
     let all: Vec<&Font> = own.chain(world::own_faces()).collect();
-    let words = std::iter::once(&practice.name).chain(&practice.address).chain(&practice.contact).chain(&practice.notes);
+    let words =
+        std::iter::once(&wanted.name).chain(&wanted.address).chain([&wanted.contact]).chain(&wanted.notes);
     for text in words {
         if let Some(sign) = text.chars().find(|c| !c.is_whitespace() && !all.iter().any(|f| holds(f, *c))) {
             return Err(unusable(
@@ -297,9 +335,9 @@ fn written(practice: &Practice, family: &str, fonts: &[Font]) -> Result<(), Unus
 const TEMPLATE_HELP: &str =
     "Copy a file of the program's own templates/ folder under the same name and change that.";
 
-fn templates(practice: &Practice, files: Vec<(String, Vec<u8>)>) -> Result<Vec<(String, Vec<u8>)>, Unusable> {
-    let Some(folder) = &practice.templates else { return Ok(Vec::new()) };
-    let known = |path: &str| world::TEMPLATES.iter().any(|(own, _)| own.strip_prefix("/templates/") == Some(path));
+fn templates(folder: &str, files: Vec<(String, Vec<u8>)>) -> Result<Vec<(String, Vec<u8>)>, Unusable> {
+    let known =
+        |path: &str| world::TEMPLATES.iter().any(|(own, _)| own.strip_prefix("/templates/") == Some(path));
     if !files.iter().any(|(path, _)| known(path)) {
         return Err(unusable(folder, "none of its files takes the place of a template", TEMPLATE_HELP));
     }
