@@ -10,6 +10,7 @@ pub mod footings;
 pub mod found;
 pub mod links;
 pub mod loads;
+pub mod margins;
 pub mod masonry;
 pub mod materials;
 pub mod outcome;
@@ -24,7 +25,6 @@ pub mod wind;
 
 mod bearing_sheet;
 mod bearing_views;
-mod margins;
 mod panel_brings;
 mod panel_cracks;
 pub mod panel_sheet;

@@ -11,6 +11,7 @@ mod honest;
 mod jobs;
 mod loads;
 mod margins;
+mod margins_below;
 mod outcome;
 mod remedy;
 mod returns;

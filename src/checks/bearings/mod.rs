@@ -4,9 +4,10 @@
 //! * [`seat`]: what of the masonry is pressed: by the beam itself, or through a padstone
 //! * [`work`]: one seat worked: 6.1.3 under it, the concrete, mid-height
 //! * [`choose`]: the smallest padstone of the list that works, and the table of those tried
-//! * [`remedy`]: what would make it pass
+//! * [`remedy`]: what would make it pass; [`margins`]: how far its assumptions may move
 
 pub mod choose;
+pub mod margins;
 pub mod remedy;
 pub mod seat;
 pub mod site;

@@ -3,9 +3,10 @@
 //! * [`stands`]: what stands on it, from the return's own models
 //! * [`combination`]: characteristic loads together, and the direction of the wind
 //! * [`pressure`]: the pressure under one combination
-//! * [`sheet`]: its section; [`view`]: its drawing
+//! * [`sheet`]: its section; [`view`]: its drawing; [`margins`]: how far its assumptions may move
 
 pub mod combination;
+pub mod margins;
 pub mod pressure;
 pub mod sheet;
 pub mod stands;

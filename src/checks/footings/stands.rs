@@ -31,17 +31,30 @@ impl<'a> Stands<'a> {
     /// # Errors
     /// [`Outside`] where a table of strengths does not reach.
     pub fn of(i: &Inputs<'_>, ret: &'a Return, footing: &'a Footing) -> Result<Self, Outside> {
+        Self::with(i, ret, footing, Change::NONE)
+    }
+
+    /// The same with a change to try; dead load added comes once a leaf.
+    ///
+    /// # Errors
+    /// [`Outside`] where a table of strengths does not reach.
+    pub fn with(
+        i: &Inputs<'_>,
+        ret: &'a Return,
+        footing: &'a Footing,
+        change: Change,
+    ) -> Result<Self, Outside> {
         let mut s = Sheet::silent();
         let acting = build::acting(i)?;
         let mut leaves = Vec::new();
         for a in &acting {
-            leaves.push((a.leaf, build::one(&mut s, i, *a, Change::NONE)?));
+            leaves.push((a.leaf, build::one(&mut s, i, *a, change)?));
         }
         let build_up = i.building.build_up(&ret.build_up);
         let count = build_up.map_or(1, |b| b.leaves.len());
         let idle = (0..count).filter(|k| ret.acts == Acts::Loaded && !acting.iter().any(|a| a.leaf == *k));
         for leaf in idle {
-            leaves.push((leaf, build::one(&mut s, i, Acting { leaf, share: 0.0 }, Change::NONE)?));
+            leaves.push((leaf, build::one(&mut s, i, Acting { leaf, share: 0.0 }, change)?));
         }
         let place = |k| footing.offset + build_up.map_or(Length::ZERO, |b| b.place_of(k));
         let flanged = leaves.iter().any(|(_, m)| m.flange.is_some());

@@ -3,24 +3,26 @@
 //! Everything is found by search on the checks themselves, one assumption at a time, all else as the job has it, and
 //! rounded to the side that fails first. What fails as it is has its remedies on its own sheet.
 
+mod bearings;
+mod footings;
+mod materials;
+pub mod reach;
+
 use super::panels::remedy as of_panel;
 use super::returns::build::{Change, Inputs};
 use super::returns::{margins as of_return, remedy as passes_of_return};
-use super::{Job, Section, masonry, panel_sheet};
-use crate::building::{Building, Cause, Panel, PanelRoute, Return};
+use super::{Job, Section, panel_sheet};
+use crate::building::{Panel, PanelRoute, Return};
 use crate::quantity::print::show;
-use crate::quantity::{Force, Length, LineLoad, Num, Stress};
-use crate::solve::root;
-use crate::standards::masonry::Mortar;
+use crate::quantity::{Force, Length, LineLoad, Stress};
 use crate::trace::{Column, Sheet, Table};
+use materials::materials;
+use reach::{Reach, Tried};
 
 /// The factors on material factors that are tried: as they are to three times, and how finely.
 const FACTOR: (f64, u32, f64) = (3.0, 40, 1e-3);
 /// The same where every step is a limit analysis.
 const COARSE: (f64, u32, f64) = (1.6, 3, 0.05);
-
-/// Classes of mortar from strong to weak; what a lime mortar bears is no class.
-const CLASSES: [Mortar; 4] = [Mortar::M12, Mortar::M6, Mortar::M4, Mortar::M2];
 
 /// The sheet, in a pack alone: its searches take longer than the checks.
 pub fn sections(job: &Job<'_>) -> Vec<Section> {
@@ -35,8 +37,24 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
     for p in &job.building.panels {
         rows.extend(block(&p.mark, panel_rows(job, p)));
     }
+    table(&mut sheet, "Found by search on the checks of each sheet, rounded to the safe side", rows);
+    let of_bearings = job.building.bearings.iter().flat_map(|x| block(&x.mark, bearings::rows(job, x)));
+    table(&mut sheet, "Bearings of beams, each on the seat of its sheet: the same", of_bearings.collect());
+    let of_footings = job.building.footings().flat_map(|(r, f)| block(&f.mark, footings::rows(job, r, f)));
+    table(&mut sheet, "Footings: the same", of_footings.collect());
+    sheet.note(
+        "One assumption at a time is moved until a use of that sheet reaches 1.00, all others as they are. A margin says \
+         how wrong an assumption may be, not that it may be chosen so. Two that move together use up each other's margin.",
+    );
+    vec![Section::plain("margins", "How far each assumption may move", sheet)]
+}
+
+fn table(sheet: &mut Sheet, caption: &str, rows: Vec<Vec<String>>) {
+    if rows.is_empty() {
+        return;
+    }
     sheet.table(|| Table {
-        caption: "Found by search on the checks of each sheet, rounded to the safe side".to_owned(),
+        caption: caption.to_owned(),
         columns: vec![
             Column::words(""),
             Column::words("assumption"),
@@ -46,11 +64,6 @@ pub fn sections(job: &Job<'_>) -> Vec<Section> {
         rows,
         strong: Vec::new(),
     });
-    sheet.note(
-        "One assumption at a time is moved until a use of that sheet reaches 1.00, all others as they are. A margin says \
-         how wrong an assumption may be, not that it may be chosen so. Two that move together use up each other's margin.",
-    );
-    vec![Section::plain("margins", "How far each assumption may move", sheet)]
 }
 
 /// Assumption, as it is, how far it passes.
@@ -64,6 +77,18 @@ fn block(mark: &str, rows: Vec<Row>) -> Vec<Vec<String>> {
 
 fn row(what: &str, now: String, to: String) -> Row {
     [what.to_owned(), now, to]
+}
+
+/// How far it passes: `up to 24 kN`, and what comes beyond where that is not a use above 1.00.
+fn words(r: &Reach, way: &str, print: &dyn Fn(f64) -> String) -> String {
+    let further = if way.ends_with("down to") { "less" } else { "more" };
+    match (r.moved, r.end, r.beyond) {
+        (_, true, _) => format!("{way} {}, {further} not tried", print(r.value)),
+        (false, _, Tried::Outside) => "no further: outside the method".to_owned(),
+        (false, ..) => "no further".to_owned(),
+        (true, _, Tried::Outside) => format!("{way} {}, then outside the method", print(r.value)),
+        (true, ..) => format!("{way} {}", print(r.value)),
+    }
 }
 
 fn all(why: &str) -> Vec<Row> {
@@ -155,103 +180,4 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
     let tried = if m.route == PanelRoute::LimitAnalysis { COARSE } else { FACTOR };
     out.extend(materials(job, &p.build_up, tried, &passes));
     out
-}
-
-/// A job with another building of the same loads, wind and shares; what a return or a panel does not ask for is left out.
-fn like<'a>(job: &Job<'_>, building: &'a Building) -> Job<'a> {
-    Job {
-        building,
-        annex: job.annex,
-        wind: job.wind.clone(),
-        down: None,
-        storey: job.storey.clone(),
-        whole: Vec::new(),
-        piers: Vec::new(),
-        holds: Vec::new(),
-        failing: Vec::new(),
-        outside: Vec::new(),
-        drawn: false,
-    }
-}
-
-/// Material factors and mortar, each tried on a building that differs in them alone.
-fn materials(
-    job: &Job<'_>,
-    build_up: &str,
-    tried: (f64, u32, f64),
-    passes: &dyn Fn(&Job<'_>) -> bool,
-) -> Vec<Row> {
-    let b = job.building;
-    let mut out = Vec::new();
-    let now = masonry::factors(&mut Sheet::silent(), b);
-    let at = |factor: f64| passes(&like(job, &with_factor(b, &now, factor)));
-    let print = |factor: f64| {
-        // Rounded down, save what is a hundredth already.
-        let one = |n: usize| format!("{:.2}", (now[n].0.base() * factor * 100.0 + 1e-6).floor() / 100.0);
-        format!("{}, {}, {}", one(0), one(1), one(2))
-    };
-    let (end, steps, precision) = tried;
-    if let Some(factor) = root::greatest(at, 1.0, end, steps, precision) {
-        let more = if factor >= end { " and more" } else { "" };
-        out.push(row(
-            "material factors of compression, flexure, shear",
-            print(1.0),
-            format!("up to {}{more}", print(factor)),
-        ));
-    }
-    out.extend(mortar(b, build_up, passes));
-    out
-}
-
-/// The building with all material factors times `factor`.
-fn with_factor(b: &Building, now: &[(Num, String); 3], factor: f64) -> Building {
-    let mut other = b.clone();
-    let stated = |n: usize| Some(Cause { value: now[n].0.base() * factor, reason: "tried".to_owned() });
-    other.basis.gamma_m_compression = stated(0);
-    other.basis.gamma_m_flexure = stated(1);
-    other.basis.gamma_m_shear = stated(2);
-    other
-}
-
-/// The weakest class of mortar down to which it passes, of all leaves of a wall together.
-fn mortar(b: &Building, build_up: &str, passes: &dyn Fn(&Job<'_>) -> bool) -> Option<Row> {
-    let wall = b.build_up(build_up)?;
-    let of_wall = |name: &str| wall.leaves.iter().any(|leaf| leaf.material == name);
-    let own = b.materials.iter().filter(|m| of_wall(&m.name));
-    let classes: Vec<usize> =
-        own.clone().map(|m| CLASSES.iter().position(|c| *c == m.mortar)).collect::<Option<Vec<_>>>()?;
-    // A stated strength does not ask the mortar.
-    if own.clone().any(|m| m.f_k.is_some() || m.f_vk0.is_some() || m.f_xk1.is_some()) {
-        return Some(row(
-            "class of mortar",
-            "strengths are stated".to_owned(),
-            "not by its class".to_owned(),
-        ));
-    }
-    let weakest = *classes.iter().max()?;
-    let with = |class: Mortar| {
-        let mut other = b.clone();
-        for m in other.materials.iter_mut().filter(|m| of_wall(&m.name)) {
-            let at = CLASSES.iter().position(|c| *c == m.mortar);
-            let to = CLASSES.iter().position(|c| *c == class);
-            if at < to {
-                m.mortar = class;
-            }
-        }
-        other
-    };
-    let reached = CLASSES[weakest + 1..]
-        .iter()
-        .take_while(|class| {
-            // Mortar changes stiffness, and with it shares of the wind: the whole job is worked again.
-            let other = with(**class);
-            passes(&Job { drawn: false, ..Job::new(&other) })
-        })
-        .last();
-    let to = match (reached, weakest + 1 == CLASSES.len()) {
-        (Some(class), _) => format!("down to {class}"),
-        (None, true) => "no weaker class is known".to_owned(),
-        (None, false) => format!("not with {}", CLASSES[weakest + 1]),
-    };
-    Some(row("class of mortar", CLASSES[weakest].to_string(), to))
 }
