@@ -3,6 +3,7 @@
 mod again;
 mod many;
 mod output;
+mod practice;
 mod teach;
 mod trouble;
 mod watch;
