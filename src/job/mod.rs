@@ -9,6 +9,7 @@
 //! * `names`: marks and names, and references to them
 //! * `identity basis wind sectors materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
 //!   the file's order
+//! * [`schema`]: the same for editors
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -31,6 +32,7 @@ mod panels;
 mod plan;
 mod reader;
 mod returns;
+mod schema;
 mod sectors;
 pub mod start;
 mod syntax;
@@ -43,6 +45,7 @@ mod tests;
 use toml::de::DeTable;
 
 pub use date::in_words as date_in_words;
+pub use schema::schema;
 
 use crate::building::found::{self, Found};
 use crate::building::{Building, Led, PlanWall};
