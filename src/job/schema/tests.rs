@@ -219,7 +219,7 @@ fn the_schema_refuses_nothing_that_the_reader_takes_and_takes_no_wrong_kind() {
                 let written = SLIPS.iter().map(|s| (*s).to_owned()).chain(examples);
                 // A head, [name], is no place for another value.
                 let span = value.span();
-                if !text[span.clone()].starts_with('[') || text[..span.start].ends_with("= ") {
+                if text[..span.start].ends_with("= ") {
                     changed.extend(written.map(|w| (format!("{path}.{key_name} = {w}"), span.clone(), w)));
                     changed.push((
                         format!("{path}.{key_name} taken out"),
@@ -253,6 +253,48 @@ fn the_schema_refuses_nothing_that_the_reader_takes_and_takes_no_wrong_kind() {
     }
     assert!(wrong.is_empty(), "{}", wrong.join("\n"));
     assert!(all > 1500 && refused * 2 > all, "{refused} of {all} refused");
+}
+
+/// The same for tables that no whole job has: there the reader is asked whether it faults the place, and the
+/// schema's form of that place alone whether the value fits.
+#[test]
+fn forms_of_the_rest_agree_with_the_reader_place_by_place() {
+    let schema = schema();
+    let mut wrong: Vec<String> = Vec::new();
+    let mut all = 0;
+    for text in [REST].into_iter().chain(APART.iter().copied()) {
+        let mut places = Vec::new();
+        see_root(tree(text).get_ref(), &schema, &mut |map, form, path| {
+            for (key, value) in map {
+                let one = &form["properties"][key.get_ref().as_ref()];
+                // A head, [name], is no place for another value.
+                let entry = text[..value.span().start].ends_with("= ");
+                if one.is_object() && entry {
+                    places.push((format!("{path}.{}", key.get_ref()), value.span(), one));
+                }
+            }
+        });
+        for (place, span, form) in places {
+            let form = jsonschema::draft202012::new(form).expect("a schema");
+            for slip in SLIPS.iter().filter(|slip| **slip != DATE) {
+                let job = format!("{}{slip}{}", &text[..span.start], &text[span.end..]);
+                let fits = form.is_valid(&of_table(tree(&format!("x = {slip}")).get_ref())["x"]);
+                let Err(report) = read("rest.toml", &job) else { continue };
+                let here = span.start..span.start + slip.len();
+                let mut faults = report.diagnostics().iter().filter(|d| here.contains(&d.span.start));
+                let refused = faults.clone().next().is_some();
+                let kind = faults.any(|d| matches!(d.kind, Kind::WrongType | Kind::Unit));
+                all += 1;
+                if fits && kind || !fits && !refused {
+                    wrong.push(format!(
+                        "{place} = {slip}: fits the schema {fits}, refused by the reader {refused}"
+                    ));
+                }
+            }
+        }
+    }
+    assert!(wrong.is_empty(), "{}", wrong.join("\n"));
+    assert!(all > 500, "{all} places");
 }
 
 #[test]
