@@ -60,6 +60,13 @@ Examples:
   perpend completions bash > ~/.local/share/bash-completion/completions/perpend
   perpend completions zsh > ~/.zfunc/_perpend";
 
+const SCHEMA_EXAMPLES: &str = "\
+Example:
+  perpend schema > perpend-job.schema.json
+
+An editor that knows TOML schemas takes it from the first line of a job, '#:schema ./perpend-job.schema.json', or from
+its settings. It sees single entries: contradictions, sums, references and the limits of quantities are seen by `check`.";
+
 const RECHECK_EXAMPLES: &str = "\
 Examples:
   perpend recheck '2419 Calculations (A).pdf'
@@ -169,6 +176,9 @@ pub(super) enum Command {
     /// Print the manual in the format of `man`
     #[command(after_help = "Example:\n  perpend manual > perpend.1 && man ./perpend.1")]
     Manual,
+    /// Print the JSON Schema of a job file, with which editors complete and check it
+    #[command(after_help = SCHEMA_EXAMPLES)]
+    Schema,
     /// Set one job and hand the pack back on standard output; `sheet` of several files starts these
     #[command(hide = true)]
     Set {

@@ -68,6 +68,7 @@ pub fn run() -> u8 {
         Command::Checks => teach::checks(),
         Command::Completions { shell } => teach::completions(shell),
         Command::Manual => teach::manual(),
+        Command::Schema => teach::schema(),
         Command::Set { file, only, whose } => child::hand_back(&file, (only, &whose)),
     }
 }

@@ -1,4 +1,4 @@
-//! What the command says of itself: its checks, completions for shells, a page of manual.
+//! What the command says of itself: its checks, completions for shells, a page of manual, a schema for editors.
 
 use std::io::Write as _;
 
@@ -39,6 +39,14 @@ pub fn manual() -> u8 {
     let mut bytes = Vec::new();
     match page(&mut bytes) {
         Ok(()) => written(&bytes),
+        Err(_) => FAILED,
+    }
+}
+
+/// Prints the JSON Schema of a job file.
+pub fn schema() -> u8 {
+    match serde_json::to_string_pretty(&crate::job::schema()) {
+        Ok(text) => written(format!("{text}\n").as_bytes()),
         Err(_) => FAILED,
     }
 }

@@ -2,16 +2,17 @@
 
 use super::limits::{Limits, Odd};
 use super::reader::Table;
+use super::words::{CATEGORIES, CLASSES};
 use crate::building::{Basis, Cause};
 
-const GAMMA: Limits = Limits::new(1.0, 5.0, "").odd(&[
+pub(super) const GAMMA: Limits = Limits::new(1.0, 5.0, "").odd(&[
     Odd::Below(2.0, "less than UK NA Table NA.1 has for masonry walls"),
     Odd::Above(3.5, "more than the usual factor of 3 on everything"),
 ]);
-const HELPING: Limits = Limits::new(0.8, 1.0, "");
+pub(super) const HELPING: Limits = Limits::new(0.8, 1.0, "");
 
 /// Usual factor on dead load that helps: EN 1990 Table A1.2(A).
-const HELPING_USUAL: f64 = 0.9;
+pub(super) const HELPING_USUAL: f64 = 0.9;
 
 impl Basis {
     /// Existing work of class 2 with units of category II, no factor stated.
@@ -31,12 +32,12 @@ impl Basis {
 pub fn basis(t: Option<&Table<'_>>, house: &Basis) -> Option<Basis> {
     let Some(t) = t else { return Some(house.clone()) };
     let execution_class = if t.has("execution_class") {
-        t.need("execution_class").whole(&[1, 2])
+        t.need("execution_class").whole(CLASSES)
     } else {
         Some(house.execution_class)
     };
     let unit_category = if t.has("unit_category") {
-        t.need("unit_category").pick(&[("I", 1), ("II", 2)])
+        t.need("unit_category").pick(CATEGORIES)
     } else {
         Some(house.unit_category)
     };

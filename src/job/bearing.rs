@@ -3,16 +3,17 @@
 use super::limits::{Limits, Odd};
 use super::reader::Table;
 use super::returns::{Around, FORCE};
+use super::words::{KNOWN, LEAVES};
 use crate::building::found::FoundReturn;
 use crate::building::{BuildUp, Flange, Load, Proof};
 use crate::error::Kind;
 use crate::quantity::{Force, Length, LineLoad};
 
-const ALONG: Limits = Limits::new(0.0, 6.0, "m");
-const ECCENTRICITY: Limits = Limits::new(-300.0, 300.0, "mm");
-const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm");
-const TO_END: Limits = Limits::new(0.0, 50.0, "m");
-const WALL_LOAD: Limits =
+pub(super) const ALONG: Limits = Limits::new(0.0, 6.0, "m");
+pub(super) const ECCENTRICITY: Limits = Limits::new(-300.0, 300.0, "mm");
+pub(super) const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm");
+pub(super) const TO_END: Limits = Limits::new(0.0, 50.0, "m");
+pub(super) const WALL_LOAD: Limits =
     Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
 
 /// Reads one load on a return of the given length and build-up.
@@ -28,7 +29,7 @@ pub fn load(
     let uplift: Option<Force> = t.may("uplift").quantity(&FORCE);
     let at: Option<Length> = t.need("at").quantity(&ALONG);
     let eccentricity: Option<Length> = t.may("eccentricity").quantity(&ECCENTRICITY);
-    let leaf = t.may("leaf").whole(&[1, 2]);
+    let leaf = t.may("leaf").whole(LEAVES);
     let source = t.may("source").text();
     t.finish();
 
@@ -93,7 +94,7 @@ pub fn junction<'a>(t: &Table<'a>, around: &Around<'_, 'a>, found: Option<&Found
         _ => around.plan.refer(&t.need("to")),
     };
     let bonded = t.need("bonded").flag();
-    let proof = t.may("proof").pick(&[("seen", Proof::Seen), ("assumed", Proof::Assumed)]);
+    let proof = t.may("proof").pick(KNOWN);
     let words = t.may("words").text();
     let length = |key: &'static str, limits: &Limits, drawn: Option<Length>| match drawn {
         Some(drawn) if !t.has(key) => Some(drawn),

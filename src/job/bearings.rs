@@ -5,22 +5,24 @@ use super::limits::{Limits, Odd, nearest, one_of};
 use super::names::{Names, Seen};
 use super::reader::{Reader, Span, Table};
 use super::returns::MARK;
+use super::words::PADSTONES;
 use crate::building::{Bearing, BuildUp, Building, Load, Padstone, Return};
 use crate::error::Kind;
 use crate::quantity::{Force, Length, Stress};
 
-const LENGTH: Limits = Limits::new(20.0, 1000.0, "mm").odd(&[
+pub(super) const LENGTH: Limits = Limits::new(20.0, 1000.0, "mm").odd(&[
     Odd::Below(75.0, "short for the end of a beam"),
     Odd::Above(400.0, "a beam seldom bears evenly on so much"),
 ]);
-const WIDTH: Limits = Limits::new(20.0, 600.0, "mm").odd(&[Odd::Below(50.0, "narrow for the end of a beam")]);
-const LEVEL: Limits =
+pub(super) const WIDTH: Limits =
+    Limits::new(20.0, 600.0, "mm").odd(&[Odd::Below(50.0, "narrow for the end of a beam")]);
+pub(super) const LEVEL: Limits =
     Limits::new(0.5, 6.0, "m").odd(&[Odd::Below(1.8, "low for the underside of a beam over an opening")]);
-const STONE_LENGTH: Limits = Limits::new(50.0, 2000.0, "mm");
-const STONE_WIDTH: Limits = Limits::new(50.0, 600.0, "mm");
-const STONE_HEIGHT: Limits =
+pub(super) const STONE_LENGTH: Limits = Limits::new(50.0, 2000.0, "mm");
+pub(super) const STONE_WIDTH: Limits = Limits::new(50.0, 600.0, "mm");
+pub(super) const STONE_HEIGHT: Limits =
     Limits::new(40.0, 600.0, "mm").odd(&[Odd::Below(65.0, "flat for a padstone: a course of brick is more")]);
-const CONCRETE: Limits =
+pub(super) const CONCRETE: Limits =
     Limits::new(8.0, 60.0, "N/mm2").odd(&[Odd::Above(50.0, "strong for a padstone; f_ck is meant")]);
 
 /// What the last place may be missed by before a bearing hangs over the end.
@@ -41,11 +43,7 @@ pub fn bearing(
     let width: Option<Length> = t.need("bearing_width").quantity(&WIDTH);
     let level: Option<Length> = t.may("level").quantity(&LEVEL);
     let padstone = t.may("padstone");
-    let padstone = if padstone.value.is_some() {
-        padstone.pick(&[("chosen", true), ("none", false)])
-    } else {
-        Some(true)
-    };
+    let padstone = if padstone.value.is_some() { padstone.pick(PADSTONES) } else { Some(true) };
 
     // A return with faults has its own diagnostics; the bearing cannot be held against it.
     let seen = on.as_ref().and_then(|on| returns.get(on));

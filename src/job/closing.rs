@@ -10,7 +10,7 @@ use crate::building::{Assumption, HoldPoint, Link, Photograph, Proof};
 use crate::error::Kind;
 
 /// Endings of image files that the pack can hold.
-const IMAGES: &[&str] = &[".jpg", ".jpeg", ".png"];
+pub(super) const IMAGES: &[&str] = &[".jpg", ".jpeg", ".png"];
 
 /// Reads one link of the chain to the ground.
 pub fn link(t: &Table<'_>, names: &[&str]) -> Option<Link> {

@@ -8,7 +8,7 @@ use crate::error::Kind;
 use crate::quantity::Length;
 use crate::standards::masonry;
 
-const PLACE: Limits = Limits::new(0.0, 20.0, "m");
+pub(super) const PLACE: Limits = Limits::new(0.0, 20.0, "m");
 
 /// A stretch shorter than this holds nothing that anybody would count on, mm. Common practice, no published source.
 const SHORTEST: f64 = 200.0;

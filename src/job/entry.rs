@@ -24,9 +24,9 @@ pub struct Entry<'a> {
 }
 
 /// Longest text that a title block or a table cell holds, in characters.
-const LINE: usize = 120;
+pub(super) const LINE: usize = 120;
 /// Longest free text, in characters.
-const PROSE: usize = 2000;
+pub(super) const PROSE: usize = 2000;
 
 impl<'a> Entry<'a> {
     /// A text in one line.

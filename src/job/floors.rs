@@ -14,13 +14,15 @@ use crate::quantity::Length;
 use crate::standards::masonry::Edge;
 use crate::standards::tables::approved_document_a as ada;
 
-const SPACING: Limits = Limits::new(0.1, 6.0, "m")
+pub(super) const SPACING: Limits = Limits::new(0.1, 6.0, "m")
     .odd(&[Odd::Above(ada::STRAP_SPACING_M, "more than Approved Document A, 2C, has for straps")]);
-const STRENGTH: Limits = Limits::new(0.5, 50.0, "kN")
+pub(super) const STRENGTH: Limits = Limits::new(0.5, 50.0, "kN")
     .odd(&[Odd::Below(4.0, "little for a restraint strap"), Odd::Above(20.0, "much for a restraint strap")]);
-const SPAN: Limits = Limits::new(0.5, 40.0, "m").odd(&[Odd::Above(15.0, "long for a floor of a house")]);
-const DEPTH: Limits = Limits::new(0.5, 40.0, "m").odd(&[Odd::Below(1.5, "a strip more than a floor")]);
-const FLOW: Limits = Limits::new(0.1, 50.0, "kN/m")
+pub(super) const SPAN: Limits =
+    Limits::new(0.5, 40.0, "m").odd(&[Odd::Above(15.0, "long for a floor of a house")]);
+pub(super) const DEPTH: Limits =
+    Limits::new(0.5, 40.0, "m").odd(&[Odd::Below(1.5, "a strip more than a floor")]);
+pub(super) const FLOW: Limits = Limits::new(0.1, 50.0, "kN/m")
     .odd(&[Odd::Above(8.0, "more than boards or sheets on joists take, mostly a slip of the unit")]);
 
 /// Differences between two heights of the same strip of wind face that are only rounding.

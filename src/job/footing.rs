@@ -3,27 +3,29 @@
 use super::limits::{Limits, Odd};
 use super::reader::Table;
 use super::returns::MARK;
-use crate::building::{Before, BuildUp, Cause, Footing, Proof};
+use super::words::KNOWN;
+use crate::building::{Before, BuildUp, Cause, Footing};
 use crate::error::Kind;
 use crate::quantity::{Length, Q, Weight, unit};
 
-const WIDTH: Limits = Limits::new(50.0, 3000.0, "mm").odd(&[
+pub(super) const WIDTH: Limits = Limits::new(50.0, 3000.0, "mm").odd(&[
     Odd::Below(300.0, "narrow for a footing; measure it again"),
     Odd::Above(1200.0, "wide for the footing of an inner wall"),
 ]);
-const THICKNESS: Limits = Limits::new(50.0, 1500.0, "mm")
+pub(super) const THICKNESS: Limits = Limits::new(50.0, 1500.0, "mm")
     .odd(&[Odd::Below(100.0, "thin for a footing"), Odd::Above(600.0, "more a trench fill than a strip")]);
-const BEYOND: Limits = Limits::new(0.0, 3000.0, "mm");
-const DENSITY: Limits = Limits::new(15.0, 27.0, "kN/m3");
-const ALLOWABLE: Limits = Limits::new(20.0, 1000.0, "kN/m2").odd(&[
+pub(super) const BEYOND: Limits = Limits::new(0.0, 3000.0, "mm");
+pub(super) const DENSITY: Limits = Limits::new(15.0, 27.0, "kN/m3");
+pub(super) const ALLOWABLE: Limits = Limits::new(20.0, 1000.0, "kN/m2").odd(&[
     Odd::Below(50.0, "soft ground: ask whether a strip footing serves there at all"),
     Odd::Above(200.0, "much without a report on the ground"),
 ]);
-const OFFSET: Limits = Limits::new(-1000.0, 1000.0, "mm");
-const LINE: Limits = Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
+pub(super) const OFFSET: Limits = Limits::new(-1000.0, 1000.0, "mm");
+pub(super) const LINE: Limits =
+    Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
 
 /// Weight of plain concrete (EN 1991-1-1 Table A.1; from memory, check against the standard).
-const CONCRETE: Weight = Weight::new(24e-6);
+pub(super) const CONCRETE: Weight = Weight::new(24e-6);
 
 /// Reads the footing of the return in `owner`, whose wall is `wall`.
 pub fn read(t: &Table<'_>, owner: &Table<'_>, wall: Option<&BuildUp>) -> Option<Footing> {
@@ -34,7 +36,7 @@ pub fn read(t: &Table<'_>, owner: &Table<'_>, wall: Option<&BuildUp>) -> Option<
     let beyond_junction = usual(t, "beyond_junction", Length::ZERO, &BEYOND);
     let density = usual(t, "density", CONCRETE, &DENSITY);
     let allowable = t.need("allowable").cause(|e| e.quantity(&ALLOWABLE));
-    let proof = t.need("proof").pick(&[("seen", Proof::Seen), ("assumed", Proof::Assumed)]);
+    let proof = t.need("proof").pick(KNOWN);
     let words = t.need("words").text();
     let offset = if t.has("offset") { t.need("offset").quantity(&OFFSET) } else { Some(Length::ZERO) };
     let before = if t.has("before") {

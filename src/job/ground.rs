@@ -13,18 +13,21 @@ use crate::quantity::{Force, Length};
 /// Clear height of a storey, and of every wall in it.
 pub const HEIGHT: Limits = Limits::new(1.5, 6.0, "m")
     .odd(&[Odd::Below(2.0, "low for a storey"), Odd::Above(3.6, "high for a storey of a house")]);
-const TOTAL_HEIGHT: Limits = Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
+pub(super) const TOTAL_HEIGHT: Limits =
+    Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(15.0, "tall for a masonry house")]);
 /// A place on the plan.
 pub const ON_PLAN: Limits = Limits::new(-100.0, 100.0, "m");
-const REMOVED_LENGTH: Limits =
+pub(super) const REMOVED_LENGTH: Limits =
     Limits::new(0.3, 20.0, "m").odd(&[Odd::Above(8.0, "long for a wall of a house")]);
-const WALL_LENGTH: Limits =
+pub(super) const WALL_LENGTH: Limits =
     Limits::new(0.05, 50.0, "m").odd(&[Odd::Above(20.0, "long for one wall of a house")]);
 /// Height of wind face that one floor or roof collects.
 pub const STRIP: Limits =
     Limits::new(0.5, 15.0, "m").odd(&[Odd::Above(6.0, "more than a storey and a gable")]);
-const FORCE_ABOVE: Limits = Limits::new(0.0, 1000.0, "kN").odd(&[Odd::Above(100.0, "much for a house")]);
-const STOREY_LOAD: Limits = Limits::new(0.0, 20000.0, "kN").odd(&[Odd::Above(3000.0, "much for a house")]);
+pub(super) const FORCE_ABOVE: Limits =
+    Limits::new(0.0, 1000.0, "kN").odd(&[Odd::Above(100.0, "much for a house")]);
+pub(super) const STOREY_LOAD: Limits =
+    Limits::new(0.0, 20000.0, "kN").odd(&[Odd::Above(3000.0, "much for a house")]);
 
 /// Farthest that a bracing wall may stand beyond the end of the wind face: about a wall's thickness.
 const BEYOND: Length = Length::new(600.0);

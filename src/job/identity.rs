@@ -7,11 +7,11 @@ use crate::building::{Identity, Person, Revision, Signatures, Status};
 use crate::error::Kind;
 
 /// Most characters of a job number.
-const NUMBER: usize = 24;
+pub(super) const NUMBER: usize = 24;
 /// Most characters of a revision letter.
-const LETTER: usize = 4;
+pub(super) const LETTER: usize = 4;
 /// Most lines of an address.
-const ADDRESS: usize = 6;
+pub(super) const ADDRESS: usize = 6;
 
 /// Reads `[job]`.
 pub fn identity(t: &Table<'_>) -> Option<Identity> {

@@ -67,6 +67,11 @@ impl Limits {
         format!("{} to {}", self.figure(self.low), self.figure(self.high))
     }
 
+    /// A value in base units as it would be typed.
+    pub fn shown(&self, base: f64) -> String {
+        self.figure(base / self.factor())
+    }
+
     fn figure(&self, x: f64) -> String {
         let gap = if self.unit.is_empty() { "" } else { " " };
         // A figure that may be typed again has the hyphen that a keyboard has.

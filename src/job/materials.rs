@@ -3,26 +3,27 @@
 use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
 use super::reader::Table;
-use super::words::{MORTARS, UNITS};
+use super::words::{GROUPS, MORTARS, PERPENDS, STRENGTHS, UNITS};
 use crate::building::{BuildUp, Leaf, Material, UnitStrength};
 use crate::error::Kind;
 use crate::quantity::{Length, Stress};
 use crate::standards::masonry::{Mortar, UnitKind};
 
-const UNIT_STRENGTH: Limits = Limits::new(0.5, 200.0, "N/mm2").odd(&[
+pub(super) const UNIT_STRENGTH: Limits = Limits::new(0.5, 200.0, "N/mm2").odd(&[
     Odd::Below(1.5, "weaker than any unit sold"),
     Odd::Above(125.0, "stronger than engineering brick"),
 ]);
-const UNIT_HEIGHT: Limits = Limits::new(30.0, 600.0, "mm");
-const UNIT_WIDTH: Limits = Limits::new(40.0, 600.0, "mm");
-const ABSORPTION: Limits =
+pub(super) const UNIT_HEIGHT: Limits = Limits::new(30.0, 600.0, "mm");
+pub(super) const UNIT_WIDTH: Limits = Limits::new(40.0, 600.0, "mm");
+pub(super) const ABSORPTION: Limits =
     Limits::new(0.5, 50.0, "%").odd(&[Odd::Above(30.0, "more than clay bricks take up")]);
-const DENSITY: Limits = Limits::new(4.0, 30.0, "kN/m3");
-const F_B: Limits = Limits::new(0.5, 200.0, "N/mm2");
-const F_K: Limits = Limits::new(0.1, 60.0, "N/mm2").odd(&[Odd::Above(20.0, "high for a masonry wall")]);
-const F_VK0: Limits = Limits::new(0.0, 1.0, "N/mm2")
+pub(super) const DENSITY: Limits = Limits::new(4.0, 30.0, "kN/m3");
+pub(super) const F_B: Limits = Limits::new(0.5, 200.0, "N/mm2");
+pub(super) const F_K: Limits =
+    Limits::new(0.1, 60.0, "N/mm2").odd(&[Odd::Above(20.0, "high for a masonry wall")]);
+pub(super) const F_VK0: Limits = Limits::new(0.0, 1.0, "N/mm2")
     .odd(&[Odd::Above(0.3, "more than the tables give, so a test must stand behind it")]);
-const F_XK: Limits = Limits::new(0.0, 3.0, "N/mm2")
+pub(super) const F_XK: Limits = Limits::new(0.0, 3.0, "N/mm2")
     .odd(&[Odd::Above(2.0, "more than the tables give, so a test must stand behind it")]);
 
 /// Usual weight of masonry in kN/m3 by kind of unit. Common practice, no published source: it only
@@ -37,17 +38,17 @@ const USUAL_WEIGHT: &[(UnitKind, f64, f64)] = &[
     (UnitKind::NaturalStone, 17.0, 30.0),
 ];
 
-const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm")
+pub(super) const THICKNESS: Limits = Limits::new(40.0, 600.0, "mm")
     .odd(&[Odd::Below(75.0, "thin for a wall that carries or braces: plaster and render are not masonry")]);
-const CHASE: Limits = Limits::new(0.0, 100.0, "mm");
-const CAVITY: Limits = Limits::new(10.0, 300.0, "mm")
+pub(super) const CHASE: Limits = Limits::new(0.0, 100.0, "mm");
+pub(super) const CAVITY: Limits = Limits::new(10.0, 300.0, "mm")
     .odd(&[Odd::Below(40.0, "narrow for a cavity"), Odd::Above(200.0, "wide for a cavity")]);
 /// 2.5 ties per square metre is the usual least (from memory, check against PD 6697); it only raises a warning.
-const TIES: Limits = Limits::new(0.2, 20.0, "per m2").odd(&[
+pub(super) const TIES: Limits = Limits::new(0.2, 20.0, "per m2").odd(&[
     Odd::Below(2.5, "fewer than the usual 2.5 per m2"),
     Odd::Above(6.0, "more than walls usually have"),
 ]);
-const TIE_STRENGTH: Limits = Limits::new(0.1, 20.0, "kN");
+pub(super) const TIE_STRENGTH: Limits = Limits::new(0.1, 20.0, "kN");
 
 /// Least thickness that a chase may leave.
 const LEAST_LEFT: Length = Length::new(40.0);
@@ -55,13 +56,13 @@ const LEAST_LEFT: Length = Length::new(40.0);
 /// Reads one material; its name is that of its table.
 pub fn material(name: &str, t: &Table<'_>) -> Option<Material> {
     let unit = t.need("unit").pick(UNITS);
-    let group = t.need("group").whole(&[1, 2]);
+    let group = t.need("group").whole(GROUPS);
     let strength = unit_strength(t);
     let laid_flat = t.may("laid_flat").flag().unwrap_or(false);
     let mortar = t.need("mortar").pick(MORTARS);
     let water_absorption = t.may("water_absorption").quantity(&ABSORPTION).map(crate::quantity::Num::base);
     let density = t.need("density").quantity(&DENSITY);
-    let perpends_filled = t.may("perpends").pick(&[("filled", true), ("unfilled", false)]).unwrap_or(true);
+    let perpends_filled = t.may("perpends").pick(PERPENDS).unwrap_or(true);
     let source = t.may("source").text();
     let f_b = t.may("f_b").cause(|e| e.quantity(&F_B));
     let f_k = t.may("f_k").cause(|e| e.quantity::<1, -2, 0>(&F_K));
@@ -115,7 +116,7 @@ pub fn material(name: &str, t: &Table<'_>) -> Option<Material> {
 
 fn unit_strength(t: &Table<'_>) -> Option<UnitStrength> {
     let strength = t.need("strength").quantity(&UNIT_STRENGTH);
-    let mean = t.need("strength_is").pick(&[("mean", true), ("normalised", false)]);
+    let mean = t.need("strength_is").pick(STRENGTHS);
     let height = t.may("unit_height").quantity(&UNIT_HEIGHT);
     let width = t.may("unit_width").quantity(&UNIT_WIDTH);
     if mean == Some(false) {

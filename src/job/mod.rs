@@ -10,6 +10,7 @@
 //! * `identity basis wind sectors materials plan ground returns bearing footing bearings panels floors closing`: the parts, in
 //!   the file's order
 //! * [`practice`]: the practice file, read the same way
+//! * [`schema`]: the same for editors
 //! * [`start`]: the job to start from
 
 mod basis;
@@ -33,6 +34,7 @@ mod plan;
 pub mod practice;
 mod reader;
 mod returns;
+mod schema;
 mod sectors;
 pub mod start;
 mod syntax;
@@ -45,6 +47,7 @@ mod tests;
 use toml::de::DeTable;
 
 pub use date::in_words as date_in_words;
+pub use schema::schema;
 
 use crate::building::found::{self, Found};
 use crate::building::{Basis, Building, Led, PlanWall, Practice};

@@ -8,10 +8,11 @@ use crate::error::Kind;
 use crate::quantity::Length;
 use crate::quantity::functions::min;
 
-const AT: Limits = Limits::new(0.0, 20.0, "m");
-const WIDTH: Limits = Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
-const HEIGHT: Limits = Limits::new(0.2, 6.0, "m");
-const SILL: Limits = Limits::new(0.0, 4.0, "m");
+pub(super) const AT: Limits = Limits::new(0.0, 20.0, "m");
+pub(super) const WIDTH: Limits =
+    Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
+pub(super) const HEIGHT: Limits = Limits::new(0.2, 6.0, "m");
+pub(super) const SILL: Limits = Limits::new(0.0, 4.0, "m");
 
 /// Masonry narrower than this beside, between, over or under openings is not counted on by anybody: give the
 /// openings as one, or end the panel there, mm. Common practice, no published source.

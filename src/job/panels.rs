@@ -8,18 +8,20 @@ use super::openings;
 use super::plan::plan_length;
 use super::reader::Table;
 use super::returns::{Around, MARK, against_storey};
+use super::words::ARCHES;
 use crate::building::found::{self, FoundPanel, FoundSpan};
 use crate::building::{Arching, Edge, Panel, PanelRoute, PlanWall, Sharing, Span, Storey, line_of};
 use crate::error::Kind;
 use crate::quantity::{Length, LineLoad};
 use crate::standards::masonry;
 
-const LENGTH: Limits = Limits::new(0.3, 20.0, "m")
+pub(super) const LENGTH: Limits = Limits::new(0.3, 20.0, "m")
     .odd(&[Odd::Below(0.6, "a strip more than a panel"), Odd::Above(15.0, "long for one panel")]);
-const DEAD: Limits = Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
-const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2")
+pub(super) const DEAD: Limits =
+    Limits::new(0.0, 500.0, "kN/m").odd(&[Odd::Above(150.0, "much for a wall of a house")]);
+pub(super) const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2")
     .odd(&[Odd::Above(2.0, "more than UK sites of two or three storeys give, mostly a slip of the point")]);
-const WALL_AT: Limits = Limits::new(0.0, 20.0, "m");
+pub(super) const WALL_AT: Limits = Limits::new(0.0, 20.0, "m");
 
 /// Reads one panel.
 pub fn read<'a>(t: &Table<'a>, around: &Around<'_, 'a>) -> Option<Panel> {
@@ -313,7 +315,7 @@ fn arching(t: &Table<'_>, route: Option<PanelRoute>) -> Option<Arching> {
     }
     let table = t.need("arching").table(&format!("{}, arching", t.name))?;
     let abutment = table.need("abutment").text();
-    let vertical = table.need("spans").pick(&[("vertically", true), ("horizontally", false)]);
+    let vertical = table.need("spans").pick(ARCHES);
     table.finish();
     Some(Arching { abutment: abutment?, vertical: vertical? })
 }

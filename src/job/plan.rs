@@ -17,18 +17,22 @@ use crate::error::Kind;
 use crate::quantity::{Length, LineLoad, Stress};
 use crate::standards::tables::selfweight::{self, Per};
 
-const AREA: Limits = Limits::new(0.0, 20.0, "kN/m2").odd(&[Odd::Above(8.0, "much for a floor of a house")]);
-const DEAD: Limits = Limits::new(0.05, 20.0, "kN/m2")
+pub(super) const AREA: Limits =
+    Limits::new(0.0, 20.0, "kN/m2").odd(&[Odd::Above(8.0, "much for a floor of a house")]);
+pub(super) const DEAD: Limits = Limits::new(0.05, 20.0, "kN/m2")
     .odd(&[Odd::Below(0.2, "little for a floor or roof"), Odd::Above(8.0, "much for a floor of a house")]);
-const BEAM: Limits = Limits::new(0.0, 10.0, "kN/m").odd(&[Odd::Above(2.0, "heavy for a beam in a house")]);
+pub(super) const BEAM: Limits =
+    Limits::new(0.0, 10.0, "kN/m").odd(&[Odd::Above(2.0, "heavy for a beam in a house")]);
 /// 100 mm as the least for a lintel, and 150 mm for wider openings: common practice, no published source.
-const LINTEL: Limits =
+pub(super) const LINTEL: Limits =
     Limits::new(20.0, 600.0, "mm").odd(&[Odd::Below(100.0, "short for the bearing of a lintel")]);
-const BEARING: Limits = Limits::new(50.0, 600.0, "mm").odd(&[Odd::Below(90.0, "short for a bearing")]);
-const WIDTH: Limits = Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
-const OPENING: Limits = Limits::new(0.2, 6.0, "m");
-const SILL: Limits = Limits::new(0.0, 4.0, "m");
-const ALONG: Limits = Limits::new(0.0, 100.0, "m");
+pub(super) const BEARING: Limits =
+    Limits::new(50.0, 600.0, "mm").odd(&[Odd::Below(90.0, "short for a bearing")]);
+pub(super) const WIDTH: Limits =
+    Limits::new(0.2, 10.0, "m").odd(&[Odd::Above(4.0, "wide for an opening in masonry")]);
+pub(super) const OPENING: Limits = Limits::new(0.2, 6.0, "m");
+pub(super) const SILL: Limits = Limits::new(0.0, 4.0, "m");
+pub(super) const ALONG: Limits = Limits::new(0.0, 100.0, "m");
 
 /// Reads the direction of north, degrees clockwise from the top of the page.
 pub fn north(t: &Table<'_>) -> Option<f64> {

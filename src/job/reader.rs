@@ -21,6 +21,9 @@ pub struct Reader {
     found: RefCell<Vec<Diagnostic>>,
     missing: RefCell<Vec<Missing>>,
     warnings: RefCell<Vec<String>>,
+    /// Which entries were asked for, by the address of their table: what the schema is held against.
+    #[cfg(test)]
+    pub asked: RefCell<Vec<(usize, &'static str)>>,
 }
 
 /// A required entry that is not there; withdrawn where an unknown entry turns out to be it.
@@ -244,6 +247,8 @@ impl<'a> Table<'a> {
     }
 
     fn ask(&self, key: &'static str) {
+        #[cfg(test)]
+        self.reader.asked.borrow_mut().push((std::ptr::from_ref(self.map).addr(), key));
         let mut asked = self.asked.borrow_mut();
         if !asked.contains(&key) {
             asked.push(key);

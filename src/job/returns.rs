@@ -8,6 +8,7 @@ use super::limits::{Limits, Odd};
 use super::names::{Names, Seen};
 use super::plan::plan_length;
 use super::reader::{Reader, Span, Table};
+use super::words::HEADS;
 use crate::building::found::{self, Found, FoundReturn};
 use crate::building::{
     Acts, BaseJoint, BracingWall, BuildUp, Cause, FloorKind, FromAbove, Head, Load, Path, PlanWall,
@@ -19,21 +20,23 @@ use crate::quantity::{Length, Num, Stress};
 /// Most characters of a mark.
 pub const MARK: usize = 12;
 
-const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[
+pub(super) const LENGTH: Limits = Limits::new(50.0, 6000.0, "mm").odd(&[
     Odd::Below(200.0, "a nib this short is a scar on the wall more than a return; measure it again"),
     Odd::Above(2500.0, "this is a wall more than a return"),
 ]);
-const POSITION: Limits = Limits::new(-100.0, 100.0, "m");
-const MU: Limits =
+pub(super) const POSITION: Limits = Limits::new(-100.0, 100.0, "m");
+pub(super) const MU: Limits =
     Limits::new(0.1, 1.0, "").odd(&[Odd::Above(0.6, "high for a joint with a damp-proof course")]);
-const TRIBUTARY: Limits = Limits::new(0.0, 20.0, "m").odd(&[Odd::Above(6.0, "wide for one return")]);
-const SUPPORTED: Limits =
+pub(super) const TRIBUTARY: Limits =
+    Limits::new(0.0, 20.0, "m").odd(&[Odd::Above(6.0, "wide for one return")]);
+pub(super) const SUPPORTED: Limits =
     Limits::new(1.5, 30.0, "m").odd(&[Odd::Above(12.0, "tall for the wall of a house")]);
-const OPENING: Limits = Limits::new(0.0, 20.0, "m");
+pub(super) const OPENING: Limits = Limits::new(0.0, 20.0, "m");
 /// A force on a wall of a house.
 pub const FORCE: Limits =
     Limits::new(0.0, 2000.0, "kN").odd(&[Odd::Above(300.0, "much for a wall of a house")]);
-const MOMENT: Limits = Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
+pub(super) const MOMENT: Limits =
+    Limits::new(0.0, 2000.0, "kNm").odd(&[Odd::Above(100.0, "much for a return")]);
 
 /// Difference of a wall's height from its storey's that passes without a word.
 const HEIGHT_DIFFERS: Length = Length::new(300.0);
@@ -272,7 +275,7 @@ fn base(t: &Table<'_>, found: bool) -> (Option<BaseJoint>, Option<String>) {
 }
 
 fn head<'a>(t: &Table<'a>, around: &Around<'_, 'a>, mark: Option<&str>) -> Option<Head> {
-    let word = t.need("head").pick(&[("free", false), ("propped", true)]);
+    let word = t.need("head").pick(HEADS);
     let given = t.has("propped_by");
     let along = around.stability.map(|(_, s)| s.wind_along);
     let entry = t.need("propped_by");

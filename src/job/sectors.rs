@@ -5,14 +5,14 @@ use toml::de::DeValue;
 use super::entry::Entry;
 use super::limits::Limits;
 use super::reader::Table;
-use super::words::TERRAIN;
+use super::words::{ANY, BEARING, TERRAIN};
 use crate::building::{Readings, Sector, WindRoute};
 use crate::error::Kind;
 
-const DISTANCE: Limits = Limits::new(0.0, 200.0, "km");
+pub(super) const DISTANCE: Limits = Limits::new(0.0, 200.0, "km");
 /// Factors of the charts: what they show at all.
-const C_E: Limits = Limits::new(0.5, 5.0, "");
-const C_ET: Limits = Limits::new(0.4, 1.0, "");
+pub(super) const C_E: Limits = Limits::new(0.5, 5.0, "");
+pub(super) const C_ET: Limits = Limits::new(0.4, 1.0, "");
 
 /// Reads one sector.
 pub fn sector(t: &Table<'_>) -> Option<Sector> {
@@ -31,7 +31,7 @@ pub fn sector(t: &Table<'_>) -> Option<Sector> {
 fn bearings(entry: &Entry<'_>) -> Option<Vec<u16>> {
     let wanted = "\"any\", or degrees from north in steps of 30: [210, 240, 270]";
     if let DeValue::String(text) = entry.present(wanted)? {
-        if text == "any" {
+        if text == ANY {
             return Some(Vec::new());
         }
         entry.wrong_type(wanted, "write \"any\" or a list");
@@ -40,7 +40,7 @@ fn bearings(entry: &Entry<'_>) -> Option<Vec<u16>> {
     let items = entry.list(wanted)?;
     let read = |e: &Entry<'_>| {
         let degrees = e.number(&super::words::TURN)?;
-        if degrees.rem_euclid(30.0) != 0.0 || degrees >= 360.0 {
+        if degrees.rem_euclid(BEARING) != 0.0 || degrees >= 360.0 {
             e.fault(Kind::NotAllowed, format_args!("{degrees} degrees is no bearing of the table"))
                 .at(e.place(), "not a step of 30")
                 .allowed("0, 30, 60, ... 330: UK Table NA.1")

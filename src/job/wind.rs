@@ -20,30 +20,31 @@ pub const PRESSURE: Limits = Limits::new(0.05, 10.0, "kN/m2").odd(&[
     Odd::Below(0.25, "less than even a sheltered site gives, mostly a slip of the point"),
     Odd::Above(2.0, "more than UK sites of two or three storeys give, mostly a slip of the point"),
 ]);
-const MAP_SPEED: Limits = Limits::new(15.0, 45.0, "m/s").odd(&[
+pub(super) const MAP_SPEED: Limits = Limits::new(15.0, 45.0, "m/s").odd(&[
     Odd::Below(21.0, "below the lowest line of the UK wind map"),
     Odd::Above(31.0, "above the highest line of the UK wind map"),
 ]);
-const ALTITUDE: Limits =
+pub(super) const ALTITUDE: Limits =
     Limits::new(-10.0, 1350.0, "m").odd(&[Odd::Above(500.0, "higher than almost every house in the UK")]);
-const REFERENCE_HEIGHT: Limits =
+pub(super) const REFERENCE_HEIGHT: Limits =
     Limits::new(2.0, 60.0, "m").odd(&[Odd::Above(20.0, "tall for a masonry house")]);
-const SIDE: Limits = Limits::new(2.0, 200.0, "m").odd(&[Odd::Above(60.0, "long for a masonry house")]);
-const SEASON: Limits = Limits::new(0.6, 1.0, "");
-const PROBABILITY: Limits =
+pub(super) const SIDE: Limits =
+    Limits::new(2.0, 200.0, "m").odd(&[Odd::Above(60.0, "long for a masonry house")]);
+pub(super) const SEASON: Limits = Limits::new(0.6, 1.0, "");
+pub(super) const PROBABILITY: Limits =
     Limits::new(0.001, 0.5, "").odd(&[Odd::Above(0.02, "a wind weaker than that of 50 years")]);
-const OROGRAPHY: Limits = Limits::new(1.0, 2.5, "");
+pub(super) const OROGRAPHY: Limits = Limits::new(1.0, 2.5, "");
 /// Height of a hill or cliff, and the lengths of its slopes.
-const HILL: Limits = Limits::new(1.0, 1500.0, "m");
-const SLOPE: Limits = Limits::new(1.0, 20_000.0, "m");
-const FROM_CREST: Limits = Limits::new(-20_000.0, 20_000.0, "m");
-const BUILDINGS: Limits = Limits::new(2.0, 200.0, "m");
-const APART: Limits = Limits::new(0.0, 2000.0, "m");
-const OPENINGS: Limits = Limits::new(0.0, 1000.0, "m2");
-const PITCH: Limits = Limits::new(5.0, 75.0, "");
+pub(super) const HILL: Limits = Limits::new(1.0, 1500.0, "m");
+pub(super) const SLOPE: Limits = Limits::new(1.0, 20_000.0, "m");
+pub(super) const FROM_CREST: Limits = Limits::new(-20_000.0, 20_000.0, "m");
+pub(super) const BUILDINGS: Limits = Limits::new(2.0, 200.0, "m");
+pub(super) const APART: Limits = Limits::new(0.0, 2000.0, "m");
+pub(super) const OPENINGS: Limits = Limits::new(0.0, 1000.0, "m2");
+pub(super) const PITCH: Limits = Limits::new(5.0, 75.0, "");
 
 /// Usual yearly probability of a stronger wind: 4.2(2)P note 4.
-const P_USUAL: f64 = 0.02;
+pub(super) const P_USUAL: f64 = 0.02;
 
 /// Reads `[wind]`.
 pub fn wind(t: &Table<'_>, storeys: &Names<'_, Storey>, turned: bool) -> Option<Wind> {

@@ -1,6 +1,6 @@
 //! The words of the job file for the kinds that the standards' tables are entered with.
 
-use crate::building::RoofForm;
+use crate::building::{Proof, RoofForm};
 use crate::standards::en1991_1_4::Ground;
 use crate::standards::masonry::{Edge, Mortar, TerrainCategory, UnitKind};
 
@@ -80,6 +80,42 @@ impl EdgeWord {
 /// Links of the chain from the wind face to the ground, in its order.
 pub const LINKS: &[&str] =
     &["wind face", "panel", "floor edge", "diaphragm", "bracing wall", "junction", "dpc", "footing"];
+
+/// How what a wall stands on or meets is known.
+pub const KNOWN: &[(&str, Proof)] = &[("seen", Proof::Seen), ("assumed", Proof::Assumed)];
+
+/// Categories of units, by the number that the tables are entered with.
+pub const CATEGORIES: &[(&str, u8)] = &[("I", 1), ("II", 2)];
+
+/// Classes of execution.
+pub const CLASSES: &[u8] = &[1, 2];
+
+/// Groups of units.
+pub const GROUPS: &[u8] = &[1, 2];
+
+/// Leaves of a wall, outer first.
+pub const LEAVES: &[u8] = &[1, 2];
+
+/// Which strength of a unit is given: whether it is the mean one.
+pub const STRENGTHS: &[(&str, bool)] = &[("mean", true), ("normalised", false)];
+
+/// Whether upright joints are filled.
+pub const PERPENDS: &[(&str, bool)] = &[("filled", true), ("unfilled", false)];
+
+/// Heads of returns: whether something holds them.
+pub const HEADS: &[(&str, bool)] = &[("free", false), ("propped", true)];
+
+/// What lies under a beam: whether a padstone is chosen.
+pub const PADSTONES: &[(&str, bool)] = &[("chosen", true), ("none", false)];
+
+/// Spans of an arching panel: whether it is upright.
+pub const ARCHES: &[(&str, bool)] = &[("vertically", true), ("horizontally", false)];
+
+/// What the wind is read for without bearings.
+pub const ANY: &str = "any";
+
+/// Degrees from one bearing of UK Table NA.1 to the next.
+pub const BEARING: f64 = 30.0;
 
 /// Where north is on the page, degrees clockwise from its top.
 pub const NORTH: &[(&str, f64)] = &[("up", 0.0), ("right", 90.0), ("down", 180.0), ("left", 270.0)];

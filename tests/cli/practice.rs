@@ -69,7 +69,11 @@ fn a_practice_that_cannot_be_used_leaves_nothing_behind() {
     let place = Place::with(&[("job.toml", jobs::START)]);
     let ran = place.run(&["check", "--practice", "gone.toml", "job.toml"]);
     assert_eq!(ran.code, 2);
-    assert!(ran.err.contains("gone.toml cannot be read") && ran.err.contains("perpend start --practice"), "{}", ran.err);
+    assert!(
+        ran.err.contains("gone.toml cannot be read") && ran.err.contains("perpend start --practice"),
+        "{}",
+        ran.err
+    );
 }
 
 #[test]

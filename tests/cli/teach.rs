@@ -13,6 +13,19 @@ fn every_check_is_listed_with_its_clause() {
     }
 }
 
+/// One JSON document, and nothing else, that names the tables of the start job.
+#[test]
+fn the_schema_is_printed_as_json() {
+    let ran = Place::empty().run(&["schema"]);
+    assert_eq!((ran.code, ran.err.as_str()), (0, ""));
+    let schema: serde_json::Value = serde_json::from_str(&ran.out).expect("JSON");
+    assert_eq!(schema["$schema"], "https://json-schema.org/draft/2020-12/schema");
+    for line in perpend::job::start::TEMPLATE.lines().filter(|l| l.starts_with('[')) {
+        let head = line.trim_start_matches('[').split([']', '.']).next().expect("a head");
+        assert!(schema["properties"][head].is_object(), "{line}");
+    }
+}
+
 /// From the same source as the help: each names every command and flag.
 #[test]
 fn completions_and_manual_know_every_command_and_flag() {

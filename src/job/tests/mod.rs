@@ -8,10 +8,10 @@ mod slips;
 use super::read;
 
 /// A whole valid job, apart from the demo jobs so that those may change.
-const GOOD: &str = include_str!("good.toml");
+pub const GOOD: &str = include_str!("good.toml");
 
 /// Every demo job, by file name.
-const DEMOS: &[(&str, &str)] = &[
+pub const DEMOS: &[(&str, &str)] = &[
     ("rear-opening.toml", super::start::TEMPLATE),
     ("short-nib.toml", include_str!("../../../jobs/short-nib.toml")),
     ("lime-terrace.toml", include_str!("../../../jobs/lime-terrace.toml")),
