@@ -2,6 +2,7 @@
 //!
 //! * [`pdf`]: the files that travel inside a pack
 //! * [`compare`]: what changed between two records or two job files
+//! * [`sign`]: packs signed with an engineer's own key, and the signatures of a pack
 //!
 //! A pack carries its job file and a [`Record`] of all that it prints. Working the job again and comparing the two
 //! records tells whether every figure still stands. What is read are the attached files: whether the paper says the same
@@ -9,6 +10,7 @@
 
 pub mod compare;
 pub mod pdf;
+pub mod sign;
 
 use std::fmt;
 use std::path::Path;
@@ -98,16 +100,17 @@ impl Rechecked {
     }
 }
 
-/// The issued pack at `path` that is not the one about to be written: it must stay. `digest` is that of the job file,
+/// The issued or signed pack at `path` that is not the one about to be written: it must stay. `digest` is that of the job file,
 /// `pdf` the new pack; where only the summary is written there is none, and job and program must be the same.
 pub fn issued_at(path: &Path, digest: &str, pdf: Option<&[u8]>) -> Option<Record> {
     let bytes = std::fs::read(path).ok()?;
     if pdf == Some(bytes.as_slice()) {
         return None;
     }
+    let signed = !sign::signatures(&bytes).is_empty();
     let record = held(bytes).ok()?.record;
     let same = pdf.is_none() && record.job_digest == digest && record.version == PROGRAM.1;
-    (record.issued && !same).then_some(record)
+    ((record.issued || signed) && !same).then_some(record)
 }
 
 /// What travels inside a pack, `bytes` its file.

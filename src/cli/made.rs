@@ -114,16 +114,18 @@ impl Made {
     }
 }
 
-/// An issued pack is never overwritten.
+/// An issued pack is never overwritten, nor a signed one.
 fn stays(path: &Path, issued: &Record, digest: &str) -> Error {
     let why = match issued.job_digest == digest {
         true => "this version of the program, or a photograph, makes another pack of the same job file",
         false => "the job file has changed since",
     };
+    // A draft stays only where somebody has signed it.
+    let what = if issued.issued { "as issued" } else { "as signed" };
     Error::File {
         path: files::name(path),
         trouble: Trouble::Content(format!(
-            "it is revision {} as issued, {}, and {why}",
+            "it is revision {} {what}, {}, and {why}",
             issued.revision, issued.status
         )),
         help:

@@ -5,6 +5,7 @@ mod child;
 mod flags;
 mod made;
 mod progress;
+mod sign;
 mod teach;
 mod watch;
 
@@ -52,6 +53,9 @@ pub fn run() -> u8 {
             watch::watch(&file, into.as_deref(), only)
         }
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
+        Command::Sign { pack, key, certificate, role, into, date } => {
+            sign::sign(&sign::Asked { pack, key, certificate, role, into, date })
+        }
         Command::Compare { old, new, working } => again::compare_two(&old, &new, working),
         Command::Checks => teach::checks(),
         Command::Completions { shell } => teach::completions(shell),
