@@ -84,7 +84,8 @@ fn filled(field: &[u8], drawing: u32, signature: u32) -> Option<Vec<u8>> {
 fn lines(shown: &Shown<'_>) -> Vec<String> {
     let certificate = &shown.signer.certificates[0].tbs_certificate;
     vec![
-        format!("Digitally signed: {}, {}", shown.signer.name(), shown.at.words()),
+        // The date first: a long name is cut at the end of the line.
+        format!("Digitally signed {}: {}", shown.at.words(), shown.signer.name()),
         format!("certificate of {}", name(&certificate.subject)),
         format!("issued by {}", name(&certificate.issuer)),
     ]
