@@ -72,10 +72,11 @@ Examples:
   perpend sign '2419 Calculations (A).pdf' --key key.pem --certificate hollin.pem
   perpend sign '2419 Calculations (A) signed.pdf' --key varley.p12 --as checked
 
-Writes a new file beside the pack, '2419 Calculations (A) signed.pdf'; the pack stays as it is, and is the beginning of
-the new file byte for byte. A passphrase is asked for on the terminal, or read as one line from standard input where that
-is none. Keys are RSA of 2048 bits or more, P-256 or P-384. The time of signing is that of this computer's clock, and
-nobody vouches for it. Whether a certificate is trusted is for the reader's PDF program to say.";
+Writes a new file beside the pack, '2419 Calculations (A) signed.pdf'. The pack stays as it is, and
+is the beginning of the new file byte for byte. A passphrase is asked for on the terminal, or read as
+one line from standard input where that is none. Keys are RSA of 2048 bits or more, P-256 or P-384.
+The time of signing is that of this computer's clock, and nobody vouches for it. Whether a certificate
+is trusted is for the reader's PDF program to say.";
 
 const COMPARE_EXAMPLES: &str = "\
 Examples:
