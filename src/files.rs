@@ -32,6 +32,9 @@ fn content(file: &Path, what: &str, help: &str) -> Error {
 /// Largest pack that is read, bytes.
 const LARGEST_PACK: u64 = 512 << 20;
 
+/// Largest file with a key or certificates, bytes.
+const LARGEST_KEY: u64 = 1 << 20;
+
 /// The text of a job file.
 ///
 /// # Errors
@@ -112,6 +115,15 @@ pub fn read_pack(file: &Path) -> Result<Vec<u8>, Error> {
     whole(file, LARGEST_PACK, "pack", [HELP, HELP])
 }
 
+/// The bytes of a key or a certificate; they are wiped from memory when they are no longer needed.
+///
+/// # Errors
+/// [`Error::File`] where it is not there, a folder, or too large.
+pub fn read_key(file: &Path) -> Result<zeroize::Zeroizing<Vec<u8>>, Error> {
+    const HELP: &str = "Name the file with your key or certificate: PEM or PKCS#12.";
+    whole(file, LARGEST_KEY, "key", [HELP, HELP]).map(zeroize::Zeroizing::new)
+}
+
 /// All bytes of a file of at most `largest`; `helps` says what to do about it, and about a folder of that name.
 fn whole(file: &Path, largest: u64, kind: &str, helps: [&str; 2]) -> Result<Vec<u8>, Error> {
     if file.is_dir() {
@@ -156,15 +168,27 @@ pub fn folder(folder: &Path) -> Result<(), Error> {
 /// # Errors
 /// [`Error::File`] where there is one already, or it cannot be written.
 pub fn write_new(file: &Path, bytes: &[u8]) -> Result<(), Error> {
-    let there = "a file of this name is there already; it was left alone";
-    let help = "Give another name, or move the file away first.";
-    if file.exists() {
-        return Err(content(file, there, help));
-    }
+    free(file)?;
     Staged::new(file.to_owned(), bytes)?.file.persist_noclobber(file).map_err(|e| match e.error.kind() {
-        std::io::ErrorKind::AlreadyExists => content(file, there, help),
+        std::io::ErrorKind::AlreadyExists => there(file),
         _ => unwritten(file, e.error),
     })
+}
+
+/// Whether a new file may be written there.
+///
+/// # Errors
+/// [`Error::File`] where there is one already.
+pub fn free(file: &Path) -> Result<(), Error> {
+    if file.exists() { Err(there(file)) } else { Ok(()) }
+}
+
+fn there(file: &Path) -> Error {
+    content(
+        file,
+        "a file of this name is there already; it was left alone",
+        "Give another name, or move the file away first.",
+    )
 }
 
 fn unwritten(path: &Path, why: std::io::Error) -> Error {

@@ -4,6 +4,7 @@
 //! * `examples`: one file a published source, and two hand calculations
 //! * `archive`: packs worked again and compared
 //! * `bounds`: the limit analyses of panels
+//! * `signing`: packs signed, and their signatures verified
 //! * `properties`: what must be monotone, symmetric or continuous
 //! * `sheets`: every demo job as text
 //! * `pdf`: the packs, read back
@@ -24,4 +25,5 @@ mod jobs;
 mod pdf;
 mod properties;
 mod sheets;
+mod signing;
 mod trace;

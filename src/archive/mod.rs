@@ -3,6 +3,7 @@
 //! * [`pdf`]: the files that travel inside a pack
 //! * [`compare`]: what changed between two records or two job files
 //! * [`since`]: the same on the sheets of a new issue
+//! * [`sign`]: packs signed with an engineer's own key, and the signatures of a pack
 //!
 //! A pack carries its job file and a [`Record`] of all that it prints. Working the job again and comparing the two
 //! records tells whether every figure still stands. What is read are the attached files: whether the paper says the same
@@ -10,6 +11,7 @@
 
 pub mod compare;
 pub mod pdf;
+pub mod sign;
 pub mod since;
 
 use std::fmt;
@@ -116,17 +118,18 @@ pub struct Digests {
     pub practice: String,
 }
 
-/// The issued pack at `path` that is not the one about to be written: it must stay. `pdf` is the new pack; where only the
+/// The issued or signed pack at `path` that is not the one about to be written: it must stay. `pdf` is the new pack; where only the
 /// summary is written there is none, and job, practice and program must be the same.
 pub fn issued_at(path: &Path, digests: &Digests, pdf: Option<&[u8]>) -> Option<Record> {
     let bytes = std::fs::read(path).ok()?;
     if pdf == Some(bytes.as_slice()) {
         return None;
     }
+    let signed = !sign::signatures(&bytes).is_empty();
     let record = held(bytes).ok()?.record;
     let alike = record.job_digest == digests.job && record.practice_digest == digests.practice;
     let same = pdf.is_none() && alike && record.version == PROGRAM.1;
-    (record.issued && !same).then_some(record)
+    ((record.issued || signed) && !same).then_some(record)
 }
 
 /// What travels inside a pack, `bytes` its file.

@@ -15,8 +15,8 @@ pub fn attached(bytes: Vec<u8>) -> Option<Vec<(String, Vec<u8>)>> {
     Some(pdf.objects().into_iter().filter_map(Object::into_dict).filter(is_file).filter_map(one).collect())
 }
 
-/// A text string of a PDF: UTF-16 with its mark, or one byte a letter.
-fn words(bytes: &[u8]) -> String {
+/// A text string of a PDF in letters: UTF-16 with its mark, or one byte a letter.
+pub fn words(bytes: &[u8]) -> String {
     match bytes {
         [0xFE, 0xFF, rest @ ..] => {
             let unit = |c: &[u8]| u16::from_be_bytes([c[0], c.get(1).copied().unwrap_or(0)]);

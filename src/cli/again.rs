@@ -6,6 +6,7 @@ use std::path::{Path, PathBuf};
 use super::flags::Whose;
 use super::{ADEQUATE, FAILED, NOT_PLAINLY_ADEQUATE, complain, internal};
 use crate::archive::compare::{self, Altered, Change, Differences};
+use crate::archive::sign::{Signature, signatures};
 use crate::archive::{Held, Rechecked, held};
 use crate::error::{Error, Trouble};
 use crate::report::record::{self, Record};
@@ -14,11 +15,17 @@ use crate::{digest, draw_for, files, many, recheck};
 /// Works the jobs inside packs again. Yields the exit code.
 pub fn recheck_all(paths: &[PathBuf], working: bool) -> u8 {
     let mut worst = ADEQUATE;
-    let work = |file: &PathBuf| recheck(&files::name(file), pack(file)?);
-    let take = |file: &PathBuf, result| match internal::<Rechecked>(result) {
-        Ok(found) => {
-            worst = worst.max(if found.stands() { ADEQUATE } else { NOT_PLAINLY_ADEQUATE });
-            print(&told(file, &found, working));
+    let work = |file: &PathBuf| {
+        let bytes = files::read_pack(file)?;
+        let signed = signatures(&bytes);
+        let found = recheck(&files::name(file), inside(file, bytes)?)?;
+        Ok((found, signed))
+    };
+    let take = |file: &PathBuf, result| match internal::<(Rechecked, Vec<Signature>)>(result) {
+        Ok((found, signed)) => {
+            let holds = found.stands() && signed.iter().all(Signature::holds);
+            worst = worst.max(if holds { ADEQUATE } else { NOT_PLAINLY_ADEQUATE });
+            print(&told(file, &found, &signed, working));
         }
         Err(e) => {
             worst = FAILED;
@@ -31,16 +38,24 @@ pub fn recheck_all(paths: &[PathBuf], working: bool) -> u8 {
 
 /// The files inside a pack.
 fn pack(file: &Path) -> Result<Held, Error> {
-    held(files::read_pack(file)?).map_err(|unfit| Error::File {
+    inside(file, files::read_pack(file)?)
+}
+
+fn inside(file: &Path, bytes: Vec<u8>) -> Result<Held, Error> {
+    held(bytes).map_err(|unfit| Error::File {
         path: files::name(file),
         trouble: Trouble::Content(unfit.to_string()),
         help: unfit.help().to_owned(),
     })
 }
 
-fn told(file: &Path, found: &Rechecked, working: bool) -> Vec<String> {
+fn told(file: &Path, found: &Rechecked, signed: &[Signature], working: bool) -> Vec<String> {
     let (was, now) = (&found.was, &found.now);
-    let verdict = if found.stands() { "every printed result stands" } else { "NOT everything stands" };
+    let verdict = match (found.stands(), signed.iter().all(Signature::holds)) {
+        (true, true) => "every printed result stands",
+        (true, false) => "every printed result stands, and a signature does NOT",
+        (false, _) => "NOT everything stands",
+    };
     let mut out = vec![
         format!("{}: {verdict}", files::name(file)),
         format!(
@@ -65,6 +80,11 @@ fn told(file: &Path, found: &Rechecked, working: bool) -> Vec<String> {
                 .to_owned(),
         );
     }
+    out.extend(signed.iter().map(|s| format!("  {}", s.words())));
+    out.push(match signed.is_empty() {
+        true => "  no digital signature".to_owned(),
+        false => "  Whether a certificate is to be trusted is for your PDF program to say.".to_owned(),
+    });
     out.extend(differences(&found.differences, working));
     out
 }

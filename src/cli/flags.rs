@@ -73,9 +73,23 @@ Examples:
   perpend recheck --working packs/*.pdf
 
 A pack carries its job file and all that it prints as data; the job is worked again from there. What stands on paper
-is the same while the digest at the foot of its sheets is the one that this command prints.
+is the same while the digest at the foot of its sheets is the one that this command prints. Of each digital signature it
+says whether the bytes are those that were signed, with the key of its certificate; trust in a certificate is for your
+PDF program to tell.
 
 Exit codes: 0 everything stands; 1 something does not; 2 a file is no pack, or cannot be worked.";
+
+const SIGN_EXAMPLES: &str = "\
+Examples:
+  perpend sign '2419 Calculations (A).pdf' --key hollin.p12
+  perpend sign '2419 Calculations (A).pdf' --key key.pem --certificate hollin.pem
+  perpend sign '2419 Calculations (A) signed.pdf' --key varley.p12 --as checked
+
+Writes a new file beside the pack, '2419 Calculations (A) signed.pdf'. The pack stays as it is, and
+is the beginning of the new file byte for byte. A passphrase is asked for on the terminal, or read as
+one line from standard input where that is none. Keys are RSA of 2048 bits or more, P-256 or P-384.
+The time of signing is that of this computer's clock, and nobody vouches for it. Whether a certificate
+is trusted is for the reader's PDF program to say.";
 
 const COMPARE_EXAMPLES: &str = "\
 Examples:
@@ -152,6 +166,28 @@ pub(super) enum Command {
         #[arg(long)]
         working: bool,
     },
+    /// Sign a pack with your own X.509 key, in the box of its sign-off
+    #[command(after_help = SIGN_EXAMPLES)]
+    Sign {
+        /// The pack, as `sheet` or `sign` wrote it
+        pack: PathBuf,
+        /// File with the private key: PEM, or PKCS#12 with its certificate
+        #[arg(long, value_name = "FILE")]
+        key: PathBuf,
+        /// File with the certificate, where the key's file does not hold it
+        #[arg(long, value_name = "FILE")]
+        certificate: Option<PathBuf>,
+        /// As what you sign
+        #[arg(long = "as", value_name = "ROLE", default_value = "made")]
+        role: As,
+        /// Folder for the signed pack, made where it is not there; beside the pack without it
+        #[arg(long, value_name = "FOLDER")]
+        into: Option<PathBuf>,
+        /// Date of signing in place of the clock's, 2026-12-02 or 2026-12-02T14:05:00Z: for tests, and to write the same
+        /// bytes again
+        #[arg(long, value_name = "DATE")]
+        date: Option<String>,
+    },
     /// Say what changed between two job files or packs
     #[command(after_help = COMPARE_EXAMPLES)]
     Compare {
@@ -226,4 +262,13 @@ pub(super) enum Only {
     Pack,
     /// The summary for the client
     Summary,
+}
+
+/// As what somebody signs.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, clap::ValueEnum)]
+pub(super) enum As {
+    /// Who made the calculations
+    Made,
+    /// Who checked them
+    Checked,
 }

@@ -135,17 +135,19 @@ fn unlisted(b: &Building) -> Option<String> {
     ))
 }
 
-/// An issued pack is never overwritten.
+/// An issued pack is never overwritten, nor a signed one.
 fn stays(path: &Path, issued: &Record, now: &Digests) -> Error {
     let why = match issued.job_digest == now.job {
         true if issued.practice_digest != now.practice => "the practice file is another",
         true => "this version of the program, or a photograph, makes another pack of the same job file",
         false => "the job file has changed since",
     };
+    // A draft stays only where somebody has signed it.
+    let what = if issued.issued { "as issued" } else { "as signed" };
     Error::File {
         path: files::name(path),
         trouble: Trouble::Content(format!(
-            "it is revision {} as issued, {}, and {why}",
+            "it is revision {} {what}, {}, and {why}",
             issued.revision, issued.status
         )),
         help:

@@ -5,6 +5,7 @@ mod child;
 mod flags;
 mod made;
 mod progress;
+mod sign;
 mod teach;
 mod watch;
 
@@ -64,6 +65,9 @@ pub fn run() -> u8 {
             watch::watch(&file, into.as_deref(), (only, &whose))
         }
         Command::Recheck { packs, working } => again::recheck_all(&packs, working),
+        Command::Sign { pack, key, certificate, role, into, date } => {
+            sign::sign(&sign::Asked { pack, key, certificate, role, into, date })
+        }
         Command::Compare { old, new, working, whose } => again::compare_two((&old, &new), working, &whose),
         Command::Checks => teach::checks(),
         Command::Completions { shell } => teach::completions(shell),

@@ -70,7 +70,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
         made,
         checked,
         signed: false,
-        unsigned_text: "not signed".to_owned(),
+        unsigned_text: "not valid unless signed".to_owned(),
         revisions: b
             .revisions
             .iter()

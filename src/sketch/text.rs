@@ -164,6 +164,11 @@ pub(super) fn face(style: Style) -> &'static Face<'static> {
     &faces[index(style)]
 }
 
+/// The upright face, for whoever draws letters as outlines.
+pub fn upright() -> &'static Face<'static> {
+    face(Style::Plain)
+}
+
 /// Height of a capital, em.
 fn cap_height() -> f64 {
     let face = face(Style::Plain);

@@ -4,6 +4,7 @@ mod again;
 mod many;
 mod output;
 mod practice;
+mod sign;
 mod teach;
 mod trouble;
 mod watch;
@@ -183,7 +184,7 @@ fn help_teaches_with_examples() {
     ] {
         assert!(whole.out.contains(part), "{part} is not in {}", whole.out);
     }
-    for command in ["start", "check", "sheet"] {
+    for command in ["start", "check", "sheet", "sign"] {
         let help = place.run(&[command, "--help"]);
         assert_eq!(help.code, 0);
         let example = format!("perpend {command} ");

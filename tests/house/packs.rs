@@ -142,7 +142,7 @@ fn no_template_may_leave_out_what_every_pack_must_say() {
     assert!(without("pack.typ", "#assumptions(").contains("leave out"));
     assert!(without("pack.typ", "#outcome(").contains("leave out"));
     let unsigned = without("parts/furniture.typ", "firm(unsigned)");
-    assert!(unsigned.contains("not signed (page 1)"), "{unsigned}");
+    assert!(unsigned.contains("not valid unless signed (page 1)"), "{unsigned}");
     // The same templates, whole, are taken.
     assert!(made(jobs::START, &with_template("pack.typ", ours("pack.typ"))).is_ok());
 }

@@ -77,7 +77,9 @@ fn every_sheet_says_what_it_is() {
         let version = format!("{} {}", report::PROGRAM.0, report::PROGRAM.1);
         for (n, sheet) in texts.iter().enumerate() {
             let count = format!("sheet {} of {}", n + 1, texts.len());
-            for words in [&pack.job.number, &pack.job.title, "not signed", &version, &pack.digest, &count] {
+            for words in
+                [&pack.job.number, &pack.job.title, "not valid unless signed", &version, &pack.digest, &count]
+            {
                 assert!(
                     sheet.contains(&squeeze(words)),
                     "{} sheet {}: no {words:?} in {sheet}",
