@@ -1,15 +1,10 @@
-//! `[[links]]`, `[[assumptions]]`, `[[hold_points]]`, `[[photographs]]` and `[responsible]`.
+//! `[[links]]`, `[[assumptions]]`, `[[hold_points]]` and `[responsible]`.
 
-use super::entry::quoted;
 use super::ground::marks;
-use super::names::known;
 use super::reader::{Reader, Table};
 use super::words::LINKS;
-use crate::building::{Assumption, HoldPoint, Link, Photograph, Proof};
+use crate::building::{Assumption, HoldPoint, Link, Proof};
 use crate::error::Kind;
-
-/// Endings of image files that the pack can hold.
-const IMAGES: &[&str] = &[".jpg", ".jpeg", ".png"];
 
 /// Reads one link of the chain to the ground.
 pub fn link(t: &Table<'_>, names: &[&str]) -> Option<Link> {
@@ -68,45 +63,6 @@ pub fn hold_point(t: &Table<'_>, names: &[&str]) -> Option<HoldPoint> {
     let closed = t.may("closed").line();
     t.finish();
     Some(HoldPoint { text: text?, plain, of: of?, closed })
-}
-
-/// Reads one photograph; its path stays beside the job file.
-pub fn photograph(t: &Table<'_>, names: &[&str]) -> Option<Photograph> {
-    let file = t.need("file").line().filter(|path| beside(t, path));
-    let caption = t.need("caption").line();
-    let entry = t.may("mark");
-    let mark = entry
-        .line()
-        .filter(|mark| known(&entry, mark, "return, bearing, panel, floor edge or bracing wall", names));
-    t.finish();
-    Some(Photograph { file: file?, caption: caption?, mark })
-}
-
-fn beside(t: &Table<'_>, path: &str) -> bool {
-    let lower = path.to_lowercase();
-    let wrong = if path.contains('\\') {
-        Some(("has a backslash", "write / between folders"))
-    } else if path.starts_with('/') || path.contains(':') {
-        Some((
-            "does not begin beside the job file",
-            "put the photograph beside the job file and write photos/name.jpg",
-        ))
-    } else if path.split('/').any(|part| matches!(part, ".." | "." | "")) {
-        Some((
-            "leaves its folder or has an empty part",
-            "put the photograph beside the job file and write photos/name.jpg",
-        ))
-    } else if !IMAGES.iter().any(|ending| lower.ends_with(ending)) {
-        Some(("is not an image that the pack can hold", "save it as .jpg or .png"))
-    } else {
-        None
-    };
-    let Some((what, help)) = wrong else { return true };
-    t.fault(Kind::NotAllowed, format_args!("the path {} {what}", quoted(path)))
-        .at(t.place("file"), "path")
-        .allowed("a path beside the job file, with / between folders, to a .jpg, .jpeg or .png")
-        .help(help);
-    false
 }
 
 /// Reads `[responsible]`: a task and who has it, in the order given; `_` in a task counts as a blank.

@@ -28,6 +28,7 @@ mod materials;
 mod names;
 mod openings;
 mod panels;
+mod photographs;
 mod plan;
 mod reader;
 mod returns;
@@ -233,7 +234,7 @@ fn whole(root: &Table<'_>) -> Option<Building> {
     let hold_points =
         all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
     let photographs =
-        all(&root.may("photographs").tables("photograph", "file"), |t| closing::photograph(t, &marks));
+        all(&root.may("photographs").tables("photograph", "file"), |t| photographs::read(t, &marks));
     let responsible = match root.may("responsible").table("responsible") {
         Some(t) => closing::responsible(&t),
         None => Some(Vec::new()),
