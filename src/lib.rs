@@ -231,7 +231,7 @@ pub fn photographs(building: &Building, folder: &Path) -> Result<Vec<(String, Ve
             trouble: Trouble::Content(why.to_string()),
             help: "Give a JPEG or PNG that an image viewer opens, of 80 megapixels or less.".to_owned(),
         })?;
-        Ok((report::photograph_path(n), jpeg))
+        Ok((report::photographs::path(n), jpeg))
     };
     building.photographs.iter().enumerate().map(taken_in).collect()
 }

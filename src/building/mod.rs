@@ -31,7 +31,7 @@ pub use site::{
 };
 pub use things::{
     Arching, Assumption, Bearing, Before, BracingWall, Edge, Flange, Footing, FromAbove, Head, HoldPoint,
-    Link, Load, Padstone, Panel, PanelOpening, Photograph, Removed, Return, Span, Stability,
+    Link, Load, Padstone, Panel, PanelOpening, Photograph, Pointed, Removed, Return, Span, Stability,
 };
 pub use words::{
     Acts, Along, BaseJoint, CollapseClass, DiaphragmProof, Ends, FloorKind, Frame, Joists, PanelRoute, Path,

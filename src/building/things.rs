@@ -404,4 +404,15 @@ pub struct Photograph {
     pub caption: String,
     /// Mark it belongs to.
     pub mark: Option<String>,
+    /// What is pointed at in it.
+    pub marks: Vec<Pointed>,
+}
+
+/// A part that is seen at a point of a photograph.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Pointed {
+    /// Mark of the part.
+    pub of: String,
+    /// Place in the upright picture as parts of its width from the left and of its height from the top, 0 to 1.
+    pub at: (f64, f64),
 }

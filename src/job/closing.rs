@@ -1,16 +1,10 @@
-//! `[[links]]`, `[[assumptions]]`, `[[hold_points]]`, `[[photographs]]` and `[responsible]`.
+//! `[[links]]`, `[[assumptions]]`, `[[hold_points]]` and `[responsible]`.
 
-use super::entry::quoted;
 use super::ground::marks;
-use super::limits::one_of;
-use super::names::known;
 use super::reader::{Reader, Table};
 use super::words::LINKS;
-use crate::building::{Assumption, HoldPoint, Link, Photograph, Proof};
+use crate::building::{Assumption, HoldPoint, Link, Proof};
 use crate::error::Kind;
-
-/// Endings of image files that the pack can hold.
-pub(super) const IMAGES: &[&str] = &[".jpg", ".jpeg", ".png"];
 
 /// Reads one link of the chain to the ground.
 pub fn link(t: &Table<'_>, names: &[&str]) -> Option<Link> {
@@ -69,59 +63,6 @@ pub fn hold_point(t: &Table<'_>, names: &[&str]) -> Option<HoldPoint> {
     let closed = t.may("closed").line();
     t.finish();
     Some(HoldPoint { text: text?, plain, of: of?, closed })
-}
-
-/// Reads one photograph; its path stays beside the job file.
-pub fn photograph(t: &Table<'_>, names: &[&str]) -> Option<Photograph> {
-    let file = t.need("file").line().filter(|path| beside(t, path));
-    let caption = t.need("caption").line();
-    let entry = t.may("mark");
-    let mark = entry
-        .line()
-        .filter(|mark| known(&entry, mark, "return, bearing, panel, floor edge or bracing wall", names));
-    t.finish();
-    Some(Photograph { file: file?, caption: caption?, mark })
-}
-
-fn beside(t: &Table<'_>, path: &str) -> bool {
-    inside(t, "file", path, "photograph") && ends(t, "file", path, IMAGES)
-}
-
-/// Whether the path under `key` leads to a thing beside the job or practice file, or below; records what is wrong with it.
-pub fn inside(t: &Table<'_>, key: &'static str, path: &str, thing: &str) -> bool {
-    let (what, help) = if path.contains('\\') {
-        ("has a backslash", "write / between folders".to_owned())
-    } else if path.starts_with('/') || path.contains(':') {
-        ("does not begin beside this file", format!("put the {thing} beside this file and write folder/name"))
-    } else if path.split('/').any(|part| matches!(part, ".." | "." | "")) {
-        (
-            "leaves its folder or has an empty part",
-            format!("put the {thing} beside this file and write folder/name"),
-        )
-    } else {
-        return true;
-    };
-    t.fault(Kind::NotAllowed, format_args!("the path {} {what}", quoted(path)))
-        .at(t.place(key), "path")
-        .allowed("a path beside this file, with / between folders")
-        .help(help);
-    false
-}
-
-/// Whether the path under `key` has one of the endings; records where it does not.
-pub fn ends(t: &Table<'_>, key: &'static str, path: &str, endings: &[&str]) -> bool {
-    let lower = path.to_lowercase();
-    if endings.iter().any(|ending| lower.ends_with(ending)) {
-        return true;
-    }
-    t.fault(
-        Kind::NotAllowed,
-        format_args!("the path {} is not an image that the pack can hold", quoted(path)),
-    )
-    .at(t.place(key), "path")
-    .allowed(format!("a file that ends in {}", one_of(endings)))
-    .help(format!("save it as {}", one_of(endings)));
-    false
 }
 
 /// Reads `[responsible]`: a task and who has it, in the order given; `_` in a task counts as a blank.

@@ -50,7 +50,7 @@ impl Entry<'_> {
             self.fault(Kind::WrongType, format_args!("`{}` has {} items", self.key, items.len()))
                 .at(self.place(), "two belong here")
                 .allowed(&wanted)
-                .help(format!("write {} = [\"0 m\", \"6.4 m\"]", self.key));
+                .help(format!("write {} = [\"0 {unit}\", \"6.4 {unit}\"]", self.key, unit = limits.unit));
             return None;
         };
         let (a, b) = (a.quantity(limits), b.quantity(limits));

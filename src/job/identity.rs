@@ -1,7 +1,7 @@
 //! `[job]`, `[signatures]` and `[[revisions]]`: who, where, what for.
 
-use super::closing::inside;
 use super::date::in_words;
+use super::paths::inside;
 use super::reader::Table;
 use crate::building::{Identity, Person, Revision, Signatures, Status};
 use crate::error::Kind;

@@ -30,6 +30,8 @@ mod materials;
 mod names;
 mod openings;
 mod panels;
+mod paths;
+mod photographs;
 mod plan;
 pub mod practice;
 mod reader;
@@ -255,7 +257,7 @@ fn whole(root: &Table<'_>, practice: Option<&Practice>) -> Option<Building> {
     let hold_points =
         all(&root.may("hold_points").tables("hold point", ""), |t| closing::hold_point(t, &marks));
     let photographs =
-        all(&root.may("photographs").tables("photograph", "file"), |t| closing::photograph(t, &marks));
+        all(&root.may("photographs").tables("photograph", "file"), |t| photographs::read(t, &marks));
     let responsible = match root.may("responsible").table("responsible") {
         Some(t) => closing::responsible(&t),
         None => Some(Vec::new()),

@@ -4,7 +4,7 @@ use toml::de::DeTable;
 
 use super::limits::Limits;
 use super::reader::{Reader, Table};
-use super::{all, basis, bearings, closing, syntax};
+use super::{all, basis, bearings, paths, syntax};
 use crate::building::{Accent, Basis, Cause, Logo, Practice};
 use crate::error::{Kind, Report};
 use crate::files::digest;
@@ -148,7 +148,7 @@ fn style(t: &Table<'_>) -> Option<Style> {
         }
     }
     let face = t.may("text_face").line();
-    let fonts = t.may("fonts").line().filter(|path| closing::inside(t, "fonts", path, "folder"));
+    let fonts = t.may("fonts").line().filter(|path| paths::inside(t, "fonts", path, "folder"));
     for (one, other) in [("text_face", "fonts"), ("fonts", "text_face")] {
         if t.has(one) && !t.has(other) {
             t.fault(Kind::Missing, format_args!("there is `{one}`, but no `{other}`"))
@@ -157,7 +157,7 @@ fn style(t: &Table<'_>) -> Option<Style> {
                 .help(format!("add `{other}`"));
         }
     }
-    let templates = t.may("templates").line().filter(|path| closing::inside(t, "templates", path, "folder"));
+    let templates = t.may("templates").line().filter(|path| paths::inside(t, "templates", path, "folder"));
     t.finish();
     Some(Style {
         accent: accent.map_or(Some(None), |a| a.map(Some))?,
@@ -198,7 +198,7 @@ fn accent(t: &Table<'_>) -> Option<Accent> {
 
 fn logo(t: &Table<'_>) -> Option<Logo> {
     let file = t.need("logo").line().filter(|path| {
-        closing::inside(t, "logo", path, "file") && closing::ends(t, "logo", path, &[".svg", ".png"])
+        paths::inside(t, "logo", path, "file") && paths::ends(t, "logo", path, &[".svg", ".png"])
     });
     let words = t.need("logo_words").line();
     let height: Option<Length> =

@@ -336,6 +336,8 @@ pub struct Section {
     pub new_page: bool,
     /// Whether its working changed since the issue that [`Changes`] names.
     pub changed: bool,
+    /// Numbers of the photographs on which its part is seen.
+    pub seen: Vec<usize>,
 }
 
 /// A photograph.
@@ -343,10 +345,29 @@ pub struct Section {
 pub struct Photograph {
     /// "/photo/0.jpg": the number only, so that paths do not vary between packs.
     pub path: String,
-    /// What it shows; also read aloud.
+    /// What it shows.
     pub caption: String,
     /// The part that it shows, or empty.
     pub mark: String,
+    /// What its marks show, in words; empty where it has none.
+    pub words: String,
+    /// What is read aloud: the caption, and what its marks show.
+    pub alt: String,
+    /// What is pointed at in it.
+    pub marks: Vec<Pointed>,
+}
+
+/// A part pointed at in a photograph.
+#[derive(Debug, Clone, Serialize)]
+pub struct Pointed {
+    /// Its mark.
+    pub of: String,
+    /// From the left, as a part of the width.
+    pub x: f64,
+    /// From the top, as a part of the height.
+    pub y: f64,
+    /// The id of the section of that part, or empty.
+    pub sheet: String,
 }
 
 /// A symbol explained.

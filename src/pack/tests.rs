@@ -86,8 +86,8 @@ fn a_sign_without_a_glyph_is_refused() {
 #[test]
 fn a_photograph_that_is_not_there_is_named() {
     let mut data: serde_json::Value = serde_json::from_str(SAMPLE).unwrap();
-    data["photographs"] =
-        serde_json::json!([{"path": "/photo/0.jpg", "caption": "R1 from the garden", "mark": "R1"}]);
+    data["photographs"] = serde_json::json!([{"path": "/photo/0.jpg", "caption": "R1 from the garden", "mark": "R1", "words": "",
+            "alt": "R1 from the garden", "marks": []}]);
     let error = typeset(&data, &[], "sample", None).unwrap_err();
     let PackError::Template(lines) = &error else { panic!("{error}") };
     assert!(lines.iter().any(|line| line.contains("photo/0.jpg")), "{error}");

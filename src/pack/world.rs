@@ -36,6 +36,7 @@ pub(super) const TEMPLATES: &[(&str, &str)] = &[
     ("/templates/client.typ", include_str!("../../templates/client.typ")),
     ("/templates/pack.typ", include_str!("../../templates/pack.typ")),
     ("/templates/parts/back.typ", include_str!("../../templates/parts/back.typ")),
+    ("/templates/parts/photographs.typ", include_str!("../../templates/parts/photographs.typ")),
     ("/templates/parts/source.typ", include_str!("../../templates/parts/source.typ")),
     ("/templates/parts/columns.typ", include_str!("../../templates/parts/columns.typ")),
     ("/templates/parts/blocks.typ", include_str!("../../templates/parts/blocks.typ")),

@@ -13,6 +13,7 @@ pub mod lines;
 mod listing;
 pub mod machine;
 pub mod notation;
+pub mod photographs;
 pub mod plain;
 pub mod record;
 
@@ -104,16 +105,7 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
         chain: Vec::new(),
         sections: results.sections.iter().map(|s| section(b, s, results)).collect(),
         cautions: front::cautions(b),
-        photographs: b
-            .photographs
-            .iter()
-            .enumerate()
-            .map(|(n, p)| data::Photograph {
-                path: photograph_path(n),
-                caption: p.caption.clone(),
-                mark: p.mark.clone().unwrap_or_default(),
-            })
-            .collect(),
+        photographs: photographs::of_job(b, results),
         inputs: text.to_owned(),
         practice: b.practice.as_ref().map(|p| data::Practice {
             text: p.text.clone(),
@@ -124,11 +116,6 @@ pub fn pack(b: &Building, results: &Results, text: &str, digest: &str) -> data::
         listing: listing::of(text),
         notation: notation::used(&results.sections),
     }
-}
-
-/// The name by which the pack's data calls photograph `n`; every photograph arrives as JPEG.
-pub fn photograph_path(n: usize) -> String {
-    format!("/photo/{n}.jpg")
 }
 
 /// Hexadecimal digits in groups of four.
@@ -161,6 +148,7 @@ fn section(b: &Building, s: &Section, results: &Results) -> data::Section {
         // Returns and panels open a sheet; what belongs to them follows where there is room.
         new_page: b.returns.iter().any(|r| r.mark == s.mark) || b.panels.iter().any(|p| p.mark == s.mark),
         changed: false,
+        seen: photographs::seen(b, s),
     }
 }
 

@@ -2,13 +2,13 @@
 
 use serde_json::{Value, json};
 
-use super::super::closing::IMAGES;
 use super::super::floors::{DEPTH, FLOW, SPACING, SPAN, STRENGTH};
 use super::super::ground::STRIP;
 use super::super::limits::one_of;
+use super::super::photographs::{IMAGES, WITHIN};
 use super::super::returns::MARK;
 use super::super::words::LINKS;
-use super::form::{Form, cause, choice, line, list, mark, named, quantity, text};
+use super::form::{Form, cause, choice, line, list, mark, named, pair, quantity, tables, text};
 use crate::building::{CollapseClass, DiaphragmProof, Joists, Proof, StrapsKnown};
 
 pub fn floor_edge() -> Value {
@@ -122,6 +122,15 @@ pub fn photograph() -> Value {
         .need("file", file)
         .need("caption", line("What it shows.", "Nib R1 from the kitchen"))
         .may("mark", line("A mark of this file that it is about.", "R1"))
+        .may("marks", tables(pointed(), false, "What is pointed at in the picture."))
+        .done()
+}
+
+fn pointed() -> Value {
+    let at = "Of the width from the left, and of the height from the top, of the upright picture.";
+    Form::new("One mark in the picture.")
+        .need("of", line("A mark of this file: the part that is seen there.", "R1"))
+        .need("at", pair(&WITHIN, at, ["32 %", "60 %"]))
         .done()
 }
 

@@ -54,6 +54,21 @@ fn nothing_given_for_a_thing_means_its_usual_value() {
 }
 
 #[test]
+fn a_photograph_points_at_parts_as_inline_tables_or_under_heads_of_their_own() {
+    let inline = "marks = [{ of = \"R1\", at = [\"32 %\", \"60 %\"] }, { of = \"B1-R2\", at = [\"100 %\", \"0 %\"] }]\n";
+    let heads = "[[photographs.marks]]\nof = \"R1\"\nat = [\"32 %\", \"60 %\"]\n\n\
+                 [[photographs.marks]]\nof = \"B1-R2\"\nat = [\"100 %\", \"0 %\"]\n";
+    for marks in [inline, heads] {
+        let text = format!("{GOOD}\n[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib\"\n{marks}");
+        let building = read("marks.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));
+        let found: Vec<_> = building.photographs[0].marks.iter().map(|m| (m.of.as_str(), m.at)).collect();
+        assert_eq!(found, [("R1", (0.32, 0.6)), ("B1-R2", (1.0, 0.0))]);
+    }
+    let plain = format!("{GOOD}\n[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib\"\n");
+    assert!(read("plain.toml", &plain).expect("a valid job").photographs[0].marks.is_empty());
+}
+
+#[test]
 fn a_chase_comes_off_the_leaf() {
     let text = GOOD.replacen("thickness = \"102.5 mm\"", "thickness = \"102.5 mm\"\nchase = \"20 mm\"", 1);
     let building = read("chase.toml", &text).unwrap_or_else(|r| panic!("{}", r.render(false)));

@@ -8,6 +8,7 @@ mod footings;
 mod form;
 mod names;
 mod openings;
+mod photographs;
 
 /// A slip: the good job with `from` replaced by `to` once.
 pub struct Slip {
@@ -42,6 +43,7 @@ pub fn all() -> impl Iterator<Item = &'static Slip> {
         bearings::SLIPS,
         footings::SLIPS,
         openings::SLIPS,
+        photographs::SLIPS,
     ]
     .into_iter()
     .flatten()
