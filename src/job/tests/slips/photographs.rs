@@ -9,7 +9,10 @@ pub const SLIPS: &[Slip] = &[
         "[[photographs]]\nfile = \"nib.jpg\"\ncaption = \"Nib\"\nmarks = [{ of = \"R7\", at = [\"32 %\", \"60 %\"] }]\n\n\
          [[assumptions]]",
         "\"R7\"",
-        &["mark R7: there is no return, bearing, panel, floor edge or bracing wall \"R7\"", "write \"R1\""],
+        &[
+            "mark R7: there is no return, bearing, panel, floor edge or bracing wall \"R7\"",
+            "name one that is there",
+        ],
     ),
     slip(
         "pointed outside the picture",
