@@ -4,6 +4,7 @@ use super::build::{Change, Inputs, models};
 use super::matrix::Matrix;
 use super::remedy;
 use super::run::prepare;
+use crate::checks::margins::reach::Step;
 use crate::quantity::{Force, Length, Stress};
 use crate::solve::root;
 use crate::trace::Sheet;
@@ -43,12 +44,14 @@ pub fn most_wind(i: &Inputs<'_>) -> Option<(Stress, bool)> {
     remedy::wind_taken(i).map(|q| (q, q.base() + 1e-5 >= end))
 }
 
-/// The dead load that may be missing at mid-length, to 0.1 kN, rounded down, and all that the job gives at its head.
+/// The dead load that may be missing at mid-length, to 0.1 kN or three digits, rounded down, and all that the job gives at its head.
 pub fn dead_spare(i: &Inputs<'_>) -> Option<(Force, Force)> {
     let all: Force = i.ret.loads.iter().fold(Force::ZERO, |sum, x| sum + x.dead);
     let at = |n: f64| remedy::passes(i, Change { dead: Force::new(-n), ..Change::NONE });
     let spare = root::greatest(at, 0.0, all.base(), 160, 10.0)?;
-    Some((Force::new((spare / 100.0).floor() * 100.0), all))
+    // Printing rounds to three digits: what is rounded down to them first cannot be printed larger than it is.
+    let step = Step::Digits.at(spare).max(100.0);
+    Some((Force::new((spare / step).floor() * step), all))
 }
 
 /// Use against length and against pressure, for a plot.
