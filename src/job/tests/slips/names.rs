@@ -99,14 +99,14 @@ pub const SLIPS: &[Slip] = &[
         "[[assumptions]]",
         "[[photographs]]\nfile = \"../nib.jpg\"\ncaption = \"Nib\"\n\n[[assumptions]]",
         "\"../nib.jpg\"",
-        &["the path \"../nib.jpg\" leaves its folder", "beside the job file"],
+        &["the path \"../nib.jpg\" leaves its folder", "beside this file"],
     ),
     slip(
         "photograph by absolute path",
         "[[assumptions]]",
         "[[photographs]]\nfile = \"/home/nib.jpg\"\ncaption = \"Nib\"\n\n[[assumptions]]",
         "\"/home/nib.jpg\"",
-        &["does not begin beside the job file"],
+        &["does not begin beside this file"],
     ),
     slip(
         "photograph on a drive",
