@@ -348,3 +348,29 @@ fn templates(folder: &str, files: Vec<(String, Vec<u8>)>) -> Result<Vec<(String,
     }
     Ok(files)
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// At the size of a wider face as many letters of the sample stand in a line, to a thousandth; its figures are 600
+    /// of 1000 units wide (its `hmtx` table).
+    #[test]
+    fn a_wider_face_is_set_smaller() {
+        let files = ["Regular", "Bold"].map(|weight| {
+            let path = format!("jobs/practice/fonts/IBMPlexSans-{weight}.ttf");
+            (path.clone(), std::fs::read(path).expect("a face"))
+        });
+        let wanted =
+            Wanted { face: Some(("IBM Plex Sans".to_owned(), "fonts".to_owned())), ..Wanted::default() };
+        let look = Look::new(&wanted, Assets { fonts: files.into(), ..Assets::default() }).expect("a look");
+        let ours = world::own_faces().iter().find(|f| f.info().family == TEXT_FACE).expect("our face");
+        let theirs = run(&look.fonts[0], SAMPLE) * look.style.scale;
+        assert!((theirs / run(ours, SAMPLE) - 1.0).abs() < 1e-3, "{theirs}");
+        assert!(look.style.scale < 1.0);
+        assert_eq!(look.style.digit, 0.6);
+        // Ours are 495 wide, reckoned as 500: a column is rather too wide than too narrow.
+        let own = run(ours, FIGURES) / 10.0;
+        assert!(own <= Style::default().digit && own > Style::default().digit - 0.01, "{own}");
+    }
+}

@@ -6,11 +6,15 @@ use typst_layout::PagedDocument;
 use super::world::Kind;
 use super::{PackError, audit};
 
-/// Words that must be found: on every page, or anywhere.
+/// Words that must be found: on every page, anywhere, or one shortly behind the other.
 pub(super) enum Must {
     EveryPage(String),
     Somewhere(String),
+    Behind(String, String),
 }
+
+/// Bytes between a check and its verdict at most: demand, resistance and ratio stand between.
+const NEAR: usize = 80;
 
 /// What the data demands. Whole sentences, so that a page may end between two.
 pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
@@ -27,6 +31,7 @@ pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
             each("/holds", "/text"),
             each("/assumptions", "/text"),
             each("/schedule", "/check"),
+            each("/schedule", "/ratio"),
             each("/cautions", ""),
         ]
         .concat(),
@@ -45,7 +50,12 @@ pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
     };
     let sentences =
         words.iter().flat_map(|w| w.split_inclusive(". ")).map(|s| Must::Somewhere(s.trim().to_owned()));
-    std::iter::once(Must::EveryPage(text("/unsigned_text"))).chain(sentences).collect()
+    // What does not pass stands with its own words.
+    let rows = each("/schedule", "/check").into_iter().zip(each("/schedule", "/verdict"));
+    let bad = rows
+        .filter(|(_, verdict)| verdict != "adequate")
+        .map(|(check, verdict)| Must::Behind(check, verdict));
+    std::iter::once(Must::EveryPage(text("/unsigned_text"))).chain(sentences).chain(bad).collect()
 }
 
 /// Holds the pages against what must stand on them.
@@ -60,6 +70,13 @@ pub(super) fn all(must: &[Must], document: &PagedDocument) -> Result<(), PackErr
     let whole = pages.concat();
     let lacking = |one: &Must| match one {
         Must::Somewhere(words) => (!whole.contains(&letters(words))).then(|| words.clone()),
+        Must::Behind(words, then) => {
+            let (first, second) = (letters(words), letters(then));
+            let follows = |(at, _): (usize, &str)| {
+                whole[at + first.len()..].find(&second).is_some_and(|far| far < NEAR)
+            };
+            (!whole.match_indices(&first).any(follows)).then(|| format!("{words}: {then}"))
+        }
         Must::EveryPage(words) => {
             let page = pages.iter().position(|page| !page.contains(&letters(words)))?;
             Some(format!("{words} (page {})", page + 1))

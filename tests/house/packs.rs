@@ -143,6 +143,12 @@ fn no_template_may_leave_out_what_every_pack_must_say() {
     assert!(without("pack.typ", "#outcome(").contains("leave out"));
     let unsigned = without("parts/furniture.typ", "firm(unsigned)");
     assert!(unsigned.contains("not valid unless signed (page 1)"), "{unsigned}");
+    // A failure that is printed as something else is a failure that is left out.
+    let scale = ours("parts/scale.typ")
+        + "\n#let tone(verdict) = body => if verdict == body { [fine] } else { body }\n";
+    let nib = jobs::demos().into_iter().find(|(name, _)| name == "short-nib").expect("a job that fails").1;
+    let softened = made(&nib, &with_template("parts/scale.typ", scale)).expect_err("a softened failure");
+    assert!(softened.contains(": not adequate"), "{softened}");
     // The same templates, whole, are taken.
     assert!(made(jobs::START, &with_template("pack.typ", ours("pack.typ"))).is_ok());
 }

@@ -42,7 +42,7 @@ pub(super) fn materials(
     let print = |factor: f64| printed(&now, factor);
     let (end, steps, precision) = tried;
     if let Some(factor) = root::greatest(at, 1.0, end, steps, precision) {
-        let more = if factor >= end { " and more" } else { "" };
+        let more = if factor >= end { ", more not tried" } else { "" };
         out.push(row(
             "material factors of compression, flexure, shear",
             print(1.0),

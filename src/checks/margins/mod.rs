@@ -111,7 +111,7 @@ fn return_rows(job: &Job<'_>, r: &Return) -> Vec<Row> {
     let force = |n: Force| show("G", n.dynamic()).to_string();
     let mut out = Vec::new();
     if let Some((q, end)) = of_return::most_wind(&i) {
-        let more = if end { " and more" } else { "" };
+        let more = if end { ", more not tried" } else { "" };
         out.push(row(
             "net overall pressure, characteristic",
             stress(i.wind.overall),
@@ -159,7 +159,7 @@ fn panel_rows(job: &Job<'_>, p: &Panel) -> Vec<Row> {
     }
     if let Some(l) = of_panel::longest(&m, &job.annex) {
         let end = l.base() >= (2.0 * m.after.length.base() / 10.0).floor() * 10.0;
-        let more = if end { " and more" } else { "" };
+        let more = if end { ", more not tried" } else { "" };
         out.push(row("length, added at its right end", mm(m.after.length), format!("up to {}{more}", mm(l))));
     }
     let given = m.leaves[m.loaded()].G_above;
