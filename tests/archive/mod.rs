@@ -1,5 +1,6 @@
 //! Packs made before: worked again, and held against each other.
 
+mod first_issue;
 mod revisions;
 
 use std::path::Path;

@@ -3,8 +3,10 @@
 use std::path::Path;
 
 use perpend::archive::compare::{Change, records};
+use perpend::archive::{Held, since};
+use perpend::pack::data;
 use perpend::report::record::{self, Record};
-use perpend::{Source, digest, draw, file_name, set};
+use perpend::{Source, digest, draw, file_name, report, set};
 
 use crate::jobs;
 use crate::pdf::reader::{Read, squeeze};
@@ -62,6 +64,33 @@ fn a_new_issue_lists_what_changed() {
     let (_, plain) =
         made(&second(&name).replacen(&format!("pack = \"{name}\"\n"), "", 1), dir.path()).expect("a pack");
     assert!(!text_of(&plain).contains("Changessince"), "nothing is listed without the earlier pack");
+}
+
+/// A bar stands beside what changed and beside nothing else: each row and each sheet of the later issue is held against
+/// the earlier one by what it prints.
+#[test]
+fn marks_stand_on_what_changed_alone() {
+    let (_dir, name) = issued();
+    let job = |text: &str| {
+        let (b, results) = draw("job.toml", text).expect("a valid job");
+        (report::pack(&b, &results, text, &digest(text)), record::of_job(&b, &results, &digest(text)), b)
+    };
+    let (before, was, _) = job(jobs::START);
+    let held = Held { job: jobs::START.to_owned(), practice: None, record: was };
+    for (text, changes) in [(second(&name), false), (lighter(&second(&name)), true)] {
+        let (mut after, now, b) = job(&text);
+        since::mark(&mut after, &b.revisions[0], &held, &now, "");
+        for (old, new) in before.schedule.iter().zip(&after.schedule) {
+            let printed = |r: &data::Scheduled| (r.demand.clone(), r.resistance.clone(), r.ratio.clone());
+            assert_eq!(new.changed, printed(old) != printed(new), "{} {}", new.mark, new.check);
+        }
+        let sheets: Vec<&str> = after.sections.iter().filter(|s| s.changed).map(|s| s.id.as_str()).collect();
+        assert_eq!(!sheets.is_empty(), changes, "{sheets:?}");
+        assert_eq!(sheets.iter().any(|id| id.contains("R1")), changes, "{sheets:?}");
+        // A lighter beam leaves bricks and panels as they were.
+        assert!(!sheets.iter().any(|id| id.contains("materials") || id.contains("P1")), "{sheets:?}");
+        assert_eq!(after.schedule.iter().any(|r| r.changed), changes);
+    }
 }
 
 #[test]
