@@ -70,9 +70,14 @@ pub fn records(was: &Record, now: &Record) -> Differences {
     Differences { results, sheets: sheets(&was.sheets, &now.sheets) }
 }
 
-/// Lines of a text that changed, in order. Of a run of lines put in place of another, each is held against the one at its
-/// place where both begin with the same word.
+/// Lines of a text that changed, in order, as `line 12`. Of a run of lines put in place of another, each is held against
+/// the one at its place where both begin with the same word.
 pub fn lines(was: &str, now: &str) -> Vec<Change> {
+    lines_named(was, now, |_, n| format!("line {}", n + 1))
+}
+
+/// The same; `name` names line `n`, counted from nought, of the later text or of the earlier one.
+pub(super) fn lines_named(was: &str, now: &str, name: impl Fn(bool, usize) -> String) -> Vec<Change> {
     let diff = TextDiff::from_lines(was, now);
     let line = |text: &str| text.trim_end().to_owned();
     let mut out = Vec::new();
@@ -81,14 +86,21 @@ pub fn lines(was: &str, now: &str) -> Vec<Change> {
         for n in 0..old.len().max(new.len()) {
             let was = diff.old_slices().get(old.start + n).filter(|_| n < old.len()).map(|s| line(s));
             let now = diff.new_slices().get(new.start + n).filter(|_| n < new.len()).map(|s| line(s));
-            let at = |n: usize| format!("line {}", n + 1);
             match (was, now) {
                 (Some(was), Some(now)) if alike(&was, &now) => {
-                    out.push(Change { what: at(new.start + n), was: Some(was), now: Some(now) });
+                    out.push(Change { what: name(true, new.start + n), was: Some(was), now: Some(now) });
                 }
                 (was, now) => {
-                    out.extend(was.map(|w| Change { what: at(old.start + n), was: Some(w), now: None }));
-                    out.extend(now.map(|w| Change { what: at(new.start + n), was: None, now: Some(w) }));
+                    out.extend(was.map(|w| Change {
+                        what: name(false, old.start + n),
+                        was: Some(w),
+                        now: None,
+                    }));
+                    out.extend(now.map(|w| Change {
+                        what: name(true, new.start + n),
+                        was: None,
+                        now: Some(w),
+                    }));
                 }
             }
         }

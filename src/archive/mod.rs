@@ -2,6 +2,7 @@
 //!
 //! * [`pdf`]: the files that travel inside a pack
 //! * [`compare`]: what changed between two records or two job files
+//! * [`entries`]: lines of a job file named by their tables
 //! * [`since`]: the same on the sheets of a new issue
 //! * [`sign`]: packs signed with an engineer's own key, and the signatures of a pack
 //!
@@ -10,6 +11,7 @@
 //! is told by the digest at the foot of its sheets, and whether anybody changed the file by a signature.
 
 pub mod compare;
+pub mod entries;
 pub mod pdf;
 pub mod sign;
 pub mod since;

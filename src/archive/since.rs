@@ -2,6 +2,7 @@
 
 use super::Held;
 use super::compare::{self, Change};
+use super::entries;
 use crate::building::Revision;
 use crate::job::date_in_words;
 use crate::pack::data;
@@ -31,8 +32,8 @@ pub fn mark(pack: &mut data::Pack, of: &Revision, was: &Held, now: &Record, prac
     pack.changes = Some(data::Changes {
         since: of.letter.clone(),
         date: date_in_words(&of.date),
-        inputs: all(&compare::lines(&was.job, &pack.inputs)),
-        practice: all(&compare::lines(was.practice.as_deref().unwrap_or_default(), practice)),
+        inputs: all(&entries::changed(&was.job, &pack.inputs)),
+        practice: all(&entries::practice(was.practice.as_deref().unwrap_or_default(), practice)),
         results: all(&changed.results),
         sheets: changed.sheets.iter().map(|s| (s.id.clone(), s.title.clone(), s.changes.len())).collect(),
     });

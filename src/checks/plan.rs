@@ -3,6 +3,7 @@
 use super::{Job, Section, named, place, spans};
 use crate::building::{Along, At, Building, PlanOpening, PlanWall, Return, stands_in};
 use crate::quantity::Length;
+use crate::sketch::text::list;
 use crate::sketch::{
     self, Drawing, Fate, Frame, Gap, KeyPlan, PlanMark, PlanWind, When, key_plan, key_plans,
 };
@@ -57,14 +58,16 @@ pub fn what_stays(b: &Building) -> Option<Drawing> {
         winds: Vec::new(),
     };
     let named: Vec<&str> = view.marks.iter().map(|m| m.mark.as_str()).collect();
-    let stay = match named.as_slice() {
-        [] => String::new(),
-        [one] => format!("{one} must stay. "),
-        [first @ .., last] => format!("{} and {last} must stay. ", first.join(", ")),
-    };
+    let stay = if named.is_empty() { String::new() } else { format!("{} must stay. ", list(&named)) };
     let caption = format!("The house seen from above. {stay}Broken lines show the {}.", b.removed.wall);
-    let drawing = key_plan(&view, CLIENT);
-    Some(Drawing { alt: format!("{caption} {}", drawing.alt), caption, ..drawing })
+    // Read out before the caption, so it does not say the same again.
+    let marked = match named.as_slice() {
+        [] => String::new(),
+        [_] => format!(" {} is marked on it.", list(&named)),
+        _ => format!(" {} are marked on it.", list(&named)),
+    };
+    let alt = format!("A plan of the walls.{marked} The {} is drawn with broken lines.", b.removed.wall);
+    Some(Drawing { alt, caption, ..key_plan(&view, CLIENT) })
 }
 
 /// One of the two plans. Returns, beams and panels as they are afterwards have their marks on the plan after.

@@ -7,7 +7,7 @@ use super::flags::Whose;
 use super::{ADEQUATE, FAILED, NOT_PLAINLY_ADEQUATE, complain, internal};
 use crate::archive::compare::{self, Altered, Change, Differences};
 use crate::archive::sign::{Signature, signatures};
-use crate::archive::{Held, Rechecked, held};
+use crate::archive::{Held, Rechecked, entries, held};
 use crate::error::{Error, Trouble};
 use crate::report::record::{self, Record};
 use crate::{digest, draw_for, files, many, recheck};
@@ -111,8 +111,8 @@ pub fn compare_two((old, new): (&Path, &Path), working: bool, whose: &Whose) -> 
     };
     many::in_order(&paths, |file: &PathBuf| side(file, whose), take, || {});
     let [was, now] = sides.as_slice() else { return FAILED };
-    let inputs = compare::lines(&was.job, &now.job);
-    let house = compare::lines(&was.practice, &now.practice);
+    let inputs = entries::changed(&was.job, &now.job);
+    let house = entries::practice(&was.practice, &now.practice);
     let changed = compare::records(&was.record, &now.record);
     if inputs.is_empty() && house.is_empty() && changed.is_empty() {
         print(&["alike: the same job, the same results".to_owned()]);
@@ -125,7 +125,7 @@ pub fn compare_two((old, new): (&Path, &Path), working: bool, whose: &Whose) -> 
     });
     out.extend(inputs.iter().flat_map(one));
     if !house.is_empty() {
-        out.push(format!("Practice file: {} {}", house.len(), lines_word(house.len())));
+        out.push("Practice file".to_owned());
         out.extend(house.iter().flat_map(one));
     }
     out.push(if changed.is_empty() { "Results: the same" } else { "Results" }.to_owned());
@@ -167,7 +167,12 @@ fn differences(all: &Differences, working: bool) -> Vec<String> {
 
 fn one(c: &Change) -> Vec<String> {
     let side = |name: &str, text: &Option<String>| {
-        format!("      {name} {}", text.as_deref().map_or("not there", str::trim_start))
+        let text = match text.as_deref().map(str::trim_start) {
+            None => "not there",
+            Some("") => "an empty line",
+            Some(text) => text,
+        };
+        format!("      {name} {text}")
     };
     vec![format!("    {}", c.what), side("was", &c.was), side("now", &c.now)]
 }

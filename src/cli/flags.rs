@@ -32,7 +32,7 @@ A pack is worth nothing unsigned: read it, check it, sign it.";
 const START_EXAMPLES: &str = "\
 Examples:
   perpend start rear-opening.toml      every entry, each with a remark
-  perpend start --plan kitchen.toml    walls, floors and beams as a plan; loads and spans found on it
+  perpend start --plan kitchen.toml    walls, floors and beams as a plan; it finds the rest
   perpend start --practice practice.toml    the house style, beside the jobs that it is for";
 
 const CHECK_EXAMPLES: &str = "\
@@ -43,11 +43,12 @@ Examples:
 const SHEET_EXAMPLES: &str = "\
 Examples:
   perpend sheet rear-opening.toml           the pack beside the job file
-  perpend sheet --into packs jobs/*.toml    all packs in one folder; a job that cannot be used holds up no other
+  perpend sheet --into packs jobs/*.toml    all packs in one folder; a faulty job holds up no other
   perpend sheet --practice style.toml a.toml    in the house style of that practice file
 
-A draft that is there already is replaced as soon as the new one is whole. A pack that was issued (its status is
-neither preliminary nor for comment) is never replaced by one of a changed job: give that the next revision.";
+A draft that is there already is replaced as soon as the new one is whole. A pack that was issued
+(its status is neither preliminary nor for comment) is never replaced by one of a changed job: give
+that the next revision.";
 
 const WATCH_EXAMPLES: &str = "\
 Example:
@@ -64,18 +65,19 @@ const SCHEMA_EXAMPLES: &str = "\
 Example:
   perpend schema > perpend-job.schema.json
 
-An editor that knows TOML schemas takes it from the first line of a job, '#:schema ./perpend-job.schema.json', or from
-its settings. It sees single entries: contradictions, sums, references and the limits of quantities are seen by `check`.";
+An editor that knows TOML schemas takes it from the first line of a job,
+'#:schema ./perpend-job.schema.json', or from its settings. It sees single entries: contradictions,
+sums, references and the limits of quantities are seen by `check`.";
 
 const RECHECK_EXAMPLES: &str = "\
 Examples:
   perpend recheck '2419 Calculations (A).pdf'
   perpend recheck --working packs/*.pdf
 
-A pack carries its job file and all that it prints as data; the job is worked again from there. What stands on paper
-is the same while the digest at the foot of its sheets is the one that this command prints. Of each digital signature it
-says whether the bytes are those that were signed, with the key of its certificate; trust in a certificate is for your
-PDF program to tell.
+A pack carries its job file and all that it prints as data; the job is worked again from there. What
+stands on paper is the same while the digest at the foot of its sheets is the one that this command
+prints. Of each digital signature it says whether the bytes are those that were signed, with the key
+of its certificate; trust in a certificate is for your PDF program to tell.
 
 Exit codes: 0 everything stands; 1 something does not; 2 a file is no pack, or cannot be worked.";
 
@@ -86,10 +88,10 @@ Examples:
   perpend sign '2419 Calculations (A) signed.pdf' --key varley.p12 --as checked
 
 Writes a new file beside the pack, '2419 Calculations (A) signed.pdf'. The pack stays as it is, and
-is the beginning of the new file byte for byte. A passphrase is asked for on the terminal, or read as
-one line from standard input where that is none. Keys are RSA of 2048 bits or more, P-256 or P-384.
-The time of signing is that of this computer's clock, and nobody vouches for it. Whether a certificate
-is trusted is for the reader's PDF program to say.";
+is the beginning of the new file byte for byte. A passphrase is asked for on the terminal, or read
+as one line from standard input where that is none. Keys are RSA of 2048 bits or more, P-256 or
+P-384. The time of signing is that of this computer's clock, and nobody vouches for it. Whether a
+certificate is trusted is for the reader's PDF program to say.";
 
 const COMPARE_EXAMPLES: &str = "\
 Examples:

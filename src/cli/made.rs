@@ -172,6 +172,11 @@ fn hard(words: &str, why: &plain::Hard) -> String {
                 "note: a sentence of the summary has the sign {sign}, which the client may not know: \"{words}\""
             )
         }
+        plain::Hard::Unit(unit) => {
+            format!(
+                "note: a sentence of the summary has the unit {unit}, which the client may not know: \"{words}\""
+            )
+        }
     }
 }
 

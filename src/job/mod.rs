@@ -40,6 +40,7 @@ mod schema;
 mod sectors;
 pub mod start;
 mod syntax;
+pub mod tables;
 mod wind;
 mod words;
 

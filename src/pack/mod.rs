@@ -76,6 +76,8 @@ pub enum PackError {
     Export(Vec<String>),
     /// Templates of a practice leave out what every pack must say.
     Unsaid(Vec<String>),
+    /// A template moves what it asks the place of, so that the numbers of sheets printed in the pack may be wrong.
+    Unsettled,
 }
 
 impl fmt::Display for PackError {
@@ -85,6 +87,12 @@ impl fmt::Display for PackError {
             Self::Template(lines) => ("the pack cannot be set", lines.as_slice()),
             Self::Export(lines) => ("the PDF cannot be written", lines.as_slice()),
             Self::Unsaid(lines) => ("the templates leave out what every pack must say", lines.as_slice()),
+            Self::Unsettled => {
+                return f.write_str(
+                    "the sheets do not come to rest: a template moves what it asks the place of, and sheet numbers \
+                     printed elsewhere would be wrong",
+                );
+            }
         };
         write!(f, "{what}: {}", lines.join("; "))
     }
@@ -99,8 +107,8 @@ impl std::error::Error for PackError {}
 /// give the digest of the job file, so that the same job gives the same bytes.
 ///
 /// # Errors
-/// [`PackError`] where the data does not serialise, a template stops, a sign has no glyph, or templates of the practice
-/// leave out what must be said.
+/// [`PackError`] where the data does not serialise, a template stops, a sign has no glyph, sheets do not come to rest,
+/// or templates of the practice leave out what must be said.
 pub fn typeset(
     data: impl Serialize,
     files: &[(String, Vec<u8>)],

@@ -12,10 +12,16 @@ use super::look::Look;
 use super::world::{Kind, World};
 use super::{PackError, Times, Typeset, audit, said};
 
+/// How the typesetter begins its word that places were still moving when it gave up.
+const UNSETTLED: &str = "document did not converge";
+
 /// The sheets of a pack laid out, with the typesetter's warnings.
 pub(super) fn compile(world: &World) -> Result<(PagedDocument, Vec<String>), PackError> {
     let Warned { output, warnings } = typst::compile::<PagedDocument>(world);
     let document = output.map_err(|errors| PackError::Template(lines(world, &errors)))?;
+    if warnings.iter().any(|w| w.message.starts_with(UNSETTLED)) {
+        return Err(PackError::Unsettled);
+    }
     Ok((document, lines(world, &warnings)))
 }
 

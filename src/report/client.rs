@@ -1,16 +1,15 @@
 //! The summary for the client: what was asked and found, what must stay, what happens next, in plain English.
 //!
-//! Its own sentences have 25 words or fewer and no symbols; [`plain::hard`](super::plain::hard) finds those that have
+//! Its own sentences have 25 words or fewer and no symbols; [`plain::hard`] finds those that have
 //! not, the engineer's words from the job file among them.
 
-use super::front::list;
-use super::{PROGRAM, grouped};
+use super::{PROGRAM, grouped, plain};
 use crate::building::{Building, Return};
 use crate::checks::outcome::{About, Hold, Outcome};
 use crate::checks::{Results, Section, outcome, plan};
 use crate::job::date_in_words;
 use crate::pack::data::{self, Client, Part};
-use crate::sketch::text::capital;
+use crate::sketch::text::{capital, list};
 
 /// The summary of a job; `digest` is the SHA-256 of its file. Nothing in it softens what the pack finds.
 pub fn of_job(b: &Building, results: &Results, digest: &str) -> Client {
@@ -43,6 +42,11 @@ pub fn of_job(b: &Building, results: &Results, digest: &str) -> Client {
         ]
         .into_iter()
         .filter(|p: &Part| !p.lines.is_empty() || !p.steps.is_empty() || p.drawing.is_some())
+        .map(|p| Part {
+            lines: p.lines.iter().map(|l| plain::spelled(l)).collect(),
+            steps: p.steps.iter().map(|s| plain::spelled(s)).collect(),
+            ..p
+        })
         .collect(),
     }
 }
@@ -145,7 +149,7 @@ fn stays(b: &Building, results: &Results) -> Vec<String> {
         return vec!["Every wall other than the one named above must stay as it is.".to_owned()];
     }
     let mut out = vec![
-        "The pieces of wall named here must stay at their full height. Nobody may cut, chase or drill them."
+        "The pieces of wall named here must stay at their full height. Nobody may cut into them, drill them or make grooves in them."
             .to_owned(),
     ];
     let failing =
@@ -186,7 +190,7 @@ fn points(b: &Building, results: &Results) -> Vec<String> {
 /// A hold point for somebody who has the work done.
 fn plainly(b: &Building, h: &Hold) -> String {
     let of: Vec<String> = h.of.iter().filter(|m| b.returns.iter().any(|r| r.mark == **m)).cloned().collect();
-    let of = list(&of.iter().map(String::as_str).collect::<Vec<_>>());
+    let of = list(&of);
     let at = |words: &str| if of.is_empty() { words.to_owned() } else { format!("{words} at {of}") };
     match &h.about {
         About::Given(Some(words)) => sentence(words),

@@ -5,7 +5,7 @@ use crate::checks::Results;
 use crate::checks::links::sheared;
 use crate::checks::outcome::{Outcome, holds_all};
 use crate::pack::data::{Assumption, Summary};
-use crate::sketch::text::capital;
+use crate::sketch::text::{capital, list};
 use crate::standards::{en1991_1_4, en1992, en1996};
 
 /// One plain sentence on the outcome.
@@ -79,15 +79,6 @@ pub fn distinct<'a>(items: &[&'a str]) -> Vec<&'a str> {
 
 const fn does(items: &[&str]) -> &'static str {
     if items.len() == 1 { "does" } else { "do" }
-}
-
-/// `a, b and c`.
-pub fn list(items: &[&str]) -> String {
-    match items {
-        [] => String::new(),
-        [one] => (*one).to_owned(),
-        [first @ .., last] => format!("{} and {last}", first.join(", ")),
-    }
 }
 
 /// The design summary.

@@ -23,6 +23,7 @@ use crate::checks::{Results, Section};
 use crate::job::date_in_words;
 use crate::pack::data::{self, OutcomeKind};
 use crate::quantity::print;
+use crate::sketch::text::list;
 use crate::trace::{Unshown, Value, Verdict};
 
 /// Name and version, as printed.
@@ -165,10 +166,10 @@ fn words(s: &Section, outcome: Outcome, results: &Results) -> String {
     let waits: Vec<&str> = s.sheet.unshown.iter().filter_map(|u| u.hold.as_deref()).collect();
     match outcome {
         Outcome::Conditional(_) if !waits.is_empty() => {
-            format!("not shown: {}", front::list(&front::distinct(&waits)))
+            format!("not shown: {}", list(&front::distinct(&waits)))
         }
         Outcome::Conditional(n) if n <= NAMED => {
-            format!("adequate once {} {} closed", front::list(&open), if n == 1 { "is" } else { "are" })
+            format!("adequate once {} {} closed", list(&open), if n == 1 { "is" } else { "are" })
         }
         _ => outcome.words(),
     }

@@ -10,6 +10,48 @@ pub enum Hard {
     Long(usize),
     /// A sign that is neither a word, a number nor plain punctuation.
     Sign(char),
+    /// A unit that only builders and engineers speak.
+    Unit(String),
+}
+
+/// Units that have a word everybody knows: short form, one of it, several of it.
+const SPELLED: [(&str, &str, &str); 5] = [
+    ("m", "metre", "metres"),
+    ("mm", "millimetre", "millimetres"),
+    ("m2", "square metre", "square metres"),
+    ("m²", "square metre", "square metres"),
+    ("kg", "kilogram", "kilograms"),
+];
+
+/// Units that have none.
+const UNSPOKEN: [&str; 5] = ["kN", "kNm", "N", "kPa", "MPa"];
+
+/// A text with the units after its numbers written out: `3.2 m span` as `3.2 metres span`.
+pub fn spelled(text: &str) -> String {
+    let mut before = "";
+    let word = |word: &'_ str, before: &str| {
+        let (bare, stop) = split(word);
+        let unit = SPELLED.iter().find(|(short, ..)| number(before) && *short == bare);
+        unit.map_or_else(
+            || word.to_owned(),
+            |(_, one, all)| format!("{}{stop}", if before == "1" { one } else { all }),
+        )
+    };
+    let mut out = Vec::new();
+    for one in text.split(' ') {
+        out.push(word(one, before));
+        before = one;
+    }
+    out.join(" ")
+}
+
+/// A word and the punctuation after it.
+fn split(word: &str) -> (&str, &str) {
+    word.split_at(word.trim_end_matches([',', '.', ';', ':', '?', '!', ')']).len())
+}
+
+fn number(word: &str) -> bool {
+    word.starts_with(|c: char| c.is_ascii_digit()) && word.parse::<f64>().is_ok()
 }
 
 /// Sentences that are hard, each with why; the words between full stops, question marks and colons count as one.
@@ -21,7 +63,13 @@ fn why(sentence: &str) -> Option<Hard> {
     if let Some(sign) = sentence.chars().find(|c| !plain(*c)) {
         return Some(Hard::Sign(sign));
     }
-    let words = sentence.split_whitespace().filter(|w| w.chars().any(char::is_alphanumeric)).count();
+    let all: Vec<&str> = sentence.split_whitespace().collect();
+    let unit =
+        all.windows(2).map(|w| (w[0], split(w[1]).0)).find(|(n, unit)| number(n) && UNSPOKEN.contains(unit));
+    if let Some((_, unit)) = unit {
+        return Some(Hard::Unit(unit.to_owned()));
+    }
+    let words = all.iter().filter(|w| w.chars().any(char::is_alphanumeric)).count();
     (words > WORDS).then_some(Hard::Long(words))
 }
 
@@ -59,7 +107,7 @@ pub fn sentences(text: &str) -> Vec<String> {
 
 #[cfg(test)]
 mod tests {
-    use super::{Hard, hard, sentences};
+    use super::{Hard, hard, sentences, spelled};
 
     #[test]
     fn sentences_end_where_they_end() {
@@ -75,5 +123,15 @@ mod tests {
         assert_eq!(hard(&format!("Short one. {long}.")), [(format!("{long}."), Hard::Long(26))]);
         assert_eq!(hard("M ≤ N."), [("M ≤ N.".to_owned(), Hard::Sign('≤'))]);
         assert!(hard(&["word"; 25].join(" ")).is_empty());
+        assert_eq!(hard("It bears 12 kN."), [("It bears 12 kN.".to_owned(), Hard::Unit("kN".to_owned()))]);
+        assert!(hard("N walls and Mr N. Oake.").is_empty());
+    }
+
+    #[test]
+    fn units_after_numbers_are_written_out() {
+        assert_eq!(
+            spelled("Joists, 3.2 m span, on 1 m of wall (100 mm). House 7, M Road, m and 20 m2."),
+            "Joists, 3.2 metres span, on 1 metre of wall (100 millimetres). House 7, M Road, m and 20 square metres."
+        );
     }
 }

@@ -12,7 +12,7 @@ use super::pen::Pen;
 use super::plan::{self, Fate, PlanWall, When, paper, wall_note};
 use super::scale::{Frame, Scale, fit, fit_pair};
 use super::text::Text;
-use super::view::list;
+use super::text::list;
 
 /// What the key plan shows. Places in mm, x to the right, y up the sheet.
 #[derive(Clone, Debug)]

@@ -11,7 +11,7 @@ use super::note::{Note, Spot};
 use super::pen::Pen;
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::list;
+use super::text::list;
 
 /// What the drawing shows. Places along the wall and heights in mm, the lowest floor at 0.
 #[derive(Clone, Debug)]

@@ -8,7 +8,7 @@ use super::load;
 use super::note::{Note, Spot};
 use super::pen::{Ink, Pen};
 use super::text::Text;
-use super::view::list;
+use super::text::list;
 
 /// What the plot shows.
 #[derive(Clone, Debug)]

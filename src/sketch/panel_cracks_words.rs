@@ -4,8 +4,9 @@ use super::dimension::mm;
 use super::drawing::Style;
 use super::panel_cracks::{Cell, CrackKind, PanelCracks};
 use super::panel_edges::Edges;
+use super::text::list;
 use super::text::{Text, capital};
-use super::view::{Action, list};
+use super::view::Action;
 
 /// An end nearer to an edge or to the side of an opening reaches it, mm.
 const REACHED: f64 = 1.0;

@@ -14,7 +14,8 @@ use super::note::{Note, Spot};
 use super::panel_opening::Opening;
 use super::pen::Pen;
 use super::text::Text;
-use super::view::{Ruler, list};
+use super::text::list;
+use super::view::Ruler;
 
 /// Support of one edge and why it counts as such.
 #[derive(Clone, Debug)]

@@ -10,7 +10,8 @@ use super::panel_edges::{Edges, PanelFace, steps};
 use super::pen::Pen;
 use super::scale::{Frame, Scale, fit, fit_row};
 use super::text::Text;
-use super::view::{Action, Ruler, Side, list};
+use super::text::list;
+use super::view::{Action, Ruler, Side};
 
 /// What the elevation of a panel shows.
 #[derive(Clone, Debug)]

@@ -11,7 +11,8 @@ use super::note::{Note, Spot};
 use super::pen::Pen;
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::{Action, Layer, Ruler, Side, Wind, hatch_key, layer_words, list, thickness};
+use super::text::list;
+use super::view::{Action, Layer, Ruler, Side, Wind, hatch_key, layer_words, thickness};
 
 /// What the section through a panel shows. The outside is on the left.
 #[derive(Clone, Debug)]

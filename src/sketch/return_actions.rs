@@ -10,7 +10,7 @@ use super::note::{Note, Spot};
 use super::pen::Pen;
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::list;
+use super::text::list;
 
 /// What the diagrams of a return show.
 #[derive(Clone, Debug)]

@@ -11,7 +11,8 @@ use super::pen::Pen;
 use super::return_loads::{sideways, vertical_loads};
 use super::scale::{Frame, Scale, fit};
 use super::text::Text;
-use super::view::{Action, Layer, Ruler, Side, Wind, hatch_key, layer_words, list, thickness};
+use super::text::list;
+use super::view::{Action, Layer, Ruler, Side, Wind, hatch_key, layer_words, thickness};
 
 /// What the elevation of a return shows.
 #[derive(Clone, Debug)]

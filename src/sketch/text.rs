@@ -1,5 +1,6 @@
 //! Lines of text and how much paper they take, measured with the embedded faces.
 
+use std::borrow::Borrow;
 use std::sync::OnceLock;
 
 use ttf_parser::Face;
@@ -47,6 +48,15 @@ pub struct Extent {
     pub ascent: f64,
     /// Ink below the baseline.
     pub descent: f64,
+}
+
+/// A sentence's list: `a, b and c`.
+pub fn list<S: Borrow<str>>(items: &[S]) -> String {
+    match items {
+        [] => String::new(),
+        [one] => one.borrow().to_owned(),
+        [first @ .., last] => format!("{} and {}", first.join(", "), last.borrow()),
+    }
 }
 
 /// A sentence's first letter large, `_` as a space.

@@ -142,12 +142,3 @@ impl Ruler {
         Vec2::new(self.hand, 0.0)
     }
 }
-
-/// A sentence's list: `a, b and c`.
-pub(super) fn list(parts: &[String]) -> String {
-    match parts {
-        [] => String::new(),
-        [one] => one.clone(),
-        [first @ .., last] => format!("{} and {last}", first.join(", ")),
-    }
-}

@@ -90,5 +90,10 @@ fn an_issued_pack_stays_under_another_practice() {
     }
     assert_eq!(place.get(PACK), before);
     let ran = place.run(&["compare", PACK, "job.toml"]);
-    assert!(ran.code == 1 && ran.out.contains("Practice file: 2 lines"), "{}", ran.out);
+    assert!(
+        ran.code == 1
+            && ran.out.contains("Practice file\n    the whole file\n      was not there\n      now 2 lines"),
+        "{}",
+        ran.out
+    );
 }

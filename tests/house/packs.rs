@@ -168,3 +168,14 @@ fn a_template_sees_nothing_outside_its_world() {
         assert!(error.contains("Mend the templates of the practice"), "{error}");
     }
 }
+
+/// A last line that goes to a new sheet while it is on the last one: sheet numbers would name the wrong sheets.
+#[test]
+fn sheets_that_do_not_come_to_rest_are_refused() {
+    let moving = "#metadata(none)<z>\n#context if counter(page).final().first() == query(<z>).first().location().page() \
+                  { pagebreak() }\nend\n";
+    let text = ours("pack.typ") + moving;
+    let made = made(jobs::START, &with_template("pack.typ", text)).map(|pdf| pdf.len());
+    let error = made.expect_err("sheets that move");
+    assert!(error.contains("do not come to rest"), "{error}");
+}
