@@ -135,7 +135,11 @@ fn found(b: &Building, results: &Results) -> Vec<String> {
 
 /// A thing by its mark and its title, or by its title alone.
 fn named(s: &Section) -> String {
-    if s.mark.is_empty() { lower(&s.title) } else { format!("{}, {}", s.mark, lower(&s.title)) }
+    let title = match s.title.strip_prefix("Bearing of ").and_then(|rest| rest.split_once(" on ")) {
+        Some((beam, wall)) => format!("where beam {beam} rests on {wall}"),
+        None => lower(&s.title),
+    };
+    if s.mark.is_empty() { title } else { format!("{}, {title}", s.mark) }
 }
 
 fn lower(words: &str) -> String {
@@ -144,14 +148,22 @@ fn lower(words: &str) -> String {
     first + all.as_str()
 }
 
+/// What titles of returns call them, and what that is.
+const WORDS_OF_WALLS: [(&str, &str); 3] = [
+    ("return", "A return is a short piece of wall that meets another."),
+    ("nib", "A nib is a short piece of wall that is left beside an opening."),
+    ("pier", "A pier is a short piece of wall that carries weight by itself."),
+];
+
 fn stays(b: &Building, results: &Results) -> Vec<String> {
     if b.returns.is_empty() {
         return vec!["Every wall other than the one named above must stay as it is.".to_owned()];
     }
-    let mut out = vec![
-        "The pieces of wall named here must stay at their full height. Nobody may cut into them, drill them or make grooves in them."
-            .to_owned(),
-    ];
+    let titled = |word: &str| b.returns.iter().any(|r| r.title.to_lowercase().contains(word));
+    let meant = WORDS_OF_WALLS.iter().filter(|(word, _)| titled(word)).map(|(_, means)| *means);
+    let named = "The pieces of wall named here must stay at their full height.";
+    let untouched = "Nobody may cut into these pieces, drill them or make grooves in them.";
+    let mut out = vec![[named].into_iter().chain(meant).chain([untouched]).collect::<Vec<_>>().join(" ")];
     let failing =
         |r: &&Return| results.sections.iter().any(|s| s.mark == r.mark && !outcome::holds_all(&s.sheet));
     for r in &b.returns {

@@ -51,6 +51,7 @@ fn split(word: &str) -> (&str, &str) {
 }
 
 fn number(word: &str) -> bool {
+    let word = word.trim_start_matches('(');
     word.starts_with(|c: char| c.is_ascii_digit()) && word.parse::<f64>().is_ok()
 }
 
