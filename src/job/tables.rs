@@ -27,8 +27,11 @@ pub fn of_lines(text: &str) -> Vec<String> {
 
 /// Places of the entries below a table, and of the heads of tables in it, with the name of the table each belongs to.
 fn walk(text: &str, table: &DeTable<'_>, name: &str, found: &mut Vec<(Range<usize>, String)>) {
-    // A table with a head of its own begins with a bracket, one written in a line with a brace.
-    let headed = |span: Range<usize>| text[span].starts_with('[');
+    // A table stands under a head, its own or that of a table in it; one written in a line, or by a dotted key, does not.
+    let headed = |span: Range<usize>| {
+        let line = text[..span.start].rfind('\n').map_or(0, |end| end + 1);
+        text[line..].trim_start().starts_with('[')
+    };
     for (key, value) in table {
         let key_at = key.span().start;
         let (inner, several): (Vec<_>, bool) = match value.get_ref() {
@@ -62,7 +65,8 @@ mod tests {
     use super::*;
 
     const TEXT: &str = "a = 1\nlist = [\n  { y = 1 },\n  { y = 2 },\n]\n\n# Remark.\n[one]\nb.c = 2\n\n[one.two]\nc = 3\n\n\
-        [[returns]]\nlength = 5\nmark = \"R1\"\n\n[[returns]]\nmark = \"R2\"\n\n[[returns.loads]]\nname = \"beam\"\nd = { e = 3 }\n";
+        [[returns]]\nlength = 5\nmark = \"R1\"\n\n[[returns]]\nmark = \"R2\"\n\n[[returns.loads]]\nname = \"beam\"\nd = { e = 3 }\n\
+        [over.under]\nf = 4\n";
 
     #[test]
     fn each_line_is_named_by_its_table() {
@@ -71,6 +75,7 @@ mod tests {
             "//////",
             "/one/one//one two/one two//returns R1/returns R1/returns R1/",
             "/returns R2/returns R2//returns R2 loads beam/returns R2 loads beam/returns R2 loads beam",
+            "/over under/over under",
         ];
         assert_eq!(of_lines(TEXT).join("/"), wanted.concat());
         assert_eq!(of_lines("no TOML\nat all"), ["", ""]);
