@@ -55,7 +55,13 @@ pub struct Accent {
     pub rgb: [u8; 3],
 }
 
+/// Least contrast of small text with its ground: W3C, WCAG 2.1, success criterion 1.4.3 (from memory).
+pub const CONTRAST: f64 = 4.5;
+
 impl Accent {
+    /// White paper.
+    pub const PAPER: Self = Self { rgb: [255; 3] };
+
     /// The colour of `#1f3d52`; `None` for anything but a # and six hexadecimal digits.
     pub fn from_hex(text: &str) -> Option<Self> {
         let digits =
@@ -70,15 +76,26 @@ impl Accent {
         format!("#{r:02x}{g:02x}{b:02x}")
     }
 
-    /// Contrast with white paper, 1 for white to 21 for black: relative luminance and contrast ratio as defined in
-    /// W3C, Web Content Accessibility Guidelines (WCAG) 2.1, 2018, section 5 (formulas entered from memory).
+    /// Contrast with white paper, 1 for white to 21 for black.
     pub fn contrast(self) -> f64 {
+        self.contrast_on(Self::PAPER)
+    }
+
+    /// Contrast with another colour, 1 for the same to 21 for black on white: contrast ratio as defined in W3C, Web
+    /// Content Accessibility Guidelines (WCAG) 2.1, 2018, section 5 (formulas entered from memory).
+    pub fn contrast_on(self, ground: Self) -> f64 {
+        let (a, b) = (self.luminance(), ground.luminance());
+        (a.max(b) + 0.05) / (a.min(b) + 0.05)
+    }
+
+    /// Relative luminance, 0 for black to 1 for white, as defined there.
+    fn luminance(self) -> f64 {
         let linear = |c: u8| {
             let c = f64::from(c) / 255.0;
             if c <= 0.03928 { c / 12.92 } else { ((c + 0.055) / 1.055).powf(2.4) }
         };
         let [r, g, b] = self.rgb.map(linear);
-        1.05 / (0.2126 * r + 0.7152 * g + 0.0722 * b + 0.05)
+        0.2126 * r + 0.7152 * g + 0.0722 * b
     }
 }
 

@@ -5,13 +5,11 @@ use toml::de::DeTable;
 use super::limits::Limits;
 use super::reader::{Reader, Table};
 use super::{all, basis, bearings, paths, syntax};
-use crate::building::{Accent, Basis, Cause, Logo, Practice};
+use crate::building::{Accent, Basis, CONTRAST, Cause, Logo, Practice};
 use crate::error::{Kind, Report};
 use crate::files::digest;
 use crate::quantity::Length;
 
-/// Least contrast of small text with its ground: W3C, WCAG 2.1, success criterion 1.4.3 (from memory).
-const CONTRAST: f64 = 4.5;
 const LOGO: Limits = Limits::new(5.0, 25.0, "mm");
 /// Height of a logo without a word: a quarter of the head of a letter; common practice, no published source.
 const LOGO_HEIGHT: Length = Length::new(12.0);

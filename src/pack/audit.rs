@@ -104,9 +104,16 @@ pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
 }
 
 /// The text of each sheet of a laid-out document, in the order in which it prints.
+#[cfg(test)]
 pub(super) fn sheets(document: &PagedDocument) -> Vec<String> {
     let words = |sheet: Sheet| sheet.inks.into_iter().map(|ink| ink.text).collect::<String>();
     document.pages().iter().map(|page| words(Sheet::of(&page.frame))).collect()
+}
+
+/// The text of each sheet that a reader sees: not what is cut off, covered, too small or too pale.
+pub(super) fn legible(document: &PagedDocument) -> Vec<String> {
+    let words = |sheet: &Sheet| sheet.legible().map(|ink| ink.text.as_str()).collect::<String>();
+    document.pages().iter().map(|page| words(&Sheet::of(&page.frame))).collect()
 }
 
 fn outside(ink: &Ink, width: Abs, height: Abs) -> bool {

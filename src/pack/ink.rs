@@ -1,14 +1,20 @@
 //! What a finished sheet prints, with its place: runs of text, and the marks drawn over them.
 
-use typst::layout::{Abs, Frame, FrameItem, Point, Transform};
+use typst::layout::{Abs, Frame, FrameItem, Point, Size, Transform};
 use typst::text::{FontFlags, TextItem};
-use typst::visualize::{CurveItem, Geometry, Shape};
+use typst::visualize::{self, Curve, CurveItem, Geometry, Shape};
+
+use crate::building::{Accent, CONTRAST};
+
+/// Type smaller than this is not for reading, points: common practice, no published source.
+const LEAST: f64 = 5.0;
 
 /// The text and the marks of one sheet, each in the order in which they print.
 #[derive(Default)]
 pub(super) struct Sheet {
     pub(super) inks: Vec<Ink>,
     pub(super) marks: Vec<Mark>,
+    size: Size,
 }
 
 /// A run of text with the box of its ink, in points from the sheet's top left corner.
@@ -20,6 +26,12 @@ pub(super) struct Ink {
     /// The size of the type, and whether the face is the one for mathematics.
     pub(super) size: Abs,
     pub(super) mathematics: bool,
+    /// Its colour; nothing for a gradient or a pattern.
+    paint: Option<Paint>,
+    /// How much larger or smaller it prints than its size says.
+    scale: f64,
+    /// Whether its middle lies in a part of a group that is cut off.
+    clipped: bool,
     order: usize,
 }
 
@@ -37,9 +49,38 @@ impl Ink {
 pub(super) struct Mark {
     paths: Vec<Vec<Point>>,
     filled: bool,
+    /// The colour of its area; nothing for a picture, a gradient or a pattern.
+    paint: Option<Paint>,
     stroked: bool,
     order: usize,
 }
+
+/// A colour and how far it covers, 0 to 1.
+#[derive(Clone, Copy)]
+struct Paint {
+    colour: Accent,
+    covers: f64,
+}
+
+impl Paint {
+    fn of(paint: &visualize::Paint) -> Option<Self> {
+        let visualize::Paint::Solid(colour) = paint else { return None };
+        let [r, g, b, covers] = colour.to_vec4_u8();
+        Some(Self { colour: Accent { rgb: [r, g, b] }, covers: f64::from(covers) / 255.0 })
+    }
+
+    /// What is seen of it on a ground.
+    fn on(self, ground: Accent) -> Accent {
+        let mix = |i: usize| {
+            let (own, under) = (f64::from(self.colour.rgb[i]), f64::from(ground.rgb[i]));
+            (under + (own - under) * self.covers).round() as u8
+        };
+        Accent { rgb: [mix(0), mix(1), mix(2)] }
+    }
+}
+
+/// Boxes outside which nothing prints: those of the groups around, as corners.
+type Clips = Vec<(Point, Point)>;
 
 impl Mark {
     /// Whether a line of the mark runs through the ink by more than `slack`.
@@ -92,8 +133,41 @@ impl Sheet {
     /// Everything that a page's frame prints.
     pub(super) fn of(frame: &Frame) -> Self {
         let mut sheet = Self::default();
-        sheet.walk(frame, Transform::identity());
+        sheet.walk(frame, Transform::identity(), &Clips::new());
+        sheet.size = frame.size();
         sheet
+    }
+
+    /// The text that a reader sees: on the sheet, large enough, in contrast with its ground, and with nothing over it.
+    pub(super) fn legible(&self) -> impl Iterator<Item = &Ink> {
+        self.inks.iter().filter(|ink| {
+            let at = ink.centre();
+            let on_sheet =
+                Abs::zero() < at.x && at.x < self.size.x && Abs::zero() < at.y && at.y < self.size.y;
+            let large = ink.size.to_pt() * ink.scale >= LEAST;
+            let under = |mark: &&Mark| mark.filled && mark.covers(at);
+            let covered = self.marks.iter().filter(under).any(|mark| mark.order > ink.order);
+            on_sheet && large && !ink.clipped && !covered && self.contrast(ink) >= CONTRAST
+        })
+    }
+
+    /// Contrast of text with the areas that print before it where it stands; 1 where one of the two is no plain colour.
+    fn contrast(&self, ink: &Ink) -> f64 {
+        let at = ink.centre();
+        let below = self.marks.iter().filter(|mark| mark.filled && mark.order < ink.order && mark.covers(at));
+        let mut ground = Some(Accent::PAPER);
+        for mark in below {
+            ground = match (mark.paint, ground) {
+                (Some(paint), Some(ground)) => Some(paint.on(ground)),
+                // A whole coat hides what lay below, whatever that was.
+                (Some(paint), None) if paint.covers == 1.0 => Some(paint.colour),
+                _ => None,
+            };
+        }
+        match (ink.paint, ground) {
+            (Some(paint), Some(ground)) => paint.on(ground).contrast_on(ground),
+            _ => 1.0,
+        }
     }
 
     /// Whether the text cannot be read for what is drawn: a line through it, or an area printed
@@ -106,14 +180,19 @@ impl Sheet {
         covered || self.marks.iter().any(|mark| mark.strikes(ink, slack) && !cleared(mark))
     }
 
-    fn walk(&mut self, frame: &Frame, outer: Transform) {
+    fn walk(&mut self, frame: &Frame, outer: Transform, clips: &Clips) {
         for (at, item) in frame.items() {
             let here = outer.pre_concat(Transform::translate(at.x, at.y));
             let order = self.inks.len() + self.marks.len();
             match item {
-                FrameItem::Group(group) => self.walk(&group.frame, here.pre_concat(group.transform)),
-                FrameItem::Text(text) => self.inks.extend(ink(text, here, order)),
+                FrameItem::Group(group) => {
+                    let inner = here.pre_concat(group.transform);
+                    let own = group.clip.as_ref().and_then(|clip| bounds(&outline(clip), inner));
+                    self.walk(&group.frame, inner, &clips.iter().copied().chain(own).collect());
+                }
+                FrameItem::Text(text) => self.inks.extend(ink(text, here, clips, order)),
                 FrameItem::Shape(shape, _) => self.marks.push(mark(shape, here, order)),
+                FrameItem::Image(_, size, _) => self.marks.push(picture(*size, here, order)),
                 _ => {}
             }
         }
@@ -121,7 +200,7 @@ impl Sheet {
 }
 
 /// The ink of one run of text; none for spaces.
-fn ink(item: &TextItem, place: Transform, order: usize) -> Option<Ink> {
+fn ink(item: &TextItem, place: Transform, clips: &Clips, order: usize) -> Option<Ink> {
     let bounds = item.bbox();
     if !bounds.min.x.to_pt().is_finite() || item.text.trim().is_empty() {
         return None;
@@ -138,27 +217,64 @@ fn ink(item: &TextItem, place: Transform, order: usize) -> Option<Ink> {
     let max = corners.iter().copied().reduce(Point::max)?;
     let missing = item.glyphs.iter().any(|glyph| glyph.id == 0);
     let mathematics = item.font.info().flags.contains(FontFlags::MATH);
-    Some(Ink { text: item.text.to_string(), min, max, missing, size: item.size, mathematics, order })
+    let centre = Point::new((min.x + max.x) / 2.0, (min.y + max.y) / 2.0);
+    let inside =
+        |(a, z): &(Point, Point)| a.x < centre.x && centre.x < z.x && a.y < centre.y && centre.y < z.y;
+    Some(Ink {
+        text: item.text.to_string(),
+        min,
+        max,
+        missing,
+        size: item.size,
+        mathematics,
+        paint: Paint::of(&item.fill),
+        scale: (place.sx.get() * place.sy.get() - place.kx.get() * place.ky.get()).abs().sqrt(),
+        clipped: !clips.iter().all(inside),
+        order,
+    })
 }
 
 fn mark(shape: &Shape, place: Transform, order: usize) -> Mark {
     let mut paths: Vec<Vec<Point>> = vec![vec![Point::zero()]];
     match &shape.geometry {
         Geometry::Line(end) => paths[0].push(*end),
-        Geometry::Rect(size) => {
-            paths[0].extend([Point::with_x(size.x), size.to_point(), Point::with_y(size.y), Point::zero()])
-        }
-        Geometry::Curve(curve) => {
-            paths.clear();
-            for item in &curve.0 {
-                corners(item, &mut paths);
-            }
-        }
+        Geometry::Rect(size) => paths = vec![rectangle(*size)],
+        Geometry::Curve(curve) => paths = outline(curve),
     }
     for point in paths.iter_mut().flatten() {
         *point = point.transform(place);
     }
-    Mark { paths, filled: shape.fill.is_some(), stroked: shape.stroke.is_some(), order }
+    Mark {
+        paths,
+        filled: shape.fill.is_some(),
+        paint: shape.fill.as_ref().and_then(Paint::of),
+        stroked: shape.stroke.is_some(),
+        order,
+    }
+}
+
+/// A picture as the area that it covers.
+fn picture(size: Size, place: Transform, order: usize) -> Mark {
+    let path = rectangle(size).into_iter().map(|corner| corner.transform(place)).collect();
+    Mark { paths: vec![path], filled: true, paint: None, stroked: false, order }
+}
+
+fn rectangle(size: Size) -> Vec<Point> {
+    vec![Point::zero(), Point::with_x(size.x), size.to_point(), Point::with_y(size.y), Point::zero()]
+}
+
+fn outline(curve: &Curve) -> Vec<Vec<Point>> {
+    let mut paths = Vec::new();
+    for item in &curve.0 {
+        corners(item, &mut paths);
+    }
+    paths
+}
+
+/// The box of paths where they come to stand; none without corners.
+fn bounds(paths: &[Vec<Point>], place: Transform) -> Option<(Point, Point)> {
+    let all = || paths.iter().flatten().map(|corner| corner.transform(place));
+    Some((all().reduce(Point::min)?, all().reduce(Point::max)?))
 }
 
 /// One item of a curve as corners; a bend becomes eight short lines.

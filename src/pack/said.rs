@@ -58,7 +58,7 @@ pub(super) fn required(kind: Kind, json: &[u8]) -> Vec<Must> {
     std::iter::once(Must::EveryPage(text("/unsigned_text"))).chain(sentences).chain(bad).collect()
 }
 
-/// Holds the pages against what must stand on them.
+/// Holds the pages against what must stand on them and be legible there.
 ///
 /// # Errors
 /// [`PackError::Unsaid`] with what is not there.
@@ -66,7 +66,7 @@ pub(super) fn all(must: &[Must], document: &PagedDocument) -> Result<(), PackErr
     if must.is_empty() {
         return Ok(());
     }
-    let pages: Vec<String> = audit::sheets(document).iter().map(|page| letters(page)).collect();
+    let pages: Vec<String> = audit::legible(document).iter().map(|page| letters(page)).collect();
     let whole = pages.concat();
     let lacking = |one: &Must| match one {
         Must::Somewhere(words) => (!whole.contains(&letters(words))).then(|| words.clone()),

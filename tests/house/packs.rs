@@ -169,6 +169,34 @@ fn a_template_sees_nothing_outside_its_world() {
     }
 }
 
+/// What is there and cannot be read is not said: one word of a caution, hidden in each way that a template has.
+#[test]
+fn what_cannot_be_read_is_not_said() {
+    let with = |how: &str| {
+        let text = ours("pack.typ").replacen(
+            "#cautions(",
+            &format!("#show \"Temporary\": it => {how}\n#cautions("),
+            1,
+        );
+        made(jobs::START, &with_template("pack.typ", text)).map(|pdf| pdf.len())
+    };
+    for hidden in [
+        "text(fill: white, it)",
+        "text(fill: rgb(0, 0, 0, 20), it)",
+        "text(fill: gradient.linear(white, white), it)",
+        "text(size: 2pt, it)",
+        "box(std.scale(10%, it))",
+        "box(move(dx: 400mm, it))",
+        "box(clip: true, height: 0pt, it)",
+        "box[#it#place(top + left, rect(width: 100%, height: 1em, fill: white))]",
+        "box(fill: black, it)",
+    ] {
+        let error = with(hidden).expect_err(hidden);
+        assert!(error.contains("Temporary support comes before any masonry is cut"), "{hidden}: {error}");
+    }
+    assert!(with("box(fill: black, text(fill: white, it))").is_ok(), "white on black can be read");
+}
+
 /// A last line that goes to a new sheet while it is on the last one: sheet numbers would name the wrong sheets.
 #[test]
 fn sheets_that_do_not_come_to_rest_are_refused() {
