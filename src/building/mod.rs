@@ -25,7 +25,7 @@ pub use parts::{
     UnitStrength,
 };
 pub use plan::{AreaLoad, At, PlanBeam, PlanFloor, PlanOpening, PlanWall};
-pub use practice::{Accent, CONTRAST, Logo, Practice};
+pub use practice::{Logo, Practice};
 pub use site::{
     Dominant, Feature, Orography, Readings, Roof, RoofForm, Sector, Site, StatedWind, Town, Wind,
 };

@@ -5,10 +5,11 @@ use toml::de::DeTable;
 use super::limits::Limits;
 use super::reader::{Reader, Table};
 use super::{all, basis, bearings, paths, syntax};
-use crate::building::{Accent, Basis, CONTRAST, Cause, Logo, Practice};
+use crate::building::{Basis, Cause, Logo, Practice};
 use crate::error::{Kind, Report};
 use crate::files::digest;
 use crate::quantity::Length;
+use crate::quantity::colour::{CONTRAST, Colour};
 
 const LOGO: Limits = Limits::new(5.0, 25.0, "mm");
 /// Height of a logo without a word: a quarter of the head of a letter; common practice, no published source.
@@ -125,7 +126,7 @@ fn texts(
 
 #[derive(Default)]
 struct Style {
-    accent: Option<Accent>,
+    accent: Option<Colour>,
     logo: Option<Logo>,
     face: Option<String>,
     fonts: Option<String>,
@@ -166,11 +167,11 @@ fn style(t: &Table<'_>) -> Option<Style> {
     })
 }
 
-fn accent(t: &Table<'_>) -> Option<Accent> {
+fn accent(t: &Table<'_>) -> Option<Colour> {
     const WANTED: &str = "a colour in double quotes, as \"#1f3d52\"";
     let entry = t.need("accent");
     let text = entry.line()?;
-    let Some(accent) = Accent::from_hex(&text) else {
+    let Some(accent) = Colour::from_hex(&text) else {
         entry
             .fault(Kind::NotAllowed, format_args!("{} is no colour", super::entry::quoted(&text)))
             .at(entry.place(), "not a colour")

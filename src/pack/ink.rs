@@ -4,7 +4,7 @@ use typst::layout::{Abs, Frame, FrameItem, Point, Size, Transform};
 use typst::text::{FontFlags, TextItem};
 use typst::visualize::{self, Curve, CurveItem, Geometry, Shape};
 
-use crate::building::{Accent, CONTRAST};
+use crate::quantity::colour::{CONTRAST, Colour};
 
 /// Type smaller than this is not for reading, points: common practice, no published source.
 const LEAST: f64 = 5.0;
@@ -58,7 +58,7 @@ pub(super) struct Mark {
 /// A colour and how far it covers, 0 to 1.
 #[derive(Clone, Copy)]
 struct Paint {
-    colour: Accent,
+    colour: Colour,
     covers: f64,
 }
 
@@ -66,16 +66,16 @@ impl Paint {
     fn of(paint: &visualize::Paint) -> Option<Self> {
         let visualize::Paint::Solid(colour) = paint else { return None };
         let [r, g, b, covers] = colour.to_vec4_u8();
-        Some(Self { colour: Accent { rgb: [r, g, b] }, covers: f64::from(covers) / 255.0 })
+        Some(Self { colour: Colour { rgb: [r, g, b] }, covers: f64::from(covers) / 255.0 })
     }
 
     /// What is seen of it on a ground.
-    fn on(self, ground: Accent) -> Accent {
+    fn on(self, ground: Colour) -> Colour {
         let mix = |i: usize| {
             let (own, under) = (f64::from(self.colour.rgb[i]), f64::from(ground.rgb[i]));
             (under + (own - under) * self.covers).round() as u8
         };
-        Accent { rgb: [mix(0), mix(1), mix(2)] }
+        Colour { rgb: [mix(0), mix(1), mix(2)] }
     }
 }
 
@@ -155,7 +155,7 @@ impl Sheet {
     fn contrast(&self, ink: &Ink) -> f64 {
         let at = ink.centre();
         let below = self.marks.iter().filter(|mark| mark.filled && mark.order < ink.order && mark.covers(at));
-        let mut ground = Some(Accent::PAPER);
+        let mut ground = Some(Colour::PAPER);
         for mark in below {
             ground = match (mark.paint, ground) {
                 (Some(paint), Some(ground)) => Some(paint.on(ground)),

@@ -10,7 +10,9 @@
 //! * [`Dyn`]: the same number with its dimension as data, for the trace
 //! * [`mod@unit`]: units by name: reading `"900 mm"`, and the unit a value is printed in
 //! * [`mod@print`]: digits: three significant, ratios rounded up
+//! * [`colour`]: colours and their contrast
 
+pub mod colour;
 mod dynamic;
 pub mod functions;
 mod ops;

@@ -1,8 +1,8 @@
 //! The practice file as text: what is read, and what is said of slips.
 
-use perpend::building::Accent;
 use perpend::job::practice::read;
 use perpend::job::start;
+use perpend::quantity::colour::Colour;
 
 use super::practice;
 
@@ -18,7 +18,7 @@ fn the_file_to_start_from_is_valid_as_it_stands() {
         (p.name.as_str(), p.address.len(), p.notes.len()),
         ("Sallow and Roe, structural engineers", 3, 1)
     );
-    assert_eq!(p.accent, Accent::from_hex("#6b2d1f"));
+    assert_eq!(p.accent, Colour::from_hex("#6b2d1f"));
     assert!(p.logo.is_none() && p.fonts.is_none() && p.templates.is_none() && p.basis.is_none());
     assert_eq!(p.digest, perpend::digest(start::PRACTICE));
 }
