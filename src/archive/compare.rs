@@ -72,7 +72,7 @@ pub fn records(was: &Record, now: &Record) -> Differences {
 
 /// Lines of a text that changed, in order, as `line 12`. Of a run of lines put in place of another, each is held against
 /// the one at its place where both begin with the same word.
-pub fn lines(was: &str, now: &str) -> Vec<Change> {
+fn lines(was: &str, now: &str) -> Vec<Change> {
     lines_named(was, now, |_, n| format!("line {}", n + 1))
 }
 

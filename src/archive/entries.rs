@@ -11,27 +11,27 @@ const LOOKS: [&str; 2] = ["practice", "style"];
 pub fn changed(was: &str, now: &str) -> Vec<Change> {
     let (old, new) = (of_lines(was), of_lines(now));
     lines_named(was, now, |later, n| {
-        let tables = if later { &new } else { &old };
-        match tables.get(n).map(String::as_str) {
+        let table = if later { new.get(n) } else { old.get(n) };
+        match table.and_then(Option::as_deref) {
             None | Some("") => format!("line {}", n + 1),
             Some(table) => format!("{table}, line {}", n + 1),
         }
     })
 }
 
-/// The same of practice files. Of one that only one side has, the lines that reach into the calculation.
+/// The same of practice files. Of one that only one side has, the entries that reach into the calculation.
 pub fn practice(was: &str, now: &str) -> Vec<Change> {
     let all = changed(was, now);
     if was.is_empty() == now.is_empty() {
         return all;
     }
     let count = |text: &str| (!text.is_empty()).then(|| format!("{} lines", text.lines().count()));
-    let looks = |c: &Change| {
-        let table = c.what.split(", ").next().unwrap_or_default();
-        LOOKS.contains(&table) || table.starts_with("line ")
-    };
     let whole = Change { what: "the whole file".to_owned(), was: count(was), now: count(now) };
-    [whole].into_iter().chain(all.into_iter().filter(|c| !looks(c))).collect()
+    // Every line of the one file is a change, in order.
+    let tables = of_lines(if was.is_empty() { now } else { was });
+    let reaches = |table: &Option<String>| table.as_ref().is_some_and(|t| !LOOKS.contains(&t.as_str()));
+    let told = all.into_iter().zip(&tables).filter(|(_, table)| reaches(table)).map(|(change, _)| change);
+    [whole].into_iter().chain(told).collect()
 }
 
 #[cfg(test)]
@@ -64,5 +64,9 @@ mod tests {
         assert_eq!(said(practice(file, "")), gone);
         assert_eq!(said(practice(file, &file.replace("\"A\"", "\"B\""))).len(), 1);
         assert_eq!(said(practice("", "")), []);
+        // A factor by a dotted key, or in a line, stands under no head and is told all the same.
+        let short = "basis.helping_factor = 0.85\n# Ours.\nbasis.gamma_M = { value = 3.2 }\n";
+        let lines: Vec<String> = practice("", short).into_iter().map(|c| c.what).collect();
+        assert_eq!(lines, ["the whole file", "line 1", "line 3"]);
     }
 }

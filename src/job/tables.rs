@@ -7,9 +7,10 @@ use toml::de::{DeTable, DeValue};
 /// Keys whose value names the table that holds them, the first of these that it has.
 const NAMES: [&str; 3] = ["mark", "name", "letter"];
 
-/// For each line the table of its entry, as `returns R2`; empty for remarks, empty lines, and everything where the text is not TOML.
-pub fn of_lines(text: &str) -> Vec<String> {
-    let mut out = vec![String::new(); text.lines().count()];
+/// For each line the table of its entry, as `returns R2`, empty for an entry of the file itself; nothing for remarks,
+/// empty lines, and everything where the text is not TOML.
+pub fn of_lines(text: &str) -> Vec<Option<String>> {
+    let mut out = vec![None; text.lines().count()];
     let Ok(tree) = DeTable::parse(text) else { return out };
     let mut found = Vec::new();
     walk(text, tree.get_ref(), "", &mut found);
@@ -19,7 +20,7 @@ pub fn of_lines(text: &str) -> Vec<String> {
     for (span, table) in found {
         let last = line(span.end.saturating_sub(1).max(span.start));
         for one in out.iter_mut().take(last + 1).skip(line(span.start)) {
-            one.clone_from(&table);
+            *one = Some(table.clone());
         }
     }
     out
@@ -43,6 +44,8 @@ fn walk(text: &str, table: &DeTable<'_>, name: &str, found: &mut Vec<(Range<usiz
         };
         if inner.is_empty() || !inner.iter().all(|(_, span)| headed(span.clone())) {
             found.push((key_at..value.span().end, name.to_owned()));
+            // Dotted keys of one table may stand on many lines.
+            inner.iter().for_each(|(table, _)| walk(text, table, name, found));
             continue;
         }
         for (table, head) in inner {
@@ -72,12 +75,13 @@ mod tests {
     fn each_line_is_named_by_its_table() {
         let wanted = [
             // Five lines of the file itself, an empty one and a remark.
-            "//////",
-            "/one/one//one two/one two//returns R1/returns R1/returns R1/",
-            "/returns R2/returns R2//returns R2 loads beam/returns R2 loads beam/returns R2 loads beam",
+            "/////-/-",
+            "/one/one/-/one two/one two/-/returns R1/returns R1/returns R1/-",
+            "/returns R2/returns R2/-/returns R2 loads beam/returns R2 loads beam/returns R2 loads beam",
             "/over under/over under",
         ];
-        assert_eq!(of_lines(TEXT).join("/"), wanted.concat());
-        assert_eq!(of_lines("no TOML\nat all"), ["", ""]);
+        let shown: Vec<String> = of_lines(TEXT).into_iter().map(|t| t.unwrap_or("-".to_owned())).collect();
+        assert_eq!(shown.join("/"), wanted.concat());
+        assert_eq!(of_lines("no TOML\nat all"), [None, None]);
     }
 }

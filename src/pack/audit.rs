@@ -79,7 +79,7 @@ pub(super) fn told(findings: &[Finding]) -> Vec<String> {
 pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
     let mut findings = Vec::new();
     for (index, page) in document.pages().iter().enumerate() {
-        let mut sheet = Sheet::of(&page.frame);
+        let mut sheet = Sheet::of(page);
         let size = page.frame.size();
         let mut report = |ink: &Ink, flaw| {
             let at = (ink.min.x.to_mm(), ink.min.y.to_mm());
@@ -107,13 +107,13 @@ pub(super) fn audit(document: &PagedDocument) -> Vec<Finding> {
 #[cfg(test)]
 pub(super) fn sheets(document: &PagedDocument) -> Vec<String> {
     let words = |sheet: Sheet| sheet.inks.into_iter().map(|ink| ink.text).collect::<String>();
-    document.pages().iter().map(|page| words(Sheet::of(&page.frame))).collect()
+    document.pages().iter().map(|page| words(Sheet::of(page))).collect()
 }
 
 /// The text of each sheet that a reader sees: not what is cut off, covered, too small or too pale.
 pub(super) fn legible(document: &PagedDocument) -> Vec<String> {
     let words = |sheet: &Sheet| sheet.legible().map(|ink| ink.text.as_str()).collect::<String>();
-    document.pages().iter().map(|page| words(&Sheet::of(&page.frame))).collect()
+    document.pages().iter().map(|page| words(&Sheet::of(page))).collect()
 }
 
 fn outside(ink: &Ink, width: Abs, height: Abs) -> bool {

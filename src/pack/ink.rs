@@ -3,6 +3,7 @@
 use typst::layout::{Abs, Frame, FrameItem, Point, Size, Transform};
 use typst::text::{FontFlags, TextItem};
 use typst::visualize::{self, Curve, CurveItem, Geometry, Shape};
+use typst_layout::Page;
 
 use crate::quantity::colour::{CONTRAST, Colour};
 
@@ -130,11 +131,15 @@ fn crosses(a: Point, b: Point, ink: &Ink, slack: Abs) -> bool {
 }
 
 impl Sheet {
-    /// Everything that a page's frame prints.
-    pub(super) fn of(frame: &Frame) -> Self {
-        let mut sheet = Self::default();
-        sheet.walk(frame, Transform::identity(), &Clips::new());
-        sheet.size = frame.size();
+    /// Everything that a page prints.
+    pub(super) fn of(page: &Page) -> Self {
+        let mut sheet = Self { size: page.frame.size(), ..Self::default() };
+        if let Some(ground) = page.fill_or_transparent() {
+            let paths = vec![rectangle(sheet.size)];
+            let paint = Paint::of(&ground);
+            sheet.marks.push(Mark { paths, filled: true, paint, stroked: false, order: 0 });
+        }
+        sheet.walk(&page.frame, Transform::identity(), &Clips::new());
         sheet
     }
 
@@ -187,7 +192,9 @@ impl Sheet {
             match item {
                 FrameItem::Group(group) => {
                     let inner = here.pre_concat(group.transform);
-                    let own = group.clip.as_ref().and_then(|clip| bounds(&outline(clip), inner));
+                    // Behind a clip without corners nothing is seen.
+                    let own =
+                        group.clip.as_ref().map(|clip| bounds(&outline(clip), inner).unwrap_or_default());
                     self.walk(&group.frame, inner, &clips.iter().copied().chain(own).collect());
                 }
                 FrameItem::Text(text) => self.inks.extend(ink(text, here, clips, order)),

@@ -102,7 +102,7 @@ fn does(b: &Building) -> Vec<String> {
 fn found(b: &Building, results: &Results) -> Vec<String> {
     let mut out = Vec::new();
     let which = |chosen: &dyn Fn(&Section) -> bool| -> Vec<String> {
-        results.sections.iter().filter(|s| chosen(s)).map(named).collect()
+        results.sections.iter().filter(|s| chosen(s)).map(|s| named(b, s)).collect()
     };
     let failing = which(&|s| !outcome::holds_all(&s.sheet));
     let outside = which(&|s| !s.sheet.outside.is_empty());
@@ -134,9 +134,11 @@ fn found(b: &Building, results: &Results) -> Vec<String> {
 }
 
 /// A thing by its mark and its title, or by its title alone.
-fn named(s: &Section) -> String {
-    let title = match s.title.strip_prefix("Bearing of ").and_then(|rest| rest.split_once(" on ")) {
-        Some((beam, wall)) => format!("where beam {beam} rests on {wall}"),
+fn named(b: &Building, s: &Section) -> String {
+    let bearings = b.bearings.iter().filter(|x| s.mark.split(", ").any(|mark| mark == x.mark));
+    let (beams, on): (Vec<&str>, Vec<&str>) = bearings.map(|x| (x.beam.as_str(), x.on.as_str())).unzip();
+    let title = match beams.first() {
+        Some(beam) => format!("where beam {beam} rests on {}", list(&on)),
         None => lower(&s.title),
     };
     if s.mark.is_empty() { title } else { format!("{}, {title}", s.mark) }
@@ -148,18 +150,21 @@ fn lower(words: &str) -> String {
     first + all.as_str()
 }
 
-/// What titles of returns call them, and what that is.
+/// Words of the trade in titles of returns, and what they mean.
 const WORDS_OF_WALLS: [(&str, &str); 3] = [
     ("return", "A return is a short piece of wall that meets another."),
     ("nib", "A nib is a short piece of wall that is left beside an opening."),
-    ("pier", "A pier is a short piece of wall that carries weight by itself."),
+    ("pier", "A pier is a short piece of wall that stands by itself."),
 ];
 
 fn stays(b: &Building, results: &Results) -> Vec<String> {
     if b.returns.is_empty() {
         return vec!["Every wall other than the one named above must stay as it is.".to_owned()];
     }
-    let titled = |word: &str| b.returns.iter().any(|r| r.title.to_lowercase().contains(word));
+    let titled = |word: &str| {
+        let mut titles = b.returns.iter().map(|r| r.title.to_lowercase());
+        titles.any(|t| t.split(|c: char| !c.is_alphanumeric()).any(|w| w.trim_end_matches('s') == word))
+    };
     let meant = WORDS_OF_WALLS.iter().filter(|(word, _)| titled(word)).map(|(_, means)| *means);
     let named = "The pieces of wall named here must stay at their full height.";
     let untouched = "Nobody may cut into these pieces, drill them or make grooves in them.";

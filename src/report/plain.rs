@@ -28,21 +28,17 @@ const UNSPOKEN: [&str; 5] = ["kN", "kNm", "N", "kPa", "MPa"];
 
 /// A text with the units after its numbers written out: `3.2 m span` as `3.2 metres span`.
 pub fn spelled(text: &str) -> String {
-    let mut before = "";
-    let word = |word: &'_ str, before: &str| {
-        let (bare, stop) = split(word);
-        let unit = SPELLED.iter().find(|(short, ..)| number(before) && *short == bare);
-        unit.map_or_else(
-            || word.to_owned(),
-            |(_, one, all)| format!("{}{stop}", if before == "1" { one } else { all }),
-        )
+    let words: Vec<&str> = text.split(' ').collect();
+    let spell = |i: usize| {
+        let (bare, stop) = split(words[i]);
+        let count = i.checked_sub(1).map(|before| words[before]).filter(|before| number(before));
+        match (count, SPELLED.iter().find(|(short, ..)| *short == bare)) {
+            (Some("1"), Some((_, one, _))) => format!("{one}{stop}"),
+            (Some(_), Some((.., all))) => format!("{all}{stop}"),
+            _ => words[i].to_owned(),
+        }
     };
-    let mut out = Vec::new();
-    for one in text.split(' ') {
-        out.push(word(one, before));
-        before = one;
-    }
-    out.join(" ")
+    (0..words.len()).map(spell).collect::<Vec<_>>().join(" ")
 }
 
 /// A word and the punctuation after it.

@@ -190,6 +190,8 @@ fn what_cannot_be_read_is_not_said() {
         "box(clip: true, height: 0pt, it)",
         "box[#it#place(top + left, rect(width: 100%, height: 1em, fill: white))]",
         "box(fill: black, it)",
+        // The rest of the page with it.
+        "it\n#set page(fill: black)",
     ] {
         let error = with(hidden).expect_err(hidden);
         assert!(error.contains("Temporary support comes before any masonry is cut"), "{hidden}: {error}");
