@@ -38,7 +38,10 @@ proptest! {
             if let Some(p) = wind_taken(i) {
                 prop_assert!(wind(p.base()), "{:?} does not pass", p);
                 let most = (8.0 * q * 1e5).floor() / 1e5;
-                prop_assert!(p.base() >= most || !wind(p.base() + 1.1e-5 + 1e-4 * q), "0.011 kN/m² more than {:?} passes too", p);
+                // The search ends at a wind that fails, on the safe side; a little more may pass again behind a narrow gap.
+                let step = 1.1e-5 + 1e-4 * q;
+                let fails = (0..2000).rev().any(|k| !wind(p.base() + step * f64::from(k + 1) / 2000.0));
+                prop_assert!(p.base() >= most || fails, "all up to 0.011 kN/m² more than {:?} passes too", p);
                 prop_assert!(!now || p.base() >= q - 1e-5, "it passes now, yet takes only {:?}", p);
             } else {
                 prop_assert!(!now && !wind(0.0));
